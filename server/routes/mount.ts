@@ -1,0 +1,95 @@
+import type { Request, Response, Router } from 'express'
+import type { z } from 'zod'
+import { endpoints, type EndpointName } from '../../shared/schemas/endpoints.ts'
+import type { Database, Tenant } from '../config/database.ts'
+import type { Env } from '../config/env.ts'
+import { badRequest, forbidden, HttpProblem, notSignedIn, problemOfZod } from '../middleware/problem.ts'
+import { allows, type Actor } from '../policies/index.ts'
+
+/** What every route may use; made once at start-up, replaced by tests. */
+export interface Services {
+  env: Env
+  database: Database
+}
+
+type Parsed<N extends EndpointName, K extends 'params' | 'query' | 'body'> = z.output<(typeof endpoints)[N][K]>
+export interface RouteContext<N extends EndpointName, A = Actor, T = Tenant, S extends Services = Services> {
+  params: Parsed<N, 'params'>
+  query: Parsed<N, 'query'>
+  body: Parsed<N, 'body'>
+  /** The version that the caller last read; required where the endpoint says `ifMatch`. */
+  ifMatch: number
+  actor: A
+  tenant: T
+  services: S
+  req: Request
+  res: Response
+}
+/** What the handler gives back is checked against the endpoint's response schema before it is sent. */
+type Presented<N extends EndpointName> = z.input<(typeof endpoints)[N]['response']>
+
+function parseWith(schema: z.ZodType, input: unknown, where: string): unknown {
+  const result = schema.safeParse(input)
+  if (result.success) return result.data
+  throw problemOfZod(result.error, input, where)
+}
+
+function readIfMatch(req: Request): number {
+  const header = req.get('if-match')
+  if (!header) throw new HttpProblem(428, 'Which version?', 'Send If-Match with the ETag you last read, so that nobody’s work is overwritten.')
+  const version = /^(?:W\/)?"(\d{1,9})"$/.exec(header.trim())?.[1]
+  if (version === undefined) throw badRequest('If-Match must be an ETag as sent by this address, like "3".')
+  return Number(version)
+}
+
+async function present(name: EndpointName, res: Response, value: unknown): Promise<void> {
+  const endpoint = endpoints[name]
+  if (res.headersSent || res.writableEnded) return
+  if (endpoint.binary) throw new Error(`${name} did not send its file`)
+  if (value === undefined) {
+    res.status(endpoint.status).end()
+    return
+  }
+  const body: unknown = await endpoint.response.parseAsync(value)
+  const version = (body as { version?: unknown }).version
+  if (typeof version === 'number') res.set('ETag', `"${version}"`)
+  res.status(endpoint.status).json(body)
+}
+
+/** Mounts a route that runs before anybody is signed in. */
+export function publicRoute<N extends EndpointName, S extends Services>(router: Router, services: S, name: N, act: (context: RouteContext<N, Actor | null, null, S>) => Promise<Presented<N>>): void {
+  const endpoint = endpoints[name]
+  router[endpoint.method](endpoint.path, async (req, res) => {
+    const context = {
+      params: parseWith(endpoint.params, req.params, 'path'),
+      query: parseWith(endpoint.query, req.query, 'query'),
+      body: parseWith(endpoint.body, req.body, 'body'),
+      ifMatch: 0, actor: actorOf(req), tenant: null, services, req, res,
+    } as RouteContext<N, Actor | null, null, S>
+    await present(name, res, await act(context))
+  })
+}
+
+/** The signed-in person, or null. */
+export const actorOf = (req: Request): Actor | null => (req.user as Actor | undefined) ?? null
+
+/**
+ * Mounts a route for signed-in people: gate by role, parse, act inside the organization's transaction, present.
+ * The transaction rolls back when `act` throws.
+ */
+export function route<N extends EndpointName, S extends Services>(router: Router, services: S, name: N, act: (context: RouteContext<N, Actor, Tenant, S>) => Promise<Presented<N>>): void {
+  const endpoint = endpoints[name]
+  router[endpoint.method](endpoint.path, async (req, res) => {
+    const actor = actorOf(req)
+    if (!actor) throw notSignedIn()
+    if (!allows(actor, endpoint.action)) throw forbidden()
+    const parsed = {
+      params: parseWith(endpoint.params, req.params, 'path'),
+      query: parseWith(endpoint.query, req.query, 'query'),
+      body: parseWith(endpoint.body, req.body, 'body'),
+      ifMatch: endpoint.ifMatch ? readIfMatch(req) : 0,
+    }
+    const result = await services.database.withTenant(actor.organizationId, (tenant) => act({ ...parsed, actor, tenant, services, req, res } as RouteContext<N, Actor, Tenant, S>))
+    await present(name, res, result)
+  })
+}
