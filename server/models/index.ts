@@ -1,0 +1,13 @@
+import type { Sequelize } from 'sequelize'
+import { bindOrganization } from './organization.ts'
+import { bindOutboxAttachment } from './outbox-attachment.ts'
+import { bindOutboxMail } from './outbox-mail.ts'
+import { bindPersonToken } from './person-token.ts'
+import { bindPerson } from './person.ts'
+
+const binders = [bindOrganization, bindPerson, bindPersonToken, bindOutboxMail, bindOutboxAttachment]
+
+/** Binds every model to the connection; run once when the services are made. */
+export function bindModels(sequelize: Sequelize): void {
+  for (const bind of binders) bind(sequelize)
+}
