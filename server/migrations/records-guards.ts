@@ -45,7 +45,7 @@ create function guard_revision_coupon() returns trigger language plpgsql as $fn$
 declare
   held text;
 begin
-  select state into held from procedure_revisions where id = coalesce(new.revision_id, old.revision_id);
+  select state into held from procedure_revisions where id = coalesce(new.revision_id, old.revision_id) for share;
   -- No row: the draft itself is being discarded.
   if held is not null and held <> 'draft' then
     raise exception using errcode = 'SB001', message = format('The revision is %s; the coupons that support it do not change.', held);
@@ -80,7 +80,7 @@ create function guard_photo() returns trigger language plpgsql as $fn$
 declare
   held record;
 begin
-  select number, state into held from coupons where id = case when tg_op = 'INSERT' then new.coupon_id else old.coupon_id end;
+  select number, state into held from coupons where id = case when tg_op = 'INSERT' then new.coupon_id else old.coupon_id end for share;
   if held.state in ('certified', 'rejected') then
     raise exception using errcode = 'SB001', message = format('%s is %s; its photos are part of the record and do not change.', held.number, held.state);
   end if;

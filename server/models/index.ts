@@ -4,8 +4,9 @@ import { bindOutboxAttachment } from './outbox-attachment.ts'
 import { bindOutboxMail } from './outbox-mail.ts'
 import { bindPersonToken } from './person-token.ts'
 import { bindPerson } from './person.ts'
+import { recordBinders } from './records.ts'
 
-const binders = [bindOrganization, bindPerson, bindPersonToken, bindOutboxMail, bindOutboxAttachment]
+const binders = [bindOrganization, bindPerson, bindPersonToken, bindOutboxMail, bindOutboxAttachment, ...recordBinders]
 
 /** Binds every model to the connection; run once when the services are made. */
 export function bindModels(sequelize: Sequelize): void {

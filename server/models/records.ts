@@ -1,4 +1,3 @@
-import type { Sequelize } from 'sequelize'
 import { bindCoupon } from './coupon.ts'
 import { bindJobJoint } from './job-joint.ts'
 import { bindJob } from './job.ts'
@@ -8,7 +7,5 @@ import { bindProcedure } from './procedure.ts'
 import { bindReleasedDocument } from './released-document.ts'
 import { bindSignature } from './signature.ts'
 
-/** Binds the models of the records to one connection pool. */
-export function bindRecordModels(sequelize: Sequelize): void {
-  for (const bind of [bindProcedure, bindProcedureRevision, bindCoupon, bindPhoto, bindSignature, bindReleasedDocument, bindJob, bindJobJoint]) bind(sequelize)
-}
+/** The models of the records, for `bindModels`. */
+export const recordBinders = [bindProcedure, bindProcedureRevision, bindCoupon, bindPhoto, bindSignature, bindReleasedDocument, bindJob, bindJobJoint]
