@@ -237,7 +237,8 @@ create table job_joints (
   count integer not null check (count > 0),
   revision_id uuid,
   unique (organization_id, id),
-  unique (organization_id, job_id, number),
+  -- Two joints may trade numbers in one save.
+  unique (organization_id, job_id, number) deferrable initially deferred,
   foreign key (organization_id, job_id) references jobs (organization_id, id) on delete cascade,
   foreign key (organization_id, revision_id) references procedure_revisions (organization_id, id)
 );

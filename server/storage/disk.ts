@@ -1,0 +1,56 @@
+import { randomUUID } from 'node:crypto'
+import { mkdir, open, readFile, rename, rm } from 'node:fs/promises'
+import path from 'node:path'
+import type { Env } from '../config/env.ts'
+import { checkedKey, StoredFileMissing, type Storage } from './storage.ts'
+
+const isMissing = (error: unknown): boolean => (error as { code?: unknown }).code === 'ENOENT'
+
+async function syncFolder(folder: string): Promise<void> {
+  const handle = await open(folder, 'r')
+  try {
+    await handle.sync()
+  } finally {
+    await handle.close()
+  }
+}
+
+/** Files under one folder. A file is written aside, synced and renamed, so a crash leaves the old file or the new one, never half of one. */
+export function diskStorage(root: string): Storage {
+  const at = (key: string): string => path.join(root, ...checkedKey(key).split('/'))
+  return {
+    put: async (key, bytes) => {
+      const file = at(key)
+      const folder = path.dirname(file)
+      await mkdir(folder, { recursive: true, mode: 0o700 })
+      const aside = path.join(folder, `.${randomUUID()}.part`)
+      try {
+        const handle = await open(aside, 'wx', 0o600)
+        try {
+          await handle.writeFile(bytes)
+          await handle.sync()
+        } finally {
+          await handle.close()
+        }
+        await rename(aside, file)
+      } catch (error) {
+        await rm(aside, { force: true })
+        throw error
+      }
+      await syncFolder(folder)
+    },
+    get: async (key) => {
+      try {
+        return await readFile(at(key))
+      } catch (error) {
+        throw isMissing(error) ? new StoredFileMissing(key) : error
+      }
+    },
+    remove: async (key) => {
+      await rm(at(key), { force: true })
+    },
+  }
+}
+
+/** The installation's storage: disk under DATA_DIR/files. */
+export const storageOf = (env: Pick<Env, 'DATA_DIR'>): Storage => diskStorage(path.join(path.resolve(env.DATA_DIR), 'files'))

@@ -1,0 +1,40 @@
+import { mkdtemp, readdir, rm } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
+import path from 'node:path'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { diskStorage } from '../../../../server/storage/disk.ts'
+import { StoredFileMissing, type Storage } from '../../../../server/storage/storage.ts'
+
+let root: string
+let storage: Storage
+beforeAll(async () => {
+  root = await mkdtemp(path.join(tmpdir(), 'storage-'))
+  storage = diskStorage(path.join(root, 'files'))
+})
+afterAll(() => rm(root, { recursive: true }))
+
+describe('disk storage', () => {
+  it('gives back the bytes that were put, and the newest of two', async () => {
+    await storage.put('org-1/photos/a.jpg', Buffer.from([1, 2, 3]))
+    await storage.put('org-1/photos/a.jpg', Buffer.from([4, 5]))
+    expect([...(await storage.get('org-1/photos/a.jpg'))]).toEqual([4, 5])
+  })
+
+  it('leaves no part file behind', async () => {
+    await storage.put('org-2/documents/b.pdf', Buffer.from('x'))
+    expect(await readdir(path.join(root, 'files/org-2/documents'))).toEqual(['b.pdf'])
+  })
+
+  it('says which key is missing, and removes without complaint', async () => {
+    await storage.put('org-1/c.pdf', Buffer.from('x'))
+    await storage.remove('org-1/c.pdf')
+    await storage.remove('org-1/c.pdf')
+    await expect(storage.get('org-1/c.pdf')).rejects.toThrow(StoredFileMissing)
+  })
+
+  it.each(['../x', '/etc/passwd', 'a/../b', 'a//b', 'a/.b', 'A.jpg', '', 'a b', 'a/b.jpg/', 'a\u0000b', 'x'.repeat(201)])('refuses the key %j', async (key) => {
+    await expect(storage.put(key, Buffer.from('x'))).rejects.toThrow(RangeError)
+    await expect(storage.get(key)).rejects.toThrow(RangeError)
+    await expect(storage.remove(key)).rejects.toThrow(RangeError)
+  })
+})
