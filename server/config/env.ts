@@ -1,3 +1,4 @@
+import path from 'node:path'
 import { z } from 'zod'
 
 const flag = z.enum(['0', '1', 'true', 'false']).default('0').transform((v) => v === '1' || v === 'true')
@@ -30,3 +31,16 @@ export function readEnv(source: NodeJS.ProcessEnv = process.env): Env {
   if (result.success) return result.data
   throw new Error(`The environment is not right:\n${result.error.issues.map((i) => `  ${i.path.join('.')}: ${i.message}`).join('\n')}`)
 }
+
+/**
+ * The address that links in mail begin with, without a slash at the end. Never taken from a request:
+ * whoever asks for a reset must not choose where its link points.
+ */
+export function baseUrl(env: Pick<Env, 'BASE_URL' | 'HOST' | 'PORT'>): string {
+  if (env.BASE_URL) return env.BASE_URL.replace(/\/+$/, '')
+  const host = env.HOST === '0.0.0.0' || env.HOST === '::' ? 'localhost' : env.HOST
+  return `http://${host.includes(':') ? `[${host}]` : host}:${env.PORT}`
+}
+
+/** Where uploaded files are kept on disk. */
+export const filesDirectory = (env: Pick<Env, 'DATA_DIR'>): string => path.resolve(env.DATA_DIR, 'files')

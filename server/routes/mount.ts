@@ -3,13 +3,29 @@ import type { z } from 'zod'
 import { endpoints, type EndpointName } from '../../shared/schemas/endpoints.ts'
 import type { Database, Tenant } from '../config/database.ts'
 import type { Env } from '../config/env.ts'
+import type { Log } from '../config/log.ts'
+import type { Queue } from '../jobs/queue.ts'
+import type { Mailer } from '../mail/mailer.ts'
 import { badRequest, forbidden, HttpProblem, notSignedIn, problemOfZod } from '../middleware/problem.ts'
 import { allows, type Actor } from '../policies/index.ts'
 
-/** What every route may use; made once at start-up, replaced by tests. */
+/** Where files are kept. Keys are ours, never a name that somebody typed. */
+export interface Storage {
+  put: (key: string, bytes: Buffer) => Promise<void>
+  /** @throws Error when there is no such file */
+  get: (key: string) => Promise<Buffer>
+  /** Removing what is not there is no error. */
+  remove: (key: string) => Promise<void>
+}
+
+/** What every route and job may use; made once at start-up (config/services.ts), replaced by tests. */
 export interface Services {
   env: Env
+  log: Log
   database: Database
+  queue: Queue
+  mailer: Mailer
+  storage: Storage
 }
 
 type Parsed<N extends EndpointName, K extends 'params' | 'query' | 'body'> = z.output<(typeof endpoints)[N][K]>
