@@ -38,8 +38,8 @@ create table library_items (
   key text not null,
   title text not null,
   subtitle text not null default '',
-  -- Lower-case words by which the row is found: grade, UNS, P-Number, group, classification.
-  tokens text[] not null,
+  -- All that the row is found by, parted by bars: grade, UNS, P-Number, group, classification.
+  search text not null,
   ordinal integer not null default 0,
   origin text not null check (origin in ('reference', 'own')),
   basis text,
@@ -49,7 +49,6 @@ create table library_items (
   unique (organization_id, id),
   unique (organization_id, kind, key)
 );
-create index library_items_tokens on library_items using gin (tokens);
 create index library_items_order on library_items (organization_id, kind, ordinal, id);
 
 create table procedures (

@@ -1,8 +1,8 @@
 import { randomUUID } from 'node:crypto'
 import { mkdir, open, readFile, rename, rm } from 'node:fs/promises'
 import path from 'node:path'
-import type { Env } from '../config/env.ts'
-import { checkedKey, StoredFileMissing, type Storage } from './storage.ts'
+import type { Storage } from '../routes/mount.ts'
+import { checkedKey, StoredFileMissing } from './storage.ts'
 
 const isMissing = (error: unknown): boolean => (error as { code?: unknown }).code === 'ENOENT'
 
@@ -51,6 +51,3 @@ export function diskStorage(root: string): Storage {
     },
   }
 }
-
-/** The installation's storage: disk under DATA_DIR/files. */
-export const storageOf = (env: Pick<Env, 'DATA_DIR'>): Storage => diskStorage(path.join(path.resolve(env.DATA_DIR), 'files'))

@@ -3,7 +3,8 @@ import { tmpdir } from 'node:os'
 import path from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { diskStorage } from '../../../../server/storage/disk.ts'
-import { StoredFileMissing, type Storage } from '../../../../server/storage/storage.ts'
+import type { Storage } from '../../../../server/routes/mount.ts'
+import { StoredFileMissing } from '../../../../server/storage/storage.ts'
 
 let root: string
 let storage: Storage
