@@ -1,0 +1,58 @@
+import { createRequire } from 'node:module'
+import type { AxeResults } from 'axe-core'
+import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core'
+import { inject } from 'vitest'
+import type { Role } from '@shared/schemas/people.ts'
+import { findChromium } from '../../scripts/lib/system.mjs'
+import '../setup/provided.ts'
+
+/** Desk, tablet and phone, in CSS pixels. */
+export const widths = [1440, 820, 390] as const
+
+/**
+ * Starts this machine's Chromium.
+ * @throws Error in a sentence when there is none
+ */
+export async function openBrowser(): Promise<Browser> {
+  const executablePath = findChromium()
+  if (!executablePath) throw new Error('No Chromium was found. Install it (Debian: apt-get install chromium), or name it in CHROMIUM.')
+  // Chromium's sandbox refuses to run as root.
+  const asRoot = process.getuid?.() === 0
+  return chromium.launch({
+    executablePath,
+    args: ['--disable-gpu', '--disable-quic', '--disable-dev-shm-usage', '--disable-background-networking', '--disable-component-update', '--disable-sync', '--no-first-run', ...(asRoot ? ['--no-sandbox'] : [])],
+  })
+}
+
+/**
+ * A fresh, signed-out browser profile on the product under test.
+ * `bypassCSP` lets axe be injected; service workers are off unless a test is about them.
+ */
+export const openContext = (browser: Browser, { width = widths[0], height = 900, serviceWorkers = 'block' }: { width?: number; height?: number; serviceWorkers?: 'allow' | 'block' } = {}): Promise<BrowserContext> =>
+  browser.newContext({ baseURL: inject('baseUrl'), viewport: { width, height }, bypassCSP: true, serviceWorkers, acceptDownloads: true, hasTouch: width < 500, reducedMotion: 'reduce' })
+
+/** Signs the page's profile in as the demo firm's person of that role and opens the first page. */
+export async function signIn(page: Page, role: Role): Promise<void> {
+  const person = inject('demoSignIns').find((one) => one.role === role)
+  if (!person) throw new Error(`The demo firm has no sign-in for the role ${role}.`)
+  const answer = await page.request.post('/api/session', { data: { email: person.email, password: person.password } })
+  if (!answer.ok()) throw new Error(`Signing in as ${person.email} answered ${answer.status()}: ${await answer.text()}`)
+  await page.goto('/')
+}
+
+const axeFile = createRequire(import.meta.url).resolve('axe-core/axe.min.js')
+
+/**
+ * What axe finds against WCAG 2.2 A and AA on the page as it stands.
+ * @returns one line a violation, with the elements at fault; empty when there is none
+ */
+export async function axe(page: Page): Promise<string[]> {
+  if (!(await page.evaluate(() => 'axe' in window))) await page.addScriptTag({ path: axeFile })
+  const results = await page.evaluate(() =>
+    (window as unknown as { axe: { run: (options: object) => Promise<AxeResults> } }).axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'] }),
+  )
+  return results.violations.map((violation) => `${violation.id}: ${violation.help} — ${violation.nodes.map((node) => node.target.join(' ')).join(' | ')}`)
+}
+
+/** Whether the page is wider than its window, so that a person would have to scroll sideways. */
+export const overflows = (page: Page): Promise<boolean> => page.evaluate(() => document.documentElement.scrollWidth > document.documentElement.clientWidth)
