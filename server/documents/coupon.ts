@@ -1,0 +1,1 @@
+export interface CouponDocument { number: string }
