@@ -74,6 +74,8 @@ create table procedure_revisions (
   content_sha256 text not null,
   version integer not null default 1,
   author_id uuid not null,
+  -- Everybody who saved this revision; none of them may approve it.
+  contributors uuid[] not null default '{}',
   deviation_reason text,
   ${projections},
   created_at timestamptz(3) not null default clock_timestamp(),

@@ -26,8 +26,8 @@ begin
     raise exception using errcode = 'SB001', message = format('%s revision %s is %s and cannot become %s.', old.number, old.revision, old.state, new.state);
   end if;
   -- Under review the text stands still, so that what is signed is what was read.
-  if old.state <> 'draft' and row(new.content, new.content_sha256, new.author_id, new.title, new.processes, new.metals, new.metals_label, new.positions, new.standards, new.weld, new.thickness_min, new.thickness_max, new.diameter_min, new.diameter_max, new.submitted_at)
-     is distinct from row(old.content, old.content_sha256, old.author_id, old.title, old.processes, old.metals, old.metals_label, old.positions, old.standards, old.weld, old.thickness_min, old.thickness_max, old.diameter_min, old.diameter_max, old.submitted_at)
+  if old.state <> 'draft' and row(new.content, new.content_sha256, new.author_id, new.contributors, new.title, new.processes, new.metals, new.metals_label, new.positions, new.standards, new.weld, new.thickness_min, new.thickness_max, new.diameter_min, new.diameter_max, new.submitted_at)
+     is distinct from row(old.content, old.content_sha256, old.author_id, old.contributors, old.title, old.processes, old.metals, old.metals_label, old.positions, old.standards, old.weld, old.thickness_min, old.thickness_max, old.diameter_min, old.diameter_max, old.submitted_at)
      and not (old.state = 'in-review' and new.state = 'draft') then
     raise exception using errcode = 'SB001', message = format('%s revision %s is %s; its content does not change. Open the next revision instead.', old.number, old.revision, old.state);
   end if;

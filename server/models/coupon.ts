@@ -1,6 +1,6 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize'
-import type { CouponState } from '../../shared/schemas/records.ts'
-import type { CouponContent } from '../../shared/schemas/welding.ts'
+import type { CouponState } from '@shared/schemas/records.ts'
+import type { CouponContent } from '@shared/schemas/welding.ts'
 import { projectionColumns, type Projections } from './projection-columns.ts'
 
 /** A test coupon and, once certified, the procedure qualification record made of it. */

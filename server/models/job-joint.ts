@@ -1,6 +1,6 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize'
-import type { Interval } from '../../shared/schemas/common.ts'
-import type { JobJoint as JobJointRecord } from '../../shared/schemas/records.ts'
+import type { Interval } from '@shared/schemas/common.ts'
+import type { JobJoint as JobJointRecord } from '@shared/schemas/records.ts'
 
 /** A joint of a job and the approved revision that it is welded by. */
 export class JobJoint extends Model<InferAttributes<JobJoint>, InferCreationAttributes<JobJoint>> {

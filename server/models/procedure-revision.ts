@@ -1,6 +1,6 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize'
-import type { RevisionState } from '../../shared/schemas/records.ts'
-import type { ProcedureContent } from '../../shared/schemas/welding.ts'
+import type { RevisionState } from '@shared/schemas/records.ts'
+import type { ProcedureContent } from '@shared/schemas/welding.ts'
 import { projectionColumns, type Projections } from './projection-columns.ts'
 
 /** One revision of a procedure; closed by the database once it is approved. `number` is the procedure's. */
@@ -16,6 +16,8 @@ export class ProcedureRevision extends Model<InferAttributes<ProcedureRevision>,
   declare contentSha256: string
   declare version: CreationOptional<number>
   declare authorId: string
+  /** Everybody who saved this revision; none of them may approve it. */
+  declare contributors: string[]
   declare deviationReason: CreationOptional<string | null>
   declare title: string
   declare processes: string[]
@@ -48,6 +50,7 @@ export function bindProcedureRevision(sequelize: Sequelize): void {
       contentSha256: { type: DataTypes.TEXT, field: 'content_sha256' },
       version: { type: DataTypes.INTEGER, defaultValue: 1 },
       authorId: DataTypes.UUID,
+      contributors: DataTypes.ARRAY(DataTypes.UUID),
       deviationReason: DataTypes.TEXT,
       ...projectionColumns(),
       createdAt: { type: DataTypes.DATE, defaultValue: DataTypes.NOW },

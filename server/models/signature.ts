@@ -1,5 +1,5 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize'
-import type { Signature as SignatureRecord } from '../../shared/schemas/records.ts'
+import type { Signature as SignatureRecord } from '@shared/schemas/records.ts'
 
 /** What somebody did to a record, in the exact words they agreed to; only ever added. */
 export class Signature extends Model<InferAttributes<Signature>, InferCreationAttributes<Signature>> {

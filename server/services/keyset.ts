@@ -1,4 +1,4 @@
-import type { Page } from '../../shared/schemas/common.ts'
+import type { Page } from '@shared/schemas/common.ts'
 import type { Tenant } from '../config/database.ts'
 import { badRequest } from '../middleware/problem.ts'
 import { likeAnywhere, row, rows, searchWords } from './query.ts'

@@ -1,5 +1,5 @@
-import type { Interval } from '../../shared/schemas/common.ts'
-import type { BaseMetal, WeldingVariables } from '../../shared/schemas/welding.ts'
+import type { Interval } from '@shared/schemas/common.ts'
+import type { BaseMetal, WeldingVariables } from '@shared/schemas/welding.ts'
 import type { Projections } from '../models/projection-columns.ts'
 
 const distinct = <T>(values: readonly T[]): T[] => [...new Set(values)]
