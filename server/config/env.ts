@@ -1,4 +1,3 @@
-import path from 'node:path'
 import { z } from 'zod'
 
 const flag = z.enum(['0', '1', 'true', 'false']).default('0').transform((v) => v === '1' || v === 'true')
@@ -41,6 +40,3 @@ export function baseUrl(env: Pick<Env, 'BASE_URL' | 'HOST' | 'PORT'>): string {
   const host = env.HOST === '0.0.0.0' || env.HOST === '::' ? 'localhost' : env.HOST
   return `http://${host.includes(':') ? `[${host}]` : host}:${env.PORT}`
 }
-
-/** Where uploaded files are kept on disk. */
-export const filesDirectory = (env: Pick<Env, 'DATA_DIR'>): string => path.resolve(env.DATA_DIR, 'files')

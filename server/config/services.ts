@@ -1,3 +1,4 @@
+import path from 'node:path'
 import { caughtMailer } from '../mail/caught.ts'
 import { smtpMailer } from '../mail/smtp.ts'
 import { bindModels } from '../models/index.ts'
@@ -5,7 +6,7 @@ import { openQueue } from '../jobs/queue.ts'
 import type { Services } from '../routes/mount.ts'
 import { diskStorage } from '../storage/disk.ts'
 import { openDatabase } from './database.ts'
-import { filesDirectory, type Env } from './env.ts'
+import type { Env } from './env.ts'
 import { openLog } from './log.ts'
 
 /**
@@ -21,7 +22,7 @@ export async function openServices(env: Env, given: Partial<Services> = {}): Pro
     log,
     database,
     mailer: env.SMTP_URL ? smtpMailer(env.SMTP_URL) : caughtMailer(),
-    storage: given.storage ?? diskStorage(filesDirectory(env)),
+    storage: diskStorage(path.resolve(env.DATA_DIR, 'files')),
     queue: await openQueue(database, log),
     ...given,
   }

@@ -9,12 +9,15 @@ export class HttpProblem extends Error {
   readonly title: string
   readonly errors: Problem['errors']
   readonly current: unknown
-  constructor(status: number, title: string, detail: string, extra: { errors?: Problem['errors']; current?: unknown } = {}) {
+  /** Seconds until it is worth trying again. */
+  readonly retryAfter: number | undefined
+  constructor(status: number, title: string, detail: string, extra: { errors?: Problem['errors']; current?: unknown; retryAfter?: number } = {}) {
     super(detail)
     this.status = status
     this.title = title
     this.errors = extra.errors
     this.current = extra.current
+    this.retryAfter = extra.retryAfter
   }
 }
 
@@ -100,5 +103,6 @@ export const problemHandler: ErrorRequestHandler = (error: unknown, req, res, ne
   const requestId = String(req.id)
   if (problem.status >= 500) req.log.error({ err: error }, 'request failed')
   const body: Problem = { type: 'about:blank', title: problem.title, status: problem.status, detail: problem.message, instance: req.originalUrl.split('?')[0], requestId, errors: problem.errors, current: problem.current }
+  if (problem.retryAfter !== undefined) res.set('Retry-After', String(problem.retryAfter))
   res.status(problem.status).type('application/problem+json').send(JSON.stringify(body))
 }

@@ -7,8 +7,11 @@ export interface AttachmentFacts {
   bytes: number
 }
 
+/** What the outbox shows of a mail: of the model, or of a list's row. */
+export type MailFacts = Pick<OutboxMail, 'id' | 'recipients' | 'subject' | 'state' | 'attempts' | 'error' | 'createdAt' | 'sentAt'>
+
 /** A row of the outbox; `attachments` in the order in which they were added. */
-export const presentMailRow = (mail: OutboxMail, attachments: readonly AttachmentFacts[]): OutboxRow => ({
+export const presentMailRow = (mail: MailFacts, attachments: readonly AttachmentFacts[]): OutboxRow => ({
   id: mail.id,
   to: mail.recipients,
   subject: mail.subject,

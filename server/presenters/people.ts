@@ -3,7 +3,10 @@ import type { organizationSchema, Person as PersonShown } from '../../shared/sch
 import type { Organization } from '../models/organization.ts'
 import type { Person } from '../models/person.ts'
 
-export const presentPerson = (person: Person): PersonShown => ({
+/** What a person's entry shows: of the model, or of a list's row. */
+export type PersonFacts = Pick<Person, 'id' | 'name' | 'email' | 'roles' | 'state' | 'version' | 'createdAt' | 'lastSignInAt'>
+
+export const presentPerson = (person: PersonFacts): PersonShown => ({
   id: person.id,
   name: person.name,
   email: person.email,

@@ -1,6 +1,6 @@
 import type { Request, Response, Router } from 'express'
-import type { z } from 'zod'
-import { endpoints, type EndpointName } from '../../shared/schemas/endpoints.ts'
+import { z } from 'zod'
+import { endpoints, type Endpoint, type EndpointName } from '../../shared/schemas/endpoints.ts'
 import type { Database, Tenant } from '../config/database.ts'
 import type { Env } from '../config/env.ts'
 import type { Log } from '../config/log.ts'
@@ -9,10 +9,11 @@ import type { Mailer } from '../mail/mailer.ts'
 import { badRequest, forbidden, HttpProblem, notSignedIn, problemOfZod } from '../middleware/problem.ts'
 import { allows, type Actor } from '../policies/index.ts'
 
-/** Where files are kept. Keys are ours, never a name that somebody typed. */
+/** Where files are kept: originals, thumbnails, released PDFs. Keys are made by the program, never a name that somebody typed. */
 export interface Storage {
-  put: (key: string, bytes: Buffer) => Promise<void>
-  /** @throws Error when there is no such file */
+  /** Keeps the bytes under the key for good before it resolves; a second put of a key replaces the first. */
+  put: (key: string, bytes: Uint8Array) => Promise<void>
+  /** @throws StoredFileMissing when there is no such file */
   get: (key: string) => Promise<Buffer>
   /** Removing what is not there is no error. */
   remove: (key: string) => Promise<void>
@@ -41,6 +42,8 @@ export interface RouteContext<N extends EndpointName, A = Actor, T = Tenant, S e
   req: Request
   res: Response
 }
+/** A query as the handler gets it, for services that list. */
+export type QueryRead<N extends EndpointName> = Parsed<N, 'query'>
 /** What the handler gives back is checked against the endpoint's response schema before it is sent. */
 type Presented<N extends EndpointName> = z.input<(typeof endpoints)[N]['response']>
 
@@ -56,6 +59,21 @@ function readIfMatch(req: Request): number {
   const version = /^(?:W\/)?"(\d{1,9})"$/.exec(header.trim())?.[1]
   if (version === undefined) throw badRequest('If-Match must be an ETag as sent by this address, like "3".')
   return Number(version)
+}
+
+/** What the caller sent, checked against the endpoint: media type first, then shape. */
+function parseRequest<N extends EndpointName>(name: N, req: Request): Pick<RouteContext<N>, 'params' | 'query' | 'body' | 'ifMatch'> {
+  const endpoint: Endpoint = endpoints[name]
+  const wantsJson = !(endpoint.body instanceof z.ZodVoid)
+  if (wantsJson && req.is('application/json') === false) throw new HttpProblem(415, 'That could not be read', 'Send the body as JSON, with Content-Type: application/json.')
+  const body: unknown = req.body
+  const parsed = {
+    params: parseWith(endpoint.params, req.params, 'path'),
+    query: parseWith(endpoint.query, req.query, 'query'),
+    body: wantsJson ? parseWith(endpoint.body, body, 'body') : undefined,
+    ifMatch: endpoint.ifMatch ? readIfMatch(req) : 0,
+  }
+  return parsed as Pick<RouteContext<N>, 'params' | 'query' | 'body' | 'ifMatch'>
 }
 
 async function present(name: EndpointName, res: Response, value: unknown): Promise<void> {
@@ -76,12 +94,7 @@ async function present(name: EndpointName, res: Response, value: unknown): Promi
 export function publicRoute<N extends EndpointName, S extends Services>(router: Router, services: S, name: N, act: (context: RouteContext<N, Actor | null, null, S>) => Promise<Presented<N>>): void {
   const endpoint = endpoints[name]
   router[endpoint.method](endpoint.path, async (req, res) => {
-    const context = {
-      params: parseWith(endpoint.params, req.params, 'path'),
-      query: parseWith(endpoint.query, req.query, 'query'),
-      body: parseWith(endpoint.body, req.body, 'body'),
-      ifMatch: 0, actor: actorOf(req), tenant: null, services, req, res,
-    } as RouteContext<N, Actor | null, null, S>
+    const context: RouteContext<N, Actor | null, null, S> = { ...parseRequest(name, req), actor: actorOf(req), tenant: null, services, req, res }
     await present(name, res, await act(context))
   })
 }
@@ -99,13 +112,8 @@ export function route<N extends EndpointName, S extends Services>(router: Router
     const actor = actorOf(req)
     if (!actor) throw notSignedIn()
     if (!allows(actor, endpoint.action)) throw forbidden()
-    const parsed = {
-      params: parseWith(endpoint.params, req.params, 'path'),
-      query: parseWith(endpoint.query, req.query, 'query'),
-      body: parseWith(endpoint.body, req.body, 'body'),
-      ifMatch: endpoint.ifMatch ? readIfMatch(req) : 0,
-    }
-    const result = await services.database.withTenant(actor.organizationId, (tenant) => act({ ...parsed, actor, tenant, services, req, res } as RouteContext<N, Actor, Tenant, S>))
+    const parsed = parseRequest(name, req)
+    const result = await services.database.withTenant(actor.organizationId, (tenant) => act({ ...parsed, actor, tenant, services, req, res }))
     await present(name, res, result)
   })
 }

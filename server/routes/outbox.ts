@@ -1,13 +1,11 @@
 import type { Router } from 'express'
-import { Op } from 'sequelize'
 import type { Tenant } from '../config/database.ts'
 import { notFound } from '../middleware/problem.ts'
 import { OutboxAttachment } from '../models/outbox-attachment.ts'
 import { OutboxMail } from '../models/outbox-mail.ts'
 import type { Actor } from '../policies/index.ts'
 import { presentMail, presentMailRow } from '../presenters/mails.ts'
-import { attachmentsOf, visibleMail } from '../services/mails.ts'
-import { containing, pageOfRows } from '../services/paging.ts'
+import { attachmentsOf, listMails, visibleMail } from '../services/mails.ts'
 import { route, type Services } from './mount.ts'
 
 async function findMail({ organizationId, transaction }: Tenant, actor: Actor, id: string): Promise<OutboxMail> {
@@ -21,9 +19,8 @@ const disposition = (name: string): string => `attachment; filename="${name.repl
 
 /** Mail sent, queued or caught. */
 export function outboxRoutes(router: Router, services: Services): void {
-  route(router, services, 'listOutbox', async ({ query: { q, cursor, limit }, actor, tenant }) => {
-    const found = q ? { subject: { [Op.iLike]: containing(q) } } : {}
-    const page = await pageOfRows(OutboxMail, tenant, { sort: '-createdAt', cursor, limit, where: { ...found, ...visibleMail(actor) } })
+  route(router, services, 'listOutbox', async ({ query, actor, tenant }) => {
+    const page = await listMails(tenant, actor, query)
     const attachments = await attachmentsOf(tenant, page.items)
     return { ...page, items: page.items.map((mail) => presentMailRow(mail, attachments.get(mail.id) ?? [])) }
   })

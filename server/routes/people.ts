@@ -1,18 +1,14 @@
 import type { Router } from 'express'
-import { Op } from 'sequelize'
 import { conflict } from '../middleware/problem.ts'
 import { Organization } from '../models/organization.ts'
-import { Person } from '../models/person.ts'
 import { presentOrganization, presentPerson } from '../presenters/people.ts'
-import { containing, pageOfRows } from '../services/paging.ts'
-import { changePerson, findPerson, invitePerson, resendInvitation } from '../services/people.ts'
+import { changePerson, findPerson, invitePerson, listPeople, resendInvitation } from '../services/people.ts'
 import { route, type Services } from './mount.ts'
 
 /** People of the organization, and the organization itself. */
 export function peopleRoutes(router: Router, services: Services): void {
-  route(router, services, 'listPeople', async ({ query: { q, role, sort = 'name', cursor, limit }, tenant }) => {
-    const found = q ? { [Op.or]: [{ name: { [Op.iLike]: containing(q) } }, { email: { [Op.iLike]: containing(q) } }] } : {}
-    const page = await pageOfRows(Person, tenant, { sort, cursor, limit, where: { ...found, ...(role && { roles: { [Op.contains]: [role] } }) } })
+  route(router, services, 'listPeople', async ({ query, tenant }) => {
+    const page = await listPeople(tenant, query)
     return { ...page, items: page.items.map(presentPerson) }
   })
 

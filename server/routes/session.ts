@@ -32,7 +32,7 @@ export function sessionRoutes(router: Router, services: Services, authenticate: 
 
   publicRoute(router, services, 'signIn', async ({ body, req, res }) => {
     const person = await authenticate(req, res, body)
-    await beginSession(req, res, person)
+    await beginSession(req, person)
     return readSession(services, person)
   })
 
@@ -40,7 +40,8 @@ export function sessionRoutes(router: Router, services: Services, authenticate: 
 
   route(router, services, 'signOutEverywhere', async ({ actor, tenant, req, res }) => {
     await endSessions(tenant, await ownRow(tenant, actor, true))
-    await endSession(req, res)
+    // Only once the rows are gone for good: the session library deletes on a connection of its own and would wait for this transaction.
+    tenant.transaction.afterCommit(() => endSession(req, res))
   })
 
   publicRoute(router, services, 'requestReset', async ({ body, req }) => {
@@ -61,7 +62,7 @@ export function sessionRoutes(router: Router, services: Services, authenticate: 
 
   route(router, services, 'changePassword', async ({ actor, tenant, body, req, res }) => {
     const person = await changePassword(services, tenant, actor, body.currentPassword, body.newPassword)
-    tenant.transaction.afterCommit(() => beginSession(req, res, person))
+    tenant.transaction.afterCommit(() => beginSession(req, person))
   })
 
   route(router, services, 'changeAccount', async ({ actor, tenant, body }) => {

@@ -16,7 +16,7 @@ const wrongCredentials = () => new HttpProblem(401, 'Not signed in', 'That e-mai
 
 /**
  * The person with this e-mail address and password.
- * @throws HttpProblem 401, the same for unknown address and wrong password; TooManyTries
+ * @throws HttpProblem 401, the same for unknown address and wrong password; 429 after too many tries
  */
 export async function checkCredentials({ database }: Services, email: string, password: string, address: string): Promise<SignedIn> {
   const right = await countTry(database.owner, { kind: 'sign-in', email, address })
@@ -39,7 +39,7 @@ export async function ownRow({ organizationId, transaction }: Tenant, actor: Act
 /**
  * Proves again that the person at the keyboard is who signed in: before a signature, and before a new password.
  * Wrong tries are counted outside the transaction, so that rolling it back does not forget them.
- * @throws HttpProblem 422 when the password is wrong; TooManyTries
+ * @throws HttpProblem 422 when the password is wrong; 429 after too many tries
  */
 export async function confirmPassword({ database }: Pick<Services, 'database'>, tenant: Tenant, actor: Actor, password: string, field = 'password'): Promise<void> {
   const person = await ownRow(tenant, actor)

@@ -1,14 +1,16 @@
 import { Op } from 'sequelize'
 import type { z } from 'zod'
+import type { Page } from '../../shared/schemas/common.ts'
 import type { Role, changePersonSchema, invitePersonSchema } from '../../shared/schemas/people.ts'
 import type { Tenant } from '../config/database.ts'
 import { conflict, HttpProblem, notFound, unprocessable } from '../middleware/problem.ts'
 import { Organization } from '../models/organization.ts'
 import { Person } from '../models/person.ts'
-import { presentPerson } from '../presenters/people.ts'
-import type { Services } from '../routes/mount.ts'
+import { presentPerson, type PersonFacts } from '../presenters/people.ts'
+import type { QueryRead, Services } from '../routes/mount.ts'
 import { endSessions, invitationLink } from './accounts.ts'
 import { findByEmail } from './directory.ts'
+import { listPage, type KeysetList } from './keyset.ts'
 import { queueMail } from './mails.ts'
 import { issueToken } from './tokens.ts'
 
@@ -17,6 +19,23 @@ export async function findPerson({ organizationId, transaction }: Tenant, id: st
   const person = await Person.findOne({ where: { organizationId, id }, transaction, lock })
   if (!person) throw notFound('person')
   return person
+}
+
+const peopleList: KeysetList = {
+  select: 'id, name, email, roles, state, version, created_at as "createdAt", last_sign_in_at as "lastSignInAt"',
+  from: 'people',
+  where: [],
+  bind: {},
+  id: 'id',
+  sorts: { name: { expression: 'name', type: 'text' }, createdAt: { expression: 'created_at', type: 'timestamptz' } },
+  searched: "name || ' ' || email",
+}
+
+/** People of the organization; `q` looks in name and e-mail address. */
+export function listPeople(tenant: Tenant, query: QueryRead<'listPeople'>): Promise<Page<PersonFacts>> {
+  const where = ['organization_id = $organizationId', ...(query.role ? ['$role = any (roles)'] : [])]
+  const bind = { organizationId: tenant.organizationId, ...(query.role && { role: query.role }) }
+  return listPage<PersonFacts>(tenant, { ...peopleList, where, bind }, query, 'name')
 }
 
 async function mailInvitation(services: Services, tenant: Tenant, person: Person, invitedBy: string): Promise<void> {

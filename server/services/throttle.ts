@@ -29,20 +29,17 @@ const spoken = (seconds: number): string => {
   return minutes <= 1 ? 'a minute' : `${minutes} minutes`
 }
 
-/** 429, with the seconds to wait for the Retry-After header. */
-export class TooManyTries extends HttpProblem {
-  readonly retryAfter: number
-  constructor(kind: AttemptKind, retryAfter: number) {
-    const what = kind === 'reset' ? 'links have been asked for' : 'tries have failed'
-    super(429, 'Too many tries', `Too many ${what} of late. Wait ${spoken(retryAfter)} and try again${kind === 'sign-in' ? ', or ask for a link to set a new password' : ''}.`)
-    this.retryAfter = retryAfter
-  }
+/** 429, with the seconds to wait. */
+function tooManyTries(kind: AttemptKind, retryAfter: number): HttpProblem {
+  const what = kind === 'reset' ? 'links have been asked for' : 'tries have failed'
+  const orElse = kind === 'sign-in' ? ', or ask for a link to set a new password' : ''
+  return new HttpProblem(429, 'Too many tries', `Too many ${what} of late. Wait ${spoken(retryAfter)} and try again${orElse}.`, { retryAfter })
 }
 
 /**
  * Counts a try against its e-mail address and its network address.
  * @returns what to call when the try turns out right
- * @throws TooManyTries before any password is looked at
+ * @throws HttpProblem 429 before any password is looked at
  */
 export async function countTry(owner: pg.Pool, attempt: Attempt): Promise<() => Promise<void>> {
   const id = await noteAttempt(owner, attempt)
@@ -51,7 +48,7 @@ export async function countTry(owner: pg.Pool, attempt: Attempt): Promise<() => 
     if (failed >= tries) {
       // A refused try is not a guess: it must not push the end of the wait further away.
       await noteSuccess(owner, id)
-      throw new TooManyTries(attempt.kind, retryAfter)
+      throw tooManyTries(attempt.kind, retryAfter)
     }
   }
   return async () => {
