@@ -44,21 +44,23 @@ export async function prepareProduct(step) {
 }
 
 /**
- * Calls `stop` once when somebody asks this process to end; asking again ends it at once.
+ * Calls `stop` once when somebody asks this process to end, or when the npm that started it is gone; asking again ends it at once.
  * @param {() => void} stop
  */
 export function onStopSignal(stop) {
   let asked = 0
-  for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
-    process.on(signal, () => {
-      // npm passes on a signal that a terminal has sent to everybody already: that echo is no second request.
-      if (asked && Date.now() - asked > 1000) process.exit(130)
-      if (asked) return
-      asked = Date.now()
-      stopCommands()
-      stop()
-    })
+  const ask = () => {
+    // npm passes on a signal that a terminal has sent to everybody already: that echo is no second request.
+    if (asked && Date.now() - asked > 1000) process.exit(130)
+    if (asked) return
+    asked = Date.now()
+    stopCommands()
+    stop()
   }
+  for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) process.on(signal, ask)
+  // Started by npm, and npm was killed: nobody is left to stop this process.
+  const parent = process.ppid
+  if (process.env.npm_lifecycle_event) setInterval(() => process.ppid !== parent && !asked && ask(), 1000).unref()
 }
 
 /**
