@@ -69,10 +69,15 @@ export interface Attempt {
   address: string
 }
 
-/** Notes a try as failed before its outcome is known, so that tries made at the same time all count. Returns its id. */
+/**
+ * Notes a try as failed before its outcome is known, so that tries made at the same time all count. Tries with one e-mail
+ * address are noted one after the other: whoever has the higher id sees all the lower ones. Returns the id.
+ */
 export async function noteAttempt(owner: pg.Pool, { kind, email, address }: Attempt): Promise<string> {
   const { rows } = await owner.query<{ id: string }>(
-    'insert into sign_in_attempts (kind, email, address, organization_id) values ($1, $2, $3, (select organization_id from people where lower(people.email) = lower($2))) returning id',
+    `with turn as materialized (select pg_advisory_xact_lock(hashtextextended($2, 7461)))
+     insert into sign_in_attempts (kind, email, address, organization_id)
+     select $1, $2, $3, (select organization_id from people where lower(people.email) = lower($2)) from turn returning id`,
     [kind, email, address],
   )
   return rows[0]?.id ?? ''
