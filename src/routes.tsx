@@ -1,0 +1,38 @@
+/** The program's pages, composed from what each feature offers; one lazy chunk a page. */
+import type { QueryClient } from '@tanstack/react-query'
+import type { RouteObject } from 'react-router-dom'
+import { Skeleton } from '@/components/states.tsx'
+import { bareRoutes as accountBareRoutes, routes as accountRoutes } from '@/features/account/routes.tsx'
+import { routes as outboxRoutes } from '@/features/outbox/routes.tsx'
+import { routes as peopleRoutes } from '@/features/people/routes.tsx'
+import { routes as todayRoutes } from '@/features/today/routes.tsx'
+import { NotFound, RouteError } from '@/shell/ErrorPage.tsx'
+import { Bare, Shell } from '@/shell/Shell.tsx'
+import { anyone, signedIn } from '@/shell/guard.ts'
+
+/** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes]
+
+/** Pages without the bar, for people who are signed in: the shop view. */
+const shop: RouteObject[] = []
+
+/** Pages without the bar, for anyone: sign-in and the links in e-mails. */
+const open: RouteObject[] = [...accountBareRoutes]
+
+const gallery: RouteObject[] =
+  import.meta.env.DEV || import.meta.env.VITE_GALLERY === '1' ? [{ path: 'gallery', lazy: async () => ({ Component: (await import('@/gallery/GalleryPage.tsx')).GalleryPage }) }] : []
+
+export function createRoutes(client: QueryClient): RouteObject[] {
+  const errorElement = <RouteError />
+  return [
+    {
+      hydrateFallbackElement: <Skeleton label="Opening Sidebend" />,
+      errorElement,
+      children: [
+        { Component: Bare, loader: anyone(client), children: [{ errorElement, children: [...open, ...gallery] }] },
+        { Component: Bare, loader: signedIn(client), children: [{ errorElement, children: shop }] },
+        { Component: Shell, loader: signedIn(client), children: [{ errorElement, children: [...desk, { path: '*', Component: NotFound }] }] },
+      ],
+    },
+  ]
+}

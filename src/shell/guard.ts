@@ -1,0 +1,19 @@
+import type { QueryClient } from '@tanstack/react-query'
+import { redirect, type LoaderFunctionArgs } from 'react-router-dom'
+import { sessionQuery } from '@/lib/query.ts'
+import { signInPath } from './paths.ts'
+
+/** Loads the session before any page; without a person the way leads to sign-in and back. */
+export const signedIn =
+  (client: QueryClient) =>
+  async ({ request }: LoaderFunctionArgs): Promise<null> => {
+    const session = await client.ensureQueryData(sessionQuery)
+    if (!session.person) throw redirect(signInPath(new URL(request.url)))
+    return null
+  }
+
+/** Loads the session, whoever it is. */
+export const anyone = (client: QueryClient) => async (): Promise<null> => {
+  await client.ensureQueryData(sessionQuery)
+  return null
+}
