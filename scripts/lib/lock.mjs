@@ -1,4 +1,4 @@
-import { mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
+import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { setTimeout as sleep } from 'node:timers/promises'
 import { Refusal } from './steps.mjs'
@@ -11,7 +11,10 @@ import { Refusal } from './steps.mjs'
 export function processMark(pid) {
   try {
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
-    return stat.slice(stat.lastIndexOf(')') + 2).split(' ')[19] ?? null
+    const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ')
+    // Ended, and only waiting for its parent to take notice.
+    if (fields[0] === 'Z' || fields[0] === 'X') return null
+    return fields[19] ?? null
   } catch {
     return null
   }
@@ -28,7 +31,9 @@ export function isAlive(pid, mark = null) {
   } catch (error) {
     if (/** @type {NodeJS.ErrnoException} */ (error).code !== 'EPERM') return false
   }
-  return mark === null || mark === '' || processMark(pid) === mark
+  const now = processMark(pid)
+  if (now === null && existsSync('/proc/self/stat')) return false
+  return !mark || now === mark
 }
 
 /** @param {string} file */
