@@ -70,13 +70,14 @@ const suspects = new WeakSet<object>()
 
 const nulProblem = () => badRequest('The text holds a NUL character (code 0), which cannot be stored. Remove it; it often comes with text copied from another program.')
 
+/** Browsers send `Content-Length: 0` with a change that carries no body. */
+export const isEmpty = (req: Request): boolean => req.get('transfer-encoding') === undefined && Number(req.get('content-length') ?? 0) === 0
+
 /** Reads JSON bodies and refuses what no address here can use: another media type, and NUL characters in body or address. */
 export const requestBodies: RequestHandler[] = [
   (req, _res, next) => next(/%00/.test(req.url) ? nulProblem() : undefined),
   (req, _res, next) => {
-    // null: no body at all; false: a body of another kind.
-    const known = req.is(['application/json', 'multipart/form-data'])
-    next(known === false ? new HttpProblem(415, 'That could not be read', 'Send JSON (Content-Type: application/json), or files as multipart/form-data where files are asked for.') : undefined)
+    next(!isEmpty(req) && req.is(['application/json', 'multipart/form-data']) === false ? new HttpProblem(415, 'That could not be read', 'Send JSON (Content-Type: application/json), or files as multipart/form-data where files are asked for.') : undefined)
   },
   express.json({
     limit: JSON_LIMIT,

@@ -6,8 +6,10 @@ import type { Env } from '../config/env.ts'
 import type { Log } from '../config/log.ts'
 import type { Queue } from '../jobs/queue.ts'
 import type { Mailer } from '../mail/mailer.ts'
+import { isEmpty } from '../middleware/guards.ts'
 import { badRequest, forbidden, HttpProblem, notSignedIn, problemOfZod } from '../middleware/problem.ts'
 import { allows, type Actor } from '../policies/index.ts'
+import { FileAnswer } from './file-answer.ts'
 
 /** Where files are kept: originals, thumbnails, released PDFs. Keys are made by the program, never a name that somebody typed. */
 export interface Storage {
@@ -45,7 +47,7 @@ export interface RouteContext<N extends EndpointName, A = Actor, T = Tenant, S e
 /** A query as the handler gets it, for services that list. */
 export type QueryRead<N extends EndpointName> = Parsed<N, 'query'>
 /** What the handler gives back is checked against the endpoint's response schema before it is sent. */
-type Presented<N extends EndpointName> = z.input<(typeof endpoints)[N]['response']>
+type Presented<N extends EndpointName> = z.input<(typeof endpoints)[N]['response']> | FileAnswer
 
 function parseWith(schema: z.ZodType, input: unknown, where: string): unknown {
   const result = schema.safeParse(input)
@@ -65,7 +67,7 @@ function readIfMatch(req: Request): number {
 function parseRequest<N extends EndpointName>(name: N, req: Request): Pick<RouteContext<N>, 'params' | 'query' | 'body' | 'ifMatch'> {
   const endpoint: Endpoint = endpoints[name]
   const wantsJson = !(endpoint.body instanceof z.ZodVoid)
-  if (wantsJson && req.is('application/json') === false) throw new HttpProblem(415, 'That could not be read', 'Send the body as JSON, with Content-Type: application/json.')
+  if (wantsJson && !isEmpty(req) && req.is('application/json') === false) throw new HttpProblem(415, 'That could not be read', 'Send the body as JSON, with Content-Type: application/json.')
   const body: unknown = req.body
   const parsed = {
     params: parseWith(endpoint.params, req.params, 'path'),
@@ -79,6 +81,10 @@ function parseRequest<N extends EndpointName>(name: N, req: Request): Pick<Route
 async function present(name: EndpointName, res: Response, value: unknown): Promise<void> {
   const endpoint = endpoints[name]
   if (res.headersSent || res.writableEnded) return
+  if (value instanceof FileAnswer) {
+    value.send(res)
+    return
+  }
   if (endpoint.binary) throw new Error(`${name} did not send its file`)
   if (value === undefined) {
     res.status(endpoint.status).end()
