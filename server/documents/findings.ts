@@ -45,7 +45,7 @@ export function drawFindings(sheet: Sheet, assessments: readonly Assessment[], d
       sheet.subhead(standardWithEdition(assessment), assessments.length > 1 ? countsLine(assessment) : `judged in ${assessment.unitSystem} figures`, 60)
       sheet.paragraph(`Overall: ${VERDICT_WORD[assessment.verdict]}. Never better than the worst essential finding.`, { ...STRONG, colour: VERDICT_COLOUR[assessment.verdict] })
       const sorted = [...assessment.findings].sort((a, b) => ORDER[a.verdict] - ORDER[b.verdict] || CLASS_ORDER[a.class] - CLASS_ORDER[b.class] || a.clause.localeCompare(b.clause, 'en', { numeric: true }))
-      if (sorted.length > 0) drawTable(sheet, [{ title: 'Verdict', share: 13 }, { title: 'Class', share: 15 }, { title: 'Variable', share: 18 }, { title: 'Finding', share: 40 }, { title: 'Clause and basis', share: 17 }], sorted.map((finding) => row(finding, processes)))
+      if (sorted.length > 0) drawTable(sheet, [{ title: 'Verdict', share: 13 }, { title: 'Class', share: 13 }, { title: 'Variable', share: 19 }, { title: 'Finding', share: 38 }, { title: 'Clause and basis', share: 20 }], sorted.map((finding) => row(finding, processes)))
     }
   }, 80)
 }

@@ -10,6 +10,7 @@ import { Sheet, type Paper } from './layout/sheet.ts'
 import { drawSignatures } from './layout/signature-page.ts'
 import { drawTable, type Column } from './layout/table.ts'
 import type { TitleBlock } from './layout/title-block.ts'
+import { CAUTION, UNCONTROLLED } from './notices.ts'
 import { dateWords, gasName, processName, said, CURRENT_TYPE, LAYER, STATE_WORD } from './words.ts'
 import { drawBaseMetals, drawElectrical, drawFillers, drawGases, drawHeat, drawPositions, drawTechnique, metalsLine, type Context } from './weld-sections.ts'
 
@@ -49,9 +50,6 @@ const STAMP_NOTE: Readonly<Record<RevisionState, string>> = {
   withdrawn: 'not to be used',
 }
 
-export const CAUTION = 'Arc rays, fume, heat, noise and electric shock can injure or kill: ventilate, protect yourself, follow the safety data sheets.'
-export const UNCONTROLLED = 'A printed copy is not kept up to date. Before welding, check the number, revision and status against the current issue.'
-
 /** Cautions that follow from what the procedure uses; our own words, no figures. */
 function cautions(document: ProcedureDocument): string[] {
   const { variables } = document.content
@@ -80,12 +78,12 @@ function titleBlock(document: ProcedureDocument): TitleBlock {
     title: content.title,
     cells: [
       { label: 'Process', lines: content.variables.processes.map(processName) },
-      { label: 'Standard', lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
+      { label: 'Standard', share: 1.15, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
       { label: 'Supporting records', lines: document.coupons.length > 0 ? [document.coupons.map((coupon) => coupon.number).join(', ')] : ['none linked'] },
-      { label: 'Who and when', lines: [`Drafted: ${document.author}, ${dateWords(document.dates.drafted)}`, approver ? `Approved: ${approver.person.name}, ${dateWords(approver.signedAt)}` : document.dates.approved ? `Approved ${dateWords(document.dates.approved)}` : 'Not approved'] },
+      { label: 'Who and when', share: 1.2, lines: [document.author, `drafted ${dateWords(document.dates.drafted)}`, ...(approver ? [approver.person.name, `approved ${dateWords(approver.signedAt)}`] : [document.dates.approved && state !== 'draft' && state !== 'in-review' ? `approved ${dateWords(document.dates.approved)}` : 'not approved'])] },
     ],
     stamp: STAMP[state],
-    stampNote: state === 'draft' && blocking > 0 ? `${blocking} finding${blocking === 1 ? '' : 's'} to settle` : STAMP_NOTE[state],
+    stampNote: state === 'approved' && document.deviationReason ? 'for production, with open findings: see Findings' : state === 'draft' && blocking > 0 ? `${blocking} finding${blocking === 1 ? '' : 's'} to settle` : STAMP_NOTE[state],
   }
 }
 
@@ -97,10 +95,10 @@ function drawPasses(context: Context): void {
   sheet.section('Pass table', `${passes.length} ${passes.length === 1 ? 'entry' : 'entries'}`, () => {
     drawTable(
       sheet,
-      [{ title: 'Pass', share: 7 }, { title: 'Layer', share: 8 }, { title: 'Process', share: 10 }, { title: 'Filler', share: 15 }, column('Diameter', figures.unit('length'), 12), { title: 'Polarity', share: 10 }, column('Current', figures.unit('current'), 11), column('Voltage', figures.unit('voltage'), 11), column('Wire feed', figures.unit('wireFeed'), 15), column('Travel', figures.unit('travelSpeed'), 16)],
+      [{ title: 'Pass', share: 7 }, { title: 'Layer', share: 8 }, { title: 'Process', share: 10 }, { title: 'Filler', share: 15 }, { title: 'Polarity', share: 10 }, column('Diameter', figures.unit('length'), 12), column('Current', figures.unit('current'), 11), column('Voltage', figures.unit('voltage'), 11), column('Wire feed', figures.unit('wireFeed'), 15), column('Travel', figures.unit('travelSpeed'), 16)],
       passes.map(({ block, pass }) => [
         { text: pass.number, strong: true }, said(LAYER, pass.layer), processName(block).split(',')[0] ?? '', block.filler.classification ?? (block.filler.added === false ? 'none' : ''),
-        figures.cell(pass.fillerDiameter, 'length'), said(CURRENT_TYPE, block.electrical.currentType),
+        said(CURRENT_TYPE, block.electrical.currentType), figures.cell(pass.fillerDiameter, 'length'),
         figures.cellInterval(pass.current ?? block.electrical.current, 'current'), figures.cellInterval(pass.voltage ?? block.electrical.voltage, 'voltage'),
         figures.cellInterval(pass.wireFeed ?? block.electrical.wireFeed, 'wireFeed'), figures.cellInterval(pass.travelSpeed ?? block.electrical.travelSpeed, 'travelSpeed'),
       ]),

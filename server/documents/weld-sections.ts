@@ -6,6 +6,7 @@ import type { Judgements } from './judgements.ts'
 import { drawFacts, drawWideFact, type Fact } from './layout/facts.ts'
 import type { Figures } from './layout/figures.ts'
 import { drawGaugeRow } from './layout/gauge-row.ts'
+import { VERDICT_WORD } from './layout/marks.ts'
 import type { Sheet } from './layout/sheet.ts'
 import { drawTable, type Cell, type Column } from './layout/table.ts'
 import * as words from './words.ts'
@@ -101,7 +102,7 @@ export function drawBaseMetals(context: Context): void {
     const shown = rows.filter(([label, read, names]) => read(a) || read(b) || label.startsWith('Specification') || marksOf(names).length > 0)
     drawTable(sheet, columns, shown.map(([label, read, names]): Cell[] => {
       const [mark] = marksOf(names)
-      return [{ text: label, soft: true }, read(a) || NOT_STATED, read(b) || NOT_STATED, mark ? { text: mark.clause, verdict: mark.verdict } : '']
+      return [{ text: label, soft: true }, read(a) || NOT_STATED, read(b) || NOT_STATED, mark ? { text: `${VERDICT_WORD[mark.verdict]} · ${mark.clause}`, verdict: mark.verdict } : '']
     }))
     drawMeasures(context, [
       { label: variables.joint.weld === 'fillet' ? 'Thickness, fillet' : 'Thickness, groove', note: 'base metal at the weld', value: figures.interval(variables.thickness, 'length'), field: 'thickness', must: true },
@@ -121,7 +122,7 @@ export function drawFillers(context: Context): void {
         always('Classification', filler.added === false ? 'no filler metal added' : [filler.specification, filler.classification].filter(Boolean).join(' '), marks('classification', 'specification', 'added')),
         fact('Trade name', filler.tradeName, marks('tradeName')),
         fact('F-Number', filler.fNumber ? `F-${filler.fNumber}` : '', marks('fNumber')),
-        fact('A-Number', filler.aNumber ? `A-${filler.aNumber}` : filler.depositComposition, marks('aNumber', 'depositComposition')),
+        fact(filler.aNumber === null && filler.depositComposition ? 'Deposit' : 'A-Number', filler.aNumber ? `A-${filler.aNumber}` : filler.depositComposition, marks('aNumber', 'depositComposition')),
         fact('Form', words.said(words.PRODUCT_FORM, filler.productForm), marks('productForm')),
         fact('Diameters', filler.diameters.map((diameter) => figures.quantity(diameter, 'length')).join(', '), marks('diameters')),
         fact('Lot', filler.lot), fact('Supplemental filler', words.yesNo(filler.supplemental), marks('supplemental')),

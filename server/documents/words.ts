@@ -11,7 +11,7 @@ export const STANDARD_NAME: Words<Assessment['standard']> = { 'asme-ix': 'ASME B
 export const STATE_WORD: Words<RevisionState> = { draft: 'draft', 'in-review': 'in review', approved: 'approved', superseded: 'superseded', withdrawn: 'withdrawn' }
 export const COUPON_STATE_WORD: Words<CouponState> = { planned: 'planned', welding: 'welding', testing: 'testing', certified: 'certified', rejected: 'rejected' }
 export const CLASS_WORD: Words<VariableClass> = { essential: 'essential', supplementary: 'supplementary essential', nonessential: 'nonessential', 'not-a-variable': 'not a variable here' }
-export const BASIS_WORD: Words<Basis> = { read: 'read in the text', secondary: 'secondary source', memory: 'from memory: confirm in your edition', 'common-practice': 'common practice' }
+export const BASIS_WORD: Words<Basis> = { read: 'read', secondary: 'secondary', memory: 'memory: confirm in your edition', 'common-practice': 'common practice' }
 export const MEANING_WORD: Words<Signature['meaning']> = { authored: 'Authored', reviewed: 'Reviewed', approved: 'Approved', certified: 'Certified', withdrawn: 'Withdrawn', rejected: 'Rejected', returned: 'Returned' }
 
 export const JOINT_TYPE: Words<Joint['type']> = { butt: 'butt joint', tee: 'tee joint', corner: 'corner joint', lap: 'lap joint', edge: 'edge joint' }

@@ -37,7 +37,7 @@ const IN_WORDS: Readonly<Record<string, string>> = {
 
 /** Text with every sign replaced that no shipped face can show. */
 export const printable = (text: string): string =>
-  Array.from(text.normalize('NFC'), (character) => IN_WORDS[character] ?? (character !== '\n' && /\p{Cc}/u.test(character) ? '' : character)).join('')
+  Array.from(text.normalize('NFC').replace(/([≤≥≈≠√∠])\s+/gu, '$1'), (character) => IN_WORDS[character] ?? (character !== '\n' && /\p{Cc}/u.test(character) ? '' : character)).join('')
 
 interface FontKitFont { hasGlyphForCodePoint(codePoint: number): boolean }
 /** pdfkit keeps the parsed face here; its types leave it out. */
@@ -47,9 +47,10 @@ const parsed = (document: Document): FontKitFont => (document as unknown as { _f
 const shows = new Map<string, number>()
 const widths = new Map<string, number>()
 
-export interface Run { font: string; text: string; width: number }
+export interface Run { font: string; text: string; width: number; tabular: boolean }
 
-const FEATURES: PDFKit.Mixins.OpenTypeFeatures[] = ['tnum', 'kern']
+/** Figures of one width, for columns; they widen the hyphen too, so running text goes without. */
+const TABULAR: PDFKit.Mixins.OpenTypeFeatures[] = ['tnum']
 
 /** The faces of one document: measuring and drawing with fallback from script to script. */
 export class Faces {
@@ -80,7 +81,7 @@ export class Faces {
   }
 
   /** Runs of one font each, widths at size 1. A character that no face has is shown as "?" rather than lost. */
-  runs(face: Face, text: string): Run[] {
+  runs(face: Face, text: string, tabular = false): Run[] {
     const runs: { index: number; text: string }[] = []
     for (const character of text) {
       const index = this.fileFor(face, character)
@@ -90,15 +91,15 @@ export class Faces {
       if (last?.index === at) last.text += shown
       else runs.push({ index: at, text: shown })
     }
-    return runs.map((run) => ({ font: FILES[face][run.index]!, text: run.text, width: this.width(face, run.index, run.text) }))
+    return runs.map((run) => ({ font: FILES[face][run.index]!, text: run.text, tabular, width: this.width(face, run.index, run.text, tabular) }))
   }
 
-  private width(face: Face, index: number, text: string): number {
-    const key = `${face}${index}|${text}`
+  private width(face: Face, index: number, text: string, tabular: boolean): number {
+    const key = `${face}${index}${tabular ? '#' : '|'}${text}`
     const known = widths.get(key)
     if (known !== undefined) return known
     this.use(face, index)
-    const width = this.document.fontSize(100).widthOfString(text, { features: FEATURES }) / 100
+    const width = this.document.fontSize(100).widthOfString(text, tabular ? { features: TABULAR } : {}) / 100
     if (widths.size > 40_000) widths.clear()
     widths.set(key, width)
     return width
@@ -113,7 +114,7 @@ export class Faces {
         this.registered.add(run.font)
       }
       this.document.font(run.font).fontSize(size).fillColor(colour)
-      this.document.text(run.text, at, baseline, { lineBreak: false, baseline: 'alphabetic', features: FEATURES, characterSpacing: tracking })
+      this.document.text(run.text, at, baseline, { lineBreak: false, baseline: 'alphabetic', characterSpacing: tracking, ...(run.tabular ? { features: TABULAR } : {}) })
       at += run.width * size + tracking * run.text.length
     }
   }

@@ -110,13 +110,17 @@ export function drawGauge(doc: PDFKit.PDFDocument, faces: Faces, figures: Figure
 
   const below: Note[] = []
   const { asked } = gauge
-  if (asked && (asked.min !== null || asked.max !== null)) {
+  if (asked) {
     const bar = (from: number, to: number) => ({ start: Math.max(scale.left, Math.min(from, to - 2.4)), end: Math.min(scale.right, Math.max(to, from + 2.4)) })
     const whole = bar(asked.min === null ? scale.left : scale.at(asked.min), asked.max === null ? scale.right : scale.at(asked.max))
     doc.rect(whole.start, mid - 2.2, whole.end - whole.start, 4.4).fill(COLOUR.ink)
+    if (asked.min === null && asked.max === null) {
+      arrow(doc, scale.left - 3, mid, -1, COLOUR.ink, 3)
+      arrow(doc, scale.right + 3, mid, 1, COLOUR.ink, 3)
+    }
     const from = asked.min ?? asked.max ?? 0
     const to = asked.max ?? asked.min ?? 0
-    const out = from === to ? (uncovered(gauge, from - 1e-9, to + 1e-9).some(([a, b]) => b - a > 1.9e-9) ? [[from, to] as [number, number]] : []) : uncovered(gauge, from, to)
+    const out = asked.min === null && asked.max === null ? [] : from === to ? (uncovered(gauge, from - 1e-9, to + 1e-9).some(([a, b]) => b - a > 1.9e-9) ? [[from, to] as [number, number]] : []) : uncovered(gauge, from, to)
     for (const [a, b] of out) {
       const part = bar(scale.at(a), scale.at(b))
       doc.rect(part.start, mid - 2.2, part.end - part.start, 4.4).fill(COLOUR.oxide)

@@ -4,7 +4,7 @@
  */
 import PDFDocument from 'pdfkit'
 import { Faces, printable } from './fonts.ts'
-import { drawLines, heightOf, leadingOf, setText, type Line, type Style } from './text.ts'
+import { drawLines, heightOf, leadingOf, setText, widthOf, type Line, type Style } from './text.ts'
 import { drawTitleBlock, titleBlockHeight, type TitleBlock } from './title-block.ts'
 import { COLOUR } from './tokens.ts'
 
@@ -137,6 +137,7 @@ export class Sheet {
     const height = 18
     this.artifact(() => {
       this.doc.rect(this.left, this.y, this.width, height).fill(COLOUR.band)
+      if (this.y > this.bodyTop) this.doc.lineWidth(0.7).strokeColor(COLOUR.ink).moveTo(this.left, this.y).lineTo(this.right, this.y).stroke()
       this.doc.lineWidth(0.5).strokeColor(COLOUR.rule).moveTo(this.left, this.y + height).lineTo(this.right, this.y + height).stroke()
     })
     const lines = setText(this.faces, HEAD, title.toUpperCase(), this.width * 0.7)
@@ -247,7 +248,8 @@ export class Sheet {
       const textWidth = this.width - side - 2 * PAD
       const lines = [...setText(faces, small, this.options.footer.notice, textWidth), ...setText(faces, small, this.options.footer.caution, textWidth)].slice(0, 3)
       drawLines(faces, small, lines, this.left + PAD, top + (FOOT - heightOf(lines, small)) / 2)
-      const identity: Style = { face: 'headStrong', size: 9.5, colour: COLOUR.ink, leading: 12 }
+      let identity: Style = { face: 'headStrong', size: 9.5, colour: COLOUR.ink, leading: 12 }
+      while (identity.size > 5.5 && widthOf(faces, identity, this.options.identity) > side - 2 * PAD) identity = { ...identity, size: identity.size - 0.25 }
       const counted: Style = { face: 'text', size: 7, colour: COLOUR.ink, leading: 9 }
       drawLines(faces, identity, setText(faces, identity, this.options.identity, side - 2 * PAD).slice(0, 1), this.right - side + PAD, top + 4.5, side - 2 * PAD, 'right')
       drawLines(faces, counted, setText(faces, counted, `Page ${page} of ${count}`, side - 2 * PAD), this.right - side + PAD, top + 17, side - 2 * PAD, 'right')

@@ -31,7 +31,10 @@ export function drawTable(sheet: Sheet, columns: readonly Column[], rows: readon
   const widths = columns.map((column) => (column.share / sum) * total)
   const lefts = widths.map((_, index) => sheet.left + PAD + widths.slice(0, index).reduce((all, width) => all + width, 0))
   const body: Style = options.size ? { ...BODY, size: options.size, leading: options.size * 1.31 } : BODY
-  const inner = (index: number) => (widths[index] ?? 0) - 2 * GAP
+  // A left-aligned column after a right-aligned one would touch it.
+  const indentOf = (index: number) => (index > 0 && columns[index - 1]?.align === 'right' && columns[index]?.align !== 'right' ? 7 : 0)
+  const inner = (index: number) => (widths[index] ?? 0) - 2 * GAP - indentOf(index)
+  const leftOf = (index: number) => (lefts[index] ?? 0) + GAP + indentOf(index)
 
   const heads = columns.map((column, index) => ({
     title: setText(sheet.faces, { ...LABEL, size: 6.8, leading: 8.2 }, column.title.toUpperCase(), inner(index)),
@@ -43,7 +46,7 @@ export function drawTable(sheet: Sheet, columns: readonly Column[], rows: readon
     columns.map((column, index) => {
       const cell = row[index] ?? ''
       const given = typeof cell === 'string' ? { text: cell } : cell
-      const style: Style = { ...body, face: given.strong || given.verdict ? 'strong' : 'text', colour: given.colour ?? (given.verdict ? VERDICT_COLOUR[given.verdict] : given.soft ? COLOUR.soft : COLOUR.ink) }
+      const style: Style = { ...body, tabular: column.align === 'right', face: given.strong || (given.verdict && !given.text) ? 'strong' : 'text', colour: given.colour ?? (given.verdict && !given.text ? VERDICT_COLOUR[given.verdict] : given.soft ? COLOUR.soft : COLOUR.ink) }
       const text = given.verdict && !given.text ? VERDICT_WORD[given.verdict] : given.text
       return { lines: setText(sheet.faces, style, text, inner(index) - (given.verdict ? MARK : 0)), style, verdict: given.verdict, align: column.align ?? 'left' }
     })
@@ -55,8 +58,8 @@ export function drawTable(sheet: Sheet, columns: readonly Column[], rows: readon
       const head = heads[index]!
       const offset = headHeight - 3 - head.title.length * 8.2 - heightOf(head.unit, UNIT)
       const align = columns[index]!.align ?? 'left'
-      drawLines(sheet.faces, { ...LABEL, size: 6.8, leading: 8.2 }, head.title, lefts[index]! + GAP, top + offset, inner(index), align)
-      drawLines(sheet.faces, UNIT, head.unit, lefts[index]! + GAP, top + offset + head.title.length * 8.2, inner(index), align)
+      drawLines(sheet.faces, { ...LABEL, size: 6.8, leading: 8.2 }, head.title, leftOf(index), top + offset, inner(index), align)
+      drawLines(sheet.faces, UNIT, head.unit, leftOf(index), top + offset + head.title.length * 8.2, inner(index), align)
     }
     if (first) {
       const row = sheet.group('TR', table)
@@ -86,9 +89,9 @@ export function drawTable(sheet: Sheet, columns: readonly Column[], rows: readon
       const top = sheet.y + 2
       part.forEach((cell, index) => {
         sheet.tag('TD', () => {
-          if (cell.verdict && firstPart) drawMark(sheet.doc, cell.verdict, lefts[index]! + GAP + 3, top + leadingOf(body) / 2)
+          if (cell.verdict && firstPart) drawMark(sheet.doc, cell.verdict, leftOf(index) + 3, top + leadingOf(body) / 2)
           const indent = cell.verdict ? MARK : 0
-          drawLines(sheet.faces, cell.style, cell.lines, lefts[index]! + GAP + indent, top, inner(index) - indent, cell.align)
+          drawLines(sheet.faces, cell.style, cell.lines, leftOf(index) + indent, top, inner(index) - indent, cell.align)
         }, { into: element })
       })
       sheet.y += heightWith(part)

@@ -1,6 +1,6 @@
 import { CAP_HEIGHT, printable, type Face, type Faces, type Run } from './fonts.ts'
 
-export interface Style { face: Face; size: number; colour: string; leading?: number; tracking?: number }
+export interface Style { face: Face; size: number; colour: string; leading?: number; tracking?: number; tabular?: boolean }
 export interface Line { runs: Run[]; width: number }
 
 export const leadingOf = (style: Style): number => style.leading ?? style.size * 1.32
@@ -9,7 +9,7 @@ export const leadingOf = (style: Style): number => style.leading ?? style.size *
 const pieces = (word: string): string[] => word.split(/(?<=[/,;·+@_-])(?=.)/u)
 
 function lineOf(faces: Faces, style: Style, text: string): Line {
-  const runs = faces.runs(style.face, text)
+  const runs = faces.runs(style.face, text, style.tabular)
   return { runs, width: runs.reduce((sum, run) => sum + run.width * style.size + (style.tracking ?? 0) * run.text.length, 0) }
 }
 

@@ -9,7 +9,7 @@ export interface TitleBlock {
   revision: string | null
   title: string
   /** Three or four cells: heading and the lines below it. */
-  cells: readonly { label: string; lines: readonly string[] }[]
+  cells: readonly { label: string; lines: readonly string[]; share?: number }[]
   stamp: { text: string; tone: 'straw' | 'plum' | 'jade' | 'oxide' | 'soft'; edge: 'single' | 'double' | 'dashed' }
   stampNote: string
 }
@@ -23,10 +23,13 @@ const NUMBER: Style = { face: 'headStrong', size: 25, colour: COLOUR.ink, leadin
 const REVISION: Style = { face: 'head', size: 13, colour: COLOUR.soft, leading: 25 }
 const INSET = 7
 const STRIP = 15
-const SHARES = { first: 0.3, stamp: 0.15 }
+const SHARES = { first: 0.275, stamp: 0.145 }
 
 const firstWidth = (width: number) => width * SHARES.first
-const cellWidth = (block: TitleBlock, width: number) => (width * (1 - SHARES.first - SHARES.stamp)) / Math.max(1, block.cells.length)
+function cellWidths(block: TitleBlock, width: number): number[] {
+  const sum = block.cells.reduce((all, cell) => all + (cell.share ?? 1), 0)
+  return block.cells.map((cell) => (width * (1 - SHARES.first - SHARES.stamp) * (cell.share ?? 1)) / sum)
+}
 
 /** The number shrinks until it and the revision fit on one line. */
 function numberStyles(faces: Faces, block: TitleBlock, width: number): { number: Style; revision: Style } {
@@ -41,7 +44,10 @@ function numberStyles(faces: Faces, block: TitleBlock, width: number): { number:
 }
 
 const titleLines = (faces: Faces, block: TitleBlock, width: number) => setText(faces, TITLE, block.title, firstWidth(width) - 2 * INSET)
-const cellLines = (faces: Faces, block: TitleBlock, width: number) => block.cells.map((cell) => cell.lines.flatMap((line) => setText(faces, VALUE, line, cellWidth(block, width) - 2 * INSET)))
+const cellLines = (faces: Faces, block: TitleBlock, width: number) => {
+  const widths = cellWidths(block, width)
+  return block.cells.map((cell, index) => cell.lines.flatMap((line) => setText(faces, VALUE, line, widths[index]! - 2 * INSET)))
+}
 
 /** Height that the block needs at this width: the tallest of its cells, never less than a drawing's. */
 export function titleBlockHeight(faces: Faces, block: TitleBlock, width: number): number {
@@ -54,7 +60,7 @@ function drawStamp(doc: PDFKit.PDFDocument, faces: Faces, block: TitleBlock, x: 
   const colour = COLOUR[block.stamp.tone]
   const text = block.stamp.text.toUpperCase()
   let style: Style = { face: 'headStrong', size: 15, colour, leading: 20, tracking: 1 }
-  while (style.size > 7 && widthOf(faces, style, text) > width - 26) style = { ...style, size: style.size - 0.5 }
+  while (style.size > 7 && widthOf(faces, style, text) > width - 36) style = { ...style, size: style.size - 0.5 }
   const note: Style = { face: 'text', size: 6.4, colour: COLOUR.soft, leading: 8.2 }
   const notes = setText(faces, note, block.stampNote, width - 2 * INSET).slice(0, 3)
   const box = { width: widthOf(faces, style, text) + 14, height: 21 }
@@ -93,10 +99,11 @@ export function drawTitleBlock(doc: PDFKit.PDFDocument, faces: Faces, block: Tit
   }
   drawLines(faces, TITLE, titleLines(faces, block, width), x + INSET, numberTop + leadingOf(NUMBER))
 
-  const each = cellWidth(block, width)
+  const widths = cellWidths(block, width)
   const lines = cellLines(faces, block, width)
   block.cells.forEach((cell, index) => {
-    const left = x + first + index * each
+    const each = widths[index]!
+    const left = x + first + widths.slice(0, index).reduce((sum, one) => sum + one, 0)
     doc.lineWidth(0.5).strokeColor(COLOUR.ink).moveTo(left, top).lineTo(left, y + height).stroke()
     drawLines(faces, LABEL, setText(faces, LABEL, cell.label.toUpperCase(), each - 2 * INSET).slice(0, 1), left + INSET, top + 5)
     drawLines(faces, VALUE, lines[index] ?? [], left + INSET, top + 5 + leadingOf(LABEL) + 2)
