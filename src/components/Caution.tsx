@@ -1,11 +1,11 @@
-import { Flame, Snowflake, Wind, Zap, Sun } from 'lucide-react'
+import { Cylinder, Flame, Sun, Wind, Zap } from 'lucide-react'
 
 const HAZARDS = {
   fume: [Wind, 'Fume: ventilate or extract, and keep your head out of the plume.'],
   arc: [Sun, 'Arc: shade the eyes, cover the skin, screen others.'],
   shock: [Zap, 'Shock: dry gloves, sound leads, nothing live touched bare.'],
   'hot-work': [Flame, 'Hot work: clear what burns, permit in hand, watch afterwards.'],
-  gas: [Snowflake, 'Gas: shielding gas displaces air; never let it fill a closed space.'],
+  gas: [Cylinder, 'Gas: shielding gas displaces air; never let it fill a closed space.'],
 } as const
 
 export type Hazard = keyof typeof HAZARDS
@@ -14,7 +14,7 @@ export const HAZARD_LIST = Object.keys(HAZARDS) as Hazard[]
 /** The dangers of the work at hand, one line each. General reminders; the workplace's own rules come first. */
 export function Caution({ hazards = HAZARD_LIST }: { hazards?: readonly Hazard[] }) {
   return (
-    <aside aria-label="Take care" className="border-2 border-straw px-3.5 py-2.5 text-straw-deep">
+    <div role="note" aria-label="Take care" className="border-2 border-straw px-3.5 py-2.5 text-straw-deep">
       <ul className="space-y-1">
         {hazards.map((hazard) => {
           const [Icon, text] = HAZARDS[hazard]
@@ -26,7 +26,7 @@ export function Caution({ hazards = HAZARD_LIST }: { hazards?: readonly Hazard[]
           )
         })}
       </ul>
-    </aside>
+    </div>
   )
 }
 

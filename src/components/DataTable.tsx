@@ -104,7 +104,7 @@ export function DataTable<Row extends object>({ caption, columns, rows, rowKey, 
                           {column?.header}
                         </span>
                       )}
-                      <div className="min-w-0">
+                      <div className="min-w-0 grow">
                         {head && rowHref ? (
                           <Link to={rowHref(row.original)} data-row-link className="font-semibold hover:underline">
                             <table.FlexRender cell={cell} />

@@ -57,7 +57,7 @@ export function SheetRow({ label, htmlFor, unit, children, gauge, verdict, margi
           {unit && <p className="text-xs text-soft">{unit}</p>}
         </div>
         <div className={`min-w-0 ${gauge === undefined ? 'lg:col-span-2' : ''}`}>{children}</div>
-        {gauge !== undefined && <div className="min-w-0 sm:col-start-2 lg:col-start-auto">{gauge}</div>}
+        {gauge !== undefined && <div className="min-w-0 text-soft sm:col-start-2 lg:col-start-auto">{gauge}</div>}
       </div>
       {margin}
     </div>

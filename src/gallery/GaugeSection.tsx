@@ -12,7 +12,8 @@ const CASES: Case[] = [
   { name: 'Wholly outside', range: mm([closed(1.5), closed(6)]), asked: { min: 12, max: 14 }, tested: [3] },
   { name: 'A gap between two coupons', range: mm([closed(5), closed(12)], [closed(20), closed(40)]), asked: { min: 8, max: 30 }, tested: [6, 20] },
   { name: 'No upper limit', range: mm([closed(5), unlimited]), asked: { min: 10, max: 60 }, tested: [38] },
-  { name: 'No limit, none asked', range: mm([unlimited, unlimited]), asked: { min: null, max: null } },
+  { name: 'No limit, all asked', range: mm([unlimited, unlimited]), asked: { min: null, max: null } },
+  { name: 'Nothing asked', range: mm([closed(3), closed(24)]), asked: null, tested: [12] },
   { name: 'At least asked', range: mm([closed(10), unlimited]), asked: { min: 50, max: null }, tested: [60] },
   { name: 'Open end', range: mm([closed(5), open(20)]), asked: { min: 8, max: 20 }, tested: [10] },
   { name: 'An end not known', range: mm([closed(5), unknown]), asked: { min: 8, max: 30 }, tested: [10] },
@@ -27,7 +28,7 @@ export function GaugeSection() {
   return (
     <Group title="Range gauge">
       <div className="grid gap-4 xl:grid-cols-2">
-        {[CASES.slice(0, 8), CASES.slice(8)].map((half, index) => (
+        {[CASES.slice(0, 9), CASES.slice(9)].map((half, index) => (
           <Sheet key={index} title={index === 0 ? 'What is covered' : 'Ends and odd cases'} aside="full, and thin for lists">
             {half.map(({ name, ...gauge }) => (
               <SheetRow key={name} label={name} gauge={<RangeGauge label={name} {...gauge} />}>

@@ -88,7 +88,7 @@ export function RecordSection() {
             >
               <IntervalField id="g-t" label="Thickness, groove" labelHidden dimension="length" system="SI" value={thickness} onChange={setThickness} />
             </SheetRow>
-            <SheetRow label="Diameter" unit="pipe, mm" htmlFor="g-d" gauge={<RangeGauge label="Diameter" range={mm([unlimited, unlimited])} asked={{ min: 60, max: null }} />}>
+            <SheetRow label="Diameter" unit="pipe, mm" htmlFor="g-d" gauge={<RangeGauge label="Diameter" range={mm([unlimited, unlimited])} asked={{ min: null, max: null }} />}>
               <IntervalField id="g-d" label="Diameter" labelHidden dimension="length" system="SI" allowAll allMeans="plate and pipe" value={{ min: null, max: null, all: true }} onChange={() => undefined} />
             </SheetRow>
           </Sheet>

@@ -39,17 +39,17 @@ export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
       {verdict === 'cannot-tell' && missing.length > 0 && <p className="mt-1">Missing: {missing.join('; ')}.</p>}
       {basis === 'memory' && <p className="mt-1 text-xs text-soft">{BASIS.memory}</p>}
       {onFix && fixes.length > 0 && (
-        <p className="no-print mt-1.5 flex flex-wrap gap-x-3 gap-y-1">
+        <p className="no-print mt-1 flex flex-wrap gap-x-3">
           {fixes.map((fix) => (
-            <button key={`${fix.kind} ${fix.label}`} type="button" className="border-b border-ink font-semibold hover:border-b-2" onClick={() => onFix(fix, finding)}>
+            <button key={`${fix.kind} ${fix.label}`} type="button" className="min-h-6 font-semibold underline decoration-1 underline-offset-[3px] hover:decoration-2" onClick={() => onFix(fix, finding)}>
               {fix.label}
             </button>
           ))}
         </p>
       )}
-      <details className="group mt-1">
-        <summary className="w-fit cursor-pointer text-xs text-soft underline decoration-dotted underline-offset-2">How this was reached</summary>
-        <div className="mt-1.5 space-y-1 text-xs leading-[1.125rem]">
+      <details className="mt-0.5">
+        <summary className="w-fit cursor-pointer py-1 text-xs text-soft underline decoration-dotted underline-offset-2">How this was reached</summary>
+        <div className="mt-1 space-y-1 text-xs leading-[1.125rem]">
           {bounds && <p>Covered: {bounds}.</p>}
           {coupons.length > 0 && <p>Decided by {coupons.join(', ')}.</p>}
           {reasoning.length > 0 && (

@@ -47,7 +47,7 @@ export function RangeGauge({ label, range, asked, tested = [], unit, system, thi
           <Asked key={index} piece={piece} middle={middle} size={thin ? 4 : 7} width={width} />
         ))}
         {ticks.map((x) => (
-          <line key={x} x1={x} x2={x} y1={middle - block / 2 - (thin ? 2 : 7)} y2={middle + block / 2 + (thin ? 2 : 5)} className="stroke-plum" strokeWidth={2} />
+          <line key={x} x1={x} x2={x} y1={middle - block / 2 - (thin ? 2 : 4)} y2={middle + block / 2 + (thin ? 2 : 5)} className="stroke-plum" strokeWidth={2} />
         ))}
         {!thin &&
           labels.map((text) => (
@@ -78,11 +78,14 @@ function Covered({ block, middle, size }: { block: Block; middle: number; size: 
       </g>
     )
   }
+  const shut = (kind: Block['lower'], x: number) => (kind === 'open' ? <path d={`M${x} ${top}V${bottom}`} strokeDasharray="2.5 2.5" /> : null)
+  if (lower !== 'open' && upper !== 'open') return <path d={outline} className="fill-jade-bg stroke-jade" strokeWidth={1.25} />
   return (
     <g className="stroke-jade" strokeWidth={1.25}>
-      <path d={outline} className="fill-jade-bg" />
-      {lower === 'open' && <path d={`M${left} ${top}V${bottom}`} className="stroke-sheet" strokeDasharray="3 3" strokeWidth={2} />}
-      {upper === 'open' && <path d={`M${right} ${top}V${bottom}`} className="stroke-sheet" strokeDasharray="3 3" strokeWidth={2} />}
+      <path d={outline} className="fill-jade-bg" stroke="none" />
+      <path d={`M${left} ${top}H${right}${upper === 'arrow' ? `L${x2} ${middle}L${right} ${bottom}` : upper === 'open' ? `M${right} ${bottom}` : `V${bottom}`}H${left}${lower === 'arrow' ? `L${x1} ${middle}L${left} ${top}` : lower === 'open' ? '' : `V${top}`}`} fill="none" />
+      {shut(lower, left)}
+      {shut(upper, right)}
     </g>
   )
 }

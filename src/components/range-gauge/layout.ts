@@ -117,7 +117,6 @@ export function layoutGauge({ range, asked, tested, width, testedWord }: GaugeIn
 /** Cuts what is asked at the range's bounds and judges each piece; neighbours with one verdict are joined. */
 function splitAsked(range: NumericRange | null, asked: AskedInterval, bounds: readonly number[]): Omit<Piece, 'x1' | 'x2'>[] {
   const { min, max } = asked
-  if (min === null && max === null) return []
   const judge = (value: number): Verdict => (range ? containsValue(range, value) : 'cannot-tell')
   if (min !== null && max !== null && min >= max) return [{ from: min, to: max, verdict: min > max ? 'cannot-tell' : judge(min) }]
   const cuts = unique(bounds.filter((value) => (min === null || value > min) && (max === null || value < max)))
@@ -126,7 +125,7 @@ function splitAsked(range: NumericRange | null, asked: AskedInterval, bounds: re
   for (let i = 0; i + 1 < edges.length; i += 1) {
     const from = edges[i] ?? null
     const to = edges[i + 1] ?? null
-    const middle = from !== null && to !== null ? (from + to) / 2 : from !== null ? from + Math.abs(from) + 1 : (to ?? 0) - Math.abs(to ?? 0) - 1
+    const middle = from !== null && to !== null ? (from + to) / 2 : from !== null ? from + Math.abs(from) + 1 : to !== null ? to - Math.abs(to) - 1 : 0
     const verdict = judge(middle)
     const last = pieces.at(-1)
     if (last && last.verdict === verdict) last.to = to

@@ -30,15 +30,15 @@ export function boundsInWords(range: QualifiedSpan): string {
   return range.segments.map((segment) => segmentInWords(segment, range.unit)).join(', or ')
 }
 
+/** A null end runs on without limit. */
 export interface AskedInterval {
   min: number | null
   max: number | null
 }
 
-/** "5 to 25 mm", "at least 10 °C", "10 mm"; null when nothing is asked. */
-export function askedInWords(asked: AskedInterval, unit: string): string | null {
-  const { min, max } = asked
-  if (min === null && max === null) return null
+/** "5 to 25 mm", "at least 10 °C", "10 mm", "every value". */
+export function askedInWords({ min, max }: AskedInterval, unit: string): string {
+  if (min === null && max === null) return 'every value'
   if (min === null) return `at most ${withUnit(max ?? 0, unit)}`
   if (max === null) return `at least ${withUnit(min, unit)}`
   return min === max ? withUnit(min, unit) : `${figure(min)} to ${withUnit(max, unit)}`
@@ -47,10 +47,9 @@ export function askedInWords(asked: AskedInterval, unit: string): string | null 
 /** The whole gauge as one text, for readers who don't see it. */
 export function gaugeInWords(label: string, range: NumericRange | null, asked: AskedInterval | null, tested: readonly number[], unit: string, pieces: readonly { from: number | null; to: number | null; verdict: Verdict }[]): string {
   const parts = [range ? `Covered: ${boundsInWords({ ...range, unit })}.` : 'No range to compare with.']
-  const wanted = asked && askedInWords(asked, unit)
-  if (wanted) parts.push(`Asked: ${wanted}.`)
+  if (asked) parts.push(`Asked: ${askedInWords(asked, unit)}.`)
   for (const { from, to, verdict } of pieces)
-    if (verdict !== 'within') parts.push(`${verdict === 'outside' ? 'Outside' : 'Cannot tell'}: ${askedInWords({ min: from, max: to }, unit) ?? 'all of it'}.`)
+    if (verdict !== 'within') parts.push(`${verdict === 'outside' ? 'Outside' : 'Cannot tell'}: ${askedInWords({ min: from, max: to }, unit)}.`)
   if (tested.length > 0) parts.push(`Welded at ${tested.map((value) => withUnit(value, unit)).join(', ')}.`)
   return `${label}. ${parts.join(' ')}`
 }
