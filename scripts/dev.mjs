@@ -3,7 +3,7 @@ import path from 'node:path'
 import { startServer } from './lib/children.mjs'
 import { readOptions } from './lib/options.mjs'
 import { root } from './lib/paths.mjs'
-import { addressOf, onStopSignal, prepareProduct, signInTable } from './lib/product.mjs'
+import { addressOf, onStopSignal, prepareProduct, readyText } from './lib/product.mjs'
 import { complain, createSteps } from './lib/steps.mjs'
 
 const help = `npm run dev
@@ -37,10 +37,13 @@ async function develop() {
   let current = Promise.resolve()
   const restart = () => {
     current = current.then(async () => {
-      await server?.stop()
+      const before = server
       server = undefined
+      await before?.stop()
       if (stopping) return
-      server = await step('Server', () => startServer(serverEnvironment, { log: 'server', onLine: (text) => process.stdout.write(text) }))
+      const next = await step('Server', () => startServer(serverEnvironment, { log: 'server', onLine: (text) => process.stdout.write(text) }))
+      server = next
+      void next.exited.then((code) => server === next && !stopping && console.error(`The server ended by itself (exit code ${code}). It starts again at the next change.`))
     }).catch(complain)
     return current
   }
@@ -54,7 +57,7 @@ async function develop() {
     clearTimeout(soon)
     soon = setTimeout(() => void restart(), 200)
   })
-  console.log(`\nReady: ${serverEnvironment.BASE_URL}\n\n  Demo sign-ins:\n${signInTable(signIns)}\n\nCtrl+C stops it.`)
+  console.log(`\nReady: ${readyText(serverEnvironment.BASE_URL, signIns)}`)
   await stopAsked
 }
 

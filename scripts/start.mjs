@@ -2,8 +2,8 @@
 import { ensureBuild } from './lib/build.mjs'
 import { logFile, startServer, tail } from './lib/children.mjs'
 import { readOptions } from './lib/options.mjs'
-import { addressOf, onStopSignal, prepareProduct, signInTable } from './lib/product.mjs'
-import { complain, createSteps, Refusal } from './lib/steps.mjs'
+import { addressOf, onStopSignal, prepareProduct, readyText } from './lib/product.mjs'
+import { complain, createSteps, duration, Refusal } from './lib/steps.mjs'
 
 const help = `npm start [-- options]
 
@@ -43,9 +43,7 @@ async function start() {
     return server
   })
   if (stopping) return
-  console.log(`\nReady after ${((performance.now() - begun) / 1000).toFixed(1)} s: ${address}\n`)
-  if (product.signIns.length > 0) console.log(`  Demo sign-ins:\n${signInTable(product.signIns)}\n`)
-  console.log('Ctrl+C stops it.')
+  console.log(`\nReady after ${duration(performance.now() - begun)}: ${readyText(address, product.signIns)}`)
   const code = await Promise.race([stopAsked, running.exited])
   if (!stopping) throw new Refusal(`The server ended by itself (exit code ${code}). The end of .data/logs/server.log:\n\n${tail(logFile('server'))}`)
 }

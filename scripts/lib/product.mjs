@@ -64,10 +64,13 @@ export function onStopSignal(stop) {
 }
 
 /**
- * @param {readonly import('./database.mjs').SignIn[]} signIns
- * @returns {string} one line a sign-in, in columns
+ * What stands on the terminal once all is up.
+ * @param {string} address
+ * @param {readonly import('./database.mjs').SignIn[]} signIns none without the demo firm
+ * @returns {string} the address, one line a sign-in in columns, and how to stop
  */
-export function signInTable(signIns) {
+export function readyText(address, signIns) {
   const width = (/** @type {'role' | 'email'} */ key) => Math.max(...signIns.map((row) => row[key].length))
-  return signIns.map((row) => `    ${row.role.padEnd(width('role'))}  ${row.email.padEnd(width('email'))}  ${row.password}`).join('\n')
+  const rows = signIns.map((row) => `    ${row.role.padEnd(width('role'))}  ${row.email.padEnd(width('email'))}  ${row.password}`)
+  return [address, '', ...(rows.length > 0 ? ['  Demo sign-ins:', ...rows, ''] : []), 'Ctrl+C stops it.'].join('\n')
 }

@@ -3,8 +3,7 @@ import { tmpdir } from 'node:os'
 import path from 'node:path'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { ensureSecrets, mergeEnv } from '../../../scripts/lib/environment.mjs'
-import { isAlive, processMark, withLock } from '../../../scripts/lib/lock.mjs'
-import { addressOf, signInTable } from '../../../scripts/lib/product.mjs'
+import { addressOf, readyText } from '../../../scripts/lib/product.mjs'
 import { duration } from '../../../scripts/lib/steps.mjs'
 import { parseDatabaseUrl } from '../../../scripts/postgres.ts'
 import { readEnv } from '../../../server/config/env.ts'
@@ -42,50 +41,6 @@ describe('ensureSecrets', () => {
   })
 })
 
-describe('withLock', () => {
-  const lock = () => path.join(folder, 'lock')
-
-  it('lets one at a time in', async () => {
-    let inside = 0
-    let most = 0
-    const work = async () => {
-      most = Math.max(most, ++inside)
-      await new Promise((resolve) => setTimeout(resolve, 20))
-      inside--
-    }
-    await Promise.all([1, 2, 3].map(() => withLock(lock(), work)))
-    expect(most).toBe(1)
-  })
-
-  it.each([
-    ['a process that is gone', '999999999 1'],
-    ['an earlier process with an id that is used again', `${process.pid} 1`],
-    ['a writer that was killed before it wrote', ''],
-  ])('takes over from %s', async (_what, text) => {
-    writeFileSync(lock(), text)
-    expect(await withLock(lock(), () => 'in', { seconds: 10 })).toBe('in')
-  })
-
-  it('names the process that holds it when the wait is over', async () => {
-    writeFileSync(lock(), `${process.pid} ${processMark(process.pid) ?? ''}`)
-    await expect(withLock(lock(), () => 'in', { seconds: 0 })).rejects.toThrow(`process ${process.pid}`)
-  })
-
-  it('is let go when the work fails', async () => {
-    await expect(withLock(lock(), () => { throw new Error('broke') })).rejects.toThrow('broke')
-    expect(await withLock(lock(), () => 'in', { seconds: 0 })).toBe('in')
-  })
-})
-
-describe('isAlive', () => {
-  it('tells this process from one that had its id before', () => {
-    expect(isAlive(process.pid)).toBe(true)
-    expect(isAlive(process.pid, processMark(process.pid))).toBe(true)
-    expect(isAlive(process.pid, '1')).toBe(false)
-    expect(isAlive(999_999_999)).toBe(false)
-  })
-})
-
 describe('parseDatabaseUrl', () => {
   it('reads both spellings', () => {
     expect(parseDatabaseUrl('postgres://a:b@db:5433/welding').port).toBe('5433')
@@ -103,9 +58,11 @@ describe('what is printed', () => {
   it('gives an address that a browser on this machine can open', () => {
     expect([addressOf('0.0.0.0', 4400), addressOf('127.0.0.1', 4401), addressOf('shop.example', 80)]).toEqual(['http://localhost:4400', 'http://localhost:4401', 'http://shop.example:80'])
   })
-  it('lines the sign-ins up', () => {
-    expect(signInTable([{ role: 'welder', email: 'a@larkfield.example', password: 'p1' }, { role: 'supervisor', email: 'longer@larkfield.example', password: 'p2' }])).toBe(
-      '    welder      a@larkfield.example       p1\n    supervisor  longer@larkfield.example  p2',
+  it('lines the sign-ins up below the address', () => {
+    const people = [{ role: 'welder', email: 'a@larkfield.example', password: 'p1' }, { role: 'supervisor', email: 'longer@larkfield.example', password: 'p2' }]
+    expect(readyText('http://localhost:4400', people)).toBe(
+      'http://localhost:4400\n\n  Demo sign-ins:\n    welder      a@larkfield.example       p1\n    supervisor  longer@larkfield.example  p2\n\nCtrl+C stops it.',
     )
+    expect(readyText('http://localhost:4400', [])).toBe('http://localhost:4400\n\nCtrl+C stops it.')
   })
 })
