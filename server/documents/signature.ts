@@ -10,7 +10,6 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import type { Writable } from 'node:stream'
 import { plainAddPlaceholder } from '@signpdf/placeholder-plain'
-import { P12Signer } from '@signpdf/signer-p12'
 import { SignPdf } from '@signpdf/signpdf'
 import { Signer, SUBFILTER_ADOBE_PKCS7_DETACHED, SUBFILTER_ETSI_CADES_DETACHED } from '@signpdf/utils'
 import forge from 'node-forge'
@@ -19,7 +18,7 @@ const YEARS_VALID = 10
 const SIGNATURE_BYTES = 16_384
 
 /** A new 2048-bit key with a certificate of its own for the organization, as an AES-256 encrypted PKCS #12 file. */
-export function createSelfSignedP12({ organization, now = new Date() }: { organization: string; now?: Date }): { p12: Buffer; passphrase: string } {
+export function createSelfSignedP12({ organization, now = new Date(), passphrase = randomBytes(24).toString('base64url') }: { organization: string; now?: Date; passphrase?: string }): { p12: Buffer; passphrase: string } {
   const keys = forge.pki.rsa.generateKeyPair({ bits: 2048 })
   const certificate = forge.pki.createCertificate()
   certificate.publicKey = keys.publicKey
@@ -39,12 +38,11 @@ export function createSelfSignedP12({ organization, now = new Date() }: { organi
     { name: 'subjectKeyIdentifier' },
   ])
   certificate.sign(keys.privateKey, forge.md.sha256.create())
-  const passphrase = randomBytes(24).toString('base64url')
   const store = forge.pkcs12.toPkcs12Asn1(keys.privateKey, [certificate], passphrase, { algorithm: 'aes256', friendlyName: 'document seal' })
   return { p12: Buffer.from(forge.asn1.toDer(store).getBytes(), 'binary'), passphrase }
 }
 
-interface KeyAndCertificate { key: forge.pki.rsa.PrivateKey; certificate: string; chain: string }
+interface KeyAndCertificate { key: forge.pki.rsa.PrivateKey; own: forge.pki.Certificate; others: readonly forge.pki.Certificate[] }
 
 /** @throws Error when the passphrase is wrong or the store lacks a key with its certificate */
 function open(p12: Buffer, passphrase: string): KeyAndCertificate {
@@ -54,7 +52,7 @@ function open(p12: Buffer, passphrase: string): KeyAndCertificate {
   const certificates = bags(forge.pki.oids.certBag ?? '').flatMap((bag) => (bag.cert ? [bag.cert] : []))
   const own = certificates.find((certificate) => key && (certificate.publicKey as forge.pki.rsa.PublicKey).n.equals(key.n))
   if (!key || !own) throw new Error('The signing store holds no private key with a certificate that belongs to it.')
-  return { key, certificate: forge.pki.certificateToPem(own), chain: certificates.filter((certificate) => certificate !== own).map((certificate) => forge.pki.certificateToPem(certificate)).join('') }
+  return { key, own, others: certificates.filter((certificate) => certificate !== own) }
 }
 
 let openssl: boolean | undefined
@@ -84,12 +82,33 @@ class CadesSigner extends Signer {
         return file
       }
       const key = await put('key.pem', forge.pki.encryptRsaPrivateKey(this.store.key, passphrase, { algorithm: 'aes256' }))
-      const certificate = await put('certificate.pem', this.store.certificate)
-      const more = this.store.chain ? ['-certfile', await put('chain.pem', this.store.chain)] : []
+      const certificate = await put('certificate.pem', forge.pki.certificateToPem(this.store.own))
+      const chain = this.store.others.map((other) => forge.pki.certificateToPem(other)).join('')
+      const more = chain ? ['-certfile', await put('chain.pem', chain)] : []
       return await run(['cms', '-sign', '-binary', '-cades', '-nosmimecap', '-md', 'sha256', '-signer', certificate, '-inkey', key, '-passin', 'fd:3', ...more, '-outform', 'DER'], pdf, passphrase)
     } finally {
       await rm(folder, { recursive: true, force: true })
     }
+  }
+}
+
+/** Plain detached PKCS #7, in this process alone. */
+class Pkcs7Signer extends Signer {
+  constructor(private readonly store: KeyAndCertificate) {
+    super()
+  }
+
+  override sign(pdf: Buffer, signingTime: Date = new Date()): Promise<Buffer> {
+    const { key, own, others } = this.store
+    // forge reads UTF-8 names as bytes and would encode them a second time when it names the issuer.
+    for (const attribute of own.issuer.attributes) if ((attribute.valueTagClass as unknown) === forge.asn1.Type.UTF8 && typeof attribute.value === 'string') attribute.value = forge.util.decodeUtf8(attribute.value)
+    const message = forge.pkcs7.createSignedData()
+    message.content = forge.util.createBuffer(pdf.toString('binary'))
+    for (const certificate of [own, ...others]) message.addCertificate(certificate)
+    const { contentType, data, signingTime: time, messageDigest, sha256 } = forge.pki.oids as Record<'contentType' | 'data' | 'signingTime' | 'messageDigest' | 'sha256', string>
+    message.addSigner({ key, certificate: own, digestAlgorithm: sha256, authenticatedAttributes: [{ type: contentType, value: data }, { type: time, value: signingTime as unknown as string }, { type: messageDigest }] })
+    message.sign({ detached: true })
+    return Promise.resolve(Buffer.from(forge.asn1.toDer(message.toAsn1()).getBytes(), 'binary'))
   }
 }
 
@@ -130,5 +149,5 @@ export async function signPdf(buffer: Buffer, { p12, passphrase, reason, name, l
   const store = open(p12, passphrase)
   const pades = (format ?? (opensslSigns() ? 'pades' : 'pkcs7')) === 'pades'
   const prepared = plainAddPlaceholder({ pdfBuffer: buffer, reason, name, location, contactInfo: '', signatureLength: SIGNATURE_BYTES, subFilter: pades ? SUBFILTER_ETSI_CADES_DETACHED : SUBFILTER_ADOBE_PKCS7_DETACHED })
-  return new SignPdf().sign(prepared, pades ? new CadesSigner(store) : new P12Signer(p12, { passphrase }))
+  return new SignPdf().sign(prepared, pades ? new CadesSigner(store) : new Pkcs7Signer(store))
 }
