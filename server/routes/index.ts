@@ -1,12 +1,18 @@
 import type { Router } from 'express'
 import type { Authenticate } from '../middleware/session.ts'
 import type { Services } from './mount.ts'
+import { assessmentRoutes } from './assessments.ts'
+import { couponRoutes } from './coupons.ts'
+import { jobRoutes } from './jobs.ts'
+import { libraryRoutes } from './library.ts'
 import { outboxRoutes } from './outbox.ts'
 import { peopleRoutes } from './people.ts'
+import { photoRoutes } from './photos.ts'
 import { sessionRoutes } from './session.ts'
+import { todayRoutes } from './today.ts'
 
 /** Every resource of the API. A new one is a file beside this one and a line here. */
-const resources: readonly ((router: Router, services: Services) => void)[] = [peopleRoutes, outboxRoutes]
+const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, couponRoutes, photoRoutes, jobRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
 
 export function resourceRoutes(router: Router, services: Services, authenticate: Authenticate): void {
   sessionRoutes(router, services, authenticate)
