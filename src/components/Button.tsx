@@ -4,12 +4,12 @@ import { Link, type LinkProps } from 'react-router-dom'
 export type ButtonKind = 'primary' | 'secondary' | 'quiet' | 'danger'
 
 const KINDS: Record<ButtonKind, string> = {
-  primary: 'bg-ink text-paper border-ink hover:bg-steel hover:border-steel',
-  secondary: 'bg-sheet text-ink border-ink hover:bg-paper',
-  quiet: 'bg-transparent text-ink border-transparent underline underline-offset-[3px] decoration-1 hover:decoration-2 px-1.5',
-  danger: 'bg-oxide text-stamped border-oxide hover:brightness-90',
+  primary: 'px-3.5 bg-ink text-paper border-ink hover:bg-steel hover:border-steel',
+  secondary: 'px-3.5 bg-sheet text-ink border-ink hover:bg-paper',
+  quiet: 'px-0.5 bg-transparent text-ink border-transparent underline underline-offset-[3px] decoration-1 hover:decoration-2',
+  danger: 'px-3.5 bg-oxide text-stamped border-oxide hover:brightness-90',
 }
-const SHAPE = 'inline-flex min-h-9 items-center justify-center gap-2 rounded border px-3.5 py-1.5 text-base font-semibold whitespace-nowrap'
+const SHAPE = 'inline-flex min-h-9 items-center justify-center gap-2 rounded border py-1.5 text-base font-semibold whitespace-nowrap'
 
 /** Classes of a button, for the rare thing that must look like one and be something else (a download link). */
 export const buttonClass = (kind: ButtonKind = 'secondary', className = '') => `${SHAPE} ${KINDS[kind]} ${className}`

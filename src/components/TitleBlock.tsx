@@ -3,6 +3,8 @@ import type { ReactNode } from 'react'
 export interface TitleCell {
   label: string
   children: ReactNode
+  /** Takes more room, e.g. an e-mail address. */
+  wide?: boolean
 }
 
 export interface TitleBlockProps {
@@ -32,8 +34,8 @@ export function TitleBlock({ kind, number, revision, title, cells, stamp, stampN
           </h1>
           {title && <p className="mt-0.5 font-medium">{title}</p>}
         </div>
-        {cells.map(({ label, children }) => (
-          <div key={label} className={`${cell} grow basis-36`}>
+        {cells.map(({ label, children, wide }) => (
+          <div key={label} className={`${cell} ${wide ? 'grow-[1.5] basis-56' : 'grow basis-36'}`}>
             <p className="cell-label">{label}</p>
             <div className="mt-1 text-[0.9375rem] break-words">{children}</div>
           </div>

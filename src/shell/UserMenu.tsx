@@ -30,7 +30,7 @@ export function UserMenu() {
   const failed = { onError: sayProblem }
   return (
     <MenuTrigger>
-      <AriaButton aria-label={`${person.name}: account, units, theme, sign out`} className="flex size-8 shrink-0 items-center justify-center rounded-full bg-heat-4 text-sm font-bold text-[#1b2226]">
+      <AriaButton aria-label={`${initials(person.name)}: ${person.name}, account, units, theme, sign out`} className="flex size-8 shrink-0 items-center justify-center rounded-full bg-heat-4 text-sm font-bold text-[#1b2226]">
         {initials(person.name)}
       </AriaButton>
       <Popover placement="bottom end" offset={6} className="min-w-60 border border-ink bg-sheet text-ink">

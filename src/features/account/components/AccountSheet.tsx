@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
 import { Responsibility } from '@/components/Caution.tsx'
 import { Wordmark } from '@/components/Mark.tsx'
-import { BendDrawing } from './BendDrawing.tsx'
+import { BendDrawing, FlatDrawing } from './BendDrawing.tsx'
 
 const ZONES = ['1', '2', '3', '4', '5', '6']
 const LETTERS = ['A', 'B', 'C', 'D']
@@ -26,8 +26,9 @@ export function AccountSheet({ title, about, children }: { title: string; about:
           ))}
         </div>
         <div className="flex grow flex-col justify-between border-ink sm:border">
-          <div className="hidden min-h-56 grow basis-56 items-center justify-center px-8 py-6 sm:flex lg:justify-start lg:pl-[9%]">
+          <div className="hidden min-h-56 grow basis-56 items-center justify-center px-8 py-6 sm:flex lg:justify-between lg:px-[8%]">
             <BendDrawing className="max-h-[26rem] w-full max-w-md" />
+            <FlatDrawing className="hidden w-[36%] max-w-lg lg:block" />
           </div>
           <div className="grow border-ink sm:ml-auto sm:w-full sm:max-w-2xl sm:grow-0 sm:border-t sm:border-l lg:max-w-3xl">
             <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2 border-b border-ink px-5 py-4">

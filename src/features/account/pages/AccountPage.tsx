@@ -23,7 +23,7 @@ export function AccountPage() {
         kind="Account"
         number={person.name}
         cells={[
-          { label: 'E-mail', children: person.email },
+          { label: 'E-mail', children: person.email, wide: true },
           { label: 'Roles', children: person.roles.join(', ') },
           { label: 'Organization', children: organization?.name ?? '' },
         ]}

@@ -23,7 +23,7 @@ export function MailPage() {
         kind="Mail"
         number={mail.subject}
         cells={[
-          { label: 'To', children: mail.to.join(', ') },
+          { label: 'To', children: mail.to.join(', '), wide: true },
           { label: 'Written', children: moment(mail.createdAt) },
           { label: 'Sent', children: mail.sentAt ? moment(mail.sentAt) : mail.state === 'caught' ? 'caught, not sent' : 'not yet' },
         ]}

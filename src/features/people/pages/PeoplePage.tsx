@@ -37,7 +37,7 @@ export function PeoplePage() {
           </span>
         ),
       },
-      { id: 'email', header: 'E-mail', cell: (person) => <span className="break-all">{person.email}</span> },
+      { id: 'email', header: 'E-mail', cell: (person) => <Address email={person.email} /> },
       { id: 'roles', header: 'Roles', cell: (person) => person.roles.join(', ') },
       { id: 'state', header: 'Access', cell: (person) => <Stamp state={person.state} small /> },
       { id: 'lastSignInAt', header: 'Last here', cell: (person) => (person.lastSignInAt ? moment(person.lastSignInAt) : 'never') },
@@ -75,6 +75,17 @@ export function PeoplePage() {
         ))}
       {inviting && <InviteDialog onClose={() => setInviting(false)} />}
       {changing && <PersonDialog person={changing} self={changing.id === me} onClose={() => setChanging(null)} />}
+    </>
+  )
+}
+
+/** An address that breaks at its @ where the column is narrow. */
+function Address({ email }: { email: string }) {
+  const [name, host] = email.split('@')
+  return (
+    <>
+      {name}@<wbr />
+      {host}
     </>
   )
 }

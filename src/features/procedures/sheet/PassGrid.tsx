@@ -1,0 +1,153 @@
+import { Plus, X } from 'lucide-react'
+import { useRef, useState, type ClipboardEvent, type KeyboardEvent } from 'react'
+import type { Pass } from '@shared/schemas/welding.ts'
+import { SHOWN_UNIT } from '@shared/units/convert.ts'
+import { Button } from '@/components/Button.tsx'
+import { inputId, useSheet, useSheetField } from './context.ts'
+import { LAYERS } from './options.ts'
+import { addPass, cellText, MAX_PASSES, moveFrom, PASS_COLUMNS, pasteCells, writeCell, type GridColumn } from './pass-grid.ts'
+
+/** The build-up, a row a pass: arrows move, Enter goes down and adds a pass at the end, cells paste from a spreadsheet. */
+export function PassGrid({ path, label }: { path: string; label: string }) {
+  const { system } = useSheet()
+  const { value: passes, set, error } = useSheetField<Pass[]>(`variables.${path}`)
+  const [problems, setProblems] = useState<string[]>([])
+  const grid = useRef<HTMLTableSectionElement>(null)
+  const focus = (row: number, column: number) => requestAnimationFrame(() => grid.current?.querySelector<HTMLElement>(`[data-cell="${row}.${column}"]`)?.focus())
+
+  const write = (row: number, column: GridColumn, text: string): string | null => {
+    const pass = passes[row]
+    if (!pass) return null
+    const reading = writeCell(pass, column, text, system)
+    if (!reading.ok) return reading.message
+    set(passes.map((one, at) => (at === row ? reading.pass : one)))
+    return null
+  }
+  const onKey = (event: KeyboardEvent<HTMLElement>, row: number, column: number) => {
+    const box = event.target
+    const caret = box instanceof HTMLInputElement ? { atStart: box.selectionEnd === 0, atEnd: box.selectionStart === box.value.length } : { atStart: true, atEnd: true }
+    if (box instanceof HTMLSelectElement && event.key.startsWith('Arrow') && !event.altKey && (event.key === 'ArrowUp' || event.key === 'ArrowDown')) return
+    const target = moveFrom(event.key, row, column, passes.length, caret)
+    if (!target) return
+    event.preventDefault()
+    // Leaving the cell reads it first, so that a new pass takes over what was just typed.
+    if (box instanceof HTMLElement) box.blur()
+    if (target.add) requestAnimationFrame(() => grid.current?.dispatchEvent(new CustomEvent('add-pass')))
+    focus(target.row, target.column)
+  }
+  const onPaste = (event: ClipboardEvent, row: number, column: number) => {
+    const text = event.clipboardData.getData('text/plain')
+    if (!/[\t\n]/.test(text.replace(/\r?\n$/, ''))) return
+    event.preventDefault()
+    const pasted = pasteCells(passes, row, column, text, system)
+    set(pasted.passes)
+    setProblems(pasted.problems)
+  }
+  const add = () => {
+    set(addPass(passes))
+    focus(passes.length, 0)
+  }
+
+  return (
+    <div id={inputId(path)} tabIndex={-1} className="space-y-2">
+      {passes.length > 0 && (
+        <div className="-mx-1 overflow-x-auto px-1 pb-1">
+          <table aria-label={label} className="w-full min-w-[40rem] border-collapse text-left">
+            <thead>
+              <tr className="text-soft">
+                {PASS_COLUMNS.map(({ id, label: head, dimension }) => (
+                  <th key={id} scope="col" className="pr-2 pb-1 text-sm font-medium whitespace-nowrap">
+                    {head} {dimension && <span className="font-normal">{SHOWN_UNIT[system][dimension]}</span>}
+                  </th>
+                ))}
+                <td />
+              </tr>
+            </thead>
+            <tbody ref={grid}>
+              {passes.map((pass, row) => (
+                <tr key={row}>
+                  {PASS_COLUMNS.map((column, at) => (
+                    <td key={column.id} className={`pr-1.5 pb-1.5 align-top ${column.id === 'number' ? 'w-20' : ''}`}>
+                      {column.id === 'layer' ? (
+                        <select data-cell={`${row}.${at}`} aria-label={`Pass ${pass.number}, layer`} className="box min-w-24" value={pass.layer ?? ''} onChange={(event) => write(row, column, event.target.value)} onKeyDown={(event) => onKey(event, row, at)}>
+                          <option value="">Not stated</option>
+                          {LAYERS.map((option) => (
+                            <option key={option.value} value={option.value}>
+                              {option.label}
+                            </option>
+                          ))}
+                        </select>
+                      ) : (
+                        <Cell at={`${row}.${at}`} label={`Pass ${pass.number}, ${column.label.toLowerCase()}`} text={cellText(pass, column, system)} write={(text) => write(row, column, text)} onKey={(event) => onKey(event, row, at)} onPaste={(event) => onPaste(event, row, at)} />
+                      )}
+                    </td>
+                  ))}
+                  <td className="w-8 pb-1.5 align-top">
+                    <button type="button" aria-label={`Remove pass ${pass.number}`} className="flex size-9 items-center justify-center rounded text-soft hover:text-ink" onClick={() => set(passes.filter((_, index) => index !== row))}>
+                      <X size={15} aria-hidden="true" />
+                    </button>
+                  </td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
+      )}
+      {[...problems, ...(error ? [error] : [])].map((problem) => (
+        <p key={problem} role="alert" className="text-sm font-medium text-oxide">
+          {problem}
+        </p>
+      ))}
+      <div className="flex flex-wrap items-center gap-3">
+        {passes.length < MAX_PASSES && (
+          <Button icon={<Plus size={14} aria-hidden="true" />} onClick={add}>
+            {passes.length === 0 ? 'First pass' : 'Pass'}
+          </Button>
+        )}
+        <p className="text-sm text-soft">Enter goes to the next pass and adds one at the end. Cells paste from a spreadsheet.</p>
+      </div>
+    </div>
+  )
+}
+
+interface CellProps {
+  at: string
+  label: string
+  text: string
+  write: (text: string) => string | null
+  onKey: (event: KeyboardEvent<HTMLElement>) => void
+  onPaste: (event: ClipboardEvent) => void
+}
+
+function Cell({ at, label, text, write, onKey, onPaste }: CellProps) {
+  const [typed, setTyped] = useState(text)
+  const [seen, setSeen] = useState(text)
+  const [wrong, setWrong] = useState<string | null>(null)
+  if (seen !== text) {
+    setSeen(text)
+    setTyped(text)
+    setWrong(null)
+  }
+  return (
+    <>
+      <input
+        data-cell={at}
+        aria-label={label}
+        aria-invalid={wrong ? true : undefined}
+        aria-describedby={wrong ? `cell-${at}` : undefined}
+        autoComplete="off"
+        className="box"
+        value={typed}
+        onChange={(event) => setTyped(event.target.value)}
+        onBlur={() => setWrong(typed === text ? null : write(typed))}
+        onKeyDown={onKey}
+        onPaste={onPaste}
+      />
+      {wrong && (
+        <p id={`cell-${at}`} className="mt-1 text-sm font-medium text-oxide">
+          {wrong}
+        </p>
+      )}
+    </>
+  )
+}

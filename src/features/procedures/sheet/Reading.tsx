@@ -1,0 +1,17 @@
+import type { Pass } from '@shared/schemas/welding.ts'
+import { readPath } from '../draft/paths.ts'
+import type { RowSpec } from './catalogue.ts'
+import { useSheet } from './context.ts'
+import { valueInWords } from './labels.ts'
+import { PanelReading } from './PanelEditor.tsx'
+import { PassTable } from './PassTable.tsx'
+
+/** A row's value as text, for whoever may only read. */
+export function Reading({ spec, path, prefix }: { spec: RowSpec; path: string; prefix: string }) {
+  const { content, system } = useSheet()
+  const words = (at: string) => valueInWords(at, readPath(content.variables, at), content, system)
+  if (spec.kind === 'passes') return <PassTable passes={readPath(content.variables, path) as Pass[]} />
+  if (spec.kind === 'panel') return <PanelReading path={path} />
+  if (spec.kind === 'pair') return <p className="font-medium">{spec.paths.map((one) => words(`${prefix}${one}`)).join(' to ')}</p>
+  return <p className={spec.kind === 'paragraph' ? 'max-w-prose whitespace-pre-line' : 'font-medium'}>{words(path)}</p>
+}

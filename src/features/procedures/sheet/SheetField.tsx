@@ -1,0 +1,68 @@
+import { memo } from 'react'
+import type { Finding } from '@shared/schemas/assessment.ts'
+import type { ProcessBlock } from '@shared/schemas/welding.ts'
+import { SHOWN_UNIT } from '@shared/units/convert.ts'
+import { Margin } from '@/components/margin/Margin.tsx'
+import { RangeGauge } from '@/components/range-gauge/RangeGauge.tsx'
+import { SheetRow } from '@/components/Sheet.tsx'
+import { worstVerdict } from '@/components/Verdict.tsx'
+import { readPath } from '../draft/paths.ts'
+import type { RowSpec } from './catalogue.ts'
+import { useSheet } from './context.ts'
+import { Editor } from './Editor.tsx'
+import { gaugeOf, testedInWords } from './findings.ts'
+import { Reading } from './Reading.tsx'
+
+const NONE: readonly Finding[] = []
+
+/** Whether anything is stated at a path. */
+export function isStated(value: unknown): boolean {
+  if (value === null || value === undefined || value === '') return false
+  if (Array.isArray(value)) return value.length > 0
+  if (typeof value === 'object' && 'all' in value) return Object.values(value).some((part) => part !== null && part !== false)
+  if (typeof value === 'object' && 'libraryId' in value) return Object.entries(value).some(([key, part]) => key !== 'added' && key !== 'libraryId' && isStated(part))
+  return true
+}
+
+/** A row of the sheet as the catalogue tells it: label, input or value, gauge, and its notes in the margin. */
+export const SheetField = memo(function SheetField({ spec, prefix = '', block = null }: { spec: RowSpec; prefix?: string; block?: ProcessBlock | null }) {
+  const sheet = useSheet()
+  const path = `${prefix}${spec.path}`
+  const { variables } = sheet.content
+  const findings = sheet.findings.get(path) ?? NONE
+  const value = readPath(variables, path)
+  const stated = spec.kind === 'pair' ? spec.paths.some((one) => isStated(readPath(variables, `${prefix}${one}`))) : isStated(value)
+  const notable = findings.some(({ verdict }) => verdict !== 'within')
+  const arises = !spec.when || spec.when(variables, block)
+  if (!stated && !notable && (!arises || !sheet.control)) return null
+  return (
+    <SheetRow label={spec.label} unit={unitOf(spec, sheet.system)} verdict={worstVerdict(findings.map(({ verdict }) => verdict))} gauge={gauge(spec, findings, sheet)} margin={<Notes findings={findings} />}>
+      {sheet.control ? <Editor spec={spec} path={path} prefix={prefix} block={block} /> : <Reading spec={spec} path={path} prefix={prefix} />}
+    </SheetRow>
+  )
+})
+
+/** A row's notes; without a place of its own it stands at the right of its nearest positioned ancestor. */
+export function Notes({ findings }: { findings: readonly Finding[] }) {
+  const { attention, onFix, couponNumber } = useSheet()
+  const shown = attention ? findings.filter(({ verdict }) => verdict !== 'within') : findings
+  return <Margin findings={shown} onFix={onFix} couponNumber={couponNumber} />
+}
+
+function unitOf(spec: RowSpec, system: 'SI' | 'US') {
+  if (spec.kind === 'interval' || spec.kind === 'quantity') return SHOWN_UNIT[system][spec.dimension]
+  if (spec.kind === 'sizes') return `${SHOWN_UNIT[system].length}, commas between`
+  return spec.hint
+}
+
+/** Kinds whose input uses the row's whole width. */
+const WIDE = ['text', 'paragraph', 'metal', 'filler', 'gas', 'panel', 'passes', 'positions']
+const isWide = (spec: RowSpec) => WIDE.includes(spec.kind) && !(spec.kind === 'text' && spec.max <= 20)
+
+function gauge(spec: RowSpec, findings: readonly Finding[], { system, couponNumber }: ReturnType<typeof useSheet>) {
+  const drawn = gaugeOf(findings)
+  if (drawn && (spec.kind === 'interval' || spec.kind === 'quantity')) return <RangeGauge label={spec.label} range={drawn.range} asked={drawn.asked} tested={drawn.tested} system={system} />
+  if (isWide(spec)) return undefined
+  const words = testedInWords(findings, couponNumber)
+  return words ? <p className="text-soft">{words}</p> : null
+}
