@@ -5,7 +5,7 @@
  * Grades and numbers are copied from the library when picked, so that a later correction never alters a signed record.
  */
 import { z } from 'zod'
-import { idSchema, intervalOrNull, intervalSchema, quantityOrNull, standardChoiceSchema, textOrNull, unitSystemSchema } from './common.ts'
+import { idSchema, intervalOrNull, intervalSchema, quantityOrNull, quantitySchema, standardChoiceSchema, textOrNull, unitSystemSchema } from './common.ts'
 
 export const PROCESSES = ['SMAW', 'SAW', 'GMAW', 'FCAW', 'GTAW', 'PAW', 'OTHER'] as const
 export const processSchema = z.enum(PROCESSES)
@@ -65,6 +65,10 @@ export const jointSchema = z
     retainers: bool,
     backGouging: oneOf(['none', 'grinding', 'arc-gouging', 'machining', 'chipping']),
     weldedFromBothSides: bool,
+    /** Where the weld mends or builds up rather than joins. */
+    work: z.enum(['repair', 'build-up']).optional(),
+    /** Whether the weld holds pressure; asked of fillets. */
+    pressureRetaining: z.boolean().nullable().optional(),
     notes: textOrNull(1000),
   })
   .meta({ id: 'Joint' })
@@ -99,6 +103,8 @@ export const fillerSchema = z
     diameters: z.array(z.object({ si: z.number().positive(), unit: z.string(), typed: z.string() })).max(8).default([]),
     supplemental: bool,
     supplementalAlloyElement: bool,
+    /** Supplemental filler as a share of the weld metal, per cent. */
+    supplementalVolume: quantitySchema.nullable().optional(),
     consumableInsert: bool,
     fluxClassification: textOrNull(80),
     fluxTradeName: textOrNull(80),

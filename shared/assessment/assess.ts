@@ -1,0 +1,129 @@
+/**
+ * Judges a procedure by the coupons that support it, under one standard and edition. It runs a standard's rules and combines
+ * coupons; it knows no clause.
+ */
+import type { Assessment, AssessedCoupon, CouponQualification, Finding, QualifiedRange, Verdict } from '../schemas/assessment.ts'
+import type { StandardId } from '../schemas/common.ts'
+import type { ProcedureContent } from '../schemas/welding.ts'
+import { getStandard } from '../standards/index.ts'
+import type { RuleContext, Standard } from '../standards/rule.ts'
+import { judgeBlock, type BlockJudgement } from './block.ts'
+import { contradictions } from './contradictions.ts'
+import { prepare } from './prepare.ts'
+
+export interface AssessInput {
+  procedure: ProcedureContent
+  coupons: readonly AssessedCoupon[]
+  standard: StandardId
+  edition: string
+  level?: '1' | '2' | null
+  /** Stored coupons that are not linked: offered as a cure where one would cover what is missing. */
+  otherCoupons?: readonly AssessedCoupon[]
+}
+
+/** A finding of the runner itself rather than of a rule. */
+type Plain = Pick<Finding, 'ruleId' | 'title' | 'field' | 'sentence' | 'missing'> & Partial<Finding>
+
+const plainFinding = (input: AssessInput, given: Plain): Finding => ({
+  standard: input.standard,
+  edition: input.edition,
+  clause: '',
+  verdict: 'cannot-tell',
+  class: 'essential',
+  processId: null,
+  asked: null,
+  range: null,
+  tested: [],
+  couponIds: [],
+  fixes: [],
+  basis: 'common-practice',
+  source: 'The record itself',
+  reasoning: [],
+  ...given,
+})
+
+/**
+ * Every finding and range for a procedure and its coupons.
+ * @param input the procedure, the linked coupons, and the standard and edition to judge by; nothing is changed
+ * @returns the assessment; an unknown standard, edition or process gives a named "cannot tell" finding, never an error
+ */
+export function assess(input: AssessInput): Assessment {
+  const { variables } = input.procedure
+  const findings: Finding[] = []
+  const ranges: QualifiedRange[] = []
+  const standard = getStandard(input.standard)
+  const prepared = standard && prepare(standard, input.edition)
+  if (!standard) findings.push(plainFinding(input, { ruleId: 'assessment/standard', title: 'Standard', field: 'standards', sentence: `The rules of ${input.standard} are not in the program yet, so the procedure can't be judged by it.`, missing: [`rules of ${input.standard}`] }))
+  else if (!prepared) findings.push(plainFinding(input, { ruleId: 'assessment/edition', title: 'Edition', field: 'standards', sentence: `Edition ${input.edition} of ${standard.shortName} is not known here; known are ${standard.editions.map(({ id }) => id).join(', ')}.`, missing: [`rules of the ${input.edition} edition`] }))
+  else {
+    recordFindings(input, standard, findings)
+    const shared = { edition: input.edition, level: input.level ?? null, system: variables.unitSystem, toughness: variables.toughnessRequired, procedure: variables, coupons: input.coupons }
+    const judge = (context: RuleContext): void => {
+      const judged: BlockJudgement = judgeBlock(standard, prepared, context, input.otherCoupons ?? [])
+      for (const finding of judged.findings) findings.push(finding)
+      for (const range of judged.ranges) ranges.push(range)
+    }
+    if (prepared.weld.length > 0) judge({ ...shared, path: '', block: null })
+    for (let i = 0; i < variables.processes.length; i += 1) {
+      const block = variables.processes[i] ?? null
+      if (block) judge({ ...shared, path: `processes.${i}`, block })
+    }
+  }
+  return { standard: input.standard, edition: input.edition, unitSystem: variables.unitSystem, verdict: overall(findings), counts: count(findings), findings, ranges }
+}
+
+/** Contradictions, coupons that are not certified, and what is out of scope: before any rule is asked. */
+function recordFindings(input: AssessInput, standard: Standard, findings: Finding[]): void {
+  const { variables } = input.procedure
+  for (const { field, sentence, processId } of contradictions(variables)) {
+    findings.push(plainFinding(input, { ruleId: 'assessment/contradiction', title: 'Contradiction in the procedure', field, processId, sentence, missing: [`procedure: ${field}`], fixes: [{ kind: 'state', label: 'Correct the procedure', field }] }))
+  }
+  for (const coupon of input.coupons) {
+    if (!coupon.certified) {
+      const { clause, basis, source } = standard.certification
+      findings.push(plainFinding(input, { ruleId: 'assessment/certification', title: 'Coupon certified', field: 'supportingCoupons', clause, basis, source, couponIds: [coupon.id], sentence: `${coupon.number} isn't certified yet, so it can't support a procedure until it is.`, missing: [`${coupon.number}: certification`] }))
+    }
+    for (const { field, sentence } of contradictions(coupon.content.variables)) {
+      findings.push(plainFinding(input, { ruleId: 'assessment/contradiction', title: 'Contradiction in a coupon', field: 'supportingCoupons', couponIds: [coupon.id], sentence: `${coupon.number}: ${sentence}`, missing: [`${coupon.number}: ${field}`] }))
+    }
+  }
+  variables.processes.forEach((block, i) => {
+    const field = `processes.${i}.process`
+    if (block.process === null) findings.push(plainFinding(input, { ruleId: 'assessment/process', title: 'Welding process', field, processId: block.id, sentence: 'The welding process isn\'t stated, so nothing of it can be judged.', missing: [`procedure: ${field}`], fixes: [{ kind: 'state', label: 'State the welding process', field }] }))
+    else if (!standard.processes.includes(block.process)) findings.push(plainFinding(input, { ruleId: 'assessment/process', title: 'Welding process', field, processId: block.id, sentence: `${block.process === 'OTHER' ? 'This process' : block.process} is outside the rules of ${standard.shortName} kept here.`, missing: [`rules of ${standard.shortName} for the process`] }))
+  })
+}
+
+const RANK: Record<Verdict, number> = { within: 0, 'cannot-tell': 1, outside: 2 }
+
+/** The worst verdict of those findings that count: essential, and supplementary while toughness is not ruled out. */
+export function overall(findings: readonly Pick<Finding, 'class' | 'verdict'>[]): Verdict {
+  let worst: Verdict = 'within'
+  for (const finding of findings) {
+    if ((finding.class === 'essential' || finding.class === 'supplementary') && RANK[finding.verdict] > RANK[worst]) worst = finding.verdict
+  }
+  return worst
+}
+
+/** How many findings of each verdict, leaving out what is no variable here. */
+function count(findings: readonly Finding[]): Assessment['counts'] {
+  const counts = { within: 0, outside: 0, cannotTell: 0 }
+  for (const finding of findings) {
+    if (finding.class === 'not-a-variable') continue
+    if (finding.verdict === 'within') counts.within += 1
+    else if (finding.verdict === 'outside') counts.outside += 1
+    else counts.cannotTell += 1
+  }
+  return counts
+}
+
+/**
+ * What a coupon still needs, how its results are judged and what it qualifies.
+ * @returns for an unknown standard or edition: nothing required, not ready, with the reason under `missing`
+ */
+export function qualifyCoupon(coupon: AssessedCoupon, standard: StandardId, edition: string, level: '1' | '2' | null = null): CouponQualification {
+  const known = getStandard(standard)
+  if (known?.editions.some(({ id }) => id === edition)) return known.qualify(coupon, edition, level)
+  const message = known ? `Edition ${edition} of ${known.shortName} is not known here.` : `The rules of ${standard} are not in the program yet.`
+  return { standard, edition, specimens: [], results: [], missing: [{ field: 'variables.standards', message, clause: '' }], readyToCertify: false, ranges: [] }
+}

@@ -1,0 +1,60 @@
+/** Rule lists prepared once for each standard, edition and process, so that a run does not search. */
+import type { Basis, VariableClass } from '../schemas/assessment.ts'
+import type { Process } from '../schemas/welding.ts'
+import { weakest } from '../standards/common/rule-kinds.ts'
+import type { Rule, RuleClass, Standard } from '../standards/rule.ts'
+
+export interface PreparedRule {
+  rule: Rule
+  class: RuleClass
+  /** Weaker of the bases of figure and class letter for this process. */
+  classBasis: Basis
+}
+
+export interface PreparedEdition {
+  weld: readonly Rule[]
+  byProcess: ReadonlyMap<Process, readonly PreparedRule[]>
+}
+
+const cache = new WeakMap<Standard, Map<string, PreparedEdition | null>>()
+
+/** The rules of one edition by process; null when the standard does not know the edition. */
+export function prepare(standard: Standard, edition: string): PreparedEdition | null {
+  let editions = cache.get(standard)
+  if (!editions) cache.set(standard, (editions = new Map()))
+  let prepared = editions.get(edition)
+  if (prepared === undefined) {
+    prepared = standard.editions.some(({ id }) => id === edition) ? build(standard, edition) : null
+    // A request may name any text as its edition: only what the standard lists is kept.
+    if (prepared) editions.set(edition, prepared)
+  }
+  return prepared
+}
+
+function build(standard: Standard, edition: string): PreparedEdition {
+  const rules = standard.rules.filter((rule) => rule.meta.editions.includes(edition))
+  const byProcess = new Map<Process, PreparedRule[]>()
+  for (const process of standard.processes) {
+    const own: PreparedRule[] = []
+    for (const rule of rules) {
+      const ruleClass = rule.meta.classes[process]
+      if (rule.meta.scope === 'process' && ruleClass) own.push({ rule, class: ruleClass, classBasis: classBasis(rule, process) })
+    }
+    byProcess.set(process, own)
+  }
+  return { weld: rules.filter((rule) => rule.meta.scope === 'weld'), byProcess }
+}
+
+/** Basis of the class letter of a rule for a process. */
+export function classBasis(rule: Rule, process: Process | null): Basis {
+  const given = rule.meta.classBasis
+  const own = typeof given === 'string' ? given : (process && given?.[process]) || rule.meta.basis
+  return weakest(own, rule.meta.basis)
+}
+
+/** How a class acts: which class is shown, and whether the verdict counts. `toughness` null = not said whether it is required. */
+export function effectiveClass(ruleClass: RuleClass, toughness: boolean | null): VariableClass {
+  if (ruleClass === 'dual') return toughness === false ? 'nonessential' : 'supplementary'
+  if (ruleClass === 'supplementary') return toughness === false ? 'not-a-variable' : 'supplementary'
+  return ruleClass
+}

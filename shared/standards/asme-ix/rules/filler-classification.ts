@@ -1,0 +1,65 @@
+/** QW-404.12 and QW-404.35: with toughness, the classification stays, save for designators that do not touch toughness. */
+import type { Filler } from '../../../schemas/welding.ts'
+import { sameText } from '../../common/reading.ts'
+import { namedRule } from '../../common/rule-kinds.ts'
+import { meta } from '../meta.ts'
+
+/** Diffusible hydrogen (H4, H8R …) and moisture resistance (R) designators at the end. */
+const HYDROGEN = /(?:H(?:2|4|5|8|10|15|16)R?|(?<=\d)R)$/
+
+/**
+ * A classification with what QW-404.12 leaves free taken out: hydrogen and moisture designators, one low-hydrogen covering for
+ * another (15, 16, 18) and the usability position digit of flux-cored wire. `impact` tells whether it carries the -1 suffix.
+ */
+export function classificationKey(classification: string): { key: string; impact: boolean } {
+  const raw = classification.trim().toUpperCase().replace(/\s+/g, '')
+  const impact = /^E\d{2,3}(15|16|18)-1(?!\d)/.test(raw)
+  let text = sameText(impact ? raw.replace(/-1(?!\d)/, '') : raw).replace(HYDROGEN, '')
+  text = text.replace(/^(E\d{2})(15|16|18)(?=$|[A-Z])/, '$1LH').replace(/^(E1\d{2})(15|16|18)(?=$|[A-Z])/, '$1LH')
+  text = text.replace(/^(E\d{3}[LH]?)(15|16|17)$/, '$1LH')
+  text = text.replace(/^(E\d+)[01](T\d+)/, '$1*$2')
+  return { key: text, impact }
+}
+
+/** Unclassified and G-suffix fillers are known by trade name. */
+function name(filler: Filler): string | null {
+  const classification = filler.classification?.trim()
+  if (!classification || /-?G(?:$|[^A-Z0-9])/i.test(classification)) return filler.tradeName ? `trade name ${sameText(filler.tradeName)}` : null
+  const { key, impact } = classificationKey(classification)
+  return impact ? `${key} with -1` : key
+}
+
+export const fillerClassification = namedRule({
+  meta: meta('QW-404.12', 'filler-classification'),
+  field: 'filler.classification',
+  at: 'block',
+  label: 'filler classification',
+  applies: (context) => context.block?.filler.added !== false,
+  asked(context) {
+    const value = context.block && name(context.block.filler)
+    return value ? [value] : null
+  },
+  tested: (_context, side) => (side.block?.filler.added === false ? 'no filler' : side.block ? name(side.block.filler) : null),
+  // A suffix for better impact performance is covered by the plain class; the reverse is not.
+  covers: (value) => (value.endsWith(' with -1') ? [value] : [value, `${value} with -1`]),
+  because: 'Hydrogen level, moisture resistance, another low-hydrogen covering of equal strength and the position digit of flux-cored wire do not count; a better impact suffix is covered.',
+})
+
+/** Flux-wire class without its hydrogen designator, or the trade names where it is not classified. */
+function fluxWire(filler: Filler): string | null {
+  if (filler.fluxClassification) return sameText(filler.fluxClassification).replace(HYDROGEN, '')
+  return filler.fluxTradeName ? `flux ${sameText(filler.fluxTradeName)}, wire ${sameText(filler.classification ?? filler.tradeName ?? 'not named')}` : null
+}
+
+export const fluxWireClassification = namedRule({
+  meta: meta('QW-404.35', 'flux-wire-classification'),
+  field: 'filler.fluxClassification',
+  at: 'block',
+  label: 'flux-wire classification',
+  asked(context) {
+    const value = context.block && fluxWire(context.block.filler)
+    return value ? [value] : null
+  },
+  tested: (_context, side) => (side.block ? fluxWire(side.block.filler) : null),
+  because: 'The flux-wire class, or the trade name where it has none, stays; the hydrogen level alone does not count.',
+})

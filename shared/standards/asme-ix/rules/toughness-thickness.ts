@@ -1,0 +1,72 @@
+/** QW-403.6: with toughness the base metal may not be thinner than the floor that the toughness coupon's thickness gives. */
+import { intersectNumeric, numericRange, unionNumeric } from '../../../ranges/numeric.ts'
+import type { NumericRange } from '../../../schemas/assessment.ts'
+import { isStated } from '../../common/reading.ts'
+import { figureRule } from '../../common/rule-kinds.ts'
+import { show } from '../../common/wording.ts'
+import type { CouponSide, RangeContext, Rule, RuleRange } from '../../rule.ts'
+import { memberOf } from '../members.ts'
+import { meta } from '../meta.ts'
+import { baseMetalSpan, couponThickness, exemptByHeatTreatment, lengthRange, toughnessFloor, unknownLength, withFloor } from '../ranges.ts'
+import { askedThickness, memberP } from './base-metal-thickness.ts'
+
+const floorOf = (context: RangeContext, side: CouponSide, which: 'a' | 'b'): { floor: number | null; T: number | null } => {
+  const T = couponThickness(side, context.system, memberP(context, which))
+  if (T === null) return { floor: null, T }
+  return { floor: exemptByHeatTreatment(side.variables) === true ? 0 : toughnessFloor(T, context.system), T }
+}
+
+function rangeFor(context: RangeContext, side: CouponSide, which: 'a' | 'b'): RuleRange | null {
+  if ((context.procedure ?? side.variables).joint.weld === 'fillet' || side.variables.joint.weld === 'fillet') return null
+  if (which === 'b' && !isStated(context.procedure?.thicknessB)) return null
+  const { system } = context
+  const unit = system === 'SI' ? 'mm' : 'in'
+  const { floor, T } = floorOf(context, side, which)
+  if (floor === null || T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
+  const reason = floor === 0 ? 'The heat treatment after welding takes away the toughness floor.' : `With toughness a ${show(T, unit)} coupon covers no metal under ${show(floor, unit)}.`
+  if (side.role === 'toughness-only') return { range: lengthRange(system, floor, null), tested: T, reason }
+  const span = baseMetalSpan(context, side, memberOf(context, which), memberP(context, which))
+  if (side.role === 'mechanical' && context.toughness === true) return { range: span.range, tested: T, reason: `${side.coupon.number} carries no toughness tests; its range counts together with a toughness coupon's floor.` }
+  return { range: withFloor(system, span.range, floor === 0 ? null : floor), tested: T, reason }
+}
+
+/** Full records stand alone; a mechanical record and a toughness record pair up (QW-401.1): maximum of the one, greater minimum of both. */
+function join(context: RangeContext, sides: readonly CouponSide[], ranges: readonly (RuleRange | null)[]): NumericRange | null {
+  let joined: NumericRange | null = null
+  const add = (range: NumericRange): void => {
+    joined = joined === null ? range : unionNumeric(joined, range)
+  }
+  sides.forEach((side, i) => {
+    const own = ranges[i]?.range
+    if (own?.type !== 'numeric') return
+    if (side.role === 'full' || context.toughness !== true) add(own)
+    if (side.role !== 'mechanical' || context.toughness !== true) return
+    sides.forEach((tough) => {
+      if (tough.role === 'mechanical') return
+      const { floor } = floorOf(context, tough, 'a')
+      if (floor !== null) add(intersectNumeric(own, lengthRange(context.system, floor, null)))
+    })
+  })
+  const unit = context.system === 'SI' ? 'mm' : 'in'
+  return joined ?? (ranges.some((range) => range) ? numericRange('length', unit, []) : null)
+}
+
+const build = (which: 'a' | 'b', file: string): Rule =>
+  figureRule({
+    meta: meta('QW-403.6', file, { combine: 'union', ...(which === 'b' ? { title: 'Minimum T with toughness, second member' } : {}) }),
+    field: which === 'a' ? 'thickness' : 'thicknessB',
+    at: 'weld',
+    label: which === 'a' ? 'base metal thickness' : 'thickness of the second member',
+    dimension: 'length',
+    applies: (context) => context.procedure.joint.weld === 'groove' && (which === 'a' || isStated(context.procedure.thicknessB)),
+    asked: (context) => askedThickness(context, which),
+    range: (context, side) => rangeFor(context, side, which),
+    join,
+    how(context, side, end) {
+      const { T } = floorOf(context, side, which)
+      return { how: end === 'lower' ? 'with toughness' : null, coupon: T === null ? 'coupon' : `${show(T, context.system === 'SI' ? 'mm' : 'in')} coupon` }
+    },
+  })
+
+export const toughnessThickness = build('a', 'toughness-thickness')
+export const toughnessThicknessB = build('b', 'toughness-thickness-second')

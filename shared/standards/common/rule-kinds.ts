@@ -1,0 +1,180 @@
+/** The two shapes that most variables have: a name that must be covered, and a figure that must lie inside a range. */
+import { containsInterval, nearest } from '../../ranges/numeric.ts'
+import { containsNames, setRange, UNKNOWN_SET } from '../../ranges/set.ts'
+import type { Basis, Fix, NumericRange, QualifiedSpan } from '../../schemas/assessment.ts'
+import { quantity } from '../../units/convert.ts'
+import type { Dimension } from '../../units/types.ts'
+import type { CouponSide, RangeContext, Rule, RuleContext, RuleMeta, RuleRange, RuleVerdict } from '../rule.ts'
+import { capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan } from './wording.ts'
+
+/** Full dotted path of a rule's field. */
+export const pathOf = (context: RuleContext, rule: { at: 'weld' | 'block'; field: string }): string => (rule.at === 'block' && context.path ? `${context.path}.${rule.field}` : rule.field)
+
+export interface NamedSpec {
+  meta: RuleMeta
+  field: string
+  at: 'weld' | 'block'
+  /** Lower case, as in "State the …". */
+  label: string
+  applies?: (context: RuleContext) => boolean
+  /** Names that the procedure asks; null = not stated. */
+  asked: (context: RuleContext) => readonly string[] | null
+  /** What the coupon had; null = not recorded; undefined = the variable does not arise on this coupon. */
+  tested: (context: RangeContext, side: CouponSide) => string | null | undefined
+  /** Names that the coupon's value covers; the value itself where absent. */
+  covers?: (value: string, context: RangeContext, side: CouponSide) => readonly string[] | 'any'
+  /** Why, in words, for the opened reasoning. */
+  because: string
+  /** A name as a sentence shows it. */
+  display?: (name: string) => string
+  /** Value to set for a covered name; undefined where setting it is no cure. */
+  setValue?: (name: string) => unknown
+  /** What to weld so that the asked names would be covered. */
+  plan?: (asked: readonly string[], context: RuleContext) => string
+}
+
+/** A variable whose value is a name: covered or not by the names that the coupon covers. */
+export function namedRule(spec: NamedSpec): Rule {
+  const display = spec.display ?? ((name: string) => name)
+  const rule: Rule = {
+    meta: spec.meta,
+    field: spec.field,
+    at: spec.at,
+    label: capital(spec.label),
+    applies: spec.applies,
+    range(context, side) {
+      const value = spec.tested(context, side)
+      if (value === undefined) return null
+      if (value === null) return { range: UNKNOWN_SET, tested: null, reason: `${side.coupon.number} does not record the ${spec.label}.`, missing: [`${side.coupon.number}: ${spec.field}`] }
+      const covered = spec.covers ? spec.covers(value, context, side) : [value]
+      return { range: covered === 'any' ? setRange([], { any: true }) : setRange(covered), tested: value, reason: spec.because }
+    },
+    check(context, sides, joined) {
+      if (spec.applies && !spec.applies(context)) return null
+      const field = pathOf(context, spec)
+      const asked = spec.asked(context)
+      if (asked === null || asked.length === 0) return notStated(spec.label, field, { range: joined })
+      if (joined === null) return null
+      return judgeNames({ spec, display, field, context, sides, joined, asked })
+    },
+  }
+  return rule
+}
+
+interface NamesAsked { spec: NamedSpec; display: (name: string) => string; field: string; context: RuleContext; sides: readonly CouponSide[]; joined: QualifiedSpan; asked: readonly string[] }
+
+function judgeNames({ spec, display, field, context, sides, joined, asked }: NamesAsked): RuleVerdict {
+  if (joined.type !== 'set') throw new TypeError(`${spec.meta.id} compares names`)
+  const verdict = containsNames(joined, asked)
+  if (verdict === 'cannot-tell') return couponLacks(spec.label, spec.field, sides, [...asked], joined)
+  const askedText = list(asked.map(display))
+  if (verdict === 'within') return { verdict, sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, reasoning: [spec.because] }
+  const covered = joined.values.map(display)
+  const fixes: Fix[] = []
+  const first = joined.values[0]
+  if (spec.setValue && first !== undefined) {
+    const value = spec.setValue(first)
+    if (value !== undefined) fixes.push({ kind: 'set', label: `Set the ${spec.label} to ${display(first)}`, field, value })
+  }
+  fixes.push({ kind: 'plan-coupon', label: `Weld a coupon with ${askedText}`, requirement: spec.plan ? spec.plan(asked, context) : `A coupon whose ${spec.label} is ${askedText}.` })
+  const missed = asked.filter((name) => !joined.values.includes(name)).map(display)
+  return {
+    verdict,
+    sentence: `${capital(spec.label)} ${list(missed)} is not covered: ${names(sides)} qualifies ${covered.length === 0 ? 'none' : list(covered, 'or')} only.`,
+    asked: [...asked],
+    range: joined,
+    fixes,
+    reasoning: [spec.because, `Covered: ${showSpan(joined)}. Asked: ${askedText}.`],
+  }
+}
+
+export interface FigureSpec {
+  meta: RuleMeta
+  field: string
+  at: 'weld' | 'block'
+  label: string
+  dimension: Dimension
+  /** Path below `field` of each end; '' where the field itself is the quantity. */
+  ends?: { min: string; max: string }
+  applies?: (context: RuleContext) => boolean
+  /** null = not stated, `fault` = the record contradicts itself. */
+  asked: (context: RuleContext) => { min: number | null; max: number | null } | null | 'fault'
+  range: (context: RangeContext, side: CouponSide) => RuleRange | null
+  join?: Rule['join']
+  /** How an end comes about, e.g. `2T`, and the coupon in words, e.g. `10 mm coupon`. */
+  how?: (context: RuleContext, side: CouponSide, end: 'lower' | 'upper') => { how: string | null; coupon: string }
+  plan?: (asked: { min: number | null; max: number | null }, context: RuleContext) => string
+}
+
+/** A variable whose value is a figure or an interval: it must lie inside the range. */
+export function figureRule(spec: FigureSpec): Rule {
+  return {
+    meta: spec.meta,
+    field: spec.field,
+    at: spec.at,
+    label: capital(spec.label),
+    applies: spec.applies,
+    range: spec.range,
+    join: spec.join,
+    check(context, sides, joined) {
+      if (spec.applies && !spec.applies(context)) return null
+      const asked = spec.asked(context)
+      const field = pathOf(context, spec)
+      if (asked === null) return notStated(spec.label, field, { range: joined })
+      if (asked === 'fault') return notStated(spec.label, field, { sentence: `${capital(spec.label)} contradicts itself in the procedure, so it can't be judged.`, range: joined })
+      if (joined === null) return null
+      if (joined.type !== 'numeric') throw new TypeError(`${spec.meta.id} compares figures`)
+      return judgeFigures(spec, context, sides, joined, asked, field)
+    },
+  }
+}
+
+function judgeFigures(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }, field: string): RuleVerdict {
+  const verdict = containsInterval(joined, asked)
+  if (verdict === 'cannot-tell') return couponLacks(spec.label, spec.field, sides, asked, joined)
+  if (verdict === 'within') {
+    return { verdict, sentence: `${capital(showAsked(asked, joined.unit))} lies inside the ${showRange(joined)} that ${names(sides)} ${sides.length > 1 ? 'qualify' : 'qualifies'}.`, asked, range: joined }
+  }
+  const { sentence, wrong } = miss(spec, context, sides, joined, asked)
+  const fixes: Fix[] = []
+  const ends = spec.ends ?? { min: '.min', max: '.max' }
+  for (const end of wrong) {
+    const value = asked[end]
+    const better = nearest(joined, value ?? (end === 'max' ? Number.MAX_VALUE : -Number.MAX_VALUE))
+    if (better !== null) fixes.push({ kind: 'set', label: `Set ${spec.label}${asked.min === asked.max || !spec.ends ? '' : ` ${end === 'min' ? 'minimum' : 'maximum'}`} to ${show(better, joined.unit)}`, field: `${field}${ends[end]}`, value: quantity(better, spec.dimension, joined.unit) })
+  }
+  fixes.push({ kind: 'plan-coupon', label: 'Weld a coupon that covers it', requirement: spec.plan ? spec.plan(asked, context) : `A coupon that qualifies ${spec.label} ${showAsked(asked, joined.unit)}.` })
+  return { verdict, sentence, asked, range: joined, fixes, reasoning: [`Covered: ${showRange(joined)}. Asked: ${showAsked(asked, joined.unit)}.`] }
+}
+
+/** Which end is outside, and the sentence that says so with the figures. */
+function miss(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }): { sentence: string; wrong: ('min' | 'max')[] } {
+  const unit = joined.unit
+  const first = joined.segments[0]
+  const last = joined.segments.at(-1)
+  if (!first || !last) return { sentence: `${capital(showAsked(asked, unit))} is not covered: ${names(sides)} qualifies nothing here.`, wrong: [] }
+  const wrong: ('min' | 'max')[] = []
+  const parts: string[] = []
+  const low = 'value' in first.lower ? first.lower.value : null
+  const high = 'value' in last.upper ? last.upper.value : null
+  const by = (end: 'lower' | 'upper'): string => {
+    const side = sides[0]
+    const how = sides.length === 1 && side ? spec.how?.(context, side, end) : undefined
+    const tag = how?.how ? ` (${how.how})` : ''
+    return how && side ? `${tag} that the ${how.coupon} of ${side.coupon.number} qualifies` : ` that ${names(sides)} ${sides.length > 1 ? 'together qualify' : 'qualifies'}`
+  }
+  if (high !== null && (asked.max === null || asked.max > high)) {
+    wrong.push('max')
+    parts.push(`${asked.max === null ? 'No upper limit' : show(asked.max, unit)} is above the ${show(high, unit)}${by('upper')}`)
+  }
+  if (low !== null && (asked.min === null || asked.min < low)) {
+    wrong.push('min')
+    parts.push(`${asked.min === null ? 'no lower limit' : show(asked.min, unit)} is below the ${show(low, unit)}${by('lower')}`)
+  }
+  if (parts.length > 0) return { sentence: `${capital(parts.join(', and '))}.`, wrong }
+  return { sentence: `${capital(showAsked(asked, unit))} reaches into a gap: ${names(sides)} together qualify ${showRange(joined)}.`, wrong: ['min', 'max'].filter((end) => asked[end as 'min' | 'max'] !== null && containsInterval(joined, { min: asked[end as 'min' | 'max'], max: asked[end as 'min' | 'max'] }) !== 'within') as ('min' | 'max')[] }
+}
+
+const ORDER: readonly Basis[] = ['read', 'secondary', 'common-practice', 'memory']
+/** The weaker of two bases, so that memory always shows through. */
+export const weakest = (a: Basis, b: Basis): Basis => (ORDER.indexOf(a) >= ORDER.indexOf(b) ? a : b)

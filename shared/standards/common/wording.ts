@@ -1,0 +1,61 @@
+/** Sentences of findings: plain words with the figures, in the units of the record. */
+import type { Fix, NumericRange, QualifiedSpan, RuleVerdictAsked } from './types.ts'
+import type { CouponSide, RuleVerdict } from '../rule.ts'
+
+/** Rounded for reading: four decimals, without trailing zeros. */
+export const round = (value: number): number => Math.round(value * 10000) / 10000
+
+export const show = (value: number, unit: string): string => `${round(value)} ${unit}`
+
+/** "PQR-1", "PQR-1 and PQR-2", "PQR-1, PQR-2 and PQR-3"; a coupon is named once. */
+export function names(sides: readonly CouponSide[]): string {
+  if (sides.length === 1 && sides[0]) return sides[0].coupon.number
+  const all = [...new Set(sides.map((side) => side.coupon.number))]
+  return list(all)
+}
+
+/** Words joined as in a sentence. */
+export function list(words: readonly string[], last = 'and'): string {
+  if (words.length < 2) return words[0] ?? ''
+  return `${words.slice(0, -1).join(', ')} ${last} ${words.at(-1) ?? ''}`
+}
+
+/** "5 mm to 20 mm", "from 5 mm, no upper limit", several parts joined by "and". */
+export function showRange(range: NumericRange): string {
+  if (range.segments.length === 0) return 'nothing'
+  return list(
+    range.segments.map(({ lower, upper }) => {
+      if (lower.kind === 'unknown' || upper.kind === 'unknown') return 'a range that is not known'
+      if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? `any ${range.unit}` : `up to ${show(upper.value, range.unit)}`
+      if (upper.kind === 'unlimited') return `${show(lower.value, range.unit)} and up`
+      return lower.value === upper.value ? show(lower.value, range.unit) : `${show(lower.value, range.unit)} to ${show(upper.value, range.unit)}`
+    }),
+  )
+}
+
+export const showSpan = (span: QualifiedSpan | null): string =>
+  span === null ? 'nothing' : span.type === 'numeric' ? showRange(span) : span.any ? 'any' : span.values.length === 0 ? (span.unknown ? 'a range that is not known' : 'nothing') : list(span.values, 'or')
+
+/** The interval asked, in words. */
+export function showAsked(asked: { min: number | null; max: number | null }, unit: string): string {
+  if (asked.min !== null && asked.max !== null) return asked.min === asked.max ? show(asked.min, unit) : `${show(asked.min, unit)} to ${show(asked.max, unit)}`
+  if (asked.max !== null) return `up to ${show(asked.max, unit)}`
+  if (asked.min !== null) return `${show(asked.min, unit)} and up`
+  return 'every size'
+}
+
+export const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)
+
+/** "Cannot tell", with exactly what is missing. */
+export const cannotTell = (sentence: string, missing: readonly string[], more: Partial<RuleVerdict> = {}): RuleVerdict => ({ verdict: 'cannot-tell', sentence, asked: null, range: null, missing, ...more })
+
+/** The procedure does not say it. */
+export const notStated = (label: string, field: string, more: Partial<RuleVerdict> = {}): RuleVerdict =>
+  cannotTell(`${capital(label)} isn't stated in the procedure.`, [`procedure: ${field}`], { field, fixes: [stateFix(label, field)], ...more })
+
+export const stateFix = (label: string, field: string): Fix => ({ kind: 'state', label: `State the ${label}`, field })
+
+/** The coupons lack what would give the range. */
+export function couponLacks(label: string, field: string, sides: readonly CouponSide[], asked: RuleVerdictAsked, range: QualifiedSpan | null): RuleVerdict {
+  return cannotTell(`${names(sides)} does not record the ${label}, so what it qualifies can't be told.`, sides.map((side) => `${side.coupon.number}: ${field}`), { asked, range, fixes: [] })
+}
