@@ -100,7 +100,7 @@ export const problemHandler: ErrorRequestHandler = (error: unknown, req, res, ne
     return
   }
   const problem = problemOf(error)
-  const requestId = String(req.id)
+  const requestId = typeof req.id === 'string' ? req.id : undefined
   if (problem.status >= 500) req.log.error({ err: error }, 'request failed')
   const body: Problem = { type: 'about:blank', title: problem.title, status: problem.status, detail: problem.message, instance: req.originalUrl.split('?')[0], requestId, errors: problem.errors, current: problem.current }
   if (problem.retryAfter !== undefined) res.set('Retry-After', String(problem.retryAfter))

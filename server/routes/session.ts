@@ -60,7 +60,7 @@ export function sessionRoutes(router: Router, services: Services, authenticate: 
 
   publicRoute(router, services, 'acceptInvitation', ({ params, body }) => acceptInvitation(services, params.token, body.password))
 
-  route(router, services, 'changePassword', async ({ actor, tenant, body, req, res }) => {
+  route(router, services, 'changePassword', async ({ actor, tenant, body, req }) => {
     const person = await changePassword(services, tenant, actor, body.currentPassword, body.newPassword)
     tenant.transaction.afterCommit(() => beginSession(req, person))
   })
