@@ -78,7 +78,7 @@ export async function runQuietly(what, log, command, args, env) {
  * @typedef {object} Server
  * @property {number} pid
  * @property {Promise<number>} exited its exit code, when it ends
- * @property {() => Promise<number>} stop asks it to drain, insists after 15 s, resolves to its exit code
+ * @property {() => Promise<number>} stop asks it to drain, insists after 30 s, resolves to its exit code
  */
 
 /**
@@ -104,7 +104,7 @@ export async function startServer(env, { log, seconds = 60, onLine }) {
   const stop = async () => {
     if (ended !== undefined) return ended
     child.kill('SIGTERM')
-    const insist = setTimeout(() => child.kill('SIGKILL'), 15_000)
+    const insist = setTimeout(() => child.kill('SIGKILL'), 30_000)
     const code = await exited
     clearTimeout(insist)
     return code

@@ -22,9 +22,9 @@ export function mergeEnv(sources) {
  */
 const readEnvFile = (file) => (existsSync(file) ? Object.fromEntries(Object.entries(util.parseEnv(readFileSync(file, 'utf8'))).filter(([, value]) => value !== '')) : {})
 
-/** Puts the project's .env, where there is one, behind the variables that are already set. */
+/** Puts the project's .env (or the file that ENV_FILE names), where there is one, behind the variables that are already set. */
 export function loadDotEnv() {
-  Object.assign(process.env, mergeEnv([process.env, readEnvFile(path.join(root, '.env'))]))
+  Object.assign(process.env, mergeEnv([process.env, readEnvFile(path.resolve(root, process.env.ENV_FILE || '.env'))]))
 }
 
 const secretNames = ['SESSION_SECRET', 'SIGNING_PASSPHRASE']

@@ -1,0 +1,50 @@
+/** One line of the table. */
+export interface Figure {
+  name: string
+  value: number
+  unit: 'ms' | 's' | '/s' | '×'
+  /** How it was measured, and how often. */
+  note: string
+}
+
+/**
+ * Middle value; of an even count the mean of the two in the middle.
+ * @throws RangeError when there is none
+ */
+export function median(values: readonly number[]): number {
+  const sorted = [...values].sort((a, b) => a - b)
+  const upper = sorted[sorted.length >> 1]
+  const lower = sorted[(sorted.length - 1) >> 1]
+  if (upper === undefined || lower === undefined) throw new RangeError('The median of nothing is not known.')
+  return (upper + lower) / 2
+}
+
+/**
+ * Does each piece of work in turn, over and over, so that a busy moment of the machine falls on all alike.
+ * @param seconds for the whole; at least three rounds are done
+ * @returns milliseconds of each round, the first (unmeasured) one left out
+ */
+export async function alternate<K extends string>(work: Record<K, () => Promise<unknown>>, seconds: number): Promise<Record<K, number[]>> {
+  const names = Object.keys(work) as K[]
+  const times = Object.fromEntries(names.map((name) => [name, [] as number[]])) as Record<K, number[]>
+  for (const name of names) await work[name]()
+  const end = performance.now() + seconds * 1000
+  for (let round = 0; round < 3 || performance.now() < end; round++) {
+    for (const name of names) {
+      const begun = performance.now()
+      await work[name]()
+      times[name].push(performance.now() - begun)
+    }
+  }
+  return times
+}
+
+const digits = ({ value, unit }: Figure): string => (unit === '/s' ? Math.round(value).toLocaleString('en') : value.toFixed(unit === '×' || value < 10 ? 2 : value < 100 ? 1 : 0))
+
+/** The figures in columns, as printed at the end of a run. */
+export function table(figures: readonly Figure[]): string {
+  const rows = figures.map((figure) => [figure.name, digits(figure), figure.unit, figure.note] as const)
+  const name = Math.max(...rows.map((row) => row[0].length))
+  const value = Math.max(...rows.map((row) => row[1].length))
+  return rows.map((row) => `  ${row[0].padEnd(name)}  ${row[1].padStart(value)} ${row[2].padEnd(3)} ${row[3]}`).join('\n')
+}

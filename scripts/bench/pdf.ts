@@ -1,0 +1,43 @@
+import { chromium } from 'playwright-core'
+import { findChromium } from '../lib/system.mjs'
+import { alternate, median, type Figure } from './measure.ts'
+import type { Caller } from './product.ts'
+
+/** A draft's PDF, made anew for each request, against Chromium printing the same record's page. */
+export async function measurePdf(caller: Caller, baseUrl: string, seconds: number): Promise<Figure[]> {
+  const executablePath = findChromium()
+  if (!executablePath) throw new Error('No Chromium was found: npm run bench installs it where it may.')
+  const { items } = await caller.read('listProcedures', { query: { state: 'draft' } })
+  const row = items[0]
+  if (!row) throw new Error('The demo firm has no draft to print.')
+  const browser = await chromium.launch({ executablePath, args: ['--disable-gpu', '--disable-dev-shm-usage', '--no-first-run', ...(process.getuid?.() === 0 ? ['--no-sandbox'] : [])] })
+  try {
+    const context = await browser.newContext({ baseURL: baseUrl, serviceWorkers: 'block', viewport: { width: 1440, height: 900 } })
+    const [name = '', value = ''] = caller.cookie.split('=', 2)
+    await context.addCookies([{ name, value, url: baseUrl }])
+    const page = await context.newPage()
+    const open = async () => {
+      await page.goto(`/procedures/${row.id}`, { waitUntil: 'networkidle' })
+      // A page that only says "not found" would print quickly.
+      await page.getByText(row.number).first().waitFor()
+    }
+    await open()
+    const times = await alternate(
+      {
+        ours: async () => (await caller.get(`/api/revisions/${row.revisionId}/document?paper=A4`)).arrayBuffer(),
+        print: () => page.pdf({ format: 'A4', printBackground: true }),
+      },
+      seconds,
+    )
+    const ours = median(times.ours)
+    const print = median(times.print)
+    const note = `median of ${times.ours.length}, ${row.number}, A4`
+    return [
+      { name: 'Procedure as PDF', value: ours, unit: 'ms', note: `${note}, through the API` },
+      { name: "Chromium's print-to-PDF", value: print, unit: 'ms', note: `${note}, page already open` },
+      { name: 'PDF: ours / Chromium', value: ours / print, unit: '×', note: 'below 1 is quicker' },
+    ]
+  } finally {
+    await browser.close()
+  }
+}
