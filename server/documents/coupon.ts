@@ -49,7 +49,8 @@ const STAMP_NOTE: Readonly<Record<CouponState, string>> = {
 
 function titleBlock(document: CouponDocument): TitleBlock {
   const { content } = document
-  const certifier = document.signatures.filter((signature) => signature.meaning === 'certified').at(-1)
+  const decided = document.state === 'rejected' ? 'rejected' : 'certified'
+  const certifier = document.signatures.filter((signature) => signature.meaning === decided).at(-1)
   return {
     organization: document.organization,
     kind: 'Procedure qualification record',
@@ -58,9 +59,9 @@ function titleBlock(document: CouponDocument): TitleBlock {
     title: content.title,
     cells: [
       { label: 'Process', lines: content.variables.processes.map(processName) },
-      { label: 'Standard', share: 1.15, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
+      { label: 'Standard', share: 1.25, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
       { label: 'Welded to', lines: [document.procedure ? `${document.procedure.number} rev ${document.procedure.revision}` : 'no procedure linked', content.weldedOn ? `on ${dateWords(content.weldedOn)}` : 'date not stated'] },
-      { label: 'Who and when', share: 1.2, lines: [document.inspector, `opened ${dateWords(document.dates.opened)}`, ...(certifier ? [certifier.person.name, `certified ${dateWords(certifier.signedAt)}`] : [document.dates.certified && document.state === 'certified' ? `certified ${dateWords(document.dates.certified)}` : 'not certified'])] },
+      { label: 'Who and when', share: 1.3, lines: [document.inspector, `opened ${dateWords(document.dates.opened)}`, ...(certifier ? [certifier.person.name, `${decided} ${dateWords(certifier.signedAt)}`] : [document.dates.certified && document.state === 'certified' ? `certified ${dateWords(document.dates.certified)}` : 'not certified'])] },
     ],
     stamp: STAMP[document.state],
     stampNote: STAMP_NOTE[document.state],
@@ -109,7 +110,7 @@ export async function renderCoupon(document: CouponDocument): Promise<Buffer> {
     footer: { notice: `Printed ${dateWords(document.dates.printed)}. ${UNCONTROLLED}`, caution: CAUTION },
   })
   const context: Context = { sheet, figures, variables, judgements: null }
-  drawJoint(context)
+  drawJoint(context, content.runSheet)
   drawBaseMetals(context)
   drawWelding(context, content)
   drawFillers(context)

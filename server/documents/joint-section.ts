@@ -1,4 +1,5 @@
-import { geometryOf } from '@shared/calculations/joint-geometry.ts'
+import { densityOf, geometryOf, jointGeometry } from '@shared/calculations/joint-geometry.ts'
+import { passSchema, type RunRow } from '@shared/schemas/welding.ts'
 import { drawFactColumn, drawFacts, drawWideFact, factsHeight, type Fact } from './layout/facts.ts'
 import type { Figures } from './layout/figures.ts'
 import { drawJointSection } from './layout/joint-drawing.ts'
@@ -18,11 +19,15 @@ function massWords(kgPerM: number, figures: Figures): string {
   return figures.first === 'SI' ? `${metric} (${customary})` : `${customary} (${metric})`
 }
 
-/** The joint: drawn cross-section with its pass build-up on the left, its facts and computed figures on the right. */
-export function drawJoint(context: Context): void {
+/**
+ * The joint: drawn cross-section with its pass build-up on the left, its facts and computed figures on the right.
+ * @param beads a coupon's run sheet, which is its build-up
+ */
+export function drawJoint(context: Context, beads: readonly RunRow[] = []): void {
   const { sheet, figures, variables } = context
   const { joint } = variables
-  const geometry = geometryOf(variables, figures.first)
+  const welded = variables.processes.map(({ id }) => ({ id, passes: beads.filter((row) => row.processId === id).map((row) => passSchema.parse({ number: row.pass, layer: row.layer })) }))
+  const geometry = beads.length > 0 ? jointGeometry({ joint, thickness: variables.thickness, thicknessB: variables.thicknessB, blocks: welded, density: densityOf(variables), system: figures.first }) : geometryOf(variables, figures.first)
   const facts: Fact[] = [
     ...jointFacts(context),
     ...(geometry.areaMm2 === null ? [] : [{ label: 'Weld section', value: figures.value(geometry.areaMm2, 'area') }]),
@@ -32,7 +37,7 @@ export function drawJoint(context: Context): void {
   const drawn = geometry.plates.length > 0
   const column = sheet.width * 0.4
   const factsTall = factsHeight(sheet, facts, column - PAD, 0.36)
-  const note = ['Section drawn to scale at the middle of each tolerance; beads show the order of welding, not their true shape.', ...geometry.assumed].join(' ')
+  const note = [`Section drawn to scale${beads.length > 0 ? '' : ' at the middle of each tolerance'}${geometry.passes.length > 0 ? '; beads show the order of welding, not their true shape' : ''}.`, ...geometry.assumed].join(' ')
   sheet.section('Joint', summary, () => {
     if (drawn) {
       const width = sheet.width - column

@@ -78,9 +78,9 @@ function titleBlock(document: ProcedureDocument): TitleBlock {
     title: content.title,
     cells: [
       { label: 'Process', lines: content.variables.processes.map(processName) },
-      { label: 'Standard', share: 1.15, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
-      { label: 'Supporting records', lines: document.coupons.length > 0 ? [document.coupons.map((coupon) => coupon.number).join(', ')] : ['none linked'] },
-      { label: 'Who and when', share: 1.2, lines: [document.author, `drafted ${dateWords(document.dates.drafted)}`, ...(approver ? [approver.person.name, `approved ${dateWords(approver.signedAt)}`] : [document.dates.approved && state !== 'draft' && state !== 'in-review' ? `approved ${dateWords(document.dates.approved)}` : 'not approved'])] },
+      { label: 'Standard', share: 1.25, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
+      { label: 'Supported by', share: 0.95, lines: document.coupons.length > 0 ? [document.coupons.map((coupon) => coupon.number).join(', ')] : ['none linked'] },
+      { label: 'Who and when', share: 1.3, lines: [document.author, `drafted ${dateWords(document.dates.drafted)}`, ...(approver ? [approver.person.name, `approved ${dateWords(approver.signedAt)}`] : [document.dates.approved && state !== 'draft' && state !== 'in-review' ? `approved ${dateWords(document.dates.approved)}` : 'not approved'])] },
     ],
     stamp: STAMP[state],
     stampNote: state === 'approved' && document.deviationReason ? 'for production, with open findings: see Findings' : state === 'draft' && blocking > 0 ? `${blocking} finding${blocking === 1 ? '' : 's'} to settle` : STAMP_NOTE[state],

@@ -148,7 +148,7 @@ export function drawPositions(context: Context): void {
       always('Positions', block.positions.join(', '), judgements?.marks(pathOf(index, 'positions'))),
       fact('Vertical progression', words.said(words.PROGRESSION, block.progression), judgements?.marks(pathOf(index, 'progression'))),
     ])))
-  }, 40)
+  }, 4 + 34 * Math.min(4, context.variables.processes.length))
 }
 
 export function drawHeat(context: Context): void {

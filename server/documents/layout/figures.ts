@@ -66,10 +66,11 @@ export class Figures {
     return interval ? this.bare((system) => formatInterval(interval, dimension, system), dimension) : ''
   }
 
+  /** Computed figures keep their trailing zeros, so that a column lines up. */
   cellValue(si: number, dimension: Dimension): string {
     return this.bare((system) => {
       const unit = SHOWN_UNIT[system][dimension]
-      const figure = formatNumber(si, dimension, unit)
+      const figure = formatNumber(si, dimension, unit, true)
       return { figure, unit, text: `${figure} ${unit}` }
     }, dimension)
   }

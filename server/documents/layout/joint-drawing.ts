@@ -7,7 +7,9 @@ type Point = { x: number; y: number }
 type Shape = readonly Point[]
 
 const FIGURE: Style = { face: 'text', size: 7, colour: COLOUR.ink, leading: 9 }
-const ROOM = { left: 12, right: 58, top: 30, bottom: 26 }
+const ROOM = { left: 14, right: 24, top: 30, bottom: 32 }
+/** Room at the right for the figures that stand there. */
+const rightRoom = (faces: Faces, geometry: JointGeometry): number => ROOM.right + Math.max(20, ...geometry.dimensions.filter(({ kind }) => kind !== 'root-opening' && kind !== 'included-angle').map(({ text }) => widthOf(faces, FIGURE, text)))
 const LAYER_COLOUR: Readonly<Record<string, string>> = { root: PASS_COLOURS[0], backing: PASS_COLOURS[0], hot: PASS_COLOURS[1], fill: PASS_COLOURS[2], cap: PASS_COLOURS[3] }
 
 export interface Frame { x: number; y: number; width: number; height: number }
@@ -19,10 +21,15 @@ class Pencil {
   private readonly bottom: number
   constructor(readonly doc: PDFKit.PDFDocument, readonly faces: Faces, readonly geometry: JointGeometry, frame: Frame) {
     const { minX, minY, maxX, maxY } = geometry.bounds
-    const room = { width: frame.width - ROOM.left - ROOM.right, height: frame.height - ROOM.top - ROOM.bottom }
-    this.scale = Math.min(room.width / Math.max(maxX - minX, 1e-6), room.height / Math.max(maxY - minY, 1e-6))
+    const width = frame.width - ROOM.left - rightRoom(faces, geometry)
+    const fit = (top: number) => Math.min(width / Math.max(maxX - minX, 1e-6), (frame.height - top - ROOM.bottom) / Math.max(maxY - minY, 1e-6))
+    // The arc over an angle rises above the work by as much as its leg is longer than it is high.
+    const rises = geometry.dimensions.map(({ kind, vertex, to }) => (kind === 'included-angle' && vertex ? Math.hypot(to.x - vertex.x, to.y - vertex.y) - (to.y - vertex.y) : 0))
+    const top = ROOM.top + Math.max(0, ...rises) * fit(ROOM.top)
+    const room = { width, height: frame.height - top - ROOM.bottom }
+    this.scale = fit(top)
     this.left = frame.x + ROOM.left + (room.width - (maxX - minX) * this.scale) / 2 - minX * this.scale
-    this.bottom = frame.y + ROOM.top + (room.height + (maxY - minY) * this.scale) / 2 + minY * this.scale
+    this.bottom = frame.y + top + (room.height + (maxY - minY) * this.scale) / 2 + minY * this.scale
   }
 
   at = ({ x, y }: Point): Point => ({ x: this.left + x * this.scale, y: this.bottom - y * this.scale })
@@ -150,7 +157,9 @@ function drawDimension(pencil: Pencil, mark: JointDimension, index: number): voi
       break
     case 'root-opening': {
       const half = Math.abs(to.x - from.x) / 2
-      straight(pencil, mark, { x: 0, y: edge.bottom - from.y + 9 }, 'left', { x: half + (2 * half > 13 ? 6 : 14), y: 0 })
+      const aside = half + (2 * half > 13 ? 6 : 14)
+      const left = geometry.dimensions.some(({ kind }) => kind === 'root-face')
+      straight(pencil, mark, { x: 0, y: edge.bottom - from.y + 13 }, left ? 'right' : 'left', { x: left ? -aside : aside, y: 0 })
       break
     }
     case 'root-face': {

@@ -33,8 +33,10 @@ export function drawTable(sheet: Sheet, columns: readonly Column[], rows: readon
   const body: Style = options.size ? { ...BODY, size: options.size, leading: options.size * 1.31 } : BODY
   // A left-aligned column after a right-aligned one would touch it.
   const indentOf = (index: number) => (index > 0 && columns[index - 1]?.align === 'right' && columns[index]?.align !== 'right' ? 7 : 0)
-  const inner = (index: number) => (widths[index] ?? 0) - 2 * GAP - indentOf(index)
-  const leftOf = (index: number) => (lefts[index] ?? 0) + GAP + indentOf(index)
+  // The first column stands flush with the section's text.
+  const gapOf = (index: number) => (index === 0 ? 0 : GAP)
+  const inner = (index: number) => (widths[index] ?? 0) - GAP - gapOf(index) - indentOf(index)
+  const leftOf = (index: number) => (lefts[index] ?? 0) + gapOf(index) + indentOf(index)
 
   const heads = columns.map((column, index) => ({
     title: setText(sheet.faces, { ...LABEL, size: 6.8, leading: 8.2 }, column.title.toUpperCase(), inner(index)),

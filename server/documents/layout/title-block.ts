@@ -15,7 +15,7 @@ export interface TitleBlock {
 }
 
 const LABEL: Style = { face: 'head', size: 6.6, colour: COLOUR.soft, leading: 8.4, tracking: 0.4 }
-const VALUE: Style = { face: 'text', size: 7.2, colour: COLOUR.ink, leading: 9.2 }
+const VALUE: Style = { face: 'text', size: 7, colour: COLOUR.ink, leading: 9.2 }
 const TITLE: Style = { face: 'strong', size: 7.6, colour: COLOUR.ink, leading: 9.8 }
 const FIRM: Style = { face: 'strong', size: 7.2, colour: COLOUR.ink, leading: 9 }
 const PLACE: Style = { face: 'text', size: 6.6, colour: COLOUR.soft, leading: 9 }
