@@ -8,6 +8,20 @@ import type { Context } from './weld-sections.ts'
 
 const right = (title: string, unit: string, share: number): Column => ({ title, unit, share, align: 'right' })
 
+/** The same doubt about many passes is said once. */
+function gathered(doubts: readonly string[]): string[] {
+  const passes = new Map<string, string[]>()
+  for (const doubt of doubts) {
+    const [, pass, rest] = /^Pass ([^:]+): (.*)$/s.exec(doubt) ?? [null, '', doubt]
+    passes.set(rest ?? doubt, [...(passes.get(rest ?? doubt) ?? []), pass ?? ''])
+  }
+  return [...passes].map(([doubt, found]) => {
+    const named = found.filter(Boolean)
+    if (named.length === 0) return doubt
+    return named.length === 1 ? `Pass ${named[0]}: ${doubt}` : named.length <= 8 ? `Passes ${named.join(', ')}: ${doubt}` : `${named.length} passes, ${named[0]} to ${named.at(-1)}: ${doubt}`
+  })
+}
+
 /** The run sheet as welded, with heat input computed from its readings. */
 export function drawRunSheet(context: Context, rows: readonly RunRow[]): void {
   const { sheet, figures, variables } = context
@@ -41,6 +55,6 @@ export function drawRunSheet(context: Context, rows: readonly RunRow[]): void {
       return [{ text: block ? processName(block) : summary.processId, strong: true }, String(summary.passes), summary.heatInput ? computed(summary.heatInput, 'heatInput') : 'cannot tell', summary.maxInterpass === null ? 'not recorded' : figures.cellValue(summary.maxInterpass, 'temperature'), missing.join('; ')]
     }))
     const doubts = rows.flatMap((row) => rowHeatInput(row, blocks.get(row.processId)?.electrical.waveformControlled ?? null).doubts)
-    if (doubts.length > 0) sheet.callout(`${doubts.length} ${doubts.length === 1 ? 'reading' : 'readings'} in doubt`, [...doubts.slice(0, 6), ...(doubts.length > 6 ? [`and ${doubts.length - 6} more of the same kind`] : [])].join('\n'), 'straw')
+    if (doubts.length > 0) sheet.callout('Readings in doubt', gathered(doubts).join('\n'), 'straw')
   }, 70)
 }
