@@ -4,6 +4,7 @@ import { Responsibility } from '@/components/Caution.tsx'
 import { Wordmark } from '@/components/Mark.tsx'
 import { FieldsSection } from './FieldsSection.tsx'
 import { GaugeSection } from './GaugeSection.tsx'
+import { JointSection } from './JointSection.tsx'
 import { RecordSection } from './RecordSection.tsx'
 import { StatesSection } from './StatesSection.tsx'
 import { TableSection } from './TableSection.tsx'
@@ -23,6 +24,7 @@ export function GalleryPage() {
         <h1 className="font-narrow text-3xl font-semibold">Gallery</h1>
         <RecordSection />
         <GaugeSection />
+        <JointSection />
         <FieldsSection />
         <TableSection />
         <StatesSection />

@@ -8,21 +8,20 @@ import { same } from './paths.ts'
 
 export type Side = 'mine' | 'theirs'
 
-export interface FieldClash {
+export interface Difference {
   /** Dotted path; a process block is named by its id: `variables.processes#fill.electrical.current`. */
   path: string
   base: unknown
   mine: unknown
   theirs: unknown
+  /** Who changed it: `both` is a clash. */
+  by: Side | 'both'
 }
 
 export interface Merge {
   content: ProcedureContent
-  clashes: FieldClash[]
-  /** Paths changed by them alone, taken over. */
-  taken: string[]
-  /** Paths changed by me alone, kept. */
-  kept: string[]
+  /** Everything in which the two differ, in document order. */
+  differences: Difference[]
 }
 
 type Tree = Record<string, unknown>
@@ -33,10 +32,10 @@ const BLOCKS = 'variables.processes'
 /**
  * Three-way merge.
  * @param base what both started from
- * @param choose settles a clash by its path; mine where left out
+ * @param choose settles a difference by its path; where it says nothing, the one who changed the field has it, and a clash stays mine
  */
-export function mergeContents(base: ProcedureContent, mine: ProcedureContent, theirs: ProcedureContent, choose: (path: string) => Side = () => 'mine'): Merge {
-  const found: Omit<Merge, 'content'> = { clashes: [], taken: [], kept: [] }
+export function mergeContents(base: ProcedureContent, mine: ProcedureContent, theirs: ProcedureContent, choose: (path: string) => Side | undefined = () => undefined): Merge {
+  const differences: Difference[] = []
 
   const settle = (path: string, from: unknown, my: unknown, their: unknown): unknown => {
     if (same(my, their)) return my
@@ -45,16 +44,9 @@ export function mergeContents(base: ProcedureContent, mine: ProcedureContent, th
       const before = branches(from) ? from : {}
       return Object.fromEntries([...new Set([...Object.keys(my), ...Object.keys(their)])].map((key) => [key, settle(path ? `${path}.${key}` : key, before[key], my[key], their[key])]))
     }
-    if (same(from, their)) {
-      found.kept.push(path)
-      return my
-    }
-    if (same(from, my)) {
-      found.taken.push(path)
-      return their
-    }
-    found.clashes.push({ path, base: from, mine: my, theirs: their })
-    return choose(path) === 'theirs' ? their : my
+    const by = same(from, their) ? 'mine' : same(from, my) ? 'theirs' : 'both'
+    differences.push({ path, base: from, mine: my, theirs: their, by })
+    return (choose(path) ?? by) === 'theirs' ? their : my
   }
 
   const mergeBlocks = (from: ProcessBlock[], my: ProcessBlock[], their: ProcessBlock[]): ProcessBlock[] => {
@@ -66,12 +58,12 @@ export function mergeContents(base: ProcedureContent, mine: ProcedureContent, th
     const merged = order.map((id) => {
       const [before, one, other] = [inBase.get(id), inMine.get(id), inTheirs.get(id)]
       const path = `${BLOCKS}#${id}`
-      return one && other ? (settle(path, before, one, other) as ProcessBlock) : (settle(path, before, one, other) as ProcessBlock | undefined)
+      return settle(path, before, one, other) as ProcessBlock | undefined
     })
     const left = merged.filter((block) => block !== undefined)
     return left.length > 0 ? left : my
   }
 
   const content = settle('', base, mine, theirs) as ProcedureContent
-  return { content, ...found }
+  return { content, differences }
 }

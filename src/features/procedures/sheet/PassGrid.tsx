@@ -1,5 +1,5 @@
 import { Plus, X } from 'lucide-react'
-import { useRef, useState, type ClipboardEvent, type KeyboardEvent } from 'react'
+import { useEffect, useRef, useState, type ClipboardEvent, type KeyboardEvent } from 'react'
 import type { Pass } from '@shared/schemas/welding.ts'
 import { SHOWN_UNIT } from '@shared/units/convert.ts'
 import { Button } from '@/components/Button.tsx'
@@ -13,14 +13,23 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
   const { value: passes, set, error } = useSheetField<Pass[]>(`variables.${path}`)
   const [problems, setProblems] = useState<string[]>([])
   const grid = useRef<HTMLTableSectionElement>(null)
+  // A cell is read when it is left, just before a key adds a row: both changes must build on one another.
+  const latest = useRef(passes)
+  useEffect(() => {
+    latest.current = passes
+  }, [passes])
+  const put = (next: Pass[]) => {
+    latest.current = next
+    set(next)
+  }
   const focus = (row: number, column: number) => requestAnimationFrame(() => grid.current?.querySelector<HTMLElement>(`[data-cell="${row}.${column}"]`)?.focus())
 
   const write = (row: number, column: GridColumn, text: string): string | null => {
-    const pass = passes[row]
+    const pass = latest.current[row]
     if (!pass) return null
     const reading = writeCell(pass, column, text, system)
     if (!reading.ok) return reading.message
-    set(passes.map((one, at) => (at === row ? reading.pass : one)))
+    put(latest.current.map((one, at) => (at === row ? reading.pass : one)))
     return null
   }
   const onKey = (event: KeyboardEvent<HTMLElement>, row: number, column: number) => {
@@ -30,9 +39,8 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
     const target = moveFrom(event.key, row, column, passes.length, caret)
     if (!target) return
     event.preventDefault()
-    // Leaving the cell reads it first, so that a new pass takes over what was just typed.
     if (box instanceof HTMLElement) box.blur()
-    if (target.add) requestAnimationFrame(() => grid.current?.dispatchEvent(new CustomEvent('add-pass')))
+    if (target.add) put(addPass(latest.current))
     focus(target.row, target.column)
   }
   const onPaste = (event: ClipboardEvent, row: number, column: number) => {
@@ -40,11 +48,11 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
     if (!/[\t\n]/.test(text.replace(/\r?\n$/, ''))) return
     event.preventDefault()
     const pasted = pasteCells(passes, row, column, text, system)
-    set(pasted.passes)
+    put(pasted.passes)
     setProblems(pasted.problems)
   }
   const add = () => {
-    set(addPass(passes))
+    put(addPass(latest.current))
     focus(passes.length, 0)
   }
 
@@ -83,7 +91,7 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
                     </td>
                   ))}
                   <td className="w-8 pb-1.5 align-top">
-                    <button type="button" aria-label={`Remove pass ${pass.number}`} className="flex size-9 items-center justify-center rounded text-soft hover:text-ink" onClick={() => set(passes.filter((_, index) => index !== row))}>
+                    <button type="button" aria-label={`Remove pass ${pass.number}`} className="flex size-9 items-center justify-center rounded text-soft hover:text-ink" onClick={() => put(passes.filter((_, index) => index !== row))}>
                       <X size={15} aria-hidden="true" />
                     </button>
                   </td>
