@@ -21,7 +21,10 @@ const cache = new WeakMap<Standard, Map<string, PreparedEdition | null>>()
 /** The rules of one edition by process; null when the standard does not know the edition. */
 export function prepare(standard: Standard, edition: string): PreparedEdition | null {
   let editions = cache.get(standard)
-  if (!editions) cache.set(standard, (editions = new Map()))
+  if (!editions) {
+    editions = new Map<string, PreparedEdition | null>()
+    cache.set(standard, editions)
+  }
   let prepared = editions.get(edition)
   if (prepared === undefined) {
     prepared = standard.editions.some(({ id }) => id === edition) ? build(standard, edition) : null
