@@ -8,11 +8,12 @@ import { libraryRoutes } from './library.ts'
 import { outboxRoutes } from './outbox.ts'
 import { peopleRoutes } from './people.ts'
 import { photoRoutes } from './photos.ts'
+import { procedureRoutes } from './procedures.ts'
 import { sessionRoutes } from './session.ts'
 import { todayRoutes } from './today.ts'
 
 /** Every resource of the API. A new one is a file beside this one and a line here. */
-const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, couponRoutes, photoRoutes, jobRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
+const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, procedureRoutes, couponRoutes, photoRoutes, jobRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
 
 export function resourceRoutes(router: Router, services: Services, authenticate: Authenticate): void {
   sessionRoutes(router, services, authenticate)

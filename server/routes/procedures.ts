@@ -1,13 +1,11 @@
 import type { Router } from 'express'
-import { compareContent } from '@shared/comparison/compare.ts'
-import { presentAssessment, presentProcedure, presentRevision, presentSummary } from '../presenters/revision.ts'
+import { presentAssessment, presentProcedure, presentRevision } from '../presenters/revision.ts'
 import { mailRevision } from '../services/document-mail.ts'
 import { printRevision } from '../services/documents.ts'
-import { peopleRefs } from '../services/people-refs.ts'
 import { listProcedures } from '../services/procedure-list.ts'
 import { approveRevision, returnRevision, submitRevision, withdrawRevision } from '../services/revision-decisions.ts'
 import { assessRevision } from '../services/revision-links.ts'
-import { comparedWith, createProcedure, discardRevision, findRevision, readProcedure, reviseProcedure, saveRevision } from '../services/revisions.ts'
+import { createProcedure, discardRevision, findRevision, readProcedure, reviseProcedure, saveRevision } from '../services/revisions.ts'
 import { FileAnswer } from './file-answer.ts'
 import { route, type Services } from './mount.ts'
 
@@ -27,12 +25,6 @@ export function procedureRoutes(router: Router, services: Services): void {
   route(router, services, 'assessRevision', async ({ params, tenant }) => {
     const revision = await findRevision(tenant, params.id)
     return presentAssessment(revision, await assessRevision(tenant, revision))
-  })
-  route(router, services, 'compareRevision', async ({ params, query, tenant }) => {
-    const to = await findRevision(tenant, params.id)
-    const from = await comparedWith(tenant, to, query.against)
-    const person = await peopleRefs(tenant, [to.authorId, ...(from ? [from.authorId] : [])])
-    return { from: from && presentSummary(from, person), to: presentSummary(to, person), changes: compareContent(from?.content ?? null, to.content) }
   })
 
   route(router, services, 'submitRevision', async ({ params, ifMatch, actor, tenant }) => presentRevision(tenant, actor, await submitRevision(tenant, actor, params.id, ifMatch)))
