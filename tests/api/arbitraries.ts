@@ -24,13 +24,35 @@ export interface JsonSchema {
   maximum?: number
 }
 
-const MAX_DEPTH = 7
+/** Deeper than any shape of ours; below it only what is required is filled in. */
+const MAX_DEPTH = 16
 
 const formats: Record<string, fc.Arbitrary<string>> = {
   uuid: fc.uuid(),
   email: fc.stringMatching(/^[a-z]{1,8}@[a-z]{1,8}\.example$/),
   date: fc.date({ min: new Date('1990-01-01'), max: new Date('2050-01-01'), noInvalidDate: true }).map((date) => date.toISOString().slice(0, 10)),
   'date-time': fc.date({ min: new Date('1990-01-01'), max: new Date('2050-01-01'), noInvalidDate: true }).map((date) => date.toISOString()),
+}
+
+/** What JSON schema cannot say of a field, by its name: e-mail addresses that are trimmed first, numbers that come as text, and words people use. */
+const typical: Record<string, fc.Arbitrary<unknown>> = {
+  email: formats.email ?? fc.constant(''),
+  password: fc.constantFrom('a long enough password', 'a bead every ten minutes'),
+  newPassword: fc.constant('a long enough password'),
+  limit: fc.integer({ min: 1, max: 200 }).map(String),
+  index: fc.integer({ min: 0, max: 3 }).map(String),
+  cursor: fc.constant('WyJuYW1lIiwiYSIsIjAiXQ'),
+  line: fc.constantFrom('12 mm S355 PA 135', '1/2 in A36 butt 3G', '304L to A36 fillet', 'ER70S-6', '⌀ 168.3 x 7.11'),
+  metalA: fc.constantFrom('A36', '304L', '5083', 'S355J2'),
+  thickness: fc.constantFrom('12 mm', '1/2 in', '3/8"', '.035', 'thick'),
+  typed: fc.constantFrom('12.7 mm', '1/2 in', '200 F', '18-22'),
+}
+
+/** The field's usual values where its name is known and its schema says no more than "text", or nothing as it is coerced. */
+export function typicalFor(name: string, schema: JsonSchema): fc.Arbitrary<unknown> | undefined {
+  if (name === 'to' && schema.type === 'array') return fc.array(typical.email ?? fc.constant(''), { minLength: 1, maxLength: 3 })
+  const coerced = Object.keys(schema).every((keyword) => keyword === 'default' || keyword === '$schema')
+  return coerced || schema.type === 'string' ? typical[name] : undefined
 }
 
 function textOf({ format, minLength = 0, maxLength = 40 }: JsonSchema): fc.Arbitrary<string> {
@@ -41,7 +63,7 @@ function textOf({ format, minLength = 0, maxLength = 40 }: JsonSchema): fc.Arbit
 function objectOf(schema: JsonSchema, root: JsonSchema, depth: number): fc.Arbitrary<unknown> {
   const properties = schema.properties ?? {}
   const required = schema.required ?? []
-  const model = Object.fromEntries(Object.entries(properties).map(([name, inner]) => [name, arbitraryOf(inner, root, depth + 1)]))
+  const model = Object.fromEntries(Object.entries(properties).map(([name, inner]) => [name, typicalFor(name, inner) ?? arbitraryOf(inner, root, depth + 1)]))
   if (Object.keys(model).length > 0) return fc.record(model, { requiredKeys: depth >= MAX_DEPTH ? required : required.filter((name) => name in model) })
   const values = typeof schema.additionalProperties === 'object' ? arbitraryOf(schema.additionalProperties, root, depth + 1) : fc.jsonValue({ maxDepth: 1 })
   return fc.dictionary(fc.string({ maxLength: 12 }), values, { maxKeys: 3 })
@@ -109,7 +131,7 @@ function changeAt(value: unknown, [step = 0, ...rest]: number[], how: string, od
 /** Mostly right, often nearly right, sometimes anything at all. */
 export const nearly = (schema: JsonSchema): fc.Arbitrary<unknown> => {
   const right = arbitraryOf(schema)
-  return fc.oneof({ weight: 3, arbitrary: right }, { weight: 5, arbitrary: right.chain((value) => mutated(value)) }, { weight: 1, arbitrary: oddities })
+  return fc.oneof({ weight: 5, arbitrary: right }, { weight: 4, arbitrary: right.chain((value) => mutated(value)) }, { weight: 1, arbitrary: oddities })
 }
 
 /** Text in a path or query: of the right form, or not at all. */

@@ -7,7 +7,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { z } from 'zod'
 import { endpoints, type Endpoint, type EndpointName } from '../../shared/schemas/endpoints.ts'
 import { ROLES } from '../../shared/schemas/people.ts'
-import { nearly, oddText, type JsonSchema } from './arbitraries.ts'
+import { arbitraryOf, nearly, oddText, typicalFor, type JsonSchema } from './arbitraries.ts'
 import { problem, startApp, type Agent, type TestApp, type TestOrganization } from './harness.ts'
 
 const seed = Number(process.env.FUZZ_SEED ?? 20261201)
@@ -39,6 +39,8 @@ interface Sent {
   body: unknown
 }
 
+const rightOf = (schema: JsonSchema, name: string): fc.Arbitrary<unknown> => typicalFor(name, schema) ?? arbitraryOf(schema)
+
 function sentTo(endpoint: Endpoint): fc.Arbitrary<Sent> {
   const names = [...endpoint.path.matchAll(/:(\w+)/g)].map(([, name]) => name ?? '')
   const paths = jsonSchemaOf(endpoint.params)
@@ -47,7 +49,7 @@ function sentTo(endpoint: Endpoint): fc.Arbitrary<Sent> {
     text: fc.oneof({ weight: 3, arbitrary: nearly(paths.properties?.[name] ?? {}).map(asText) }, { weight: 1, arbitrary: oddText }),
   })
   const queries = Object.entries(jsonSchemaOf(endpoint.query).properties ?? {})
-  const query = Object.fromEntries(queries.map(([name, schema]) => [name, fc.oneof({ weight: 3, arbitrary: nearly(schema) }, { weight: 1, arbitrary: oddText })]))
+  const query = Object.fromEntries(queries.map(([name, schema]) => [name, fc.oneof({ weight: 8, arbitrary: rightOf(schema, name) }, { weight: 1, arbitrary: oddText })]))
   return fc.record({
     path: fc.record(Object.fromEntries(names.map((name) => [name, segment(name)]))),
     query: fc.record(query, { requiredKeys: [] }),
@@ -56,8 +58,8 @@ function sentTo(endpoint: Endpoint): fc.Arbitrary<Sent> {
   })
 }
 
-/** `.` and `..` as a whole segment would be taken out of the address before it is sent. */
-const asSegment = (text: string): string => encodeURIComponent(text.toWellFormed()).replace(/^\.+$/, (dots) => '%2E'.repeat(dots.length)) || '%20'
+/** Short enough for an HTTP parser's own limit; `.` and `..` as a whole segment would be taken out of the address before it is sent. */
+const asSegment = (text: string): string => encodeURIComponent(text.slice(0, 200).toWellFormed()).replace(/^\.+$/, (dots) => '%2E'.repeat(dots.length)) || '%20'
 
 function addressOf(endpoint: Endpoint, { path, query }: Sent): string {
   const at = endpoint.path.replace(/:(\w+)/g, (_all, name: string) => {
@@ -65,7 +67,7 @@ function addressOf(endpoint: Endpoint, { path, query }: Sent): string {
     const id = value?.known === null || value?.known === undefined ? undefined : known[value.known % Math.max(known.length, 1)]
     return asSegment(id ?? value?.text ?? '')
   })
-  const pairs = Object.entries(query).filter(([, value]) => value !== undefined).map(([name, value]) => `${name}=${encodeURIComponent(asText(value).slice(0, 2000).toWellFormed())}`)
+  const pairs = Object.entries(query).filter(([, value]) => value !== undefined).map(([name, value]) => `${name}=${encodeURIComponent(asText(value).slice(0, 400).toWellFormed())}`)
   return `/api${at}${pairs.length > 0 ? `?${pairs.join('&')}` : ''}`
 }
 
