@@ -107,8 +107,8 @@ export function placeDimension(dimension: JointDimension, view: View, company: C
   if (vertex) return kind === 'included-angle' ? angle(from, to, vertex, company.bevelAngle ? 32 : 16, text, 'middle') : angle(from, to, vertex, 10, text, 'end')
   if (kind === 'root-radius') {
     const away = Math.atan2(to.y - from.y, to.x - from.x)
-    const end = { x: to.x + 34 * Math.cos(away), y: to.y + 34 * Math.sin(away) }
-    return { path: `M${p(from)}L${p(end)}`, heads: head(to, away), text: { x: end.x + 5, y: end.y + 5, anchor: 'start', words: `R ${text}` } }
+    const end = { x: to.x + 22 * Math.cos(away), y: to.y + 22 * Math.sin(away) }
+    return { path: `M${p(from)}L${p(end)}`, heads: head(to, away), text: { x: end.x + 5, y: end.y + 3, anchor: 'start', words: `R ${text}` } }
   }
   if (kind === 'root-face') {
     const middle = { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 }

@@ -3,6 +3,7 @@ import { MarginContext, stackNotes } from './layout.ts'
 
 const WIDE = '(min-width: 1280px)'
 const GAP = 8
+const matches = (media: string) => typeof window.matchMedia === 'function' && window.matchMedia(media).matches
 
 export interface MarginLayoutProps {
   /** Left index, usually a SectionNav. */
@@ -26,7 +27,7 @@ export function MarginLayout({ nav, head, children }: MarginLayoutProps) {
       const base = frame.current
       if (!base) return
       const list = [...notes.current]
-      if (!window.matchMedia(WIDE).matches || window.matchMedia('print').matches) {
+      if (!matches(WIDE) || matches('print')) {
         for (const note of list) note.style.top = ''
         base.style.minHeight = ''
         return
