@@ -5,13 +5,14 @@ import { Skeleton } from '@/components/states.tsx'
 import { bareRoutes as accountBareRoutes, routes as accountRoutes } from '@/features/account/routes.tsx'
 import { routes as outboxRoutes } from '@/features/outbox/routes.tsx'
 import { routes as peopleRoutes } from '@/features/people/routes.tsx'
+import { routes as procedureRoutes } from '@/features/procedures/routes.tsx'
 import { routes as todayRoutes } from '@/features/today/routes.tsx'
 import { NotFound, RouteError } from '@/shell/ErrorPage.tsx'
 import { Bare, Shell } from '@/shell/Shell.tsx'
 import { anyone, signedIn } from '@/shell/guard.ts'
 
 /** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
-const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes]
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes]
 
 /** Pages without the bar, for people who are signed in: the shop view. */
 const shop: RouteObject[] = []

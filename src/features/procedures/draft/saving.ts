@@ -60,7 +60,7 @@ export function saving(state: Saving, event: SavingEvent): Saving {
       if (state.phase === 'saving' || state.phase === 'conflict' || state.phase === 'closed') return dirty === state.dirty ? state : { ...state, dirty }
       if (!dirty) return state.phase === 'saved' ? state : { ...state, phase: 'saved', dirty, problem: null, failures: 0 }
       // While out of reach the retry goes on by its own clock; typing must not hasten it.
-      if (state.phase === 'unreachable' || state.phase === 'changed') return state.dirty ? state : { ...state, dirty }
+      if (state.phase === 'unreachable' || state.phase === 'changed') return state
       return { ...state, phase: 'changed', dirty, problem: null }
     }
     case 'sent':

@@ -1,6 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod'
 import { useQueryClient } from '@tanstack/react-query'
-import { useCallback, useEffect, useEffectEvent, useMemo, useReducer, useRef, useState } from 'react'
+import { useCallback, useEffect, useEffectEvent, useMemo, useRef, useState } from 'react'
 import { useForm, useWatch, type FieldValues, type UseFormReturn } from 'react-hook-form'
 import { revisionSchema, type Revision } from '@shared/schemas/records.ts'
 import { procedureContentSchema, type ProcedureContent } from '@shared/schemas/welding.ts'
@@ -11,7 +11,7 @@ import { asProblem, ProblemError } from '@/lib/problem.ts'
 import { revisionQuery } from '../api.ts'
 import { dropLocalCopy, readLocalCopy, writeLocalCopy } from './local-copy.ts'
 import { contentPath, same } from './paths.ts'
-import { retryDelay, saving as reduce, settled, startSaving, type Saving } from './saving.ts'
+import { retryDelay, saving as reduce, settled, startSaving, type Saving, type SavingEvent } from './saving.ts'
 
 /** The sheet's fields are named by dotted paths that the catalogue holds as data, so the form is typed by path at the fields themselves. */
 export type SheetForm = UseFormReturn<FieldValues>
@@ -21,7 +21,10 @@ export interface Draft {
   /** As typed, at this moment. */
   content: ProcedureContent
   saving: Saving
-  saveNow: () => Promise<boolean>
+  /** Saves what is typed; gives the version that then stands on the server, or null when it could not be saved. */
+  saveNow: () => Promise<number | null>
+  /** Drops the copy on this device: the draft is gone. */
+  forget: () => void
   /** Puts a whole content into the form: a fix, its undoing, a merge. */
   replace: (content: ProcedureContent) => void
   /** Settles a conflict with the joined content, which is then saved. */
@@ -54,11 +57,15 @@ export function useDraft(revision: Revision, personId: string): Draft {
   })
   const form: SheetForm = useForm<FieldValues>({ defaultValues: copy?.content ?? revision.content, resolver: zodResolver(procedureContentSchema) as never, mode: 'onChange' })
   const content = useWatch({ control: form.control }) as ProcedureContent
-  const [state, dispatch] = useReducer(reduce, revision, startSaving)
-  const latest = useRef({ content, state })
-  useEffect(() => {
-    latest.current = { content, state }
-  })
+  const [state, setState] = useState(() => startSaving(revision))
+  // The state as it stands this instant: a save that has just ended must be seen by the act that waited for it, before any rendering.
+  const now = useRef(state)
+  const dispatch = useCallback((event: SavingEvent) => {
+    now.current = reduce(now.current, event)
+    setState(now.current)
+  }, [])
+  const forgotten = useRef(false)
+  const flight = useRef<Promise<number | null> | null>(null)
 
   const replace = useCallback((next: ProcedureContent) => form.reset(structuredClone(next), { keepDefaultValues: true }), [form])
 
@@ -70,7 +77,7 @@ export function useDraft(revision: Revision, personId: string): Draft {
   })
   useEffect(() => takeUpCopy(), [])
 
-  useEffect(() => dispatch({ type: 'edited', content }), [content])
+  useEffect(() => dispatch({ type: 'edited', content }), [dispatch, content])
 
   const keepCopy = useEffectEvent(() => {
     if (state.phase === 'saved') dropLocalCopy(personId, id)
@@ -78,31 +85,36 @@ export function useDraft(revision: Revision, personId: string): Draft {
   })
   useEffect(() => keepCopy(), [content, state])
 
-  const saveNow = useCallback(async (): Promise<boolean> => {
-    const { state: now } = latest.current
-    if (now.phase === 'saving' || now.phase === 'conflict' || now.phase === 'closed') return false
+  const saveNow = useCallback(async (): Promise<number | null> => {
+    while (flight.current) await flight.current
+    const { phase: before, base, version } = now.current
+    if (before === 'conflict' || before === 'closed') return null
     const parsed = procedureContentSchema.safeParse(form.getValues())
     if (!parsed.success) {
       dispatch({ type: 'failed', problem: unfinished(parsed.error.issues.map((issue) => ({ field: issue.path.join('.'), message: issue.message }))), theirs: null })
-      return false
+      return null
     }
-    if (same(parsed.data, now.base)) {
-      dispatch({ type: 'edited', content: parsed.data })
-      return true
+    dispatch({ type: 'edited', content: parsed.data })
+    if (same(parsed.data, base)) return version
+    const send = async (): Promise<number | null> => {
+      dispatch({ type: 'sent', content: parsed.data })
+      try {
+        const stored = await call('saveRevision', { params: { id }, body: { content: parsed.data }, ifMatch: version })
+        dispatch({ type: 'stored', revision: stored })
+        client.setQueryData(revisionQuery(id).queryKey, stored)
+        void client.invalidateQueries({ queryKey: ['listProcedures'] })
+        return stored.version
+      } catch (error) {
+        const problem = asProblem(error)
+        dispatch({ type: 'failed', problem, theirs: await theirsOf(problem, id) })
+        return null
+      } finally {
+        flight.current = null
+      }
     }
-    dispatch({ type: 'sent', content: parsed.data })
-    try {
-      const stored = await call('saveRevision', { params: { id }, body: { content: parsed.data }, ifMatch: now.version })
-      client.setQueryData(revisionQuery(id).queryKey, stored)
-      dispatch({ type: 'stored', revision: stored })
-      void client.invalidateQueries({ queryKey: ['listProcedures'] })
-      return true
-    } catch (error) {
-      const problem = asProblem(error)
-      dispatch({ type: 'failed', problem, theirs: await theirsOf(problem, id) })
-      return false
-    }
-  }, [client, form, id])
+    flight.current = send()
+    return flight.current
+  }, [client, dispatch, form, id])
 
   const { phase, failures } = state
   useEffect(() => {
@@ -128,12 +140,12 @@ export function useDraft(revision: Revision, personId: string): Draft {
 
   // Leaving the page inside the program saves what the second had not yet reached; the copy on this device covers a failure.
   const leave = useEffectEvent(() => {
-    if (latest.current.state.phase === 'changed') void saveNow()
+    if (now.current.phase === 'changed' && !forgotten.current) void saveNow()
   })
   useEffect(() => () => leave(), [])
 
   const follow = useEffectEvent((fresh: Revision) => {
-    if (state.phase !== 'saved' || fresh.version <= state.version) return
+    if (now.current.phase !== 'saved' || fresh.version <= now.current.version) return
     dispatch({ type: 'overtaken', revision: fresh })
     replace(fresh.content)
     say('Somebody else saved a change', { detail: 'This page shows it now.' })
@@ -150,7 +162,11 @@ export function useDraft(revision: Revision, personId: string): Draft {
       dispatch({ type: 'merged', content: next })
       replace(next)
     },
-    [replace],
+    [dispatch, replace],
   )
-  return useMemo(() => ({ form, content, saving: state, saveNow, replace, merge }), [form, content, state, saveNow, replace, merge])
+  const forget = useCallback(() => {
+    forgotten.current = true
+    dropLocalCopy(personId, id)
+  }, [personId, id])
+  return useMemo(() => ({ form, content, saving: state, saveNow, forget, replace, merge }), [form, content, state, saveNow, forget, replace, merge])
 }
