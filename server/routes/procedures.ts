@@ -1,8 +1,10 @@
 import type { Router } from 'express'
-import { presentAssessment, presentProcedure, presentRevision } from '../presenters/revision.ts'
+import { presentAssessment, presentProcedure, presentRevision, presentSummary } from '../presenters/revision.ts'
 import { mailRevision } from '../services/document-mail.ts'
 import { printRevision } from '../services/documents.ts'
+import { peopleRefs } from '../services/people-refs.ts'
 import { listProcedures } from '../services/procedure-list.ts'
+import { compareRevision } from '../services/revision-comparison.ts'
 import { approveRevision, returnRevision, submitRevision, withdrawRevision } from '../services/revision-decisions.ts'
 import { assessRevision } from '../services/revision-links.ts'
 import { createProcedure, discardRevision, findRevision, readProcedure, reviseProcedure, saveRevision } from '../services/revisions.ts'
@@ -25,6 +27,11 @@ export function procedureRoutes(router: Router, services: Services): void {
   route(router, services, 'assessRevision', async ({ params, tenant }) => {
     const revision = await findRevision(tenant, params.id)
     return presentAssessment(revision, await assessRevision(tenant, revision))
+  })
+  route(router, services, 'compareRevision', async ({ params, query, tenant }) => {
+    const { from, to, changes } = await compareRevision(tenant, await findRevision(tenant, params.id), query.against)
+    const person = await peopleRefs(tenant, [to.authorId, ...(from ? [from.authorId] : [])])
+    return { from: from && presentSummary(from, person), to: presentSummary(to, person), changes }
   })
 
   route(router, services, 'submitRevision', async ({ params, ifMatch, actor, tenant }) => presentRevision(tenant, actor, await submitRevision(tenant, actor, params.id, ifMatch)))

@@ -110,15 +110,3 @@ export async function readProcedure({ organizationId, transaction }: Tenant, id:
   if (!procedure) throw notFound('procedure')
   return { procedure, revisions: await ProcedureRevision.findAll({ where: { organizationId, procedureId: id }, order: [['ordinal', 'ASC']], transaction }) }
 }
-
-/** The revision that a comparison starts from: the named one of the same procedure, else the approved one, else the one before. */
-export async function comparedWith({ organizationId, transaction }: Tenant, revision: ProcedureRevision, against: string | undefined): Promise<ProcedureRevision | null> {
-  const { procedureId } = revision
-  if (against !== undefined) {
-    const named = await ProcedureRevision.findOne({ where: { organizationId, procedureId, id: against }, transaction })
-    if (!named) throw notFound('revision of this procedure')
-    return named
-  }
-  const others = await ProcedureRevision.findAll({ where: { organizationId, procedureId }, order: [['ordinal', 'DESC']], transaction })
-  return others.find(({ state, id }) => state === 'approved' && id !== revision.id) ?? others.find(({ ordinal }) => ordinal < revision.ordinal) ?? null
-}

@@ -127,6 +127,29 @@ describe('revising', () => {
   })
 })
 
+describe('comparison', () => {
+  interface Compared { from: { id: string } | null; to: { id: string }; changes: { field: string; label: string; before: string | null; after: string | null }[] }
+  const compare = async (id: string, query: object = {}): Promise<Compared> => (await agents.supervisor.get(`/api/revisions/${id}/comparison`).query(query).expect(200)).body as Compared
+
+  it('says what changed since the approved revision, coupons by number', async () => {
+    const coupon = await certified(agents)
+    const first = await approved(agents)
+    expect(await compare(first.id)).toMatchObject({ from: null, changes: [] })
+    const next = (await agents.engineer.post(`/api/procedures/${first.procedureId}/revisions`).expect(201)).body as Revision
+    expect(await compare(next.id)).toMatchObject({ from: { id: first.id }, to: { id: next.id }, changes: [] })
+    await save(next, procedureContent({ thickness: [5, 16], supportingCoupons: [coupon.id] })).expect(200)
+    const { changes } = await compare(next.id)
+    expect(changes.find(({ field }) => field === 'thickness')).toMatchObject({ before: expect.stringContaining('20'), after: expect.stringContaining('16') })
+    expect(changes.find(({ field }) => field === 'supportingCoupons')?.after).toContain(coupon.number)
+    expect(await compare(first.id, { against: next.id })).toMatchObject({ from: { id: next.id } })
+  })
+
+  it('compares revisions of one procedure only', async () => {
+    const [one, other] = [await draft(agents), await draft(agents)]
+    await agents.engineer.get(`/api/revisions/${one.id}/comparison`).query({ against: other.id }).expect(404)
+  })
+})
+
 describe('the list', () => {
   it('shows the newest revision of each, filtered, searched and sorted', async () => {
     const own = await signInAll(app, await app.makeOrganization())
