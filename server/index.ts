@@ -29,9 +29,11 @@ async function stop(signal: string): Promise<void> {
   draining = true
   log.info({ signal }, 'stopping: no new connections, finishing what runs')
   const closed = new Promise<void>((resolve) => server.close(() => resolve()))
-  server.closeIdleConnections()
+  // A connection whose request has just ended is idle but kept alive by its browser: look again until none is left.
+  const idle = setInterval(() => server.closeIdleConnections(), 100)
   const impatience = setTimeout(() => server.closeAllConnections(), DRAIN_MILLISECONDS)
   await closed
+  clearInterval(idle)
   clearTimeout(impatience)
   await closeServices(services)
   log.info('stopped')
