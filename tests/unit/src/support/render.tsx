@@ -7,6 +7,10 @@ import { afterEach, vi } from 'vitest'
 import type { Session } from '@shared/schemas/people.ts'
 import { createQueryClient, sessionQuery } from '@/lib/query.ts'
 
+// What browsers have and jsdom lacks.
+Object.defineProperty(globalThis, 'CSS', { configurable: true, value: { escape: (text: string) => text.replace(/[^\w-]/g, (letter) => `\\${letter}`) } })
+Object.assign(Element.prototype, { setPointerCapture: () => undefined, releasePointerCapture: () => undefined, hasPointerCapture: () => false, scrollIntoView: () => undefined })
+
 afterEach(() => {
   cleanup()
   vi.unstubAllGlobals()
