@@ -1,5 +1,7 @@
 import { readFileSync } from 'node:fs'
 import { createRequire } from 'node:module'
+import PDFDocument from 'pdfkit'
+import { unpackWoff } from './woff.ts'
 
 export type Face = 'text' | 'strong' | 'head' | 'headStrong'
 type Document = PDFKit.PDFDocument
@@ -23,7 +25,7 @@ const loaded = new Map<string, Buffer>()
 function bytes(file: string): Buffer {
   const known = loaded.get(file)
   if (known) return known
-  const read = readFileSync(require.resolve(`@fontsource/${file}`))
+  const read = unpackWoff(readFileSync(require.resolve(`@fontsource/${file}`)))
   loaded.set(file, read)
   return read
 }
@@ -47,74 +49,85 @@ const parsed = (document: Document): FontKitFont => (document as unknown as { _f
 const shows = new Map<string, number>()
 const widths = new Map<string, number>()
 
-export interface Run { font: string; text: string; width: number; tabular: boolean }
+export interface Run { font: string; text: string; width: number; setting: Setting }
 
-/** Figures of one width, for columns; they widen the hyphen too, so running text goes without. */
-const TABULAR: PDFKit.Mixins.OpenTypeFeatures[] = ['tnum']
+type Setting = 'plain' | 'tabular' | 'decimal'
+type Features = PDFKit.Mixins.OpenTypeFeatures[]
+/**
+ * Tabular: figures of one width, for columns; they widen the hyphen too, so running text goes without.
+ * Decimal: kerning would pull a 1 over the point before it, so that 3.1 reads as 31. The font engine takes features to leave out as an object.
+ */
+const FEATURES: Readonly<Record<Setting, Features | undefined>> = { plain: undefined, tabular: ['tnum'], decimal: { kern: false } as unknown as Features }
+const settingOf = (text: string, tabular: boolean): Setting => (tabular ? 'tabular' : /[.,]\d/.test(text) ? 'decimal' : 'plain')
+const withFeatures = (setting: Setting) => (FEATURES[setting] ? { features: FEATURES[setting] } : {})
+
+function use(document: Document, registered: Set<string>, file: string): void {
+  if (!registered.has(file)) {
+    document.registerFont(file, bytes(file))
+    registered.add(file)
+  }
+  document.font(file)
+}
+
+/**
+ * Text is measured on a document that is never written, so that a real one opens its faces in the order in which they are drawn:
+ * the same record gives the same bytes whatever was measured before, and the parsed faces are kept.
+ */
+const ruler = { document: new PDFDocument({ autoFirstPage: false, font: null as unknown as string }), registered: new Set<string>() }
+
+function fileFor(face: Face, character: string): number {
+  const key = face + character
+  const known = shows.get(key)
+  if (known !== undefined) return known
+  const found = FILES[face].findIndex((file) => {
+    use(ruler.document, ruler.registered, file)
+    return parsed(ruler.document).hasGlyphForCodePoint(character.codePointAt(0) ?? 32)
+  })
+  shows.set(key, found)
+  return found
+}
+
+function widthAtOne(file: string, text: string, setting: Setting): number {
+  const key = `${file}|${setting}|${text}`
+  const known = widths.get(key)
+  if (known !== undefined) return known
+  use(ruler.document, ruler.registered, file)
+  const width = ruler.document.fontSize(100).widthOfString(text, withFeatures(setting)) / 100
+  if (widths.size > 40_000) widths.clear()
+  widths.set(key, width)
+  return width
+}
 
 /** The faces of one document: measuring and drawing with fallback from script to script. */
 export class Faces {
   private readonly registered = new Set<string>()
   constructor(private readonly document: Document) {}
 
-  private use(face: Face, index: number): string {
-    const file = FILES[face][index] ?? FILES[face][0]!
-    if (!this.registered.has(file)) {
-      this.document.registerFont(file, bytes(file))
-      this.registered.add(file)
-    }
-    this.document.font(file)
-    return file
-  }
-
-  private fileFor(face: Face, character: string): number {
-    const key = face + character
-    const known = shows.get(key)
-    if (known !== undefined) return known
-    let found = -1
-    for (let index = 0; index < FILES[face].length && found < 0; index += 1) {
-      this.use(face, index)
-      if (parsed(this.document).hasGlyphForCodePoint(character.codePointAt(0) ?? 32)) found = index
-    }
-    shows.set(key, found)
-    return found
-  }
-
   /** Runs of one font each, widths at size 1. A character that no face has is shown as "?" rather than lost. */
   runs(face: Face, text: string, tabular = false): Run[] {
     const runs: { index: number; text: string }[] = []
     for (const character of text) {
-      const index = this.fileFor(face, character)
+      const index = fileFor(face, character)
       const last = runs.at(-1)
       const shown = index < 0 ? '?' : character
       const at = Math.max(0, index)
       if (last?.index === at) last.text += shown
       else runs.push({ index: at, text: shown })
     }
-    return runs.map((run) => ({ font: FILES[face][run.index]!, text: run.text, tabular, width: this.width(face, run.index, run.text, tabular) }))
-  }
-
-  private width(face: Face, index: number, text: string, tabular: boolean): number {
-    const key = `${face}${index}${tabular ? '#' : '|'}${text}`
-    const known = widths.get(key)
-    if (known !== undefined) return known
-    this.use(face, index)
-    const width = this.document.fontSize(100).widthOfString(text, tabular ? { features: TABULAR } : {}) / 100
-    if (widths.size > 40_000) widths.clear()
-    widths.set(key, width)
-    return width
+    return runs.map((run) => {
+      const setting = settingOf(run.text, tabular)
+      const font = FILES[face][run.index]!
+      return { font, text: run.text, setting, width: widthAtOne(font, run.text, setting) }
+    })
   }
 
   /** Draws one line of runs with its baseline at y. */
   draw(runs: readonly Run[], x: number, baseline: number, size: number, colour: string, tracking = 0): void {
     let at = x
     for (const run of runs) {
-      if (!this.registered.has(run.font)) {
-        this.document.registerFont(run.font, bytes(run.font))
-        this.registered.add(run.font)
-      }
-      this.document.font(run.font).fontSize(size).fillColor(colour)
-      this.document.text(run.text, at, baseline, { lineBreak: false, baseline: 'alphabetic', characterSpacing: tracking, ...(run.tabular ? { features: TABULAR } : {}) })
+      use(this.document, this.registered, run.font)
+      this.document.fontSize(size).fillColor(colour)
+      this.document.text(run.text, at, baseline, { lineBreak: false, baseline: 'alphabetic', characterSpacing: tracking, ...withFeatures(run.setting) })
       at += run.width * size + tracking * run.text.length
     }
   }

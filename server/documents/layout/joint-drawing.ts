@@ -76,7 +76,7 @@ function drawPasses(pencil: Pencil): void {
   const { doc, geometry } = pencil
   geometry.passes.forEach((pass, index) => {
     const colour = (pass.layer && LAYER_COLOUR[pass.layer]) ?? PASS_COLOURS[index % PASS_COLOURS.length] ?? COLOUR.plum
-    doc.lineWidth(0.8)
+    doc.lineWidth(geometry.passes.length > 12 ? 0.3 : 0.8)
     pencil.path(pass.polygon).fillAndStroke(colour, COLOUR.white)
   })
   for (const pass of geometry.passes) {
@@ -85,6 +85,8 @@ function drawPasses(pencil: Pencil): void {
     const room = { width: Math.max(...xs) - Math.min(...xs) - 2, height: Math.max(...ys) - Math.min(...ys) }
     let style: Style = { face: 'headStrong', size: 10, colour: COLOUR.white, leading: 10 }
     while (style.size > 4 && (widthOf(pencil.faces, style, pass.number) > room.width || style.size * 0.8 > room.height)) style = { ...style, size: style.size - 0.5, leading: style.size - 0.5 }
+    // A figure too small to read is left out; the run sheet names every bead.
+    if (style.size <= 4) continue
     const { x, y } = pencil.at(pass.labelAt)
     const width = widthOf(pencil.faces, style, pass.number)
     drawLines(pencil.faces, style, setText(pencil.faces, style, pass.number, width + 1), x - width / 2, y - leadingOf(style) / 2)

@@ -59,7 +59,7 @@ export function titleBlockHeight(faces: Faces, block: TitleBlock, width: number)
 function drawStamp(doc: PDFKit.PDFDocument, faces: Faces, block: TitleBlock, x: number, y: number, width: number, height: number): void {
   const colour = COLOUR[block.stamp.tone]
   const text = block.stamp.text.toUpperCase()
-  let style: Style = { face: 'headStrong', size: 15, colour, leading: 20, tracking: 1 }
+  let style: Style = { face: 'headStrong', size: 16, colour, leading: 20 }
   while (style.size > 7 && widthOf(faces, style, text) > width - 36) style = { ...style, size: style.size - 0.5 }
   const note: Style = { face: 'text', size: 6.4, colour: COLOUR.soft, leading: 8.2 }
   const notes = setText(faces, note, block.stampNote, width - 2 * INSET).slice(0, 3)
