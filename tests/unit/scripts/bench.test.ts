@@ -31,8 +31,9 @@ describe('table', () => {
 describe('readStatement', () => {
   it.each([
     ['Executing (default): START TRANSACTION;', { text: 'START TRANSACTION;', values: [] }],
-    ['Executing (7f-1): select a\nfrom t where b = $1; ["x; [y]"]', { text: 'select a\nfrom t where b = $1', values: ['x; [y]'] }],
-    ["Executing (7f-1): select '; [1]' from t", { text: "select '; [1]' from t", values: [] }],
+    ['Executing (7f-1): select a\nfrom t where b = $1 and c = $2; "x; 1", 2', { text: 'select a\nfrom t where b = $1 and c = $2', values: ['x; 1', 2] }],
+    ["Executing (7f-1): select '; 1", { text: "select '; 1", values: [] }],
+    ["Executing (7f-1): select '; x' || $1; null", { text: "select '; x' || $1", values: [null] }],
     ['Executed (7f-1): select 1', { text: 'select 1', values: [] }],
   ])('reads %s', (line, statement) => {
     expect(readStatement(line)).toEqual(statement)
