@@ -20,4 +20,4 @@ export function openLog(env: Pick<Env, 'LOG_LEVEL'>, destination?: { write: (lin
 }
 
 /** An address without the secret that a private link carries. */
-export const withoutTokens = (url: string): string => url.replace(/\/(password-resets|invitations)\/[^/?#]+/g, '/$1/[hidden]')
+export const withoutTokens = (url: string): string => url.replace(/\/(password-resets|reset-password|invitations?)\/[^/?#]+/g, '/$1/[hidden]')

@@ -21,7 +21,7 @@ export const resetRequestJob = job({
         to: [person.email],
         subject: 'Set a new password for Sidebend',
         text: `${person.name},\n\nsomebody, probably you, asked to set a new password. This link works once, for an hour:\n\n{link}\n\nIf it was not you, do nothing: your password stays as it is.\n`,
-        link: `${baseUrl(services.env)}/reset/${token}`,
+        link: `${baseUrl(services.env)}/reset-password/${token}`,
       })
     })
   },

@@ -37,11 +37,11 @@ export async function ownRow({ organizationId, transaction }: Tenant, actor: Act
 }
 
 /**
- * Proves again that the person at the keyboard is who signed in: before a signature, and before a new password.
+ * Proves again that the person at the keyboard is who signed in: before a new password (signatures: services/signing.ts).
  * Wrong tries are counted outside the transaction, so that rolling it back does not forget them.
  * @throws HttpProblem 422 when the password is wrong; 429 after too many tries
  */
-export async function confirmPassword({ database }: Pick<Services, 'database'>, tenant: Tenant, actor: Actor, password: string, field = 'password'): Promise<void> {
+async function confirmPassword({ database }: Pick<Services, 'database'>, tenant: Tenant, actor: Actor, password: string, field = 'password'): Promise<void> {
   const person = await ownRow(tenant, actor)
   const right = await countTry(database.owner, { kind: 'confirm', email: person.email, address: '' })
   if (!(await verifyPassword(person.passwordHash, password))) {

@@ -127,7 +127,7 @@ export async function caughtMail(administrator: Agent, to: string): Promise<{ su
 
 /** The secret at the end of the link in a mail's text. */
 export function tokenIn(text: string): string {
-  const token = /\/(?:reset|invitation)\/([\w-]+)/.exec(text)?.[1]
+  const token = /\/(?:reset-password|invitation)\/([\w-]+)/.exec(text)?.[1]
   if (!token) throw new Error(`no link in: ${text}`)
   return token
 }

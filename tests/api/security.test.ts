@@ -148,12 +148,15 @@ describe('the log', () => {
     await browser.put('/api/account/password').set('Authorization', 'Bearer hidden-bearer').send({ currentPassword: PASSWORD, newPassword: secret }).expect(204)
     await browser.put(`/api/password-resets/${'t'.repeat(43)}`).send({ password: secret }).expect(410)
     await browser.get(`/api/invitations/${'u'.repeat(43)}`).expect(410)
+    await browser.get(`/reset-password/${'v'.repeat(43)}`)
+    await browser.get(`/invitation/${'v'.repeat(43)}?from=mail`)
     const log = app.logs.join('')
     const cookie = String(signedIn.headers['set-cookie']).split(';')[0]?.split('=')[1] ?? ''
     expect(cookie.length).toBeGreaterThan(20)
-    for (const hidden of [PASSWORD, secret, cookie, decodeURIComponent(cookie), 'hidden-bearer', 't'.repeat(43), 'u'.repeat(43)]) expect(log).not.toContain(hidden)
+    for (const hidden of [PASSWORD, secret, cookie, decodeURIComponent(cookie), 'hidden-bearer', 't'.repeat(43), 'u'.repeat(43), 'v'.repeat(43)]) expect(log).not.toContain(hidden)
     expect(log).toContain('log-test-0001')
     expect(log).toContain('/api/password-resets/[hidden]')
+    expect(log).toContain('/invitation/[hidden]?from=mail')
   })
 
   it('redacts secrets that somebody logs by mistake', () => {

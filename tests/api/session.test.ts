@@ -1,6 +1,7 @@
 import supertest from 'supertest'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Session } from '../../shared/schemas/people.ts'
+import { baseUrl } from '../../server/config/env.ts'
 import { LIMITS } from '../../server/services/throttle.ts'
 import { caughtMail, PASSWORD, problem, startApp, tokenIn, type TestApp, type TestOrganization } from './harness.ts'
 
@@ -167,6 +168,16 @@ describe('a forgotten password', () => {
     await elsewhere.get('/api/people').expect(401)
     await signIn(email, PASSWORD).expect(401)
     await signIn(email, NEW_PASSWORD).expect(200)
+  })
+
+  it('points links at the address set for the product, whatever Host the request claimed', async () => {
+    const own = await app.makeOrganization()
+    const { email } = own.people.engineer
+    await app.anonymous().post('/api/password-resets').set({ Host: 'elsewhere.example', 'X-Forwarded-Host': 'elsewhere.example' }).send({ email }).expect(202)
+    await app.drain()
+    const { text } = await caughtMail(await app.agentFor(own, 'administrator'), email)
+    expect(text).toMatch(new RegExp(`\\n${baseUrl(app.services.env)}/reset-password/[\\w-]{43}\\n`))
+    expect(text).not.toContain('elsewhere')
   })
 
   it('refuses a link that is too old, one that a newer has replaced, and one of another kind', async () => {
