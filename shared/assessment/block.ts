@@ -23,6 +23,8 @@ interface Run {
   sides: readonly CouponSide[]
   others: readonly AssessedCoupon[]
   out: BlockJudgement
+  /** Each coupon's range of each rule, worked out once. */
+  known: Map<Rule, Map<CouponSide, RuleRange | null>>
 }
 
 /** Sides of a coupon for a block: its blocks of the same process, or the weld as a whole. */
@@ -42,7 +44,7 @@ export function judgeBlock(standard: Standard, prepared: PreparedEdition, contex
   const out: BlockJudgement = { findings: [], ranges: [] }
   const rules = rulesFor(standard, prepared, context)
   if (rules.length === 0) return out
-  const run: Run = { standard, context, sides: sidesOf(standard, context.coupons, context), others, out }
+  const run: Run = { standard, context, sides: sidesOf(standard, context.coupons, context), others, out, known: new Map() }
   const each: Item[] = []
   const joint: Item[] = []
   const union: Item[] = []
@@ -69,7 +71,19 @@ function rulesFor(standard: Standard, prepared: PreparedEdition, context: RuleCo
   return rules
 }
 
-const rangeOf = (run: Run, rule: Rule, side: CouponSide): RuleRange | null => rule.range(run.context, side)
+function rangeOf(run: Run, rule: Rule, side: CouponSide): RuleRange | null {
+  let row = run.known.get(rule)
+  if (!row) {
+    row = new Map<CouponSide, RuleRange | null>()
+    run.known.set(rule, row)
+  }
+  let range = row.get(side)
+  if (range === undefined) {
+    range = rule.range(run.context, side)
+    row.set(side, range)
+  }
+  return range
+}
 
 interface Single { range: RuleRange | null; judged: Judged }
 

@@ -1,9 +1,8 @@
 /** Whether test results are accepted: tension QW-153, guided bends QW-163, macro sections of fillets QW-183, bend former QW-466.1. */
 import type { TestVerdict } from '../../schemas/assessment.ts'
 import type { BendTest, CouponContent, TensionTest, WeldingVariables } from '../../schemas/welding.ts'
-import { settle } from '../../units/convert.ts'
 import type { UnitSystem } from '../../units/types.ts'
-import { figure, figureOrNull, unitOf } from '../common/reading.ts'
+import { figure, figureOrNull, tidy, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
 import { pFamily, pNumber, pNumbers, secondMetal } from './members.ts'
 import { FIGURES } from './ranges.ts'
@@ -20,7 +19,7 @@ export function specimenArea(test: TensionTest): number | null {
 /** Stress from maximum load and least area, MPa; null when a figure is missing. */
 export function computedStress(test: TensionTest): number | null {
   const area = specimenArea(test)
-  return area === null || !test.load || test.load.si < 0 ? null : settle((test.load.si * 1000) / area)
+  return area === null || !test.load || test.load.si < 0 ? null : tidy((test.load.si * 1000) / area)
 }
 
 /** Specified minimum tensile strength that counts: of the weaker metal, MPa; null when one isn't recorded. */
@@ -42,14 +41,14 @@ export function judgeTension(test: TensionTest, variables: WeldingVariables): Te
   const base = { testId: test.id, specimen: test.specimen, clause: 'QW-153.1', basis: 'read' as const }
   const computed = computedStress(test)
   const stress = computed ?? test.reportedStrength?.si ?? null
-  const shown = computed === null ? null : { label: 'Stress from load and area', value: settle(figure({ si: computed, unit: 'MPa', typed: '' }, 'stress', system)), unit: unitOf('stress', system) }
+  const shown = computed === null ? null : { label: 'Stress from load and area', value: tidy(figure({ si: computed, unit: 'MPa', typed: '' }, 'stress', system)), unit: unitOf('stress', system) }
   const minimum = requiredStrength(variables)
   const cannot = (sentence: string): TestVerdict => ({ ...base, verdict: 'cannot-tell', sentence, computed: shown })
   if (stress === null) return cannot(`${test.specimen} has neither load and size nor a reported strength.`)
   if (minimum === null) return cannot(`${test.specimen} reached ${stressText(stress, system)}, but the specified minimum strength of the base metal isn't recorded.`)
   const from = computed === null ? 'as reported' : 'from load and area'
   if (stress >= minimum) return { ...base, verdict: 'pass', sentence: `${test.specimen} reached ${stressText(stress, system)} (${from}); at least ${stressText(minimum, system)} is required.`, computed: shown }
-  const floor = settle(BASE_METAL_BREAK * minimum)
+  const floor = tidy(BASE_METAL_BREAK * minimum)
   if (stress >= floor) {
     if (test.fracture === null) return cannot(`${test.specimen} reached ${stressText(stress, system)}, under the ${stressText(minimum, system)} required; it passes only if it broke in the base metal, and where it broke isn't recorded.`)
     // Outside weld and interface: only a break in the base metal is surely that.
@@ -91,7 +90,7 @@ export function judgeMacro(test: CouponContent['macros'][number], variables: Wel
   const base = { testId: test.id, specimen: test.specimen, clause: 'QW-183', basis: 'memory' as const }
   const leg1 = figureOrNull(test.leg1, 'length', system)
   const leg2 = figureOrNull(test.leg2, 'length', system)
-  const apart = leg1 === null || leg2 === null ? null : settle(Math.abs(leg1 - leg2))
+  const apart = leg1 === null || leg2 === null ? null : tidy(Math.abs(leg1 - leg2))
   const computed = apart === null ? null : { label: 'Difference of leg lengths', value: apart, unit }
   if (test.cracks === true) return { ...base, computed, verdict: 'fail', sentence: `${test.specimen} shows a crack.` }
   if (test.fusionComplete === false) return { ...base, computed, verdict: 'fail', sentence: `${test.specimen} shows incomplete fusion.` }
@@ -113,14 +112,14 @@ export function formerDiameter(t: number, variables: WeldingVariables, fNumbers:
   const within = (low: number, high: number): boolean => p.some((one) => pFamily(one) >= low && pFamily(one) <= high)
   const a = pNumber(variables.baseMetals.a)
   const aluminium = within(21, 25)
-  const factor = (value: number, how: string): { diameter: number; how: string; maximum: boolean } => ({ diameter: settle(value * t), how, maximum: false })
+  const factor = (value: number, how: string): { diameter: number; how: string; maximum: boolean } => ({ diameter: tidy(value * t), how, maximum: false })
   if ((has('23') && aluminium) || (aluminium && fNumbers.includes('23')) || has('35') || fNumbers.some((f) => f === '33' || f === '36' || f === '37')) return factor(16.5, '16 1/2 t')
   if (p.some((one) => pFamily(one) === 11) || (a === '25' && within(21, 25)) || has('25')) return factor(20 / 3, '6 2/3 t')
   if (has('52', '53', '61', '62')) return factor(10, '10 t')
   if (has('49', '51')) return factor(8, '8 t')
   if (elongation !== null && elongation < 20) {
     if (elongation < 3) return null
-    return { diameter: settle((t * (100 - elongation)) / elongation), how: 't (100 - e) / e', maximum: true }
+    return { diameter: tidy((t * (100 - elongation)) / elongation), how: 't (100 - e) / e', maximum: true }
   }
   return factor(4, '4 t')
 }

@@ -5,9 +5,8 @@
 import { between, closed, intersectNumeric, UNLIMITED, unknownNumeric } from '../../ranges/numeric.ts'
 import type { Basis, NumericRange } from '../../schemas/assessment.ts'
 import type { Process, ProcessBlock, WeldingVariables } from '../../schemas/welding.ts'
-import { settle } from '../../units/convert.ts'
 import type { UnitSystem } from '../../units/types.ts'
-import { figureOrNull, figures, isStated, single, unitOf } from '../common/reading.ts'
+import { figureOrNull, figures, isStated, single, tidy, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
 import type { CouponSide, RangeContext } from '../rule.ts'
 import { pNumber, secondMetal } from './members.ts'
@@ -46,7 +45,7 @@ export const isLongitudinal = (side: Pick<CouponSide, 'coupon'>): boolean => {
 export function baseMetalLimit(T: number, process: Process, system: UnitSystem, longitudinal = false): Limit {
   const f = FIGURES[system]
   const unit = unitOf('length', system)
-  const twice = settle(2 * T)
+  const twice = 2 * T
   const clause = longitudinal ? 'QW-451.2' : 'QW-451.1'
   const basis: Basis = longitudinal ? 'memory' : 'read'
   if (T < f.thin) return { lower: T, upper: twice, how: { lower: 'T', upper: '2T' }, clause, basis }
@@ -56,14 +55,14 @@ export function baseMetalLimit(T: number, process: Process, system: UnitSystem, 
   if (T <= f.heavy) {
     return NOTE_3.has(process) ? { lower, upper: f.thickMax, how: { lower: band, upper: `for T from ${show(f.thick, unit)}` }, clause, basis } : { lower, upper: twice, how: { lower: band, upper: '2T' }, clause, basis }
   }
-  return { lower, upper: settle(1.33 * T), how: { lower: band, upper: '1.33T' }, clause, basis }
+  return { lower, upper: tidy(1.33 * T), how: { lower: band, upper: '1.33T' }, clause, basis }
 }
 
 /** Deposit limit of one process in the same tables. @param t deposit of the process in the coupon */
 export function depositLimit(T: number, t: number, process: Process, system: UnitSystem, longitudinal = false): Limit {
   const f = FIGURES[system]
   const table = longitudinal ? ({ clause: 'QW-451.2', basis: 'memory' } as const) : ({ clause: 'QW-451.1', basis: 'read' } as const)
-  const twiceDeposit: Limit = { lower: null, upper: settle(2 * t), how: { lower: null, upper: '2t' }, ...table }
+  const twiceDeposit: Limit = { lower: null, upper: 2 * t, how: { lower: null, upper: '2t' }, ...table }
   if (longitudinal || T < f.sideBends || t < f.sideBends) return twiceDeposit
   const base = baseMetalLimit(T, process, system)
   return { lower: null, upper: base.upper, how: { lower: null, upper: base.how.upper }, ...table }
@@ -104,7 +103,7 @@ export function exemptByHeatTreatment(variables: WeldingVariables): boolean | nu
 /** Floor of QW-403.6 for a toughness coupon of thickness T. */
 export function toughnessFloor(T: number, system: UnitSystem): number {
   const f = FIGURES[system]
-  return T < f.toughnessHalf ? settle(T / 2) : Math.min(T, f.toughness)
+  return T < f.toughnessHalf ? T / 2 : Math.min(T, f.toughness)
 }
 
 const length = (system: UnitSystem, lower: number | null, upper: number | null): NumericRange =>
@@ -150,7 +149,7 @@ export function baseMetalSpan(context: RangeContext, side: CouponSide, member: M
   const steps = [`T = ${show(T, unit)} gives ${show(limit.lower ?? 0, unit)} to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`]
   const upperUnknown = narrow(context, block, T, span, steps)
   lift(context, side, T, member, span, steps)
-  span.range = upperUnknown ? uncertainAbove(system, span.lower ?? 0, settle(1.1 * T), span.upper) : length(system, span.lower, span.upper)
+  span.range = upperUnknown ? uncertainAbove(system, span.lower ?? 0, tidy(1.1 * T), span.upper) : length(system, span.lower, span.upper)
   span.reason = steps.join(' ')
   return span
 }
@@ -167,7 +166,7 @@ function narrow(context: RangeContext, block: ProcessBlock, T: number, span: Bas
   const { system } = context
   const unit = unitOf('length', system)
   const cut = (clause: string, why: string): void => {
-    const upper = settle(1.1 * T)
+    const upper = tidy(1.1 * T)
     if (span.upper !== null && span.upper <= upper) return
     span.upper = upper
     span.how.upper = '1.1T'
@@ -183,7 +182,7 @@ function narrow(context: RangeContext, block: ProcessBlock, T: number, span: Bas
   else if (asked === true) cut('QW-403.9', `The procedure allows a pass thicker than ${show(FIGURES[system].pass, unit)}`)
   else if (own === null || asked === null) {
     span.missing.push(own === null ? 'coupon: maxPassThickness' : 'procedure: maxPassThickness')
-    steps.push(`Whether a pass is thicker than ${show(FIGURES[system].pass, unit)} isn't recorded, so above ${show(settle(1.1 * T), unit)} (1.1T) it can't be told (QW-403.9).`)
+    steps.push(`Whether a pass is thicker than ${show(FIGURES[system].pass, unit)} isn't recorded, so above ${show(tidy(1.1 * T), unit)} (1.1T) it can't be told (QW-403.9).`)
     return true
   }
   return false

@@ -1,7 +1,7 @@
 /** Reads figures and names out of a record for the rules. What contradicts itself reads as "not known". */
 import type { Interval, Quantity } from '../../schemas/common.ts'
 import type { GasMixture } from '../../schemas/welding.ts'
-import { inSystem, settle, SHOWN_UNIT } from '../../units/convert.ts'
+import { SHOWN_UNIT, UNITS } from '../../units/convert.ts'
 import type { Dimension, UnitSystem } from '../../units/types.ts'
 
 export interface Figures {
@@ -16,8 +16,18 @@ export interface Figures {
 const NONE: Figures = { min: null, max: null, all: false, fault: false }
 const FAULT: Figures = { min: null, max: null, all: false, fault: true }
 
+/** Nine decimals: takes the last-bit noise off a product, so that 1.1 × 8 is 8.8 at a boundary. Quicker than by digits. */
+export const tidy = (value: number): number => Math.round(value * 1e9) / 1e9
+
+/** A storage figure in the unit of `system`; SI is how it is stored. */
+export function inUnitOf(si: number, dimension: Dimension, system: UnitSystem): number {
+  if (system === 'SI') return si
+  const unit = UNITS[dimension][SHOWN_UNIT.US[dimension]]
+  return unit ? tidy((si - (unit.offset ?? 0)) / unit.factor) : si
+}
+
 /** A quantity as the figure that a rule of `system` compares. */
-export const figure = (quantity: Quantity, dimension: Dimension, system: UnitSystem): number => (system === 'SI' ? settle(quantity.si) : inSystem(quantity, dimension, system))
+export const figure = (quantity: Quantity, dimension: Dimension, system: UnitSystem): number => inUnitOf(quantity.si, dimension, system)
 
 export const figureOrNull = (quantity: Quantity | null | undefined, dimension: Dimension, system: UnitSystem): number | null => (quantity ? figure(quantity, dimension, system) : null)
 

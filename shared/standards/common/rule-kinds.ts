@@ -1,5 +1,5 @@
 /** The two shapes that most variables have: a name that must be covered, and a figure that must lie inside a range. */
-import { containsInterval, nearest } from '../../ranges/numeric.ts'
+import { containsInterval, nearest, outerEnds } from '../../ranges/numeric.ts'
 import { containsNames, setRange, UNKNOWN_SET } from '../../ranges/set.ts'
 import type { Basis, Fix, NumericRange, QualifiedSpan } from '../../schemas/assessment.ts'
 import { quantity } from '../../units/convert.ts'
@@ -54,12 +54,15 @@ export function namedRule(spec: NamedSpec): Rule {
       const field = pathOf(context, spec)
       const asked = spec.asked(context)
       if (asked === null || asked.length === 0) return notStated(spec.label, field, { range: joined })
-      if (joined === null) return null
+      if (joined === null) return isStatedOnly(spec.meta, context) ? { verdict: 'within', sentence: `The procedure states the ${spec.label}; without toughness no coupon limits it.`, asked: [...asked], range: null, tested: [] } : null
       return judgeNames({ spec, display, field, context, sides, joined, asked })
     },
   }
   return rule
 }
+
+/** A dual variable without toughness: nonessential, so the procedure only has to state it. */
+const isStatedOnly = (meta: RuleMeta, context: RuleContext): boolean => context.toughness === false && !!context.block?.process && meta.classes[context.block.process] === 'dual'
 
 interface NamesAsked { spec: NamedSpec; display: (name: string) => string; field: string; context: RuleContext; sides: readonly CouponSide[]; joined: QualifiedSpan; asked: readonly string[] }
 
@@ -140,7 +143,8 @@ function judgeFigures(spec: FigureSpec, context: RuleContext, sides: readonly Co
   const ends = spec.ends ?? { min: '.min', max: '.max' }
   for (const end of wrong) {
     const value = asked[end]
-    const better = nearest(joined, value ?? (end === 'max' ? Number.MAX_VALUE : -Number.MAX_VALUE))
+    const outer = outerEnds(joined)[end === 'max' ? 'upper' : 'lower']
+    const better = value === null ? ('value' in outer ? outer.value : null) : nearest(joined, value)
     if (better !== null) fixes.push({ kind: 'set', label: `Set ${spec.label}${asked.min === asked.max || !spec.ends ? '' : ` ${end === 'min' ? 'minimum' : 'maximum'}`} to ${show(better, joined.unit)}`, field: `${field}${ends[end]}`, value: quantity(better, spec.dimension, joined.unit) })
   }
   fixes.push({ kind: 'plan-coupon', label: 'Weld a coupon that covers it', requirement: spec.plan ? spec.plan(asked, context) : `A coupon that qualifies ${spec.label} ${showAsked(asked, joined.unit)}.` })

@@ -1,7 +1,6 @@
 /** QW-404.30: deposited weld metal of each process within the t limit of QW-451. */
-import { settle } from '../../../units/convert.ts'
 import { containsInterval } from '../../../ranges/numeric.ts'
-import { figures, single } from '../../common/reading.ts'
+import { figures, single, tidy } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, RuleContext } from '../../rule.ts'
@@ -29,12 +28,12 @@ export function deposit(context: RangeContext, side: CouponSide): (Limit & { t: 
   const limit = depositLimit(T, t, block.process, system, isLongitudinal(side))
   const first = `t = ${show(t, unit)} of a ${show(T, unit)} coupon gives up to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`
   if (shortCircuitBinds(context.edition, block) && t < FIGURES[system].pass) {
-    const upper = settle(1.1 * t)
+    const upper = tidy(1.1 * t)
     return { ...limit, upper, how: { lower: null, upper: '1.1t' }, clause: 'QW-404.32', basis: 'secondary', t, T, reason: `${first} Short-circuiting transfer holds it to ${show(upper, unit)} (1.1t) by QW-404.32.` }
   }
   // Beyond the coupon's own base metal range the root exception allows 2t and no more.
   const asked = context.procedure ? askedThickness({ ...context, procedure: context.procedure, path: '' }, 'a') : null
-  const twice = settle(2 * t)
+  const twice = 2 * t
   if (asked && asked !== 'fault' && (limit.upper ?? 0) > twice && rootException(context, side, T)) {
     const own = baseMetalLimit(T, block.process, system)
     if (containsInterval(lengthRange(system, own.lower, own.upper), asked) !== 'within') return { ...limit, upper: twice, how: { lower: null, upper: '2t' }, clause: 'QW-200.4(b)', basis: 'secondary', t, T, reason: `${first} As root layers on thicker metal: ${show(twice, unit)} (2t) by QW-200.4(b).` }

@@ -3,9 +3,8 @@ import { heatInputInstantaneous, heatInputMeter } from '../../../calculations/he
 import { between, closed, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
 import type { CouponContent, Electrical, RunRow } from '../../../schemas/welding.ts'
 import type { Interval } from '../../../schemas/common.ts'
-import { fromSi } from '../../../units/convert.ts'
 import type { UnitSystem } from '../../../units/types.ts'
-import { figures, unitOf } from '../../common/reading.ts'
+import { figures, inUnitOf, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, Rule } from '../../rule.ts'
@@ -22,7 +21,7 @@ function waveform(electrical: Electrical): boolean | null {
 
 const isInstantaneous = (electrical: Electrical): boolean => electrical.heatInputMethod === 'instantaneous-energy' || electrical.heatInputMethod === 'instantaneous-power'
 
-const shownUnit = (kJmm: number, system: UnitSystem): number => fromSi(kJmm, 'heatInput', unitOf('heatInput', system))
+const shownUnit = (kJmm: number, system: UnitSystem): number => tidy(inUnitOf(kJmm, 'heatInput', system))
 
 /** The largest heat input that the procedure lets happen, in the judging system. */
 function asked(electrical: Electrical, system: UnitSystem): Known {

@@ -1,7 +1,6 @@
 /** QW-406.3: with toughness the highest interpass temperature may rise by 55 °C (100 °F) above the coupon's, and no more. */
 import { between, closed, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
-import { settle } from '../../../units/convert.ts'
-import { figureOrNull, unitOf } from '../../common/reading.ts'
+import { figureOrNull, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
@@ -25,7 +24,7 @@ export const interpass = figureRule({
     const had = figureOrNull(side.variables.preheat.interpassMaximum, 'temperature', system)
     if (exemptByHeatTreatment(side.variables) === true) return { range: between('temperature', unit, UNLIMITED, UNLIMITED), tested: had, reason: 'The heat treatment after welding lifts the interpass limit.' }
     if (had === null) return { range: unknownNumeric('temperature', unit), tested: null, reason: `${side.coupon.number} has no interpass temperature recorded.`, missing: [`${side.coupon.number}: preheat.interpassMaximum`] }
-    const highest = settle(had + TEMPERATURE_STEP[system])
+    const highest = tidy(had + TEMPERATURE_STEP[system])
     return { range: between('temperature', unit, UNLIMITED, closed(highest)), tested: had, reason: `${show(had, unit)} plus ${TEMPERATURE_STEP[system]} gives ${show(highest, unit)} as the highest interpass temperature.` }
   },
   how(context, side) {

@@ -1,8 +1,8 @@
 /** QW-403.9: a pass over 13 mm (1/2 in.), in the coupon or in the procedure, holds the base metal to 1.1 T. */
 import { between, closed, UNKNOWN, UNLIMITED } from '../../../ranges/numeric.ts'
 import type { NumericRange } from '../../../schemas/assessment.ts'
-import { quantity, settle } from '../../../units/convert.ts'
-import { figures, single } from '../../common/reading.ts'
+import { quantity } from '../../../units/convert.ts'
+import { figures, single, tidy } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext } from '../../rule.ts'
@@ -43,7 +43,7 @@ const base = figureRule({
     const limit = show(FIGURES[system].pass, unit)
     const { T, coupon, procedure } = passes(context, side)
     if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
-    const narrow = settle(1.1 * T)
+    const narrow = tidy(1.1 * T)
     const tested = single({ min: side.block?.maxPassThickness ?? null, max: null, all: false }, 'length', system)
     if (coupon === true || procedure === true) return { range: lengthRange(system, 0, narrow), tested, reason: `${coupon ? `A pass of the coupon is thicker than ${limit}` : `The procedure allows passes thicker than ${limit}`}, so the base metal may be ${show(narrow, unit)} (1.1T) at most.` }
     if (coupon === false && procedure === false) return { range: between('length', unit, closed(0), UNLIMITED), tested, reason: `No pass is thicker than ${limit}, so this clause sets no limit.` }

@@ -1,7 +1,6 @@
 /** QW-406.1: preheat may fall by 55 °C (100 °F) below the coupon's, and no more. */
 import { between, closed, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
-import { settle } from '../../../units/convert.ts'
-import { figureOrNull, unitOf } from '../../common/reading.ts'
+import { figureOrNull, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
@@ -25,7 +24,7 @@ export const preheat = figureRule({
     const unit = unitOf('temperature', system)
     const had = figureOrNull(side.variables.preheat.minimum, 'temperature', system)
     if (had === null) return { range: unknownNumeric('temperature', unit), tested: null, reason: `${side.coupon.number} has no preheat recorded.`, missing: [`${side.coupon.number}: preheat.minimum`] }
-    const lowest = settle(had - TEMPERATURE_STEP[system])
+    const lowest = tidy(had - TEMPERATURE_STEP[system])
     return { range: between('temperature', unit, closed(lowest), UNLIMITED), tested: had, reason: `${show(had, unit)} less ${TEMPERATURE_STEP[system]} gives ${show(lowest, unit)} as the lowest preheat.`, basis: 'read' }
   },
   how(context, side) {

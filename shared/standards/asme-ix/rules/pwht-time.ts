@@ -1,7 +1,6 @@
 /** QW-407.2: with toughness, the coupon had the temperature range and at least 80 % of the production time at temperature. */
 import { between, closed, containsInterval, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
-import { settle } from '../../../units/convert.ts'
-import { figures, unitOf } from '../../common/reading.ts'
+import { figures, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
@@ -26,7 +25,7 @@ const base = figureRule({
     // The least time that was surely given counts.
     const had = time.min ?? time.max
     if (had === null) return { range: unknownNumeric('time', 'min'), tested: null, reason: `${side.coupon.number} has no time at temperature recorded.`, missing: [`${side.coupon.number}: pwht.time`] }
-    const longest = settle(had / 0.8)
+    const longest = tidy(had / 0.8)
     return { range: between('time', 'min', UNLIMITED, closed(longest)), tested: had, reason: `${show(had, 'min')} is 80 % of ${show(longest, 'min')}, the longest production time.` }
   },
   how: (context, side) => ({ how: 'time / 0.80', coupon: `${show(figures(side.variables.pwht.time, 'time', context.system).min ?? 0, 'min')} treatment` }),

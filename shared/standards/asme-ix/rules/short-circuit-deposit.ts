@@ -1,6 +1,5 @@
 /** QW-404.32, editions to 2019: a short-circuiting deposit under 13 mm (1/2 in.) holds the deposit to 1.1 t. */
-import { settle } from '../../../units/convert.ts'
-import { single } from '../../common/reading.ts'
+import { single, tidy } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
@@ -23,7 +22,7 @@ export const shortCircuitDeposit = figureRule({
     if (t === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no deposit thickness recorded.`, missing: [`${side.coupon.number}: depositThickness`] }
     const limit = show(FIGURES[system].pass, unit)
     if (t >= FIGURES[system].pass) return { range: lengthRange(system, 0, null), tested: t, reason: `A deposit of ${limit} or more has no limit by this clause.` }
-    return { range: lengthRange(system, 0, settle(1.1 * t)), tested: t, reason: `Short-circuiting deposit under ${limit}: ${show(settle(1.1 * t), unit)} (1.1t) at most.` }
+    return { range: lengthRange(system, 0, tidy(1.1 * t)), tested: t, reason: `Short-circuiting deposit under ${limit}: ${show(tidy(1.1 * t), unit)} (1.1t) at most.` }
   },
   how: (context, side) => ({ how: '1.1t, short-circuiting', coupon: `${show(single(side.block?.depositThickness, 'length', context.system) ?? 0, context.system === 'SI' ? 'mm' : 'in')} deposit` }),
 })

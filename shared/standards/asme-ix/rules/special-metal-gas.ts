@@ -1,7 +1,6 @@
 /** QW-408.9 and QW-408.10: backing and trailing gas of metals that air harms may not be dropped or lose its inertness. */
 import type { GasMixture, WeldingVariables } from '../../../schemas/welding.ts'
-import { settle } from '../../../units/convert.ts'
-import { figures, isInert, isNoGas, unitOf } from '../../common/reading.ts'
+import { figures, isInert, isNoGas, tidy, unitOf } from '../../common/reading.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
@@ -69,7 +68,7 @@ export const trailingGasSpecial: Rule = {
       const coupon = figures(gas.flow, 'gasFlow', context.system)
       const had = coupon.max ?? coupon.min
       if (asked === null || had === null) return { ...judged, verdict: 'cannot-tell', sentence: "The trailing gas flow isn't recorded on both sides.", field, missing: [...(asked === null ? ['procedure: trailingGas.flow'] : []), ...(had === null ? [`${side.coupon.number}: trailingGas.flow`] : [])] }
-      if (asked <= settle(0.9 * had)) return { ...judged, verdict: 'outside', sentence: `A trailing gas flow of ${show(asked, unit)} is 10 % or more below the ${show(had, unit)} of ${side.coupon.number}.`, field, fixes: [{ kind: 'plan-coupon', label: 'Weld a coupon with that flow', requirement: `A coupon with a trailing gas flow of ${show(asked, unit)}.` }] }
+      if (asked <= tidy(0.9 * had)) return { ...judged, verdict: 'outside', sentence: `A trailing gas flow of ${show(asked, unit)} is 10 % or more below the ${show(had, unit)} of ${side.coupon.number}.`, field, fixes: [{ kind: 'plan-coupon', label: 'Weld a coupon with that flow', requirement: `A coupon with a trailing gas flow of ${show(asked, unit)}.` }] }
     }
     return judged
   },

@@ -1,6 +1,6 @@
 /** QW-404.24: supplemental filler added, removed, or its volume changed by more than 10 %. */
 import { between, closed, containsValue } from '../../../ranges/numeric.ts'
-import { settle } from '../../../units/convert.ts'
+import { tidy } from '../../common/reading.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
@@ -33,7 +33,7 @@ export const supplementalFiller: Rule = {
     if (!asked || lacking.length > 0) return { verdict: 'cannot-tell', sentence: "The volume of supplemental filler isn't recorded on both sides, so a change of more than 10 % can't be ruled out.", asked: null, range: null, field, missing: lacking, fixes: asked ? [] : [{ kind: 'state', label: 'State the volume of supplemental filler', field }] }
     for (const side of sides) {
       const had = side.block?.filler.supplementalVolume?.si ?? 0
-      const range = between('percent', '%', closed(settle(0.9 * had)), closed(settle(1.1 * had)))
+      const range = between('percent', '%', closed(tidy(0.9 * had)), closed(tidy(1.1 * had)))
       if (containsValue(range, asked.si) === 'within') continue
       return { verdict: 'outside', sentence: `Supplemental filler of ${show(asked.si, '%')} differs by more than 10 % from the ${show(had, '%')} of ${side.coupon.number}.`, asked: { min: asked.si, max: asked.si }, range, tested: [had], field, fixes: [{ kind: 'plan-coupon', label: 'Weld a coupon with that volume', requirement: `A coupon with ${show(asked.si, '%')} supplemental filler.` }] }
     }
