@@ -78,13 +78,14 @@ export const qualificationsOf = (coupon: Coupon): CouponQualification[] =>
 
 type FieldError = { field: string; message: string }
 
-/** Everything that stands in the way of certification: what is missing and results that do not pass. */
+/** Everything that stands in the way of certification: what is missing, and results that do not pass unless that is said already. */
 export function obstacles(qualifications: readonly CouponQualification[]): FieldError[] {
-  const found = qualifications.flatMap(({ missing, results }) => [
-    ...missing.map(({ field, message }) => ({ field, message })),
-    ...results.filter(({ verdict }) => verdict !== 'pass').map(({ testId, sentence }) => ({ field: `tests.${testId}`, message: sentence })),
-  ])
-  return [...new Map(found.map((one) => [`${one.field} ${one.message}`, one])).values()].map(({ field, message }) => ({ field: field === '' ? 'content' : `content.${field}`, message }))
+  const found = new Map<string, FieldError>()
+  for (const { missing, results } of qualifications) {
+    for (const { field, message } of missing) if (!found.has(message)) found.set(message, { field: field === '' ? 'content' : `content.${field}`, message })
+    for (const { testId, verdict, sentence } of results) if (verdict !== 'pass' && !found.has(sentence)) found.set(sentence, { field: `content.tests.${testId}`, message: sentence })
+  }
+  return [...found.values()]
 }
 
 async function couponForAct(tenant: Tenant, actor: Actor, id: string, version: number, act: string): Promise<Coupon> {
