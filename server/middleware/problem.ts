@@ -1,5 +1,5 @@
 import type { ErrorRequestHandler } from 'express'
-import { BaseError, ForeignKeyConstraintError, UniqueConstraintError } from 'sequelize'
+import { BaseError, ConnectionError, ForeignKeyConstraintError, UniqueConstraintError } from 'sequelize'
 import { ZodError } from 'zod'
 import type { Problem } from '../../shared/schemas/common.ts'
 
@@ -75,6 +75,11 @@ const databaseProblems: Record<string, HttpProblem> = {
   '40P01': conflict('Two changes met. Try once more.'),
 }
 
+/** The database is away or will not take another connection: nobody's request is wrong, and a moment later it may work. */
+const databaseAway = new Set(['ECONNREFUSED', 'ECONNRESET', 'EPIPE', 'ETIMEDOUT', '53300', '57P01', '57P02', '57P03', '08000', '08001', '08003', '08006'])
+const isDatabaseAway = (error: unknown): boolean => error instanceof ConnectionError || databaseAway.has(codeOf(error)) || (error instanceof Error && /^Connection terminated|^Client has encountered a connection error/.test(error.message))
+const unavailable = () => new HttpProblem(503, 'The database does not answer', 'Wait a moment and try again; what you typed is kept on this page.', { retryAfter: 5 })
+
 /** Turns whatever was thrown into a problem; unknown errors become a 500 that says nothing of the inside. */
 export function problemOf(error: unknown): HttpProblem {
   if (error instanceof HttpProblem) return error
@@ -84,6 +89,7 @@ export function problemOf(error: unknown): HttpProblem {
   const known = databaseProblems[codeOf(error)]
   if (known) return known
   if (codeOf(error) === 'SB001') return conflict((error as Error).message)
+  if (isDatabaseAway(error)) return unavailable()
   if (error instanceof BaseError) return new HttpProblem(500, 'Something went wrong', 'The fault is ours and has been logged. Nothing was saved; try again.')
   const { type, status } = error as { type?: unknown; status?: unknown }
   const parsed = typeof type === 'string' ? bodyParserTypes[type] : undefined

@@ -2,6 +2,7 @@ import type { oas31 } from 'zod-openapi'
 
 type Schema = oas31.SchemaObject | oas31.ReferenceObject
 type Document = oas31.OpenAPIObject
+type Named = Readonly<Record<string, Schema>>
 
 const escapes: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' }
 const escaped = (text: string): string => text.replace(/[&<>"']/g, (c) => escapes[c] ?? c)
@@ -29,32 +30,36 @@ function typeOf(schema: Schema | undefined): string {
   return limits.length > 0 ? `${kind} (${escaped(limits.join(', '))})` : kind
 }
 
-/** The fields of an object schema as rows; anything else as one line. */
-function fieldsOf(schema: Schema | undefined): string {
+/** Words with `code` in them. */
+const prose = (text: string): string => escaped(text).replace(/`([^`]*)`/g, '<code>$1</code>')
+
+/** The fields of an object schema as rows; anything else as one line. A named schema gives its name and its fields. */
+function fieldsOf(schema: Schema | undefined, named: Named): string {
+  if (schema && '$ref' in schema && schema.$ref) return `<p class="type">${link(schema.$ref)}</p>${fieldsOf(named[nameOf(schema.$ref)], {})}`
   const s = schema as oas31.SchemaObject | undefined
   if (!s || !('properties' in s) || !s.properties) return `<p class="type">${typeOf(schema)}</p>`
   const rows = Object.entries(s.properties).map(([name, inner]) => `<tr><th scope="row">${escaped(name)}</th><td>${s.required?.includes(name) ? '' : 'optional'}</td><td class="type">${typeOf(inner)}</td></tr>`)
   return `<table><thead><tr><th scope="col">field</th><th scope="col"></th><th scope="col">value</th></tr></thead><tbody>${rows.join('')}</tbody></table>`
 }
 
-const contentOf = (content: oas31.ContentObject | undefined): string =>
-  Object.entries(content ?? {}).map(([mediaType, { schema }]) => `<p><code>${escaped(mediaType)}</code></p>${fieldsOf(schema)}`).join('')
+const contentOf = (content: oas31.ContentObject | undefined, named: Named): string =>
+  Object.entries(content ?? {}).map(([mediaType, { schema }]) => `<p><code>${escaped(mediaType)}</code></p>${fieldsOf(schema, named)}`).join('')
 
-function operationHtml(method: string, path: string, operation: oas31.OperationObject): string {
+function operationHtml(method: string, path: string, operation: oas31.OperationObject, named: Named): string {
   const parameters = ((operation.parameters ?? []) as oas31.ParameterObject[]).map(
     (p) => `<tr><th scope="row">${escaped(p.name)}</th><td>${p.in}${p.required ? '' : ', optional'}</td><td class="type">${typeOf(p.schema)}</td></tr>`,
   )
   const body = operation.requestBody as oas31.RequestBodyObject | undefined
   const responses = Object.entries(operation.responses ?? {}).map(([status, response]: [string, oas31.ResponseObject]) => {
     const succeeds = status.startsWith('2')
-    return `<dt>${status}</dt><dd>${escaped(response.description)}${succeeds ? contentOf(response.content) : ''}</dd>`
+    return `<dt>${status}</dt><dd>${prose(response.description)}${succeeds ? contentOf(response.content, named) : ''}</dd>`
   })
   const open = (operation.security ?? []).length === 0
-  return `<details id="${escaped(operation.operationId ?? '')}"><summary><b>${method.toUpperCase()}</b> <code>${escaped(path)}</code> <span>${escaped(operation.summary ?? '')}</span></summary>
+  return `<details><summary><b>${method.toUpperCase()}</b> <code>${escaped(path)}</code> <span>${escaped(operation.summary ?? '')}</span></summary><div id="${escaped(operation.operationId ?? '')}">
     <p>${open ? 'No sign-in needed.' : 'Needs sign-in.'}</p>
     ${parameters.length > 0 ? `<h4>Parameters</h4><table><thead><tr><th scope="col">name</th><th scope="col">in</th><th scope="col">value</th></tr></thead><tbody>${parameters.join('')}</tbody></table>` : ''}
-    ${body ? `<h4>Body</h4>${contentOf(body.content)}` : ''}
-    <h4>Answers</h4><dl>${responses.join('')}</dl></details>`
+    ${body ? `<h4>Body</h4>${contentOf(body.content, named)}` : ''}
+    <h4>Answers</h4><dl>${responses.join('')}</dl></div></details>`
 }
 
 const style = `
@@ -69,14 +74,15 @@ const style = `
   thead th { color: #5c676d } tbody th, code, .type { font-family: ui-monospace, monospace; font-size: .88em; overflow-wrap: anywhere }
   dt { font-weight: 600 } dd { margin: 0 0 .3rem 2rem } p { margin: .2rem 0 }`
 
-/** The API for reading: the document as one page without scripts. */
+/** The API for reading: the document as one page without scripts. Ids stand inside the folds, so that following a link opens its fold. */
 export function apiPage(document: Document): string {
+  const named = document.components?.schemas ?? {}
   const operations = Object.entries(document.paths ?? {}).flatMap(([path, item]) =>
-    Object.entries(item as Record<string, oas31.OperationObject>).map(([method, operation]) => ({ tag: operation.tags?.[0] ?? '', html: operationHtml(method, path, operation) })),
+    Object.entries(item as Record<string, oas31.OperationObject>).map(([method, operation]) => ({ tag: operation.tags?.[0] ?? '', html: operationHtml(method, path, operation, named) })),
   )
   const tags = (document.tags ?? []).map(({ name }) => `<section><h2>${escaped(name)}</h2>${operations.filter(({ tag }) => tag === name).map(({ html }) => html).join('')}</section>`)
-  const schemas = Object.entries(document.components?.schemas ?? {}).map(([name, schema]) => `<details id="${escaped(name)}"><summary><code>${escaped(name)}</code></summary>${fieldsOf(schema)}</details>`)
+  const schemas = Object.entries(named).map(([name, schema]) => `<details><summary><code>${escaped(name)}</code></summary><div id="${escaped(name)}">${fieldsOf(schema, {})}</div></details>`)
   return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>Sidebend: API</title><style>${style}</style></head>
-<body><header><h1>Sidebend API</h1><p>${escaped(document.info.description ?? '')}</p><p>All addresses begin with <code>/api</code>. The same as data: <a href="/api/openapi.json">openapi.json</a> (OpenAPI ${document.openapi}).</p></header>
+<body><header><h1>Sidebend API</h1><p>${prose(document.info.description ?? '')}</p><p>All addresses begin with <code>/api</code>. The same as data: <a href="/api/openapi.json">openapi.json</a> (OpenAPI ${document.openapi}).</p></header>
 <main>${tags.join('')}<section><h2>Shapes</h2>${schemas.join('')}</section></main></body></html>`
 }

@@ -1,8 +1,10 @@
 import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import path from 'node:path'
-import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { openDatabase } from '../../server/config/database.ts'
+import pg from 'pg'
+import { QueryTypes } from 'sequelize'
+import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest'
+import { openDatabase, RUNTIME_ROLE } from '../../server/config/database.ts'
 import { problem, startApp, type TestApp } from './harness.ts'
 
 let app: TestApp
@@ -43,6 +45,44 @@ describe('health', () => {
     } finally {
       app.services.database = database
       await gone.close()
+    }
+  })
+})
+
+describe('when the database drops every connection', () => {
+  it('says so in a problem at worst, comes back by itself, and is as closed as before', async () => {
+    const works = await app.makeOrganization()
+    const agent = await app.agentFor(works, 'engineer')
+    await agent.get('/api/people').expect(200)
+    const client = new pg.Client({ connectionString: inject('databaseUrl') })
+    await client.connect()
+    await client.query('select pg_terminate_backend(pid) from pg_stat_activity where datname = current_database() and pid <> pg_backend_pid()')
+    await client.end()
+    const seen: number[] = []
+    for (let i = 0; i < 20 && seen.at(-1) !== 200; i += 1) {
+      const answer = await agent.get('/api/people')
+      seen.push(answer.status)
+      if (answer.status !== 200) expect(problem(answer).title).toBe('The database does not answer')
+    }
+    expect(seen.at(-1)).toBe(200)
+    const [row] = await app.inTenant(works, ({ transaction }) => app.services.database.sequelize.query<{ role: string }>('select current_user as role', { type: QueryTypes.SELECT, transaction }))
+    expect(row?.role).toBe(RUNTIME_ROLE)
+  })
+
+  it('answers 503 while it stays away', async () => {
+    const away = await startApp()
+    try {
+      const agent = await away.agentFor(await away.makeOrganization(), 'engineer')
+      const { database } = away.services
+      const gone = openDatabase('postgres://nobody:x@127.0.0.1:1/none')
+      away.services.database = { ...database, withTenant: gone.withTenant }
+      const answer = await agent.get('/api/people').expect(503)
+      expect(problem(answer).detail).toMatch(/try again/)
+      expect(answer.headers['retry-after']).toBe('5')
+      away.services.database = database
+      await gone.close()
+    } finally {
+      await away.close()
     }
   })
 })
