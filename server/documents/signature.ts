@@ -48,7 +48,7 @@ interface KeyAndCertificate { key: forge.pki.rsa.PrivateKey; own: forge.pki.Cert
 function open(p12: Buffer, passphrase: string): KeyAndCertificate {
   const store = forge.pkcs12.pkcs12FromAsn1(forge.asn1.fromDer(forge.util.createBuffer(p12.toString('binary'))), false, passphrase)
   const bags = (type: string) => store.getBags({ bagType: type })[type] ?? []
-  const key = [...bags(forge.pki.oids.pkcs8ShroudedKeyBag ?? ''), ...bags(forge.pki.oids.keyBag ?? '')].find((bag) => bag.key)?.key as forge.pki.rsa.PrivateKey | undefined
+  const key = [...bags(forge.pki.oids.pkcs8ShroudedKeyBag ?? ''), ...bags(forge.pki.oids.keyBag ?? '')].find((bag) => bag.key)?.key
   const certificates = bags(forge.pki.oids.certBag ?? '').flatMap((bag) => (bag.cert ? [bag.cert] : []))
   const own = certificates.find((certificate) => key && (certificate.publicKey as forge.pki.rsa.PublicKey).n.equals(key.n))
   if (!key || !own) throw new Error('The signing store holds no private key with a certificate that belongs to it.')

@@ -177,10 +177,11 @@ function drawDimension(pencil: Pencil, mark: JointDimension, index: number): voi
       break
     case 'root-radius':
       pencil.doc.lineWidth(0.4).strokeColor(COLOUR.soft)
-      pencil.line({ x: to.x + 26, y: to.y + 10 }, to)
+      // Up and to the right, clear of the root face's figure below it.
+      pencil.line({ x: to.x + 30, y: to.y - 9 }, to)
       pencil.doc.stroke()
-      pencil.head(to, Math.atan2(-10, -26))
-      pencil.text(`R ${mark.text}`, to.x + 28, to.y + 10, 'left')
+      pencil.head(to, Math.atan2(9, -30))
+      pencil.text(`R ${mark.text}`, to.x + 32, to.y - 10, 'left')
       break
     case 'leg':
       if (upright) straight(pencil, mark, { x: edge.left < from.x ? edge.right - from.x + 9 : 12, y: 0 }, 'left', { x: 5, y: 0 })
