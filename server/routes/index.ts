@@ -5,6 +5,7 @@ import { assessmentRoutes } from './assessments.ts'
 import { couponRoutes } from './coupons.ts'
 import { jobRoutes } from './jobs.ts'
 import { libraryRoutes } from './library.ts'
+import { lookupRoutes } from './lookup.ts'
 import { outboxRoutes } from './outbox.ts'
 import { peopleRoutes } from './people.ts'
 import { photoRoutes } from './photos.ts'
@@ -13,7 +14,7 @@ import { sessionRoutes } from './session.ts'
 import { todayRoutes } from './today.ts'
 
 /** Every resource of the API. A new one is a file beside this one and a line here. */
-const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, procedureRoutes, couponRoutes, photoRoutes, jobRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
+const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, procedureRoutes, couponRoutes, photoRoutes, jobRoutes, lookupRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
 
 export function resourceRoutes(router: Router, services: Services, authenticate: Authenticate): void {
   sessionRoutes(router, services, authenticate)

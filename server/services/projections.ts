@@ -1,3 +1,5 @@
+import { squeeze } from '@shared/library/search.ts'
+import type { AskedMetal } from '@shared/lookup/joint-question.ts'
 import type { Interval } from '@shared/schemas/common.ts'
 import type { BaseMetal, WeldingVariables } from '@shared/schemas/welding.ts'
 import type { Projections } from '../models/projection-columns.ts'
@@ -5,14 +7,24 @@ import type { Projections } from '../models/projection-columns.ts'
 const distinct = <T>(values: readonly T[]): T[] => [...new Set(values)]
 const word = (text: string | null): string[] => (text ? [text.toLowerCase()] : [])
 
-/** By what a metal is found: its grade, specification, UNS and P-Number (`p:1`, and `p:1/2` with its group). */
-export function metalTokens(metal: Pick<BaseMetal, 'specification' | 'grade' | 'uns' | 'pNumber' | 'groupNumber' | 'd11Group' | 'd12MNumber'>): string[] {
+/** A written metal with its signs taken out, marked as such: `=a51670`. */
+const written = (text: string | null): string[] => (text && squeeze(text) !== '' ? [`=${squeeze(text)}`] : [])
+
+/** Tokens by which a metal that somebody asks for finds the procedures that may cover it: the same row, name or P-Number. */
+export const askedMetalTokens = ({ text, libraryIds, pNumber }: AskedMetal): string[] => distinct([...libraryIds.map((id) => `id:${id}`), ...written(text), ...(pNumber ? [`p:${pNumber.toLowerCase()}`] : [])])
+
+/** By what a metal is found: its library row, grade, specification, UNS and P-Number (`p:1`, and `p:1/2` with its group). */
+export function metalTokens(metal: BaseMetal): string[] {
   const { pNumber, groupNumber } = metal
   return distinct([
     ...word(metal.specification),
     ...word(metal.grade),
     ...word(metal.specification && metal.grade ? `${metal.specification} ${metal.grade}` : null),
     ...word(metal.uns),
+    ...(metal.libraryId ? [`id:${metal.libraryId}`] : []),
+    ...written(metal.grade),
+    ...written(`${metal.specification ?? ''}${metal.grade ?? ''}`),
+    ...written(metal.uns),
     ...(pNumber ? [`p:${pNumber.toLowerCase()}`] : []),
     ...(pNumber && groupNumber ? [`p:${pNumber.toLowerCase()}/${groupNumber}`] : []),
     ...(metal.d12MNumber ? [`m:${metal.d12MNumber.toLowerCase()}`] : []),
