@@ -25,14 +25,16 @@ const gallery: RouteObject[] =
 
 export function createRoutes(client: QueryClient): RouteObject[] {
   const errorElement = <RouteError />
+  // Asked once on the way in. A session that ends later is met by a dialog over the page, never by leaving it.
+  const guard = { loader: signedIn(client), shouldRevalidate: () => false }
   return [
     {
       hydrateFallbackElement: <Skeleton label="Opening Sidebend" />,
       errorElement,
       children: [
         { Component: Bare, loader: anyone(client), children: [{ errorElement, children: [...open, ...gallery] }] },
-        { Component: Bare, loader: signedIn(client), children: [{ errorElement, children: shop }] },
-        { Component: Shell, loader: signedIn(client), children: [{ errorElement, children: [...desk, { path: '*', Component: NotFound }] }] },
+        { Component: Bare, ...guard, children: [{ errorElement, children: shop }] },
+        { Component: Shell, ...guard, children: [{ errorElement, children: [...desk, { path: '*', Component: NotFound }] }] },
       ],
     },
   ]

@@ -59,7 +59,7 @@ export function DataTable<Row extends object>({ caption, columns, rows, rowKey, 
     () => helper.columns(columns.map((column) => helper.display({ id: column.id, header: column.header, cell: ({ row }) => column.cell(row.original), enableHiding: !column.fixed }))),
     [helper, columns],
   )
-  const table = useTable({ features, columns: definitions, data: rows as Row[], getRowId: rowKey, state: { columnVisibility: visibility }, onColumnVisibilityChange: (next) => setVisibility(typeof next === 'function' ? next(visibility) : next) })
+  const table = useTable({ features, columns: definitions, data: rows, getRowId: rowKey, state: { columnVisibility: visibility }, onColumnVisibilityChange: (next) => setVisibility(typeof next === 'function' ? next(visibility) : next) })
   const byId = new Map(columns.map((column) => [column.id, column]))
   const shown = table.getVisibleLeafColumns().map((column) => byId.get(column.id)).filter((column) => column !== undefined)
   const first = shown[0]?.id

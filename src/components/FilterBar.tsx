@@ -1,6 +1,5 @@
 import { Search } from 'lucide-react'
-import { useEffect, useEffectEvent, useState, type ReactNode } from 'react'
-import { useDebounced } from '@/hooks/debounced.ts'
+import { useRef, useState, type ReactNode } from 'react'
 import { Button } from './Button.tsx'
 
 export interface FilterBarProps {
@@ -19,25 +18,33 @@ export interface FilterBarProps {
 /** Search and filters over a list; the search is sent when typing rests. */
 export function FilterBar({ label, search, onSearch, children, count, onClear }: FilterBarProps) {
   const [text, setText] = useState(search)
-  const [given, setGiven] = useState(search)
-  if (given !== search) {
-    setGiven(search)
-    setText(search)
-  }
-  const rested = useDebounced(text, 250)
-  const send = useEffectEvent((next: string) => {
-    if (next === text && next !== search) {
-      setGiven(next)
-      onSearch(next)
+  // What the list was last told, and what was last sent: an echo of our own search must not undo newer typing.
+  const [told, setTold] = useState(search)
+  const [sent, setSent] = useState(search)
+  const timer = useRef<ReturnType<typeof setTimeout>>(undefined)
+  if (told !== search) {
+    setTold(search)
+    if (search !== sent) {
+      setSent(search)
+      setText(search)
     }
-  })
-  useEffect(() => send(rested), [rested])
+  }
+  const send = (next: string) => {
+    clearTimeout(timer.current)
+    setSent(next)
+    onSearch(next)
+  }
+  const type = (next: string) => {
+    setText(next)
+    clearTimeout(timer.current)
+    timer.current = setTimeout(() => send(next), 250)
+  }
   return (
     <div role="search" aria-label={label} className="no-print mb-3 flex flex-wrap items-end gap-x-3 gap-y-2">
       <label className="relative min-w-52 grow sm:max-w-80">
         <span className="sr-only">{label}</span>
         <Search size={16} aria-hidden="true" className="absolute top-1/2 left-2.5 -translate-y-1/2 text-soft" />
-        <input type="search" className="box pl-8" placeholder={label} value={text} onChange={(event) => setText(event.target.value)} onKeyDown={(event) => event.key === 'Enter' && onSearch(text)} />
+        <input type="search" className="box pl-8" placeholder={label} value={text} onChange={(event) => type(event.target.value)} onKeyDown={(event) => event.key === 'Enter' && send(text)} />
       </label>
       {children}
       {onClear && (

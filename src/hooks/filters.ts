@@ -11,8 +11,8 @@ export function useFilters<K extends string>(keys: readonly K[]): { values: Reco
       setSearch(
         (before) => {
           const next = new URLSearchParams(before)
-          for (const [key, value] of Object.entries(changes)) {
-            if (value) next.set(key, String(value))
+          for (const [key, value] of Object.entries(changes) as [string, string | undefined][]) {
+            if (value) next.set(key, value)
             else next.delete(key)
           }
           return next

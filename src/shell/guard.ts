@@ -6,10 +6,9 @@ import { signInPath } from './paths.ts'
 /** Loads the session before any page; without a person the way leads to sign-in and back. */
 export const signedIn =
   (client: QueryClient) =>
-  async ({ request }: LoaderFunctionArgs): Promise<null> => {
+  async ({ request }: LoaderFunctionArgs): Promise<Response | null> => {
     const session = await client.ensureQueryData(sessionQuery)
-    if (!session.person) throw redirect(signInPath(new URL(request.url)))
-    return null
+    return session.person ? null : redirect(signInPath(new URL(request.url)))
   }
 
 /** Loads the session, whoever it is. */

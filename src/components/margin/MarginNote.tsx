@@ -20,12 +20,48 @@ export interface MarginNoteProps {
 
 /**
  * One verdict, as an engineer would red-line a drawing: the word first, the class, a sentence with the figures, the clause,
- * the fixes, and behind a fold how it was reached.
+ * the fixes, and behind a fold how it was reached. What stands within takes one line, and opens to the rest.
  */
 export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
   const { verdict, class: kind, clause, sentence, basis, fixes, missing, range, reasoning, couponIds, source } = finding
   const bounds = range ? boundsInWords(range) : null
   const coupons = couponIds.map((id) => couponNumber?.(id)).filter((number) => number !== undefined)
+  const counts = kind === 'essential' || kind === 'supplementary'
+  const reached = (
+    <div className="mt-1 space-y-1 text-xs leading-[1.125rem]">
+      {bounds && <p>Covered: {bounds}.</p>}
+      {coupons.length > 0 && <p>Decided by {coupons.join(', ')}.</p>}
+      {reasoning.length > 0 && (
+        <ol className="list-decimal space-y-0.5 pl-4">
+          {reasoning.map((step) => (
+            <li key={step}>{step}</li>
+          ))}
+        </ol>
+      )}
+      <p className="text-soft">
+        {source ? `${source}. ` : ''}
+        {BASIS[basis]}
+      </p>
+    </div>
+  )
+  if (verdict === 'within') {
+    return (
+      <article className={`margin-note border-l-[3px] px-3 py-1.5 text-sm ${LOOK.within}`} aria-label={`${VERDICT_WORD.within}: ${finding.title}`}>
+        <details>
+          <summary className="flex cursor-pointer list-none items-start justify-between gap-3 [&::-webkit-details-marker]:hidden">
+            <span className="text-pretty">
+              <VerdictMark verdict="within" className="mr-1.5 size-2.5 align-[-0.5px]" />
+              <strong className="font-semibold">{VERDICT_WORD.within}</strong> <span aria-hidden="true">·</span> {sentence}
+              {basis === 'memory' && counts && <span className="block text-xs text-soft">{BASIS.memory}</span>}
+            </span>
+            <span className="font-narrow text-[0.875rem] leading-[1.125rem] font-medium whitespace-nowrap text-soft underline decoration-dotted underline-offset-[3px]">{clause}</span>
+          </summary>
+          <p className="mt-1 text-xs text-soft first-letter:uppercase">{CLASS_WORD[kind]}</p>
+          {reached}
+        </details>
+      </article>
+    )
+  }
   return (
     <article className={`margin-note border-l-[3px] px-3 py-2 text-sm ${LOOK[verdict]}`} aria-label={`${VERDICT_WORD[verdict]}: ${finding.title}`}>
       <header className="flex items-start justify-between gap-3">
@@ -49,21 +85,7 @@ export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
       )}
       <details className="mt-0.5">
         <summary className="w-fit cursor-pointer py-1 text-xs text-soft underline decoration-dotted underline-offset-2">How this was reached</summary>
-        <div className="mt-1 space-y-1 text-xs leading-[1.125rem]">
-          {bounds && <p>Covered: {bounds}.</p>}
-          {coupons.length > 0 && <p>Decided by {coupons.join(', ')}.</p>}
-          {reasoning.length > 0 && (
-            <ol className="list-decimal space-y-0.5 pl-4">
-              {reasoning.map((step) => (
-                <li key={step}>{step}</li>
-              ))}
-            </ol>
-          )}
-          <p className="text-soft">
-            {source ? `${source}. ` : ''}
-            {BASIS[basis]}
-          </p>
-        </div>
+        {reached}
       </details>
     </article>
   )
