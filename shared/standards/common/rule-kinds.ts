@@ -5,7 +5,7 @@ import type { Basis, Fix, NumericRange, QualifiedSpan } from '../../schemas/asse
 import { quantity } from '../../units/convert.ts'
 import type { Dimension } from '../../units/types.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext, RuleMeta, RuleRange, RuleVerdict } from '../rule.ts'
-import { capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan } from './wording.ts'
+import { cannotTell, capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan, stateFix } from './wording.ts'
 
 /** Full dotted path of a rule's field. */
 export const pathOf = (context: RuleContext, rule: { at: 'weld' | 'block'; field: string }): string => (rule.at === 'block' && context.path ? `${context.path}.${rule.field}` : rule.field)
@@ -23,6 +23,8 @@ export interface NamedSpec {
   tested: (context: RangeContext, side: CouponSide) => string | null | undefined
   /** Names that the coupon's value covers; the value itself where absent. */
   covers?: (value: string, context: RangeContext, side: CouponSide) => readonly string[] | 'any'
+  /** Which kind of name it is (an A-Number, a composition …): names of different kinds can't be compared. */
+  kind?: (name: string) => string
   /** Why, in words, for the opened reasoning. */
   because: string
   /** A name as a sentence shows it. */
@@ -72,6 +74,10 @@ function judgeNames({ spec, display, field, context, sides, joined, asked }: Nam
   if (verdict === 'cannot-tell') return couponLacks(spec.label, spec.field, sides, [...asked], joined)
   const askedText = list(asked.map(display))
   if (verdict === 'within') return { verdict, sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, reasoning: [spec.because] }
+  const { kind } = spec
+  if (kind && !asked.every((name) => joined.values.some((value) => kind(value) === kind(name)))) {
+    return cannotTell(`The procedure gives ${askedText} as its ${spec.label} and ${names(sides)} gives ${list(joined.values.map(display), 'or')}, which can't be compared.`, [`procedure: ${field}`, ...sides.map((side) => `${side.coupon.number}: ${spec.field}`)], { asked: [...asked], range: joined, fixes: [stateFix(spec.label, field)] })
+  }
   const covered = joined.values.map(display)
   const fixes: Fix[] = []
   const first = joined.values[0]

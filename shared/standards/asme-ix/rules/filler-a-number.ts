@@ -27,6 +27,7 @@ export const fillerANumber = namedRule({
   },
   tested: (_context, side) => (side.block ? (ferrousDeposit(side.variables, side.block) ? token(side.block) : 'no A-Number (nonferrous)') : null),
   covers: (value) => (value === 'A-1' || value === 'A-2' ? ['A-1', 'A-2'] : [value]),
+  kind: (name) => (name.startsWith('deposit') ? 'composition' : 'A-Number'),
   because: 'The deposit analysis keeps its A-Number; A-1 and A-2 cover each other.',
   setValue: (name) => (name.startsWith('A-') ? Number(name.slice(2)) : undefined),
   plan: (asked) => `A coupon whose deposit is ${asked.join(', ')}.`,

@@ -42,6 +42,7 @@ export const fillerClassification = namedRule({
   tested: (_context, side) => (side.block?.filler.added === false ? 'no filler' : side.block ? name(side.block.filler) : null),
   // A suffix for better impact performance is covered by the plain class; the reverse is not.
   covers: (value) => (value.endsWith(' with -1') ? [value] : [value, `${value} with -1`]),
+  kind: (name) => (name.startsWith('trade name') ? 'trade name' : 'classification'),
   because: 'Hydrogen level, moisture resistance, another low-hydrogen covering of equal strength and the position digit of flux-cored wire do not count; a better impact suffix is covered.',
 })
 
@@ -61,5 +62,6 @@ export const fluxWireClassification = namedRule({
     return value ? [value] : null
   },
   tested: (_context, side) => (side.block ? fluxWire(side.block.filler) : null),
+  kind: (name) => (name.startsWith('flux ') ? 'trade name' : 'classification'),
   because: 'The flux-wire class, or the trade name where it has none, stays; the hydrogen level alone does not count.',
 })

@@ -1,6 +1,6 @@
 /** QW-409.1: with toughness, heat input may not rise above the coupon's; judged at the worst corner of the procedure, or by its stated cap. */
 import { heatInputInstantaneous, heatInputMeter } from '../../../calculations/heat-input.ts'
-import { between, closed, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
+import { between, closed, numericRange, UNKNOWN, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
 import type { CouponContent, Electrical, RunRow } from '../../../schemas/welding.ts'
 import type { Interval } from '../../../schemas/common.ts'
 import type { UnitSystem } from '../../../units/types.ts'
@@ -42,36 +42,48 @@ function asked(electrical: Electrical, system: UnitSystem): Known {
   return { value: shownUnit(heatInputMeter({ voltage: V, current: A, travelSpeed: v }), system), from: `the worst corner: ${V} V, ${A} A, ${v} mm/min` }
 }
 
-/** Middle of what was observed, so that the coupon's figure is never made larger than what was welded. */
-const middle = (interval: Interval | null): number | null => {
-  const { min, max } = figures(interval, 'voltage', 'SI')
-  return min !== null && max !== null ? (min + max) / 2 : (min ?? max)
-}
+/** Heat input that was surely reached (middle of the readings) and the most that they allow; one value where nothing was spread. */
+interface Spread { sure: number; most: number }
 
-/** Heat input of one row of the run sheet in kJ/mm; null when a reading is missing. */
-function rowHeatInput(row: RunRow, wave: boolean): number | null {
-  const length = row.length?.si ?? null
-  if (row.instantaneousEnergy && length !== null && length > 0) return heatInputInstantaneous({ energy: row.instantaneousEnergy.si, length })
-  if (wave) return null
-  const voltage = middle(row.voltage)
-  const current = middle(row.current)
-  const arcTime = row.arcTime?.si ?? null
-  const travelSpeed = middle(row.travelSpeed) ?? (length !== null && arcTime !== null && arcTime > 0 ? (length / arcTime) * 60 : null)
-  return voltage === null || current === null || travelSpeed === null || travelSpeed <= 0 ? null : heatInputMeter({ voltage, current, travelSpeed })
-}
-
-function fromRunSheet(content: CouponContent, blockId: string, wave: boolean): number | null {
-  let most: number | null = null
-  for (const row of content.runSheet) {
-    if (row.processId !== blockId) continue
-    const value = rowHeatInput(row, wave)
-    if (value !== null && (most === null || value > most)) most = value
+/** From spread readings, kJ/mm; null when one is missing. */
+function spreadOf(voltage: Interval | null, current: Interval | null, travelSpeed: Interval | number | null): Spread | null {
+  const V = figures(voltage, 'voltage', 'SI')
+  const A = figures(current, 'current', 'SI')
+  const v = typeof travelSpeed === 'number' ? { min: travelSpeed, max: travelSpeed } : figures(travelSpeed, 'travelSpeed', 'SI')
+  const ends = [V.min ?? V.max, V.max ?? V.min, A.min ?? A.max, A.max ?? A.min, v.min ?? v.max, v.max ?? v.min]
+  const [v1, v2, a1, a2, s1, s2] = ends
+  if (v1 == null || v2 == null || a1 == null || a2 == null || s1 == null || s2 == null || s1 <= 0) return null
+  return {
+    sure: heatInputMeter({ voltage: (v1 + v2) / 2, current: (a1 + a2) / 2, travelSpeed: (s1 + s2) / 2 }),
+    most: heatInputMeter({ voltage: v2, current: a2, travelSpeed: s1 }),
   }
-  return most
+}
+
+/** Heat input of one row of the run sheet; null when a reading is missing. */
+function rowHeatInput(row: RunRow, wave: boolean): Spread | null {
+  const length = row.length?.si ?? null
+  if (row.instantaneousEnergy && length !== null && length > 0) {
+    const value = heatInputInstantaneous({ energy: row.instantaneousEnergy.si, length })
+    return { sure: value, most: value }
+  }
+  if (wave) return null
+  const arcTime = row.arcTime?.si ?? null
+  const measured = length !== null && length > 0 && arcTime !== null && arcTime > 0 ? (length / arcTime) * 60 : null
+  return spreadOf(row.voltage, row.current, row.travelSpeed ?? measured)
+}
+
+/** The largest of the block's rows; null when no row gives one. */
+function fromRunSheet(content: CouponContent, blockId: string, wave: boolean): Spread | null {
+  let top: Spread | null = null
+  for (const row of content.runSheet) {
+    const value = row.processId === blockId ? rowHeatInput(row, wave) : null
+    if (value) top = top ? { sure: Math.max(top.sure, value.sure), most: Math.max(top.most, value.most) } : value
+  }
+  return top
 }
 
 /** The largest heat input that the coupon had. */
-function tested(side: CouponSide, system: UnitSystem): Known {
+function tested(side: CouponSide, system: UnitSystem): (Spread & { from: string }) | { missing: string[] } {
   const electrical = side.block?.electrical
   if (!electrical || !side.block) return { missing: ['electrical'] }
   if (electrical.heatInputMethod === 'volume') return { missing: ['electrical.heatInputMethod (weld metal volumes are not compared here)'] }
@@ -79,15 +91,13 @@ function tested(side: CouponSide, system: UnitSystem): Known {
   if (wave === null) return { missing: ['electrical.waveformControlled'] }
   const recorded = figures(electrical.heatInput, 'heatInput', system)
   const stated = recorded.max ?? recorded.min
-  if (stated !== null) return wave && !isInstantaneous(electrical) ? { missing: ['electrical.heatInputMethod (instantaneous energy or power, because the waveform was controlled)'] } : { value: stated, from: 'as recorded' }
+  if (stated !== null) return wave && !isInstantaneous(electrical) ? { missing: ['electrical.heatInputMethod (instantaneous energy or power, because the waveform was controlled)'] } : { sure: stated, most: stated, from: 'as recorded' }
+  const shown = ({ sure, most }: Spread, from: string): Spread & { from: string } => ({ sure: shownUnit(sure, system), most: shownUnit(most, system), from })
   const sheet = fromRunSheet(side.coupon.content, side.block.id, wave)
-  if (sheet !== null) return { value: shownUnit(sheet, system), from: 'the largest of the run sheet' }
+  if (sheet) return shown(sheet, 'the largest of the run sheet')
   if (wave) return { missing: ['runSheet (instantaneous energy, because the waveform was controlled)'] }
-  const voltage = middle(electrical.voltage)
-  const current = middle(electrical.current)
-  const travelSpeed = middle(electrical.travelSpeed)
-  if (voltage === null || current === null || travelSpeed === null || travelSpeed <= 0) return { missing: ['electrical.heatInput'] }
-  return { value: shownUnit(heatInputMeter({ voltage, current, travelSpeed }), system), from: `${voltage} V, ${current} A, ${travelSpeed} mm/min` }
+  const spread = spreadOf(electrical.voltage, electrical.current, electrical.travelSpeed)
+  return spread ? shown(spread, 'from voltage, current and travel speed') : { missing: ['electrical.heatInput'] }
 }
 
 const base = figureRule({
@@ -103,10 +113,16 @@ const base = figureRule({
   range(context, side) {
     const unit = unitOf('heatInput', context.system)
     const known = tested(side, context.system)
-    const value = 'value' in known ? known.value : null
-    if (exemptByHeatTreatment(side.variables) === true) return { range: between('heatInput', unit, UNLIMITED, UNLIMITED), tested: value, reason: 'The heat treatment after welding lifts the heat input limit.' }
+    if (exemptByHeatTreatment(side.variables) === true) return { range: between('heatInput', unit, UNLIMITED, UNLIMITED), tested: 'sure' in known ? known.sure : null, reason: 'The heat treatment after welding lifts the heat input limit.' }
     if ('missing' in known) return { range: unknownNumeric('heatInput', unit), tested: null, reason: `${side.coupon.number} does not give its heat input.`, missing: known.missing.map((field) => `${side.coupon.number}: ${field}`) }
-    return { range: between('heatInput', unit, UNLIMITED, closed(known.value)), tested: known.value, reason: `${show(known.value, unit)} (${known.from}) is the most; no efficiency factor is used.` }
+    const sure = { lower: UNLIMITED, upper: closed(known.sure) }
+    if (known.most <= known.sure) return { range: numericRange('heatInput', unit, [sure]), tested: known.sure, reason: `${show(known.sure, unit)} (${known.from}) is the most; no efficiency factor is used.` }
+    return {
+      range: numericRange('heatInput', unit, [sure, { lower: UNLIMITED, upper: UNKNOWN }]),
+      tested: known.sure,
+      reason: `The readings are spread (${known.from}): ${show(known.sure, unit)} was surely reached, ${show(known.most, unit)} is the most that they allow; no efficiency factor is used.`,
+      missing: [`${side.coupon.number}: electrical.heatInput`],
+    }
   },
   plan: (wanted, context) => `A coupon with toughness tests welded at ${show(wanted.max ?? 0, unitOf('heatInput', context.system))} or more.`,
 })
@@ -122,9 +138,15 @@ export const heatInput: Rule = {
       if (free) return { verdict: 'within', sentence: 'The heat treatment after welding lifts the heat input limit.', asked: null, range: joined }
       return { verdict: 'cannot-tell', sentence: "The procedure's highest heat input can't be told.", asked: null, range: joined, field: `${context.path}.${first}`, missing: known.missing.map((field) => `procedure: ${field}`), fixes: [{ kind: 'state', label: 'State a heat input cap', field: `${context.path}.electrical.heatInput` }] }
     }
-    const judged = base.check(context, sides, joined)
+    let judged = base.check(context, sides, joined)
     if (!judged) return judged
-    const missing = judged.verdict === 'cannot-tell' ? sides.flatMap((side) => { const side_ = tested(side, context.system); return 'missing' in side_ ? side_.missing.map((field) => `${side.coupon.number}: ${field}`) : [] }) : judged.missing
+    const spreads = sides.map((side) => tested(side, context.system))
+    if (judged.verdict === 'cannot-tell' && spreads.every((spread) => 'most' in spread && spread.most < known.value)) {
+      // Above even the most that the readings allow.
+      const most = Math.max(...spreads.map((spread) => ('most' in spread ? spread.most : 0)))
+      judged = base.check(context, sides, between('heatInput', unitOf('heatInput', context.system), UNLIMITED, closed(most))) ?? judged
+    }
+    const missing = judged.verdict === 'cannot-tell' ? sides.flatMap((side, i) => { const spread = spreads[i]; return spread && 'missing' in spread ? spread.missing.map((field) => `${side.coupon.number}: ${field}`) : [`${side.coupon.number}: electrical.heatInput`] }) : judged.missing
     return { ...judged, missing, reasoning: [`Asked: ${known.from}.`, ...(judged.reasoning ?? [])] }
   },
 }

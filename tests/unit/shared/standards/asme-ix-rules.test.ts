@@ -186,6 +186,9 @@ const rows: Row[] = [
   { rule: 'heat-input', toughness: true, both: pwht('above-upper-transformation', 900, 920, 60), procedure: (b) => Object.assign(b.electrical, { heatInput: null, voltage: null }), verdict: 'within' },
   { rule: 'heat-input', toughness: true, coupon: (b) => Object.assign(b.electrical, { heatInput: null, voltage: null }), verdict: 'cannot-tell' },
   { rule: 'heat-input', toughness: true, coupon: (b) => (b.electrical.heatInput = null), procedure: (b) => (b.electrical.heatInput = interval(null, 1.1, 'heatInput')), verdict: 'within' },
+  // The coupon's readings alone give 1.1 kJ/mm in the middle and 1.404 kJ/mm at the most.
+  { rule: 'heat-input', toughness: true, coupon: (b) => (b.electrical.heatInput = null), procedure: (b) => (b.electrical.heatInput = interval(null, 1.3, 'heatInput')), verdict: 'cannot-tell', missing: 'PQR-001: electrical.heatInput' },
+  { rule: 'heat-input', toughness: true, coupon: (b) => (b.electrical.heatInput = null), procedure: (b) => (b.electrical.heatInput = interval(null, 1.41, 'heatInput')), verdict: 'outside', says: '1.404 kJ/mm' },
   // Technique
   { rule: 'passes-per-side', toughness: true, procedure: (b) => (b.technique.passesPerSide = 'single'), verdict: 'outside' },
   { rule: 'passes-per-side', toughness: true, coupon: (b) => (b.technique.passesPerSide = 'single'), verdict: 'within' },
