@@ -40,7 +40,8 @@ export function ProcedureTitle({ revision, content, couponNumbers, note }: { rev
           label: 'Drafted by',
           children: (
             <>
-              {revision.author.name} <span className="whitespace-nowrap">· {day(revision.createdAt)}</span>
+              <p>{revision.author.name}</p>
+              <p className="text-sm text-soft">{day(revision.createdAt)}</p>
             </>
           ),
         },

@@ -117,6 +117,7 @@ export function useDraft(revision: Revision, personId: string): Draft {
   }, [client, dispatch, form, id])
 
   const { phase, failures } = state
+  const restartsWith = phase === 'changed' ? content : null
   useEffect(() => {
     if (phase !== 'changed' && phase !== 'unreachable') return
     const timer = setTimeout(() => void saveNow(), phase === 'changed' ? REST : retryDelay(failures))
@@ -127,7 +128,7 @@ export function useDraft(revision: Revision, personId: string): Draft {
       window.removeEventListener('online', online)
     }
     // `content` restarts the second while somebody types; out of reach, the clock of the retry stands.
-  }, [phase, failures, saveNow, phase === 'changed' ? content : null])
+  }, [phase, failures, saveNow, restartsWith])
 
   useSaveKey(() => void saveNow())
 

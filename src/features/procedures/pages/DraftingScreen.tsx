@@ -129,7 +129,7 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
       {returned && <Returned comment={returned.reason ?? ''} by={returned.person.name} />}
       <div className="mt-4">
         <MarginLayout
-          nav={<ProcedureNav content={content} verdicts={verdicts} />}
+          nav={<ProcedureNav verdicts={verdicts} />}
           head={
             <>
               <div className="no-print flex flex-wrap items-center gap-2">

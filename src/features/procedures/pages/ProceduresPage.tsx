@@ -76,7 +76,7 @@ export function ProceduresPage() {
       <PageHead title="Procedures" actions={begin}>
         How each joint is to be welded, within what the coupons have shown.
       </PageHead>
-      <FilterBar label="Find a procedure" search={q} onSearch={(text) => filters.set({ q: text })} onClear={filtered ? () => filters.set({ q: '', state: '', process: '' }) : undefined}>
+      <FilterBar label="Filter by number, title or grade" search={q} onSearch={(text) => filters.set({ q: text })} onClear={filtered ? () => filters.set({ q: '', state: '', process: '' }) : undefined}>
         <Select label="State" labelHidden empty="Every state" value={state} onChange={(event) => filters.set({ state: event.target.value })} options={REVISION_STATES.map((one) => ({ value: one, label: stampWord(one) }))} />
         <Select label="Process" labelHidden empty="Every process" value={process} onChange={(event) => filters.set({ process: event.target.value })} options={PROCESS_OPTIONS} />
       </FilterBar>

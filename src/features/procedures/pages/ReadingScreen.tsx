@@ -59,7 +59,7 @@ export function ReadingScreen({ revision }: { revision: Revision }) {
       {returned && <Returned comment={returned.reason ?? ''} by={returned.person.name} />}
       <div className="mt-4">
         <MarginLayout
-          nav={<ProcedureNav content={content} verdicts={verdicts} readOnly />}
+          nav={<ProcedureNav verdicts={verdicts} />}
           head={
             <>
               <div className="no-print flex flex-wrap items-center gap-2">

@@ -32,7 +32,7 @@ export function FillerEditor({ path, label, process }: { path: string; label: st
           onPick={(item, text) => set(item ? { ...toFiller(item.data), ...kept } : fillerSchema.parse({ ...kept, added: true, classification: text === '' ? null : text.slice(0, 60) }))}
         />
       )}
-      {value.added !== false && <p className="min-w-0 grow basis-40 text-sm text-soft">{value.libraryId === null && value.classification ? 'Not from the library: state its numbers below.' : (value.specification ?? '')}</p>}
+      {value.added !== false && <p className="min-w-0 grow basis-40 text-sm text-soft">{value.libraryId === null && value.classification && !value.fNumber ? 'Not from the library: state its numbers below.' : (value.specification ?? '')}</p>}
       <Checkbox label="No filler (autogenous)" checked={value.added === false} onChange={(event) => set(event.target.checked ? fillerSchema.parse({ added: false }) : fillerSchema.parse({ added: true }))} />
       <span className="sr-only">{fillerInWords(value)}</span>
     </div>

@@ -20,7 +20,7 @@ export function MetalEditor({ path, label }: { path: string; label: string }) {
   const { content } = useSheet()
   const { value, set, error } = useSheetField<BaseMetal>(`variables.${path}`)
   const other = path.endsWith('.b') ? content.variables.baseMetals.a : null
-  const own = value.libraryId === null && metalInWords(value) !== ''
+  const own = value.libraryId === null && metalInWords(value) !== '' && !value.pNumber && !value.iso15608
   return (
     <div className="flex flex-wrap items-center gap-x-4 gap-y-1.5">
       <ComboBox

@@ -1,7 +1,6 @@
 import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { SectionNav, type SectionLink } from '@/components/SectionNav.tsx'
 import type { Verdict } from '@shared/schemas/assessment.ts'
-import type { ProcedureContent } from '@shared/schemas/welding.ts'
 import { BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from './catalogue.ts'
 import { useSheet } from './context.ts'
 import { CouponsSheet } from './CouponsSheet.tsx'
@@ -9,16 +8,16 @@ import { JointSheet } from './JointSheet.tsx'
 import { metalInWords } from './labels.ts'
 import { ProcessSheets, type ProcessSheetsProps } from './ProcessSheets.tsx'
 import { ScopeSheet, Text } from './ScopeSheet.tsx'
-import { SheetField } from './SheetField.tsx'
+import { isShown, SheetField } from './SheetField.tsx'
 
 /** The whole procedure as ruled sheets, in document order; typed in where the context has a form, read otherwise. */
 export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
-  const { content, control } = useSheet()
+  const sheet = useSheet()
+  const { content, control } = sheet
   const { baseMetals, processes } = content.variables
   const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
   return (
     <>
-      <ScopeSheet />
       <JointSheet />
       <Sheet id="base-metals" title="Base metals" aside={metals.join(' to ') || undefined}>
         {BASE_METALS.rows.map((spec) => (
@@ -26,7 +25,7 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
         ))}
       </Sheet>
       <ProcessSheets blocks={processes} {...acts} />
-      {[PREHEAT, PWHT].map((section) => (
+      {[PREHEAT, PWHT].filter(({ rows }) => rows.some((spec) => isShown(spec, '', null, sheet))).map((section) => (
         <Sheet key={section.id} id={section.id} title={section.title}>
           {section.rows.map((spec) => (
             <SheetField key={spec.path} spec={spec} />
@@ -34,6 +33,7 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
         </Sheet>
       ))}
       <CouponsSheet />
+      <ScopeSheet />
       {(control || content.notes) && (
         <Sheet id="notes" title="Notes">
           <SheetRow label="Notes" unit="printed at the end">
@@ -46,20 +46,22 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
 }
 
 /** The index of the sheets, each with the worst verdict found in it. */
-export function ProcedureNav({ content, verdicts, readOnly = false }: { content: ProcedureContent; verdicts: ReadonlyMap<string, Verdict>; readOnly?: boolean }) {
+export function ProcedureNav({ verdicts }: { verdicts: ReadonlyMap<string, Verdict> }) {
+  const sheet = useSheet()
+  const { content, control } = sheet
   const { processes } = content.variables
   const link = (id: string, label: string): SectionLink => ({ id, label, verdict: verdicts.get(id) ?? null })
   const sections = [
-    link('scope', 'Scope'),
     link('joint', 'Joint'),
     link('base-metals', 'Base metals'),
     ...processes.flatMap((block, index) =>
-      BLOCK_SECTIONS.filter(({ id }) => !readOnly || id !== 'passes' || block.passes.length > 0).map(({ id, title }) => link(blockSectionId(index, id), processes.length > 1 ? `${block.process ?? index + 1} ${title.toLowerCase()}` : title)),
+      BLOCK_SECTIONS.filter(({ rows }) => rows.some((spec) => isShown(spec, `processes.${index}.`, block, sheet))).map(({ id, title }) => link(blockSectionId(index, id), processes.length > 1 ? `${block.process ?? index + 1} ${title.toLowerCase()}` : title)),
     ),
     link('preheat', PREHEAT.title),
     link('pwht', PWHT.short ?? PWHT.title),
     link('coupons', 'Coupons'),
-    ...(readOnly && !content.notes ? [] : [link('notes', 'Notes')]),
+    link('scope', 'Scope'),
+    ...(!control && !content.notes ? [] : [link('notes', 'Notes')]),
   ]
   return <SectionNav sections={sections} label="Sheets of the procedure" />
 }

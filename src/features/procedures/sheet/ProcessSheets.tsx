@@ -6,7 +6,7 @@ import { BLOCK_SECTIONS, blockSectionId, type SectionSpec } from './catalogue.ts
 import { useSheet } from './context.ts'
 import { gasInWords } from './labels.ts'
 import { MECHANISATIONS, TRANSFER_MODES, wordOf } from './options.ts'
-import { SheetField } from './SheetField.tsx'
+import { isShown, SheetField } from './SheetField.tsx'
 
 /** A block's short name: its process with how it is handled. */
 export const blockName = (block: ProcessBlock): string => [block.process === 'OTHER' ? 'Another process' : (block.process ?? 'Process not stated'), block.mechanisation && wordOf(MECHANISATIONS, block.mechanisation).toLowerCase()].filter(Boolean).join(', ')
@@ -80,8 +80,8 @@ export function ProcessSheets({ blocks, onMove, onRemove, onAdd }: ProcessSheets
 }
 
 function BlockSheet({ section, block, index, lead }: { section: SectionSpec; block: ProcessBlock; index: number; lead: string }) {
-  const { control } = useSheet()
-  if (!control && section.id === 'passes' && block.passes.length === 0) return null
+  const sheet = useSheet()
+  if (!section.rows.some((spec) => isShown(spec, `processes.${index}.`, block, sheet))) return null
   return (
     <Sheet id={blockSectionId(index, section.id)} title={`${lead}${section.title}`} aside={summary(section.id, block)}>
       {section.rows.map((spec) => (

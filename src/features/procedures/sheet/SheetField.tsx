@@ -8,9 +8,10 @@ import { SheetRow } from '@/components/Sheet.tsx'
 import { worstVerdict } from '@/components/Verdict.tsx'
 import { readPath } from '../draft/paths.ts'
 import type { RowSpec } from './catalogue.ts'
-import { useSheet } from './context.ts'
+import { useSheet, type SheetValue } from './context.ts'
 import { Editor } from './Editor.tsx'
 import { gaugeOf, testedInWords } from './findings.ts'
+import { missingInWords } from './labels.ts'
 import { Reading } from './Reading.tsx'
 
 const NONE: readonly Finding[] = []
@@ -24,17 +25,21 @@ export function isStated(value: unknown): boolean {
   return true
 }
 
+/** Whether a row has a place: it arises here, or something is stated or found in it. */
+export function isShown(spec: RowSpec, prefix: string, block: ProcessBlock | null, sheet: Pick<SheetValue, 'content' | 'control' | 'findings'>): boolean {
+  const { variables } = sheet.content
+  const paths = spec.kind === 'pair' ? spec.paths : [spec.path]
+  if (paths.some((path) => isStated(readPath(variables, `${prefix}${path}`)))) return true
+  if (sheet.findings.get(`${prefix}${spec.path}`)?.some(({ verdict }) => verdict !== 'within')) return true
+  return sheet.control !== null && (!spec.when || spec.when(variables, block))
+}
+
 /** A row of the sheet as the catalogue tells it: label, input or value, gauge, and its notes in the margin. */
 export const SheetField = memo(function SheetField({ spec, prefix = '', block = null }: { spec: RowSpec; prefix?: string; block?: ProcessBlock | null }) {
   const sheet = useSheet()
   const path = `${prefix}${spec.path}`
-  const { variables } = sheet.content
   const findings = sheet.findings.get(path) ?? NONE
-  const value = readPath(variables, path)
-  const stated = spec.kind === 'pair' ? spec.paths.some((one) => isStated(readPath(variables, `${prefix}${one}`))) : isStated(value)
-  const notable = findings.some(({ verdict }) => verdict !== 'within')
-  const arises = !spec.when || spec.when(variables, block)
-  if (!stated && !notable && (!arises || !sheet.control)) return null
+  if (!isShown(spec, prefix, block, sheet)) return null
   return (
     <SheetRow label={spec.label} unit={unitOf(spec, sheet.system)} verdict={worstVerdict(findings.map(({ verdict }) => verdict))} gauge={gauge(spec, findings, sheet)} margin={<Notes findings={findings} />}>
       {sheet.control ? <Editor spec={spec} path={path} prefix={prefix} block={block} /> : <Reading spec={spec} path={path} prefix={prefix} />}
@@ -44,13 +49,13 @@ export const SheetField = memo(function SheetField({ spec, prefix = '', block = 
 
 /** A row's notes; without a place of its own it stands at the right of its nearest positioned ancestor. */
 export function Notes({ findings }: { findings: readonly Finding[] }) {
-  const { attention, onFix, couponNumber } = useSheet()
-  const shown = attention ? findings.filter(({ verdict }) => verdict !== 'within') : findings
+  const { attention, onFix, couponNumber, content } = useSheet()
+  const shown = (attention ? findings.filter(({ verdict }) => verdict !== 'within') : findings).map((finding) => ({ ...finding, missing: missingInWords(finding.missing, content) }))
   return <Margin findings={shown} onFix={onFix} couponNumber={couponNumber} />
 }
 
 function unitOf(spec: RowSpec, system: 'SI' | 'US') {
-  if (spec.kind === 'interval' || spec.kind === 'quantity') return SHOWN_UNIT[system][spec.dimension]
+  if (spec.kind === 'interval' || spec.kind === 'quantity') return spec.dimension === 'angle' ? 'degrees' : SHOWN_UNIT[system][spec.dimension]
   if (spec.kind === 'sizes') return `${SHOWN_UNIT[system].length}, commas between`
   return spec.hint
 }

@@ -4,7 +4,7 @@ import type { BaseMetal, Filler, GasMixture, Pass, ProcedureContent, ProcessBloc
 import { formatInterval, formatQuantity } from '@shared/units/format.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import { findingField } from '../draft/paths.ts'
-import { placedRows, type PlacedRow } from './catalogue.ts'
+import { BLOCK_SECTIONS, placedRows, type PlacedRow } from './catalogue.ts'
 import { standardName, wordOf } from './options.ts'
 
 const ROOT: Record<string, string> = { title: 'Title', scope: 'Scope', notes: 'Notes', supportingCoupons: 'Supporting coupons', 'variables.standards': 'Standards', 'variables.processes': 'Order of the processes' }
@@ -37,6 +37,8 @@ export const metalInWords = (metal: BaseMetal): string => [metal.specification, 
 export const gasInWords = (gas: GasMixture): string => (gas.components.length > 0 ? gas.components.map(({ gas: name, percent }) => `${name} ${percent} %`).join(' + ') : (gas.name ?? gas.isoSymbol ?? ''))
 export const fillerInWords = (filler: Filler): string => (filler.added === false ? 'none, autogenous' : [filler.classification, filler.specification && `(${filler.specification})`].filter(Boolean).join(' '))
 
+const plain = (value: unknown): string => (typeof value === 'string' || typeof value === 'number' ? String(value) : JSON.stringify(value))
+
 /** The value at a path, as read in `system`. */
 export function valueInWords(path: string, value: unknown, content: ProcedureContent, system: UnitSystem): string {
   if (value === null || value === undefined || value === '') return 'not stated'
@@ -48,7 +50,7 @@ export function valueInWords(path: string, value: unknown, content: ProcedureCon
   if (/processes[.#][^.]+$/.test(path)) return `${(value as ProcessBlock).process ?? 'A process'}, with everything in it`
   const row = rowFor(indexed, placedRows(processes))
   if (typeof value === 'boolean') return value ? 'yes' : 'no'
-  if (!row) return typeof value === 'string' || typeof value === 'number' ? String(value) : JSON.stringify(value)
+  if (!row) return plain(value)
   const { spec } = row
   switch (spec.kind) {
     case 'interval':
@@ -56,10 +58,10 @@ export function valueInWords(path: string, value: unknown, content: ProcedureCon
     case 'quantity':
       return formatQuantity(value as Quantity, spec.dimension, system).text
     case 'choice':
-      return wordOf(spec.options, String(value as string))
+      return wordOf(spec.options, plain(value))
     case 'metal':
     case 'pair':
-      return typeof value === 'object' ? or(metalInWords(value as BaseMetal)) : String(value as string)
+      return typeof value === 'object' ? or(metalInWords(value as BaseMetal)) : plain(value)
     case 'filler':
       return or(fillerInWords(value as Filler))
     case 'gas': {
@@ -75,6 +77,21 @@ export function valueInWords(path: string, value: unknown, content: ProcedureCon
     case 'panel':
       return (value as { settings: { control: string; value: string; unit: string }[] }).settings.map((one) => `${one.control} ${one.value} ${one.unit}`.trim()).join(', ')
     default:
-      return String(value as string)
+      return plain(value)
   }
 }
+
+/** What a finding misses, with fields by their names on the sheet: `procedure: maxPassThickness` → "Thickest pass, on the sheet". */
+export function missingInWords(missing: readonly string[], content: ProcedureContent): string[] {
+  const said = missing.map((text) => {
+    const [, record, field] = /^([^:]+): ([\w.]+)$/.exec(text) ?? []
+    if (!record || !field) return text
+    const label = rowFor(field, placedRows(content.variables.processes)) ? labelOf(field, content) : (namedInBlock(field) ?? field)
+    return `${label}, on ${record === 'procedure' ? 'this sheet' : record}`
+  })
+  return [...new Set(said)]
+}
+
+/** A coupon's field is told from the block, without its index. */
+const namedInBlock = (field: string): string | null => BLOCK_ROWS.filter(({ path }) => field === path || field.startsWith(`${path}.`)).sort((a, b) => b.path.length - a.path.length)[0]?.label ?? null
+const BLOCK_ROWS = BLOCK_SECTIONS.flatMap(({ rows }) => rows)

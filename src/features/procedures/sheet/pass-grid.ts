@@ -30,7 +30,7 @@ const bare = (text: string, unit: string) => (unit !== '' && text.endsWith(` ${u
 export function cellText(pass: Pass, { id, dimension }: GridColumn, system: UnitSystem): string {
   const value = pass[id]
   if (value === null) return ''
-  if (!dimension) return id === 'layer' ? (LAYERS.find((one) => one.value === value)?.label ?? '') : String(value as string)
+  if (!dimension) return id === 'layer' ? (LAYERS.find((one) => one.value === value)?.label ?? '') : pass.number
   const text = id === 'fillerDiameter' ? formatQuantity(value as Quantity, dimension, system).text : formatInterval(value as Interval, dimension, system).text
   return bare(text, SHOWN_UNIT[system][dimension])
 }
