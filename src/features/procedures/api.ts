@@ -1,8 +1,7 @@
 /** What the procedure pages read and change; keys are those of lib/query, so that every page sees one cache. */
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import type { BodyOf } from '@shared/schemas/endpoints.ts'
-import type { LibraryItem, Revision } from '@shared/schemas/records.ts'
-import type { ComboItem } from '@/components/fields/ComboBox.tsx'
+import type { Revision } from '@shared/schemas/records.ts'
 import { call } from '@/lib/api.ts'
 import { query } from '@/lib/query.ts'
 
@@ -11,14 +10,6 @@ export const procedureQuery = (id: string) => query('readProcedure', { params: {
 export const couponQuery = (id: string) => query('readCoupon', { params: { id } })
 export const comparisonQuery = (id: string) => query('compareRevision', { params: { id } })
 export const assessmentQuery = (id: string) => query('assessRevision', { params: { id } })
-
-/** Type-ahead over one kind of the library, for a ComboBox. */
-export const searchLibrary =
-  (kind: LibraryItem['kind']) =>
-  async (text: string, signal: AbortSignal): Promise<ComboItem<Record<string, unknown>>[]> => {
-    const page = await call('listLibrary', { params: { kind }, query: { q: text || undefined, limit: 20 }, signal })
-    return page.items.map((item) => ({ id: item.id, title: item.title, subtitle: item.subtitle, data: item.content }))
-  }
 
 /** Coupons by number or title, for linking. */
 export async function searchCoupons(text: string, signal: AbortSignal) {

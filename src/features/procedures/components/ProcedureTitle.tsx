@@ -5,7 +5,7 @@ import type { ProcedureContent } from '@shared/schemas/welding.ts'
 import { Stamp } from '@/components/Stamp.tsx'
 import { Tag, TitleBlock } from '@/components/TitleBlock.tsx'
 import { day } from '@/lib/figures.ts'
-import { MECHANISATIONS, standardName, wordOf } from '../sheet/options.ts'
+import { MECHANISATIONS, standardName, wordOf } from '@/components/variables/options.ts'
 
 const SIGNED = { approved: 'Approved', withdrawn: 'Withdrawn', superseded: 'Superseded' } as const
 

@@ -1,7 +1,7 @@
 /** Fixes that the margin offers, as changes of the content that can be taken back. */
 import type { Fix } from '@shared/schemas/assessment.ts'
 import { procedureContentSchema, type ProcedureContent } from '@shared/schemas/welding.ts'
-import { contentPath, readPath, same, writePath } from './paths.ts'
+import { contentPath, readPath, same, writePath } from '@/lib/draft/paths.ts'
 
 export interface AppliedFix {
   label: string

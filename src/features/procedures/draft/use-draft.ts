@@ -9,9 +9,9 @@ import { useSaveKey } from '@/hooks/keys.ts'
 import { call } from '@/lib/api.ts'
 import { asProblem, ProblemError } from '@/lib/problem.ts'
 import { revisionQuery } from '../api.ts'
-import { dropLocalCopy, readLocalCopy, writeLocalCopy } from './local-copy.ts'
-import { contentPath, same } from './paths.ts'
-import { retryDelay, saving as reduce, settled, startSaving, type Saving, type SavingEvent } from './saving.ts'
+import { dropLocalCopy, readLocalCopy, writeLocalCopy } from '@/lib/draft/local-copy.ts'
+import { contentPath, same } from '@/lib/draft/paths.ts'
+import { retryDelay, saving as reduce, settled, startSaving, type Saving, type SavingEvent } from '@/lib/draft/saving.ts'
 
 /** The sheet's fields are named by dotted paths that the catalogue holds as data, so the form is typed by path at the fields themselves. */
 export type SheetForm = UseFormReturn<FieldValues>

@@ -2,7 +2,7 @@ import { useCallback, useEffect, useEffectEvent, useRef } from 'react'
 import type { Finding, Fix } from '@shared/schemas/assessment.ts'
 import { say } from '@/components/toast.tsx'
 import { applyFix, undoFix, type AppliedFix } from './fixes.ts'
-import { contentPath, findingField } from './paths.ts'
+import { contentPath, findingField } from '@/lib/draft/paths.ts'
 import type { Draft } from './use-draft.ts'
 
 const typing = (target: EventTarget | null) => target instanceof HTMLElement && (target.isContentEditable || ['INPUT', 'TEXTAREA', 'SELECT'].includes(target.tagName))

@@ -14,9 +14,10 @@ import { useMay } from '@/hooks/session.ts'
 import { useUnits } from '@/hooks/units.ts'
 import { call } from '@/lib/api.ts'
 import { asProblem } from '@/lib/problem.ts'
-import { revisionQuery, searchLibrary } from '../api.ts'
-import { metalInWords } from '../sheet/labels.ts'
-import { PROCESS_OPTIONS, STANDARDS, UNIT_SYSTEMS } from '../sheet/options.ts'
+import { searchLibrary } from '@/lib/library-search.ts'
+import { revisionQuery } from '../api.ts'
+import { metalInWords } from '@/components/variables/labels.ts'
+import { PROCESS_OPTIONS, STANDARDS, UNIT_SYSTEMS } from '@/components/variables/options.ts'
 
 const search = searchLibrary('base-metals')
 const empty = baseMetalSchema.parse({})

@@ -14,7 +14,7 @@ import { useMay } from '@/hooks/session.ts'
 import { useUnits, type Units } from '@/hooks/units.ts'
 import { day } from '@/lib/figures.ts'
 import { listQuery } from '@/lib/query.ts'
-import { PROCESS_OPTIONS, standardName } from '../sheet/options.ts'
+import { PROCESS_OPTIONS, standardName } from '@/components/variables/options.ts'
 
 const SORTS = ['number', '-number', 'updatedAt', '-updatedAt', 'title', '-title'] as const
 const sorted = (sort: string) => SORTS.find((one) => one === sort) ?? '-updatedAt'

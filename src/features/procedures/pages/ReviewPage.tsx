@@ -20,8 +20,8 @@ import { asProblem } from '@/lib/problem.ts'
 import { assessmentQuery, comparisonQuery, revisionQuery, useRevisionActs } from '../api.ts'
 import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
 import { nameOf } from '../dialogs/acts.tsx'
-import { blocking, needing } from '../sheet/findings.ts'
-import { standardName } from '../sheet/options.ts'
+import { blocking, needing } from '@/components/variables/findings.ts'
+import { standardName } from '@/components/variables/options.ts'
 
 /** A revision under review: what changed, what the standard says, what carries it, and the act of signing. */
 export function ReviewPage() {

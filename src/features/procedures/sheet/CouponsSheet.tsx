@@ -7,9 +7,9 @@ import { ComboBox } from '@/components/fields/ComboBox.tsx'
 import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { worstVerdict } from '@/components/Verdict.tsx'
 import { couponQuery, searchCoupons } from '../api.ts'
-import { useSheet, useSheetField, inputId } from './context.ts'
-import { RECORD } from './findings.ts'
-import { Notes } from './SheetField.tsx'
+import { useSheet, useSheetField, inputId } from '@/components/variables/context.ts'
+import { RECORD } from '@/components/variables/findings.ts'
+import { Notes } from '@/components/variables/SheetField.tsx'
 
 /** The coupons that support the procedure, and the findings that concern the record as a whole. */
 export function CouponsSheet() {

@@ -1,7 +1,7 @@
 import type { Assessment } from '@shared/schemas/assessment.ts'
 import { Switch } from '@/components/fields/text.tsx'
 import { VerdictTally } from '@/components/Verdict.tsx'
-import { standardName } from './options.ts'
+import { standardName } from '@/components/variables/options.ts'
 
 export interface MarginHeadProps {
   assessments: readonly Assessment[]

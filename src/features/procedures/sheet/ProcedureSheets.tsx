@@ -1,14 +1,14 @@
 import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { SectionNav, type SectionLink } from '@/components/SectionNav.tsx'
 import type { Verdict } from '@shared/schemas/assessment.ts'
-import { BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from './catalogue.ts'
-import { useSheet } from './context.ts'
+import { BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from '@/components/variables/catalogue.ts'
+import { useSheet } from '@/components/variables/context.ts'
 import { CouponsSheet } from './CouponsSheet.tsx'
-import { JointSheet } from './JointSheet.tsx'
-import { metalInWords } from './labels.ts'
-import { ProcessSheets, type ProcessSheetsProps } from './ProcessSheets.tsx'
+import { JointSheet } from '@/components/variables/JointSheet.tsx'
+import { metalInWords } from '@/components/variables/labels.ts'
+import { ProcessSheets, type ProcessSheetsProps } from '@/components/variables/ProcessSheets.tsx'
 import { ScopeSheet, Text } from './ScopeSheet.tsx'
-import { isShown, SheetField } from './SheetField.tsx'
+import { isShown, SheetField } from '@/components/variables/SheetField.tsx'
 
 /** The whole procedure as ruled sheets, in document order; typed in where the context has a form, read otherwise. */
 export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {

@@ -3,10 +3,10 @@ import type { StandardChoice } from '@shared/schemas/common.ts'
 import { Button } from '@/components/Button.tsx'
 import { Select, TextArea, TextField } from '@/components/fields/text.tsx'
 import { Sheet, SheetRow } from '@/components/Sheet.tsx'
-import { WRITTEN_IN, TOUGHNESS } from './catalogue.ts'
-import { useSheet, useSheetField } from './context.ts'
-import { standardName, STANDARDS } from './options.ts'
-import { SheetField } from './SheetField.tsx'
+import { WRITTEN_IN, TOUGHNESS } from '@/components/variables/catalogue.ts'
+import { useSheet, useSheetField } from '@/components/variables/context.ts'
+import { standardName, STANDARDS } from '@/components/variables/options.ts'
+import { SheetField } from '@/components/variables/SheetField.tsx'
 
 const orNull = (text: string) => (text === '' ? null : text)
 

@@ -1,5 +1,5 @@
 import type { Pass } from '@shared/schemas/welding.ts'
-import { readPath } from '../draft/paths.ts'
+import { readPath } from '@/lib/draft/paths.ts'
 import type { RowSpec } from './catalogue.ts'
 import { useSheet } from './context.ts'
 import { valueInWords } from './labels.ts'

@@ -7,7 +7,7 @@ import { Button } from '@/components/Button.tsx'
 import { ComboBox } from '@/components/fields/ComboBox.tsx'
 import { IntervalField } from '@/components/fields/quantity.tsx'
 import { Select } from '@/components/fields/text.tsx'
-import { searchLibrary } from '../api.ts'
+import { searchLibrary } from '@/lib/library-search.ts'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { gasInWords } from './labels.ts'
 

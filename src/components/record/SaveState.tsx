@@ -1,6 +1,6 @@
 import { Button } from '@/components/Button.tsx'
 import { moment } from '@/lib/figures.ts'
-import type { Saving } from '../draft/saving.ts'
+import type { Saving } from '@/lib/draft/saving.ts'
 
 /** One line on where the typing is: saved, on its way, kept here, or waiting for a decision. */
 export function SaveState({ saving, onSave, onCompare }: { saving: Saving; onSave: () => void; onCompare: () => void }) {

@@ -2,7 +2,7 @@ import { Plus, X } from 'lucide-react'
 import type { Electrical } from '@shared/schemas/welding.ts'
 import { Button } from '@/components/Button.tsx'
 import { TextField } from '@/components/fields/text.tsx'
-import { readPath } from '../draft/paths.ts'
+import { readPath } from '@/lib/draft/paths.ts'
 import { inputId, useSheet, useSheetField } from './context.ts'
 
 type Panel = NonNullable<Electrical['panel']>

@@ -5,8 +5,8 @@ import { Button } from '@/components/Button.tsx'
 import { Dialog } from '@/components/Dialog.tsx'
 import { moment } from '@/lib/figures.ts'
 import { useUnits } from '@/hooks/units.ts'
-import { mergeContents, type Difference, type Side } from '../draft/merge.ts'
-import { labelOf, valueInWords } from '../sheet/labels.ts'
+import { mergeContents, type Difference, type Side } from '@/lib/draft/merge.ts'
+import { labelOf, valueInWords } from '@/components/variables/labels.ts'
 
 export interface ConflictViewProps {
   isOpen: boolean

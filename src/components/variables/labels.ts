@@ -3,7 +3,7 @@ import type { Interval, Quantity } from '@shared/schemas/common.ts'
 import type { BaseMetal, Filler, GasMixture, Pass, ProcedureContent, ProcessBlock } from '@shared/schemas/welding.ts'
 import { formatInterval, formatQuantity } from '@shared/units/format.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
-import { findingField } from '../draft/paths.ts'
+import { findingField } from '@/lib/draft/paths.ts'
 import { BLOCK_SECTIONS, placedRows, type PlacedRow } from './catalogue.ts'
 import { standardName, wordOf } from './options.ts'
 
