@@ -1,0 +1,133 @@
+import { mkdtemp, rm } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
+import path from 'node:path'
+import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest'
+import { demoSignIns, loadDemo } from '../../server/demo/load.ts'
+import { DEMO_PASSWORD, FIRM } from '../../server/demo/people.ts'
+import { picturesOf } from '../../server/demo/pictures.ts'
+import type { Assessment } from '../../shared/schemas/assessment.ts'
+import type { Page } from '../../shared/schemas/common.ts'
+import { ROLES } from '../../shared/schemas/people.ts'
+import type { Coupon, CouponRow, Job, JobRow, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
+import { startApp, type Agent, type TestApp } from './harness.ts'
+
+let app: TestApp
+let folder: string
+let engineer: Agent
+const agentOf = async (role: string): Promise<Agent> => {
+  const agent = app.anonymous()
+  const person = demoSignIns.find((one) => one.role === role)
+  await agent.post('/api/session').send({ email: person?.email, password: person?.password }).expect(200)
+  return agent
+}
+
+const load = (): Promise<void> => loadDemo(inject('databaseUrl'), { NODE_ENV: 'test', SESSION_SECRET: 's'.repeat(32), SIGNING_PASSPHRASE: 'p'.repeat(24), DATA_DIR: folder, LOG_LEVEL: 'silent' })
+
+beforeAll(async () => {
+  folder = await mkdtemp(path.join(tmpdir(), 'demo-'))
+  await load()
+  app = await startApp({ env: { DATA_DIR: folder } })
+  engineer = await agentOf('engineer')
+}, 120_000)
+afterAll(async () => {
+  await app.close()
+  await rm(folder, { recursive: true, force: true })
+})
+
+const get = async <T>(address: string, agent: Agent = engineer): Promise<T> => (await agent.get(`/api/${address}`).expect(200)).body as T
+const procedures = () => get<Page<ProcedureRow>>('procedures?limit=200')
+
+describe('the demo firm', () => {
+  it('is loaded once, however often it is asked for', async () => {
+    await load()
+    const { rows } = await app.services.database.owner.query('select 1 from organizations where name = $1', [FIRM.name])
+    expect(rows).toHaveLength(1)
+    expect((await procedures()).total).toBe(12)
+  })
+
+  it('has somebody of each role, two engineers, two welders and somebody with two roles', async () => {
+    for (const role of ROLES) expect(demoSignIns.some((one) => one.role === role)).toBe(true)
+    expect(demoSignIns.filter(({ role }) => role === 'engineer')).toHaveLength(2)
+    expect(demoSignIns.filter(({ role }) => role === 'welder')).toHaveLength(2)
+    expect(demoSignIns.some(({ role }) => role === 'inspector and supervisor')).toBe(true)
+    for (const { email, password } of demoSignIns) {
+      expect(password).toBe(DEMO_PASSWORD)
+      await app.anonymous().post('/api/session').send({ email, password }).expect(200)
+    }
+  })
+
+  it('has procedures in every state', async () => {
+    const { items } = await procedures()
+    const records = await Promise.all(items.map(({ id }) => get<ProcedureRecord>(`procedures/${id}`)))
+    const states = records.flatMap(({ revisions }) => revisions.map(({ state }) => state))
+    expect(Object.fromEntries([...new Set(states)].map((state) => [state, states.filter((one) => one === state).length]))).toEqual({ superseded: 1, approved: 6, withdrawn: 1, draft: 3, 'in-review': 2 })
+  })
+
+  it('has eight coupons with pictures, those certified free of anything missing', async () => {
+    const { items } = await get<Page<CouponRow>>('coupons?limit=200')
+    expect(items.map(({ state }) => state)).toEqual(['certified', 'certified', 'certified', 'certified', 'certified', 'testing', 'welding', 'rejected'])
+    for (const { id, photoCount, state } of items) {
+      expect(photoCount).toBe(state === 'welding' ? 1 : 3)
+      const { qualifications } = await get<{ qualifications: { readyToCertify: boolean }[] }>(`coupons/${id}/qualification`)
+      expect(qualifications.every(({ readyToCertify }) => readyToCertify)).toBe(state === 'certified')
+    }
+    const first = await get<Coupon>(`coupons/${items[0]?.id}`)
+    expect(first.signatures[0]?.statement).toContain('I, Hal Ostby, acting as inspector, certify')
+    const { items: photos } = await get<{ items: { id: string; tag: string }[] }>(`coupons/${items[0]?.id}/photos`)
+    expect(photos.map(({ tag }) => tag)).toEqual(['plate', 'macro', 'bend'])
+    await engineer.get(`/api/photos/${photos[1]?.id}/thumbnail`).expect(200)
+  })
+
+  it('says of itself what the engine says of it', async () => {
+    const { items } = await procedures()
+    const judged = new Map<string, { verdict: string; revision: Revision; assessment: Assessment }>()
+    for (const { number, revisionId } of items) {
+      const revision = await get<Revision>(`revisions/${revisionId}`)
+      const { assessments } = await get<{ assessments: Assessment[] }>(`revisions/${revisionId}/assessment`)
+      const [assessment] = assessments
+      if (assessment) judged.set(number, { verdict: assessment.verdict, revision, assessment })
+    }
+    for (const { revision, verdict } of judged.values()) if (revision.state === 'approved') expect([revision.number, revision.deviationReason === null]).toEqual([revision.number, verdict === 'within'])
+    expect(judged.get('WPS-006')?.revision).toMatchObject({ state: 'approved', deviationReason: expect.stringContaining('26 mm') })
+    expect(judged.get('WPS-009')).toMatchObject({ verdict: 'outside', revision: { state: 'draft' } })
+    expect(judged.get('WPS-009')?.assessment.findings.some(({ verdict, sentence }) => verdict === 'outside' && sentence.includes('25 mm') && sentence.includes('20 mm') && sentence.includes('10 mm'))).toBe(true)
+    expect(judged.get('WPS-010')).toMatchObject({ verdict: 'cannot-tell', revision: { state: 'draft' } })
+  })
+
+  it('has the pulsed aluminium procedure with its panel, and ER4043 under review', async () => {
+    const { items } = await procedures()
+    const content = async (number: string) => (await get<Revision>(`revisions/${items.find((one) => one.number === number)?.revisionId}`)).content.variables.processes[0]
+    const er5356 = await content('WPS-005')
+    expect(er5356?.filler.classification).toBe('ER5356')
+    expect(er5356?.electrical.panel).toMatchObject({ machine: 'M-03', mode: 'manual pulse' })
+    expect(er5356?.electrical.panel?.settings.map(({ control, value, unit }) => `${control} ${value} ${unit}`)).toEqual(['Wire feed 335 in/min', 'Voltage 23.4 V', 'Background 17.0 V', 'Frequency 120 Hz', 'Pulse on-time 1.9 ms'])
+    expect(er5356?.electrical.panel?.caution).toContain('no crater fill')
+    expect((await content('WPS-008'))?.filler.classification).toBe('ER4043')
+  })
+
+  it('has jobs whose joints find the procedure that they are to be welded by', async () => {
+    const { items } = await get<Page<JobRow>>('jobs')
+    expect(items).toHaveLength(3)
+    const welder = await agentOf('welder')
+    for (const { id } of items) {
+      const job = await get<Job>(`jobs/${id}`)
+      expect(job.joints.length).toBeGreaterThanOrEqual(5)
+      expect(job.joints.length).toBeLessThanOrEqual(9)
+      for (const joint of job.joints) {
+        const { fits } = await get<LookupResult>(`lookup?jointId=${joint.id}`, welder)
+        if (joint.procedureNumber) expect([joint.number, fits.map(({ number }) => number)]).toEqual([joint.number, expect.arrayContaining([joint.procedureNumber])])
+      }
+    }
+  })
+
+  it.each(['engineer', 'inspector', 'supervisor', 'welder', 'auditor'])('has something waiting for the %s', async (role) => {
+    const { tasks } = await get<{ tasks: unknown[] }>('today', await agentOf(role))
+    expect(tasks.length).toBeGreaterThan(0)
+  })
+
+  it('draws the same pictures each time', async () => {
+    const set = { tone: 'steel', seed: 3, layers: 5, tested: true } as const
+    const [one, other] = [await picturesOf(set), await picturesOf(set)]
+    expect(one.map(({ jpeg }) => jpeg.toString('base64'))).toEqual(other.map(({ jpeg }) => jpeg.toString('base64')))
+  })
+})
