@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react'
+import { useTitle } from '@/hooks/title.ts'
 
 export interface TitleCell {
   label: string
@@ -20,8 +21,9 @@ export interface TitleBlockProps {
   stampNote?: ReactNode
 }
 
-/** Every record opens with this: a drawing's title block, number large, then ruled cells, then the stamp. */
+/** Every record opens with this: a drawing's title block, number large, then ruled cells, then the stamp. Names the browser's tab too. */
 export function TitleBlock({ kind, number, revision, title, cells, stamp, stampNote }: TitleBlockProps) {
+  useTitle(revision === undefined ? number : `${number} rev ${revision}`)
   const cell = 'min-w-0 border-r border-b border-ink px-3.5 pt-2.5 pb-3'
   return (
     <div className="overflow-hidden border border-ink bg-sheet">

@@ -1,6 +1,7 @@
 /** What a page shows when there is nothing, when something failed, and while it waits. */
 import type { ReactNode } from 'react'
 import { Link } from 'react-router-dom'
+import { useTitle } from '@/hooks/title.ts'
 import { asProblem } from '@/lib/problem.ts'
 import { Button } from './Button.tsx'
 
@@ -121,6 +122,7 @@ export function Breadcrumb({ trail }: { trail: readonly Crumb[] }) {
 
 /** A page's head where no title block opens it: lists and settings. */
 export function PageHead({ title, children, actions }: { title: string; children?: ReactNode; actions?: ReactNode }) {
+  useTitle(title)
   return (
     <header className="mb-4 flex flex-wrap items-end justify-between gap-x-6 gap-y-3">
       <div>

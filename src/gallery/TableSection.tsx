@@ -22,7 +22,7 @@ const ROWS: Row[] = [
   { id: 'WPS-014 B', title: 'Pulsed groove weld, 6061-T6 plate', process: 'GMAW', from: 5, to: 25, state: 'draft' },
 ]
 const COLUMNS: Column<Row>[] = [
-  { id: 'number', header: 'Number', sort: 'number', cell: (row) => row.id },
+  { id: 'number', header: 'Number', sort: 'number', className: 'whitespace-nowrap', cell: (row) => row.id },
   { id: 'title', header: 'Title', sort: 'title', cell: (row) => row.title },
   { id: 'process', header: 'Process', cell: (row) => row.process },
   { id: 'thickness', header: 'Thickness, mm', align: 'right', cell: (row) => `${row.from}–${row.to}` },

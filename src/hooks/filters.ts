@@ -5,7 +5,11 @@ import { useSearchParams } from 'react-router-dom'
 export function useFilters<K extends string>(keys: readonly K[]): { values: Record<K, string>; set: (changes: Partial<Record<K, string>>) => void; clear: () => void; any: boolean } {
   const [search, setSearch] = useSearchParams()
   const names = keys.join(' ')
-  const values = useMemo(() => Object.fromEntries(names.split(' ').map((key) => [key, search.get(key) ?? ''])) as Record<K, string>, [names, search])
+  const values = useMemo(() => {
+    const read: Record<string, string> = {}
+    for (const key of names.split(' ')) read[key] = search.get(key) ?? ''
+    return read as Record<K, string>
+  }, [names, search])
   const set = useCallback(
     (changes: Partial<Record<K, string>>) =>
       setSearch(

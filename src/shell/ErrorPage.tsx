@@ -1,10 +1,12 @@
 import { isRouteErrorResponse, useRouteError } from 'react-router-dom'
 import { ButtonLink } from '@/components/Button.tsx'
 import { ErrorState } from '@/components/states.tsx'
+import { useTitle } from '@/hooks/title.ts'
 import { asProblem } from '@/lib/problem.ts'
 
 /** A page of this program that is not there. */
 export function NotFound() {
+  useTitle('Page not found')
   return (
     <div className="mx-auto max-w-3xl py-10">
       <p className="cell-label">Page not found</p>

@@ -1,11 +1,16 @@
 import { createContext, useContext } from 'react'
 import { useController, type Control, type FieldValues } from 'react-hook-form'
 import type { Finding, Fix } from '@shared/schemas/assessment.ts'
-import type { ProcedureContent } from '@shared/schemas/welding.ts'
+import type { WeldingVariables } from '@shared/schemas/welding.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 
+/** What every record of a weld has: a procedure's content, a coupon's. */
+export interface WeldContent {
+  variables: WeldingVariables
+}
+
 export interface SheetValue {
-  content: ProcedureContent
+  content: WeldContent
   /** The person's own system: figures are shown, and bare ones read, in it. */
   system: UnitSystem
   /** null: the sheet is only read. */

@@ -1,9 +1,10 @@
 /** What a field is called and how its value reads, for conflicts and messages: "GMAW: Amps", "180–240 A". */
 import type { Interval, Quantity } from '@shared/schemas/common.ts'
-import type { BaseMetal, Filler, GasMixture, Pass, ProcedureContent, ProcessBlock } from '@shared/schemas/welding.ts'
+import type { BaseMetal, Filler, GasMixture, Pass, ProcessBlock } from '@shared/schemas/welding.ts'
 import { formatInterval, formatQuantity } from '@shared/units/format.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import { findingField } from '@/lib/draft/paths.ts'
+import type { WeldContent } from './context.ts'
 import { BLOCK_SECTIONS, placedRows, type PlacedRow } from './catalogue.ts'
 import { standardName, wordOf } from './options.ts'
 
@@ -19,7 +20,7 @@ export function rowFor(path: string, rows: readonly PlacedRow[]): PlacedRow | nu
 const byIndex = (path: string, blocks: readonly ProcessBlock[]): string => path.replace(/processes#([^.]+)/, (_all, id: string) => `processes.${Math.max(0, blocks.findIndex((block) => block.id === id))}`)
 
 /** A field's name as a person would say it, with the process where there are several. */
-export function labelOf(path: string, content: ProcedureContent): string {
+export function labelOf(path: string, content: WeldContent): string {
   const known = ROOT[path]
   if (known) return known
   const { processes } = content.variables
@@ -40,10 +41,10 @@ export const fillerInWords = (filler: Filler): string => (filler.added === false
 const plain = (value: unknown): string => (typeof value === 'string' || typeof value === 'number' ? String(value) : JSON.stringify(value))
 
 /** The value at a path, as read in `system`. */
-export function valueInWords(path: string, value: unknown, content: ProcedureContent, system: UnitSystem): string {
+export function valueInWords(path: string, value: unknown, content: WeldContent, system: UnitSystem): string {
   if (value === null || value === undefined || value === '') return 'not stated'
   if (path === 'supportingCoupons') return `${(value as string[]).length} linked`
-  if (path === 'variables.standards') return (value as ProcedureContent['variables']['standards']).map(({ standard, edition }) => `${standardName(standard)} ${edition}`).join(', ')
+  if (path === 'variables.standards') return (value as WeldContent['variables']['standards']).map(({ standard, edition }) => `${standardName(standard)} ${edition}`).join(', ')
   if (path === 'variables.processes') return (value as ProcessBlock[]).map(({ process }) => process ?? 'not stated').join(', ')
   const { processes } = content.variables
   const indexed = byIndex(path, processes)
@@ -82,7 +83,7 @@ export function valueInWords(path: string, value: unknown, content: ProcedureCon
 }
 
 /** What a finding misses, with fields by their names on the sheet: `procedure: maxPassThickness` → "Thickest pass, on the sheet". */
-export function missingInWords(missing: readonly string[], content: ProcedureContent): string[] {
+export function missingInWords(missing: readonly string[], content: WeldContent): string[] {
   const said = missing.map((text) => {
     const [, record, field] = /^([^:]+): ([\w.]+)$/.exec(text) ?? []
     if (!record || !field) return text

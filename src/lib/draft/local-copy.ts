@@ -1,22 +1,20 @@
-/** What this device holds of a draft that the server does not have yet, so that a crash loses nothing. */
+/** What this device holds of a record that the server does not have yet, so that a crash loses nothing. */
 import { z } from 'zod'
-import { procedureContentSchema, type ProcedureContent } from '@shared/schemas/welding.ts'
 
-/** The content may be unfinished (a title cleared a moment ago), so only its variables are held to the full schema. */
-const copySchema = z.object({ version: z.number().int(), base: procedureContentSchema, content: procedureContentSchema.extend({ title: z.string() }), at: z.iso.datetime() })
-export interface LocalCopy {
+export interface LocalCopy<C> {
   /** Version that the typing started from. */
   version: number
-  base: ProcedureContent
-  content: ProcedureContent
+  base: C
+  content: C
   at: string
 }
 
-const key = (personId: string, revisionId: string) => `sidebend.draft.${personId}.${revisionId}`
+const key = (personId: string, recordId: string) => `sidebend.draft.${personId}.${recordId}`
 
-export function readLocalCopy(personId: string, revisionId: string, storage: Storage = localStorage): LocalCopy | null {
+/** @param schema of a content that may be unfinished: a title cleared a moment ago is kept too */
+export function readLocalCopy<C>(schema: z.ZodType<C>, personId: string, recordId: string, storage: Storage = localStorage): LocalCopy<C> | null {
   try {
-    const parsed = copySchema.safeParse(JSON.parse(storage.getItem(key(personId, revisionId)) ?? 'null'))
+    const parsed = z.object({ version: z.number().int(), base: schema, content: schema, at: z.iso.datetime() }).safeParse(JSON.parse(storage.getItem(key(personId, recordId)) ?? 'null'))
     return parsed.success ? parsed.data : null
   } catch {
     return null
@@ -24,18 +22,18 @@ export function readLocalCopy(personId: string, revisionId: string, storage: Sto
 }
 
 /** @returns false when the device keeps nothing (private window, full) */
-export function writeLocalCopy(personId: string, revisionId: string, copy: LocalCopy, storage: Storage = localStorage): boolean {
+export function writeLocalCopy<C>(personId: string, recordId: string, copy: LocalCopy<C>, storage: Storage = localStorage): boolean {
   try {
-    storage.setItem(key(personId, revisionId), JSON.stringify(copy))
+    storage.setItem(key(personId, recordId), JSON.stringify(copy))
     return true
   } catch {
     return false
   }
 }
 
-export function dropLocalCopy(personId: string, revisionId: string, storage: Storage = localStorage): void {
+export function dropLocalCopy(personId: string, recordId: string, storage: Storage = localStorage): void {
   try {
-    storage.removeItem(key(personId, revisionId))
+    storage.removeItem(key(personId, recordId))
   } catch {
     // Nothing was kept, so nothing is left behind.
   }

@@ -1,15 +1,15 @@
 /**
- * Joins two edits of one draft. What only one of them changed is taken from that one; what both changed differently is a clash
- * for the person to settle. A metal, filler, gas or pass list is one value: half of mine with half of theirs would describe
+ * Joins two edits of one record. What only one of them changed is taken from that one; what both changed differently is a clash
+ * for the person to settle. A metal, filler, gas or pass list is one value, as
+ * is anything that is not a plain part; half of mine with half of theirs would describe
  * something that neither meant.
  */
-import type { ProcedureContent, ProcessBlock } from '@shared/schemas/welding.ts'
 import { same } from './paths.ts'
 
 export type Side = 'mine' | 'theirs'
 
 export interface Difference {
-  /** Dotted path; a process block is named by its id: `variables.processes#fill.electrical.current`. */
+  /** Dotted path; an item of a list is named by its id: `variables.processes#fill.electrical.current`. */
   path: string
   base: unknown
   mine: unknown
@@ -18,8 +18,8 @@ export interface Difference {
   by: Side | 'both'
 }
 
-export interface Merge {
-  content: ProcedureContent
+export interface Merge<C> {
+  content: C
   /** Everything in which the two differ, in document order. */
   differences: Difference[]
 }
@@ -27,19 +27,22 @@ export interface Merge {
 type Tree = Record<string, unknown>
 const WHOLE = ['si', 'all', 'components', 'settings', 'libraryId']
 const branches = (value: unknown): value is Tree => typeof value === 'object' && value !== null && !Array.isArray(value) && !WHOLE.some((key) => key in value)
-const BLOCKS = 'variables.processes'
+interface Item {
+  id: string
+}
 
 /**
  * Three-way merge.
  * @param base what both started from
+ * @param lists paths of the lists whose items keep an id, and are joined item by item
  * @param choose settles a difference by its path; where it says nothing, the one who changed the field has it, and a clash stays mine
  */
-export function mergeContents(base: ProcedureContent, mine: ProcedureContent, theirs: ProcedureContent, choose: (path: string) => Side | undefined = () => undefined): Merge {
+export function mergeContents<C>(base: C, mine: C, theirs: C, lists: readonly string[], choose: (path: string) => Side | undefined = () => undefined): Merge<C> {
   const differences: Difference[] = []
 
   const settle = (path: string, from: unknown, my: unknown, their: unknown): unknown => {
     if (same(my, their)) return my
-    if (path === BLOCKS) return mergeBlocks((from ?? []) as ProcessBlock[], my as ProcessBlock[], their as ProcessBlock[])
+    if (lists.includes(path)) return mergeItems(path, (from ?? []) as Item[], my as Item[], their as Item[])
     if (branches(my) && branches(their)) {
       const before = branches(from) ? from : {}
       return Object.fromEntries([...new Set([...Object.keys(my), ...Object.keys(their)])].map((key) => [key, settle(path ? `${path}.${key}` : key, before[key], my[key], their[key])]))
@@ -49,21 +52,19 @@ export function mergeContents(base: ProcedureContent, mine: ProcedureContent, th
     return (choose(path) ?? by) === 'theirs' ? their : my
   }
 
-  const mergeBlocks = (from: ProcessBlock[], my: ProcessBlock[], their: ProcessBlock[]): ProcessBlock[] => {
-    const ids = (blocks: ProcessBlock[]) => blocks.map((block) => block.id)
-    const byId = (blocks: ProcessBlock[]) => new Map(blocks.map((block) => [block.id, block]))
+  const mergeItems = (list: string, from: Item[], my: Item[], their: Item[]): Item[] => {
+    const ids = (items: Item[]) => items.map(({ id }) => id)
+    const byId = (items: Item[]) => new Map(items.map((item) => [item.id, item]))
     const [inBase, inMine, inTheirs] = [byId(from), byId(my), byId(their)]
     const iMoved = !same(ids(my).filter((id) => inBase.has(id)), ids(from).filter((id) => inMine.has(id)))
     const order = [...new Set(iMoved ? [...ids(my), ...ids(their)] : [...ids(their), ...ids(my)])]
     const merged = order.map((id) => {
       const [before, one, other] = [inBase.get(id), inMine.get(id), inTheirs.get(id)]
-      const path = `${BLOCKS}#${id}`
-      return settle(path, before, one, other) as ProcessBlock | undefined
+      return settle(`${list}#${id}`, before, one, other) as Item | undefined
     })
-    const left = merged.filter((block) => block !== undefined)
-    return left.length > 0 ? left : my
+    return merged.filter((item) => item !== undefined)
   }
 
-  const content = settle('', base, mine, theirs) as ProcedureContent
+  const content = settle('', base, mine, theirs) as C
   return { content, differences }
 }

@@ -42,6 +42,7 @@ describe('shell', () => {
     mockApi({})
     showRoutes(createRoutes, { path: '/nowhere' })
     expect(await screen.findByRole('heading', { name: 'No sheet under this number' })).toBeDefined()
+    expect(document.title).toBe('Page not found · Sidebend')
     expect(screen.getByRole('link', { name: 'Skip to the page' }).getAttribute('href')).toBe('#page')
   })
   it('follows the person’s theme', async () => {

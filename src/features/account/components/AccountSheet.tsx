@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react'
 import { Responsibility } from '@/components/Caution.tsx'
+import { useTitle } from '@/hooks/title.ts'
 import { Wordmark } from '@/components/Mark.tsx'
 import { BendDrawing, FlatDrawing } from './BendDrawing.tsx'
 
@@ -8,6 +9,7 @@ const LETTERS = ['A', 'B', 'C', 'D']
 
 /** Pages before the bar: a drawing sheet with its zones, and the form where a drawing has its title block. */
 export function AccountSheet({ title, about, children }: { title: string; about: ReactNode; children: ReactNode }) {
+  useTitle(title)
   return (
     <main className="flex min-h-dvh flex-col bg-paper p-3 sm:p-6">
       <div className="relative flex grow flex-col border border-edge bg-sheet sm:p-6">
