@@ -1,5 +1,5 @@
 import type { CouponQualification, NumericRange, QualifiedRange, QualifiedSpan } from '@shared/schemas/assessment.ts'
-import { rangeAsJudged, standardWithEdition } from './judgements.ts'
+import { gathered, rangeAsJudged, standardWithEdition } from './judgements.ts'
 import { drawGaugeRow } from './layout/gauge-row.ts'
 import { drawTable } from './layout/table.ts'
 import type { Figures } from './layout/figures.ts'
@@ -19,12 +19,15 @@ export function drawQualified(context: Context, qualifications: readonly CouponQ
   const { sheet, figures } = context
   for (const qualification of qualifications) {
     const name = standardWithEdition(qualification)
-    sheet.section(`Range of qualification · ${name}`, `${qualification.ranges.length} variables`, () => {
-      for (const range of qualification.ranges.filter(numeric)) {
-        drawGaugeRow(sheet, figures, { label: range.label, note: range.process ?? undefined, value: `welded: ${testedInWords(range, figures)}`, judged: [rangeAsJudged(range)] })
+    const same = ({ label, class: variableClass, tested, range, reason, clause, basis }: QualifiedRange) => [label, variableClass, tested, range, reason, clause, basis]
+    const groups = gathered(qualification.ranges, same).map(({ item, processIds }) => ({ range: item, process: [...new Set(processIds.map((id) => qualification.ranges.find((other) => other.processId === id)?.process ?? ''))].filter(Boolean).join(', ') }))
+    sheet.section(`Range of qualification · ${name}`, `${groups.length} variables`, () => {
+      for (const { range, process } of groups) {
+        if (!numeric(range)) continue
+        drawGaugeRow(sheet, figures, { label: range.label, note: process || undefined, value: `welded: ${testedInWords(range, figures)}`, judged: [rangeAsJudged(range)] })
       }
-      drawTable(sheet, [{ title: 'Variable', share: 18 }, { title: 'Class', share: 12 }, { title: 'Welded', share: 12 }, { title: 'Qualified', share: 18 }, { title: 'How it comes about', share: 32 }, { title: 'Clause and basis', share: 20 }], qualification.ranges.map((range) => [
-        { text: range.process ? `${range.label} · ${range.process}` : range.label, strong: true }, CLASS_WORD[range.class], testedInWords(range, figures), spanInWords(range.range, figures), range.reason, [range.clause, range.basis === 'read' ? '' : BASIS_WORD[range.basis]].filter(Boolean).join(' · '),
+      drawTable(sheet, [{ title: 'Variable', share: 18 }, { title: 'Class', share: 12 }, { title: 'Welded', share: 12 }, { title: 'Qualified', share: 18 }, { title: 'How it comes about', share: 32 }, { title: 'Clause and basis', share: 20 }], groups.map(({ range, process }) => [
+        { text: process ? `${range.label} · ${process}` : range.label, strong: true }, CLASS_WORD[range.class], testedInWords(range, figures), spanInWords(range.range, figures), range.reason, [range.clause, range.basis === 'read' ? '' : BASIS_WORD[range.basis]].filter(Boolean).join(' · '),
       ]))
       if (qualification.ranges.length === 0) sheet.callout('No range computed', 'The record lacks what the standard\'s rules need, so nothing can be said about what this coupon qualifies.', 'straw')
     }, 90)

@@ -1,6 +1,6 @@
 import type { Assessment, Finding } from '@shared/schemas/assessment.ts'
 import type { Judgements } from './judgements.ts'
-import { standardWithEdition } from './judgements.ts'
+import { gathered, standardWithEdition } from './judgements.ts'
 import { drawGaugeRow } from './layout/gauge-row.ts'
 import { VERDICT_COLOUR, VERDICT_WORD } from './layout/marks.ts'
 import { STRONG, type Sheet } from './layout/sheet.ts'
@@ -26,9 +26,13 @@ export function drawLeftOverRanges(context: Context, judgements: Judgements): vo
 
 const countsLine = ({ counts }: Assessment): string => `${counts.outside} outside · ${counts.cannotTell} cannot tell · ${counts.within} within`
 
-function row(finding: Finding, processes: ReadonlyMap<string, string>): Cell[] {
-  const missing = finding.missing.length > 0 ? ` Missing: ${finding.missing.join(', ')}.` : ''
-  const process = finding.processId ? processes.get(finding.processId) : undefined
+/** What is missing is named by its path in the record; on paper that becomes words: `processes.1.backingGas` is "backing gas". */
+const missingInWords = (missing: string): string =>
+  missing.replace(/\b[a-z][A-Za-z]*(?:\.[A-Za-z0-9]+)+\b/g, (path) => path.replace(/^processes\.\d+\./, '').replace(/\./g, ', ').replace(/([a-z])([A-Z])/g, '$1 $2').toLowerCase())
+
+function row(finding: Finding, processIds: readonly string[], processes: ReadonlyMap<string, string>): Cell[] {
+  const missing = finding.missing.length > 0 ? ` Missing: ${finding.missing.map(missingInWords).join('; ')}.` : ''
+  const process = processIds.map((id) => processes.get(id)).filter(Boolean).join(', ')
   const basis = finding.basis === 'read' ? '' : BASIS_WORD[finding.basis]
   return [{ text: '', verdict: finding.verdict }, CLASS_WORD[finding.class], { text: process ? `${finding.title} · ${process}` : finding.title, strong: true }, `${finding.sentence}${missing}`, [finding.clause, basis].filter(Boolean).join(' · ')]
 }
@@ -45,7 +49,7 @@ export function drawFindings(sheet: Sheet, assessments: readonly Assessment[], d
       sheet.subhead(standardWithEdition(assessment), assessments.length > 1 ? countsLine(assessment) : `judged in ${assessment.unitSystem} figures`, 60)
       sheet.paragraph(`Overall: ${VERDICT_WORD[assessment.verdict]}. Never better than the worst essential finding.`, { ...STRONG, colour: VERDICT_COLOUR[assessment.verdict] })
       const sorted = [...assessment.findings].sort((a, b) => ORDER[a.verdict] - ORDER[b.verdict] || CLASS_ORDER[a.class] - CLASS_ORDER[b.class] || a.clause.localeCompare(b.clause, 'en', { numeric: true }))
-      if (sorted.length > 0) drawTable(sheet, [{ title: 'Verdict', share: 13 }, { title: 'Class', share: 13 }, { title: 'Variable', share: 19 }, { title: 'Finding', share: 38 }, { title: 'Clause and basis', share: 20 }], sorted.map((finding) => row(finding, processes)))
+      if (sorted.length > 0) drawTable(sheet, [{ title: 'Verdict', share: 13 }, { title: 'Class', share: 13 }, { title: 'Variable', share: 19 }, { title: 'Finding', share: 38 }, { title: 'Clause and basis', share: 20 }], gathered(sorted, ({ title, verdict, class: variableClass, sentence, clause, basis, missing }) => [title, verdict, variableClass, sentence, clause, basis, missing.map(missingInWords)]).map(({ item, processIds }) => row(item, processIds, processes)))
     }
   }, 80)
 }

@@ -114,7 +114,8 @@ export async function renderProcedure(document: ProcedureDocument): Promise<Buff
   const { content, state } = document
   const { variables } = content
   const figures = new Figures(document.units, variables.unitSystem)
-  const judgements = new Judgements(document.assessments)
+  const processes = new Map(variables.processes.map((block) => [block.id, processName(block).split(',')[0] ?? '']))
+  const judgements = new Judgements(document.assessments, processes)
   const status = STATE_WORD[state]
   const sheet = new Sheet({
     paper: document.paper,
@@ -144,7 +145,7 @@ export async function renderProcedure(document: ProcedureDocument): Promise<Buff
   drawTechnique(context)
   drawPasses(context)
   drawLeftOverRanges(context, judgements)
-  drawFindings(sheet, document.assessments, approvedWithReason ? document.deviationReason : null, new Map(variables.processes.map((block) => [block.id, processName(block).split(',')[0] ?? ''])))
+  drawFindings(sheet, document.assessments, approvedWithReason ? document.deviationReason : null, processes)
   if (document.coupons.length > 0) {
     sheet.section('Supporting records', '', () => document.coupons.forEach((coupon) => drawWideFact(sheet, { label: coupon.number, value: coupon.title, strong: true })), 36)
   }

@@ -42,6 +42,26 @@ describe('a procedure as PDF', () => {
     expect(text).toContain('FURTHER RANGES')
   })
 
+  it('says once what holds for every process, and names the processes where they differ', async () => {
+    const assessment = steelAssessment()
+    const pwht = assessment.findings.find((finding) => finding.title === 'PWHT')!
+    const thickness = assessment.findings[0]!
+    const twice = { ...assessment, findings: [...['root', 'fill'].map((processId) => ({ ...pwht, processId })), { ...thickness, processId: 'root' }, { ...thickness, processId: 'fill', clause: 'QW-403.10' }] }
+    const text = wordsOf(await render({ assessments: [twice] }))
+    expect(text.split('None was done and none is asked for.')).toHaveLength(2)
+    expect(text).toContain('PWHT · SMAW, GMAW')
+    expect(text).toContain('SMAW · QW-451.1')
+    expect(text).toContain('GMAW · QW-403.10')
+  })
+
+  it('names what is missing in words, not by its place in the record', async () => {
+    const assessment = steelAssessment()
+    const findings = [{ ...assessment.findings[4]!, missing: ['procedure: processes.1.backingGas', 'PQR-009: technique.initialCleaning'] }]
+    const text = wordsOf(await render({ assessments: [{ ...assessment, findings }] }))
+    for (const part of ['Missing: procedure: backing gas;', 'technique, initial cleaning.']) expect(text).toContain(part)
+    expect(text).not.toContain('processes.1')
+  })
+
   it('says that a signature was made over other content', async () => {
     expect(wordsOf(await render({ contentSha256: 'f'.repeat(64) }))).toContain('(differs from the content printed here)')
     expect(wordsOf(await sample())).not.toContain('differs from the content')
