@@ -4,7 +4,7 @@ import path from 'node:path'
 import { run } from './lib/children.mjs'
 import { readTestArgs, testSteps } from './lib/options.mjs'
 import { dataDir, root } from './lib/paths.mjs'
-import { prepare } from './lib/prepare.mjs'
+import { prepare, runTypeScript } from './lib/prepare.mjs'
 import { onStopSignal } from './lib/product.mjs'
 import { complain, createSteps, duration } from './lib/steps.mjs'
 import { addTotals, countReport, totalsLine } from './lib/totals.mjs'
@@ -51,10 +51,11 @@ async function test() {
   if (wantsHelp) return console.log(help)
   let stopped = false
   onStopSignal(() => { stopped = true })
-  const needsDatabase = (steps.includes('api') || steps.includes('e2e')) && !process.env.DATABASE_URL
+  // Asked once .env is read.
+  const needsDatabase = () => (steps.includes('api') || steps.includes('e2e')) && !process.env.DATABASE_URL
   // Unit tests verify signatures and render pages too, so only the browser and the database are left out where no step needs them.
   await prepare(createSteps(), {
-    debian: () => [...(needsDatabase ? ['postgresql'] : []), ...(steps.every((step) => step in checks) ? [] : ['poppler-utils', 'openssl']), ...(steps.includes('e2e') ? ['chromium', 'fonts-liberation'] : [])],
+    debian: () => [...(needsDatabase() ? ['postgresql'] : []), ...(steps.every((step) => step in checks) ? [] : ['poppler-utils', 'openssl']), ...(steps.includes('e2e') ? ['chromium', 'fonts-liberation'] : [])],
   })
   /** @type {{ step: string, totals: import('./lib/totals.mjs').Totals, ms: number }[]} */
   const results = []
@@ -64,6 +65,8 @@ async function test() {
     const begun = performance.now()
     results.push({ step, totals: await runStep(step, rest), ms: performance.now() - begun })
   }
+  // A run that was cut short could not let its database go; this stops it unless another run uses it.
+  if (needsDatabase() && (stopped || results.some(({ totals }) => totals.failed > 0))) await runTypeScript(['scripts/postgres.ts', 'release', '--test', '--user', String(process.pid)])
   const totals = addTotals(results.map((result) => result.totals))
   if (rest.length > 0 && totals.passed + totals.failed === 0) {
     console.log(`\nNo test matches ${rest.join(' ')}.`)
