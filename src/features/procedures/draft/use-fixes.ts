@@ -3,7 +3,7 @@ import type { Finding, Fix } from '@shared/schemas/assessment.ts'
 import { say } from '@/components/toast.tsx'
 import { applyFix, undoFix, type AppliedFix } from './fixes.ts'
 import { contentPath, findingField } from '@/lib/draft/paths.ts'
-import type { Draft } from './use-draft.ts'
+import type { ProcedureDraft } from './use-draft.ts'
 
 const typing = (target: EventTarget | null) => target instanceof HTMLElement && (target.isContentEditable || ['INPUT', 'TEXTAREA', 'SELECT'].includes(target.tagName))
 
@@ -14,7 +14,7 @@ export interface FixHandlers {
 }
 
 /** Applies what the margin offers; each is taken back from the toast or with Ctrl+Z (outside of a text that is being typed). */
-export function useFixes(draft: Draft, { onPlan, onState }: FixHandlers): (fix: Fix, finding: Finding) => void {
+export function useFixes(draft: ProcedureDraft, { onPlan, onState }: FixHandlers): (fix: Fix, finding: Finding) => void {
   const done = useRef<AppliedFix[]>([])
   const latest = useRef(draft)
   useEffect(() => {

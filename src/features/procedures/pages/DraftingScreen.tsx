@@ -1,7 +1,7 @@
 import { useMemo, useState } from 'react'
 import { useNavigate } from 'react-router-dom'
 import type { Revision } from '@shared/schemas/records.ts'
-import { processBlockSchema, type ProcessBlock } from '@shared/schemas/welding.ts'
+import { procedureContentSchema, processBlockSchema, type ProcedureContent, type ProcessBlock } from '@shared/schemas/welding.ts'
 import { Button, buttonClass } from '@/components/Button.tsx'
 import { MarginLayout } from '@/components/margin/MarginLayout.tsx'
 import { Breadcrumb } from '@/components/states.tsx'
@@ -13,17 +13,19 @@ import { useRevisionActs } from '../api.ts'
 import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
 import { SaveState } from '@/components/record/SaveState.tsx'
 import { DiscardDialog, nameOf, PlanCouponDialog, SubmitDialog } from '../dialogs/acts.tsx'
-import { ConflictView } from '@/components/record/ConflictView.tsx'
-import { useDraft } from '../draft/use-draft.ts'
+import { ConflictView, type ConflictKind } from '@/components/record/ConflictView.tsx'
+import { useProcedureDraft } from '../draft/use-draft.ts'
 import { useFixes } from '../draft/use-fixes.ts'
 import { placedRows } from '@/components/variables/catalogue.ts'
 import { inputId, SheetContext } from '@/components/variables/context.ts'
 import { blocking, placeFindings, sectionVerdicts } from '@/components/variables/findings.ts'
-import { rowFor } from '@/components/variables/labels.ts'
+import { labelOf, rowFor, valueInWords } from '@/components/variables/labels.ts'
 import { MarginHead } from '../sheet/MarginHead.tsx'
 import { ProcedureNav, ProcedureSheets } from '../sheet/ProcedureSheets.tsx'
 import { useAssessment } from '../sheet/use-assessment.ts'
 import { Returned } from '../components/Returned.tsx'
+
+const conflict: ConflictKind<ProcedureContent> = { schema: procedureContentSchema, lists: ['variables.processes'], label: labelOf, words: valueInWords }
 
 type Open = 'submit' | 'discard' | 'conflict' | { plan: string } | null
 
@@ -47,7 +49,7 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
   const navigate = useNavigate()
   const { system } = useUnits()
   const mayRecord = useMay('coupons.record')
-  const draft = useDraft(revision, personId)
+  const draft = useProcedureDraft(revision, personId)
   const { content, form, saving, replace } = draft
   const acts = useRevisionActs(revision)
   const [open, setOpen] = useState<Open>(null)
@@ -162,6 +164,8 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
         <ConflictView
           isOpen
           onClose={() => setOpen(null)}
+          name={nameOf(revision)}
+          kind={conflict}
           base={saving.base}
           mine={content}
           theirs={saving.theirs}

@@ -9,11 +9,13 @@ import { worstVerdict } from '@/components/Verdict.tsx'
 import { couponQuery, searchCoupons } from '../api.ts'
 import { useSheet, useSheetField, inputId } from '@/components/variables/context.ts'
 import { RECORD } from '@/components/variables/findings.ts'
+import { useProcedureContent } from './procedure-content.ts'
 import { Notes } from '@/components/variables/SheetField.tsx'
 
 /** The coupons that support the procedure, and the findings that concern the record as a whole. */
 export function CouponsSheet() {
-  const { control, content, findings } = useSheet()
+  const { control, findings } = useSheet()
+  const content = useProcedureContent()
   const placed = findings.get(RECORD) ?? []
   const count = content.supportingCoupons.length
   return (

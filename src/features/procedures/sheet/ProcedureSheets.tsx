@@ -7,13 +7,15 @@ import { CouponsSheet } from './CouponsSheet.tsx'
 import { JointSheet } from '@/components/variables/JointSheet.tsx'
 import { metalInWords } from '@/components/variables/labels.ts'
 import { ProcessSheets, type ProcessSheetsProps } from '@/components/variables/ProcessSheets.tsx'
+import { useProcedureContent } from './procedure-content.ts'
 import { ScopeSheet, Text } from './ScopeSheet.tsx'
 import { isShown, SheetField } from '@/components/variables/SheetField.tsx'
 
 /** The whole procedure as ruled sheets, in document order; typed in where the context has a form, read otherwise. */
 export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
   const sheet = useSheet()
-  const { content, control } = sheet
+  const { control } = sheet
+  const content = useProcedureContent()
   const { baseMetals, processes } = content.variables
   const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
   return (
@@ -48,7 +50,8 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
 /** The index of the sheets, each with the worst verdict found in it. */
 export function ProcedureNav({ verdicts }: { verdicts: ReadonlyMap<string, Verdict> }) {
   const sheet = useSheet()
-  const { content, control } = sheet
+  const { control } = sheet
+  const content = useProcedureContent()
   const { processes } = content.variables
   const link = (id: string, label: string): SectionLink => ({ id, label, verdict: verdicts.get(id) ?? null })
   const sections = [

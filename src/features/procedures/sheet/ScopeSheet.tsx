@@ -7,12 +7,14 @@ import { WRITTEN_IN, TOUGHNESS } from '@/components/variables/catalogue.ts'
 import { useSheet, useSheetField } from '@/components/variables/context.ts'
 import { standardName, STANDARDS } from '@/components/variables/options.ts'
 import { SheetField } from '@/components/variables/SheetField.tsx'
+import { useProcedureContent } from './procedure-content.ts'
 
 const orNull = (text: string) => (text === '' ? null : text)
 
 /** What the procedure is for and by which standards it is judged. */
 export function ScopeSheet() {
-  const { control, content } = useSheet()
+  const { control } = useSheet()
+  const content = useProcedureContent()
   const { standards } = content.variables
   return (
     <Sheet id="scope" title="Scope" aside={standards.map(({ standard, edition }) => `${standardName(standard)} ${edition}`).join(', ')}>
