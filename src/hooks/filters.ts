@@ -5,11 +5,15 @@ import { useSearchParams } from 'react-router-dom'
 export function useFilters<K extends string>(keys: readonly K[]): { values: Record<K, string>; set: (changes: Partial<Record<K, string>>) => void; clear: () => void; any: boolean } {
   const [search, setSearch] = useSearchParams()
   const names = keys.join(' ')
-  const values = useMemo(() => {
-    const read: Record<string, string> = {}
-    for (const key of names.split(' ')) read[key] = search.get(key) ?? ''
-    return read as Record<K, string>
-  }, [names, search])
+  const each = useCallback(
+    <V extends string | undefined>(value: (key: string) => V) => {
+      const made = {} as Record<string, V>
+      for (const key of names.split(' ')) made[key] = value(key)
+      return made as Record<K, V>
+    },
+    [names],
+  )
+  const values = useMemo(() => each((key) => search.get(key) ?? ''), [each, search])
   const set = useCallback(
     (changes: Partial<Record<K, string>>) =>
       setSearch(
@@ -25,6 +29,6 @@ export function useFilters<K extends string>(keys: readonly K[]): { values: Reco
       ),
     [setSearch],
   )
-  const clear = useCallback(() => set(Object.fromEntries(names.split(' ').map((key) => [key, ''])) as Partial<Record<K, string>>), [names, set])
+  const clear = useCallback(() => set(each(() => '')), [each, set])
   return { values, set, clear, any: Object.values(values).some((value) => value !== '') }
 }
