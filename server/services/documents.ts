@@ -46,7 +46,7 @@ async function drawRevision(services: Services, tenant: Tenant, revision: Proced
     paper,
     units: units ?? revision.content.variables.unitSystem,
     contentSha256: revision.contentSha256,
-    verifyUrl: addressOf(services, `/procedures/${revision.procedureId}/revisions/${revision.id}`),
+    verifyUrl: addressOf(services, `/revisions/${revision.id}`),
   })
 }
 

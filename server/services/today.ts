@@ -10,8 +10,8 @@ type Today = z.output<typeof todaySchema>
 /** One kind of work that waits for a role. `sql` gives title, detail, href, at; `$me` is the person who asks. */
 interface Source { kind: string; roles: readonly Role[]; sql: string }
 
-const revisions = (condition: string, detail: string) => `
-  select r.number || ' ' || r.revision as title, ${detail} as detail, '/procedures/' || r.procedure_id || '/revisions/' || r.id as href, r.updated_at as at
+const revisions = (condition: string, detail: string, page = '') => `
+  select r.number || ' ' || r.revision as title, ${detail} as detail, '/revisions/' || r.id || '${page}' as href, r.updated_at as at
   from procedure_revisions r join people author on author.organization_id = r.organization_id and author.id = r.author_id
   where r.organization_id = $organizationId and ${condition}`
 
@@ -26,7 +26,7 @@ const returnedComment = `(select s.person_name || ': ' || s.reason from signatur
 const SOURCES: readonly Source[] = [
   { kind: 'returned', roles: ['engineer'], sql: revisions(`r.state = 'draft' and ${wasReturned}`, returnedComment) },
   { kind: 'draft', roles: ['engineer'], sql: revisions(`r.state = 'draft' and r.author_id = $me and not coalesce(${wasReturned}, false)`, 'r.title') },
-  { kind: 'review', roles: ['supervisor'], sql: revisions("r.state = 'in-review' and not $me = any(r.contributors)", "r.title || ', by ' || author.name") },
+  { kind: 'review', roles: ['supervisor'], sql: revisions("r.state = 'in-review' and not $me = any(r.contributors)", "r.title || ', by ' || author.name", '/review') },
   { kind: 'certify', roles: ['supervisor', 'inspector'], sql: coupons("c.state = 'testing'", 'c.title') },
   { kind: 'coupon', roles: ['inspector'], sql: coupons("c.state in ('planned', 'welding')", 'c.title') },
   { kind: 'approved', roles: ['auditor', 'welder'], sql: revisions("r.state = 'approved' and r.decided_at > now() - interval '60 days'", "r.title") },
@@ -38,14 +38,14 @@ const SOURCES: readonly Source[] = [
       where t.organization_id = $organizationId`,
   },
   {
-    kind: 'unassigned', roles: ['engineer', 'supervisor'],
+    kind: 'job', roles: ['engineer', 'supervisor'],
     sql: `select j.number as title, count(*) || ' joints without a procedure in force' as detail, '/jobs/' || j.id as href, j.updated_at as at
       from jobs j join job_joints t on t.organization_id = j.organization_id and t.job_id = j.id
       left join procedure_revisions r on r.organization_id = t.organization_id and r.id = t.revision_id
       where j.organization_id = $organizationId and r.state is distinct from 'approved' group by j.id`,
   },
-  { kind: 'invited', roles: ['administrator'], sql: `select p.name as title, 'invited, not yet here: ' || p.email as detail, '/people/' || p.id as href, p.created_at as at from people p where p.organization_id = $organizationId and p.state = 'invited'` },
-  { kind: 'mail-failed', roles: ['administrator'], sql: `select m.subject as title, coalesce(m.error, 'not sent') as detail, '/outbox/' || m.id as href, m.created_at as at from outbox_mails m where m.organization_id = $organizationId and m.state = 'failed'` },
+  { kind: 'invitation', roles: ['administrator'], sql: `select p.name as title, 'invited, not yet here: ' || p.email as detail, '/people' as href, p.created_at as at from people p where p.organization_id = $organizationId and p.state = 'invited'` },
+  { kind: 'mail', roles: ['administrator'], sql: `select m.subject as title, coalesce(m.error, 'not sent') as detail, '/outbox/' || m.id as href, m.created_at as at from outbox_mails m where m.organization_id = $organizationId and m.state = 'failed'` },
 ]
 
 const SHOWN = 20

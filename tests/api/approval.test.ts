@@ -51,7 +51,7 @@ describe('submission', () => {
 describe('return', () => {
   it('gives the draft back with the comment', async () => {
     const revision = await submitted(agents)
-    const { body } = await agents.supervisor.post(`/api/revisions/${revision.id}/return`).set('If-Match', match(revision)).send({ comment: 'State the preheat.' }).expect(200)
+    const body: unknown = (await agents.supervisor.post(`/api/revisions/${revision.id}/return`).set('If-Match', match(revision)).send({ comment: 'State the preheat.' }).expect(200)).body
     expect(body).toMatchObject({ state: 'draft', signatures: [{ meaning: 'authored' }, { meaning: 'returned', reason: 'State the preheat.', role: 'supervisor' }] })
     const today = (await agents.engineer.get('/api/today').expect(200)).body as { tasks: { kind: string; title: string; detail: string }[] }
     expect(today.tasks).toContainEqual(expect.objectContaining({ kind: 'returned', title: `${revision.number} A`, detail: 'Test Supervisor: State the preheat.' }))
@@ -106,7 +106,7 @@ describe('approval', () => {
     const coupon = await openCoupon(agents)
     const revision = await submitted(agents, procedureContent({ supportingCoupons: [coupon.id] }))
     const said = problem(await approve(revision, { password: PASSWORD }).expect(422))
-    expect(said.errors).toContainEqual(expect.objectContaining({ field: 'content.supportingCoupons', message: expect.stringContaining(`${coupon.number} isn't certified yet`) }))
+    expect(said.errors).toContainEqual(expect.objectContaining({ field: 'content.supportingCoupons', message: expect.stringContaining(`${coupon.number} isn't certified yet`) as string }))
   })
 
   it('does not happen with a wrong password', async () => {
@@ -138,7 +138,7 @@ describe('approval', () => {
     const revision = await approved(agents)
     const address = `/api/revisions/${revision.id}/withdrawal`
     await agents.supervisor.post(address).set('If-Match', match(revision)).send({ password: PASSWORD, reason: '' }).expect(400)
-    const { body } = await agents.supervisor.post(address).set('If-Match', match(revision)).send({ password: PASSWORD, reason: 'Filler no longer bought.' }).expect(200)
+    const body: unknown = (await agents.supervisor.post(address).set('If-Match', match(revision)).send({ password: PASSWORD, reason: 'Filler no longer bought.' }).expect(200)).body
     expect(body).toMatchObject({ state: 'withdrawn' })
     expect((body as Revision).signatures.at(-1)).toMatchObject({ meaning: 'withdrawn', reason: 'Filler no longer bought.' })
   })

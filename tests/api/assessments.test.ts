@@ -15,7 +15,7 @@ describe('judging without storing', () => {
   const request = { procedure: procedureContent({ thickness: [5, 25] }), coupons: [{ id: 'c1', number: 'PQR-1', certified: true, content: couponContent() }], standard: 'asme-ix', edition: '2023' } as const
 
   it('gives exactly what the engine says, and keeps nothing', async () => {
-    const { body } = await auditor.post('/api/assessments').send(request).expect(200)
+    const body: unknown = (await auditor.post('/api/assessments').send(request).expect(200)).body
     expect(body).toEqual(JSON.parse(JSON.stringify(assess({ ...request, coupons: [...request.coupons] }))))
     expect((body as { verdict: string }).verdict).toBe('outside')
     expect((await auditor.get('/api/procedures')).body).toMatchObject({ total: 0 })
@@ -23,7 +23,7 @@ describe('judging without storing', () => {
   })
 
   it('names an edition that it does not know instead of failing', async () => {
-    const { body } = await auditor.post('/api/assessments').send({ ...request, edition: '1901' }).expect(200)
+    const body: unknown = (await auditor.post('/api/assessments').send({ ...request, edition: '1901' }).expect(200)).body
     expect(body).toMatchObject({ verdict: 'cannot-tell', findings: [{ ruleId: 'assessment/edition' }] })
   })
 

@@ -19,7 +19,7 @@ const certify = (coupon: Coupon, password = PASSWORD) => agents.inspector.post(`
 describe('opening a coupon', () => {
   it('copies what the procedure names and leaves measured values open', async () => {
     const revision = await draft(agents)
-    const { body } = await agents.inspector.post('/api/coupons').send({ revisionId: revision.id }).expect(201)
+    const body: unknown = (await agents.inspector.post('/api/coupons').send({ revisionId: revision.id }).expect(201)).body
     const coupon = body as Coupon
     expect(coupon).toMatchObject({ state: 'planned', revisionId: revision.id, procedureNumber: revision.number, inspector: { id: organization.people.inspector.id } })
     expect(coupon.content.variables.processes[0]?.filler.classification).toBe('E7018')
@@ -104,7 +104,7 @@ describe('certification', () => {
   it('is refused with exactly what the standard still misses', async () => {
     const whole = couponContent()
     const coupon = await openCoupon(agents, { ...whole, tension: whole.tension.slice(0, 1), bends: [] })
-    const { body } = await agents.inspector.get(`/api/coupons/${coupon.id}/qualification`).expect(200)
+    const body: unknown = (await agents.inspector.get(`/api/coupons/${coupon.id}/qualification`).expect(200)).body
     const { qualifications } = body as { qualifications: { missing: { message: string }[]; readyToCertify: boolean }[] }
     const missing = qualifications.flatMap((one) => one.missing.map(({ message }) => message))
     expect(missing.length).toBeGreaterThan(1)
@@ -131,7 +131,7 @@ describe('certification', () => {
 
   it('rejects with the reason', async () => {
     const coupon = await openCoupon(agents)
-    const { body } = await agents.supervisor.post(`/api/coupons/${coupon.id}/rejection`).set('If-Match', match(coupon)).send({ password: PASSWORD, reason: 'Lack of fusion over the whole root.' }).expect(200)
+    const body: unknown = (await agents.supervisor.post(`/api/coupons/${coupon.id}/rejection`).set('If-Match', match(coupon)).send({ password: PASSWORD, reason: 'Lack of fusion over the whole root.' }).expect(200)).body
     expect(body).toMatchObject({ state: 'rejected', signatures: [{ meaning: 'rejected', role: 'supervisor', reason: 'Lack of fusion over the whole root.' }] })
   })
 })
@@ -153,7 +153,7 @@ describe('the list', () => {
   })
 
   it('refuses a cursor of another order with a sentence', async () => {
-    const { body } = await agents.inspector.get('/api/coupons').query({ sort: 'number', limit: 1 }).expect(200)
+    const body: unknown = (await agents.inspector.get('/api/coupons').query({ sort: 'number', limit: 1 }).expect(200)).body
     const said = problem(await agents.inspector.get('/api/coupons').query({ sort: '-updatedAt', cursor: (body as Page<CouponRow>).next }).expect(400))
     expect(said.errors?.[0]?.field).toBe('cursor')
   })

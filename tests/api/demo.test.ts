@@ -88,7 +88,7 @@ describe('the demo firm', () => {
       if (assessment) judged.set(number, { verdict: assessment.verdict, revision, assessment })
     }
     for (const { revision, verdict } of judged.values()) if (revision.state === 'approved') expect([revision.number, revision.deviationReason === null]).toEqual([revision.number, verdict === 'within'])
-    expect(judged.get('WPS-006')?.revision).toMatchObject({ state: 'approved', deviationReason: expect.stringContaining('26 mm') })
+    expect(judged.get('WPS-006')?.revision).toMatchObject({ state: 'approved', deviationReason: expect.stringContaining('26 mm') as string })
     expect(judged.get('WPS-009')).toMatchObject({ verdict: 'outside', revision: { state: 'draft' } })
     expect(judged.get('WPS-009')?.assessment.findings.some(({ verdict, sentence }) => verdict === 'outside' && sentence.includes('25 mm') && sentence.includes('20 mm') && sentence.includes('10 mm'))).toBe(true)
     expect(judged.get('WPS-010')).toMatchObject({ verdict: 'cannot-tell', revision: { state: 'draft' } })

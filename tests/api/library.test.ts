@@ -23,7 +23,7 @@ describe('the library', () => {
     const page = await list(kind, { limit: 1 })
     expect(page.total).toBe(expected.length)
     expect(page.items[0]).toMatchObject({ key: expected[0]?.key, origin: 'reference', basis: expected[0]?.basis, source: expected[0]?.source })
-    const { body } = await welder.get(`/api/library/${kind}/${page.items[0]?.id}`).expect(200)
+    const body: unknown = (await welder.get(`/api/library/${kind}/${page.items[0]?.id}`).expect(200)).body
     expect(body).toEqual(page.items[0])
   })
 

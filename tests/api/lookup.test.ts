@@ -46,7 +46,7 @@ describe('look-up', () => {
   })
 
   it('asks for a joint of a job', async () => {
-    const { body } = await agents.engineer.post('/api/jobs').send({ title: 'Tank', joints: [{ number: 'J1', metalA: 'A516-70', metalB: 'A516-70', process: 'SMAW', position: '3G', thickness: interval(20, undefined, 'length') }] }).expect(201)
+    const body: unknown = (await agents.engineer.post('/api/jobs').send({ title: 'Tank', joints: [{ number: 'J1', metalA: 'A516-70', metalB: 'A516-70', process: 'SMAW', position: '3G', thickness: interval(20, undefined, 'length') }] }).expect(201)).body
     const job = body as Job
     const found = await ask({ jointId: job.joints[0]?.id })
     expect(titles(found.fits)).toEqual(['Thick'])

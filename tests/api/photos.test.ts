@@ -81,7 +81,7 @@ describe('refusals name the file and keep nothing', () => {
     expect(said.errors).toHaveLength(1)
     expect(said.errors?.[0]).toMatchObject({ field: 'files.1' })
     expect(said.errors?.[0]?.message).toMatch(sentence)
-    const { body } = await agents.inspector.get(`/api/coupons/${coupon.id}/photos`).expect(200)
+    const body: unknown = (await agents.inspector.get(`/api/coupons/${coupon.id}/photos`).expect(200)).body
     expect(body).toEqual({ items: [] })
   })
 
@@ -125,7 +125,7 @@ describe('changing and removing', () => {
   it('captions and tags, then removes with its files', async () => {
     const coupon = await openCoupon(agents)
     const [photo] = await upload(coupon.id, { name: 'a.png', bytes: png })
-    const { body } = await agents.inspector.patch(`/api/photos/${photo?.id}`).send({ caption: 'Face after the cap', tag: 'face' }).expect(200)
+    const body: unknown = (await agents.inspector.patch(`/api/photos/${photo?.id}`).send({ caption: 'Face after the cap', tag: 'face' }).expect(200)).body
     expect(body).toMatchObject({ caption: 'Face after the cap', tag: 'face', fileName: 'a.png' })
     const { rows } = await app.services.database.owner.query<{ storage_key: string }>('select storage_key from photos where id = $1', [photo?.id])
     const key = rows[0]?.storage_key ?? ''
@@ -144,7 +144,7 @@ describe('changing and removing', () => {
     await agents.inspector.delete(`/api/photos/${photo?.id}`).expect(409)
     const said = problem(await send(open.id, [{ name: 'late.png', bytes: png }]).expect(409))
     expect(said.detail).toContain('its photos are part of the record')
-    await expect(app.inTenant({ id: (await agents.inspector.get('/api/organization')).body.id as string }, ({ transaction }) => app.services.database.sequelize.query('update photos set caption = :c where id = :id', { replacements: { c: 'x', id: photo?.id }, transaction }))).rejects.toMatchObject({ original: { code: 'SB001' } })
+    await expect(app.inTenant({ id: ((await agents.inspector.get('/api/organization')).body as { id: string }).id }, ({ transaction }) => app.services.database.sequelize.query('update photos set caption = :c where id = :id', { replacements: { c: 'x', id: photo?.id }, transaction }))).rejects.toMatchObject({ original: { code: 'SB001' } })
     await expect(app.services.database.owner.query('delete from photos where id = $1', [photo?.id])).rejects.toMatchObject({ code: 'SB001' })
   })
 

@@ -92,7 +92,7 @@ describe('assessment', () => {
   it('judges the revision by its coupons under each of its standards', async () => {
     const coupon = await certified(agents)
     const revision = await draft(agents, procedureContent({ supportingCoupons: [coupon.id], thickness: [5, 25] }))
-    const { body } = await agents.auditor.get(`/api/revisions/${revision.id}/assessment`).expect(200)
+    const body: unknown = (await agents.auditor.get(`/api/revisions/${revision.id}/assessment`).expect(200)).body
     const { assessments } = body as { assessments: { standard: string; verdict: string; findings: { verdict: string; couponIds: string[]; sentence: string }[] }[] }
     expect(assessments.map(({ standard }) => standard)).toEqual(['asme-ix'])
     const outside = assessments[0]?.findings.filter(({ verdict }) => verdict === 'outside') ?? []
@@ -104,7 +104,7 @@ describe('assessment', () => {
   it('says that a coupon is not certified yet', async () => {
     const coupon = await openCoupon(agents)
     const revision = await draft(agents, procedureContent({ supportingCoupons: [coupon.id] }))
-    const { body } = await agents.engineer.get(`/api/revisions/${revision.id}/assessment`).expect(200)
+    const body: unknown = (await agents.engineer.get(`/api/revisions/${revision.id}/assessment`).expect(200)).body
     expect(JSON.stringify(body)).toContain(`${coupon.number} isn't certified yet`)
   })
 })
@@ -139,7 +139,7 @@ describe('comparison', () => {
     expect(await compare(next.id)).toMatchObject({ from: { id: first.id }, to: { id: next.id }, changes: [] })
     await save(next, procedureContent({ thickness: [5, 16], supportingCoupons: [coupon.id] })).expect(200)
     const { changes } = await compare(next.id)
-    expect(changes.find(({ field }) => field === 'thickness')).toMatchObject({ before: expect.stringContaining('20'), after: expect.stringContaining('16') })
+    expect(changes.find(({ field }) => field === 'thickness')).toMatchObject({ before: expect.stringContaining('20') as string, after: expect.stringContaining('16') as string })
     expect(changes.find(({ field }) => field === 'supportingCoupons')?.after).toContain(coupon.number)
     expect(await compare(first.id, { against: next.id })).toMatchObject({ from: { id: next.id } })
   })
@@ -172,7 +172,7 @@ describe('the list', () => {
     const seen: string[] = []
     let cursor: string | null = null
     for (const added of ['b', 'd', 'f']) {
-      const { body } = await own.auditor.get('/api/procedures').query({ sort: 'title', limit: 1, ...(cursor && { cursor }) }).expect(200)
+      const body: unknown = (await own.auditor.get('/api/procedures').query({ sort: 'title', limit: 1, ...(cursor && { cursor }) }).expect(200)).body
       const page = body as Page<ProcedureRow>
       seen.push(page.items[0]?.title ?? '')
       cursor = page.next
