@@ -1,6 +1,18 @@
 import { Button } from '@/components/Button.tsx'
 import { moment } from '@/lib/figures.ts'
-import type { SavedRecord, Saving } from '@/lib/draft/saving.ts'
+import type { Phase, SavedRecord, Saving } from '@/lib/draft/saving.ts'
+
+const SHORT = { saved: 'Saved', changed: 'Not saved yet', saving: 'Saving…', unreachable: 'Kept on this device', refused: 'Not saved', conflict: 'Two versions', closed: 'Not saved' } as const
+
+/** The same in two words, in sight wherever the sheet is scrolled to; the full line beside the sheet speaks to readers. */
+export function SaveMark({ phase }: { phase: Phase }) {
+  const calm = phase === 'saved' || phase === 'saving' || phase === 'changed'
+  return (
+    <p aria-hidden="true" className={`text-sm xl:mt-3 xl:border-l-2 xl:px-3 max-xl:fixed max-xl:right-3 max-xl:bottom-3 max-xl:z-20 max-xl:border max-xl:bg-sheet max-xl:px-2.5 max-xl:py-1 ${calm ? 'border-rule text-soft' : 'border-oxide font-semibold text-oxide'} ${phase === 'saved' ? 'max-xl:hidden' : ''}`}>
+      {SHORT[phase]}
+    </p>
+  )
+}
 
 /** One line on where the typing is: saved, on its way, kept here, or waiting for a decision. */
 export function SaveState<C, R extends SavedRecord<C>>({ saving, onSave, onCompare }: { saving: Saving<C, R>; onSave: () => void; onCompare: () => void }) {

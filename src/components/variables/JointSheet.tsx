@@ -24,7 +24,7 @@ export function JointSheet() {
   if (passes.length > 0) computed.push(['Passes', String(passes.length), ''])
   return (
     <Sheet id="joint" title="Joint" aside={`${shape}${backing}`}>
-      <figure className="grid border-b border-rule sm:grid-cols-[minmax(0,1fr)_11.5rem]">
+      <figure className="grid border-b border-rule sm:grid-cols-[minmax(0,1fr)_12.5rem]">
         <div className="min-w-0 px-2 py-2">
           <JointDrawing geometry={geometry} />
         </div>
@@ -35,7 +35,7 @@ export function JointSheet() {
               {computed.map(([label, value, unit]) => (
                 <div key={label} className="flex justify-between gap-3">
                   <dt>{label}</dt>
-                  <dd className="font-semibold">
+                  <dd className="font-semibold whitespace-nowrap">
                     {value} <span className="font-normal text-soft">{unit}</span>
                   </dd>
                 </div>

@@ -11,7 +11,7 @@ import { useUnits } from '@/hooks/units.ts'
 import { call, hrefOf } from '@/lib/api.ts'
 import { useRevisionActs } from '../api.ts'
 import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
-import { SaveState } from '@/components/record/SaveState.tsx'
+import { SaveMark, SaveState } from '@/components/record/SaveState.tsx'
 import { DiscardDialog, nameOf, PlanCouponDialog, SubmitDialog } from '../dialogs/acts.tsx'
 import { ConflictView, type ConflictKind } from '@/components/record/ConflictView.tsx'
 import { useProcedureDraft } from '../draft/use-draft.ts'
@@ -131,7 +131,11 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
       {returned && <Returned comment={returned.reason ?? ''} by={returned.person.name} />}
       <div className="mt-4">
         <MarginLayout
-          nav={<ProcedureNav verdicts={verdicts} />}
+          nav={
+            <ProcedureNav verdicts={verdicts}>
+              <SaveMark phase={saving.phase} />
+            </ProcedureNav>
+          }
           head={
             <>
               <div className="no-print flex flex-wrap items-center gap-2">

@@ -9,18 +9,20 @@ import { Dialog } from '@/components/Dialog.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
 import { TextArea, TextField } from '@/components/fields/text.tsx'
 import { MarginNote } from '@/components/margin/MarginNote.tsx'
+import { RangeGauge } from '@/components/range-gauge/RangeGauge.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Stamp, type StampState } from '@/components/Stamp.tsx'
 import { Breadcrumb, ErrorState, Skeleton } from '@/components/states.tsx'
 import { say } from '@/components/toast.tsx'
 import { VerdictTally } from '@/components/Verdict.tsx'
 import { useSession } from '@/hooks/session.ts'
+import { useUnits } from '@/hooks/units.ts'
 import { hrefOf } from '@/lib/api.ts'
 import { asProblem } from '@/lib/problem.ts'
 import { assessmentQuery, comparisonQuery, revisionQuery, useRevisionActs } from '../api.ts'
 import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
 import { nameOf } from '../dialogs/acts.tsx'
-import { blocking, needing } from '@/components/variables/findings.ts'
+import { blocking, gaugeOf, needing } from '@/components/variables/findings.ts'
 import { standardName } from '@/components/variables/options.ts'
 
 /** A revision under review: what changed, what the standard says, what carries it, and the act of signing. */
@@ -54,7 +56,7 @@ export function ReviewPage() {
               ))}
               {assessed.data && stands.length === 0 && <p>Every essential finding is within what the coupons qualify.</p>}
               {stands.map((finding) => (
-                <MarginNote key={key(finding)} finding={finding} couponNumber={couponNumber} />
+                <FindingWithGauge key={key(finding)} finding={finding} couponNumber={couponNumber} />
               ))}
               {lesser.length > 0 && (
                 <details>
@@ -96,6 +98,18 @@ export function ReviewPage() {
         <Decision revision={revision.data} stands={stands} judged={assessed.isSuccess} />
       </div>
     </>
+  )
+}
+
+/** A finding with its figures drawn beside it, as it stands on the sheet. */
+function FindingWithGauge({ finding, couponNumber }: { finding: Finding; couponNumber: (id: string) => string | undefined }) {
+  const { system } = useUnits()
+  const drawn = gaugeOf([finding])
+  return (
+    <div className="grid gap-x-6 gap-y-1 md:grid-cols-[minmax(0,1fr)_18rem] md:items-center">
+      <MarginNote finding={finding} couponNumber={couponNumber} />
+      {drawn && <RangeGauge label={finding.title} range={drawn.range} asked={drawn.asked} tested={drawn.tested} system={system} />}
+    </div>
   )
 }
 

@@ -1,5 +1,6 @@
 import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { SectionNav, type SectionLink } from '@/components/SectionNav.tsx'
+import type { ReactNode } from 'react'
 import type { Verdict } from '@shared/schemas/assessment.ts'
 import { BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from '@/components/variables/catalogue.ts'
 import { useSheet } from '@/components/variables/context.ts'
@@ -47,8 +48,8 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
   )
 }
 
-/** The index of the sheets, each with the worst verdict found in it. */
-export function ProcedureNav({ verdicts }: { verdicts: ReadonlyMap<string, Verdict> }) {
+/** The index of the sheets, each with the worst verdict found in it; it stays in sight, and with it what is given as children. */
+export function ProcedureNav({ verdicts, children }: { verdicts: ReadonlyMap<string, Verdict>; children?: ReactNode }) {
   const sheet = useSheet()
   const { control } = sheet
   const content = useProcedureContent()
@@ -58,7 +59,7 @@ export function ProcedureNav({ verdicts }: { verdicts: ReadonlyMap<string, Verdi
     link('joint', 'Joint'),
     link('base-metals', 'Base metals'),
     ...processes.flatMap((block, index) =>
-      BLOCK_SECTIONS.filter(({ rows }) => rows.some((spec) => isShown(spec, `processes.${index}.`, block, sheet))).map(({ id, title }) => link(blockSectionId(index, id), processes.length > 1 ? `${block.process ?? index + 1} ${title.toLowerCase()}` : title)),
+      BLOCK_SECTIONS.filter(({ rows }) => rows.some((spec) => isShown(spec, `processes.${index}.`, block, sheet))).map(({ id, title }) => link(blockSectionId(index, id), processes.length === 1 ? title : `${index + 1} ${id === 'process' && block.process ? block.process : title}`)),
     ),
     link('preheat', PREHEAT.title),
     link('pwht', PWHT.short ?? PWHT.title),
@@ -66,5 +67,10 @@ export function ProcedureNav({ verdicts }: { verdicts: ReadonlyMap<string, Verdi
     link('scope', 'Scope'),
     ...(!control && !content.notes ? [] : [link('notes', 'Notes')]),
   ]
-  return <SectionNav sections={sections} label="Sheets of the procedure" />
+  return (
+    <div className="xl:sticky xl:top-4 xl:max-h-[calc(100dvh-2rem)] xl:overflow-y-auto">
+      <SectionNav sections={sections} label="Sheets of the procedure" />
+      {children}
+    </div>
+  )
 }
