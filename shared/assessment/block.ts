@@ -226,12 +226,20 @@ function pushFinding(run: Run, item: Item, sides: readonly CouponSide[], judged:
     range: judged.range,
     tested,
     couponIds: [...new Set(sides.map((side) => side.coupon.id))],
-    missing: tentative ? ['procedure: toughnessRequired', ...(judged.missing ?? [])] : [...(judged.missing ?? [])],
+    missing: tentative ? ['procedure: toughnessRequired', ...(judged.missing ?? [])] : missingOf(run, rule, sides, judged),
     fixes,
     basis: weakest(judged.basis ?? rule.meta.basis, item.basis),
     source: rule.meta.source,
     reasoning: [...steps(run, rule, sides), ...(judged.reasoning ?? []), ...notes],
   })
+}
+
+/** Of the coupons only those that lack something are named; what the procedure lacks stays. */
+function missingOf(run: Run, rule: Rule, sides: readonly CouponSide[], judged: RuleVerdict): string[] {
+  const told = judged.missing ?? []
+  if (judged.verdict !== 'cannot-tell') return [...told]
+  const lacking = sides.flatMap((side) => rangeOf(run, rule, side)?.missing ?? [])
+  return lacking.length === 0 ? [...told] : [...new Set([...told.filter((text) => text.startsWith('procedure')), ...lacking])]
 }
 
 /** From each coupon's value to its range, for the opened reasoning. */

@@ -1,7 +1,7 @@
 /** A coupon by itself: specimens, results, what is missing for certification, and what it qualifies. */
 import type { AssessedCoupon, CouponQualification, QualifiedRange, TestVerdict } from '../../schemas/assessment.ts'
 import { weakest } from '../common/rule-kinds.ts'
-import { figureOrNull } from '../common/reading.ts'
+import { figureOrNull, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
 import type { CouponSide, RangeContext } from '../rule.ts'
 import { formerDiameter, judgeBend, judgeMacro, judgeTension } from './acceptance.ts'
@@ -38,7 +38,7 @@ function formerIssue(coupon: AssessedCoupon, index: number): Missing | null {
   if (!bend || t === null || used === null || t <= 0) return null
   const elongation = [variables.baseMetals.a.minElongation?.si, variables.baseMetals.b.minElongation?.si].filter((value) => value !== undefined)
   const former = formerDiameter(t, variables, variables.processes.map((block) => block.filler.fNumber ?? ''), elongation.length > 0 ? Math.min(...elongation) : null)
-  const unit = system === 'SI' ? 'mm' : 'in'
+  const unit = unitOf('length', system)
   // Half a millimetre of room: printed formers are rounded from the formula.
   if (!former || used <= former.diameter + (system === 'SI' ? 0.5 : 0.02)) return null
   return { field: `bends.${index}.formerDiameter`, message: `${bend.specimen} was bent over ${show(used, unit)}; a ${show(t, unit)} specimen takes a former of ${show(former.diameter, unit)} (${former.how})${former.maximum ? ' at most' : ''}.`, clause: 'QW-466.1' }

@@ -147,7 +147,7 @@ export function baseMetalSpan(context: RangeContext, side: CouponSide, member: M
   const limit = baseMetalLimit(T, block.process, system, isLongitudinal(side))
   const span: BaseMetalSpan = { range: unknownLength(system), tested: T, lower: limit.lower, upper: limit.upper, how: { ...limit.how }, reason: '', clause: limit.clause, basis: limit.basis, missing: [] }
   const steps = [`T = ${show(T, unit)} gives ${show(limit.lower ?? 0, unit)} to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`]
-  const upperUnknown = narrow(context, block, T, span, steps)
+  const upperUnknown = narrow(context, side, block, T, span, steps)
   lift(context, side, T, member, span, steps)
   span.range = upperUnknown ? uncertainAbove(system, span.lower ?? 0, tidy(1.1 * T), span.upper) : length(system, span.lower, span.upper)
   span.reason = steps.join(' ')
@@ -162,7 +162,7 @@ function uncertainAbove(system: UnitSystem, lower: number, certain: number, poss
 }
 
 /** QW-403.9 and QW-403.10. @returns true when the upper end can't be told because a pass thickness isn't recorded */
-function narrow(context: RangeContext, block: ProcessBlock, T: number, span: BaseMetalSpan, steps: string[]): boolean {
+function narrow(context: RangeContext, side: CouponSide, block: ProcessBlock, T: number, span: BaseMetalSpan, steps: string[]): boolean {
   const { system } = context
   const unit = unitOf('length', system)
   const cut = (clause: string, why: string): void => {
@@ -181,7 +181,8 @@ function narrow(context: RangeContext, block: ProcessBlock, T: number, span: Bas
   if (own === true) cut('QW-403.9', `A pass of the coupon was thicker than ${show(FIGURES[system].pass, unit)}`)
   else if (asked === true) cut('QW-403.9', `The procedure allows a pass thicker than ${show(FIGURES[system].pass, unit)}`)
   else if (own === null || asked === null) {
-    span.missing.push(own === null ? 'coupon: maxPassThickness' : 'procedure: maxPassThickness')
+    if (own === null) span.missing.push(`${side.coupon.number}: maxPassThickness`)
+    if (asked === null) span.missing.push('procedure: maxPassThickness')
     steps.push(`Whether a pass is thicker than ${show(FIGURES[system].pass, unit)} isn't recorded, so above ${show(tidy(1.1 * T), unit)} (1.1T) it can't be told (QW-403.9).`)
     return true
   }

@@ -5,7 +5,7 @@ import type { Basis, Fix, NumericRange, QualifiedSpan } from '../../schemas/asse
 import { quantity } from '../../units/convert.ts'
 import type { Dimension } from '../../units/types.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext, RuleMeta, RuleRange, RuleVerdict } from '../rule.ts'
-import { cannotTell, capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan, stateFix } from './wording.ts'
+import { cannotTell, capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan, stateFix, verb } from './wording.ts'
 
 /** Full dotted path of a rule's field. */
 export const pathOf = (context: RuleContext, rule: { at: 'weld' | 'block'; field: string }): string => (rule.at === 'block' && context.path ? `${context.path}.${rule.field}` : rule.field)
@@ -76,7 +76,7 @@ function judgeNames({ spec, display, field, context, sides, joined, asked }: Nam
   if (verdict === 'within') return { verdict, sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, reasoning: [spec.because] }
   const { kind } = spec
   if (kind && !asked.every((name) => joined.values.some((value) => kind(value) === kind(name)))) {
-    return cannotTell(`The procedure gives ${askedText} as its ${spec.label} and ${names(sides)} gives ${list(joined.values.map(display), 'or')}, which can't be compared.`, [`procedure: ${field}`, ...sides.map((side) => `${side.coupon.number}: ${spec.field}`)], { asked: [...asked], range: joined, fixes: [stateFix(spec.label, field)] })
+    return cannotTell(`The procedure gives ${askedText} as its ${spec.label} and ${names(sides)} ${verb(sides, 'gives', 'give')} ${list(joined.values.map(display), 'or')}, which can't be compared.`, [`procedure: ${field}`, ...sides.map((side) => `${side.coupon.number}: ${spec.field}`)], { asked: [...asked], range: joined, fixes: [stateFix(spec.label, field)] })
   }
   const covered = joined.values.map(display)
   const fixes: Fix[] = []
@@ -89,7 +89,7 @@ function judgeNames({ spec, display, field, context, sides, joined, asked }: Nam
   const missed = asked.filter((name) => !joined.values.includes(name)).map(display)
   return {
     verdict,
-    sentence: `${capital(spec.label)} ${list(missed)} is not covered: ${names(sides)} qualifies ${covered.length === 0 ? 'none' : list(covered, 'or')} only.`,
+    sentence: `${capital(spec.label)} ${list(missed)} is not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${covered.length === 0 ? 'none' : list(covered, 'or')} only.`,
     asked: [...asked],
     range: joined,
     fixes,
@@ -162,7 +162,7 @@ function miss(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide
   const unit = joined.unit
   const first = joined.segments[0]
   const last = joined.segments.at(-1)
-  if (!first || !last) return { sentence: `${capital(showAsked(asked, unit))} is not covered: ${names(sides)} qualifies nothing here.`, wrong: [] }
+  if (!first || !last) return { sentence: `${capital(showAsked(asked, unit))} is not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} nothing here.`, wrong: [] }
   const wrong: ('min' | 'max')[] = []
   const parts: string[] = []
   const low = 'value' in first.lower ? first.lower.value : null

@@ -14,6 +14,9 @@ export function names(sides: readonly CouponSide[]): string {
   return list(all)
 }
 
+/** The verb that agrees with the named coupons. */
+export const verb = (sides: readonly CouponSide[], one: string, several: string): string => (new Set(sides.map((side) => side.coupon.number)).size > 1 ? several : one)
+
 /** Words joined as in a sentence. */
 export function list(words: readonly string[], last = 'and'): string {
   if (words.length < 2) return words[0] ?? ''
@@ -57,5 +60,5 @@ export const stateFix = (label: string, field: string): Fix => ({ kind: 'state',
 
 /** The coupons lack what would give the range. */
 export function couponLacks(label: string, field: string, sides: readonly CouponSide[], asked: RuleVerdictAsked, range: QualifiedSpan | null): RuleVerdict {
-  return cannotTell(`${names(sides)} does not record the ${label}, so what it qualifies can't be told.`, sides.map((side) => `${side.coupon.number}: ${field}`), { asked, range, fixes: [] })
+  return cannotTell(`${names(sides)} ${verb(sides, 'does', 'do')} not record the ${label}, so what is qualified can't be told.`, sides.map((side) => `${side.coupon.number}: ${field}`), { asked, range, fixes: [] })
 }

@@ -2,7 +2,7 @@
 import { setRange, UNKNOWN_SET } from '../../../ranges/set.ts'
 import type { Basis } from '../../../schemas/assessment.ts'
 import type { WeldingVariables } from '../../../schemas/welding.ts'
-import { capital, list, names } from '../../common/wording.ts'
+import { capital, list, names, verb } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule } from '../../rule.ts'
 import { identity, pairName, pNumber, secondMetal } from '../members.ts'
 import { meta } from '../meta.ts'
@@ -77,14 +77,14 @@ const build = (paragraph: Paragraph, file: string): Rule => ({
     const asked = pairName(p[0], p[1])
     const basis = sides.map((side) => tokens(side.variables).p).reduce<Basis>((worst, pair, i) => (pair && sides[i] ? covered(context, sides[i], pair).basis : worst), 'read')
     if (joined.values.includes(asked)) return { verdict: 'within', sentence: `${asked} is covered by ${names(sides)}.`, asked: [asked], range: joined, basis }
-    if (joined.unknown) return { verdict: 'cannot-tell', sentence: `${names(sides)} has a base metal without P-Number, so whether it covers ${asked} can't be told.`, asked: [asked], range: joined, missing: couponLacking }
+    if (joined.unknown) return { verdict: 'cannot-tell', sentence: `${names(sides)} ${verb(sides, 'has', 'have')} a base metal without P-Number, so whether it covers ${asked} can't be told.`, asked: [asked], range: joined, missing: couponLacking }
     const keyhole = sides.some((side) => side.block?.process === 'PAW' && side.block.technique.keyhole === null && DOWNWARD[tokens(side.variables).p?.[0] ?? ''])
     if (keyhole && sides.some((side) => { const pair = tokens(side.variables).p; return pair && coveredPairsPlasma(pair[0], pair[1], true).pairs.includes(asked) })) {
       return { verdict: 'cannot-tell', sentence: `${names(sides)} covers ${asked} only if it was welded with melt-in technique, which isn't recorded.`, asked: [asked], range: joined, missing: sides.map((side) => `${side.coupon.number}: technique.keyhole`), basis: 'memory' }
     }
     return {
       verdict: 'outside',
-      sentence: `${capital(asked)} is not covered: ${names(sides)} qualifies ${list(joined.values)} only.`,
+      sentence: `${capital(asked)} is not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${list(joined.values)} only.`,
       asked: [asked],
       range: joined,
       basis,

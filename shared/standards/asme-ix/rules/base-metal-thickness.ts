@@ -1,5 +1,5 @@
 /** QW-403.8: base metal thickness inside the range that QW-451 gives, as narrowed and lifted by the other clauses. */
-import { figures, isStated } from '../../common/reading.ts'
+import { figures, isStated, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { Rule, RuleContext } from '../../rule.ts'
@@ -39,9 +39,9 @@ const build = (which: 'a' | 'b', file: string): Rule =>
     how(context, side, end) {
       const span = baseMetalSpan(context, side, memberOf(context, which), memberP(context, which))
       const T = couponThickness(side, context.system, memberP(context, which))
-      return { how: span.how[end], coupon: T === null ? 'coupon' : `${show(T, context.system === 'SI' ? 'mm' : 'in')} coupon` }
+      return { how: span.how[end], coupon: T === null ? 'coupon' : `${show(T, unitOf('length', context.system))} coupon` }
     },
-    plan: (asked, context) => `A groove coupon whose range holds ${show(asked.min ?? 0, context.system === 'SI' ? 'mm' : 'in')} to ${asked.max === null ? 'no limit' : show(asked.max, context.system === 'SI' ? 'mm' : 'in')} (QW-451.1).`,
+    plan: (asked, context) => `A groove coupon whose range holds ${show(asked.min ?? 0, unitOf('length', context.system))} to ${asked.max === null ? 'no limit' : show(asked.max, unitOf('length', context.system))} (QW-451.1).`,
   })
 
 export const baseMetalThickness = build('a', 'base-metal-thickness')

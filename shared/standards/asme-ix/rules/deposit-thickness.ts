@@ -1,6 +1,6 @@
 /** QW-404.30: deposited weld metal of each process within the t limit of QW-451. */
 import { containsInterval } from '../../../ranges/numeric.ts'
-import { figures, single, tidy } from '../../common/reading.ts'
+import { figures, single, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, RuleContext } from '../../rule.ts'
@@ -20,7 +20,7 @@ export function askedDeposit(context: RuleContext): { min: number | null; max: n
 /** Limit of one coupon block, short-circuiting and the root exception included; null when T or t isn't recorded. */
 export function deposit(context: RangeContext, side: CouponSide): (Limit & { t: number; T: number; reason: string }) | null {
   const { system } = context
-  const unit = system === 'SI' ? 'mm' : 'in'
+  const unit = unitOf('length', system)
   const { block } = side
   const T = couponThickness(side, system)
   const t = single(block?.depositThickness, 'length', system)
@@ -59,7 +59,7 @@ export const depositThickness = figureRule({
   },
   how(context, side, end) {
     const limit = deposit(context, side)
-    return { how: end === 'upper' ? (limit?.how.upper ?? null) : null, coupon: limit ? `${show(limit.t, context.system === 'SI' ? 'mm' : 'in')} deposit` : 'deposit' }
+    return { how: end === 'upper' ? (limit?.how.upper ?? null) : null, coupon: limit ? `${show(limit.t, unitOf('length', context.system))} deposit` : 'deposit' }
   },
-  plan: (asked, context) => `A coupon in which this process deposits enough to qualify ${asked.max === null ? 'every thickness' : show(asked.max, context.system === 'SI' ? 'mm' : 'in')} (QW-451.1).`,
+  plan: (asked, context) => `A coupon in which this process deposits enough to qualify ${asked.max === null ? 'every thickness' : show(asked.max, unitOf('length', context.system))} (QW-451.1).`,
 })

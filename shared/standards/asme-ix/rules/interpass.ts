@@ -5,7 +5,7 @@ import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
 import { exemptByHeatTreatment } from '../ranges.ts'
-import { TEMPERATURE_STEP } from './preheat.ts'
+import { inWords, TEMPERATURE_STEP } from './preheat.ts'
 
 export const interpass = figureRule({
   meta: meta('QW-406.3', 'interpass'),
@@ -27,8 +27,5 @@ export const interpass = figureRule({
     const highest = tidy(had + TEMPERATURE_STEP[system])
     return { range: between('temperature', unit, UNLIMITED, closed(highest)), tested: had, reason: `${show(had, unit)} plus ${TEMPERATURE_STEP[system]} gives ${show(highest, unit)} as the highest interpass temperature.` }
   },
-  how(context, side) {
-    const had = figureOrNull(side.variables.preheat.interpassMaximum, 'temperature', context.system)
-    return { how: `${TEMPERATURE_STEP[context.system]} above`, coupon: had === null ? 'interpass temperature' : `${show(had, unitOf('temperature', context.system))} interpass temperature` }
-  },
+  how: (context, side) => ({ how: `${TEMPERATURE_STEP[context.system]} above`, coupon: inWords(context, side, 'interpassMaximum', 'interpass temperature') }),
 })

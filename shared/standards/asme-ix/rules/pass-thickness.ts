@@ -2,7 +2,7 @@
 import { between, closed, UNKNOWN, UNLIMITED } from '../../../ranges/numeric.ts'
 import type { NumericRange } from '../../../schemas/assessment.ts'
 import { quantity } from '../../../units/convert.ts'
-import { figures, single, tidy } from '../../common/reading.ts'
+import { figures, single, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext } from '../../rule.ts'
@@ -39,7 +39,7 @@ const base = figureRule({
   range(context, side) {
     if (side.variables.joint.weld === 'fillet') return null
     const { system } = context
-    const unit = system === 'SI' ? 'mm' : 'in'
+    const unit = unitOf('length', system)
     const limit = show(FIGURES[system].pass, unit)
     const { T, coupon, procedure } = passes(context, side)
     if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
@@ -50,7 +50,7 @@ const base = figureRule({
     const open: NumericRange = { type: 'numeric', dimension: 'length', unit, segments: [{ lower: closed(0), upper: closed(narrow) }, { lower: closed(0), upper: UNKNOWN }] }
     return { range: open, tested, reason: `Whether a pass is thicker than ${limit} isn't recorded; up to ${show(narrow, unit)} (1.1T) it does not matter.`, missing: [coupon === null ? `${side.coupon.number}: maxPassThickness` : 'procedure: maxPassThickness'] }
   },
-  how: (context, side) => ({ how: '1.1T, because a pass is thicker than the limit', coupon: `${show(couponThickness(side, context.system) ?? 0, context.system === 'SI' ? 'mm' : 'in')} coupon` }),
+  how: (context, side) => ({ how: '1.1T, because a pass is thicker than the limit', coupon: `${show(couponThickness(side, context.system) ?? 0, unitOf('length', context.system))} coupon` }),
 })
 
 export const passThickness: Rule = {
@@ -60,7 +60,7 @@ export const passThickness: Rule = {
     if (!judged || judged.verdict === 'within') return judged
     const { system } = context
     const limit = FIGURES[system].pass
-    const unit = system === 'SI' ? 'mm' : 'in'
+    const unit = unitOf('length', system)
     const field = `${context.path}.maxPassThickness`
     const state = sides.map((side) => passes(context, side))
     const cure = { kind: 'set' as const, label: `Limit passes to ${show(limit, unit)}`, field, value: quantity(limit, 'length', unit) }

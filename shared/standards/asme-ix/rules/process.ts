@@ -1,4 +1,5 @@
 /** QW-401: a change of welding process is always essential; no coupon of another process covers it. */
+import { setRange } from '../../../ranges/set.ts'
 import { list } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { editionsUntil } from '../editions.ts'
@@ -21,16 +22,16 @@ export const process: Rule = {
   field: 'process',
   at: 'block',
   label: 'Welding process',
-  range: (_context, side) => (side.block?.process ? { range: { type: 'set', values: [side.block.process], any: false, unknown: false }, tested: side.block.process, reason: 'Another process is never covered.' } : null),
+  range: (_context, side) => ({ range: setRange([side.block?.process ?? []].flat()), tested: side.block?.process ?? null, reason: 'Another process is never covered.' }),
   check(context, sides) {
     const asked = context.block?.process
     if (!asked) return null
-    if (sides.length > 0) return { verdict: 'within', sentence: `${asked} was welded on ${list([...new Set(sides.map((side) => side.coupon.number))])}.`, asked: [asked], range: { type: 'set', values: [asked], any: false, unknown: false } }
+    if (sides.length > 0) return { verdict: 'within', sentence: `${asked} was welded on ${list([...new Set(sides.map((side) => side.coupon.number))])}.`, asked: [asked], range: setRange([asked]) }
     const plan = { kind: 'plan-coupon' as const, label: `Weld a coupon with ${asked}`, requirement: `A coupon welded with ${asked}.` }
     if (context.coupons.length === 0) return { verdict: 'cannot-tell', sentence: `No coupon is linked, so no coupon supports this process.`, asked: [asked], range: null, missing: [`a coupon welded with ${asked}`], fixes: [plan] }
     const unstated = context.coupons.filter((coupon) => coupon.content.variables.processes.some((block) => block.process === null))
     if (unstated.length > 0) return { verdict: 'cannot-tell', sentence: `${list(unstated.map((coupon) => coupon.number))} does not record its process.`, asked: [asked], range: null, missing: unstated.map((coupon) => `${coupon.number}: process`), fixes: [plan] }
     const had = [...new Set(context.coupons.flatMap((coupon) => coupon.content.variables.processes.flatMap((block) => block.process ?? [])))]
-    return { verdict: 'outside', sentence: `${asked} is not covered: ${list(context.coupons.map((coupon) => coupon.number))} was welded with ${list(had)}.`, asked: [asked], range: { type: 'set', values: had, any: false, unknown: false }, tested: had, fixes: [plan], reasoning: ['A change of process always needs a new qualification.'] }
+    return { verdict: 'outside', sentence: `${asked} is not covered: ${list(context.coupons.map((coupon) => coupon.number))} ${context.coupons.length > 1 ? 'were' : 'was'} welded with ${list(had)}.`, asked: [asked], range: setRange(had), tested: had, fixes: [plan], reasoning: ['A change of process always needs a new qualification.'] }
   },
 }

@@ -1,5 +1,5 @@
 /** QW-404.32, editions to 2019: a short-circuiting deposit under 13 mm (1/2 in.) holds the deposit to 1.1 t. */
-import { single, tidy } from '../../common/reading.ts'
+import { single, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
@@ -17,12 +17,12 @@ export const shortCircuitDeposit = figureRule({
   range(context, side) {
     if (!side.block || !shortCircuitBinds(context.edition, side.block)) return null
     const { system } = context
-    const unit = system === 'SI' ? 'mm' : 'in'
+    const unit = unitOf('length', system)
     const t = single(side.block.depositThickness, 'length', system)
     if (t === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no deposit thickness recorded.`, missing: [`${side.coupon.number}: depositThickness`] }
     const limit = show(FIGURES[system].pass, unit)
     if (t >= FIGURES[system].pass) return { range: lengthRange(system, 0, null), tested: t, reason: `A deposit of ${limit} or more has no limit by this clause.` }
     return { range: lengthRange(system, 0, tidy(1.1 * t)), tested: t, reason: `Short-circuiting deposit under ${limit}: ${show(tidy(1.1 * t), unit)} (1.1t) at most.` }
   },
-  how: (context, side) => ({ how: '1.1t, short-circuiting', coupon: `${show(single(side.block?.depositThickness, 'length', context.system) ?? 0, context.system === 'SI' ? 'mm' : 'in')} deposit` }),
+  how: (context, side) => ({ how: '1.1t, short-circuiting', coupon: `${show(single(side.block?.depositThickness, 'length', context.system) ?? 0, unitOf('length', context.system))} deposit` }),
 })

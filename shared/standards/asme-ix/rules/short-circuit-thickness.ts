@@ -1,5 +1,5 @@
 /** QW-403.10, editions to 2019: a short-circuiting coupon under 13 mm (1/2 in.) holds the base metal to 1.1 T. */
-import { tidy } from '../../common/reading.ts'
+import { tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
@@ -20,12 +20,12 @@ export const shortCircuitThickness = figureRule({
   range(context, side) {
     if (!side.block || !shortCircuitBinds(context.edition, side.block)) return null
     const { system } = context
-    const unit = system === 'SI' ? 'mm' : 'in'
+    const unit = unitOf('length', system)
     const T = couponThickness(side, system)
     if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
     const limit = show(FIGURES[system].pass, unit)
     if (T >= FIGURES[system].pass) return { range: lengthRange(system, 0, null), tested: T, reason: `A coupon of ${limit} or more has no limit by this clause.` }
     return { range: lengthRange(system, 0, tidy(1.1 * T)), tested: T, reason: `Short-circuiting transfer on a coupon under ${limit}: ${show(tidy(1.1 * T), unit)} (1.1T) at most.` }
   },
-  how: (context, side) => ({ how: '1.1T, short-circuiting', coupon: `${show(couponThickness(side, context.system) ?? 0, context.system === 'SI' ? 'mm' : 'in')} coupon` }),
+  how: (context, side) => ({ how: '1.1T, short-circuiting', coupon: `${show(couponThickness(side, context.system) ?? 0, unitOf('length', context.system))} coupon` }),
 })

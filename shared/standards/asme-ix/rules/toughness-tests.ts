@@ -1,6 +1,6 @@
 /** QW-401.1: where toughness is required, a supporting coupon must carry toughness tests. */
 import { setRange } from '../../../ranges/set.ts'
-import { names } from '../../common/wording.ts'
+import { names, verb } from '../../common/wording.ts'
 import type { CouponSide, Rule } from '../../rule.ts'
 import { editionsUntil } from '../editions.ts'
 
@@ -25,10 +25,10 @@ export const toughnessTests: Rule = {
   label: 'Toughness tests',
   range: (_context, side) => ({ range: setRange(tested(side) ? ['with toughness', 'without toughness'] : ['without toughness']), tested: tested(side) ? 'with toughness' : 'without toughness', reason: tested(side) ? 'The coupon carries toughness tests.' : 'The coupon carries no toughness tests.' }),
   check(_context, sides, joined) {
-    if (sides.some(tested)) return { verdict: 'within', sentence: `${names(sides)} carries toughness tests.`, asked: ['with toughness'], range: joined }
+    if (sides.some(tested)) return { verdict: 'within', sentence: `${names(sides)} ${verb(sides, 'carries', 'carry')} toughness tests.`, asked: ['with toughness'], range: joined }
     const plan = { kind: 'plan-coupon' as const, label: 'Weld a coupon with toughness tests', requirement: 'A coupon with the same essential and supplementary variables, tested for toughness.' }
     const awaited = sides.filter((side) => side.variables.toughnessRequired === true)
-    if (awaited.length > 0) return { verdict: 'cannot-tell', sentence: `${names(awaited)} was welded for toughness, but no toughness results are recorded yet.`, asked: ['with toughness'], range: joined, missing: awaited.map((side) => `${side.coupon.number}: toughness`) }
-    return { verdict: 'outside', sentence: `Toughness is required, but ${names(sides)} carries no toughness tests.`, asked: ['with toughness'], range: joined, fixes: [plan] }
+    if (awaited.length > 0) return { verdict: 'cannot-tell', sentence: `${names(awaited)} ${verb(awaited, 'was', 'were')} welded for toughness, but no toughness results are recorded yet.`, asked: ['with toughness'], range: joined, missing: awaited.map((side) => `${side.coupon.number}: toughness`) }
+    return { verdict: 'outside', sentence: `Toughness is required, but ${names(sides)} ${verb(sides, 'carries', 'carry')} no toughness tests.`, asked: ['with toughness'], range: joined, fixes: [plan] }
   },
 }

@@ -1,7 +1,7 @@
 /** QW-403.6: with toughness the base metal may not be thinner than the floor that the toughness coupon's thickness gives. */
 import { intersectNumeric, numericRange, unionNumeric } from '../../../ranges/numeric.ts'
 import type { NumericRange } from '../../../schemas/assessment.ts'
-import { isStated } from '../../common/reading.ts'
+import { isStated, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleRange } from '../../rule.ts'
@@ -20,7 +20,7 @@ function rangeFor(context: RangeContext, side: CouponSide, which: 'a' | 'b'): Ru
   if ((context.procedure ?? side.variables).joint.weld === 'fillet' || side.variables.joint.weld === 'fillet') return null
   if (which === 'b' && !isStated(context.procedure?.thicknessB)) return null
   const { system } = context
-  const unit = system === 'SI' ? 'mm' : 'in'
+  const unit = unitOf('length', system)
   const { floor, T } = floorOf(context, side, which)
   if (floor === null || T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
   const reason = floor === 0 ? 'The heat treatment after welding takes away the toughness floor.' : `With toughness a ${show(T, unit)} coupon covers no metal under ${show(floor, unit)}.`
@@ -47,7 +47,7 @@ function join(context: RangeContext, sides: readonly CouponSide[], ranges: reado
       if (floor !== null) add(intersectNumeric(own, lengthRange(context.system, floor, null)))
     })
   })
-  const unit = context.system === 'SI' ? 'mm' : 'in'
+  const unit = unitOf('length', context.system)
   return joined ?? (ranges.some((range) => range) ? numericRange('length', unit, []) : null)
 }
 
@@ -64,7 +64,7 @@ const build = (which: 'a' | 'b', file: string): Rule =>
     join,
     how(context, side, end) {
       const { T } = floorOf(context, side, which)
-      return { how: end === 'lower' ? 'with toughness' : null, coupon: T === null ? 'coupon' : `${show(T, context.system === 'SI' ? 'mm' : 'in')} coupon` }
+      return { how: end === 'lower' ? 'with toughness' : null, coupon: T === null ? 'coupon' : `${show(T, unitOf('length', context.system))} coupon` }
     },
   })
 

@@ -17,7 +17,7 @@ const unsure = rangeOf(any)
 const asked = fc.tuple(value, value).map(([a, b]) => ({ min: Math.min(a, b), max: Math.max(a, b) }))
 const better = { within: 2, 'cannot-tell': 1, outside: 0 }
 
-describe('numeric ranges', () => {
+describe('numeric ranges', { timeout: 60_000 }, () => {
   test('union and intersection do not depend on order', () =>
     fc.assert(fc.property(unsure, unsure, (a, b) => {
       expect(unionNumeric(a, b)).toEqual(unionNumeric(b, a))
@@ -104,7 +104,7 @@ describe('numeric ranges', () => {
 const names = fc.subarray(['A', 'B', 'C', 'D'])
 const sets: fc.Arbitrary<SetRange> = fc.record({ values: names, any: fc.boolean(), unknown: fc.boolean() }).map(({ values, any: all, unknown }) => setRange(all ? [] : values, { any: all, unknown: !all && unknown }))
 
-describe('ranges of names', () => {
+describe('ranges of names', { timeout: 60_000 }, () => {
   test('commutative, idempotent, monotone', () =>
     fc.assert(fc.property(sets, sets, names, (a, b, x) => {
       expect(unionSet(a, b)).toEqual(unionSet(b, a))

@@ -1,6 +1,8 @@
 /** Each rule on its own: covered, not covered, and what is missing on either side. */
 import { describe, expect, test } from 'vitest'
 import type { Process, ProcessBlock, WeldingVariables } from '@shared/schemas/welding.ts'
+import { asmeIx } from '@shared/standards/asme-ix/index.ts'
+import type { CouponSide, RuleContext } from '@shared/standards/rule.ts'
 import { interval, quantity } from '@shared/units/convert.ts'
 import { coupon, finding, judge, procedure } from './builders.ts'
 
@@ -252,5 +254,27 @@ describe('basis', () => {
     expect(run({ rule: 'preheat', process: 'PAW', verdict: 'within' }).basis).toBe('memory')
     expect(run({ rule: 'shielding-gas', process: 'GMAW', verdict: 'within' }).basis).toBe('memory')
     expect(run({ rule: 'filler-f-number', verdict: 'within' }).basis).toBe('secondary')
+  })
+})
+
+describe('a weld without process block', () => {
+  const wps = procedure({ toughness: true, p: ['51', '11A'] })
+  const tested = coupon({ toughness: true, p: ['51', '11A'] })
+  const side: CouponSide = { coupon: tested, variables: tested.content.variables, block: null, role: 'full' }
+  const context: RuleContext = { edition: '2017', level: null, system: 'SI', toughness: true, procedure: wps.variables, block: null, coupons: [tested], path: '' }
+  for (const rule of asmeIx.rules.filter((one) => one.at === 'block')) {
+    test(`${rule.meta.id} claims nothing`, () => {
+      const range = rule.range(context, side)
+      const judged = rule.check(context, [side], range?.range ?? null)
+      expect(judged?.verdict ?? 'nothing').not.toBe('outside')
+      if (judged?.verdict === 'cannot-tell') expect(judged.missing?.length).toBeGreaterThan(0)
+    })
+  }
+})
+
+describe('welding process', () => {
+  test('two coupons of other processes are named with what they had', () => {
+    const coupons = [coupon({ processes: [['GMAW', 20]] }), coupon({ processes: [['SAW', 20]], number: 'PQR-2' })]
+    expect(finding(judge(procedure({ processes: [['GTAW', 4]] }), coupons), 'process').sentence).toBe('GTAW is not covered: PQR-001 and PQR-2 were welded with GMAW and SAW.')
   })
 })

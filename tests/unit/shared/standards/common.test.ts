@@ -1,0 +1,86 @@
+/** What every standard's rules share: reading records, wording findings, the two kinds of rule. */
+import { describe, expect, test } from 'vitest'
+import { between, closed, numericRange, UNKNOWN, UNLIMITED } from '@shared/ranges/numeric.ts'
+import { setRange } from '@shared/ranges/set.ts'
+import { figures, gasName, isInert, isStated, single } from '@shared/standards/common/reading.ts'
+import { figureRule, namedRule, weakest } from '@shared/standards/common/rule-kinds.ts'
+import { list, names, showAsked, showRange, showSpan } from '@shared/standards/common/wording.ts'
+import type { CouponSide, RuleContext, RuleMeta } from '@shared/standards/rule.ts'
+import { interval, quantity } from '@shared/units/convert.ts'
+import { coupon, procedure } from './builders.ts'
+
+const length = (lower: Parameters<typeof between>[2], upper: Parameters<typeof between>[3]): ReturnType<typeof between> => between('length', 'mm', lower, upper)
+
+describe('wording', () => {
+  test('ranges', () => {
+    expect(showRange(length(closed(5), closed(20)))).toBe('5 mm to 20 mm')
+    expect(showRange(length(closed(5), closed(5)))).toBe('5 mm')
+    expect(showRange(length(UNLIMITED, closed(20)))).toBe('up to 20 mm')
+    expect(showRange(length(closed(5), UNLIMITED))).toBe('5 mm and up')
+    expect(showRange(length(UNLIMITED, UNLIMITED))).toBe('any mm')
+    expect(showRange(length(closed(5), UNKNOWN))).toBe('a range that is not known')
+    expect(showRange(numericRange('length', 'mm', []))).toBe('nothing')
+    expect(showRange(numericRange('length', 'mm', [{ lower: closed(1), upper: closed(2) }, { lower: closed(5), upper: closed(9) }]))).toBe('1 mm to 2 mm and 5 mm to 9 mm')
+  })
+  test('names', () => {
+    expect([showSpan(null), showSpan(setRange([], { any: true })), showSpan(setRange([])), showSpan(setRange([], { unknown: true })), showSpan(setRange(['B', 'A'])), showSpan(length(closed(1), closed(2)))]).toEqual(['nothing', 'any', 'nothing', 'a range that is not known', 'A or B', '1 mm to 2 mm'])
+    expect([list([]), list(['a']), list(['a', 'b', 'c'])]).toEqual(['', 'a', 'a, b and c'])
+  })
+  test('what is asked', () => expect([showAsked({ min: 1, max: 2 }, 'mm'), showAsked({ min: 2, max: 2 }, 'mm'), showAsked({ min: null, max: 2 }, 'mm'), showAsked({ min: 2, max: null }, 'mm'), showAsked({ min: null, max: null }, 'mm')]).toEqual(['1 mm to 2 mm', '2 mm', 'up to 2 mm', '2 mm and up', 'every size']))
+})
+
+describe('reading', () => {
+  test('contradictory and missing figures', () => {
+    expect(figures(null, 'length', 'SI')).toEqual({ min: null, max: null, all: false, fault: false })
+    expect(figures({ min: null, max: null, all: true }, 'length', 'SI').all).toBe(true)
+    expect(figures(interval(9, 3, 'length'), 'length', 'SI').fault).toBe(true)
+    expect(figures(interval(null, -3, 'length'), 'length', 'SI').fault).toBe(true)
+    expect(figures(interval(-30, -3, 'temperature'), 'temperature', 'SI').fault).toBe(false)
+  })
+  test('one figure of a coupon', () => {
+    expect([single(interval(9, undefined, 'length'), 'length', 'SI'), single(interval(9, 10, 'length'), 'length', 'SI'), single(interval(null, 10, 'length'), 'length', 'SI'), single(interval(9, null, 'length'), 'length', 'SI'), single(interval(0, undefined, 'length'), 'length', 'SI'), single(null, 'length', 'SI')]).toEqual([9, null, 10, 9, null, null])
+    expect(single({ min: quantity(0.5, 'length', 'in'), max: null, all: false }, 'length', 'US')).toBe(0.5)
+  })
+  test('stated', () => expect([isStated(null), isStated(undefined), isStated(interval(null, null, 'length')), isStated(interval(1, null, 'length')), isStated({ min: null, max: null, all: true })]).toEqual([false, false, false, true, true]))
+  test('gases', () => {
+    const mixture = (name: string | null, ...parts: [string, number][]): Parameters<typeof gasName>[0] => ({ libraryId: null, components: parts.map(([gas, percent]) => ({ gas: gas as 'Ar', percent })), isoSymbol: null, name, flow: null })
+    expect([gasName(null), gasName(mixture('None')), gasName(mixture(null)), gasName(mixture(null, ['Ar', 100])), gasName(mixture(null, ['CO2', 25], ['Ar', 75])), gasName(mixture(null, ['O2', 50], ['N2', 50])), gasName(mixture(null, ['Ar', 100], ['O2', 0]))]).toEqual([null, 'none', null, 'Ar 100 %', 'Ar 75 % + CO2 25 %', 'N2 50 % + O2 50 %', 'Ar 100 %'])
+    expect([isInert(null), isInert(mixture('none')), isInert(mixture(null)), isInert(mixture(null, ['Ar', 70], ['He', 30])), isInert(mixture(null, ['Ar', 98], ['O2', 2]))]).toEqual([null, null, null, true, false])
+  })
+})
+
+describe('kinds of rule', () => {
+  const meta: RuleMeta = { id: 'trial/rule', title: 'Trial', standard: 'asme-ix', clause: 'none', editions: ['2021'], classes: { SMAW: 'essential' }, basis: 'read', source: 'trial', statement: 'trial', scope: 'weld', combine: 'each' }
+  const wps = procedure().variables
+  const context: RuleContext = { edition: '2021', level: null, system: 'SI', toughness: false, procedure: wps, block: null, coupons: [], path: '' }
+  const tested = coupon()
+  const sides: CouponSide[] = [{ coupon: tested, variables: tested.content.variables, block: null, role: 'mechanical' }]
+  const figure = (asked: { min: number | null; max: number | null } | null | 'fault'): ReturnType<typeof figureRule> => figureRule({ meta, field: 'diameter', at: 'weld', label: 'diameter', dimension: 'length', asked: () => asked, range: () => null })
+  const named = (asked: string[] | null, applies?: () => boolean): ReturnType<typeof namedRule> => namedRule({ meta, field: 'trial', at: 'weld', label: 'trial', applies, asked: () => asked, tested: () => undefined, because: 'trial' })
+  test('a figure', () => {
+    const range = length(closed(5), closed(20))
+    expect(figure(null).check(context, sides, range)).toMatchObject({ verdict: 'cannot-tell', missing: ['procedure: diameter'] })
+    expect(figure('fault').check(context, sides, range)?.sentence).toContain('contradicts itself')
+    expect(figure({ min: 6, max: 7 }).check(context, sides, null)).toBeNull()
+    expect(figure({ min: 1, max: 30 }).check(context, sides, range)).toMatchObject({ verdict: 'outside', sentence: '30 mm is above the 20 mm that PQR-001 qualifies, and 1 mm is below the 5 mm that PQR-001 qualifies.', fixes: [{ field: 'diameter.max' }, { field: 'diameter.min' }, { kind: 'plan-coupon' }] })
+    expect(figure({ min: null, max: null }).check(context, sides, range)).toMatchObject({ verdict: 'outside', sentence: expect.stringContaining('No upper limit is above the 20 mm') as string, fixes: [{ value: { si: 20 } }, { value: { si: 5 } }, {}] })
+    expect(figure({ min: 1, max: 2 }).check(context, sides, numericRange('length', 'mm', []))?.sentence).toContain('qualifies nothing here')
+    expect(figure({ min: 1, max: 2 }).check(context, sides, length(UNKNOWN, UNKNOWN))).toMatchObject({ verdict: 'cannot-tell' })
+    expect(() => figure({ min: 1, max: 2 }).check(context, sides, setRange(['A']))).toThrow(TypeError)
+  })
+  test('a gap: each end is moved to the nearest covered figure', () => {
+    const gap = numericRange('length', 'mm', [{ lower: closed(1), upper: closed(6) }, { lower: closed(16), upper: closed(50) }])
+    expect(figure({ min: 8, max: 20 }).check(context, sides, gap)).toMatchObject({ verdict: 'outside', sentence: expect.stringContaining('gap') as string, fixes: [{ label: 'Set diameter to 6 mm', field: 'diameter.min' }, { kind: 'plan-coupon' }] })
+  })
+  test('a name', () => {
+    expect(named(['A']).check(context, sides, setRange(['A']))?.verdict).toBe('within')
+    expect(named([]).check(context, sides, setRange(['A']))?.verdict).toBe('cannot-tell')
+    expect(named(['A']).check(context, sides, null)).toBeNull()
+    expect(named(['A'], () => false).check(context, sides, setRange(['A']))).toBeNull()
+    expect(named(['A']).check(context, sides, setRange([]))?.sentence).toBe('Trial A is not covered: PQR-001 qualifies none only.')
+    expect(named(['A']).range(context, sides[0]!)).toBeNull()
+    expect(() => named(['A']).check(context, sides, length(closed(1), closed(2)))).toThrow(TypeError)
+  })
+  test('a coupon is named once', () => expect(names([...sides, ...sides])).toBe('PQR-001'))
+  test('the weaker basis shows', () => expect([weakest('read', 'memory'), weakest('secondary', 'read'), weakest('read', 'read')]).toEqual(['memory', 'secondary', 'read']))
+})
