@@ -6,10 +6,10 @@ export function useFilters<K extends string>(keys: readonly K[]): { values: Reco
   const [search, setSearch] = useSearchParams()
   const names = keys.join(' ')
   const each = useCallback(
-    <V extends string | undefined>(value: (key: string) => V) => {
-      const made = {} as Record<string, V>
+    (value: (key: string) => string): Record<K, string> => {
+      const made: Record<string, string> = {}
       for (const key of names.split(' ')) made[key] = value(key)
-      return made as Record<K, V>
+      return made
     },
     [names],
   )
@@ -19,7 +19,7 @@ export function useFilters<K extends string>(keys: readonly K[]): { values: Reco
       setSearch(
         (before) => {
           const next = new URLSearchParams(before)
-          for (const [key, value] of Object.entries(changes) as [string, string | undefined][]) {
+          for (const [key, value] of Object.entries<string | undefined>(changes)) {
             if (value) next.set(key, value)
             else next.delete(key)
           }
