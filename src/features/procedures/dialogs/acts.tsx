@@ -1,13 +1,10 @@
 /** The dialogs of what may happen to a revision: each says in a sentence what follows. */
-import { useState, type FormEvent } from 'react'
-import { z } from 'zod'
+import { useState } from 'react'
 import type { Finding } from '@shared/schemas/assessment.ts'
-import { endpoints } from '@shared/schemas/endpoints.ts'
 import type { Revision } from '@shared/schemas/records.ts'
 import { Button } from '@/components/Button.tsx'
 import { Dialog } from '@/components/Dialog.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
-import { TextArea, TextField } from '@/components/fields/text.tsx'
 import { MarginNote } from '@/components/margin/MarginNote.tsx'
 import { asProblem } from '@/lib/problem.ts'
 
@@ -90,58 +87,6 @@ export function DiscardDialog({ isOpen, onClose, revision, onDiscard }: ActProps
     >
       <p className="text-pretty">{nameOf(revision)} is removed for everybody and can&rsquo;t be brought back. Revisions that were approved before stay as they are.</p>
       <FormError message={refusal} />
-    </Dialog>
-  )
-}
-
-const mailSchema = endpoints.mailRevision.body
-const ADDRESSES = /[\s,;]+/
-
-export function MailDialog({ isOpen, onClose, revision, caught, onSend }: ActProps & { caught: boolean; onSend: (mail: z.output<typeof mailSchema>) => Promise<unknown> }) {
-  const [to, setTo] = useState('')
-  const [message, setMessage] = useState('')
-  const [wrong, setWrong] = useState<string | null>(null)
-  const [mail, setMail] = useState<z.output<typeof mailSchema> | null>(null)
-  const [pending, setPending] = useState(false)
-  const [refusal, setRefusal] = useState<string | undefined>()
-  const send = async (event: FormEvent) => {
-    event.preventDefault()
-    if (pending) return
-    const parts = to.split(ADDRESSES).filter(Boolean)
-    const parsed = mailSchema.safeParse({ to: parts, message })
-    if (!parsed.success) {
-      const issue = parsed.error.issues[0]
-      const bad = typeof issue?.path[1] === 'number' ? parts[issue.path[1]] : undefined
-      return setWrong(bad ? `"${bad}" is not an e-mail address. Write one like name@example.com.` : (issue?.message ?? 'Name at least one recipient.'))
-    }
-    setWrong(null)
-    setPending(true)
-    setRefusal(undefined)
-    try {
-      setMail(parsed.data)
-      await onSend(parsed.data)
-    } catch (error) {
-      setRefusal(asProblem(error).message)
-    } finally {
-      setPending(false)
-    }
-  }
-  return (
-    <Dialog title="E-mail the procedure" isOpen={isOpen} onClose={onClose} dismissable={to === '' && message === ''}>
-      <form className="space-y-4" noValidate onSubmit={(event) => void send(event)}>
-        <p className="text-pretty">
-          The signed PDF of {nameOf(revision)} is sent to each address. {caught && 'No mail server is set up, so the mail is caught and can be read in the outbox.'}
-        </p>
-        <TextField label="To" description="Several with commas between" autoComplete="off" inputMode="email" value={to} error={wrong} onChange={(event) => setTo(event.target.value)} />
-        <TextArea label="Message" optional maxLength={4000} rows={4} value={message} onChange={(event) => setMessage(event.target.value)} />
-        <FormError message={refusal} />
-        <div className="flex flex-wrap justify-end gap-2">
-          <Button onClick={onClose}>Not now</Button>
-          <Button kind="primary" type="submit" pending={pending}>
-            {pending && mail ? `Sending to ${mail.to.length}` : 'Send'}
-          </Button>
-        </div>
-      </form>
     </Dialog>
   )
 }

@@ -16,7 +16,8 @@ import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
 import { Returned } from '../components/Returned.tsx'
 import { RevisionTrail } from '../components/RevisionTrail.tsx'
 import { Signatures } from '@/components/record/Signatures.tsx'
-import { MailDialog, nameOf } from '../dialogs/acts.tsx'
+import { MailDialog } from '@/components/record/MailDialog.tsx'
+import { nameOf } from '../dialogs/acts.tsx'
 import { placedRows } from '@/components/variables/catalogue.ts'
 import { SheetContext } from '@/components/variables/context.ts'
 import { placeFindings, sectionVerdicts } from '@/components/variables/findings.ts'
@@ -102,7 +103,8 @@ export function ReadingScreen({ revision }: { revision: Revision }) {
         <MailDialog
           isOpen
           onClose={() => setOpen(null)}
-          revision={revision}
+          title="E-mail the procedure"
+          name={nameOf(revision)}
           caught={mailIsCaught}
           onSend={async (mail) => {
             await acts.mail.mutateAsync(mail)
