@@ -75,6 +75,8 @@ export function assess(input: AssessInput): Assessment {
 /** Contradictions, coupons that are not certified, and what is out of scope: before any rule is asked. */
 function recordFindings(input: AssessInput, standard: Standard, findings: Finding[]): void {
   const { variables } = input.procedure
+  const note = standard.editions.find(({ id }) => id === input.edition)?.note
+  if (note) findings.push(plainFinding(input, { ruleId: 'assessment/edition-note', title: 'Edition', field: 'standards', verdict: 'within', class: 'not-a-variable', sentence: note, missing: [], basis: 'secondary', source: standard.name }))
   for (const { field, sentence, processId } of contradictions(variables)) {
     findings.push(plainFinding(input, { ruleId: 'assessment/contradiction', title: 'Contradiction in the procedure', field, processId, sentence, missing: [`procedure: ${field}`], fixes: [{ kind: 'state', label: 'Correct the procedure', field }] }))
   }

@@ -155,6 +155,11 @@ describe('what can not be told', () => {
   })
 })
 
+test('2023 says in the assessment that it is judged as 2021', () => {
+  expect(finding(judge(procedure(), [coupon()], '2023'), 'edition-note')).toMatchObject({ verdict: 'within', class: 'not-a-variable', sentence: expect.stringContaining('2021') as string })
+  expect(() => finding(judge(procedure(), [coupon()], '2021'), 'edition-note')).toThrow('no finding')
+})
+
 describe('contradictions', () => {
   const cases: [string, string, (v: WeldingVariables) => void][] = [
     ['minimum above maximum', 'thickness', (v) => (v.thickness = mm(30, 10))],
