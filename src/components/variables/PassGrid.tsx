@@ -3,6 +3,7 @@ import { useEffect, useRef, useState, type ClipboardEvent, type KeyboardEvent } 
 import type { Pass } from '@shared/schemas/welding.ts'
 import { SHOWN_UNIT } from '@shared/units/convert.ts'
 import { Button } from '@/components/Button.tsx'
+import { GridCell } from './GridCell.tsx'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { LAYERS } from './options.ts'
 import { addPass, cellText, MAX_PASSES, moveFrom, PASS_COLUMNS, pasteCells, writeCell, type GridColumn } from './pass-grid.ts'
@@ -86,7 +87,7 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
                           ))}
                         </select>
                       ) : (
-                        <Cell at={`${row}.${at}`} label={`Pass ${pass.number}, ${column.label.toLowerCase()}`} text={cellText(pass, column, system)} write={(text) => write(row, column, text)} onKey={(event) => onKey(event, row, at)} onPaste={(event) => onPaste(event, row, at)} />
+                        <GridCell at={`${row}.${at}`} label={`Pass ${pass.number}, ${column.label.toLowerCase()}`} text={cellText(pass, column, system)} write={(text) => write(row, column, text)} onKey={(event) => onKey(event, row, at)} onPaste={(event) => onPaste(event, row, at)} />
                       )}
                     </td>
                   ))}
@@ -115,47 +116,5 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
         <p className="text-sm text-soft">Enter goes to the next pass and adds one at the end. Cells paste from a spreadsheet.</p>
       </div>
     </div>
-  )
-}
-
-interface CellProps {
-  at: string
-  label: string
-  text: string
-  write: (text: string) => string | null
-  onKey: (event: KeyboardEvent<HTMLElement>) => void
-  onPaste: (event: ClipboardEvent) => void
-}
-
-function Cell({ at, label, text, write, onKey, onPaste }: CellProps) {
-  const [typed, setTyped] = useState(text)
-  const [seen, setSeen] = useState(text)
-  const [wrong, setWrong] = useState<string | null>(null)
-  if (seen !== text) {
-    setSeen(text)
-    setTyped(text)
-    setWrong(null)
-  }
-  return (
-    <>
-      <input
-        data-cell={at}
-        aria-label={label}
-        aria-invalid={wrong ? true : undefined}
-        aria-describedby={wrong ? `cell-${at}` : undefined}
-        autoComplete="off"
-        className="box"
-        value={typed}
-        onChange={(event) => setTyped(event.target.value)}
-        onBlur={() => setWrong(typed === text ? null : write(typed))}
-        onKeyDown={onKey}
-        onPaste={onPaste}
-      />
-      {wrong && (
-        <p id={`cell-${at}`} className="mt-1 text-sm font-medium text-oxide">
-          {wrong}
-        </p>
-      )}
-    </>
   )
 }

@@ -26,13 +26,35 @@ export const MAX_PASSES = 200
 
 const bare = (text: string, unit: string) => (unit !== '' && text.endsWith(` ${unit}`) ? text.slice(0, -unit.length - 1) : text)
 
+/** What a cell shows of a measured value: the figure without the unit that stands in the column's head. */
+export const quantityText = (value: Quantity | null, dimension: Dimension, system: UnitSystem): string => (value ? bare(formatQuantity(value, dimension, system).text, SHOWN_UNIT[system][dimension]) : '')
+export const intervalText = (value: Interval | null, dimension: Dimension, system: UnitSystem): string => (value ? bare(formatInterval(value, dimension, system).text, SHOWN_UNIT[system][dimension]) : '')
+
+type Read<T> = { ok: true; value: T | null } | { ok: false; message: string }
+/** A cell with one measured value; an empty one is null. `where` opens the message: "Pass 2, size: ". */
+export function readQuantityCell(text: string, dimension: Dimension, where: string, system: UnitSystem): Read<Quantity> {
+  if (text.trim() === '') return { ok: true, value: null }
+  const reading = parseQuantity(text.trim(), dimension, system)
+  return reading.ok ? { ok: true, value: reading.quantity } : { ok: false, message: where + reading.message }
+}
+
+/** A cell with a figure or a range of them. */
+export function readIntervalCell(text: string, dimension: Dimension, where: string, system: UnitSystem): Read<Interval> {
+  if (text.trim() === '') return { ok: true, value: null }
+  const reading = parseInterval(text.trim(), dimension, system)
+  if (!reading.ok) return { ok: false, message: where + reading.message }
+  const { min, max, all } = reading.interval
+  if (all) return { ok: false, message: `${where}"all" does not apply here. Write a figure, or a range like 18-22.` }
+  if (min && max && min.si > max.si) return { ok: false, message: `${where}the lower figure, ${min.typed}, is above the upper, ${max.typed}.` }
+  return { ok: true, value: reading.interval }
+}
+
 /** What a cell shows: the figure without the unit that stands in the column's head. */
 export function cellText(pass: Pass, { id, dimension }: GridColumn, system: UnitSystem): string {
   const value = pass[id]
   if (value === null) return ''
   if (!dimension) return id === 'layer' ? (LAYERS.find((one) => one.value === value)?.label ?? '') : pass.number
-  const text = id === 'fillerDiameter' ? formatQuantity(value as Quantity, dimension, system).text : formatInterval(value as Interval, dimension, system).text
-  return bare(text, SHOWN_UNIT[system][dimension])
+  return id === 'fillerDiameter' ? quantityText(value as Quantity, dimension, system) : intervalText(value as Interval, dimension, system)
 }
 
 export type CellReading = { ok: true; pass: Pass } | { ok: false; message: string }
@@ -48,28 +70,20 @@ export function writeCell(pass: Pass, { id, dimension, label }: GridColumn, text
     return layer ? { ok: true, pass: { ...pass, layer: layer.value as Pass['layer'] } } : { ok: false, message: `${where}"${typed}" is not a layer. Choose ${LAYERS.map((one) => one.label.toLowerCase()).join(', ')}.` }
   }
   if (!dimension) return { ok: false, message: `${where}this cell can't be written.` }
-  if (id === 'fillerDiameter') {
-    const reading = parseQuantity(typed, dimension, system)
-    return reading.ok ? { ok: true, pass: { ...pass, fillerDiameter: reading.quantity } } : { ok: false, message: where + reading.message }
-  }
-  const reading = parseInterval(typed, dimension, system)
-  if (!reading.ok) return { ok: false, message: where + reading.message }
-  const { min, max, all } = reading.interval
-  if (all) return { ok: false, message: `${where}"all" does not apply here. Write a figure, or a range like 18-22.` }
-  if (min && max && min.si > max.si) return { ok: false, message: `${where}the lower figure, ${min.typed}, is above the upper, ${max.typed}.` }
-  return { ok: true, pass: { ...pass, [id]: reading.interval } }
+  const reading = id === 'fillerDiameter' ? readQuantityCell(typed, dimension, where, system) : readIntervalCell(typed, dimension, where, system)
+  return reading.ok ? { ok: true, pass: { ...pass, [id]: reading.value } } : reading
 }
 
 /** The number after the last pass: 4 after 3, 5 after "2-4"; where it can't be told, the count plus one. */
-export function nextPassNumber(passes: readonly Pass[]): string {
-  const last = /(\d+)\s*$/.exec(passes.at(-1)?.number ?? '')?.[1]
-  return String(last ? Number(last) + 1 : passes.length + 1)
+export function nextPassNumber(numbers: readonly string[]): string {
+  const last = /(\d+)\s*$/.exec(numbers.at(-1) ?? '')?.[1]
+  return String(last ? Number(last) + 1 : numbers.length + 1)
 }
 
 /** A further pass: numbered on, with layer and size of the one before. */
 export const addPass = (passes: readonly Pass[]): Pass[] => {
   const last = passes.at(-1)
-  return [...passes, { number: nextPassNumber(passes), layer: last?.layer === 'root' ? 'fill' : (last?.layer ?? 'root'), fillerDiameter: last?.fillerDiameter ?? null, current: null, voltage: null, wireFeed: null, travelSpeed: null }]
+  return [...passes, { number: nextPassNumber(passes.map(({ number }) => number)), layer: last?.layer === 'root' ? 'fill' : (last?.layer ?? 'root'), fillerDiameter: last?.fillerDiameter ?? null, current: null, voltage: null, wireFeed: null, travelSpeed: null }]
 }
 
 /**
@@ -100,8 +114,7 @@ export function pasteCells(passes: readonly Pass[], row: number, column: number,
 }
 
 /** The cell that a key leads to; null when the key stays in its text. */
-export function moveFrom(key: string, row: number, column: number, rows: number, caret: { atStart: boolean; atEnd: boolean }): { row: number; column: number; add?: true } | null {
-  const columns = PASS_COLUMNS.length
+export function moveFrom(key: string, row: number, column: number, rows: number, caret: { atStart: boolean; atEnd: boolean }, columns = PASS_COLUMNS.length): { row: number; column: number; add?: true } | null {
   if (key === 'ArrowUp') return row > 0 ? { row: row - 1, column } : null
   if (key === 'ArrowDown') return row < rows - 1 ? { row: row + 1, column } : null
   if (key === 'Enter') return row < rows - 1 ? { row: row + 1, column } : rows < MAX_PASSES ? { row: rows, column, add: true } : null

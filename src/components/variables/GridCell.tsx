@@ -1,0 +1,49 @@
+import { useState, type ClipboardEvent, type KeyboardEvent } from 'react'
+
+export interface GridCellProps {
+  /** Row and column, e.g. `2.5`; unique on the page. */
+  at: string
+  label: string
+  text: string
+  /** Keeps the text as a value; gives what is wrong with it, if it can't. */
+  write: (text: string) => string | null
+  onKey: (event: KeyboardEvent<HTMLElement>) => void
+  onPaste?: (event: ClipboardEvent) => void
+  className?: string
+  inputMode?: 'text' | 'numeric'
+}
+
+/** A cell of a grid that is typed in: read when it is left; what can't be read stays, with the reason under it. */
+export function GridCell({ at, label, text, write, onKey, onPaste, className = '', inputMode }: GridCellProps) {
+  const [typed, setTyped] = useState(text)
+  const [seen, setSeen] = useState(text)
+  const [wrong, setWrong] = useState<string | null>(null)
+  if (seen !== text) {
+    setSeen(text)
+    setTyped(text)
+    setWrong(null)
+  }
+  return (
+    <>
+      <input
+        data-cell={at}
+        aria-label={label}
+        aria-invalid={wrong ? true : undefined}
+        aria-describedby={wrong ? `cell-${at}` : undefined}
+        autoComplete="off"
+        inputMode={inputMode}
+        className={`box ${className}`}
+        value={typed}
+        onChange={(event) => setTyped(event.target.value)}
+        onBlur={() => setWrong(typed === text ? null : write(typed))}
+        onKeyDown={onKey}
+        onPaste={onPaste}
+      />
+      {wrong && (
+        <p id={`cell-${at}`} className="mt-1 text-sm font-medium text-oxide">
+          {wrong}
+        </p>
+      )}
+    </>
+  )
+}
