@@ -8,7 +8,7 @@ import { hashPassword } from '../services/passwords.ts'
 import { DEMO_PASSWORD, FIRM, PEOPLE, type PersonKey } from './people.ts'
 import { makeRecords } from './records.ts'
 
-export { demoSignIns, type DemoSignIn } from './people.ts'
+export { demoSignIns } from './people.ts'
 
 /**
  * Loads Larkfield Fabrication with its people, procedures, coupons and jobs into a migrated database, all of it or, when that breaks off,

@@ -1,7 +1,7 @@
 /** Drawn pictures for the demo coupons: a macro section, a bend specimen and the welded plate. Nothing photographed. */
 import sharp from 'sharp'
 
-export type Tone = 'steel' | 'stainless' | 'aluminium'
+type Tone = 'steel' | 'stainless' | 'aluminium'
 export interface DemoPicture { fileName: string; caption: string; tag: string; jpeg: Buffer }
 
 const WIDTH = 960

@@ -6,8 +6,8 @@ import { actorOf } from '../routes/mount.ts'
 
 export interface UploadedFile { name: string; bytes: Buffer }
 
-export const MAX_FILES = 20
-export const MAX_FILE_BYTES = 25 * 1024 * 1024
+const MAX_FILES = 20
+const MAX_FILE_BYTES = 25 * 1024 * 1024
 /** All files of one request together: they are held in memory until they are checked. */
 const MAX_REQUEST_BYTES = 120 * 1024 * 1024
 
@@ -18,7 +18,7 @@ const receiving = new WeakMap<Request, string>()
 export const filesOf = (req: Request): UploadedFile[] => uploaded.get(req) ?? []
 
 /** A name as shown and kept: no folders, no control characters, not endless. */
-export function cleanName(name: string): string {
+function cleanName(name: string): string {
   const bare = (name.split(/[\\/]/).at(-1) ?? '').replace(/\p{Cc}|\p{Cf}/gu, '').trim()
   return bare.length > 160 ? `${bare.slice(0, 120)}…${bare.slice(-30)}` : bare || 'without a name'
 }

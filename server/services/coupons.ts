@@ -79,7 +79,7 @@ export const qualificationsOf = (coupon: Coupon): CouponQualification[] =>
 type FieldError = { field: string; message: string }
 
 /** Everything that stands in the way of certification: what is missing, and results that do not pass unless that is said already. */
-export function obstacles(qualifications: readonly CouponQualification[]): FieldError[] {
+function obstacles(qualifications: readonly CouponQualification[]): FieldError[] {
   const found = new Map<string, FieldError>()
   for (const { missing, results } of qualifications) {
     for (const { field, message } of missing) if (!found.has(message)) found.set(message, { field: field === '' ? 'content' : `content.${field}`, message })

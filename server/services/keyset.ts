@@ -3,7 +3,7 @@ import type { Tenant } from '../config/database.ts'
 import { badRequest } from '../middleware/problem.ts'
 import { likeAnywhere, row, rows, searchWords } from './query.ts'
 
-export interface SortKey {
+interface SortKey {
   /** SQL expression over the list's tables, never null. */
   expression: string
   type: 'integer' | 'text' | 'timestamptz'

@@ -71,7 +71,7 @@ function conditionsOf(question: JointQuestion): { conditions: string[]; bind: Re
 }
 
 /** SQL for the approved revisions that a question may concern: those that meet every condition first, then those that miss few. */
-export function lookupSql(organizationId: string, question: JointQuestion): { sql: string; bind: Record<string, unknown> } {
+function lookupSql(organizationId: string, question: JointQuestion): { sql: string; bind: Record<string, unknown> } {
   const { conditions, bind } = conditionsOf(question)
   const failed = conditions.length === 0 ? '0' : conditions.map((condition) => `(not (${condition}))::int`).join(' + ')
   return {

@@ -14,7 +14,7 @@ const written = (text: string | null): string[] => (text && squeeze(text) !== ''
 export const askedMetalTokens = ({ text, libraryIds, pNumber }: AskedMetal): string[] => distinct([...libraryIds.map((id) => `id:${id}`), ...written(text), ...(pNumber ? [`p:${pNumber.toLowerCase()}`] : [])])
 
 /** By what a metal is found: its library row, grade, specification, UNS and P-Number (`p:1`, and `p:1/2` with its group). */
-export function metalTokens(metal: BaseMetal): string[] {
+function metalTokens(metal: BaseMetal): string[] {
   const { pNumber, groupNumber } = metal
   return distinct([
     ...word(metal.specification),

@@ -13,7 +13,7 @@ interface Signing { address: string; password: string }
 type FieldError = { field: string; message: string }
 
 /** What a draft needs before somebody is asked to review it; what the standard says of it is for the reviewer to see. */
-export function lackingForReview({ variables }: ProcedureContent): FieldError[] {
+function lackingForReview({ variables }: ProcedureContent): FieldError[] {
   const { a } = variables.baseMetals
   const lacking: FieldError[] = []
   if (!a.grade && !a.specification && !a.pNumber) lacking.push({ field: 'content.variables.baseMetals.a', message: 'Name the base metal, e.g. A516 Gr. 70.' })
@@ -52,7 +52,7 @@ export async function returnRevision(tenant: Tenant, actor: Actor, id: string, v
 const counts = ({ class: kind, verdict }: Finding): boolean => verdict !== 'within' && (kind === 'essential' || kind === 'supplementary')
 
 /** Findings that stand in the way of an approval without a reason. */
-export const blockingFindings = (assessments: readonly Assessment[]): Finding[] =>
+const blockingFindings = (assessments: readonly Assessment[]): Finding[] =>
   assessments.filter(({ verdict }) => verdict !== 'within').flatMap(({ findings }) => findings.filter(counts))
 
 const SHOWN = 50

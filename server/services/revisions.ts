@@ -26,7 +26,7 @@ export async function findRevision({ organizationId, transaction }: Tenant, id: 
 }
 
 /** A state in which the act is not possible; carries the record as it is now. */
-export async function wrongState(tenant: Tenant, actor: Actor, revision: ProcedureRevision, act: string): Promise<HttpProblem> {
+async function wrongState(tenant: Tenant, actor: Actor, revision: ProcedureRevision, act: string): Promise<HttpProblem> {
   const state = revision.state.replace('-', ' ')
   return new HttpProblem(409, 'Not in this state', `${nameOf(revision)} is ${state}, so it cannot be ${act}. Open it again to see where it stands.`, { current: await presentRevision(tenant, actor, revision) })
 }

@@ -5,7 +5,7 @@ import sharp from 'sharp'
 /** Largest edge of a thumbnail, pixels. */
 const EDGE = 640
 /** A picture larger than this is refused before it is unpacked into memory. */
-export const MAX_PIXELS = 120_000_000
+const MAX_PIXELS = 120_000_000
 
 export interface Picture {
   /** As it is to be seen, turned by its EXIF orientation. */

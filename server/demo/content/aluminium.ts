@@ -43,7 +43,7 @@ const plate6061 = (title: string, scope: string, id: string, wire: Weld['wire'],
     }),
   })
 
-export const PULSE_5356: PanelSettings = { wireFeed: 335, voltage: 23.4, background: 17, frequency: 120, onTime: 1.9 }
+const PULSE_5356: PanelSettings = { wireFeed: 335, voltage: 23.4, background: 17, frequency: 120, onTime: 1.9 }
 const PULSE_4043: PanelSettings = { wireFeed: 310, voltage: 22.6, background: 16.4, frequency: 110, onTime: 2.1 }
 
 export const platform6061 = (): ProcedureContent => plate6061('Access platform, 6061-T6, pulsed wire, ER5356', 'Butts in stringers, treads and kick plates.', 'us-b209-6061-t6', 'a510-er5356', PULSE_5356)

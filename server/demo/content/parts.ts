@@ -13,7 +13,7 @@ export const amps = (min: number, max?: number) => interval(min, max, 'current')
 export const volts = (min: number, max?: number) => interval(min, max, 'voltage')
 export const travel = (min: number, max?: number) => interval(min, max, 'travelSpeed')
 export const feed = (min: number, max: number | undefined = undefined, unit = 'm/min') => interval(min, max, 'wireFeed', unit)
-export const degrees = (min: number, max?: number) => interval(min, max, 'angle')
+const degrees = (min: number, max?: number) => interval(min, max, 'angle')
 
 const found = <T>(row: T | null, id: string): T => {
   if (row === null) throw new Error(`the library has no ${id}`)
