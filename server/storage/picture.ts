@@ -1,6 +1,6 @@
 import exifReader from 'exif-reader'
-import heicConvert from 'heic-convert'
 import sharp from 'sharp'
+import { heicToJpeg } from './heic.ts'
 
 /** Largest edge of a thumbnail, pixels. */
 const EDGE = 640
@@ -40,7 +40,7 @@ export async function readPicture(bytes: Buffer, mediaType: string): Promise<Pic
   const { exif, width: stored = 0, height: storedHeight = 0 } = await sharp(bytes, options).metadata()
   if (stored * storedHeight > MAX_PIXELS) throw new Error('too many pixels')
   // The decoder turns HEIC by its own orientation already.
-  const readable = isHeic(mediaType) ? Buffer.from(await heicConvert({ buffer: bytes as unknown as ArrayBuffer, format: 'JPEG', quality: 0.9 })) : bytes
+  const readable = isHeic(mediaType) ? await heicToJpeg(bytes) : bytes
   const turned = sharp(readable, options).rotate()
   const { data: thumbnail } = await turned.clone().resize(EDGE, EDGE, { fit: 'inside', withoutEnlargement: true }).jpeg({ quality: 78 }).toBuffer({ resolveWithObject: true })
   const { autoOrient } = await sharp(readable, options).metadata()
