@@ -60,5 +60,5 @@ const otherCoupons = (tenant: Tenant, revision: ProcedureRevision): Promise<Link
 export async function assessRevision(tenant: Tenant, revision: ProcedureRevision): Promise<Assessment[]> {
   const coupons = (await linkedCoupons(tenant, revision.id)).map(asAssessed)
   const others = (await otherCoupons(tenant, revision)).map(asAssessed)
-  return revision.content.variables.standards.map(({ standard, edition, level }) => assess({ procedure: revision.content, coupons, standard, edition, level, otherCoupons: others }))
+  return revision.content.variables.standards.map(({ standard, edition, level, route }) => assess({ procedure: revision.content, coupons, standard, edition, level, route, otherCoupons: others }))
 }

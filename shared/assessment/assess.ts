@@ -3,7 +3,7 @@
  * coupons; it knows no clause.
  */
 import type { Assessment, AssessedCoupon, CouponQualification, Finding, QualifiedRange, Verdict } from '../schemas/assessment.ts'
-import type { StandardId } from '../schemas/common.ts'
+import type { Route, StandardId } from '../schemas/common.ts'
 import type { ProcedureContent } from '../schemas/welding.ts'
 import { getStandard } from '../standards/index.ts'
 import type { RuleContext, Standard } from '../standards/rule.ts'
@@ -17,6 +17,8 @@ export interface AssessInput {
   standard: StandardId
   edition: string
   level?: '1' | '2' | null
+  /** Absent = by test; `prequalified` judges the procedure without any coupon. */
+  route?: Route
   /** Stored coupons that are not linked: offered as a cure where one would cover what is missing. */
   otherCoupons?: readonly AssessedCoupon[]
 }
@@ -47,17 +49,22 @@ const plainFinding = (input: AssessInput, given: Plain): Finding => ({
  * @param input the procedure, the linked coupons, and the standard and edition to judge by; nothing is changed
  * @returns the assessment; an unknown standard, edition or process gives a named "cannot tell" finding, never an error
  */
-export function assess(input: AssessInput): Assessment {
+export function assess(given: AssessInput): Assessment {
+  const route = given.route ?? 'test'
+  // A prequalified procedure stands by itself: coupons that happen to be linked neither help nor harm it.
+  const input = route === 'prequalified' ? { ...given, coupons: [], otherCoupons: [] } : given
   const { variables } = input.procedure
   const findings: Finding[] = []
   const ranges: QualifiedRange[] = []
   const standard = getStandard(input.standard)
-  const prepared = standard && prepare(standard, input.edition)
+  const hasRoute = standard ? (standard.routes ?? ['test']).includes(route) : false
+  const prepared = standard && prepare(standard, input.edition, route)
   if (!standard) findings.push(plainFinding(input, { ruleId: 'assessment/standard', title: 'Standard', field: 'standards', sentence: `The rules of ${input.standard} are not in the program yet, so the procedure can't be judged by it.`, missing: [`rules of ${input.standard}`] }))
   else if (!prepared) findings.push(plainFinding(input, { ruleId: 'assessment/edition', title: 'Edition', field: 'standards', sentence: `Edition ${input.edition} of ${standard.shortName} is not known here; known are ${standard.editions.map(({ id }) => id).join(', ')}.`, missing: [`rules of the ${input.edition} edition`] }))
+  else if (!hasRoute) findings.push(plainFinding(input, { ruleId: 'assessment/route', title: 'Route', field: 'standards', sentence: `${standard.shortName} has no prequalified procedures here: every procedure is supported by a qualification test.`, missing: ['a route by test'], fixes: [{ kind: 'state', label: 'Choose the route by test', field: 'standards' }] }))
   else {
     recordFindings(input, standard, findings)
-    const shared = { edition: input.edition, level: input.level ?? null, system: variables.unitSystem, toughness: variables.toughnessRequired, procedure: variables, coupons: input.coupons }
+    const shared = { route, edition: input.edition, level: input.level ?? null, system: variables.unitSystem, toughness: variables.toughnessRequired, procedure: variables, coupons: input.coupons }
     const judge = (context: RuleContext): void => {
       const judged: BlockJudgement = judgeBlock(standard, prepared, context, input.otherCoupons ?? [])
       for (const finding of judged.findings) findings.push(finding)

@@ -1,5 +1,6 @@
 /** Rule lists prepared once for each standard, edition and process, so that a run does not search. */
 import type { Basis, VariableClass } from '../schemas/assessment.ts'
+import type { Route } from '../schemas/common.ts'
 import type { Process } from '../schemas/welding.ts'
 import { weakest } from '../standards/common/rule-kinds.ts'
 import type { Rule, RuleClass, Standard } from '../standards/rule.ts'
@@ -18,24 +19,25 @@ export interface PreparedEdition {
 
 const cache = new WeakMap<Standard, Map<string, PreparedEdition | null>>()
 
-/** The rules of one edition by process; null when the standard does not know the edition. */
-export function prepare(standard: Standard, edition: string): PreparedEdition | null {
+/** The rules of one edition and route by process; null when the standard does not know the edition. */
+export function prepare(standard: Standard, edition: string, route: Route = 'test'): PreparedEdition | null {
   let editions = cache.get(standard)
   if (!editions) {
     editions = new Map<string, PreparedEdition | null>()
     cache.set(standard, editions)
   }
-  let prepared = editions.get(edition)
+  const key = `${route}/${edition}`
+  let prepared = editions.get(key)
   if (prepared === undefined) {
-    prepared = standard.editions.some(({ id }) => id === edition) ? build(standard, edition) : null
+    prepared = standard.editions.some(({ id }) => id === edition) ? build(standard, edition, route) : null
     // A request may name any text as its edition: only what the standard lists is kept.
-    if (prepared) editions.set(edition, prepared)
+    if (prepared) editions.set(key, prepared)
   }
   return prepared
 }
 
-function build(standard: Standard, edition: string): PreparedEdition {
-  const rules = standard.rules.filter((rule) => rule.meta.editions.includes(edition))
+function build(standard: Standard, edition: string, route: Route): PreparedEdition {
+  const rules = standard.rules.filter((rule) => rule.meta.editions.includes(edition) && (rule.meta.route ?? route) === route)
   const byProcess = new Map<Process, PreparedRule[]>()
   for (const process of standard.processes) {
     const own: PreparedRule[] = []

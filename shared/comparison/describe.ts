@@ -57,7 +57,7 @@ const READERS: { readonly [K in Field['kind']]: Reader } = {
   positions: (value) => list(z.array(z.string()).parse(value)),
   ids: (value) => list(z.array(z.string()).parse(value)),
   gas: (value) => list(gasMixtureSchema.shape.components.parse(value).map(({ gas, percent }) => `${gas} ${number(percent)} %`)),
-  standards: (value) => list(z.array(standardChoiceSchema).parse(value).map(({ standard, edition, level }) => `${choiceWord(standard)}, ${edition}${level ? `, level ${level}` : ''}`), '; '),
+  standards: (value) => list(z.array(standardChoiceSchema).parse(value).map(({ standard, edition, level, route }) => `${choiceWord(standard)}, ${edition}${level ? `, level ${level}` : ''}${route === 'prequalified' ? ', prequalified' : ''}`), '; '),
   panel: (value) => list(settingsSchema.parse(value).map(({ control, value: set, unit }) => `${control} ${set}${unit ? ` ${unit}` : ''}`), '; '),
   openings: (value, dimension, system, options) => list(z.array(openingSchema).parse(value).map(({ size, corner, fromInternalFlaw }) => `${measured(size, dimension, system, options)}${corner ? ' at a corner' : ''}${fromInternalFlaw ? ' from an internal flaw' : ''}`)),
 }

@@ -1,6 +1,6 @@
 /** What the engine says: verdicts, ranges, findings. The same shapes are drawn in the margin, printed and sent by the API. */
 import { z } from 'zod'
-import { idSchema, standardIdSchema } from './common.ts'
+import { idSchema, routeSchema, standardIdSchema } from './common.ts'
 import { couponContentSchema, procedureContentSchema } from './welding.ts'
 
 export const verdictSchema = z.enum(['within', 'outside', 'cannot-tell'])
@@ -125,7 +125,7 @@ export const assessedCouponSchema = z
 export type AssessedCoupon = z.infer<typeof assessedCouponSchema>
 
 export const assessmentRequestSchema = z
-  .object({ procedure: procedureContentSchema, coupons: z.array(assessedCouponSchema).max(20), standard: standardIdSchema, edition: z.string().min(1).max(20), level: z.enum(['1', '2']).nullable().default(null) })
+  .object({ procedure: procedureContentSchema, coupons: z.array(assessedCouponSchema).max(20), standard: standardIdSchema, edition: z.string().min(1).max(20), level: z.enum(['1', '2']).nullable().default(null), route: routeSchema.optional() })
   .meta({ id: 'AssessmentRequest' })
 export type AssessmentRequest = z.infer<typeof assessmentRequestSchema>
 

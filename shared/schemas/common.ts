@@ -26,9 +26,14 @@ export const STANDARD_IDS = ['asme-ix', 'aws-d1-1', 'aws-d1-2', 'iso-15614-1', '
 export const standardIdSchema = z.enum(STANDARD_IDS)
 export type StandardId = z.infer<typeof standardIdSchema>
 
-/** A standard and the edition that the record is judged by. */
+/** How a procedure is supported: by a qualification test, or by meeting every condition of a prequalified procedure. */
+export const ROUTES = ['test', 'prequalified'] as const
+export const routeSchema = z.enum(ROUTES)
+export type Route = z.infer<typeof routeSchema>
+
+/** A standard and the edition that the record is judged by; without `route` it is judged by test. */
 export const standardChoiceSchema = z
-  .object({ standard: standardIdSchema, edition: z.string().min(1).max(20), level: z.enum(['1', '2']).nullable().default(null) })
+  .object({ standard: standardIdSchema, edition: z.string().min(1).max(20), level: z.enum(['1', '2']).nullable().default(null), route: routeSchema.optional() })
   .meta({ id: 'StandardChoice' })
 export type StandardChoice = z.infer<typeof standardChoiceSchema>
 

@@ -52,6 +52,8 @@ export const jointSchema = z
   .object({
     weld: z.enum(['groove', 'fillet']).default('groove'),
     type: z.enum(['butt', 'tee', 'corner', 'lap', 'edge']).default('butt'),
+    /** Designation of a standard joint detail, e.g. TC-U4a-GF. */
+    designation: z.string().trim().max(40).nullable().optional(),
     penetration: z.enum(['full', 'partial']).default('full'),
     groove: oneOf(GROOVE_TYPES),
     includedAngle: intervalOrNull,
@@ -123,6 +125,8 @@ export const electricalSchema = z
     waveformControlled: bool,
     powerSource: oneOf(['constant-voltage', 'constant-current']),
     current: intervalOrNull,
+    /** What the maker of the electrode recommends for its size. */
+    makerCurrent: intervalSchema.nullable().optional(),
     voltage: intervalOrNull,
     wireFeed: intervalOrNull,
     travelSpeed: intervalOrNull,
@@ -159,6 +163,15 @@ export const techniqueSchema = z
     passesPerSide: oneOf(['single', 'multiple']),
     electrodes: oneOf(['single', 'multiple']),
     electrodeSpacing: quantityOrNull,
+    /** How many electrodes where there are several. */
+    electrodeCount: z.number().int().min(1).max(12).nullable().optional(),
+    /** Across the joint; `electrodeSpacing` is along it. */
+    lateralSpacing: quantitySchema.nullable().optional(),
+    /** Of a parallel electrode; of the electrode along travel; of the electrode across travel. */
+    parallelAngle: quantitySchema.nullable().optional(),
+    travelAngle: quantitySchema.nullable().optional(),
+    normalAngle: quantitySchema.nullable().optional(),
+    hotWire: z.boolean().nullable().optional(),
     contactTubeDistance: intervalOrNull,
     nozzleSize: textOrNull(40),
     peening: oneOf(['none', 'used']),
@@ -323,6 +336,28 @@ export const hardnessTestSchema = z
   .object({ id: z.string().min(1).max(40), scale: z.enum(['HV5', 'HV10']), place: z.enum(['base-metal', 'heat-affected-zone', 'weld']), values: z.array(z.number().positive()).max(60) })
   .meta({ id: 'HardnessTest' })
 
+/** Visual examination of the finished test weld. */
+export const visualTestSchema = z
+  .object({
+    cracks: bool,
+    cratersFull: bool,
+    /** Root free of incomplete fusion and inadequate penetration. */
+    rootSound: bool,
+    profileAccepted: bool,
+    reinforcement: quantityOrNull,
+    undercut: quantityOrNull,
+    rootConcavity: quantityOrNull,
+    meltThrough: quantityOrNull,
+    /** Weld thickness where the root is concave. */
+    weldThickness: quantityOrNull,
+  })
+  .meta({ id: 'VisualTest' })
+
+/** Nondestructive testing of the finished test weld. */
+export const ndtTestSchema = z
+  .object({ id: z.string().min(1).max(40), method: z.enum(['RT', 'UT', 'MT', 'PT']), wholeLength: bool, accepted: bool, report: textOrNull(80) })
+  .meta({ id: 'NdtTest' })
+
 /** What a coupon holds: the variables as welded, the run sheet and the test results. */
 export const couponContentSchema = z
   .object({
@@ -339,6 +374,8 @@ export const couponContentSchema = z
     macros: z.array(macroTestSchema).max(20).default([]),
     toughness: z.array(toughnessTestSchema).max(40).default([]),
     hardness: z.array(hardnessTestSchema).max(40).default([]),
+    visual: visualTestSchema.nullable().optional(),
+    ndt: z.array(ndtTestSchema).max(20).optional(),
     laboratory: textOrNull(160),
     reportNumber: textOrNull(80),
     testedOn: z.iso.date().nullable().default(null),

@@ -3,7 +3,7 @@
  * knows what a clause says. To add a rule is to add a file and its cases.
  */
 import type { Basis, Finding, CouponQualification, QualifiedSpan, Fix, VariableClass, Verdict, AssessedCoupon } from '../schemas/assessment.ts'
-import type { StandardId } from '../schemas/common.ts'
+import type { Route, StandardId } from '../schemas/common.ts'
 import type { Process, ProcessBlock, WeldingVariables } from '../schemas/welding.ts'
 import type { UnitSystem } from '../units/types.ts'
 
@@ -33,6 +33,8 @@ export interface RuleMeta {
    * `jointly`: a coupon that covers it alone is preferred, else agreeing coupons may cover together what none covers alone.
    */
   combine: 'union' | 'each' | 'jointly'
+  /** The route that the rule belongs to; absent = every route. */
+  route?: Route
   /** Judged by the procedure alone: `check` is called even when no coupon supports the process. */
   withoutCoupon?: boolean
 }
@@ -57,6 +59,8 @@ export interface RangeContext {
   block: ProcessBlock | null
   /** Every coupon that is linked, also those of other processes. */
   coupons: readonly AssessedCoupon[]
+  /** Absent = by test. */
+  route?: Route
 }
 
 export interface RuleContext extends RangeContext {
@@ -115,6 +119,8 @@ export interface Standard {
   shortName: string
   editions: readonly { id: string; label: string; note: string | null }[]
   processes: readonly Process[]
+  /** Routes by which a procedure may be supported; absent = by test alone. */
+  routes?: readonly Route[]
   outOfScope: readonly string[]
   rules: readonly Rule[]
   /** The clause by which a coupon must be certified before it may support a procedure. */

@@ -35,7 +35,7 @@ export function useAssessment(content: ProcedureContent, offer: boolean): Judged
   const assessments = useMemo(() => {
     const coupons = linked.coupons.map(asAssessed)
     const otherCoupons = others.map(asAssessed)
-    return judged.variables.standards.map(({ standard, edition, level }) => assess({ procedure: judged, coupons, standard, edition, level, otherCoupons }))
+    return judged.variables.standards.map(({ standard, edition, level, route }) => assess({ procedure: judged, coupons, standard, edition, level, route, otherCoupons }))
   }, [judged, linked.coupons, others])
   const numbers = useMemo(() => new Map([...linked.coupons, ...others].map(({ id, number }) => [id, number])), [linked.coupons, others])
   return { assessments, reading: linked.reading, couponNumber: (id) => numbers.get(id) }

@@ -22,7 +22,7 @@ function pathsOf(schema: z.ZodType): string[] {
   }
   return walk(root, '')
 }
-const identities = /^(?:processes|runSheet|tension|bends|macros|toughness|hardness)\.\*\.id$/
+const identities = /^(?:processes|runSheet|tension|bends|macros|toughness|hardness|ndt)\.\*\.id$/
 
 describe('every field of the schemas has a name', () => {
   test.each([['procedure', procedureContentSchema], ['coupon', couponContentSchema]] as const)('%s', (_name, schema) => {
