@@ -8,7 +8,8 @@ const LONGEST = 60_000
  */
 export function heicToJpeg(bytes: Buffer): Promise<Buffer> {
   return new Promise((resolve, reject) => {
-    const worker = new Worker(new URL('./heic-worker.mjs', import.meta.url), { workerData: { bytes: new Uint8Array(bytes) }, execArgv: [], resourceLimits: { maxOldGenerationSizeMb: 1024 } })
+    const worker = new Worker(new URL('./heic-worker.mjs', import.meta.url), { execArgv: [], resourceLimits: { maxOldGenerationSizeMb: 1024 } })
+    worker.postMessage(new Uint8Array(bytes).buffer)
     const timer = setTimeout(() => {
       void worker.terminate()
       reject(new Error('unpacking the picture took too long'))
