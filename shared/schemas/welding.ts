@@ -42,6 +42,10 @@ export const baseMetalSchema = z
     minTensile: quantityOrNull,
     minYield: quantityOrNull,
     minElongation: quantityOrNull,
+    /** Heat-treatment condition or temper in which it is welded, e.g. `T6`, `H116`, `Q&T`. */
+    condition: textOrNull(40).optional(),
+    /** Whether its own standard specifies impact values. */
+    impactSpecified: z.boolean().nullable().optional(),
     heatNumber: textOrNull(60),
     certificate: textOrNull(120),
   })
@@ -62,6 +66,11 @@ export const jointSchema = z
     rootFace: intervalOrNull,
     rootRadius: intervalOrNull,
     filletLeg: intervalOrNull,
+    /** Design throat of a fillet; of an equal-leg fillet it follows from the leg. */
+    filletThroat: intervalSchema.nullable().optional(),
+    /** A branch connection: member A is the branch, member B the run pipe. */
+    branch: z.enum(['set-on', 'set-in', 'set-through']).nullable().optional(),
+    branchAngle: intervalSchema.nullable().optional(),
     backing: oneOf(BACKINGS),
     backingMaterial: textOrNull(120),
     retainers: bool,
@@ -132,6 +141,8 @@ export const electricalSchema = z
     travelSpeed: intervalOrNull,
     heatInput: intervalOrNull,
     heatInputMethod: oneOf(HEAT_INPUT_METHODS),
+    /** What the stated figure is: arc energy U·I/v, or heat input with the process factor k. */
+    heatInputQuantity: z.enum(['arc-energy', 'heat-input']).nullable().optional(),
     tungstenClassification: textOrNull(40),
     tungstenDiameter: quantityOrNull,
     pulseFrequency: intervalOrNull,
@@ -225,6 +236,10 @@ export const weldingVariablesSchema = z
     standards: z.array(standardChoiceSchema).min(1).max(5),
     unitSystem: unitSystemSchema.default('SI'),
     toughnessRequired: bool,
+    /** Impact test temperature and mean energy that the application asks for. */
+    impactTemperature: quantitySchema.nullable().optional(),
+    impactEnergy: quantitySchema.nullable().optional(),
+    hardnessRequired: z.boolean().nullable().optional(),
     product: z.enum(['plate', 'pipe', 'plate-and-pipe']).default('plate'),
     joint: jointSchema.prefault({}),
     baseMetals: z.object({ a: baseMetalSchema.prefault({}), b: baseMetalSchema.prefault({}) }).prefault({}),
@@ -234,8 +249,14 @@ export const weldingVariablesSchema = z
     thicknessB: intervalOrNull,
     /** Outside diameter of pipe; `all` covers plate and pipe. */
     diameter: intervalOrNull,
+    /** Outside diameter of member B where it differs: the run pipe of a branch. */
+    diameterB: intervalSchema.nullable().optional(),
+    /** Whether the pipe turns under the arc. */
+    pipeRotated: z.boolean().nullable().optional(),
     preheat: z.object({ minimum: quantityOrNull, interpassMaximum: quantityOrNull, maintenance: textOrNull(200), method: textOrNull(120) }).prefault({}),
-    pwht: z.object({ condition: oneOf(PWHT_CONDITIONS), temperature: intervalOrNull, time: intervalOrNull, heatingRate: textOrNull(80), notes: textOrNull(400) }).prefault({}),
+    /** Heating after welding, before the joint cools, that lets hydrogen out. */
+    postHeating: z.object({ used: bool, temperature: intervalOrNull, time: intervalOrNull }).nullable().optional(),
+    pwht: z.object({ condition: oneOf(PWHT_CONDITIONS), ageing: z.enum(['natural', 'artificial']).nullable().optional(), temperature: intervalOrNull, time: intervalOrNull, heatingRate: textOrNull(80), notes: textOrNull(400) }).prefault({}),
     processes: z.array(processBlockSchema).min(1).max(8),
   })
   .meta({ id: 'WeldingVariables' })
@@ -353,11 +374,6 @@ export const visualTestSchema = z
   })
   .meta({ id: 'VisualTest' })
 
-/** Nondestructive testing of the finished test weld. */
-export const ndtTestSchema = z
-  .object({ id: z.string().min(1).max(40), method: z.enum(['RT', 'UT', 'MT', 'PT']), wholeLength: bool, accepted: bool, report: textOrNull(80) })
-  .meta({ id: 'NdtTest' })
-
 /** What a coupon holds: the variables as welded, the run sheet and the test results. */
 export const couponContentSchema = z
   .object({
@@ -375,7 +391,6 @@ export const couponContentSchema = z
     toughness: z.array(toughnessTestSchema).max(40).default([]),
     hardness: z.array(hardnessTestSchema).max(40).default([]),
     visual: visualTestSchema.nullable().optional(),
-    ndt: z.array(ndtTestSchema).max(20).optional(),
     laboratory: textOrNull(160),
     reportNumber: textOrNull(80),
     testedOn: z.iso.date().nullable().default(null),
