@@ -23,13 +23,13 @@ export default async function setUp(project: TestProject): Promise<() => Promise
     const database = await createTestDatabase('sidebend_e2e')
     undo.push(database.drop)
     await migrate(database.url)
-    // The loader reads the same variables as the server: files and signing certificate must end up in one place.
-    const environment = { ...process.env, ...ensureSecrets(folder).secrets, DATA_DIR: folder, DATABASE_URL: database.url, HOST: '127.0.0.1', SMTP_URL: undefined, DEMO: '1', LOG_LEVEL: 'warn', NODE_ENV: 'production' }
-    await withEnvironment(environment, () => loadDemo(database.url))
-    await ensureBuild()
     const port = await freePort()
     const baseUrl = `http://127.0.0.1:${port}`
-    const server = await startServer({ ...environment, PORT: String(port), BASE_URL: baseUrl }, { log: 'e2e-server' })
+    // The loader reads the same variables as the server: files and signing certificate must end up in one place. Vitest has a BASE_URL of its own.
+    const environment = { ...process.env, ...ensureSecrets(folder).secrets, DATA_DIR: folder, DATABASE_URL: database.url, HOST: '127.0.0.1', PORT: String(port), BASE_URL: baseUrl, SMTP_URL: undefined, DEMO: '1', LOG_LEVEL: 'warn', NODE_ENV: 'production' }
+    await withEnvironment(environment, () => loadDemo(database.url))
+    await ensureBuild()
+    const server = await startServer(environment, { log: 'e2e-server' })
     undo.push(server.stop)
     project.provide('databaseUrl', database.url)
     project.provide('baseUrl', baseUrl)
