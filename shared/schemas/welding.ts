@@ -374,6 +374,12 @@ export const visualTestSchema = z
   })
   .meta({ id: 'VisualTest' })
 
+/** A non-destructive examination of the test piece. */
+export const ndtTestSchema = z
+  .object({ id: z.string().min(1).max(40), method: z.enum(['VT', 'RT', 'UT', 'PT', 'MT']), wholeLength: z.boolean().nullable().optional(), accepted: bool, reportNumber: textOrNull(80), note: textOrNull(400) })
+  .meta({ id: 'NdtTest' })
+export type NdtTest = z.infer<typeof ndtTestSchema>
+
 /** What a coupon holds: the variables as welded, the run sheet and the test results. */
 export const couponContentSchema = z
   .object({
@@ -390,6 +396,7 @@ export const couponContentSchema = z
     macros: z.array(macroTestSchema).max(20).default([]),
     toughness: z.array(toughnessTestSchema).max(40).default([]),
     hardness: z.array(hardnessTestSchema).max(40).default([]),
+    ndt: z.array(ndtTestSchema).max(40).optional(),
     visual: visualTestSchema.nullable().optional(),
     laboratory: textOrNull(160),
     reportNumber: textOrNull(80),

@@ -7,7 +7,7 @@ import { interval, quantity } from '../../../../shared/units/convert.ts'
 const blocks = (...processes: Record<string, unknown>[]) => processes
 const procedure = (variables: Record<string, unknown> = {}, rest: Record<string, unknown> = {}): ProcedureContent =>
   procedureContentSchema.parse({ title: 'Groove weld', ...rest, variables: { standards: [{ standard: 'asme-ix', edition: '2023' }], thickness: interval(5, 20, 'length'), processes: blocks({ id: 'a', process: 'GTAW', passes: [{ number: '1', layer: 'root' }] }, { id: 'b', process: 'SMAW', filler: { fNumber: '4' } }), ...variables } })
-const coupon = (rest: Record<string, unknown> = {}): CouponContent => couponContentSchema.parse({ title: 'Coupon', variables: procedure().variables, runSheet: [{ id: 'r', processId: 'a', pass: '1' }], tension: [{ id: 't', specimen: 'T1' }], bends: [{ id: 'b', specimen: 'B1', kind: 'side' }], macros: [{ id: 'm', specimen: 'M1' }], toughness: [{ id: 'c', place: 'weld' }], hardness: [{ id: 'h', scale: 'HV10', place: 'weld', values: [200] }], ...rest })
+const coupon = (rest: Record<string, unknown> = {}): CouponContent => couponContentSchema.parse({ title: 'Coupon', variables: procedure().variables, runSheet: [{ id: 'r', processId: 'a', pass: '1' }], tension: [{ id: 't', specimen: 'T1' }], bends: [{ id: 'b', specimen: 'B1', kind: 'side' }], macros: [{ id: 'm', specimen: 'M1' }], toughness: [{ id: 'c', place: 'weld' }], hardness: [{ id: 'h', scale: 'HV10', place: 'weld', values: [200] }], ndt: [{ id: 'n', method: 'RT' }], ...rest })
 
 describe('two procedures', () => {
   it('alike have no change', () => {
