@@ -1,7 +1,7 @@
-import { useState, type ClipboardEvent, type KeyboardEvent } from 'react'
+import { useId, useState, type ClipboardEvent, type KeyboardEvent } from 'react'
 
 export interface GridCellProps {
-  /** Row and column, e.g. `2.5`; unique on the page. */
+  /** Row and column, e.g. `2.5`; unique in its grid. */
   at: string
   label: string
   text: string
@@ -15,6 +15,7 @@ export interface GridCellProps {
 
 /** A cell of a grid that is typed in: read when it is left; what can't be read stays, with the reason under it. */
 export function GridCell({ at, label, text, write, onKey, onPaste, className = '', inputMode }: GridCellProps) {
+  const id = useId()
   const [typed, setTyped] = useState(text)
   const [seen, setSeen] = useState(text)
   const [wrong, setWrong] = useState<string | null>(null)
@@ -29,18 +30,19 @@ export function GridCell({ at, label, text, write, onKey, onPaste, className = '
         data-cell={at}
         aria-label={label}
         aria-invalid={wrong ? true : undefined}
-        aria-describedby={wrong ? `cell-${at}` : undefined}
+        aria-describedby={wrong ? `${id}-wrong` : undefined}
         autoComplete="off"
         inputMode={inputMode}
         className={`box ${className}`}
         value={typed}
+        onFocus={(event) => event.target.select()}
         onChange={(event) => setTyped(event.target.value)}
         onBlur={() => setWrong(typed === text ? null : write(typed))}
         onKeyDown={onKey}
         onPaste={onPaste}
       />
       {wrong && (
-        <p id={`cell-${at}`} className="mt-1 text-sm font-medium text-oxide">
+        <p id={`${id}-wrong`} className="mt-1 text-sm font-medium text-oxide">
           {wrong}
         </p>
       )}

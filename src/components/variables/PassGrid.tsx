@@ -6,7 +6,7 @@ import { Button } from '@/components/Button.tsx'
 import { GridCell } from './GridCell.tsx'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { LAYERS } from './options.ts'
-import { addPass, cellText, MAX_PASSES, moveFrom, PASS_COLUMNS, pasteCells, writeCell, type GridColumn } from './pass-grid.ts'
+import { addPass, caretOf, cellText, MAX_PASSES, moveFrom, PASS_COLUMNS, pasteCells, writeCell, type GridColumn } from './pass-grid.ts'
 
 /** The build-up, a row a pass: arrows move, Enter goes down and adds a pass at the end, cells paste from a spreadsheet. */
 export function PassGrid({ path, label }: { path: string; label: string }) {
@@ -35,7 +35,7 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
   }
   const onKey = (event: KeyboardEvent<HTMLElement>, row: number, column: number) => {
     const box = event.target
-    const caret = box instanceof HTMLInputElement ? { atStart: box.selectionEnd === 0, atEnd: box.selectionStart === box.value.length } : { atStart: true, atEnd: true }
+    const caret = box instanceof HTMLInputElement ? caretOf(box) : { atStart: true, atEnd: true }
     if (box instanceof HTMLSelectElement && event.key.startsWith('Arrow') && !event.altKey && (event.key === 'ArrowUp' || event.key === 'ArrowDown')) return
     const target = moveFrom(event.key, row, column, passes.length, caret)
     if (!target) return

@@ -113,6 +113,12 @@ export function pasteCells(passes: readonly Pass[], row: number, column: number,
   return { passes: grid, problems }
 }
 
+/** Where the caret stands in a cell. A cell that is selected whole, as it is when moved into, lets go at either side. */
+export function caretOf({ selectionStart, selectionEnd, value }: Pick<HTMLInputElement, 'selectionStart' | 'selectionEnd' | 'value'>): { atStart: boolean; atEnd: boolean } {
+  const whole = selectionStart === 0 && selectionEnd === value.length
+  return { atStart: whole || selectionEnd === 0, atEnd: whole || selectionStart === value.length }
+}
+
 /** The cell that a key leads to; null when the key stays in its text. */
 export function moveFrom(key: string, row: number, column: number, rows: number, caret: { atStart: boolean; atEnd: boolean }, columns = PASS_COLUMNS.length): { row: number; column: number; add?: true } | null {
   if (key === 'ArrowUp') return row > 0 ? { row: row - 1, column } : null

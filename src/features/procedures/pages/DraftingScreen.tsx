@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react'
+import { useDeferredValue, useMemo, useState } from 'react'
 import { useNavigate } from 'react-router-dom'
 import type { Revision } from '@shared/schemas/records.ts'
 import { procedureContentSchema, processBlockSchema, type ProcedureContent, type ProcessBlock } from '@shared/schemas/welding.ts'
@@ -19,7 +19,7 @@ import { useFixes } from '../draft/use-fixes.ts'
 import { placedRows } from '@/components/variables/catalogue.ts'
 import { inputId, SheetContext } from '@/components/variables/context.ts'
 import { blocking, placeFindings, sectionVerdicts } from '@/components/variables/findings.ts'
-import { labelOf, rowFor, valueInWords } from '@/components/variables/labels.ts'
+import { labelOf, missingInWords, rowFor, valueInWords } from '@/components/variables/labels.ts'
 import { MarginHead } from '../sheet/MarginHead.tsx'
 import { ProcedureNav, ProcedureSheets } from '../sheet/ProcedureSheets.tsx'
 import { useAssessment } from '../sheet/use-assessment.ts'
@@ -28,6 +28,8 @@ import { Returned } from '../components/Returned.tsx'
 const conflict: ConflictKind<ProcedureContent> = { schema: procedureContentSchema, lists: ['variables.processes'], label: labelOf, words: valueInWords }
 
 type Open = 'submit' | 'discard' | 'conflict' | { plan: string } | null
+
+const orderOf = ({ variables }: ProcedureContent) => variables.processes.map(({ id }) => id).join(' ')
 
 const newBlock = (blocks: readonly ProcessBlock[]): ProcessBlock => {
   const taken = new Set(blocks.map(({ id }) => id))
@@ -63,13 +65,17 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
     if (saving.phase === 'conflict') setOpen('conflict')
   }
 
-  const { assessments, reading, couponNumber } = useAssessment(content, offer)
+  // Typing comes first: what follows from it (verdicts, drawing, title block) is drawn when there is time.
+  // A process that was added, removed or moved is followed at once, as its fields are named by their place.
+  const deferred = useDeferredValue(content)
+  const rested = orderOf(deferred) === orderOf(content) ? deferred : content
+  const { assessments, reading, couponNumber } = useAssessment(rested, offer)
   const shown = Math.min(tab, assessments.length - 1)
-  const stands = assessments.flatMap(({ findings }) => blocking(findings))
+  const stands = assessments.flatMap(({ findings }) => blocking(findings)).map((finding) => ({ ...finding, missing: missingInWords(finding.missing, rested) }))
   // Further coupons are read only once something here could be cured by one.
   if (!offer && stands.length > 0) setOffer(true)
 
-  const { processes } = content.variables
+  const { processes } = rested.variables
   const rows = useMemo(() => placedRows(processes), [processes])
   const findings = useMemo(() => placeFindings(assessments[shown]?.findings ?? [], rows), [assessments, shown, rows])
   const verdicts = useMemo(() => sectionVerdicts(findings, rows), [findings, rows])
@@ -80,16 +86,16 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
 
   const changeBlocks = (next: ProcessBlock[]) => replace({ ...content, variables: { ...content.variables, processes: next } })
   const move = (index: number, by: 1 | -1) => {
-    const next = [...processes]
+    const next = [...content.variables.processes]
     const [block] = next.splice(index, 1)
     if (!block) return
     next.splice(index + by, 0, block)
     changeBlocks(next)
   }
   const remove = (index: number) => {
-    const block = processes[index]
-    if (!block || processes.length < 2) return
-    changeBlocks(processes.filter((_, at) => at !== index))
+    const block = content.variables.processes[index]
+    if (!block || content.variables.processes.length < 2) return
+    changeBlocks(content.variables.processes.filter((_, at) => at !== index))
     say(`${block.process ?? 'Process'} removed`, {
       undo: () => {
         const now = form.getValues() as typeof content
@@ -120,14 +126,14 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
     void navigate(`/coupons/${coupon.id}`)
   }
 
-  const sheet = useMemo(() => ({ content, system, control: form.control, findings, attention, onFix, couponNumber }), [content, system, form.control, findings, attention, onFix, couponNumber])
-  const numbers = content.supportingCoupons.map((id) => ({ id, number: couponNumber(id) ?? revision.coupons.find((one) => one.id === id)?.number ?? '…' }))
+  const sheet = useMemo(() => ({ content: rested, system, control: form.control, findings, attention, onFix, couponNumber }), [rested, system, form.control, findings, attention, onFix, couponNumber])
+  const numbers = rested.supportingCoupons.map((id) => ({ id, number: couponNumber(id) ?? revision.coupons.find((one) => one.id === id)?.number ?? '…' }))
   const returned = [...revision.signatures].reverse().find(({ meaning }) => meaning === 'returned')
   const note = stands.length === 0 ? 'nothing stands in the way' : `${stands.length} ${stands.length === 1 ? 'finding wants' : 'findings want'} a reason`
   return (
     <SheetContext value={sheet}>
       <Breadcrumb trail={[{ label: 'Procedures', to: '/procedures' }, { label: nameOf(revision) }]} />
-      <ProcedureTitle revision={revision} content={content} couponNumbers={numbers} note={note} />
+      <ProcedureTitle revision={revision} content={rested} couponNumbers={numbers} note={note} />
       {returned && <Returned comment={returned.reason ?? ''} by={returned.person.name} />}
       <div className="mt-4">
         <MarginLayout
@@ -158,7 +164,7 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
             </>
           }
         >
-          <ProcedureSheets onMove={move} onRemove={remove} onAdd={() => changeBlocks([...processes, newBlock(processes)])} />
+          <ProcedureSheets onMove={move} onRemove={remove} onAdd={() => changeBlocks([...content.variables.processes, newBlock(content.variables.processes)])} />
         </MarginLayout>
       </div>
       {open === 'submit' && <SubmitDialog isOpen onClose={() => setOpen(null)} revision={revision} blocking={stands} onSubmit={submit} />}

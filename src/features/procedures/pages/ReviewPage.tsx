@@ -23,6 +23,7 @@ import { assessmentQuery, comparisonQuery, revisionQuery, useRevisionActs } from
 import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
 import { nameOf } from '../dialogs/acts.tsx'
 import { blocking, gaugeOf, needing } from '@/components/variables/findings.ts'
+import { missingInWords } from '@/components/variables/labels.ts'
 import { standardName } from '@/components/variables/options.ts'
 
 /** A revision under review: what changed, what the standard says, what carries it, and the act of signing. */
@@ -36,7 +37,7 @@ export function ReviewPage() {
   if (revision.data.state !== 'in-review') return <Navigate replace to={`/revisions/${id}`} />
   const { content, coupons } = revision.data
   const assessments = assessed.data?.assessments ?? []
-  const open = needing(assessments)
+  const open = needing(assessments).map((finding) => ({ ...finding, missing: missingInWords(finding.missing, content) }))
   const stands = blocking(open)
   const lesser = open.filter((finding) => !stands.includes(finding))
   const couponNumber = (couponId: string) => coupons.find((one) => one.id === couponId)?.number
