@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query'
 import { ChevronDown } from 'lucide-react'
-import { useState } from 'react'
-import { Button as AriaButton, ComboBox as AriaComboBox, FieldError as AriaFieldError, Input, Label, ListBox, ListBoxItem, Popover, Text } from 'react-aria-components'
+import { useContext, useState } from 'react'
+import { Button as AriaButton, ComboBox as AriaComboBox, ComboBoxStateContext, FieldError as AriaFieldError, Input, Label, ListBox, ListBoxItem, Popover, Text } from 'react-aria-components'
 import { useDebounced } from '@/hooks/debounced.ts'
 import type { FieldProps } from './Field.tsx'
 
@@ -32,11 +32,14 @@ export interface ComboBoxProps<T> extends FieldProps {
 export function ComboBox<T>({ label, labelHidden = false, description, error, optional, className = '', text, onPick, load, queryKey, allowOwn = false, disabled, placeholder, id }: ComboBoxProps<T>) {
   const [typed, setTyped] = useState(text)
   const [given, setGiven] = useState(text)
+  // The list closes by itself only when the picked key changes, so it is kept until the text does.
+  const [picked, setPicked] = useState<string | null>(null)
+  const [open, setOpen] = useState(false)
   if (given !== text) {
     setGiven(text)
     setTyped(text)
+    if (!open) setPicked(null)
   }
-  const [open, setOpen] = useState(false)
   const asked = useDebounced(typed.trim(), 150)
   const found = useQuery({ queryKey: ['combo', queryKey, asked], queryFn: ({ signal }) => load(asked, signal), enabled: open, staleTime: 60_000, placeholderData: (before) => before })
   const items = found.data ?? []
@@ -50,11 +53,15 @@ export function ComboBox<T>({ label, labelHidden = false, description, error, op
     <AriaComboBox
       className={`min-w-0 ${className}`}
       inputValue={typed}
-      onInputChange={setTyped}
+      onInputChange={(next) => {
+        setTyped(next)
+        setPicked(null)
+      }}
       onOpenChange={setOpen}
-      value={null}
+      value={picked}
       onChange={(key) => {
         const item = items.find((one) => one.id === key)
+        setPicked(item?.id ?? null)
         if (!item) return
         setTyped(item.title)
         onPick(item, item.title)
@@ -64,7 +71,7 @@ export function ComboBox<T>({ label, labelHidden = false, description, error, op
       isInvalid={Boolean(error)}
       allowsCustomValue
       allowsEmptyCollection
-      menuTrigger="input"
+      menuTrigger="manual"
       onBlur={leave}
     >
       <Label className={labelHidden ? 'sr-only' : 'mb-1 block font-medium'}>
@@ -72,7 +79,7 @@ export function ComboBox<T>({ label, labelHidden = false, description, error, op
         {optional && <span className="font-normal text-soft"> (optional)</span>}
       </Label>
       <div className="relative">
-        <Input id={id} className="box pr-9" placeholder={placeholder} />
+        <Typed id={id} placeholder={placeholder} />
         <AriaButton aria-label={`Show the list for ${label}`} className="absolute inset-y-0 right-0 flex w-8 items-center justify-center text-soft">
           <ChevronDown size={16} aria-hidden="true" />
         </AriaButton>
@@ -100,4 +107,10 @@ export function ComboBox<T>({ label, labelHidden = false, description, error, op
       </Popover>
     </AriaComboBox>
   )
+}
+
+/** Typing opens the list; a text that was put in by picking does not open it anew. */
+function Typed({ id, placeholder }: { id?: string; placeholder?: string }) {
+  const state = useContext(ComboBoxStateContext)
+  return <Input id={id} className="box pr-9" placeholder={placeholder} onInput={() => state?.open(null, 'input')} />
 }
