@@ -39,7 +39,7 @@ const SOURCES: readonly Source[] = [
   },
   {
     kind: 'job', roles: ['engineer', 'supervisor'],
-    sql: `select j.number as title, count(*) || ' joints without a procedure in force' as detail, '/jobs/' || j.id as href, j.updated_at as at
+    sql: `select j.number as title, count(*) || case when count(*) = 1 then ' joint' else ' joints' end || ' without a procedure in force' as detail, '/jobs/' || j.id as href, j.updated_at as at
       from jobs j join job_joints t on t.organization_id = j.organization_id and t.job_id = j.id
       left join procedure_revisions r on r.organization_id = t.organization_id and r.id = t.revision_id
       where j.organization_id = $organizationId and r.state is distinct from 'approved' group by j.id`,

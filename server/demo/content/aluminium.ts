@@ -1,6 +1,6 @@
 /** Aluminium at the demo firm: pulsed wire welding with ER5356 and ER4043 on one machine, whose panel is set by hand. */
 import { couponContentSchema, procedureContentSchema, type CouponContent, type ProcedureContent, type WeldingVariables } from '@shared/schemas/welding.ts'
-import { interval, quantity } from '@shared/units/convert.ts'
+import { interval, quantity, settle } from '@shared/units/convert.ts'
 import { amps, celsius, feed, filler, gas, metal, mm, noGas, size, travel, variables, vGroove, volts } from './parts.ts'
 import { bends, FACE_AND_ROOT, runs, tensions } from './tests.ts'
 
@@ -14,7 +14,7 @@ const panel = ({ wireFeed, voltage, background, frequency, onTime }: PanelSettin
   caution: 'This mode has no crater fill: circle back over the last 10 mm and break the arc on the weld, never on the plate.',
   settings: [
     { control: 'Wire feed', hint: 'left knob', value: String(wireFeed), unit: 'in/min', scaleMin: 50, scaleMax: 700, min: wireFeed - 15, max: wireFeed + 15 },
-    { control: 'Voltage', hint: 'right knob', value: voltage.toFixed(1), unit: 'V', scaleMin: 10, scaleMax: 40, min: voltage - 0.6, max: voltage + 0.6 },
+    { control: 'Voltage', hint: 'right knob', value: voltage.toFixed(1), unit: 'V', scaleMin: 10, scaleMax: 40, min: settle(voltage - 0.6), max: settle(voltage + 0.6) },
     { control: 'Background', hint: 'menu, line 1', value: background.toFixed(1), unit: 'V', scaleMin: 10, scaleMax: 30, min: null, max: null },
     { control: 'Frequency', hint: 'menu, line 2', value: String(frequency), unit: 'Hz', scaleMin: 20, scaleMax: 300, min: null, max: null },
     { control: 'Pulse on-time', hint: 'menu, line 3', value: onTime.toFixed(1), unit: 'ms', scaleMin: 0.5, scaleMax: 5, min: null, max: null },
