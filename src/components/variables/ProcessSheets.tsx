@@ -2,7 +2,7 @@ import { ArrowDown, ArrowUp, Plus, X } from 'lucide-react'
 import type { ProcessBlock } from '@shared/schemas/welding.ts'
 import { Button } from '@/components/Button.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
-import { BLOCK_SECTIONS, blockSectionId, type SectionSpec } from './catalogue.ts'
+import { BLOCK_SECTIONS, blockSectionId, type RowSpec, type SectionSpec } from './catalogue.ts'
 import { useSheet } from './context.ts'
 import { gasInWords } from './labels.ts'
 import { MECHANISATIONS, TRANSFER_MODES, wordOf } from './options.ts'
@@ -34,10 +34,14 @@ export interface ProcessSheetsProps {
   onMove?: (index: number, by: 1 | -1) => void
   onRemove?: (index: number) => void
   onAdd?: () => void
+  /** Rows that have no place on this kind of record, by their path from the block. */
+  omit?: readonly string[]
+  /** Rows that only this kind of record has, by section. */
+  extra?: Readonly<Record<string, readonly RowSpec[]>>
 }
 
 /** One process after the other, each with its own sheets; where there are several, each opens with its number and name. */
-export function ProcessSheets({ blocks, onMove, onRemove, onAdd }: ProcessSheetsProps) {
+export function ProcessSheets({ blocks, onMove, onRemove, onAdd, omit = [], extra = {} }: ProcessSheetsProps) {
   const several = blocks.length > 1
   return (
     <>
@@ -64,7 +68,7 @@ export function ProcessSheets({ blocks, onMove, onRemove, onAdd }: ProcessSheets
             </header>
           )}
           {BLOCK_SECTIONS.map((section) => (
-            <BlockSheet key={section.id} section={section} block={block} index={index} lead={several ? `${block.process ?? 'Process'} · ` : ''} />
+            <BlockSheet key={section.id} section={{ ...section, rows: [...section.rows.filter(({ path }) => !omit.includes(path)), ...(extra[section.id] ?? [])] }} block={block} index={index} lead={several ? `${block.process ?? 'Process'} · ` : ''} />
           ))}
         </div>
       ))}

@@ -1,0 +1,124 @@
+import type { ReactNode } from 'react'
+import type { RowSpec } from '@/components/variables/catalogue.ts'
+import { BASE_METALS, PREHEAT, PWHT, TOUGHNESS, WRITTEN_IN } from '@/components/variables/catalogue.ts'
+import { inputId, useSheet, useSheetField } from '@/components/variables/context.ts'
+import { JointSheet } from '@/components/variables/JointSheet.tsx'
+import { metalInWords } from '@/components/variables/labels.ts'
+import { standardName } from '@/components/variables/options.ts'
+import { ProcessSheets } from '@/components/variables/ProcessSheets.tsx'
+import { isShown, SheetField } from '@/components/variables/SheetField.tsx'
+import { TextArea, TextField } from '@/components/fields/text.tsx'
+import { Sheet, SheetRow } from '@/components/Sheet.tsx'
+import { day } from '@/lib/figures.ts'
+import { useCouponContent } from './coupon-sheet.ts'
+
+type Name = 'title' | 'weldedOn' | 'welder' | 'welderStamp' | 'witness' | 'machine' | 'laboratory' | 'reportNumber' | 'testedOn' | 'notes'
+interface Row {
+  name: Name
+  label: string
+  hint?: string
+  kind?: 'date' | 'paragraph'
+  max?: number
+  example?: string
+}
+
+const RECORD: readonly Row[] = [
+  { name: 'title', label: 'Title', max: 160 },
+  { name: 'weldedOn', label: 'Welded on', kind: 'date' },
+  { name: 'welder', label: 'Welder', max: 120 },
+  { name: 'welderStamp', label: 'Stamp', max: 20, example: 'L11' },
+  { name: 'witness', label: 'Witness', max: 120 },
+  { name: 'machine', label: 'Machine', max: 120, example: 'M-03' },
+]
+const LABORATORY: readonly Row[] = [
+  { name: 'laboratory', label: 'Laboratory', max: 160 },
+  { name: 'reportNumber', label: 'Report number', max: 80 },
+  { name: 'testedOn', label: 'Tested on', kind: 'date' },
+]
+
+const metalRows = (side: 'a' | 'b'): RowSpec[] => {
+  const name = side.toUpperCase()
+  return [
+    { kind: 'text', path: `baseMetals.${side}.heatNumber`, label: `Heat number, ${name}`, max: 60 },
+    { kind: 'text', path: `baseMetals.${side}.certificate`, label: `Certificate, ${name}`, max: 120 },
+    { kind: 'quantity', path: `baseMetals.${side}.minTensile`, label: `Tensile, minimum, ${name}`, dimension: 'stress' },
+    { kind: 'quantity', path: `baseMetals.${side}.minElongation`, label: `Elongation, minimum, ${name}`, dimension: 'percent' },
+  ]
+}
+const METALS: readonly RowSpec[] = [...BASE_METALS.rows.slice(0, 2), ...metalRows('a'), ...metalRows('b'), ...BASE_METALS.rows.slice(2)]
+/** What stands in the run sheet, or is asked of a procedure alone. */
+const OMIT = ['passes', 'electrical.panel', 'electrical.current', 'electrical.voltage', 'electrical.wireFeed', 'electrical.travelSpeed']
+const EXTRA: Readonly<Record<string, readonly RowSpec[]>> = { filler: [{ kind: 'text', path: 'filler.lot', label: 'Lot', max: 60, example: 'batch on the reel or the packet' }] }
+
+/** The coupon as it was welded: the record, the metals, the joint, each process, heat. */
+export function WeldedSheets() {
+  const sheet = useSheet()
+  const content = useCouponContent()
+  const { standards, baseMetals, processes } = content.variables
+  const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
+  return (
+    <>
+      <Sheet id="record" title="As welded" aside={standards.map(({ standard, edition }) => `${standardName(standard)} ${edition}`).join(', ')}>
+        <Rows rows={RECORD} />
+        <SheetField spec={TOUGHNESS} />
+        <SheetField spec={WRITTEN_IN} />
+      </Sheet>
+      <Sheet id="base-metals" title="Base metals" aside={[...new Set(metals)].join(' to ') || undefined}>
+        {METALS.map((spec) => (
+          <SheetField key={spec.path} spec={spec} />
+        ))}
+      </Sheet>
+      <JointSheet />
+      <ProcessSheets blocks={processes} omit={OMIT} extra={EXTRA} />
+      {[PREHEAT, PWHT].filter(({ rows }) => rows.some((spec) => isShown(spec, '', null, sheet))).map((section) => (
+        <Sheet key={section.id} id={section.id} title={section.title}>
+          {section.rows.map((spec) => (
+            <SheetField key={spec.path} spec={spec} />
+          ))}
+        </Sheet>
+      ))}
+    </>
+  )
+}
+
+export function LaboratorySheet() {
+  return (
+    <Sheet id="laboratory" title="Laboratory">
+      <Rows rows={LABORATORY} />
+    </Sheet>
+  )
+}
+
+export function NotesSheet() {
+  const { control } = useSheet()
+  const { notes } = useCouponContent()
+  if (!control && !notes) return null
+  return (
+    <Sheet id="notes" title="Notes">
+      <Rows rows={[{ name: 'notes', label: 'Notes', hint: 'printed with the record', kind: 'paragraph', max: 4000 }]} />
+    </Sheet>
+  )
+}
+
+function Rows({ rows }: { rows: readonly Row[] }) {
+  const { control } = useSheet()
+  const content = useCouponContent()
+  return rows.map((row) => {
+    const value = content[row.name]
+    return (
+      <SheetRow key={row.name} label={row.label} htmlFor={control ? inputId(row.name) : undefined} unit={row.hint}>
+        {control ? <Typed row={row} /> : <Read>{value ? (row.kind === 'date' ? day(value) : value) : <span className="font-normal text-soft">not stated</span>}</Read>}
+      </SheetRow>
+    )
+  })
+}
+
+const Read = ({ children }: { children: ReactNode }) => <p className="max-w-prose font-medium whitespace-pre-line">{children}</p>
+
+function Typed({ row: { name, label, kind, max, example } }: { row: Row }) {
+  const { value, set, error, onBlur } = useSheetField<string | null>(name)
+  const shared = { id: inputId(name), label, labelHidden: true, maxLength: max, placeholder: example && `e.g. ${example}`, value: value ?? '', error, onBlur }
+  const keep = (text: string) => set(text === '' && name !== 'title' ? null : text)
+  if (kind === 'paragraph') return <TextArea {...shared} rows={4} onChange={(event) => keep(event.target.value)} />
+  return <TextField {...shared} type={kind === 'date' ? 'date' : 'text'} className={kind === 'date' ? 'max-w-52' : ''} onChange={(event) => keep(event.target.value)} />
+}

@@ -1,0 +1,19 @@
+import type { CouponContent } from '@shared/schemas/welding.ts'
+import { useSheet, useSheetField } from '@/components/variables/context.ts'
+
+/** The content of the sheet that this feature shows: always a whole coupon. */
+export const useCouponContent = (): CouponContent => useSheet().content as CouponContent
+
+type List = 'runSheet' | 'tension' | 'bends' | 'macros' | 'toughness' | 'hardness'
+
+/** A list of the coupon while it is typed in. Every change builds on the list as it stands that instant. */
+export function useList<K extends List>(name: K): { items: CouponContent[K]; error: string | null; put: (next: CouponContent[K]) => void; change: (index: number, part: Partial<CouponContent[K][number]>) => void; remove: (index: number) => void } {
+  const { value, set, error } = useSheetField<CouponContent[K]>(name)
+  return {
+    items: value,
+    error,
+    put: set,
+    change: (index, part) => set(value.map((one, at) => (at === index ? { ...one, ...part } : one)) as CouponContent[K]),
+    remove: (index) => set(value.filter((_one, at) => at !== index) as CouponContent[K]),
+  }
+}

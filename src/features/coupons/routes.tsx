@@ -1,0 +1,7 @@
+import type { RouteObject } from 'react-router-dom'
+
+export const routes: RouteObject[] = [
+  { path: 'coupons', lazy: async () => ({ Component: (await import('./pages/CouponsPage.tsx')).CouponsPage }) },
+  { path: 'coupons/new', lazy: async () => ({ Component: (await import('./pages/NewCouponPage.tsx')).NewCouponPage }) },
+  { path: 'coupons/:id', lazy: async () => ({ Component: (await import('./pages/CouponPage.tsx')).CouponPage }) },
+]
