@@ -23,7 +23,7 @@ function blockOf(block: ProcessBlock): ProcessBlock {
       pulseFrequency: null, pulseOnTime: null, backgroundCurrent: null, backgroundVoltage: null, peakCurrent: null, acFrequency: null,
       panel: null,
     },
-    technique: { ...technique, bead: technique.bead === 'both' ? null : technique.bead, electrodeSpacing: null, contactTubeDistance: null },
+    technique: { ...technique, bead: technique.bead === 'both' ? null : technique.bead, electrodeSpacing: null, contactTubeDistance: null, ...(technique.lateralSpacing && { lateralSpacing: null }) },
     passes: [],
   }
 }

@@ -1,7 +1,7 @@
 import type { CouponState } from '../schemas/records.ts'
 import type { CouponContent } from '../schemas/welding.ts'
 
-type Recorded = Pick<CouponContent, 'runSheet' | 'tension' | 'bends' | 'macros' | 'toughness' | 'hardness'>
+type Recorded = Pick<CouponContent, 'runSheet' | 'tension' | 'bends' | 'macros' | 'toughness' | 'hardness' | 'visual' | 'ndt'>
 export interface CouponMove {
   from: CouponState
   to: CouponState
@@ -32,7 +32,7 @@ export const mayMove = (from: CouponState, to: CouponState, by: CouponMove['by']
 
 /** Where an open coupon stands by what is recorded of it. */
 export function openStateOf(content: Recorded): 'planned' | 'welding' | 'testing' {
-  const results = content.tension.length + content.bends.length + content.macros.length + content.toughness.length + content.hardness.length
+  const results = content.tension.length + content.bends.length + content.macros.length + content.toughness.length + content.hardness.length + (content.visual ? 1 : 0) + (content.ndt?.length ?? 0)
   if (results > 0) return 'testing'
   return content.runSheet.length > 0 ? 'welding' : 'planned'
 }

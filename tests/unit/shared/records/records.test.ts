@@ -62,6 +62,9 @@ describe('where a coupon stands', () => {
     expect(openStateOf({ ...empty, runSheet: [row] })).toBe('welding')
     expect(openStateOf({ ...empty, runSheet: [row], bends: [bend] })).toBe('testing')
     expect(openStateOf({ ...empty, bends: [bend] })).toBe('testing')
+    const { ndt } = couponContentSchema.parse({ ...couponFromProcedure(procedure, 'WPS-001'), ndt: [{ id: 'n', method: 'RT' }] })
+    expect(openStateOf({ ...empty, ndt })).toBe('testing')
+    expect(openStateOf({ ...empty, ndt: [] })).toBe('planned')
   })
 
   it('is closed once certified or rejected', () => {
