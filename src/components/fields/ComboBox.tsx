@@ -41,8 +41,10 @@ export function ComboBox<T>({ label, labelHidden = false, description, error, op
     if (!open) setPicked(null)
   }
   const asked = useDebounced(typed.trim(), 150)
-  const found = useQuery({ queryKey: ['combo', queryKey, asked], queryFn: ({ signal }) => load(asked, signal), enabled: open, staleTime: 60_000, placeholderData: (before) => before })
-  const items = found.data ?? []
+  const found = useQuery({ queryKey: ['combo', queryKey, asked], queryFn: ({ signal }) => load(asked, signal), enabled: open, staleTime: 60_000 })
+  // Only what answers the text as it stands: a fast "304, down, Enter" must never pick from the list before.
+  const current = asked === typed.trim()
+  const items = (current ? found.data : undefined) ?? []
   const leave = () => {
     if (typed === text) return
     if (typed.trim() === '') onPick(null, '')
@@ -94,7 +96,7 @@ export function ComboBox<T>({ label, labelHidden = false, description, error, op
         <ListBox
           className="outline-none"
           renderEmptyState={() => (
-            <p className="px-3 py-2 text-soft">{found.isError ? 'The list could not be read. Try again in a moment.' : found.isFetching ? 'Looking…' : typed.trim() ? `Nothing is called “${typed.trim()}”.${allowOwn ? ' It is kept as you typed it.' : ''}` : 'Type to search.'}</p>
+            <p className="px-3 py-2 text-soft">{found.isError ? 'The list could not be read. Try again in a moment.' : found.isFetching || !current ? 'Looking…' : typed.trim() ? `Nothing is called “${typed.trim()}”.${allowOwn ? ' It is kept as you typed it.' : ''}` : 'Type to search.'}</p>
           )}
         >
           {(item: ComboItem<T>) => (
