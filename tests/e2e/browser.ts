@@ -2,7 +2,6 @@ import { createRequire } from 'node:module'
 import type { AxeResults } from 'axe-core'
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core'
 import { inject } from 'vitest'
-import type { Role } from '@shared/schemas/people.ts'
 import { findChromium } from '../../scripts/lib/system.mjs'
 import '../setup/provided.ts'
 
@@ -25,20 +24,11 @@ export async function openBrowser(): Promise<Browser> {
 }
 
 /**
- * A fresh, signed-out browser profile on the product under test.
+ * A fresh browser profile on the product under test, signed out unless it starts from another's state.
  * `bypassCSP` lets axe be injected; service workers are off unless a test is about them.
  */
-export const openContext = (browser: Browser, { width = widths[0], height = 900, serviceWorkers = 'block' }: { width?: number; height?: number; serviceWorkers?: 'allow' | 'block' } = {}): Promise<BrowserContext> =>
-  browser.newContext({ baseURL: inject('baseUrl'), viewport: { width, height }, bypassCSP: true, serviceWorkers, acceptDownloads: true, hasTouch: width < 500, reducedMotion: 'reduce' })
-
-/** Signs the page's profile in as the demo firm's person of that role and opens the first page. */
-export async function signIn(page: Page, role: Role): Promise<void> {
-  const person = inject('demoSignIns').find((one) => one.role === role)
-  if (!person) throw new Error(`The demo firm has no sign-in for the role ${role}.`)
-  const answer = await page.request.post('/api/session', { data: { email: person.email, password: person.password } })
-  if (!answer.ok()) throw new Error(`Signing in as ${person.email} answered ${answer.status()}: ${await answer.text()}`)
-  await page.goto('/')
-}
+export const openContext = (browser: Browser, { width = widths[0], height = 900, serviceWorkers = 'block' }: { width?: number; height?: number; serviceWorkers?: 'allow' | 'block' } = {}, storageState?: Awaited<ReturnType<BrowserContext['storageState']>>): Promise<BrowserContext> =>
+  browser.newContext({ ...(storageState ? { storageState } : {}), baseURL: inject('baseUrl'), viewport: { width, height }, bypassCSP: true, serviceWorkers, acceptDownloads: true, hasTouch: width < 500, reducedMotion: 'reduce' })
 
 const axeFile = createRequire(import.meta.url).resolve('axe-core/axe.min.js')
 
