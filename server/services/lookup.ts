@@ -23,7 +23,7 @@ const MISSES = 2
 async function askedOfJoint({ organizationId, transaction }: Tenant, jointId: string, system: 'SI' | 'US'): Promise<Asked> {
   const joint = await JobJoint.findOne({ where: { organizationId, id: jointId }, transaction })
   if (!joint) throw notFound('joint')
-  const job = await Job.findOne({ where: { organizationId, id: joint.jobId }, attributes: ['number'], transaction })
+  const job = await Job.findOne({ where: { organizationId, id: joint.jobId }, attributes: ['number', 'toughnessRequired'], transaction })
   const { number, metalA, metalB, thickness, diameter, process, position, weld } = joint
   const told: [string, string | null][] = [
     ['Joint', `${job?.number ?? ''} ${number}`.trim()],
@@ -34,8 +34,9 @@ async function askedOfJoint({ organizationId, transaction }: Tenant, jointId: st
     ['Process', process],
     ['Position', position],
     ['Weld', weld],
+    ['Toughness', job?.toughnessRequired ? 'required by the job' : null],
   ]
-  return { question: jobJointQuestion(joint), read: told.flatMap(([label, value]) => (value ? [{ label, value }] : [])), notRead: [] }
+  return { question: jobJointQuestion(joint, job?.toughnessRequired ?? null), read: told.flatMap(([label, value]) => (value ? [{ label, value }] : [])), notRead: [] }
 }
 
 /** What the question demands of the indexed columns, each condition with the values that it binds; all of it necessary, none of it sufficient. */

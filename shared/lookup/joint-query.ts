@@ -47,9 +47,9 @@ export function readJointQuery(query: LookupQuery, system: UnitSystem = query.un
   return reading
 }
 
-/** The question that a joint of a job asks. */
-export function jobJointQuestion(joint: Pick<JobJoint, 'metalA' | 'metalB' | 'process' | 'weld' | 'product' | 'thickness' | 'diameter' | 'position'>): JointQuestion {
+/** The question that a joint of a job asks; `toughness` is the job's own requirement. */
+export function jobJointQuestion(joint: Pick<JobJoint, 'metalA' | 'metalB' | 'process' | 'weld' | 'product' | 'thickness' | 'diameter' | 'position'>, toughness: boolean | null = null): JointQuestion {
   const metal = (text: string | null) => (text ? (askedMetal(text, joint.product) ?? { text, libraryIds: [], pNumber: null, groupNumber: null, iso15608: null }) : null)
   const stated = (interval: Interval | null) => (interval && (interval.min || interval.max || interval.all) ? interval : null)
-  return { ...emptyQuestion, metalA: metal(joint.metalA), metalB: metal(joint.metalB ?? joint.metalA), thickness: stated(joint.thickness), diameter: stated(joint.diameter), process: joint.process, processes: joint.process ? [joint.process] : [], position: joint.position, weld: joint.weld, product: joint.product }
+  return { ...emptyQuestion, metalA: metal(joint.metalA), metalB: metal(joint.metalB ?? joint.metalA), thickness: stated(joint.thickness), diameter: stated(joint.diameter), process: joint.process, processes: joint.process ? [joint.process] : [], position: joint.position, weld: joint.weld, product: joint.product, toughness }
 }

@@ -28,9 +28,11 @@ export interface JointQuestion {
   progression: 'up' | 'down' | null
   weld: 'groove' | 'fillet' | null
   product: 'plate' | 'pipe' | null
+  /** Whether the contract wants toughness tests behind the procedure. */
+  toughness: boolean | null
 }
 
-export const emptyQuestion: JointQuestion = { metalA: null, metalB: null, thickness: null, diameter: null, process: null, processes: [], pulsed: null, position: null, progression: null, weld: null, product: null }
+export const emptyQuestion: JointQuestion = { metalA: null, metalB: null, thickness: null, diameter: null, process: null, processes: [], pulsed: null, position: null, progression: null, weld: null, product: null, toughness: null }
 
 /** What all rows agree on; one that is not listed agrees with nothing. */
 function agreed<T>(rows: readonly BaseMetalRow[], pick: (row: BaseMetalRow) => T | null): T | null {

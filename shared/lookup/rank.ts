@@ -137,6 +137,11 @@ function product(question: JointQuestion, variables: WeldingVariables): Answer |
   return variables.product === 'plate-and-pipe' ? yes('plate and pipe', 2) : no(`It is for ${variables.product}, not ${question.product}.`)
 }
 
+function toughness(question: JointQuestion, { toughnessRequired }: WeldingVariables): Answer | null {
+  if (question.toughness !== true) return null
+  return toughnessRequired === true ? yes('written for work that requires toughness', 3) : no('The job requires toughness; the procedure does not state it.')
+}
+
 /**
  * Candidates that allow all that is asked, best first (closest metal, then process, tightest range), and those that miss by little,
  * each with what lies outside. A question in which nothing was read ranks nothing.
@@ -146,7 +151,7 @@ export function rankForJoint(joint: JointQuestion, candidates: readonly Candidat
   const [fits, near]: [Fit[], NearMiss[]] = [[], []]
   for (const { id, content } of candidates) {
     const { variables } = content
-    const answers = [metals(joint, variables), thickness(joint, variables, system), diameter(joint, variables, system), process(joint, variables), pulsed(joint, variables), position(joint, variables), weld(joint, variables), product(joint, variables)].filter((answer) => answer !== null)
+    const answers = [metals(joint, variables), thickness(joint, variables, system), diameter(joint, variables, system), process(joint, variables), pulsed(joint, variables), position(joint, variables), weld(joint, variables), product(joint, variables), toughness(joint, variables)].filter((answer) => answer !== null)
     if (answers.length === 0) continue
     const wants = answers.flatMap((answer) => (answer.fits ? [] : [answer.want]))
     if (wants.length === 0) fits.push({ id, reasons: answers.flatMap((answer) => (answer.fits && answer.reason !== null ? [answer.reason] : [])), score: Number(answers.reduce((sum, answer) => sum + (answer.fits ? answer.score : 0), 0).toFixed(2)) })

@@ -63,7 +63,7 @@ function sentTo(endpoint: Endpoint): fc.Arbitrary<Sent> {
 }
 
 /** Short enough for an HTTP parser's own limit; `.` and `..` as a whole segment would be taken out of the address before it is sent. */
-const asSegment = (text: string): string => encodeURIComponent(text.slice(0, 200).toWellFormed()).replace(/^\.+$/, (dots) => '%2E'.repeat(dots.length)) || '%20'
+const asSegment = (text: string): string => encodeURIComponent(text.slice(0, 200)).replace(/^\.+$/, (dots) => '%2E'.repeat(dots.length)) || '%20'
 
 function addressOf(endpoint: Endpoint, { path, query }: Sent): string {
   const at = endpoint.path.replace(/:(\w+)/g, (_all, name: string) => {
@@ -72,7 +72,7 @@ function addressOf(endpoint: Endpoint, { path, query }: Sent): string {
     const id = typeof value?.known === 'number' ? ids[value.known % Math.max(ids.length, 1)] : undefined
     return asSegment(id ?? value?.text ?? '')
   })
-  const pairs = Object.entries(query).filter(([, value]) => value !== undefined).map(([name, value]) => `${name}=${encodeURIComponent(asText(value).slice(0, 400).toWellFormed())}`)
+  const pairs = Object.entries(query).filter(([, value]) => value !== undefined).map(([name, value]) => `${name}=${encodeURIComponent(asText(value).slice(0, 400))}`)
   return `/api${at}${pairs.length > 0 ? `?${pairs.join('&')}` : ''}`
 }
 

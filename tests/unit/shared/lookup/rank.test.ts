@@ -39,6 +39,12 @@ describe('what fits', () => {
     expect(ask('304L', mixed).fits).toHaveLength(0)
     expect(ask('A36', mixed).fits).toHaveLength(0)
   })
+  it('holds a job that requires toughness to procedures written for it', () => {
+    const question = { ...readJointLine('12 mm A516-70 SMAW 3G', 'SI'), toughness: true }
+    const { fits, near } = rankForJoint(question, [candidate('without'), candidate('not stated', { variables: { toughnessRequired: null } }), candidate('with', { variables: { toughnessRequired: true } })])
+    expect(fits.map(({ id }) => id)).toEqual(['with'])
+    expect(near.map(({ wants }) => wants)).toEqual([[expect.stringMatching(/job requires toughness/)], [expect.stringMatching(/job requires toughness/)]])
+  })
   it('prefers the process alone to one of several', () => {
     const both = candidate('both', { blocks: [{ id: 'r', process: 'GTAW', positions: ['3G'] }, { id: 'f', process: 'SMAW', positions: ['3G'] }] })
     expect(ask('SMAW 3G', both, candidate('alone')).fits.map(({ id }) => id)).toEqual(['alone', 'both'])
