@@ -1,0 +1,158 @@
+import type { Page } from 'playwright-core'
+import { expect, it } from 'vitest'
+import { eventually, newDraft, readRevision, saved, settled, useStage } from './stage.ts'
+
+const stage = useStage()
+const TOBIAS = 'tobias@larkfield.example'
+
+const box = (page: Page, name: string) => page.getByRole('textbox', { name, exact: true })
+/** Types into a field and leaves it, as a person does who goes on to the next. */
+async function write(page: Page, name: string, text: string): Promise<void> {
+  await box(page, name).fill(text)
+  await box(page, name).blur()
+}
+const open = async (page: Page, id: string) => {
+  await page.goto(`/revisions/${id}`)
+  await settled(page)
+}
+
+it('shows both versions to the second of two engineers, who settles each field and loses nothing', async () => {
+  const [ines, tobias] = await Promise.all([stage.as('engineer'), stage.as(TOBIAS)])
+  const { id, number } = await newDraft(ines, 'Written by two')
+  await Promise.all([open(ines, id), open(tobias, id)])
+  // Tobias does not see what Ines saves meanwhile.
+  await write(ines, 'Thickness, to', '18')
+  await write(ines, 'SMAW: Amps, from', '90-120')
+  await write(ines, 'SMAW: Initial cleaning', 'wire brush')
+  await ines.keyboard.press('Control+s')
+  await saved(ines)
+
+  await write(tobias, 'Thickness, to', '20')
+  await write(tobias, 'SMAW: Amps, from', '95-125')
+  await write(tobias, 'Preheat, minimum', '50 F')
+  await tobias.keyboard.press('Control+s')
+  const view = tobias.getByRole('dialog', { name: `Two versions of ${number} rev A` })
+  await view.waitFor()
+  await view.getByText('2 fields are still to be settled.').waitFor()
+  expect(await view.getByRole('button', { name: 'Save the joined version' }).isDisabled(), 'nothing is joined until it is settled').toBe(true)
+  const both = view.getByRole('region', { name: 'Changed by both' })
+  await both.getByRole('group', { name: 'Thickness' }).getByRole('radio', { name: /Theirs.*18 mm/ }).check()
+  await both.getByRole('group', { name: 'Amps' }).getByRole('radio', { name: /Yours.*95.*125 A/ }).check()
+  await view.getByText('Every field is settled.').waitFor()
+  const one = view.getByRole('region', { name: 'Changed by one' })
+  expect(await one.getByRole('group', { name: 'Preheat, minimum' }).getByRole('radio', { name: /Yours/ }).isChecked()).toBe(true)
+  expect(await one.getByRole('group', { name: 'Initial cleaning' }).getByRole('radio', { name: /Theirs/ }).isChecked()).toBe(true)
+  await view.getByRole('button', { name: 'Save the joined version' }).click()
+  await view.waitFor({ state: 'detached' })
+  await saved(tobias)
+
+  const { variables } = (await readRevision(ines, id)).content
+  expect(variables.thickness).toMatchObject({ min: { si: 5 }, max: { si: 18 } })
+  expect(variables.processes[0]?.electrical.current).toMatchObject({ min: { si: 95 }, max: { si: 125 } })
+  expect(variables.processes[0]?.technique.initialCleaning).toBe('wire brush')
+  expect(variables.preheat.minimum).toMatchObject({ si: 10, unit: '°F', typed: '50 F' })
+  expect(await box(tobias, 'Thickness, to').inputValue()).toBe('18')
+  expect(await box(tobias, 'SMAW: Initial cleaning').inputValue()).toBe('wire brush')
+})
+
+it('lets somebody go back to the sheet with the two versions unsettled, and asks again', async () => {
+  const [ines, tobias] = await Promise.all([stage.as('engineer'), stage.as(TOBIAS)])
+  const { id, number } = await newDraft(ines, 'Settled later')
+  await Promise.all([open(ines, id), open(tobias, id)])
+  await write(ines, 'Thickness, to', '18')
+  await ines.keyboard.press('Control+s')
+  await saved(ines)
+  await write(tobias, 'Thickness, to', '22')
+  await tobias.keyboard.press('Control+s')
+  const view = tobias.getByRole('dialog', { name: `Two versions of ${number} rev A` })
+  await view.waitFor()
+  await tobias.keyboard.press('Escape')
+  expect(await view.isVisible(), 'Esc does not throw a decision away').toBe(true)
+  await view.getByRole('button', { name: 'Back to the sheet' }).click()
+  await view.waitFor({ state: 'detached' })
+  expect(await box(tobias, 'Thickness, to').inputValue(), 'what was typed is still there').toBe('22')
+  await write(tobias, 'SMAW: Trade name', 'typed after the conflict')
+  expect((await readRevision(ines, id)).content.variables.thickness?.max?.si, 'and nothing is written over').toBe(18)
+  await tobias.getByRole('button', { name: 'Compare the two' }).click()
+  await view.getByRole('button', { name: 'All mine' }).click()
+  await view.getByRole('button', { name: 'Save the joined version' }).click()
+  await saved(tobias)
+  const { variables } = (await readRevision(ines, id)).content
+  expect([variables.thickness?.max?.si, variables.processes[0]?.filler.tradeName]).toEqual([22, 'typed after the conflict'])
+})
+
+it('keeps what is typed without a connection and saves it by itself when it is back', async () => {
+  const page = await stage.as('engineer')
+  const { id, version } = await newDraft(page, 'Written in the basement')
+  await open(page, id)
+  await page.context().setOffline(true)
+  await write(page, 'Thickness, to', '14')
+  await page.getByText('Not saved: kept on this device').waitFor()
+  await write(page, 'SMAW: Trade name', 'typed without a connection')
+  await page.context().setOffline(false)
+  await saved(page)
+  const stored = await readRevision(page, id)
+  expect(stored.version).toBeGreaterThan(version)
+  expect(stored.content.variables.thickness?.max).toMatchObject({ si: 14 })
+  expect(stored.content.variables.processes[0]?.filler.tradeName).toBe('typed without a connection')
+})
+
+it('carries on from the copy on the device after a crash', async () => {
+  const page = await stage.as('engineer')
+  const { id, version } = await newDraft(page, 'The lights went out')
+  await open(page, id)
+  await page.route(`**/api/revisions/${id}`, (route) => (route.request().method() === 'PUT' ? route.abort() : route.continue()))
+  await write(page, 'Thickness, to', '15')
+  await page.getByText('Not saved: kept on this device').waitFor()
+  expect((await readRevision(page, id)).version).toBe(version)
+  // A page that is closed without asking is gone, as when the power fails; the device keeps the profile.
+  const again = await page.context().newPage()
+  await page.close({ runBeforeUnload: false })
+  await again.goto(`/revisions/${id}`)
+  await again.getByText('Carried on from the copy on this device').waitFor()
+  expect(await box(again, 'Thickness, to').inputValue()).toBe('15')
+  await saved(again)
+  expect((await readRevision(again, id)).content.variables.thickness?.max?.si).toBe(15)
+  await again.reload()
+  await settled(again)
+  expect(await again.getByText('Carried on from the copy on this device').count(), 'once saved, the copy is let go').toBe(0)
+})
+
+it('lets somebody throw the copy away and have what the server keeps', async () => {
+  const page = await stage.as('engineer')
+  const { id } = await newDraft(page, 'Better as it was')
+  await open(page, id)
+  await page.route(`**/api/revisions/${id}`, (route) => (route.request().method() === 'PUT' ? route.abort() : route.continue()))
+  await write(page, 'Thickness, to', '99')
+  await page.getByText('Not saved: kept on this device').waitFor()
+  const again = await page.context().newPage()
+  await page.close({ runBeforeUnload: false })
+  await again.goto(`/revisions/${id}`)
+  const news = again.getByRole('listitem').filter({ hasText: 'Carried on from the copy on this device' })
+  await news.getByRole('button', { name: 'Undo' }).click()
+  await eventually(() => box(again, 'Thickness, to').inputValue()).toBe('16')
+  await saved(again)
+  expect((await readRevision(again, id)).content.variables.thickness?.max?.si).toBe(16)
+})
+
+it('compares the copy with what somebody saved since', async () => {
+  const [ines, tobias] = await Promise.all([stage.as('engineer'), stage.as(TOBIAS)])
+  const { id, number } = await newDraft(ines, 'Crashed, then changed')
+  await open(ines, id)
+  await ines.route(`**/api/revisions/${id}`, (route) => (route.request().method() === 'PUT' ? route.abort() : route.continue()))
+  await write(ines, 'Thickness, to', '15')
+  await ines.getByText('Not saved: kept on this device').waitFor()
+  const again = await ines.context().newPage()
+  await ines.close({ runBeforeUnload: false })
+  await open(tobias, id)
+  await write(tobias, 'Thickness, to', '12')
+  await tobias.keyboard.press('Control+s')
+  await saved(tobias)
+
+  await again.goto(`/revisions/${id}`)
+  const view = again.getByRole('dialog', { name: `Two versions of ${number} rev A` })
+  await view.getByRole('group', { name: 'Thickness' }).getByRole('radio', { name: /Yours.*15 mm/ }).check()
+  await view.getByRole('button', { name: 'Save the joined version' }).click()
+  await saved(again)
+  expect((await readRevision(tobias, id)).content.variables.thickness?.max?.si).toBe(15)
+})
