@@ -3,6 +3,10 @@ import type { QueryClient } from '@tanstack/react-query'
 import type { RouteObject } from 'react-router-dom'
 import { Skeleton } from '@/components/states.tsx'
 import { bareRoutes as accountBareRoutes, routes as accountRoutes } from '@/features/account/routes.tsx'
+import { routes as couponRoutes } from '@/features/coupons/routes.tsx'
+import { routes as jobRoutes } from '@/features/jobs/routes.tsx'
+import { routes as libraryRoutes } from '@/features/library/routes.tsx'
+import { routes as lookupRoutes, shopRoutes } from '@/features/lookup/routes.tsx'
 import { routes as outboxRoutes } from '@/features/outbox/routes.tsx'
 import { routes as peopleRoutes } from '@/features/people/routes.tsx'
 import { routes as procedureRoutes } from '@/features/procedures/routes.tsx'
@@ -12,10 +16,10 @@ import { Bare, Shell } from '@/shell/Shell.tsx'
 import { anyone, signedIn } from '@/shell/guard.ts'
 
 /** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
-const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes]
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...jobRoutes, ...lookupRoutes, ...libraryRoutes]
 
 /** Pages without the bar, for people who are signed in: the shop view. */
-const shop: RouteObject[] = []
+const shop: RouteObject[] = [...shopRoutes]
 
 /** Pages without the bar, for anyone: sign-in and the links in e-mails. */
 const open: RouteObject[] = [...accountBareRoutes]
