@@ -25,7 +25,7 @@ export function GridCell({ at, label, text, write, onKey, onPaste, className = '
     setWrong(null)
   }
   return (
-    <>
+    <div className="relative">
       <input
         data-cell={at}
         aria-label={label}
@@ -42,10 +42,10 @@ export function GridCell({ at, label, text, write, onKey, onPaste, className = '
         onPaste={onPaste}
       />
       {wrong && (
-        <p id={`${id}-wrong`} className="mt-1 text-sm font-medium text-oxide">
+        <p id={`${id}-wrong`} className="absolute top-full left-0 z-10 -mt-1 w-60 border-l-[3px] border-l-oxide bg-oxide-bg px-2 py-1 text-sm">
           {wrong}
         </p>
       )}
-    </>
+    </div>
   )
 }

@@ -61,22 +61,22 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
     <div id={inputId(path)} tabIndex={-1} className="space-y-2">
       {passes.length > 0 && (
         <div className="-mx-1 overflow-x-auto px-1 pb-1">
-          <table aria-label={label} className="w-full min-w-[40rem] border-collapse text-left">
+          <table aria-label={label} className="w-full min-w-[44rem] table-fixed border-collapse text-left">
             <thead>
               <tr className="text-soft">
                 {PASS_COLUMNS.map(({ id, label: head, dimension }) => (
-                  <th key={id} scope="col" className="pr-2 pb-1 text-sm font-medium whitespace-nowrap">
+                  <th key={id} scope="col" className={`pr-2 pb-1 text-sm font-medium whitespace-nowrap ${id === 'number' ? 'w-18' : id === 'layer' ? 'w-28' : ''}`}>
                     {head} {dimension && <span className="font-normal">{SHOWN_UNIT[system][dimension]}</span>}
                   </th>
                 ))}
-                <td />
+                <td className="w-9" />
               </tr>
             </thead>
             <tbody ref={grid}>
               {passes.map((pass, row) => (
                 <tr key={row}>
                   {PASS_COLUMNS.map((column, at) => (
-                    <td key={column.id} className={`pr-1.5 pb-1.5 align-top ${column.id === 'number' ? 'w-20' : ''}`}>
+                    <td key={column.id} className="pr-1.5 pb-1.5 align-top">
                       {column.id === 'layer' ? (
                         <select data-cell={`${row}.${at}`} aria-label={`Pass ${pass.number}, layer`} className="box min-w-24" value={pass.layer ?? ''} onChange={(event) => write(row, column, event.target.value)} onKeyDown={(event) => onKey(event, row, at)}>
                           <option value="">Not stated</option>

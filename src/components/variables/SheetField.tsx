@@ -40,6 +40,16 @@ export const SheetField = memo(function SheetField({ spec, prefix = '', block = 
   const path = `${prefix}${spec.path}`
   const findings = sheet.findings.get(path) ?? NONE
   if (!isShown(spec, prefix, block, sheet)) return null
+  if (spec.kind === 'passes' && sheet.control) {
+    return (
+      <div className="sheet-row relative">
+        <div className="px-4 py-3">
+          <Editor spec={spec} path={path} prefix={prefix} block={block} />
+        </div>
+        <Notes findings={findings} />
+      </div>
+    )
+  }
   return (
     <SheetRow label={spec.label} unit={unitOf(spec, sheet.system)} verdict={worstVerdict(findings.map(({ verdict }) => verdict))} gauge={gauge(spec, findings, sheet)} margin={<Notes findings={findings} />}>
       {sheet.control ? <Editor spec={spec} path={path} prefix={prefix} block={block} /> : <Reading spec={spec} path={path} prefix={prefix} />}
