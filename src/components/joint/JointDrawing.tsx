@@ -48,10 +48,12 @@ export function JointDrawing({ geometry, maxHeight = 190, bare = false }: JointD
   const outline = (polygon: Polygon) => `${polygon.map((point, index) => `${index === 0 ? 'M' : 'L'}${view.at(point).x.toFixed(1)} ${view.at(point).y.toFixed(1)}`).join('')}Z`
   const fits = (polygon: Polygon) => Math.min(spanOf(polygon.map(({ x }) => x)), spanOf(polygon.map(({ y }) => y))) * scale >= 13
   const drawn = bare ? [] : dimensions.map((dimension) => placeDimension(dimension, view, { bevelAngle: has('bevel-angle'), rootFace: has('root-face') }))
+  // A wide angle's arc rises above the room that is kept for it.
+  const lift = Math.max(0, ...drawn.map(({ text }) => 16 - text.y))
   const words = `Joint cross-section${dimensions.length > 0 ? `: ${dimensionsInWords(dimensions)}` : ''}. ${passes.length === 0 ? 'No passes listed.' : `${passes.length} ${passes.length === 1 ? 'pass' : 'passes'}.`}`
   return (
     <div ref={frame} className="min-w-0">
-      <svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={words} className="block max-w-full" fill="none">
+      <svg width={width} height={height + lift} viewBox={`0 ${-lift} ${width} ${height + lift}`} role="img" aria-label={words} className="block max-w-full" fill="none">
         <defs>
           <pattern id={hatch} width="9" height="9" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
             <path d="M0 0V9" className="stroke-edge" strokeWidth="0.8" />
