@@ -63,19 +63,19 @@ export function TestRow({ list, index, test, mark, onChange, onRemove, children 
   const fields = TEST_FIELDS[list].filter(({ when }) => !when || when(test))
   const path = `${list}.${index}`
   return (
-    <div id={inputId(path)} tabIndex={-1} className={`sheet-row relative border-b border-hair last:border-b-0 ${worst === 'outside' ? 'wash-outside' : worst === 'cannot-tell' ? 'wash-cannot-tell' : ''}`}>
+    <div id={inputId(path)} role="group" aria-label={mark} tabIndex={-1} className={`sheet-row relative border-b border-hair last:border-b-0 ${worst === 'outside' ? 'wash-outside' : worst === 'cannot-tell' ? 'wash-cannot-tell' : ''}`}>
       <div className="grid grid-cols-[3.25rem_minmax(0,1fr)] gap-x-3 px-4 py-3">
         <p className="pt-0.5 font-narrow text-xl font-semibold break-words">{mark}</p>
         <div className="min-w-0 space-y-2.5">
           <div className="flex items-start gap-2">
             {onChange ? (
-              <div className="grid min-w-0 grow grid-cols-2 items-end gap-x-3 gap-y-2 sm:grid-cols-[repeat(auto-fill,minmax(8rem,1fr))]">
+              <div className="grid min-w-0 grow grid-cols-2 items-end gap-x-3 gap-y-2 sm:grid-cols-[repeat(auto-fill,minmax(9.25rem,1fr))]">
                 {fields.map((field) => (
                   <FieldOf key={field.key} field={field} id={inputId(`${path}.${field.key}`)} mark={mark} value={test[field.key]} onChange={(next) => onChange({ [field.key]: next })} />
                 ))}
               </div>
             ) : (
-              <dl className="grid min-w-0 grow grid-cols-2 gap-x-3 gap-y-1.5 sm:grid-cols-[repeat(auto-fill,minmax(8rem,1fr))]">
+              <dl className="grid min-w-0 grow grid-cols-2 gap-x-3 gap-y-1.5 sm:grid-cols-[repeat(auto-fill,minmax(9.25rem,1fr))]">
                 {fields
                   .filter(({ key }) => key !== 'specimen')
                   .map(({ key, label }) => (

@@ -106,7 +106,7 @@ function Rows({ rows }: { rows: readonly Row[] }) {
   return rows.map((row) => {
     const value = content[row.name]
     return (
-      <SheetRow key={row.name} label={row.label} htmlFor={control ? inputId(row.name) : undefined} unit={row.hint}>
+      <SheetRow key={row.name} label={row.label} unit={row.hint}>
         {control ? <Typed row={row} /> : <Read>{value ? (row.kind === 'date' ? day(value) : value) : <span className="font-normal text-soft">not stated</span>}</Read>}
       </SheetRow>
     )
