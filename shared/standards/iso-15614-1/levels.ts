@@ -1,0 +1,25 @@
+/** Levels 1 and 2: which one is asked, which one a coupon was tested to, and what follows where only the level 2 limit is held. */
+import type { CouponSide, RangeContext, Rule } from '../rule.ts'
+
+export type Level = '1' | '2'
+
+/** Where no level is named, level 2 applies (introduction; read in the foreword of a national adoption). */
+export const levelOf = (context: Pick<RangeContext, 'level'>): Level => context.level ?? '2'
+
+/** Level to which a coupon was tested, from its record; null where the record doesn't name this standard. */
+export function couponLevel(side: Pick<CouponSide, 'variables'>): Level | null {
+  const entry = side.variables.standards.find(({ standard }) => standard === 'iso-15614-1')
+  return entry ? (entry.level ?? '2') : null
+}
+
+/** A limit of level 2 whose level 1 counterpart isn't held: level 1 is wider, so inside is inside, and beyond it can't be told. */
+export function levelTwoLimit(rule: Rule): Rule {
+  return {
+    ...rule,
+    check(context, sides, joined) {
+      const judged = rule.check(context, sides, joined)
+      if (judged?.verdict !== 'outside' || levelOf(context) === '2') return judged
+      return { ...judged, verdict: 'cannot-tell', sentence: `${judged.sentence} That is the limit of level 2; what level 1 allows beyond it isn't held here.`, missing: [`the level 1 rule of ${judged.clause ?? rule.meta.clause} in your edition`] }
+    },
+  }
+}
