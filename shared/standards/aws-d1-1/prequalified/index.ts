@@ -1,0 +1,2 @@
+import type { Rule } from '../../rule.ts'
+export const prequalifiedRules: readonly Rule[] = []

@@ -1,0 +1,102 @@
+/** Every rule of the standard: by test (Clause 6), then prequalified (Clause 5). */
+import type { Rule } from '../../rule.ts'
+import { numbered } from '../meta.ts'
+import { prequalifiedRules } from '../prequalified/index.ts'
+import { amperage } from './amperage.ts'
+import { backing } from './backing.ts'
+import { baseMetal } from './base-metal.ts'
+import { combinedProcesses } from './combined-processes.ts'
+import { currentType } from './current-type.ts'
+import { cvnBaseGroup, cvnBrand, cvnFillerClass, cvnFlux, cvnInterpass, cvnOscillation, cvnPasses, cvnPwht, cvnThickness, cvnVerticalUp, cvnWeave } from './cvn.ts'
+import { cvnHeatInput } from './cvn-heat-input.ts'
+import { diameter } from './diameter.ts'
+import { electrodeCount } from './electrode-count.ts'
+import { lateralSpacing, longitudinalSpacing, normalAngle, parallelAngle, travelAngle } from './electrode-geometry.ts'
+import { fillerAdded } from './filler-added.ts'
+import { fillerClassification } from './filler-classification.ts'
+import { fillerDiameter } from './filler-diameter.ts'
+import { fillerSpecification } from './filler-specification.ts'
+import { fillerStrength } from './filler-strength.ts'
+import { filletSize } from './fillet-size.ts'
+import { gasFlow } from './gas-flow.ts'
+import { grooveAngle, grooveType, rootFace, rootOpening, squareGroove } from './groove.ts'
+import { grooveDepth } from './groove-depth.ts'
+import { hotWire } from './hot-wire.ts'
+import { lowHydrogen } from './low-hydrogen.ts'
+import { position } from './position.ts'
+import { powerSource } from './power-source.ts'
+import { interpassMinimum, preheat } from './preheat.ts'
+import { process } from './process.ts'
+import { pwht } from './pwht.ts'
+import { scope } from './scope.ts'
+import { gasInFillerSpec, shieldingGas } from './shielding-gas.ts'
+import { supplementalAmount, supplementalFiller, supplementAlloy } from './supplemental-filler.ts'
+import { thickness } from './thickness.ts'
+import { transferMode } from './transfer-mode.ts'
+import { travelSpeed } from './travel-speed.ts'
+import { verticalProgression } from './vertical-progression.ts'
+import { voltage } from './voltage.ts'
+import { weldKind } from './weld-kind.ts'
+import { wireFeed } from './wire-feed.ts'
+
+export const rules: readonly Rule[] = [
+  process,
+  scope,
+  combinedProcesses,
+  weldKind,
+  baseMetal,
+  thickness,
+  diameter,
+  grooveDepth,
+  filletSize,
+  position,
+  verticalProgression,
+  fillerStrength,
+  lowHydrogen,
+  fillerClassification,
+  fillerSpecification,
+  fillerAdded,
+  hotWire,
+  supplementalFiller,
+  supplementalAmount,
+  supplementAlloy,
+  fillerDiameter,
+  electrodeCount,
+  amperage,
+  currentType,
+  transferMode,
+  powerSource,
+  voltage,
+  wireFeed,
+  travelSpeed,
+  shieldingGas,
+  gasFlow,
+  gasInFillerSpec,
+  longitudinalSpacing,
+  lateralSpacing,
+  parallelAngle,
+  travelAngle,
+  normalAngle,
+  grooveType,
+  squareGroove,
+  grooveAngle,
+  rootOpening,
+  rootFace,
+  backing,
+  preheat,
+  interpassMinimum,
+  pwht,
+  cvnBaseGroup,
+  cvnThickness,
+  cvnFillerClass,
+  cvnFlux,
+  cvnBrand,
+  cvnVerticalUp,
+  cvnInterpass,
+  cvnPwht,
+  cvnHeatInput,
+  cvnWeave,
+  cvnPasses,
+  cvnOscillation,
+  ...prequalifiedRules,
+].map(numbered)
