@@ -79,10 +79,10 @@ export function cellsOf(variables: WeldingVariables, block: ProcessBlock, system
     return decided && iso[0] ? `${one} / ${iso[0]}` : one
   })
   const cells: Cell[] = [
-    { label: 'Metal', value: or([b && b !== a ? or([a, b], ' to ') : a, thickness && text(formatInterval(thickness, 'length', system))], ', ') },
+    { label: 'Metal', value: or([b && b !== a ? or([a, b], ' to ') : a, thickness && text(formatInterval(thickness, 'length', system))], '\n') },
     { label: wire, value: filler.added === false ? 'none, autogenous' : or([filler.classification, filler.diameters.map((size) => formatQuantity(size, 'length', system).text).join(', ')]) },
     { label: 'Gas', value: gasOf(block.shieldingGas, system) ?? 'none' },
-    { label: 'Position', value: or([position.join(', '), progression && (progression === 'both' ? 'up or down' : progression)]) },
+    { label: 'Position', value: or([position.map((one) => one.replaceAll(' / ', '\u00a0/\u00a0')).join(', '), progression && (progression === 'both' ? 'up or down' : progression)]) },
   ]
   if (block.backingGas) cells.push({ label: 'Backing gas', value: gasOf(block.backingGas, system) ?? 'none' })
   if (diameter && !diameter.all) cells.push({ label: 'Pipe', value: or([text(formatInterval(diameter, 'length', system))]) })

@@ -1,6 +1,8 @@
 import { useState } from 'react'
 import { fieldLabel } from '@shared/comparison/fields.ts'
 import type { CouponQualification, QualifiedRange } from '@shared/schemas/assessment.ts'
+import { SHOWN_UNIT } from '@shared/units/convert.ts'
+import { SI_UNIT, type Dimension } from '@shared/units/types.ts'
 import { RangeGauge } from '@/components/range-gauge/RangeGauge.tsx'
 import { boundsInWords } from '@/components/range-gauge/words.ts'
 import { Sheet } from '@/components/Sheet.tsx'
@@ -9,6 +11,7 @@ import { useSheet } from '@/components/variables/context.ts'
 import { standardName } from '@/components/variables/options.ts'
 import { useCouponContent } from './coupon-sheet.ts'
 
+const isDimension = (name: string): name is Dimension => name in SI_UNIT
 const BASIS = { read: '', secondary: 'from a secondary source', memory: 'from memory, confirm in your edition', 'common-practice': 'common practice' } as const
 
 /** What the coupon qualifies under each of its standards: a gauge or names a variable, with the clause and how it comes about. */
@@ -53,6 +56,7 @@ function RangeRow({ range }: { range: QualifiedRange }) {
     <div className="sheet-row grid gap-x-4 gap-y-1 border-b border-hair px-4 py-2.5 last:border-b-0 sm:grid-cols-[10.25rem_minmax(0,1fr)_6.5rem] sm:items-center">
       <div className="flex items-baseline justify-between gap-3 sm:block">
         <p className="font-medium first-letter:uppercase">{label || fieldLabel(field)}</p>
+        {range.range.type === 'numeric' && isDimension(range.range.dimension) && <p className="text-xs text-soft">{SHOWN_UNIT[system][range.range.dimension]}</p>}
         {kind === 'supplementary' && <p className="text-xs text-soft">{CLASS_WORD[kind]}</p>}
       </div>
       <div className="min-w-0">
@@ -61,7 +65,7 @@ function RangeRow({ range }: { range: QualifiedRange }) {
         ) : (
           <p className="font-medium break-words">
             {boundsInWords(range.range)}
-            {typeof tested === 'string' && <span className="ml-2 font-normal text-plum">welded {tested}</span>}
+            {typeof tested === 'string' && !(range.range.values.length === 1 && range.range.values[0] === tested) && <span className="ml-2 font-normal text-plum">welded {tested}</span>}
           </p>
         )}
         <details className="text-sm text-soft">

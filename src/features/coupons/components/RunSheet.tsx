@@ -55,6 +55,7 @@ export function RunSheet() {
                   </>
                 )}
               </dd>
+              {heatInput && processes.find(({ id }) => id === processId)?.electrical.waveformControlled === null && <dd className="text-sm text-straw-deep">Whether the waveform is controlled is not stated; volts times amps holds only if it is not.</dd>}
               {missing.length > 0 && <dd className="text-sm text-soft">Missing: {missing.slice(0, 4).join('; ')}{missing.length > 4 ? `, and ${missing.length - 4} more` : ''}.</dd>}
             </div>
           ))}
@@ -164,7 +165,8 @@ function PassRow({ row, index, count, columns, edit }: { row: RunRow; index: num
   const { system } = useSheet()
   const { processes } = useCouponContent().variables
   const block = processes.find(({ id }) => id === row.processId)
-  const { heatInput, travelSpeed, missing, doubts, how } = rowHeatInput(row, block?.electrical.waveformControlled ?? null)
+  // Whether the waveform is controlled, where it is not stated, is said once under the sheet.
+  const { heatInput, travelSpeed, missing, doubts, how } = rowHeatInput(row, block?.electrical.waveformControlled ?? false)
   const name = `Pass ${row.pass}`
   const onKey = (event: KeyboardEvent<HTMLElement>, column: number) => {
     const box = event.target
@@ -215,12 +217,12 @@ function PassRow({ row, index, count, columns, edit }: { row: RunRow; index: num
             )}
           </div>
         ))}
-        <div className="col-span-2 min-w-0 self-end xl:col-span-1 xl:text-right" title={how ?? undefined}>
+        <div className="min-w-0 self-end sm:col-span-4 xl:col-span-1 xl:text-right" title={how ?? undefined}>
           <CellLabel label="Heat input" unit={SHOWN_UNIT[system].heatInput} />
           <p data-heat-input className={`py-1 font-narrow text-xl leading-7 font-semibold whitespace-nowrap tabular-nums ${heatInput ? '' : 'text-soft'}`}>{heatInput ? spanText(heatInput, 'heatInput', system) : '–'}</p>
         </div>
         {edit && (
-          <div className="self-end justify-self-end">
+          <div className="col-start-3 self-end justify-self-end sm:col-start-5 xl:col-start-auto">
             <button type="button" aria-label={`Remove pass ${row.pass}`} className="flex size-9 items-center justify-center rounded text-soft hover:text-ink max-sm:size-12" onClick={() => edit.remove(index)}>
               <X size={16} aria-hidden="true" />
             </button>

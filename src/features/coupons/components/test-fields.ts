@@ -48,7 +48,7 @@ export const TEST_FIELDS: Readonly<Record<TestList, readonly TestField[]>> = {
     bend('thickness', 'quantity', { dimension: 'length' }, 'Thickness'),
     bend('formerDiameter', 'quantity', { dimension: 'length' }, 'Former'),
     bend('angle', 'quantity', { dimension: 'angle' }, 'Angle'),
-    bend('inspected', 'tick', {}, 'Convex face inspected'),
+    bend('inspected', 'tick', {}, 'Face inspected'),
     bend('broke', 'tick', {}, 'Broke'),
   ],
   macros: [macro('specimen', 'text', { max: 20 }), macro('fusionComplete', 'flag', {}), macro('cracks', 'flag', {}), macro('leg1', 'quantity', { dimension: 'length' }), macro('leg2', 'quantity', { dimension: 'length' })],

@@ -29,7 +29,7 @@ export function CouponsPage() {
   const columns = useMemo<Column<CouponRow>[]>(
     () => [
       { id: 'number', header: 'Number', sort: 'number', className: 'whitespace-nowrap', cell: (row) => <span className="font-semibold">{row.number}</span> },
-      { id: 'title', header: 'Title', className: 'min-w-52', cell: (row) => row.title },
+      { id: 'title', header: 'Title', className: 'md:min-w-40', cell: (row) => row.title },
       { id: 'procedure', header: 'For', className: 'whitespace-nowrap', cell: (row) => row.procedureNumber ?? <Unsaid text="by itself" /> },
       { id: 'processes', header: 'Process', cell: (row) => row.processes.join(' + ') || <Unsaid /> },
       { id: 'metals', header: 'Metals', cell: (row) => row.metals || <Unsaid /> },
@@ -73,7 +73,7 @@ export function CouponsPage() {
       {list.isError && <ErrorState error={list.error} onRetry={() => void list.refetch()} />}
       {list.data &&
         (list.data.rows.length > 0 ? (
-          <DataTable
+          <div className="md:overflow-x-auto"><DataTable
             caption="Coupons"
             columns={columns}
             rows={list.data.rows}
@@ -85,7 +85,7 @@ export function CouponsPage() {
             total={list.data.total}
             onMore={list.hasNextPage ? () => void list.fetchNextPage() : undefined}
             loadingMore={list.isFetchingNextPage}
-          />
+          /></div>
         ) : filtered ? (
           <NothingFound what="coupons" onClear={clear} />
         ) : (

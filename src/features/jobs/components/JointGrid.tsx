@@ -60,7 +60,7 @@ export function JointGrid({ rows, onChange, onAssign, saved }: JointGridProps) {
     put(addJoint(latest.current, fresh()))
     focus(latest.current.length - 1, 1)
   }
-  const template = { '--joint': `${JOINT_COLUMNS.map(({ width }) => width).join(' ')} minmax(9rem,1fr) ${onChange ? '2rem' : '0'}` } as CSSProperties
+  const template = { '--joint': `${JOINT_COLUMNS.map(({ width }) => width).join(' ')} minmax(11.5rem,1fr) ${onChange ? '2rem' : '0'}` } as CSSProperties
   return (
     <div ref={list} style={template}>
       <div aria-hidden="true" className={`${LAYOUT} border-b border-ink py-2 font-medium max-xl:hidden`}>
@@ -73,10 +73,10 @@ export function JointGrid({ rows, onChange, onAssign, saved }: JointGridProps) {
       </div>
       <ul aria-label="Joints">
         {rows.map((row, index) => (
-          <li key={row.key} aria-label={`Joint ${row.number}`} className="sheet-row border-b border-hair py-2 last:border-b-0">
+          <li key={row.key} aria-label={`Joint ${row.number}`} className="sheet-row relative border-b border-hair py-2 last:border-b-0">
             <div className={LAYOUT}>
               {JOINT_COLUMNS.map((column, at) => (
-                <div key={column.id} className={`min-w-0 ${column.id === 'mark' ? 'max-xl:col-span-2' : ''} xl:[&_.box]:px-1.5`}>
+                <div key={column.id} className={`min-w-0 ${column.id === 'mark' ? 'max-xl:col-span-2' : column.id === 'number' ? 'max-xl:col-span-full max-xl:max-w-40' : ''} xl:[&_.box]:px-1.5`}>
                   <p aria-hidden="true" className="text-xs text-soft xl:hidden">
                     {column.label} {column.kind === 'interval' && SHOWN_UNIT[system][column.dimension]}
                   </p>
@@ -94,7 +94,7 @@ export function JointGrid({ rows, onChange, onAssign, saved }: JointGridProps) {
                       <GridCell at={`joint.${index}.${at}`} label={`Joint ${row.number}, ${column.label.toLowerCase()}`} text={cellText(row, column, system)} write={(text) => write(index, column, text)} onKey={(event) => onKey(event, index, at)} className={column.id === 'number' ? 'font-semibold' : ''} />
                     )
                   ) : (
-                    <p className={`py-1 break-words ${column.id === 'number' ? 'text-lg font-semibold' : ''}`}>{cellText(row, column, system) || <span className="text-soft">–</span>}</p>
+                    <p className={`py-1 break-words ${column.id === 'number' ? 'text-lg font-semibold' : ''}`}>{(column.kind === 'choice' ? column.options.find(({ value }) => value === row[column.id])?.label : cellText(row, column, system)) || <span className="text-soft">–</span>}</p>
                   )}
                 </div>
               ))}
@@ -104,12 +104,12 @@ export function JointGrid({ rows, onChange, onAssign, saved }: JointGridProps) {
                     <Tag>{row.procedureNumber ?? 'assigned'}</Tag>
                   </Link>
                 )}
-                <Button kind="quiet" aria-expanded={asking === row.key} icon={<Search size={14} aria-hidden="true" />} onClick={() => setAsking(asking === row.key ? null : row.key)}>
+                <Button kind="quiet" aria-label={`${row.revisionId ? 'Other procedures' : 'Find procedures'} for joint ${row.number}`} aria-expanded={asking === row.key} icon={<Search size={14} aria-hidden="true" />} onClick={() => setAsking(asking === row.key ? null : row.key)}>
                   {row.revisionId ? 'Others' : 'Find procedures'}
                 </Button>
               </div>
               {onChange && (
-                <button type="button" aria-label={`Remove joint ${row.number}`} className="flex size-9 items-center justify-center justify-self-end rounded text-soft hover:text-ink" onClick={() => put(rows.filter((one) => one.key !== row.key))}>
+                <button type="button" aria-label={`Remove joint ${row.number}`} className="flex size-9 items-center justify-center justify-self-end rounded text-soft hover:text-ink max-xl:absolute max-xl:top-3 max-xl:right-2 max-xl:size-12" onClick={() => put(rows.filter((one) => one.key !== row.key))}>
                   <X size={16} aria-hidden="true" />
                 </button>
               )}

@@ -28,7 +28,7 @@ export function JobsPage() {
   const columns = useMemo<Column<JobRow>[]>(
     () => [
       { id: 'number', header: 'Number', sort: 'number', className: 'whitespace-nowrap', cell: (row) => <span className="font-semibold">{row.number}</span> },
-      { id: 'title', header: 'Title', className: 'min-w-52', cell: (row) => row.title },
+      { id: 'title', header: 'Title', className: 'md:min-w-40', cell: (row) => row.title },
       { id: 'customer', header: 'Customer', cell: (row) => row.customer || <span className="text-soft">not stated</span> },
       { id: 'code', header: 'Code', cell: (row) => row.code || <span className="text-soft">not stated</span> },
       { id: 'joints', header: 'Joints with a procedure', className: 'min-w-40', cell: (row) => <Assigned row={row} /> },
@@ -51,7 +51,7 @@ export function JobsPage() {
       {list.isError && <ErrorState error={list.error} onRetry={() => void list.refetch()} />}
       {list.data &&
         (list.data.rows.length > 0 ? (
-          <DataTable caption="Jobs" columns={columns} rows={list.data.rows} rowKey={(row) => row.id} rowHref={(row) => `/jobs/${row.id}`} sort={sorted(sort)} onSort={(next) => filters.set({ sort: next })} storageKey="jobs" total={list.data.total} onMore={list.hasNextPage ? () => void list.fetchNextPage() : undefined} loadingMore={list.isFetchingNextPage} />
+          <div className="md:overflow-x-auto"><DataTable caption="Jobs" columns={columns} rows={list.data.rows} rowKey={(row) => row.id} rowHref={(row) => `/jobs/${row.id}`} sort={sorted(sort)} onSort={(next) => filters.set({ sort: next })} storageKey="jobs" total={list.data.total} onMore={list.hasNextPage ? () => void list.fetchNextPage() : undefined} loadingMore={list.isFetchingNextPage} /></div>
         ) : q ? (
           <NothingFound what="jobs" onClear={() => filters.set({ q: '' })} />
         ) : (

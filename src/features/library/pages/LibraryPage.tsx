@@ -51,7 +51,7 @@ function Kind({ kind }: { kind: LibraryKind }) {
       {
         id: 'title',
         header: kind === 'positions' ? 'ASME and AWS' : kind === 'processes' ? 'AWS' : 'Name',
-        className: 'md:min-w-40',
+        className: 'md:min-w-28',
         cell: (row) => (
           <button type="button" className="min-h-6 text-left font-semibold hover:underline" data-row-link onClick={() => setOpen(row)}>
             {row.title}
@@ -86,7 +86,9 @@ function Kind({ kind }: { kind: LibraryKind }) {
       {list.isError && <ErrorState error={list.error} onRetry={() => void list.refetch()} />}
       {list.data &&
         (list.data.rows.length > 0 ? (
-          <DataTable caption={title} columns={columns} rows={list.data.rows} rowKey={(row) => row.id} storageKey={`library.${kind}`} total={list.data.total} onMore={list.hasNextPage ? () => void list.fetchNextPage() : undefined} loadingMore={list.isFetchingNextPage} />
+          <div className="md:overflow-x-auto">
+            <DataTable caption={title} columns={columns} rows={list.data.rows} rowKey={(row) => row.id} storageKey={`library.${kind}`} total={list.data.total} onMore={list.hasNextPage ? () => void list.fetchNextPage() : undefined} loadingMore={list.isFetchingNextPage} />
+          </div>
         ) : (
           <NothingFound what={title.toLowerCase()} onClear={filtered ? filters.clear : undefined} />
         ))}

@@ -29,13 +29,7 @@ export function Results({ result: { read, notRead, fits, near }, jointId }: { re
                       {index === 0 && fits.length > 1 && <span className="font-narrow font-semibold tracking-wide text-jade uppercase">closest</span>}
                     </span>
                     <span className="block font-medium">{title}</span>
-                    <span className="mt-1 block text-base text-soft">
-                      {reasons.map((reason) => (
-                        <span key={reason} className="block">
-                          {reason}
-                        </span>
-                      ))}
-                    </span>
+                    <span className="mt-1 block text-base text-pretty text-soft">{reasons.join(' · ')}</span>
                   </span>
                   <ChevronRight size={24} aria-hidden="true" className="shrink-0 text-soft" />
                 </Link>

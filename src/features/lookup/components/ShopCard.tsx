@@ -39,6 +39,7 @@ export function ShopCard({ revision, system, joint, fitsJoint = null, inForce, r
   const block = processes[tab] ?? processes[0]
   const approved = revision.state === 'approved'
   const signed = [...revision.signatures].reverse().find(({ meaning }) => meaning === 'approved')
+  const ended = [...revision.signatures].reverse().find(({ meaning }) => meaning === 'withdrawn')
   if (!block) return null
   return (
     <div className={approved ? '' : 'border-t-8 border-oxide'}>
@@ -54,7 +55,7 @@ export function ShopCard({ revision, system, joint, fitsJoint = null, inForce, r
       </header>
       {revision.state !== 'approved' && (
         <Stop title="Do not weld to this">
-          {WHY[revision.state]}{' '}
+          {WHY[revision.state]} {ended?.reason}{' '}
           {inForce && (
             <Link to={`/shop/${inForce.id}`} className="inline-flex min-h-12 items-center font-semibold underline underline-offset-4">
               Open revision {inForce.revision}, which is in force
@@ -76,7 +77,7 @@ export function ShopCard({ revision, system, joint, fitsJoint = null, inForce, r
         {cellsOf(variables, block, system).map(({ label, value }) => (
           <div key={label} className="min-w-0">
             <dt className="font-narrow text-base tracking-[0.055em] text-soft uppercase">{label}</dt>
-            <dd className="text-lg break-words">{value}</dd>
+            <dd className="text-lg break-words whitespace-pre-line">{value}</dd>
           </div>
         ))}
       </dl>
