@@ -25,7 +25,7 @@ export function MailPage() {
         cells={[
           { label: 'To', children: mail.to.join(', '), wide: true },
           { label: 'Written', children: moment(mail.createdAt) },
-          { label: 'Sent', children: mail.sentAt ? moment(mail.sentAt) : mail.state === 'caught' ? 'caught, not sent' : 'not yet' },
+          { label: 'Sent', children: mail.state === 'caught' ? 'caught, not sent' : mail.sentAt ? moment(mail.sentAt) : 'not yet' },
         ]}
         stamp={<Stamp state={mail.state} />}
         stampNote={mail.attempts > 1 ? `${mail.attempts} tries` : undefined}
