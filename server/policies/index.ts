@@ -36,6 +36,7 @@ export const POLICY: Readonly<Record<string, readonly Role[] | 'public'>> = {
   'coupons.send': ['inspector', 'engineer', 'supervisor'],
   'jobs.read': everyone,
   'jobs.manage': ['engineer', 'supervisor'],
+  'standards.read': everyone,
   'lookup.read': everyone,
   'assessments.run': everyone,
   'today.read': everyone,

@@ -11,10 +11,11 @@ import { peopleRoutes } from './people.ts'
 import { photoRoutes } from './photos.ts'
 import { procedureRoutes } from './procedures.ts'
 import { sessionRoutes } from './session.ts'
+import { standardRoutes } from './standards.ts'
 import { todayRoutes } from './today.ts'
 
 /** Every resource of the API. A new one is a file beside this one and a line here. */
-const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, procedureRoutes, couponRoutes, photoRoutes, jobRoutes, lookupRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
+const resources: readonly ((router: Router, services: Services) => void)[] = [todayRoutes, libraryRoutes, procedureRoutes, couponRoutes, photoRoutes, jobRoutes, lookupRoutes, standardRoutes, assessmentRoutes, peopleRoutes, outboxRoutes]
 
 export function resourceRoutes(router: Router, services: Services, authenticate: Authenticate): void {
   sessionRoutes(router, services, authenticate)

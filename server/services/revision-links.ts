@@ -45,7 +45,8 @@ export async function replaceLinks(tenant: Tenant, revisionId: string, couponIds
 /** A stored coupon as the engine takes it. */
 export const asAssessed = ({ id, number, state, content }: Pick<LinkedCoupon, 'id' | 'number' | 'state' | 'content'>): AssessedCoupon => ({ id, number, certified: state === 'certified', content })
 
-const OFFERED = 20
+/** Newest first; more would only make the answer slow, not the offer better. */
+const OFFERED = 50
 
 /** Certified coupons of the same processes that the revision does not name: offered where one would cure a finding. */
 const otherCoupons = (tenant: Tenant, revision: ProcedureRevision): Promise<LinkedCoupon[]> =>
@@ -55,6 +56,12 @@ const otherCoupons = (tenant: Tenant, revision: ProcedureRevision): Promise<Link
      and not exists (select from revision_coupons l where l.revision_id = $revisionId and l.coupon_id = c.id) order by updated_at desc limit ${OFFERED}`,
     { organizationId: tenant.organizationId, processes: revision.processes, revisionId: revision.id },
   )
+
+/** The newest certified coupons of a process, as the engine takes them. */
+export async function certifiedCoupons(tenant: Tenant, process: string, limit: number): Promise<AssessedCoupon[]> {
+  const found = await rows<LinkedCoupon>(tenant, "select id, number, title, state, content from coupons where organization_id = $organizationId and state = 'certified' and processes && array[$process]::text[] order by updated_at desc, id limit $limit", { organizationId: tenant.organizationId, process, limit })
+  return found.map(asAssessed)
+}
 
 /** The revision judged by its coupons under each standard that it names. */
 export async function assessRevision(tenant: Tenant, revision: ProcedureRevision): Promise<Assessment[]> {

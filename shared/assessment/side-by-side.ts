@@ -1,11 +1,11 @@
 /** One coupon judged under every standard that the program keeps, variable by variable, side by side. */
 import { fieldLabel, fieldPattern } from '../comparison/fields.ts'
-import type { AssessedCoupon, Basis, CouponQualification, QualifiedRange } from '../schemas/assessment.ts'
+import type { AssessedCoupon, Basis, CouponQualification, QualifiedRange, QualifiedSpan, Segment } from '../schemas/assessment.ts'
 import type { StandardId } from '../schemas/common.ts'
 import type { SideBySide, SideCell, SideRow } from '../schemas/standards.ts'
 import type { Process, ProcessBlock } from '../schemas/welding.ts'
 import { weakest } from '../standards/common/rule-kinds.ts'
-import { capital, list, showSpan } from '../standards/common/wording.ts'
+import { capital, list, show, showSpan } from '../standards/common/wording.ts'
 import { standards as registered } from '../standards/index.ts'
 import type { Rule, Standard } from '../standards/rule.ts'
 import { qualifyCoupon } from './assess.ts'
@@ -46,6 +46,7 @@ const VARIABLES: readonly (readonly [variable: string, label: string, fields: Re
   ['heatInput', 'Heat input', /^processes\.\*\.electrical\.heatInput/],
   ['tungsten', 'Tungsten electrode', /^processes\.\*\.electrical\.tungsten/],
   ['technique', 'Technique', /^processes\.\*\.technique/],
+  ['level', 'Test level', /^standards/],
   ['toughness', 'Toughness and hardness', /^(toughnessRequired|impact|hardness)/],
 ]
 
@@ -82,7 +83,24 @@ export function qualifyUnderAll(coupon: AssessedCoupon, standards: readonly Stan
   })
 }
 
-const unknownIn = ({ range }: QualifiedRange): boolean => (range.type === 'set' ? range.unknown && !range.any && range.values.length === 0 : range.segments.some(({ lower, upper }) => lower.kind === 'unknown' || upper.kind === 'unknown'))
+const isKnown = ({ lower, upper }: Segment): boolean => lower.kind !== 'unknown' && upper.kind !== 'unknown'
+/** Nothing of the range can be told. */
+const allUnknown = ({ range }: QualifiedRange): boolean => (range.type === 'set' ? range.unknown && !range.any && range.values.length === 0 : range.segments.length > 0 && !range.segments.some((segment) => isKnown(segment) || 'value' in segment.lower || 'value' in segment.upper))
+
+/** A range in words; what of it can't be told is said, never left out. */
+function inWords(range: QualifiedSpan): string {
+  if (range.type === 'set') return range.any ? 'every value' : `${showSpan(range)}${range.unknown && range.values.length > 0 ? '; whether others too can\'t be told' : ''}`
+  const [only] = range.segments
+  const fromNothing = only && (only.lower.kind === 'unlimited' || (range.dimension !== 'temperature' && 'value' in only.lower && only.lower.value === 0))
+  if (range.segments.length === 1 && fromNothing && only.upper.kind === 'unlimited') return 'every value'
+  const told = range.segments.map((segment) => {
+    const { lower, upper } = segment
+    if (isKnown(segment)) return showSpan({ ...range, segments: [segment] })
+    if ('value' in lower) return `above ${show(lower.value, range.unit)} can't be told`
+    return 'value' in upper ? `below ${show(upper.value, range.unit)} can't be told` : 'the rest can\'t be told'
+  })
+  return told.join('; ')
+}
 
 /** Rules of a standard for one variable and process in an edition. */
 const rulesAt = (standard: Standard, edition: string, process: Process, variable: string): Rule[] =>
@@ -101,8 +119,11 @@ function cellOf({ coupon, standard, under, block, variable }: Asked): SideCell {
   const rules = rulesAt(standard, edition, process, variable)
   const basisOf = (bases: readonly Basis[]): Basis | null => (bases.length > 0 ? bases.reduce(weakest) : null)
   if (ranges.length > 0) {
-    const told = ranges.map((range) => (ranges.length === 1 ? showSpan(range.range) : `${range.label || fieldLabel(range.field)}: ${showSpan(range.range)}`))
-    const lacking = ranges.filter(unknownIn)
+    const told = ranges.map((range) => {
+      const words = allUnknown(range) ? 'can\'t be told' : inWords(range.range)
+      return ranges.length === 1 ? words : `${range.label || fieldLabel(range.field)}: ${words}`
+    })
+    const lacking = ranges.filter(allUnknown)
     const more = { clause: list([...new Set(ranges.map(({ clause }) => clause))]), basis: basisOf(ranges.map(({ basis }) => basis)), ranges, missing: lacking.map(({ reason }) => reason) }
     return lacking.length === ranges.length ? cell('cannot-tell', capital(lacking.map(({ reason }) => reason).join(' ')), more) : cell('range', capital(told.join('; ')), more)
   }
@@ -110,16 +131,16 @@ function cellOf({ coupon, standard, under, block, variable }: Asked): SideCell {
   const clause = list([...new Set(rules.map(({ meta }) => meta.clause))])
   const basis = basisOf(rules.map(({ meta }) => meta.basis))
   const classes = rules.map(({ meta }) => meta.classes[process])
-  if (classes.every((own) => own === 'nonessential')) return cell('not-limited', 'Nonessential: the procedure states its own value, and no coupon limits it.', { clause, basis })
+  if (classes.every((own) => own === 'nonessential')) return cell('no-range', 'Nonessential: the procedure states its own value, and no coupon limits it.', { clause, basis })
   const toughness = coupon.content.variables.toughnessRequired === true || coupon.content.toughness.length > 0
   const essential = classes.includes('essential')
-  if (!toughness && !essential) return cell('not-limited', 'Counts only where toughness is required; this coupon has no toughness tests.', { clause, basis })
+  if (!toughness && !essential) return cell('no-range', 'Counts only where toughness is required, and then a coupon without toughness tests, as this one, does not cover it.', { clause, basis })
   const missing = qualification.missing.filter(({ field }) => variableOf(field.replace(/^variables\./, '')) === variable).map(({ message }) => message)
   if (missing.length > 0) return cell('cannot-tell', `Can't be told: ${missing.join(' ')}`, { clause, basis, missing })
   // Rules that give this coupon no range: they judge the procedure when it is written, or do not arise for such a weld.
   return rules.every(({ meta }) => meta.withoutCoupon || meta.classes[process] === 'nonessential')
-    ? cell('not-limited', 'Judged on the procedure itself; a coupon gives no range for it.', { clause, basis })
-    : cell('not-limited', 'Does not arise for a weld such as this coupon; judged when a procedure asks for it.', { clause, basis })
+    ? cell('no-range', 'Judged on the procedure itself; a coupon gives no range for it.', { clause, basis })
+    : cell('no-range', 'Does not arise for a weld such as this coupon; judged when a procedure asks for it.', { clause, basis })
 }
 
 /**

@@ -3,10 +3,11 @@
  * `action` is what the policies decide on; `public` actions need no sign-in.
  */
 import { z } from 'zod'
-import { assessmentRequestSchema, assessmentSchema } from './assessment.ts'
-import { idSchema, listQuery, pageOf, textOrNull } from './common.ts'
+import { assessedCouponSchema, assessmentRequestSchema, assessmentSchema } from './assessment.ts'
+import { idSchema, listQuery, pageOf, standardIdSchema, textOrNull } from './common.ts'
 import * as people from './people.ts'
 import * as records from './records.ts'
+import * as standards from './standards.ts'
 import { couponContentSchema, procedureContentSchema, processSchema } from './welding.ts'
 
 export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete'
@@ -84,6 +85,7 @@ export const endpoints = {
   discardRevision: endpoint({ method: 'delete', path: '/revisions/:id', action: 'procedures.draft', tag: 'Procedures', summary: 'Discard a draft that was never approved', params: byId, ifMatch: true }),
   assessRevision: endpoint({ method: 'get', path: '/revisions/:id/assessment', action: 'procedures.read', tag: 'Procedures', summary: 'The revision judged by its coupons, under each of its standards', params: byId, response: records.revisionAssessmentSchema }),
   compareRevision: endpoint({ method: 'get', path: '/revisions/:id/comparison', action: 'procedures.read', tag: 'Procedures', summary: 'What changed since the approved revision, or since `against`', params: byId, query: z.object({ against: idSchema.optional() }), response: records.comparisonSchema }),
+  impactOfRevision: endpoint({ method: 'get', path: '/revisions/:id/impact', action: 'procedures.read', tag: 'Procedures', summary: 'Each change since the approved revision, or since `against`: its class, and whether the coupons still cover it', params: byId, query: z.object({ against: idSchema.optional() }), response: standards.revisionImpactsSchema }),
   submitRevision: endpoint({ method: 'post', path: '/revisions/:id/submission', action: 'procedures.submit', tag: 'Procedures', summary: 'Send a draft for review', params: byId, response: records.revisionSchema, ifMatch: true }),
   returnRevision: endpoint({ method: 'post', path: '/revisions/:id/return', action: 'procedures.approve', tag: 'Procedures', summary: 'Return to the author with a comment', params: byId, body: z.object({ comment: z.string().trim().min(1, 'Say what should change.').max(4000) }).meta({ id: 'ReturnRevision' }), response: records.revisionSchema, ifMatch: true }),
   approveRevision: endpoint({ method: 'post', path: '/revisions/:id/approval', action: 'procedures.approve', tag: 'Procedures', summary: 'Approve by signature; a reason is needed where findings are outside or cannot be told', params: byId, body: signing.extend({ deviationReason: textOrNull(2000) }).meta({ id: 'ApproveRevision' }), response: records.revisionSchema, ifMatch: true }),
@@ -96,6 +98,8 @@ export const endpoints = {
   readCoupon: endpoint({ method: 'get', path: '/coupons/:id', action: 'coupons.read', tag: 'Coupons', summary: 'One coupon, whole', params: byId, response: records.couponSchema }),
   saveCoupon: endpoint({ method: 'put', path: '/coupons/:id', action: 'coupons.record', tag: 'Coupons', summary: 'Save a coupon; 409 with both versions when somebody else saved first', params: byId, body: z.object({ content: couponContentSchema }).meta({ id: 'SaveCoupon' }), response: records.couponSchema, ifMatch: true }),
   qualifyCoupon: endpoint({ method: 'get', path: '/coupons/:id/qualification', action: 'coupons.read', tag: 'Coupons', summary: 'Specimens asked for, results judged, what is missing, what it qualifies', params: byId, response: records.couponQualificationsSchema }),
+  qualifyUnderAllStandards: endpoint({ method: 'get', path: '/coupons/:id/standards', action: 'coupons.read', tag: 'Coupons', summary: 'What the coupon qualifies under every standard kept here, side by side', params: byId, response: standards.sideBySideSchema }),
+  listCertifiedCoupons: endpoint({ method: 'get', path: '/certified-coupons', action: 'coupons.read', tag: 'Coupons', summary: 'Certified coupons of a process, newest first, whole, to judge a procedure by', query: z.object({ process: processSchema, limit: z.coerce.number().int().min(1).max(50).default(50) }), response: z.object({ items: z.array(assessedCouponSchema) }) }),
   certifyCoupon: endpoint({ method: 'post', path: '/coupons/:id/certification', action: 'coupons.certify', tag: 'Coupons', summary: 'Certify the record by signature', params: byId, body: signing.meta({ id: 'CertifyCoupon' }), response: records.couponSchema, ifMatch: true }),
   rejectCoupon: endpoint({ method: 'post', path: '/coupons/:id/rejection', action: 'coupons.certify', tag: 'Coupons', summary: 'Reject the coupon by signature, with the reason', params: byId, body: signing.extend({ reason: z.string().trim().min(1, 'Say why it is rejected.').max(2000) }).meta({ id: 'RejectCoupon' }), response: records.couponSchema, ifMatch: true }),
   printCoupon: endpoint({ method: 'get', path: '/coupons/:id/document', action: 'coupons.read', tag: 'Coupons', summary: 'The qualification record as PDF; signed once certified', params: byId, query: paper, binary: 'application/pdf', status: 200 }),
@@ -111,6 +115,9 @@ export const endpoints = {
   createJob: endpoint({ method: 'post', path: '/jobs', action: 'jobs.manage', tag: 'Jobs', summary: 'Open a job', body: records.writeJobSchema, response: records.jobSchema, status: 201 }),
   readJob: endpoint({ method: 'get', path: '/jobs/:id', action: 'jobs.read', tag: 'Jobs', summary: 'A job and its joints', params: byId, response: records.jobSchema }),
   saveJob: endpoint({ method: 'put', path: '/jobs/:id', action: 'jobs.manage', tag: 'Jobs', summary: 'Save a job and its joints', params: byId, body: records.writeJobSchema, response: records.jobSchema, ifMatch: true }),
+
+  listStandards: endpoint({ method: 'get', path: '/standards', action: 'standards.read', tag: 'Standards', summary: 'Standards whose rules are kept here', response: z.object({ items: z.array(standards.standardRowSchema) }) }),
+  readStandard: endpoint({ method: 'get', path: '/standards/:id', action: 'standards.read', tag: 'Standards', summary: 'Every rule of a standard, and what is out of its scope here', params: z.object({ id: standardIdSchema }), response: standards.standardDetailSchema }),
 
   lookUp: endpoint({ method: 'get', path: '/lookup', action: 'lookup.read', tag: 'Look-up', summary: 'Approved procedures for a joint, best first, with reasons', query: records.lookupQuerySchema, response: records.lookupResultSchema }),
   assess: endpoint({ method: 'post', path: '/assessments', action: 'assessments.run', tag: 'Assessments', summary: 'Judge a procedure by its coupons under a standard, storing nothing', body: assessmentRequestSchema, response: assessmentSchema }),

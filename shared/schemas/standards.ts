@@ -66,7 +66,7 @@ export type RevisionImpacts = z.infer<typeof revisionImpactsSchema>
 export const sideCellSchema = z
   .object({
     standard: standardIdSchema,
-    state: z.enum(['range', 'cannot-tell', 'not-limited', 'not-a-variable']),
+    state: z.enum(['range', 'cannot-tell', 'no-range', 'not-a-variable']),
     /** The range in words, or why there is none. */
     words: z.string(),
     clause: z.string().nullable(),

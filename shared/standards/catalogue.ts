@@ -37,8 +37,13 @@ function ruleOf(rule: Rule, processes: readonly Process[]): StandardRule {
   }
 }
 
+/** Rules that bind a process of the standard; one shared with another standard may bind none here, and is not checked then. */
+const binding = ({ rules, processes }: Standard): Rule[] => rules.filter(({ meta }) => processes.some((process) => meta.classes[process] !== undefined))
+
 /** One line of the list of standards, with how many of its rules stand on which basis. */
-export function standardRow({ id, name, shortName, editions, processes, routes, rules }: Standard): StandardRow {
+export function standardRow(standard: Standard): StandardRow {
+  const { id, name, shortName, editions, processes, routes } = standard
+  const rules = binding(standard)
   const bases: Record<Basis, number> = { read: 0, secondary: 0, 'common-practice': 0, memory: 0 }
   for (const { meta } of rules) bases[meta.basis] += 1
   return { id, name, shortName, editions: editions.map((edition) => ({ ...edition })), processes: [...processes], routes: [...(routes ?? ['test' as const])], rules: rules.length, bases }
@@ -49,5 +54,5 @@ export const standardDetail = (standard: Standard): StandardDetail => ({
   ...standardRow(standard),
   outOfScope: [...standard.outOfScope],
   certification: { ...standard.certification },
-  ruleList: standard.rules.map((rule) => ruleOf(rule, standard.processes)),
+  ruleList: binding(standard).map((rule) => ruleOf(rule, standard.processes)),
 })

@@ -43,6 +43,7 @@ const expected: Record<EndpointName, string> = {
   discardRevision: 'e',
   assessRevision: ALL,
   compareRevision: ALL,
+  impactOfRevision: ALL,
   submitRevision: 'e',
   returnRevision: 's',
   approveRevision: 's',
@@ -55,6 +56,8 @@ const expected: Record<EndpointName, string> = {
   readCoupon: ALL,
   saveCoupon: 'i',
   qualifyCoupon: ALL,
+  qualifyUnderAllStandards: ALL,
+  listCertifiedCoupons: ALL,
   certifyCoupon: 'is',
   rejectCoupon: 'is',
   printCoupon: ALL,
@@ -70,6 +73,9 @@ const expected: Record<EndpointName, string> = {
   createJob: 'es',
   readJob: ALL,
   saveJob: 'es',
+
+  listStandards: ALL,
+  readStandard: ALL,
 
   lookUp: ALL,
   assess: ALL,

@@ -1,10 +1,13 @@
 /** The two shapes that most variables have: a name that must be covered, and a figure that must lie inside a range. */
-import { containsInterval, nearest, outerEnds } from '../../ranges/numeric.ts'
+import { containsInterval } from '../../ranges/numeric.ts'
 import { containsNames, setRange, UNKNOWN_SET } from '../../ranges/set.ts'
 import type { Basis, Fix, NumericRange, QualifiedSpan } from '../../schemas/assessment.ts'
+import type { ProcessBlock, WeldingVariables } from '../../schemas/welding.ts'
 import { quantity } from '../../units/convert.ts'
 import type { Dimension } from '../../units/types.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext, RuleMeta, RuleRange, RuleVerdict } from '../rule.ts'
+import { betterEnd, intervalCures, valueAt } from './cures.ts'
+import { fieldWords, lackWords, pathOfMissing } from './lacking.ts'
 import { cannotTell, capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan, stateFix, verb } from './wording.ts'
 
 /** Full dotted path of a rule's field. */
@@ -33,6 +36,23 @@ export interface NamedSpec {
   setValue?: (name: string) => unknown
   /** What to weld so that the asked names would be covered. */
   plan?: (asked: readonly string[], context: RuleContext) => string
+  /** Paths, beside `field`, of the entries without which a record gives no name; `field` itself where absent or empty. */
+  lacks?: (variables: WeldingVariables, block: ProcessBlock | null) => readonly string[]
+}
+
+/** Entries that are missing, named as `field` is. */
+function lackOf(spec: NamedSpec, variables: WeldingVariables, block: ProcessBlock | null): readonly string[] {
+  const paths = spec.lacks?.(variables, block) ?? []
+  return paths.length > 0 ? paths : [spec.field]
+}
+
+/** The procedure lacks an entry: the first one missing is where the finding stands. */
+function namesNotStated(spec: NamedSpec, context: RuleContext, field: string, joined: QualifiedSpan | null): RuleVerdict {
+  const lacking = lackOf(spec, context.procedure, context.block)
+  if (lacking.length === 1 && lacking[0] === spec.field) return notStated(spec.label, field, { range: joined })
+  const paths = lacking.map((path) => pathOf(context, { at: spec.at, field: path }))
+  const missing = paths.map((path) => `procedure: ${path}`)
+  return cannotTell(`${capital(lackWords(missing))}, so the ${spec.label} can't be judged.`, missing, { field: paths[0], range: joined, fixes: paths.map((path) => stateFix(fieldWords(path), path)) })
 }
 
 /** A variable whose value is a name: covered or not by the names that the coupon covers. */
@@ -47,7 +67,11 @@ export function namedRule(spec: NamedSpec): Rule {
     range(context, side) {
       const value = spec.tested(context, side)
       if (value === undefined) return null
-      if (value === null) return { range: UNKNOWN_SET, tested: null, reason: `${side.coupon.number} does not record the ${spec.label}.`, missing: [`${side.coupon.number}: ${spec.field}`] }
+      if (value === null) {
+        const lacking = lackOf(spec, side.variables, side.block)
+        const missing = lacking.map((path) => `${side.coupon.number}: ${path}`)
+        return { range: UNKNOWN_SET, tested: null, reason: lacking[0] === spec.field ? `${side.coupon.number} does not record the ${spec.label}.` : `${lackWords(missing)}.`, missing }
+      }
       const covered = spec.covers ? spec.covers(value, context, side) : [value]
       return { range: covered === 'any' ? setRange([], { any: true }) : setRange(covered), tested: value, reason: spec.because }
     },
@@ -55,7 +79,7 @@ export function namedRule(spec: NamedSpec): Rule {
       if (spec.applies && !spec.applies(context)) return null
       const field = pathOf(context, spec)
       const asked = spec.asked(context)
-      if (asked === null || asked.length === 0) return notStated(spec.label, field, { range: joined })
+      if (asked === null || asked.length === 0) return namesNotStated(spec, context, field, joined)
       if (joined === null) return isStatedOnly(spec.meta, context) ? { verdict: 'within', sentence: `The procedure states the ${spec.label}; without toughness no coupon limits it.`, asked: [...asked], range: null, tested: [] } : null
       return judgeNames({ spec, display, field, context, sides, joined, asked })
     },
@@ -71,7 +95,7 @@ interface NamesAsked { spec: NamedSpec; display: (name: string) => string; field
 function judgeNames({ spec, display, field, context, sides, joined, asked }: NamesAsked): RuleVerdict {
   if (joined.type !== 'set') throw new TypeError(`${spec.meta.id} compares names`)
   const verdict = containsNames(joined, asked)
-  if (verdict === 'cannot-tell') return couponLacks(spec.label, spec.field, sides, [...asked], joined)
+  if (verdict === 'cannot-tell') return namesNotRecorded({ spec, display, field, context, sides, joined, asked })
   const askedText = list(asked.map(display))
   if (verdict === 'within') return { verdict, sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, reasoning: [spec.because] }
   const { kind } = spec
@@ -80,7 +104,9 @@ function judgeNames({ spec, display, field, context, sides, joined, asked }: Nam
   }
   const covered = joined.values.map(display)
   const fixes: Fix[] = []
-  const first = joined.values[0]
+  // What was welded is the surest cure; a value that is only covered comes after it.
+  const { values } = joined
+  const first = sides.map((side) => spec.tested(context, side)).find((name) => name !== null && name !== undefined && values.includes(name)) ?? values[0]
   if (spec.setValue && first !== undefined) {
     const value = spec.setValue(first)
     if (value !== undefined) fixes.push({ kind: 'set', label: `Set the ${spec.label} to ${display(first)}`, field, value })
@@ -95,6 +121,13 @@ function judgeNames({ spec, display, field, context, sides, joined, asked }: Nam
     fixes,
     reasoning: [spec.because, `Covered: ${showSpan(joined)}. Asked: ${askedText}.`],
   }
+}
+
+/** Coupons that give no name: each with the entries that it lacks. */
+function namesNotRecorded({ spec, context, sides, joined, asked }: NamesAsked): RuleVerdict {
+  const missing = sides.flatMap((side) => (spec.tested(context, side) === null ? lackOf(spec, side.variables, side.block).map((path) => `${side.coupon.number}: ${path}`) : []))
+  if (missing.length === 0 || missing.every((text) => text.endsWith(`: ${spec.field}`))) return couponLacks(spec.label, spec.field, sides, [...asked], joined)
+  return cannotTell(`${lackWords(missing)}, so what is qualified can't be told.`, missing, { asked: [...asked], range: joined })
 }
 
 export interface FigureSpec {
@@ -113,6 +146,8 @@ export interface FigureSpec {
   /** How an end comes about, e.g. `2T`, and the coupon in words, e.g. `10 mm coupon`. */
   how?: (context: RuleContext, side: CouponSide, end: 'lower' | 'upper') => { how: string | null; coupon: string }
   plan?: (asked: { min: number | null; max: number | null }, context: RuleContext) => string
+  /** The set fix where it is neither an interval's nor a single quantity's. */
+  cure?: (context: RuleContext, joined: NumericRange, field: string) => readonly Fix[]
 }
 
 /** A variable whose value is a figure or an interval: it must lie inside the range. */
@@ -140,21 +175,33 @@ export function figureRule(spec: FigureSpec): Rule {
 
 function judgeFigures(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }, field: string): RuleVerdict {
   const verdict = containsInterval(joined, asked)
-  if (verdict === 'cannot-tell') return couponLacks(spec.label, spec.field, sides, asked, joined)
+  if (verdict === 'cannot-tell') return figuresNotKnown(spec, context, sides, joined, asked)
   if (verdict === 'within') {
     return { verdict, sentence: `${capital(showAsked(asked, joined.unit))} lies inside the ${showRange(joined)} that ${names(sides)} ${sides.length > 1 ? 'qualify' : 'qualifies'}.`, asked, range: joined }
   }
   const { sentence, wrong } = miss(spec, context, sides, joined, asked)
-  const fixes: Fix[] = []
-  const ends = spec.ends ?? { min: '.min', max: '.max' }
-  for (const end of wrong) {
-    const value = asked[end]
-    const outer = outerEnds(joined)[end === 'max' ? 'upper' : 'lower']
-    const better = value === null ? ('value' in outer ? outer.value : null) : nearest(joined, value)
-    if (better !== null) fixes.push({ kind: 'set', label: `Set ${spec.label}${asked.min === asked.max || !spec.ends ? '' : ` ${end === 'min' ? 'minimum' : 'maximum'}`} to ${show(better, joined.unit)}`, field: `${field}${ends[end]}`, value: quantity(better, spec.dimension, joined.unit) })
-  }
+  const fixes: Fix[] = spec.cure ? [...spec.cure(context, joined, field)] : spec.ends ? quantityCures(spec, spec.ends, joined, asked, wrong, field) : intervalCures({ label: spec.label, dimension: spec.dimension, field, current: valueAt(context.procedure, field), range: joined, asked, wrong })
   fixes.push({ kind: 'plan-coupon', label: 'Weld a coupon that covers it', requirement: spec.plan ? spec.plan(asked, context) : `A coupon that qualifies ${spec.label} ${showAsked(asked, joined.unit)}.` })
   return { verdict, sentence, asked, range: joined, fixes, reasoning: [`Covered: ${showRange(joined)}. Asked: ${showAsked(asked, joined.unit)}.`] }
+}
+
+/** A field that is one quantity, or holds its ends elsewhere. */
+function quantityCures(spec: FigureSpec, ends: { min: string; max: string }, joined: NumericRange, asked: { min: number | null; max: number | null }, wrong: readonly ('min' | 'max')[], field: string): Fix[] {
+  return wrong.flatMap((end) => {
+    const better = betterEnd(joined, asked, end)
+    return better === null ? [] : [{ kind: 'set' as const, label: `Set ${spec.label}${asked.min === asked.max ? '' : ` ${end === 'min' ? 'minimum' : 'maximum'}`} to ${show(better, joined.unit)}`, field: `${field}${ends[end]}`, value: quantity(better, spec.dimension, joined.unit) }]
+  })
+}
+
+/** Not enough is recorded: exactly what, of which record. */
+function figuresNotKnown(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }): RuleVerdict {
+  const missing = [...new Set(sides.flatMap((side) => spec.range(context, side)?.missing ?? []))]
+  if (missing.length === 0 || missing.every((text) => text.endsWith(`: ${spec.field}`))) return couponLacks(spec.label, spec.field, sides, asked, joined)
+  return cannotTell(`${capital(lackWords(missing))}, so whether ${showAsked(asked, joined.unit)} is qualified can't be told.`, missing, {
+    asked,
+    range: joined,
+    fixes: missing.flatMap((text) => (text.startsWith('procedure: ') ? [stateFix(fieldWords(pathOfMissing(text)), pathOfMissing(text))] : [])),
+  })
 }
 
 /** Which end is outside, and the sentence that says so with the figures. */
