@@ -1,5 +1,7 @@
 /** A coupon by itself: specimens, results, what is missing for certification, and what it qualifies. */
 import type { AssessedCoupon, CouponQualification, QualifiedRange, TestVerdict } from '../../schemas/assessment.ts'
+import { fieldAt } from '../../comparison/fields.ts'
+import { fieldWords, lowerFirst, pathOfMissing } from '../common/lacking.ts'
 import { weakest } from '../common/rule-kinds.ts'
 import { figureOrNull, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
@@ -45,14 +47,17 @@ function formerIssue(coupon: AssessedCoupon, index: number): Missing | null {
 }
 
 /** Essential variables that the coupon doesn't record, from the ranges that can't be told. */
-function missingFromRanges(ranges: readonly (QualifiedRange & { missing: readonly string[] })[], number: string): Missing[] {
+function missingFromRanges(ranges: readonly (QualifiedRange & { missing: readonly string[] })[], { number, content }: AssessedCoupon): Missing[] {
+  const blocks = content.variables.processes
   const missing = new Map<string, Missing>()
   for (const range of ranges) {
     if (range.class !== 'essential' && range.class !== 'supplementary') continue
+    const at = blocks.findIndex(({ id }) => id === range.processId)
     for (const text of range.missing) {
-      const path = text.replace(`${number}: `, '')
-      const field = range.field.startsWith('processes.') && !path.startsWith('thickness') && !path.startsWith('baseMetals') ? `variables.processes.${range.field.split('.')[1] ?? '0'}.${path}` : `variables.${path}`
-      if (!missing.has(field)) missing.set(field, { field, message: `Record what ${range.label} needs.`, clause: range.clause })
+      const path = pathOfMissing(text)
+      const below = fieldAt(path) === null && fieldAt(`processes.*.${path}`) !== null
+      const field = path === 'runSheet' ? path : below ? `variables.processes.${Math.max(0, at)}.${path}` : `variables.${path}`
+      if (!missing.has(field)) missing.set(field, { field, message: `Record the ${fieldWords(text.replace(`${number}: `, ''))}; the range of the ${lowerFirst(range.label)} follows from it.`, clause: range.clause })
     }
   }
   return [...missing.values()]
@@ -122,7 +127,7 @@ export function qualify(coupon: AssessedCoupon, edition: string, level: '1' | '2
     if (issue) missing.push(issue)
   })
   const known = new Set(missing.map(({ field }) => field))
-  for (const row of missingFromRanges(ranges, coupon.number)) if (!known.has(row.field)) missing.push(row)
+  for (const row of missingFromRanges(ranges, coupon)) if (!known.has(row.field)) missing.push(row)
   return { standard: 'asme-ix', edition, specimens, results, missing, readyToCertify: missing.length === 0, ranges: ranges.map(({ missing: _, ...range }) => range) }
 }
 

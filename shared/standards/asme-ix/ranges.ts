@@ -7,6 +7,7 @@ import type { Basis, NumericRange } from '../../schemas/assessment.ts'
 import type { Process, ProcessBlock, WeldingVariables } from '../../schemas/welding.ts'
 import type { UnitSystem } from '../../units/types.ts'
 import { figureOrNull, figures, isStated, single, tidy, unitOf } from '../common/reading.ts'
+import { lacksFigure } from '../common/lacking.ts'
 import { show } from '../common/wording.ts'
 import type { CouponSide, RangeContext } from '../rule.ts'
 import { pNumber, secondMetal } from './members.ts'
@@ -91,6 +92,14 @@ export function couponThickness(side: Pick<CouponSide, 'variables'>, system: Uni
   return matchesA === matchesB ? Math.min(first, second) : matchesA ? first : second
 }
 
+/** Which of the coupon's thicknesses is missing, or is a spread where T must be one figure. */
+export function lacksThickness({ coupon, variables }: Pick<CouponSide, 'coupon' | 'variables'>): string[] {
+  const { thickness, thicknessB } = variables
+  const lacking = single(thickness, 'length', 'SI') === null ? ['thickness'] : []
+  if (isStated(thicknessB) && single(thicknessB, 'length', 'SI') === null) lacking.push('thicknessB')
+  return lacking.map((path) => `${coupon.number}: ${lacksFigure(path === 'thickness' ? thickness : thicknessB, path)}`)
+}
+
 /** Post-weld heat treatment above the upper transformation temperature, or a solution anneal of austenitic or P-No. 10H metal. */
 export function exemptByHeatTreatment(variables: WeldingVariables): boolean | null {
   const { condition } = variables.pwht
@@ -142,7 +151,7 @@ export function baseMetalSpan(context: RangeContext, side: CouponSide, member: M
   const number = side.coupon.number
   if ((procedure ?? side.variables).joint.weld === 'fillet') return filletSpan(context, side, T)
   if (!block?.process || T === null) {
-    return { range: unknownLength(system), tested: null, lower: null, upper: null, how: { lower: null, upper: null }, reason: `${number} has no thickness recorded.`, clause: 'QW-451', basis: 'read', missing: [`${number}: thickness`] }
+    return { range: unknownLength(system), tested: null, lower: null, upper: null, how: { lower: null, upper: null }, reason: `${number} has no single thickness recorded.`, clause: 'QW-451', basis: 'read', missing: lacksThickness(side) }
   }
   const limit = baseMetalLimit(T, block.process, system, isLongitudinal(side))
   const span: BaseMetalSpan = { range: unknownLength(system), tested: T, lower: limit.lower, upper: limit.upper, how: { ...limit.how }, reason: '', clause: limit.clause, basis: limit.basis, missing: [] }
@@ -160,6 +169,9 @@ function uncertainAbove(system: UnitSystem, lower: number, certain: number, poss
   if (possible !== null && possible <= certain) return length(system, lower, possible)
   return { ...sure, segments: [...sure.segments, { lower: closed(lower), upper: { kind: 'unknown' } }] }
 }
+
+/** The procedure's entry whose absence leaves QW-403.9 open. */
+export const lacksPassThickness = ({ procedure, block }: RangeContext): string => `procedure: processes.${Math.max(0, procedure?.processes.findIndex(({ id }) => id === block?.id) ?? 0)}.maxPassThickness`
 
 /** QW-403.9 and QW-403.10. @returns true when the upper end can't be told because a pass thickness isn't recorded */
 function narrow(context: RangeContext, side: CouponSide, block: ProcessBlock, T: number, span: BaseMetalSpan, steps: string[]): boolean {
@@ -182,7 +194,7 @@ function narrow(context: RangeContext, side: CouponSide, block: ProcessBlock, T:
   else if (asked === true) cut('QW-403.9', `The procedure allows a pass thicker than ${show(FIGURES[system].pass, unit)}`)
   else if (own === null || asked === null) {
     if (own === null) span.missing.push(`${side.coupon.number}: maxPassThickness`)
-    if (asked === null) span.missing.push('procedure: maxPassThickness')
+    if (asked === null) span.missing.push(lacksPassThickness(context))
     steps.push(`Whether a pass is thicker than ${show(FIGURES[system].pass, unit)} isn't recorded, so above ${show(tidy(1.1 * T), unit)} (1.1T) it can't be told (QW-403.9).`)
     return true
   }

@@ -30,7 +30,8 @@ export function showRange(range: NumericRange): string {
     range.segments.map(({ lower, upper }) => {
       if (lower.kind === 'unknown' || upper.kind === 'unknown') return 'a range that is not known'
       if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? `any ${range.unit}` : `up to ${show(upper.value, range.unit)}`
-      if (upper.kind === 'unlimited') return `${show(lower.value, range.unit)} and up`
+      if (upper.kind === 'unlimited') return lower.value === 0 ? `any ${range.unit}` : `${show(lower.value, range.unit)} and up`
+      if (lower.value === 0 && upper.value !== 0) return `up to ${show(upper.value, range.unit)}`
       return lower.value === upper.value ? show(lower.value, range.unit) : `${show(lower.value, range.unit)} to ${show(upper.value, range.unit)}`
     }),
   )
@@ -41,7 +42,7 @@ export const showSpan = (span: QualifiedSpan | null): string =>
 
 /** The interval asked, in words. */
 export function showAsked(asked: { min: number | null; max: number | null }, unit: string): string {
-  if (asked.min !== null && asked.max !== null) return asked.min === asked.max ? show(asked.min, unit) : `${show(asked.min, unit)} to ${show(asked.max, unit)}`
+  if (asked.min !== null && asked.max !== null) return asked.min === asked.max ? show(asked.min, unit) : asked.min === 0 ? `up to ${show(asked.max, unit)}` : `${show(asked.min, unit)} to ${show(asked.max, unit)}`
   if (asked.max !== null) return `up to ${show(asked.max, unit)}`
   if (asked.min !== null) return `${show(asked.min, unit)} and up`
   return 'every size'

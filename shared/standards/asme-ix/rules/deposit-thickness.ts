@@ -1,11 +1,12 @@
 /** QW-404.30: deposited weld metal of each process within the t limit of QW-451. */
 import { containsInterval } from '../../../ranges/numeric.ts'
 import { figures, single, tidy, unitOf } from '../../common/reading.ts'
+import { lackWords, lacksFigure } from '../../common/lacking.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, RuleContext } from '../../rule.ts'
 import { meta } from '../meta.ts'
-import { baseMetalLimit, couponThickness, depositLimit, FIGURES, isLongitudinal, lengthRange, rootException, shortCircuitBinds, unknownLength, type Limit } from '../ranges.ts'
+import { baseMetalLimit, couponThickness, depositLimit, FIGURES, isLongitudinal, lacksThickness, lengthRange, rootException, shortCircuitBinds, unknownLength, type Limit } from '../ranges.ts'
 import { askedThickness } from './base-metal-thickness.ts'
 
 /** What the procedure asks of the deposit: its largest figure. */
@@ -54,7 +55,10 @@ export const depositThickness = figureRule({
     const weld = (context.procedure ?? side.variables).joint.weld
     if (weld === 'fillet' || side.variables.joint.weld === 'fillet' || side.block?.filler.added === false) return null
     const limit = deposit(context, side)
-    if (!limit) return { range: unknownLength(context.system), tested: null, reason: `${side.coupon.number} does not record T and t of this process.`, missing: [`${side.coupon.number}: depositThickness`] }
+    if (!limit) {
+      const missing = [...lacksThickness(side), ...(single(side.block?.depositThickness, 'length', context.system) === null ? [`${side.coupon.number}: ${lacksFigure(side.block?.depositThickness, 'depositThickness')}`] : [])]
+      return { range: unknownLength(context.system), tested: null, reason: `${lackWords(missing)}.`, missing }
+    }
     return { range: lengthRange(context.system, 0, limit.upper), tested: limit.t, reason: limit.reason, clause: limit.clause, basis: limit.basis }
   },
   how(context, side, end) {

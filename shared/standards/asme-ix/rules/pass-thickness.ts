@@ -3,11 +3,12 @@ import { between, closed, UNKNOWN, UNLIMITED } from '../../../ranges/numeric.ts'
 import type { NumericRange } from '../../../schemas/assessment.ts'
 import { quantity } from '../../../units/convert.ts'
 import { figures, single, tidy, unitOf } from '../../common/reading.ts'
+import { lackWords } from '../../common/lacking.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext } from '../../rule.ts'
 import { meta } from '../meta.ts'
-import { couponThickness, FIGURES, hasThickPass, lengthRange, unknownLength } from '../ranges.ts'
+import { couponThickness, FIGURES, hasThickPass, lacksPassThickness, lacksThickness, lengthRange, unknownLength } from '../ranges.ts'
 import { askedThickness } from './base-metal-thickness.ts'
 
 /** The thickest base metal asked of either member. */
@@ -42,13 +43,13 @@ const base = figureRule({
     const unit = unitOf('length', system)
     const limit = show(FIGURES[system].pass, unit)
     const { T, coupon, procedure } = passes(context, side)
-    if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
+    if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no single thickness recorded.`, missing: lacksThickness(side) }
     const narrow = tidy(1.1 * T)
     const tested = single({ min: side.block?.maxPassThickness ?? null, max: null, all: false }, 'length', system)
     if (coupon === true || procedure === true) return { range: lengthRange(system, 0, narrow), tested, reason: `${coupon ? `A pass of the coupon is thicker than ${limit}` : `The procedure allows passes thicker than ${limit}`}, so the base metal may be ${show(narrow, unit)} (1.1T) at most.` }
     if (coupon === false && procedure === false) return { range: between('length', unit, closed(0), UNLIMITED), tested, reason: `No pass is thicker than ${limit}, so this clause sets no limit.` }
     const open: NumericRange = { type: 'numeric', dimension: 'length', unit, segments: [{ lower: closed(0), upper: closed(narrow) }, { lower: closed(0), upper: UNKNOWN }] }
-    return { range: open, tested, reason: `Whether a pass is thicker than ${limit} isn't recorded; up to ${show(narrow, unit)} (1.1T) it does not matter.`, missing: [coupon === null ? `${side.coupon.number}: maxPassThickness` : 'procedure: maxPassThickness'] }
+    return { range: open, tested, reason: `Whether a pass is thicker than ${limit} isn't recorded; up to ${show(narrow, unit)} (1.1T) it does not matter.`, missing: [...(coupon === null ? [`${side.coupon.number}: maxPassThickness`] : []), ...(procedure === null ? [lacksPassThickness(context)] : [])] }
   },
   how: (context, side) => ({ how: '1.1T, because a pass is thicker than the limit', coupon: `${show(couponThickness(side, context.system) ?? 0, unitOf('length', context.system))} coupon` }),
 })
@@ -69,11 +70,11 @@ export const passThickness: Rule = {
       return { ...judged, fixes: state.some((s) => s.coupon === false && s.procedure === true) ? [cure, ...fixes] : fixes }
     }
     if (judged.range === null || judged.asked === null) return judged
-    const missing = state.flatMap((s, i) => [...(s.coupon === null && sides[i] ? [`${sides[i].coupon.number}: maxPassThickness`] : []), ...(s.procedure === null ? [`procedure: maxPassThickness`] : [])])
+    const missing = state.flatMap((s, i) => [...(s.coupon === null && sides[i] ? [`${sides[i].coupon.number}: maxPassThickness`] : []), ...(s.procedure === null ? [`procedure: ${field}`] : [])])
     if (missing.length === 0) return judged
     return {
       ...judged,
-      sentence: `Above 1.1 times the coupon thickness it must be known whether any pass is thicker than ${show(limit, unit)}; the pass thickness isn't recorded.`,
+      sentence: `Above 1.1 times the coupon thickness it must be known whether any pass is thicker than ${show(limit, unit)}; ${lackWords([...new Set(missing)])}.`,
       missing: [...new Set(missing)],
       fixes: state.some((s) => s.procedure === null) ? [cure, { kind: 'state', label: 'State the maximum pass thickness', field }] : [],
     }

@@ -3,7 +3,7 @@ import { tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
-import { couponThickness, FIGURES, lengthRange, shortCircuitBinds, unknownLength } from '../ranges.ts'
+import { couponThickness, FIGURES, lacksThickness, lengthRange, shortCircuitBinds, unknownLength } from '../ranges.ts'
 import { askedThickness } from './base-metal-thickness.ts'
 
 export const shortCircuitThickness = figureRule({
@@ -22,7 +22,7 @@ export const shortCircuitThickness = figureRule({
     const { system } = context
     const unit = unitOf('length', system)
     const T = couponThickness(side, system)
-    if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
+    if (T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no single thickness recorded.`, missing: lacksThickness(side) }
     const limit = show(FIGURES[system].pass, unit)
     if (T >= FIGURES[system].pass) return { range: lengthRange(system, 0, null), tested: T, reason: `A coupon of ${limit} or more has no limit by this clause.` }
     return { range: lengthRange(system, 0, tidy(1.1 * T)), tested: T, reason: `Short-circuiting transfer on a coupon under ${limit}: ${show(tidy(1.1 * T), unit)} (1.1T) at most.` }

@@ -7,7 +7,7 @@ import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleRange } from '../../rule.ts'
 import { memberOf } from '../members.ts'
 import { meta } from '../meta.ts'
-import { baseMetalSpan, couponThickness, exemptByHeatTreatment, lengthRange, toughnessFloor, unknownLength, withFloor } from '../ranges.ts'
+import { baseMetalSpan, couponThickness, exemptByHeatTreatment, lacksThickness, lengthRange, toughnessFloor, unknownLength, withFloor } from '../ranges.ts'
 import { askedThickness, memberP } from './base-metal-thickness.ts'
 
 const floorOf = (context: RangeContext, side: CouponSide, which: 'a' | 'b'): { floor: number | null; T: number | null } => {
@@ -22,16 +22,16 @@ function rangeFor(context: RangeContext, side: CouponSide, which: 'a' | 'b'): Ru
   const { system } = context
   const unit = unitOf('length', system)
   const { floor, T } = floorOf(context, side, which)
-  if (floor === null || T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no thickness recorded.`, missing: [`${side.coupon.number}: thickness`] }
+  if (floor === null || T === null) return { range: unknownLength(system), tested: null, reason: `${side.coupon.number} has no single thickness recorded.`, missing: lacksThickness(side) }
   const reason = floor === 0 ? 'The heat treatment after welding takes away the toughness floor.' : `With toughness a ${show(T, unit)} coupon covers no metal under ${show(floor, unit)}.`
   if (side.role === 'toughness-only') return { range: lengthRange(system, floor, null), tested: T, reason }
   const span = baseMetalSpan(context, side, memberOf(context, which), memberP(context, which))
-  if (side.role === 'mechanical' && context.toughness === true) return { range: span.range, tested: T, reason: `${side.coupon.number} carries no toughness tests; its range counts together with a toughness coupon's floor.` }
-  return { range: withFloor(system, span.range, floor === 0 ? null : floor), tested: T, reason }
+  if (side.role === 'mechanical' && context.toughness === true) return { range: span.range, tested: T, reason: `${side.coupon.number} carries no toughness tests; its range counts together with a toughness coupon's floor.`, missing: span.missing }
+  return { range: withFloor(system, span.range, floor === 0 ? null : floor), tested: T, reason, missing: span.missing }
 }
 
 /** Full records stand alone; a mechanical record and a toughness record pair up (QW-401.1): maximum of the one, greater minimum of both. */
-function join(context: RangeContext, sides: readonly CouponSide[], ranges: readonly (RuleRange | null)[]): NumericRange | null {
+function join(which: 'a' | 'b', context: RangeContext, sides: readonly CouponSide[], ranges: readonly (RuleRange | null)[]): NumericRange | null {
   let joined: NumericRange | null = null
   const add = (range: NumericRange): void => {
     joined = joined === null ? range : unionNumeric(joined, range)
@@ -43,7 +43,7 @@ function join(context: RangeContext, sides: readonly CouponSide[], ranges: reado
     if (side.role !== 'mechanical' || context.toughness !== true) return
     sides.forEach((tough) => {
       if (tough.role === 'mechanical') return
-      const { floor } = floorOf(context, tough, 'a')
+      const { floor } = floorOf(context, tough, which)
       if (floor !== null) add(intersectNumeric(own, lengthRange(context.system, floor, null)))
     })
   })
@@ -61,7 +61,7 @@ const build = (which: 'a' | 'b', file: string): Rule =>
     applies: (context) => context.procedure.joint.weld === 'groove' && (which === 'a' || isStated(context.procedure.thicknessB)),
     asked: (context) => askedThickness(context, which),
     range: (context, side) => rangeFor(context, side, which),
-    join,
+    join: (context, sides, ranges) => join(which, context, sides, ranges),
     how(context, side, end) {
       const { T } = floorOf(context, side, which)
       return { how: end === 'lower' ? 'with toughness' : null, coupon: T === null ? 'coupon' : `${show(T, unitOf('length', context.system))} coupon` }

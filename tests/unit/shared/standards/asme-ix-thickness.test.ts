@@ -88,7 +88,7 @@ describe('pass thickness (QW-403.9)', () => {
     const assessment = run(null, 6, 22.1)
     expect(assessment.verdict).toBe('cannot-tell')
     expect(finding(assessment, 'pass-thickness').missing).toEqual(['PQR-001: maxPassThickness'])
-    expect(finding(run(6, null, 30), 'pass-thickness').missing).toEqual(['procedure: maxPassThickness'])
+    expect(finding(run(6, null, 30), 'pass-thickness').missing).toEqual(['procedure: processes.0.maxPassThickness'])
     expect(finding(run(null, null, 41), 'base-metal-thickness').verdict).not.toBe('within')
   })
   test('a deposit of 13 mm can not hold a thicker pass', () => expect(run(6, null, 40, 'SAW', 13).verdict).toBe('within'))
