@@ -1,5 +1,4 @@
 /** The joints of a job as cells that are typed and moved in. Pure. */
-import type { Interval } from '@shared/schemas/common.ts'
 import type { Job, JobJoint } from '@shared/schemas/records.ts'
 import type { BodyOf } from '@shared/schemas/endpoints.ts'
 import { POSITIONS, PROCESSES } from '@shared/schemas/welding.ts'
@@ -61,8 +60,8 @@ export function addJoint(rows: readonly JointRow[], key: string): JointRow[] {
 
 export function cellText(row: JointRow, column: JointColumn, system: UnitSystem): string {
   const value = row[column.id]
-  if (column.kind === 'interval') return intervalText(value as Interval | null, column.dimension, system)
-  return value === null ? '' : String(value as string | number)
+  if (column.kind === 'interval') return intervalText(row[column.id as 'thickness' | 'diameter'], column.dimension, system)
+  return typeof value === 'string' || typeof value === 'number' ? String(value) : ''
 }
 
 /** A joint with one cell typed anew, or what is wrong with the text. */

@@ -30,13 +30,13 @@ export function CouponsPage() {
     () => [
       { id: 'number', header: 'Number', sort: 'number', className: 'whitespace-nowrap', cell: (row) => <span className="font-semibold">{row.number}</span> },
       { id: 'title', header: 'Title', className: 'md:min-w-40', cell: (row) => row.title },
-      { id: 'procedure', header: 'For', className: 'whitespace-nowrap', cell: (row) => row.procedureNumber ?? <Unsaid text="by itself" /> },
+      { id: 'state', header: 'State', cell: (row) => <Stamp small state={row.state} /> },
       { id: 'processes', header: 'Process', cell: (row) => row.processes.join(' + ') || <Unsaid /> },
-      { id: 'metals', header: 'Metals', cell: (row) => row.metals || <Unsaid /> },
+      { id: 'metals', header: 'Metals', className: 'md:min-w-28', cell: (row) => row.metals || <Unsaid /> },
       { id: 'thickness', header: 'Thickness', align: 'right', className: 'whitespace-nowrap', cell: (row) => (row.thickness === null ? <Unsaid /> : units.stored(row.thickness, 'length')) },
       { id: 'positions', header: 'Position', cell: (row) => row.positions.join(', ') || <Unsaid /> },
       { id: 'weldedOn', header: 'Welded', className: 'whitespace-nowrap', cell: (row) => (row.weldedOn ? day(row.weldedOn) : <Unsaid text="not yet" />) },
-      { id: 'state', header: 'State', cell: (row) => <Stamp small state={row.state} /> },
+      { id: 'procedure', header: 'For', className: 'whitespace-nowrap', cell: (row) => row.procedureNumber ?? <Unsaid text="by itself" /> },
       {
         id: 'photos',
         header: 'Photos',

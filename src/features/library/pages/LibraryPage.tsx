@@ -45,7 +45,8 @@ function Kind({ kind }: { kind: LibraryKind }) {
   const fillers = kind === 'filler-metals'
   const list = useInfiniteQuery(listQuery('listLibrary', { params: { kind }, query: { q: q || undefined, process: fillers ? processSchema.safeParse(process).data : undefined, pNumber: p || undefined, fNumber: f || undefined } }))
   const { title, find, about } = KIND_NAMES[kind]
-  const heads = useMemo(() => (list.data?.rows[0] ? factsOf(list.data.rows[0], system).shown.map(({ label }) => label) : []), [list.data?.rows, system])
+  const first = list.data?.rows[0]
+  const heads = useMemo(() => (first ? factsOf(first, system).shown.map(({ label }) => label) : []), [first, system])
   const columns = useMemo<Column<LibraryItem>[]>(
     () => [
       {

@@ -23,8 +23,9 @@ describe('run sheet cells', () => {
   })
   it('says what is wrong, naming pass and cell, and changes nothing', () => {
     const wrong = writeCell(row({ pass: '3' }), columnOf('voltage'), 'twenty', 'SI')
-    expect(wrong).toMatchObject({ ok: false, message: expect.stringMatching(/^Pass 3, volts: "twenty"/) })
-    expect(writeCell(row(), columnOf('current'), '180 V', 'SI')).toMatchObject({ ok: false, message: expect.stringContaining('is a voltage') })
+    expect(wrong.ok ? '' : wrong.message).toMatch(/^Pass 3, volts: "twenty"/)
+    const volts = writeCell(row(), columnOf('current'), '180 V', 'SI')
+    expect(volts.ok ? '' : volts.message).toContain('is a voltage')
     expect(writeCell(row(), columnOf('current'), '190-180', 'SI').ok).toBe(false)
     expect(writePass(row(), '').ok).toBe(false)
   })
