@@ -72,6 +72,16 @@ export function ErrorState({ error, onRetry, compact = false }: { error: unknown
   )
 }
 
+/** A page whose record can't be shown: a head in the place of its title block, then what failed. */
+export function RecordError({ title, ...failed }: { title: string; error: unknown; onRetry: () => void }) {
+  return (
+    <>
+      <PageHead title={title} />
+      <ErrorState {...failed} />
+    </>
+  )
+}
+
 /** Ruled rows in outline, while the real ones come. */
 export function Skeleton({ rows = 6, label = 'Reading' }: { rows?: number; label?: string }) {
   return (

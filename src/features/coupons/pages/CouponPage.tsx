@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
-import { Breadcrumb, ErrorState, Skeleton } from '@/components/states.tsx'
+import { Breadcrumb, RecordError, Skeleton } from '@/components/states.tsx'
 import { useSession } from '@/hooks/session.ts'
 import { couponQuery } from '../api.ts'
 import { ReadingScreen } from '../components/ReadingScreen.tsx'
@@ -16,7 +16,7 @@ export function CouponPage() {
     return (
       <>
         <Breadcrumb trail={[{ label: 'Coupons', to: '/coupons' }, { label: 'Coupon' }]} />
-        <ErrorState error={coupon.error} onRetry={() => void coupon.refetch()} />
+        <RecordError title="The coupon can’t be shown" error={coupon.error} onRetry={() => void coupon.refetch()} />
       </>
     )
   return me && coupon.data.may.includes('save') ? <WorkingScreen key={id} coupon={coupon.data} personId={me} /> : <ReadingScreen key={id} coupon={coupon.data} />

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
-import { Breadcrumb, ErrorState, Skeleton } from '@/components/states.tsx'
+import { Breadcrumb, RecordError, Skeleton } from '@/components/states.tsx'
 import { query } from '@/lib/query.ts'
 import { JobSheet } from '../components/JobSheet.tsx'
 
@@ -12,7 +12,7 @@ export function JobPage() {
   return (
     <>
       <Breadcrumb trail={[{ label: 'Jobs', to: '/jobs' }, { label: job.data?.number ?? 'Job' }]} />
-      {job.isError && !job.data ? <ErrorState error={job.error} onRetry={() => void job.refetch()} /> : job.data && <JobSheet key={job.data.id} job={job.data} />}
+      {job.isError && !job.data ? <RecordError title="The job can’t be shown" error={job.error} onRetry={() => void job.refetch()} /> : job.data && <JobSheet key={job.data.id} job={job.data} />}
     </>
   )
 }

@@ -4,7 +4,7 @@ import { useParams } from 'react-router-dom'
 import { buttonClass } from '@/components/Button.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Stamp } from '@/components/Stamp.tsx'
-import { Breadcrumb, ErrorState, Skeleton } from '@/components/states.tsx'
+import { Breadcrumb, RecordError, Skeleton } from '@/components/states.tsx'
 import { TitleBlock } from '@/components/TitleBlock.tsx'
 import { hrefOf } from '@/lib/api.ts'
 import { fileSize, moment } from '@/lib/figures.ts'
@@ -14,7 +14,7 @@ import { linkParts } from '../links.ts'
 export function MailPage() {
   const { id = '' } = useParams()
   const { data: mail, error, refetch } = useQuery(query('readMail', { params: { id } }))
-  if (error) return <ErrorState error={error} onRetry={() => void refetch()} />
+  if (error) return <RecordError title="The mail can’t be shown" error={error} onRetry={() => void refetch()} />
   if (!mail) return <Skeleton label="Reading the mail" />
   return (
     <div className="mx-auto max-w-4xl">

@@ -12,7 +12,7 @@ import { MarginNote } from '@/components/margin/MarginNote.tsx'
 import { RangeGauge } from '@/components/range-gauge/RangeGauge.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Stamp, type StampState } from '@/components/Stamp.tsx'
-import { Breadcrumb, ErrorState, Skeleton } from '@/components/states.tsx'
+import { Breadcrumb, ErrorState, RecordError, Skeleton } from '@/components/states.tsx'
 import { say } from '@/components/toast.tsx'
 import { VerdictTally } from '@/components/Verdict.tsx'
 import { useSession } from '@/hooks/session.ts'
@@ -33,7 +33,7 @@ export function ReviewPage() {
   const comparison = useQuery(comparisonQuery(id))
   const assessed = useQuery(assessmentQuery(id))
   if (revision.isPending) return <Skeleton rows={10} label="Reading the procedure" />
-  if (!revision.data) return <ErrorState error={revision.error} onRetry={() => void revision.refetch()} />
+  if (!revision.data) return <RecordError title="The procedure can’t be shown" error={revision.error} onRetry={() => void revision.refetch()} />
   if (revision.data.state !== 'in-review') return <Navigate replace to={`/revisions/${id}`} />
   const { content, coupons } = revision.data
   const assessments = assessed.data?.assessments ?? []
