@@ -25,10 +25,10 @@ export async function openBrowser(): Promise<Browser> {
 
 /**
  * A fresh browser profile on the product under test, signed out unless it starts from another's state.
- * `bypassCSP` lets axe be injected; service workers are off unless a test is about them.
+ * `bypassCSP` lets axe be injected, so a test of the policy itself turns it off; service workers are off unless a test is about them.
  */
-export const openContext = (browser: Browser, { width = widths[0], height = 900, serviceWorkers = 'block' }: { width?: number; height?: number; serviceWorkers?: 'allow' | 'block' } = {}, storageState?: Awaited<ReturnType<BrowserContext['storageState']>>): Promise<BrowserContext> =>
-  browser.newContext({ ...(storageState ? { storageState } : {}), baseURL: inject('baseUrl'), viewport: { width, height }, bypassCSP: true, serviceWorkers, acceptDownloads: true, hasTouch: width < 500, reducedMotion: 'reduce' })
+export const openContext = (browser: Browser, { width = widths[0], height = 900, serviceWorkers = 'block', bypassCSP = true }: { width?: number; height?: number; serviceWorkers?: 'allow' | 'block'; bypassCSP?: boolean } = {}, storageState?: Awaited<ReturnType<BrowserContext['storageState']>>): Promise<BrowserContext> =>
+  browser.newContext({ ...(storageState ? { storageState } : {}), baseURL: inject('baseUrl'), viewport: { width, height }, bypassCSP, serviceWorkers, acceptDownloads: true, hasTouch: width < 500, reducedMotion: 'reduce' })
 
 const axeFile = createRequire(import.meta.url).resolve('axe-core/axe.min.js')
 
@@ -39,7 +39,7 @@ const axeFile = createRequire(import.meta.url).resolve('axe-core/axe.min.js')
 export async function axe(page: Page): Promise<string[]> {
   if (!(await page.evaluate(() => 'axe' in window))) await page.addScriptTag({ path: axeFile })
   const results = await page.evaluate(() =>
-    (window as unknown as { axe: { run: (options: object) => Promise<AxeResults> } }).axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'] }),
+    (window as unknown as { axe: { run: (options: object) => Promise<AxeResults> } }).axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'], resultTypes: ['violations'] }),
   )
   return results.violations.map((violation) => `${violation.id}: ${violation.help} — ${violation.nodes.map((node) => node.target.join(' ')).join(' | ')}`)
 }

@@ -16,6 +16,8 @@ export interface Stage {
   browser: () => Browser
   /** A page of its own, signed in as the demo firm's person of that role, or of that address; the sign-in is made once a file. */
   as: (who: Who, look?: Look) => Promise<Page>
+  /** A page of its own, signed in with an address and a password that are not the demo firm's. */
+  with: (email: string, secret: string, look?: Look) => Promise<Page>
   /** A page of its own, signed out. */
   stranger: (look?: Look) => Promise<Page>
 }
@@ -43,9 +45,9 @@ export function useStage(): Stage {
     context.setDefaultTimeout(PATIENCE)
     return context.newPage()
   }
-  const signedIn = async (email: string): Promise<State> => {
+  const signedIn = async (email: string, secret = password()): Promise<State> => {
     const context = await openContext(open())
-    const answer = await context.request.post('/api/session', { data: { email, password: password() } })
+    const answer = await context.request.post('/api/session', { data: { email, password: secret } })
     if (!answer.ok()) throw new Error(`Signing in as ${email} answered ${answer.status()}: ${await answer.text()}`)
     const state = await context.storageState()
     await context.close()
@@ -63,6 +65,7 @@ export function useStage(): Stage {
       states.set(email, state)
       return pageIn(await openContext(open(), look, await state))
     },
+    with: async (email, secret, look) => pageIn(await openContext(open(), look, await signedIn(email, secret))),
     stranger: async (look) => pageIn(await openContext(open(), look)),
   }
 }
