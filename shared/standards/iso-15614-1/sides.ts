@@ -12,8 +12,8 @@ export function testThickness(variables: WeldingVariables): number | null {
   const second = siSingle(variables.thicknessB, 'length')
   if (first === null || second === null) return null
   const { joint } = variables
-  if (joint.branch === 'set-on' || (joint.type === 'tee' && joint.weld === 'groove')) return first
   if (joint.branch === 'set-in' || joint.branch === 'set-through') return second
+  if (joint.branch === 'set-on' || (joint.type === 'tee' && joint.weld === 'groove')) return first
   return Math.min(first, second)
 }
 

@@ -53,13 +53,13 @@ export const fillerDesignation = nameBandRule({
   covers(value, context, side) {
     const own = side.block && designation(side.block.filler)
     const asked = context.block && designation(context.block.filler)
-    if (!own || !asked) return { sure: value }
+    if (!own || !asked || side.block?.filler.added === false) return { sure: value }
     const askedName = (context.block && nameOf(context.block.filler)) ?? ''
     const sameKey = own.key === asked.key
     const drier = own.hydrogen === null || (asked.hydrogen !== null && asked.hydrogen <= own.hydrogen)
     if (sameKey && drier) return { sure: [...value, askedName] }
     if (sameKey && asked.hydrogen === null) return { sure: value, maybe: [askedName], why: `The coupon's filler is H${own.hydrogen ?? ''}; the hydrogen of the one asked isn't stated.`, missing: ['procedure: filler.classification (with its hydrogen symbol)'] }
-    if (own.key.replace('I1', '') === asked.key.replace('I1', '')) return { sure: value, maybe: [askedName], why: 'The designations differ only in the suffix for impact values; whether the mechanical properties count as equivalent is for a person to judge.' }
+    if (!sameKey && own.key.replace('I1', '') === asked.key.replace('I1', '')) return { sure: value, maybe: [askedName], why: 'The designations differ only in the suffix for impact values; whether the mechanical properties count as equivalent is for a person to judge.' }
     if (levelOf(context) === '1') return { sure: value, maybe: 'any', why: 'Level 1 groups fillers by a table of its annex that is not held here.', clause: '8.4.4 Annex A' }
     if (own.system !== asked.system) return { sure: value, maybe: [askedName], why: 'The designations are of different systems and can\'t be compared here.', missing: ['procedure: filler.classification (in the system of the coupon)'] }
     return { sure: value }

@@ -1,8 +1,10 @@
 /** 8.4.2: welding position; any covers any at level 1, and at level 2 where neither impact nor hardness is required, save downwards. */
+import { setRange } from '../../../ranges/set.ts'
 import type { AssessedCoupon } from '../../../schemas/assessment.ts'
 import { DOWNWARD, hasHardnessTests, hasImpactTests, isoPositions } from '../../common/iso-names.ts'
 import { nameBandRule, type NameBand } from '../../common/review-band.ts'
-import type { RangeContext } from '../../rule.ts'
+import { list } from '../../common/wording.ts'
+import type { CouponSide, RangeContext, Rule, RuleContext, RuleVerdict } from '../../rule.ts'
 import { levelOf } from '../levels.ts'
 import { meta } from '../meta.ts'
 
@@ -30,8 +32,8 @@ function covers(tested: readonly string[], context: RangeContext, coupon: Assess
   if (impact !== true && hardness !== true) {
     return { sure: tested, maybe: free, why: 'Every position but the downward ones is covered where neither impact nor hardness is required, which isn\'t stated.', missing: [...(impact === null ? ['procedure: toughnessRequired'] : []), ...(hardness === null ? ['procedure: hardnessRequired'] : [])] }
   }
-  const high = tested.includes(HIGH)
-  const low = tested.includes(LOW)
+  const high = tested.includes(HIGH) && hasImpactTests(coupon.content)
+  const low = tested.includes(LOW) && hasHardnessTests(coupon.content)
   const both = tested.some((position) => BOTH.includes(position))
   const enough = (impact !== true || high) && (hardness !== true || low)
   if (enough && impact !== null && hardness !== null) return { sure: free, basis: 'secondary' }
@@ -39,7 +41,19 @@ function covers(tested: readonly string[], context: RangeContext, coupon: Assess
   return { sure: tested, maybe: free, basis: 'secondary', why: `Other positions are covered only with ${wanted}${both ? '; a fixed pipe can supply both, if the specimens were taken there' : ''}.`, missing: [...(impact === null ? ['procedure: toughnessRequired'] : []), ...(hardness === null ? ['procedure: hardnessRequired'] : []), 'which position of the test had the highest and which the lowest heat input'] }
 }
 
-export const position = nameBandRule({
+/** Where one coupon has the highest heat input with impact tests and another the lowest with hardness tests, they cover the rest together. */
+function together(context: RuleContext, sides: readonly CouponSide[]): RuleVerdict | null {
+  const { block, procedure } = context
+  if (sides.length < 2 || !block || levelOf(context) === '1' || context.toughness !== true || procedure.hardnessRequired !== true) return null
+  const asked = isoPositions(procedure, block)
+  const has = (symbol: string, tested: (content: AssessedCoupon['content']) => boolean): CouponSide | undefined => sides.find((side) => side.block && isoPositions(side.variables, side.block)?.includes(symbol) && tested(side.coupon.content))
+  const high = has(HIGH, hasImpactTests)
+  const low = has(LOW, hasHardnessTests)
+  if (!asked || !high || !low || !asked.every((symbol) => UPWARD.includes(symbol))) return null
+  return { verdict: 'within', sentence: `${list(asked)} is covered: ${high.coupon.number} was tested for impact in ${HIGH} and ${low.coupon.number} for hardness in ${LOW}.`, asked, range: setRange(UPWARD), basis: 'secondary' }
+}
+
+const base = nameBandRule({
   meta: meta('position', { title: 'Welding position', clause: '8.4.2', basis: 'memory', combine: 'jointly', statement: 'Level 1: any position covers all. Level 2: any covers all but PG, PJ and J-L045 where neither impact nor hardness is required; with impact the specimens come from the position of highest heat input, with hardness from the lowest, usually PF and PC on plate.' }),
   field: 'positions',
   at: 'block',
@@ -50,3 +64,5 @@ export const position = nameBandRule({
   because: 'Downward positions need their own test; with impact or hardness the highest and lowest heat input decide.',
   lacks: () => ['positions', 'progression'],
 })
+
+export const position: Rule = { ...base, check: (context, sides, joined) => together(context, sides) ?? base.check(context, sides, joined) }
