@@ -9,7 +9,7 @@ export function PassTable({ passes }: { passes: readonly Pass[] }) {
   const columns = PASS_COLUMNS.filter(({ id }) => id === 'number' || passes.some((pass) => pass[id] !== null))
   return (
     // A table wider than a phone scrolls sideways, so it must be reachable by keyboard.
-    <div className="overflow-x-auto" role="region" aria-label="Passes" tabIndex={0}>
+    <div className="overflow-x-auto" role="group" aria-label="Passes" tabIndex={0}>
       <table className="w-full text-left">
         <thead>
           <tr className="border-b border-ink text-soft">

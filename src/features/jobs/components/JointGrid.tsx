@@ -104,7 +104,7 @@ export function JointGrid({ rows, onChange, onAssign, saved }: JointGridProps) {
                     <Tag>{row.procedureNumber ?? 'assigned'}</Tag>
                   </Link>
                 )}
-                <Button kind="quiet" aria-label={`${row.revisionId ? 'Other procedures' : 'Find procedures'} for joint ${row.number}`} aria-expanded={asking === row.key} icon={<Search size={14} aria-hidden="true" />} onClick={() => setAsking(asking === row.key ? null : row.key)}>
+                <Button kind="quiet" aria-label={`${row.revisionId ? 'Others' : 'Find procedures'} for joint ${row.number}`} aria-expanded={asking === row.key} icon={<Search size={14} aria-hidden="true" />} onClick={() => setAsking(asking === row.key ? null : row.key)}>
                   {row.revisionId ? 'Others' : 'Find procedures'}
                 </Button>
               </div>
