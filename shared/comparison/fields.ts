@@ -56,6 +56,7 @@ const variables: readonly Field[] = [
     ['impactTemperature', 'Impact test temperature', 'quantity', 'temperature'],
     ['impactEnergy', 'Impact energy required', 'quantity', 'energy'],
     ['hardnessRequired', 'Hardness required', 'boolean'],
+    ['serviceTemperature', 'Service temperature', 'quantity', 'temperature'],
     ['product', 'Product', 'choice'],
   ]),
   ...section('Joint', 'joint.', [

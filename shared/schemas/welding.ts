@@ -240,6 +240,8 @@ export const weldingVariablesSchema = z
     impactTemperature: quantitySchema.nullable().optional(),
     impactEnergy: quantitySchema.nullable().optional(),
     hardnessRequired: z.boolean().nullable().optional(),
+    /** Highest temperature in service where it is high for the metal. */
+    serviceTemperature: quantitySchema.nullable().optional(),
     product: z.enum(['plate', 'pipe', 'plate-and-pipe']).default('plate'),
     joint: jointSchema.prefault({}),
     baseMetals: z.object({ a: baseMetalSchema.prefault({}), b: baseMetalSchema.prefault({}) }).prefault({}),
