@@ -1,6 +1,5 @@
 // @vitest-environment jsdom
 import { act, configure, fireEvent, screen, waitFor, within } from '@testing-library/react'
-import userEvent from '@testing-library/user-event'
 import { describe, expect, it, vi } from 'vitest'
 import type { Coupon, Photo } from '@shared/schemas/records.ts'
 import { couponContentSchema, type CouponContent } from '@shared/schemas/welding.ts'
@@ -31,6 +30,18 @@ const content = (more: object = {}): CouponContent =>
   })
 const coupon = (more: Partial<Coupon> = {}): Coupon => ({ id: ID, number: 'PQR-009', state: 'welding', revisionId: null, procedureId: null, procedureNumber: null, inspector: { id: ids.me, name: 'Hal Ostby' }, version: 4, createdAt: '2026-11-01T08:00:00Z', updatedAt: '2026-11-02T08:00:00Z', content: content(), signatures: [], contentSha256: 'a'.repeat(64), may: ['save', 'photograph', 'reject'], ...more })
 const inspector = session(['coupons.read', 'coupons.record', 'coupons.certify'], { roles: ['inspector'] })
+/** A field by selector: asking by label walks the whole page, which is large, once for every field. */
+const box = (selector: string): HTMLInputElement => {
+  const found = document.querySelector<HTMLInputElement>(selector)
+  if (!found) throw new Error(`no field ${selector}`)
+  return found
+}
+/** Types into a field and leaves it. */
+const fill = (selector: string, text: string) => {
+  fireEvent.change(box(selector), { target: { value: text } })
+  fireEvent.blur(box(selector))
+}
+const cell = (name: string) => `[aria-label="Pass 1, ${name}"]`
 const open = (record: Coupon, more: Parameters<typeof mockApi>[0] = {}) => {
   const seen = mockApi({ [`GET /api/coupons/${ID}`]: { body: record }, [`GET /api/coupons/${ID}/photos`]: { body: { items: [] } }, [`PUT /api/coupons/${ID}`]: ({ body }) => ({ body: { ...record, version: record.version + 1, content: (body as { content: CouponContent }).content } }), ...more })
   showRoutes(createRoutes, { as: inspector, path: `/coupons/${ID}` })
@@ -40,49 +51,45 @@ const open = (record: Coupon, more: Parameters<typeof mockApi>[0] = {}) => {
 describe('coupon page', () => {
   it('computes heat input beside the pass and follows what is typed', async () => {
     open(coupon())
-    const pass = within(await screen.findByRole('listitem', { name: 'Pass 1' }))
+    const pass = within(await waitFor(() => box('[aria-label="Pass 1"]')))
     // 24 V × 100 A × 60 / 150 mm/min = 960 J/mm
     expect(pass.getByText('0.96')).toBeDefined()
     expect(pass.getByText(/Travel 150 mm\/min from length and arc time/)).toBeDefined()
-    const amps = pass.getByLabelText('Pass 1, amps')
-    await userEvent.clear(amps)
-    await userEvent.type(amps, '200{Tab}')
+    fill(cell('amps'), '200')
     expect(await pass.findByText('1.92')).toBeDefined()
-    await userEvent.clear(pass.getByLabelText('Pass 1, volts'))
-    await userEvent.tab()
+    fill(cell('volts'), '')
     expect(await pass.findByText(/Heat input needs voltage/)).toBeDefined()
   })
   it('saves by itself with the version last read, and keeps a cell that cannot be read', async () => {
     const seen = open(coupon())
-    const welder = await screen.findByLabelText('Welder')
-    await userEvent.type(welder, 'Anya Brook')
-    await waitFor(() => expect(seen.some(({ method }) => method === 'PUT')).toBe(true), { timeout: 4000 })
+    await waitFor(() => box('#row-welder'))
+    fill('#row-welder', 'Anya Brook')
+    await waitFor(() => expect(seen.some(({ method }) => method === 'PUT')).toBe(true), { timeout: 8000 })
     const put = seen.find(({ method }) => method === 'PUT')
     expect(put?.headers.get('if-match')).toBe('"4"')
     expect((put?.body as { content: CouponContent }).content.welder).toBe('Anya Brook')
-    const interpass = screen.getByLabelText<HTMLInputElement>('Pass 1, interpass')
-    await userEvent.type(interpass, 'warm{Tab}')
+    const interpass = box(cell('interpass'))
+    fill(cell('interpass'), 'warm')
     expect(interpass.value).toBe('warm')
     expect(await screen.findByText(/"warm" is not a temperature/)).toBeDefined()
   })
   it('judges a specimen as it is typed, and says what is missing with a way to the field', async () => {
     open(coupon())
-    await userEvent.click(await screen.findByRole('button', { name: 'Tension specimen' }))
-    await userEvent.type(screen.getByLabelText('Width, mm'), '19{Tab}')
-    await userEvent.type(screen.getByLabelText('Thickness, mm'), '10{Tab}')
-    await userEvent.type(screen.getByLabelText('Ultimate load, kN'), '95{Tab}')
-    const note = within(await screen.findByRole('article', { name: 'Accepted: T1' }))
+    fireEvent.click(await screen.findByText('Tension specimen'))
+    fill('#row-tension-0-width', '19')
+    fill('#row-tension-0-thickness', '10')
+    fill('#row-tension-0-load', '95')
+    const note = within(await waitFor(() => box('[aria-label="Accepted: T1"]')))
     expect(note.getByText(/T1 reached 500 MPa/)).toBeDefined()
-    const missing = screen.getByRole('button', { name: 'Name the welder who welded the coupon.', hidden: true })
-    await userEvent.click(missing)
-    expect(document.activeElement).toBe(screen.getByLabelText('Welder'))
+    fireEvent.click(screen.getByText('Name the welder who welded the coupon.'))
+    expect(document.activeElement).toBe(box('#row-welder'))
   })
   it('is only read once it is certified', async () => {
     open(coupon({ state: 'certified', may: ['send'] }))
     expect((await screen.findAllByText('10 mm plate, 3G')).length).toBeGreaterThan(0)
-    expect(screen.queryByRole('textbox')).toBeNull()
-    expect(screen.queryByRole('button', { name: 'Certify' })).toBeNull()
-    expect(screen.getByRole('button', { name: 'E-mail' })).toBeDefined()
+    expect(document.querySelector('#row-welder')).toBeNull()
+    expect(screen.queryByText('Certify')).toBeNull()
+    expect(screen.getByText('E-mail')).toBeDefined()
   })
 })
 
@@ -112,11 +119,11 @@ describe('photos', () => {
     }
     vi.stubGlobal('XMLHttpRequest', Sent)
     open(coupon())
-    const input = await screen.findByLabelText<HTMLInputElement>('Choose photos or papers')
+    const input = await waitFor(() => box('[aria-label="Choose photos or papers"]'))
     fireEvent.change(input, { target: { files: [new File(['x'], 'notes.jpg', { type: 'image/jpeg' }), new File(['y'], 'cap.jpg', { type: 'image/jpeg' })] } })
     expect(await screen.findByText(/notes\.jpg is named \.jpg but is PDF inside/)).toBeDefined()
-    expect(await screen.findByRole('button', { name: 'Look at cap.jpg' })).toBeDefined()
-    await userEvent.click(screen.getByRole('button', { name: 'Dismiss notes.jpg' }))
+    expect(await waitFor(() => box('[aria-label="Look at cap.jpg"]'))).toBeDefined()
+    fireEvent.click(box('[aria-label="Dismiss notes.jpg"]'))
     expect(screen.queryByText(/is PDF inside/)).toBeNull()
   })
 })
