@@ -19,6 +19,8 @@ export interface Column<Row> {
   hidden?: boolean
   /** Always shown; the first column always is. */
   fixed?: boolean
+  /** Left out between a phone and a desk, where every column would be squeezed. */
+  wideOnly?: boolean
   /** Classes of the cell, e.g. a width. */
   className?: string
 }
@@ -59,9 +61,19 @@ export function DataTable<Row extends object>({ caption, columns, rows, rowKey, 
     () => helper.columns(columns.map((column) => helper.display({ id: column.id, header: column.header, cell: ({ row }) => column.cell(row.original), enableHiding: !column.fixed }))),
     [helper, columns],
   )
-  const table = useTable({ features, columns: definitions, data: rows, getRowId: rowKey, state: { columnVisibility: visibility }, onColumnVisibilityChange: (next) => setVisibility(typeof next === 'function' ? next(visibility) : next) })
+  const table = useTable({
+    features,
+    columns: definitions,
+    data: rows,
+    getRowId: rowKey,
+    state: { columnVisibility: visibility },
+    onColumnVisibilityChange: (next) => setVisibility(typeof next === 'function' ? next(visibility) : next),
+  })
   const byId = new Map(columns.map((column) => [column.id, column]))
-  const shown = table.getVisibleLeafColumns().map((column) => byId.get(column.id)).filter((column) => column !== undefined)
+  const shown = table
+    .getVisibleLeafColumns()
+    .map((column) => byId.get(column.id))
+    .filter((column) => column !== undefined)
   const first = shown[0]?.id
   const hideable = columns.filter((column, index) => index > 0 && !column.fixed)
 
@@ -83,43 +95,54 @@ export function DataTable<Row extends object>({ caption, columns, rows, rowKey, 
     <div>
       <div className="relative border border-rule bg-sheet max-md:border-x-0">
         {hideable.length > 0 && <ColumnChoice columns={hideable} visibility={visibility} onChange={setVisibility} />}
-        <table role="table" aria-label={caption} className="w-full border-collapse text-left max-md:block">
-          <thead role="rowgroup" className="max-md:sr-only">
-            <tr role="row" className="border-b border-ink">
-              {shown.map((column) => (
-                <Heading key={column.id} column={column} sort={sort} onSort={onSort} last={column === shown.at(-1) && hideable.length > 0} />
-              ))}
-            </tr>
-          </thead>
-          <tbody ref={body} role="rowgroup" className="max-md:block" onKeyDown={move}>
-            {table.getRowModel().rows.map((row) => (
-              <tr key={row.id} role="row" onClick={(event) => open(event, row.original)} className={`border-b border-hair last:border-b-0 max-md:block max-md:px-4 max-md:py-3 ${rowHref ? 'cursor-pointer hover:bg-paper' : ''}`}>
-                {row.getVisibleCells().map((cell) => {
-                  const column = byId.get(cell.column.id)
-                  const head = cell.column.id === first
-                  return (
-                    <td key={cell.id} role="cell" className={`px-4 py-2.5 align-top max-md:px-0 ${head ? 'max-md:block max-md:pt-0 max-md:pb-1 max-md:text-lg' : 'max-md:flex max-md:items-baseline max-md:gap-3 max-md:py-0.5'} ${column?.align === 'right' ? 'md:text-right' : ''} ${column?.className ?? ''}`}>
-                      {!head && (
-                        <span className="w-28 shrink-0 text-sm text-soft md:hidden" aria-hidden="true">
-                          {column?.header}
-                        </span>
-                      )}
-                      <div className="min-w-0 grow">
-                        {head && rowHref ? (
-                          <Link to={rowHref(row.original)} data-row-link className="font-semibold hover:underline">
-                            <table.FlexRender cell={cell} />
-                          </Link>
-                        ) : (
-                          <table.FlexRender cell={cell} />
-                        )}
-                      </div>
-                    </td>
-                  )
-                })}
+        <div className="md:overflow-x-auto">
+          <table role="table" aria-label={caption} className="w-full border-collapse text-left max-md:block">
+            <thead role="rowgroup" className="max-md:sr-only">
+              <tr role="row" className="border-b border-ink">
+                {shown.map((column) => (
+                  <Heading key={column.id} column={column} sort={sort} onSort={onSort} last={column === shown.at(-1) && hideable.length > 0} />
+                ))}
               </tr>
-            ))}
-          </tbody>
-        </table>
+            </thead>
+            <tbody ref={body} role="rowgroup" className="max-md:block" onKeyDown={move}>
+              {table.getRowModel().rows.map((row) => (
+                <tr
+                  key={row.id}
+                  role="row"
+                  onClick={(event) => open(event, row.original)}
+                  className={`border-b border-hair last:border-b-0 max-md:block max-md:px-4 max-md:py-3 ${rowHref ? 'cursor-pointer hover:bg-paper' : ''}`}
+                >
+                  {row.getVisibleCells().map((cell) => {
+                    const column = byId.get(cell.column.id)
+                    const head = cell.column.id === first
+                    return (
+                      <td
+                        key={cell.id}
+                        role="cell"
+                        className={`px-4 py-2.5 align-top max-md:px-0 ${head ? 'max-md:block max-md:pt-0 max-md:pb-1 max-md:text-lg' : 'max-md:flex max-md:items-baseline max-md:gap-3 max-md:py-0.5'} ${column?.align === 'right' ? 'md:text-right' : ''} ${column?.wideOnly ? 'md:max-xl:hidden' : ''} ${column?.className ?? ''}`}
+                      >
+                        {!head && (
+                          <span className="w-28 shrink-0 text-sm text-soft md:hidden" aria-hidden="true">
+                            {column?.header}
+                          </span>
+                        )}
+                        <div className="min-w-0 grow">
+                          {head && rowHref ? (
+                            <Link to={rowHref(row.original)} data-row-link className="font-semibold hover:underline">
+                              <table.FlexRender cell={cell} />
+                            </Link>
+                          ) : (
+                            <table.FlexRender cell={cell} />
+                          )}
+                        </div>
+                      </td>
+                    )
+                  })}
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
       </div>
       {(onMore || total !== undefined) && (
         <div className="no-print mt-3 flex items-center gap-4 text-soft">
@@ -145,7 +168,12 @@ function Heading<Row>({ column, sort, onSort, last }: { column: Column<Row>; sor
   const down = by !== undefined && sort === `-${by}`
   const label = <span className="cell-label text-inherit!">{column.header}</span>
   return (
-    <th role="columnheader" scope="col" aria-sort={up ? 'ascending' : down ? 'descending' : undefined} className={`px-4 py-2 align-bottom font-normal whitespace-nowrap ${up || down ? 'text-ink' : 'text-soft'} ${column.align === 'right' ? 'text-right' : ''} ${last ? 'pr-14' : ''}`}>
+    <th
+      role="columnheader"
+      scope="col"
+      aria-sort={up ? 'ascending' : down ? 'descending' : undefined}
+      className={`px-4 py-2 align-bottom font-normal whitespace-nowrap ${up || down ? 'text-ink' : 'text-soft'} ${column.align === 'right' ? 'text-right' : ''} ${last ? 'pr-14' : ''} ${column.wideOnly ? 'md:max-xl:hidden' : ''}`}
+    >
       {by && onSort ? (
         <button type="button" className="inline-flex items-center gap-1 hover:text-ink" onClick={() => onSort(up ? `-${by}` : by)}>
           {label}

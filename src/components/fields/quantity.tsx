@@ -1,10 +1,22 @@
-import { useId, useState } from 'react'
+import { useEffect, useEffectEvent, useId, useState } from 'react'
 import type { Interval, Quantity } from '@shared/schemas/common.ts'
 import { SHOWN_UNIT, fromSi } from '@shared/units/convert.ts'
 import { formatQuantity } from '@shared/units/format.ts'
 import { parseInterval, parseQuantity } from '@shared/units/parse.ts'
 import type { Dimension, UnitSystem } from '@shared/units/types.ts'
 import { Field, FieldError, type FieldProps } from './Field.tsx'
+
+/** ms without a key after which a text that can be read already counts, so that what follows from it is seen before the field is left. */
+const REST = 500
+
+/** Runs `read` once typing has rested. Nothing is said of a text that can't be read yet: that waits until the field is left. */
+function useRested(text: string, read: () => void): void {
+  const rested = useEffectEvent(read)
+  useEffect(() => {
+    const timer = setTimeout(() => rested(), REST)
+    return () => clearTimeout(timer)
+  }, [text])
+}
 
 interface Measured extends FieldProps {
   dimension: Dimension
@@ -27,7 +39,9 @@ function textOf(quantity: Quantity | null, dimension: Dimension, system: UnitSys
   const { si, unit, typed } = quantity
   const shown = SHOWN_UNIT[system][dimension]
   const text = /±|\+\s*\/?\s*[-−]/.test(typed) ? `${fromSi(si, dimension, unit)} ${unit}` : typed
-  return text.endsWith(shown) && unit === shown ? text.slice(0, -shown.length).trim() : text
+  if (unit === shown) return text.endsWith(shown) ? text.slice(0, -shown.length).trim() : text
+  // A bare figure typed by somebody who reads the other system: without its unit it would be read as this one's.
+  return /^[\d\s.,/-]+$/.test(text) ? `${text} ${unit}` : text
 }
 const key = (quantity: Quantity | null): string => (quantity ? `${quantity.si} ${quantity.unit} ${quantity.typed}` : '')
 
@@ -68,10 +82,13 @@ export function QuantityField({ value, onChange, dimension, system, onUnread, er
     if (text === textOf(value, dimension, system)) return say(null)
     const reading = parseQuantity(text, dimension, system)
     say(reading.ok ? null : reading.message)
-    if (!reading.ok) return
+    if (!reading.ok || key(reading.quantity) === key(value)) return
     setSeen(key(reading.quantity))
     onChange(reading.quantity)
   }
+  useRested(text, () => {
+    if (text.trim() !== '' && parseQuantity(text, dimension, system).ok) read()
+  })
   const { label, labelHidden, optional, className, id, ...input } = rest
   return (
     <Field {...{ label, labelHidden, optional, className, id }} error={unread ?? error ?? null} description={converted(value, dimension, system) ?? description}>
@@ -133,6 +150,21 @@ export function IntervalField({ value, onChange, dimension, system, onUnread, er
     if (both.interval.all && !allowAll) return fail(side, `${label}: "all" does not apply here. Write a figure, or a range like 18-22.`)
     keep(both.interval, textsOf(both.interval, dimension, system))
   }
+
+  useRested(texts.join(' | '), () => {
+    const was = textsOf(shown, dimension, system)
+    if (shown.all || (texts[0] === was[0] && texts[1] === was[1])) return
+    const end = (side: 0 | 1): Quantity | null | undefined => {
+      const text = texts[side].trim()
+      // An end that nobody touched stays what it is, in whatever unit it was typed.
+      if (texts[side] === was[side]) return side === 0 ? shown.min : shown.max
+      const reading = text === '' ? null : parseQuantity(text, dimension, system)
+      return reading?.ok ? reading.quantity : undefined
+    }
+    const [min, max] = [end(0), end(1)]
+    if (min === undefined || max === undefined || (min && max && min.si > max.si)) return
+    keep({ min, max, all: false }, texts)
+  })
 
   const message = unread[0] ?? unread[1] ?? error ?? null
   const note = [converted(shown.min, dimension, system), converted(shown.max, dimension, system)].filter((part) => part !== null).join(' to ').replace('to = ', 'to ')

@@ -9,6 +9,7 @@ export const revisionQuery = (id: string) => query('readRevision', { params: { i
 export const procedureQuery = (id: string) => query('readProcedure', { params: { id } })
 export const couponQuery = (id: string) => query('readCoupon', { params: { id } })
 export const comparisonQuery = (id: string) => query('compareRevision', { params: { id } })
+export const impactQuery = (id: string) => query('impactOfRevision', { params: { id } })
 export const assessmentQuery = (id: string) => query('assessRevision', { params: { id } })
 
 /** Coupons by number or title, for linking. */
@@ -23,7 +24,7 @@ export function useRevisionActs(revision: Pick<Revision, 'id' | 'procedureId' | 
   const { id } = revision
   const settle = (next?: Revision) => {
     if (next) client.setQueryData(revisionQuery(next.id).queryKey, next)
-    for (const name of ['listProcedures', 'readProcedure', 'readToday', 'compareRevision', 'assessRevision']) void client.invalidateQueries({ queryKey: [name] })
+    for (const name of ['listProcedures', 'readProcedure', 'readToday', 'compareRevision', 'impactOfRevision', 'assessRevision']) void client.invalidateQueries({ queryKey: [name] })
   }
   const params = { id }
   return {

@@ -89,7 +89,7 @@ export function NewProcedurePage() {
               <Select label="Edition" options={editions} value={chosen} onChange={(event) => setEdition(event.target.value)} />
               <Select label="Written in" options={UNIT_SYSTEMS} value={system} onChange={(event) => setSystem(event.target.value === 'US' ? 'US' : 'SI')} />
             </div>
-            <TagPicker label="Processes" description="In the order in which they are welded; each gets its own sheets." options={PROCESS_OPTIONS as { value: Process; label: string }[]} value={processes} onChange={setProcesses} />
+            <TagPicker label="Processes" description="Each gets its own sheets; their order can be changed there." options={PROCESS_OPTIONS as { value: Process; label: string }[]} value={processes} onChange={setProcesses} />
             <div className="grid gap-4 sm:grid-cols-2">
               {picked(a, setA, 'Metal A', 'Its P-Number and groups come with it.')}
               {picked(b, setB, 'Metal B', 'Left empty: the same as A.')}

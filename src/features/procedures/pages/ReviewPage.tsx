@@ -4,10 +4,12 @@ import { Link, Navigate, useNavigate, useParams } from 'react-router-dom'
 import { revisionName, statementOf } from '@shared/records/statements.ts'
 import type { Finding } from '@shared/schemas/assessment.ts'
 import type { Comparison, Revision } from '@shared/schemas/records.ts'
+import type { RevisionImpacts } from '@shared/schemas/standards.ts'
 import { Button, buttonClass } from '@/components/Button.tsx'
 import { Dialog } from '@/components/Dialog.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
 import { TextArea, TextField } from '@/components/fields/text.tsx'
+import { ImpactTable } from '@/components/impact/ImpactTable.tsx'
 import { MarginNote } from '@/components/margin/MarginNote.tsx'
 import { RangeGauge } from '@/components/range-gauge/RangeGauge.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
@@ -19,7 +21,7 @@ import { useSession } from '@/hooks/session.ts'
 import { useUnits } from '@/hooks/units.ts'
 import { hrefOf } from '@/lib/api.ts'
 import { asProblem } from '@/lib/problem.ts'
-import { assessmentQuery, comparisonQuery, revisionQuery, useRevisionActs } from '../api.ts'
+import { assessmentQuery, comparisonQuery, impactQuery, revisionQuery, useRevisionActs } from '../api.ts'
 import { ProcedureTitle } from '../components/ProcedureTitle.tsx'
 import { nameOf } from '../dialogs/acts.tsx'
 import { blocking, gaugeOf, needing } from '@/components/variables/findings.ts'
@@ -31,6 +33,7 @@ export function ReviewPage() {
   const { id = '' } = useParams()
   const revision = useQuery(revisionQuery(id))
   const comparison = useQuery(comparisonQuery(id))
+  const impact = useQuery(impactQuery(id))
   const assessed = useQuery(assessmentQuery(id))
   if (revision.isPending) return <Skeleton rows={10} label="Reading the procedure" />
   if (!revision.data) return <RecordError title="The procedure can’t be shown" error={revision.error} onRetry={() => void revision.refetch()} />
@@ -76,7 +79,8 @@ export function ReviewPage() {
           <Sheet title="What changed" aside={comparison.data?.from ? `since rev ${comparison.data.from.revision}` : undefined}>
             {comparison.isPending && <p role="status" className="px-4 py-3 text-soft">Comparing…</p>}
             {comparison.isError && <ErrorState compact error={comparison.error} onRetry={() => void comparison.refetch()} />}
-            {comparison.data && <Changes comparison={comparison.data} id={id} />}
+            {comparison.data && <Changes comparison={comparison.data} impacts={impact.data?.impacts ?? []} id={id} />}
+            {impact.isError && <ErrorState compact error={impact.error} onRetry={() => void impact.refetch()} />}
           </Sheet>
           <Sheet title="Coupons" aside={coupons.length === 0 ? 'none linked' : `${coupons.length} linked`}>
             {coupons.length === 0 ? (
@@ -114,7 +118,8 @@ function FindingWithGauge({ finding, couponNumber }: { finding: Finding; couponN
   )
 }
 
-function Changes({ comparison: { from, changes }, id }: { comparison: Comparison; id: string }) {
+/** What changed; under each of its standards, what that means. */
+function Changes({ comparison: { from, changes }, impacts, id }: { comparison: Comparison; impacts: RevisionImpacts['impacts']; id: string }) {
   if (!from)
     return (
       <p className="px-4 py-3">
@@ -122,6 +127,7 @@ function Changes({ comparison: { from, changes }, id }: { comparison: Comparison
       </p>
     )
   if (changes.length === 0) return <p className="px-4 py-3">Nothing differs from the approved revision.</p>
+  if (impacts.length > 0) return impacts.map((impact) => <ImpactTable key={`${impact.standard} ${impact.edition}`} impact={impact} name={standardName(impact.standard)} />)
   return (
     <dl>
       {changes.map(({ field, label, before, after }) => (

@@ -1,4 +1,4 @@
-import { useQueries, useQuery } from '@tanstack/react-query'
+import { useQueries } from '@tanstack/react-query'
 import { useDeferredValue, useMemo } from 'react'
 import { assess } from '@shared/assessment/assess.ts'
 import type { AssessedCoupon, Assessment } from '@shared/schemas/assessment.ts'
@@ -7,10 +7,10 @@ import type { ProcedureContent } from '@shared/schemas/welding.ts'
 import { query } from '@/lib/query.ts'
 import { couponQuery } from '../api.ts'
 
-/** Coupons looked at beyond those linked, to offer one that would cure a finding. */
-const OTHERS = 12
-
 const asAssessed = (coupon: Coupon): AssessedCoupon => ({ id: coupon.id, number: coupon.number, certified: coupon.state === 'certified', content: coupon.content })
+
+/** Coupons of several processes stand in several lists, and are one coupon. */
+const joined = (results: readonly { data?: { items: AssessedCoupon[] } | undefined }[]): AssessedCoupon[] => [...new Map(results.flatMap(({ data }) => data?.items ?? []).map((coupon) => [coupon.id, coupon])).values()]
 
 export interface Judged {
   assessments: Assessment[]
@@ -26,17 +26,16 @@ export interface Judged {
 export function useAssessment(content: ProcedureContent, offer: boolean): Judged {
   const ids = content.supportingCoupons
   const linked = useQueries({ queries: ids.map((id) => ({ ...couponQuery(id), staleTime: 60_000 })), combine: (results) => ({ coupons: results.flatMap(({ data }) => (data ? [data] : [])), reading: results.some(({ isPending }) => isPending) }) })
-  const list = useQuery({ ...query('listCoupons', { query: { state: 'certified', limit: OTHERS } }), enabled: offer, staleTime: 60_000 })
-  const otherIds = offer ? (list.data?.items ?? []).map(({ id }) => id).filter((id) => !ids.includes(id)) : []
-  const others = useQueries({ queries: otherIds.map((id) => ({ ...couponQuery(id), staleTime: 300_000 })), combine: (results) => results.flatMap(({ data }) => (data ? [data] : [])) })
+  const processes = [...new Set(content.variables.processes.flatMap(({ process }) => process ?? []))]
+  const stored = useQueries({ queries: processes.map((process) => ({ ...query('listCertifiedCoupons', { query: { process } }), enabled: offer, staleTime: 300_000 })), combine: joined })
 
   // Typing comes first: the verdicts follow when there is time.
   const judged = useDeferredValue(content)
   const assessments = useMemo(() => {
     const coupons = linked.coupons.map(asAssessed)
-    const otherCoupons = others.map(asAssessed)
+    const otherCoupons = stored.filter(({ id }) => !judged.supportingCoupons.includes(id))
     return judged.variables.standards.map(({ standard, edition, level, route }) => assess({ procedure: judged, coupons, standard, edition, level, route, otherCoupons }))
-  }, [judged, linked.coupons, others])
-  const numbers = useMemo(() => new Map([...linked.coupons, ...others].map(({ id, number }) => [id, number])), [linked.coupons, others])
+  }, [judged, linked.coupons, stored])
+  const numbers = useMemo(() => new Map([...linked.coupons, ...stored].map(({ id, number }) => [id, number])), [linked.coupons, stored])
   return { assessments, reading: linked.reading, couponNumber: (id) => numbers.get(id) }
 }

@@ -206,3 +206,31 @@ describe('plain fields', () => {
     expect(screen.getByRole('button', { name: '3G' }).getAttribute('aria-pressed')).toBe('true')
   })
 })
+
+describe('a figure that is still being typed', () => {
+  it('counts once typing has rested, without leaving the field', async () => {
+    const heard = vi.fn()
+    show(<OneInterval heard={heard} start={interval(18, 22, 'voltage')} />)
+    await userEvent.clear(boxes()[1])
+    await userEvent.type(boxes()[1], '24')
+    await waitFor(() => expect(heard.mock.lastCall?.[0]).toMatchObject({ min: { si: 18 }, max: { si: 24 } }), { timeout: 4000 })
+    expect(document.activeElement).toBe(boxes()[1])
+  })
+  it('is not taken while it runs the wrong way or can’t be read', async () => {
+    const heard = vi.fn()
+    show(<OneInterval heard={heard} start={interval(18, 22, 'voltage')} />)
+    await userEvent.clear(boxes()[1])
+    await userEvent.type(boxes()[1], '2')
+    await new Promise((resolve) => setTimeout(resolve, 800))
+    expect(heard).not.toHaveBeenCalled()
+    expect(screen.queryByText(/above the upper/)).toBeNull()
+  })
+  it('is never read anew in another system than it was typed in', async () => {
+    const heard = vi.fn()
+    show(<IntervalField label="Thickness" dimension="length" system="US" value={{ min: { si: 18, unit: 'mm', typed: '18' }, max: null, all: false }} onChange={heard} />)
+    expect(screen.getByRole<HTMLInputElement>('textbox', { name: 'Thickness, from' }).value).toBe('18 mm')
+    await userEvent.type(screen.getByRole('textbox', { name: 'Thickness, to' }), '1')
+    await waitFor(() => expect(heard).toHaveBeenCalled(), { timeout: 4000 })
+    expect(heard.mock.lastCall?.[0]).toMatchObject({ min: { si: 18, unit: 'mm' }, max: { si: 25.4, unit: 'in' } })
+  })
+})
