@@ -82,7 +82,7 @@ export function apiPage(document: Document): string {
   )
   const tags = (document.tags ?? []).map(({ name }) => `<section><h2>${escaped(name)}</h2>${operations.filter(({ tag }) => tag === name).map(({ html }) => html).join('')}</section>`)
   const schemas = Object.entries(named).map(([name, schema]) => `<details><summary><code>${escaped(name)}</code></summary><div id="${escaped(name)}">${fieldsOf(schema, {})}</div></details>`)
-  return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>Sidebend: API</title><style>${style}</style></head>
+  return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>Sidebend: API</title><link rel="icon" type="image/svg+xml" href="/mark.svg"><style>${style}</style></head>
 <body><header><h1>Sidebend API</h1><p>${prose(document.info.description ?? '')}</p><p>All addresses begin with <code>/api</code>. The same as data: <a href="/api/openapi.json">openapi.json</a> (OpenAPI ${document.openapi}).</p></header>
 <main>${tags.join('')}<section><h2>Shapes</h2>${schemas.join('')}</section></main></body></html>`
 }
