@@ -83,7 +83,7 @@ const ROWS: readonly Row[] = [
 
 /** One rule a row, for the standard that asks for the contents of ISO 15609-1. */
 export const wpsContents = (standard: StandardId, editions: RuleMeta['editions'], processes: readonly Process[]): readonly Rule[] =>
-  ROWS.map((row) => ({
+  ROWS.filter((row) => !row.processes || row.processes.some((process) => processes.includes(process))).map((row) => ({
     meta: {
       id: `${standard}/${row.file}`,
       title: capital(row.label),

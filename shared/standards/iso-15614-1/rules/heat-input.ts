@@ -64,7 +64,7 @@ const upperBase = bandRule({
   },
   band(context, side) {
     // A coupon without impact tests does not widen what one with them has shown.
-    if (context.procedure && context.toughness === true && !hasImpactTests(side.coupon.content) && context.coupons.some((coupon) => coupon.id !== side.coupon.id && hasImpactTests(coupon.content) && coupon.content.variables.processes.some((block) => block.process === side.block?.process))) return null
+    if (context.procedure && context.toughness === true && !hasImpactTests(side.coupon.content) && context.coupons.some((coupon) => coupon.id !== side.coupon.id && hasImpactTests(coupon.content) && coupon.content.variables.processes.some((block) => block.process === side.block?.process))) return { sure: nothing, maybe: nothing, tested: null, reason: `${side.coupon.number} has no impact tests, and another linked coupon has.` }
     return energyBand(context, side, (had, factor) => {
       const one = levelOf(context) === '1'
       const low = tidy((one ? 1 : 1.25) * had.mean * factor.least)
