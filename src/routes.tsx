@@ -10,13 +10,14 @@ import { routes as lookupRoutes, shopRoutes } from '@/features/lookup/routes.tsx
 import { routes as outboxRoutes } from '@/features/outbox/routes.tsx'
 import { routes as peopleRoutes } from '@/features/people/routes.tsx'
 import { routes as procedureRoutes } from '@/features/procedures/routes.tsx'
+import { routes as standardRoutes } from '@/features/standards/routes.tsx'
 import { routes as todayRoutes } from '@/features/today/routes.tsx'
 import { NotFound, RouteError } from '@/shell/ErrorPage.tsx'
 import { Bare, Shell } from '@/shell/Shell.tsx'
 import { anyone, signedIn } from '@/shell/guard.ts'
 
 /** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
-const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...jobRoutes, ...lookupRoutes, ...libraryRoutes]
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...jobRoutes, ...lookupRoutes, ...libraryRoutes, ...standardRoutes]
 
 /** Pages without the bar, for people who are signed in: the shop view. */
 const shop: RouteObject[] = [...shopRoutes]

@@ -12,6 +12,7 @@ const PLACES = [
   { to: '/coupons', label: 'Coupons', action: 'coupons.read' },
   { to: '/jobs', label: 'Jobs', action: 'jobs.read' },
   { to: '/library', label: 'Library', action: 'library.read' },
+  { to: '/standards', label: 'Standards', action: 'standards.read' },
   { to: '/people', label: 'People', action: 'people.read' },
   { to: '/outbox', label: 'Outbox', action: 'outbox.read' },
 ] as const

@@ -1,14 +1,23 @@
-import type { Basis, Finding, Fix } from '@shared/schemas/assessment.ts'
-import { boundsInWords } from '../range-gauge/words.ts'
+import { Link } from 'react-router-dom'
+import type { Finding, Fix } from '@shared/schemas/assessment.ts'
+import { askedInWords, boundsInWords } from '../range-gauge/words.ts'
+import { BASIS_SENTENCE as BASIS, rulePath } from '../standards/words.ts'
 import { CLASS_WORD, VERDICT_WORD, VerdictMark } from '../Verdict.tsx'
 
-const BASIS: Record<Basis, string> = {
-  read: 'Read in the standard.',
-  secondary: 'From a secondary source: check it in your edition.',
-  memory: 'From memory: confirm in your edition.',
-  'common-practice': 'Common practice, not a rule of the standard.',
-}
 const LOOK = { outside: 'border-l-oxide bg-oxide-bg', 'cannot-tell': 'border-l-straw bg-straw-bg', within: 'border-l-jade bg-sheet' } as const
+
+/** What the procedure asks, as the rule read it. */
+function askedOf({ asked, range }: Finding): string | null {
+  if (asked === null) return null
+  if (Array.isArray(asked)) return asked.length > 0 ? asked.join(', ') : null
+  return askedInWords(asked, range?.type === 'numeric' ? range.unit : '')
+}
+
+/** What the coupons had, as the rule read it. */
+function testedOf({ tested, range }: Finding): string | null {
+  const unit = range?.type === 'numeric' ? range.unit : ''
+  return tested.length > 0 ? [...new Set(tested.map((one) => (typeof one === 'number' ? askedInWords({ min: one, max: one }, unit) : one)))].join(', ') : null
+}
 
 export interface MarginNoteProps {
   finding: Finding
@@ -23,12 +32,17 @@ export interface MarginNoteProps {
  * the fixes, and behind a fold how it was reached. What stands within takes one line, and opens to the rest.
  */
 export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
-  const { verdict, class: kind, clause, sentence, basis, fixes, missing, range, reasoning, couponIds, source } = finding
+  const { verdict, class: kind, clause, sentence, basis, fixes, missing, range, reasoning, couponIds, source, edition } = finding
   const bounds = range ? boundsInWords(range) : null
   const coupons = couponIds.map((id) => couponNumber?.(id)).filter((number) => number !== undefined)
+  const asked = askedOf(finding)
+  const tested = testedOf(finding)
+  const rule = rulePath(finding.standard, finding.ruleId)
   const counts = kind === 'essential' || kind === 'supplementary'
   const reached = (
     <div className="mt-1 space-y-1 text-xs leading-[1.125rem]">
+      {asked && <p>Asked: {asked}.</p>}
+      {tested && <p>Welded: {tested}.</p>}
       {bounds && <p>Covered: {bounds}.</p>}
       {coupons.length > 0 && <p>Decided by {coupons.join(', ')}.</p>}
       {reasoning.length > 0 && (
@@ -42,6 +56,14 @@ export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
         {source ? `${source}. ` : ''}
         {BASIS[basis]}
       </p>
+      {rule && (
+        <p>
+          <Link to={rule} className="text-link">
+            The rule: {clause}
+          </Link>{' '}
+          <span className="text-soft">edition {edition}</span>
+        </p>
+      )}
     </div>
   )
   if (verdict === 'within') {
@@ -69,7 +91,15 @@ export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
           <VerdictMark verdict={verdict} className="mr-1.5 size-2.5 align-[-0.5px]" />
           {VERDICT_WORD[verdict]} <span aria-hidden="true">·</span> {CLASS_WORD[kind]}
         </p>
-        <p className="font-narrow text-[0.875rem] leading-[1.125rem] font-medium whitespace-nowrap text-soft">{clause}</p>
+        <p className="font-narrow text-[0.875rem] leading-[1.125rem] font-medium whitespace-nowrap text-soft">
+          {rule ? (
+            <Link to={rule} className="underline decoration-dotted underline-offset-[3px] hover:decoration-solid" aria-label={`${clause}, the rule`}>
+              {clause}
+            </Link>
+          ) : (
+            clause
+          )}
+        </p>
       </header>
       <p className="mt-0.5 text-pretty">{sentence}</p>
       {verdict === 'cannot-tell' && missing.length > 0 && <p className="mt-1">Missing: {missing.join('; ')}.</p>}

@@ -6,6 +6,8 @@ import { call } from '@/lib/api.ts'
 import { query } from '@/lib/query.ts'
 
 export const couponQuery = (id: string) => query('readCoupon', { params: { id } })
+/** Judged afresh each time it is opened: the coupon may have been typed in meanwhile. */
+export const couponStandardsQuery = (id: string) => ({ ...query('qualifyUnderAllStandards', { params: { id } }), staleTime: 0 })
 export const photosQuery = (id: string) => query('listPhotos', { params: { id } })
 
 /** Open procedures by number or title, for opening a coupon against one. */
@@ -20,7 +22,7 @@ export function useCouponActs(id: string) {
   const params = { id }
   const settle = (coupon: Coupon) => {
     client.setQueryData(couponQuery(id).queryKey, coupon)
-    for (const name of ['listCoupons', 'readToday']) void client.invalidateQueries({ queryKey: [name] })
+    for (const name of ['listCoupons', 'readToday', 'qualifyUnderAllStandards']) void client.invalidateQueries({ queryKey: [name] })
   }
   return {
     certify: useMutation({ mutationFn: ({ version, password }: { version: number; password: string }) => call('certifyCoupon', { params, body: { password }, ifMatch: version }), onSuccess: settle }),

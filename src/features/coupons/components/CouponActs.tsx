@@ -1,4 +1,5 @@
 import { useState } from 'react'
+import { Link } from 'react-router-dom'
 import { statementOf } from '@shared/records/statements.ts'
 import type { Coupon } from '@shared/schemas/records.ts'
 import { Button, buttonClass } from '@/components/Button.tsx'
@@ -43,6 +44,9 @@ export function CouponActs({ coupon, missing, saveFirst, held = false }: CouponA
       <a className={buttonClass('secondary')} href={hrefOf('printCoupon', { id: coupon.id })} download={`${coupon.number}.pdf`}>
         PDF
       </a>
+      <Link className={buttonClass('secondary')} to={`/coupons/${coupon.id}/standards`}>
+        Under each standard
+      </Link>
       {may('send') && <Button onClick={() => setOpen('mail')}>E-mail</Button>}
       {may('reject') && (
         <Button kind="quiet" disabled={held} onClick={() => setOpen('reject')}>
