@@ -1,62 +1,10 @@
-/** Whether test results are accepted: tension QW-153, guided bends QW-163, macro sections of fillets QW-183, bend former QW-466.1. */
+/** Whether guided bends (QW-163) and macro sections of fillets (QW-183) are accepted, and the bend former of QW-466.1. */
 import type { TestVerdict } from '../../schemas/assessment.ts'
-import type { BendTest, CouponContent, TensionTest, WeldingVariables } from '../../schemas/welding.ts'
-import type { UnitSystem } from '../../units/types.ts'
+import type { BendTest, CouponContent, WeldingVariables } from '../../schemas/welding.ts'
 import { figure, figureOrNull, tidy, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
-import { pFamily, pNumber, pNumbers, secondMetal } from './members.ts'
+import { pFamily, pNumber, pNumbers } from './members.ts'
 import { FIGURES } from './ranges.ts'
-
-/** Five per cent below the specified minimum is allowed for a break in the base metal only (QW-153.1(d); read). */
-const BASE_METAL_BREAK = 0.95
-
-/** Area of a tension specimen in mm²; null when its measures aren't recorded. */
-export function specimenArea(test: TensionTest): number | null {
-  if (test.kind === 'turned' || (test.diameter && !test.width)) return test.diameter && test.diameter.si > 0 ? (Math.PI * test.diameter.si ** 2) / 4 : null
-  return test.width && test.thickness && test.width.si > 0 && test.thickness.si > 0 ? test.width.si * test.thickness.si : null
-}
-
-/** Stress from maximum load and least area, MPa; null when a figure is missing. */
-export function computedStress(test: TensionTest): number | null {
-  const area = specimenArea(test)
-  return area === null || !test.load || test.load.si < 0 ? null : tidy((test.load.si * 1000) / area)
-}
-
-/** Specified minimum tensile strength that counts: of the weaker metal, MPa; null when one isn't recorded. */
-export function requiredStrength(variables: WeldingVariables): number | null {
-  const a = variables.baseMetals.a.minTensile?.si ?? null
-  const b = secondMetal(variables).minTensile?.si ?? null
-  return a === null || b === null ? null : Math.min(a, b)
-}
-
-const stressText = (mpa: number, system: UnitSystem): string => {
-  const unit = unitOf('stress', system)
-  const value = figure({ si: mpa, unit: 'MPa', typed: '' }, 'stress', system)
-  return `${Math.round(value * 10) / 10} ${unit}`
-}
-
-/** Judges one tension specimen; the stress is computed from load and area, the reported one only where the measures are missing. */
-export function judgeTension(test: TensionTest, variables: WeldingVariables): TestVerdict {
-  const system = variables.unitSystem
-  const base = { testId: test.id, specimen: test.specimen, clause: 'QW-153.1', basis: 'read' as const }
-  const computed = computedStress(test)
-  const stress = computed ?? test.reportedStrength?.si ?? null
-  const shown = computed === null ? null : { label: 'Stress from load and area', value: tidy(figure({ si: computed, unit: 'MPa', typed: '' }, 'stress', system)), unit: unitOf('stress', system) }
-  const minimum = requiredStrength(variables)
-  const cannot = (sentence: string): TestVerdict => ({ ...base, verdict: 'cannot-tell', sentence, computed: shown })
-  if (stress === null) return cannot(`${test.specimen} has neither load and size nor a reported strength.`)
-  if (minimum === null) return cannot(`${test.specimen} reached ${stressText(stress, system)}, but the specified minimum strength of the base metal isn't recorded.`)
-  const from = computed === null ? 'as reported' : 'from load and area'
-  if (stress >= minimum) return { ...base, verdict: 'pass', sentence: `${test.specimen} reached ${stressText(stress, system)} (${from}); at least ${stressText(minimum, system)} is required.`, computed: shown }
-  const floor = tidy(BASE_METAL_BREAK * minimum)
-  if (stress >= floor) {
-    if (test.fracture === null) return cannot(`${test.specimen} reached ${stressText(stress, system)}, under the ${stressText(minimum, system)} required; it passes only if it broke in the base metal, and where it broke isn't recorded.`)
-    // Outside weld and interface: only a break in the base metal is surely that.
-    if (test.fracture === 'base-metal') return { ...base, clause: 'QW-153.1(d)', verdict: 'pass', sentence: `${test.specimen} reached ${stressText(stress, system)} and broke in the base metal, where down to ${stressText(floor, system)} (5 % under ${stressText(minimum, system)}) is accepted.`, computed: shown }
-    if (test.fracture === 'heat-affected-zone') return cannot(`${test.specimen} reached ${stressText(stress, system)} and broke in the heat-affected zone; whether that is base metal outside weld and interface must be judged by a person.`)
-  }
-  return { ...base, verdict: 'fail', sentence: `${test.specimen} reached ${stressText(stress, system)}; ${test.fracture === 'base-metal' ? `even in the base metal at least ${stressText(floor, system)}` : `at least ${stressText(minimum, system)}`} is required.`, computed: shown }
-}
 
 /** Judges one bend: no open discontinuity over 3 mm (1/8 in.); corner openings count only when they come from an internal flaw. */
 export function judgeBend(test: BendTest, variables: WeldingVariables): TestVerdict {
@@ -121,5 +69,5 @@ export function formerDiameter(t: number, variables: WeldingVariables, fNumbers:
     if (elongation < 3) return null
     return { diameter: tidy((t * (100 - elongation)) / elongation), how: 't (100 - e) / e', maximum: true }
   }
-  return factor(4, '4 t')
+  return factor(4, elongation === null ? '4 t, for an elongation of 20 % or more, which is not recorded' : '4 t')
 }

@@ -6,10 +6,11 @@ import { weakest } from '../common/rule-kinds.ts'
 import { figureOrNull, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
 import type { CouponSide, RangeContext } from '../rule.ts'
-import { formerDiameter, judgeBend, judgeMacro, judgeTension } from './acceptance.ts'
+import { formerDiameter, judgeBend, judgeMacro } from './acceptance.ts'
 import { role } from './role.ts'
 import { rules } from './rules/index.ts'
 import { specimenRequirements } from './specimens.ts'
+import { judgeTension } from './tension.ts'
 
 type Missing = CouponQualification['missing'][number]
 

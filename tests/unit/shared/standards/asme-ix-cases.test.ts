@@ -7,8 +7,9 @@ import { heatInputInstantaneous, heatInputMeter } from '@shared/calculations/hea
 import { intersectNumeric, outerEnds } from '@shared/ranges/numeric.ts'
 import type { AssessedCoupon, Assessment, NumericRange } from '@shared/schemas/assessment.ts'
 import type { Process, WeldingVariables } from '@shared/schemas/welding.ts'
-import { judgeBend, judgeTension } from '@shared/standards/asme-ix/acceptance.ts'
+import { judgeBend } from '@shared/standards/asme-ix/acceptance.ts'
 import { specimenRequirements } from '@shared/standards/asme-ix/specimens.ts'
+import { judgeTension } from '@shared/standards/asme-ix/tension.ts'
 import { interval, quantity } from '@shared/units/convert.ts'
 import { coupon, finding, judge, problems, procedure, type Given, type GivenCoupon } from './builders.ts'
 
