@@ -13,12 +13,19 @@ function order(found: Contradiction[], field: string, label: string, interval: I
   if (positive && ((min && min.si < 0) || (max && max.si < 0))) found.push({ field, processId, sentence: `${label} ${shown(interval)} is negative.` })
 }
 
+/** Of both members, mm; null where it isn't given. */
+function thickestMember({ thickness, thicknessB }: WeldingVariables): number | null {
+  const ends = [thickness, thicknessB].flatMap((interval) => interval?.max?.si ?? interval?.min?.si ?? [])
+  return ends.length === 0 || thickness?.all === true ? null : Math.max(...ends)
+}
+
 /**
  * Contradictions inside one record.
  * @param variables the weld's variables; nothing is changed
+ * @param welded the record tells what was welded (a coupon), so a deposit can't be thicker than the metal it joins
  * @returns one entry a field, in plain words, without the record's name
  */
-export function contradictions(variables: WeldingVariables): Contradiction[] {
+export function contradictions(variables: WeldingVariables, welded = false): Contradiction[] {
   const found: Contradiction[] = []
   order(found, 'thickness', 'Thickness', variables.thickness, null, true)
   order(found, 'thicknessB', 'Thickness of the second member', variables.thicknessB, null, true)
@@ -46,6 +53,9 @@ export function contradictions(variables: WeldingVariables): Contradiction[] {
     order(found, `${at}.electrical.travelSpeed`, 'Travel speed', e.travelSpeed, block.id, true)
     order(found, `${at}.electrical.wireFeed`, 'Wire feed speed', e.wireFeed, block.id, true)
     order(found, `${at}.electrical.heatInput`, 'Heat input', e.heatInput, block.id, true)
+    const deposit = block.depositThickness?.max ?? block.depositThickness?.min
+    const thickest = thickestMember(variables)
+    if (welded && deposit && thickest !== null && variables.joint.weld === 'groove' && variables.joint.work === undefined && deposit.si > thickest) found.push({ field: `${at}.depositThickness`, processId: block.id, sentence: `Deposit thickness ${deposit.typed} is more than the thickness of the metal that it joins.` })
     if (block.maxPassThickness && block.maxPassThickness.si < 0) found.push({ field: `${at}.maxPassThickness`, processId: block.id, sentence: `Pass thickness ${block.maxPassThickness.typed} is negative.` })
   }
   return found
