@@ -52,7 +52,8 @@ export function intervalCures({ label, dimension, field, current, range, asked, 
   const to = (value: number): Quantity => quantity(value, dimension, unit)
   const record = isInterval(current) ? current : null
   const fits = (end: 'min' | 'max'): boolean => {
-    if (record === null) return true
+    // Nothing is typed there: the whole interval is written, since an end has nowhere to go.
+    if (record === null) return !upperOnly
     const [value, stays] = [better[end], end === 'max' ? record.min : record.max]
     return !record.all && stays !== null && value !== null && (end === 'max' ? stays.si <= to(value).si : stays.si >= to(value).si)
   }

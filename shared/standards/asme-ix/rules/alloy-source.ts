@@ -26,6 +26,7 @@ function build({ paragraph, file, field, label, none, uses }: Source): Rule {
       return value ? [value] : null
     },
     tested: (_context, side) => (side.block ? token(side.block) : null),
+    lacks: (_, block) => (block && uses(block) === true ? ['filler.depositComposition'] : []),
     because: 'The main alloy elements must stay in the range that the procedure states.',
   })
 }

@@ -13,6 +13,16 @@ function token(metal: BaseMetal): string | null {
   return metal.uns ? `P-${p} ${metal.uns.trim().toUpperCase()}` : null
 }
 
+/** The entries without which {@link token} can't name a member. */
+function lacking(variables: WeldingVariables): string[] {
+  const members = [['a', variables.baseMetals.a], ...(secondMetal(variables) === variables.baseMetals.a ? [] : [['b', variables.baseMetals.b] as const])] as const
+  return members.flatMap(([which, metal]) => {
+    if (pNumber(metal) === null) return [`baseMetals.${which}.pNumber`]
+    if (token(metal) !== null) return []
+    return [isFerrous(metal) ? `baseMetals.${which}.groupNumber` : `baseMetals.${which}.uns`]
+  })
+}
+
 const pair = (a: string, b: string): string => [a, b].sort().join(' to ')
 
 function tokensOf(variables: WeldingVariables): [string, string] | null {
@@ -45,6 +55,7 @@ const base = namedRule({
   },
   because: 'With toughness the Group Number (nonferrous: UNS number) counts beside the P-Number.',
   plan: (asked) => `A coupon of ${asked.join(', ')} with toughness tests.`,
+  lacks: lacking,
 })
 
 export const baseMetalGroup: Rule = {

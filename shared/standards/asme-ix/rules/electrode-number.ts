@@ -1,9 +1,10 @@
 /** QW-410.10: single electrode to multiple or the reverse, for machine and automatic welding. */
 import { namedRule } from '../../common/rule-kinds.ts'
+import { unlessHeatTreated } from '../heat-treated.ts'
 import { meta } from '../meta.ts'
 import { exemptByHeatTreatment } from '../ranges.ts'
 
-export const electrodeNumber = namedRule({
+export const electrodeNumber = unlessHeatTreated(namedRule({
   meta: meta('QW-410.10', 'electrode-number'),
   field: 'technique.electrodes',
   at: 'block',
@@ -14,4 +15,4 @@ export const electrodeNumber = namedRule({
   covers: (value, _context, side) => (exemptByHeatTreatment(side.variables) === true ? 'any' : [value]),
   because: 'Machine and automatic welding with one electrode and with several do not cover each other.',
   setValue: (name) => name,
-})
+}))

@@ -20,12 +20,13 @@ export const fillerANumber = namedRule({
   field: 'filler.aNumber',
   at: 'block',
   label: 'A-Number',
-  applies: (context) => !!context.block && ferrousDeposit(context.procedure, context.block),
+  // Without filler metal there is no deposit analysis to keep; QW-404.14 holds that difference.
+  applies: (context) => !!context.block && context.block.filler.added !== false && ferrousDeposit(context.procedure, context.block),
   asked(context) {
     const value = context.block && token(context.block)
     return value ? [value] : null
   },
-  tested: (_context, side) => (side.block ? (ferrousDeposit(side.variables, side.block) ? token(side.block) : 'no A-Number (nonferrous)') : null),
+  tested: (_context, side) => (side.block?.filler.added === false ? 'no filler' : side.block ? (ferrousDeposit(side.variables, side.block) ? token(side.block) : 'no A-Number (nonferrous)') : null),
   covers: (value) => (value === 'A-1' || value === 'A-2' ? ['A-1', 'A-2'] : [value]),
   kind: (name) => (name.startsWith('deposit') ? 'composition' : 'A-Number'),
   because: 'The deposit analysis keeps its A-Number; A-1 and A-2 cover each other.',

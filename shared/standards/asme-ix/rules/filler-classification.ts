@@ -7,26 +7,36 @@ import { meta } from '../meta.ts'
 /** Diffusible hydrogen (H4, H8R …) and moisture resistance (R) designators at the end. */
 const HYDROGEN = /(?:H(?:2|4|5|8|10|15|16)R?|(?<=\d)R)$/
 
+/** Stainless covered electrodes: the H of `E308H-16` is the carbon grade, not hydrogen. */
+const STAINLESS = /^(E\d{3,4}[A-Z]*?)-?(15|16|17)$/
+
 /**
  * A classification with what QW-404.12 leaves free taken out: hydrogen and moisture designators, one low-hydrogen covering for
- * another (15, 16, 18) and the usability position digit of flux-cored wire. `impact` tells whether it carries the -1 suffix.
+ * another (15, 16, 18; stainless 15, 16, 17) and the usability position digit of flux-cored wire. `impact` tells whether it carries
+ * the suffix for better impact performance: -1 of a covered electrode, J of a flux-cored wire.
  */
 export function classificationKey(classification: string): { key: string; impact: boolean } {
   const raw = classification.trim().toUpperCase().replace(/\s+/g, '')
-  const impact = /^E\d{2,3}(15|16|18)-1(?!\d)/.test(raw)
-  let text = sameText(impact ? raw.replace(/-1(?!\d)/, '') : raw).replace(HYDROGEN, '')
-  text = text.replace(/^(E\d{2})(15|16|18)(?=$|[A-Z])/, '$1LH').replace(/^(E1\d{2})(15|16|18)(?=$|[A-Z])/, '$1LH')
-  text = text.replace(/^(E\d{3}[LH]?)(15|16|17)$/, '$1LH')
-  text = text.replace(/^(E\d+)[01](T\d+)/, '$1*$2')
-  return { key: text, impact }
+  const stainless = /^E[2-5]\d{2}/.test(raw) && raw.includes('-') ? STAINLESS.exec(raw) : null
+  if (stainless) return { key: `${stainless[1]}-15/16/17`, impact: false }
+  const minusOne = /^E\d{2,3}(15|16|18)-1(?!\d)/.test(raw)
+  let text = sameText(minusOne ? raw.replace(/-1(?!\d)/, '') : raw).replace(HYDROGEN, '')
+  const cored = /^E\d+T\d+[CM]?J$/.test(text)
+  if (cored) text = text.slice(0, -1)
+  text = text.replace(/^(E\d{2})(15|16|18)(?=$|[A-Z])/, (_all, strength: string) => `${strength}15/16/18`).replace(/^(E1\d{2})(15|16|18)(?=$|[A-Z])/, (_all, strength: string) => `${strength}15/16/18`)
+  text = text.replace(/^(E\d+)[01](T\d+)/, '$1X$2')
+  return { key: text, impact: minusOne || cored }
 }
+
+const G_SUFFIX = /-?G(?:$|[^A-Z0-9])/i
+const BETTER = ' with better impact suffix'
 
 /** Unclassified and G-suffix fillers are known by trade name. */
 function name(filler: Filler): string | null {
   const classification = filler.classification?.trim()
-  if (!classification || /-?G(?:$|[^A-Z0-9])/i.test(classification)) return filler.tradeName ? `trade name ${sameText(filler.tradeName)}` : null
+  if (!classification || G_SUFFIX.test(classification)) return filler.tradeName ? `trade name ${sameText(filler.tradeName)}` : null
   const { key, impact } = classificationKey(classification)
-  return impact ? `${key} with -1` : key
+  return impact ? key + BETTER : key
 }
 
 export const fillerClassification = namedRule({
@@ -41,7 +51,8 @@ export const fillerClassification = namedRule({
   },
   tested: (_context, side) => (side.block?.filler.added === false ? 'no filler' : side.block ? name(side.block.filler) : null),
   // A suffix for better impact performance is covered by the plain class; the reverse is not.
-  covers: (value) => (value.endsWith(' with -1') ? [value] : [value, `${value} with -1`]),
+  covers: (value) => (value.endsWith(BETTER) || value.startsWith('trade name') || value === 'no filler' ? [value] : [value, value + BETTER]),
+  lacks: (_, block) => (block?.filler.classification ? ['filler.tradeName'] : []),
   kind: (name) => (name.startsWith('trade name') ? 'trade name' : 'classification'),
   because: 'Hydrogen level, moisture resistance, another low-hydrogen covering of equal strength and the position digit of flux-cored wire do not count; a better impact suffix is covered.',
 })

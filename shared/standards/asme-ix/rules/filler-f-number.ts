@@ -27,4 +27,6 @@ export const fillerFNumber = namedRule({
   because: 'Every F-Number stands alone for a procedure; the welder\'s downward coverage does not exist here.',
   setValue: (name) => (name.startsWith('F-') ? name.slice(2) : undefined),
   plan: (asked) => `A coupon welded with ${asked.join(', ')} filler.`,
+  // A filler recorded as not listed is known by its name.
+  lacks: (_, block) => (block?.filler.fNumber?.trim() ? ['filler.tradeName'] : []),
 })

@@ -32,5 +32,9 @@ export const fluxWireClass = namedRule({
   },
   // The procedure's case decides what of the coupon is compared.
   tested: (context, side) => (side.block ? token(side.block.filler, kindOf((context.block ?? side.block).filler)) : null),
+  lacks(_, block) {
+    if (!block || kindOf(block.filler) === 'tensile') return []
+    return [...(block.filler.fluxTradeName ? [] : ['filler.fluxTradeName']), ...(kindOf(block.filler) === 'both names' && !block.filler.tradeName ? ['filler.tradeName'] : [])]
+  },
   because: 'A classified flux and wire keep the tensile indicator; what is not classified, and every A-8 deposit, keeps its trade name.',
 })

@@ -1,13 +1,14 @@
 /** QW-409.1: with toughness, heat input may not rise above the coupon's; judged at the worst corner of the procedure, or by its stated cap. */
 import { heatInputInstantaneous, heatInputMeter } from '../../../calculations/heat-input.ts'
 import { between, closed, numericRange, UNKNOWN, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
-import type { CouponContent, Electrical, RunRow } from '../../../schemas/welding.ts'
+import type { CouponContent, Electrical, ProcessBlock, RunRow } from '../../../schemas/welding.ts'
 import type { Interval } from '../../../schemas/common.ts'
 import type { UnitSystem } from '../../../units/types.ts'
-import { figures, inUnitOf, tidy, unitOf } from '../../common/reading.ts'
+import { figures, inUnitOf, isStated, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, Rule } from '../../rule.ts'
+import { unlessHeatTreated } from '../heat-treated.ts'
 import { meta } from '../meta.ts'
 import { exemptByHeatTreatment } from '../ranges.ts'
 
@@ -23,8 +24,8 @@ const isInstantaneous = (electrical: Electrical): boolean => electrical.heatInpu
 
 const shownUnit = (kJmm: number, system: UnitSystem): number => tidy(inUnitOf(kJmm, 'heatInput', system))
 
-/** The largest heat input that the procedure lets happen, in the judging system. */
-function asked(electrical: Electrical, system: UnitSystem): Known {
+/** The largest heat input that the procedure lets happen, in the judging system: the stated cap, or the worst corner of any pass. */
+function asked({ electrical, passes }: ProcessBlock, system: UnitSystem): Known {
   if (electrical.heatInputMethod === 'volume') return { missing: ['electrical.heatInputMethod (weld metal volumes are not compared here)'] }
   const wave = waveform(electrical)
   if (wave === null) return { missing: ['electrical.waveformControlled'] }
@@ -32,14 +33,26 @@ function asked(electrical: Electrical, system: UnitSystem): Known {
   const stated = cap.max ?? cap.min
   if (stated !== null) return wave && !isInstantaneous(electrical) ? { missing: ['electrical.heatInputMethod (instantaneous energy or power, because the waveform is controlled)'] } : { value: stated, from: 'the stated cap' }
   if (wave) return { missing: ['electrical.heatInput (from instantaneous energy or power, because the waveform is controlled)'] }
-  const volts = figures(electrical.voltage, 'voltage', system)
-  const amps = figures(electrical.current, 'current', system)
-  const speed = figures(electrical.travelSpeed, 'travelSpeed', 'SI')
+  // A pass with settings of its own may be hotter than the block; what it leaves open it takes from the block.
+  const own = passes.filter((pass) => isStated(pass.voltage) || isStated(pass.current) || isStated(pass.travelSpeed))
+  const corners = [corner(electrical, system), ...own.map((pass) => corner({ voltage: isStated(pass.voltage) ? pass.voltage : electrical.voltage, current: isStated(pass.current) ? pass.current : electrical.current, travelSpeed: isStated(pass.travelSpeed) ? pass.travelSpeed : electrical.travelSpeed }, system, ` of pass ${pass.number}`))]
+  // Where every pass has its own settings the block's are not needed.
+  const used = own.length === passes.length && own.length > 0 && corners[0] && 'missing' in corners[0] ? corners.slice(1) : corners
+  const lacking = used.find((one) => 'missing' in one)
+  if (lacking) return lacking
+  return used.reduce((worst, one) => ('value' in one && 'value' in worst && one.value > worst.value ? one : worst))
+}
+
+/** Highest volts and amperes at the lowest speed. */
+function corner(given: Pick<Electrical, 'voltage' | 'current' | 'travelSpeed'>, system: UnitSystem, where = ''): Known {
+  const volts = figures(given.voltage, 'voltage', system)
+  const amps = figures(given.current, 'current', system)
+  const speed = figures(given.travelSpeed, 'travelSpeed', 'SI')
   const V = volts.max ?? volts.min
   const A = amps.max ?? amps.min
   const v = speed.min ?? speed.max
   if (V === null || A === null || v === null || v <= 0) return { missing: [...(V === null ? ['electrical.voltage'] : []), ...(A === null ? ['electrical.current'] : []), ...(v === null || v <= 0 ? ['electrical.travelSpeed'] : [])] }
-  return { value: shownUnit(heatInputMeter({ voltage: V, current: A, travelSpeed: v }), system), from: `the worst corner: ${V} V, ${A} A, ${v} mm/min` }
+  return { value: shownUnit(heatInputMeter({ voltage: V, current: A, travelSpeed: v }), system), from: `the worst corner${where}: ${V} V, ${A} A, ${show(inUnitOf(v, 'travelSpeed', system), unitOf('travelSpeed', system))}` }
 }
 
 /** Heat input that was surely reached (middle of the readings) and the most that they allow; one value where nothing was spread. */
@@ -107,7 +120,7 @@ const base = figureRule({
   label: 'heat input',
   dimension: 'heatInput',
   asked(context) {
-    const known = context.block ? asked(context.block.electrical, context.system) : null
+    const known = context.block ? asked(context.block, context.system) : null
     return known && 'value' in known ? { min: 0, max: known.value } : null
   },
   range(context, side) {
@@ -127,11 +140,11 @@ const base = figureRule({
   plan: (wanted, context) => `A coupon with toughness tests welded at ${show(wanted.max ?? 0, unitOf('heatInput', context.system))} or more.`,
 })
 
-export const heatInput: Rule = {
+export const heatInput: Rule = unlessHeatTreated({
   ...base,
   check(context, sides, joined) {
     if (!context.block) return null
-    const known = asked(context.block.electrical, context.system)
+    const known = asked(context.block, context.system)
     if ('missing' in known) {
       const first = known.missing[0]?.split(' ')[0] ?? 'electrical.heatInput'
       const free = joined?.type === 'numeric' && joined.segments.some((segment) => segment.lower.kind === 'unlimited' && segment.upper.kind === 'unlimited')
@@ -149,4 +162,4 @@ export const heatInput: Rule = {
     const missing = judged.verdict === 'cannot-tell' ? sides.flatMap((side, i) => { const spread = spreads[i]; return spread && 'missing' in spread ? spread.missing.map((field) => `${side.coupon.number}: ${field}`) : [`${side.coupon.number}: electrical.heatInput`] }) : judged.missing
     return { ...judged, missing, reasoning: [`Asked: ${known.from}.`, ...(judged.reasoning ?? [])] }
   },
-}
+})

@@ -1,9 +1,10 @@
 /** QW-410.9: several passes per side to one pass per side. */
 import { namedRule } from '../../common/rule-kinds.ts'
+import { unlessHeatTreated } from '../heat-treated.ts'
 import { meta } from '../meta.ts'
 import { exemptByHeatTreatment } from '../ranges.ts'
 
-export const passesPerSide = namedRule({
+export const passesPerSide = unlessHeatTreated(namedRule({
   meta: meta('QW-410.9', 'passes-per-side'),
   field: 'technique.passesPerSide',
   at: 'block',
@@ -13,4 +14,4 @@ export const passesPerSide = namedRule({
   covers: (value, _context, side) => (value === 'single' || exemptByHeatTreatment(side.variables) === true ? ['single', 'multiple'] : ['multiple']),
   because: 'A coupon of several passes per side does not cover one pass per side; the reverse is covered.',
   setValue: (name) => name,
-})
+}))

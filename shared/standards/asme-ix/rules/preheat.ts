@@ -34,6 +34,6 @@ export const preheat = figureRule({
     const lowest = tidy(had - TEMPERATURE_STEP[system])
     return { range: between('temperature', unit, closed(lowest), UNLIMITED), tested: had, reason: `${show(had, unit)} less ${TEMPERATURE_STEP[system]} gives ${show(lowest, unit)} as the lowest preheat.`, basis: 'read' }
   },
-  how: (context, side) => ({ how: `${TEMPERATURE_STEP[context.system]} below`, coupon: inWords(context, side, 'minimum', 'preheat') }),
+  how: (context, side) => ({ how: `${show(TEMPERATURE_STEP[context.system], unitOf('temperature', context.system))} below`, coupon: inWords(context, side, 'minimum', 'preheat') }),
   plan: (asked, context) => `A coupon welded with a preheat of at most ${show(Number(asked.min) + TEMPERATURE_STEP[context.system], unitOf('temperature', context.system))}.`,
 })

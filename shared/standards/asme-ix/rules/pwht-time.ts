@@ -2,7 +2,8 @@
 import { between, closed, containsInterval, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
 import { figures, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
-import { show } from '../../common/wording.ts'
+import { lackWords } from '../../common/lacking.ts'
+import { capital, show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { meta } from '../meta.ts'
 
@@ -43,7 +44,7 @@ export const pwhtTime: Rule = {
       const low = had.min ?? had.max
       const high = had.max ?? had.min
       const lacking = [...(asked.min === null || asked.max === null ? ['procedure: pwht.temperature'] : []), ...(low === null || high === null ? [`${side.coupon.number}: pwht.temperature`] : [])]
-      if (asked.min === null || asked.max === null || low === null || high === null) return { ...judged, verdict: 'cannot-tell', sentence: "The heat treatment temperatures aren't recorded on both sides.", field: 'pwht.temperature', missing: [...(judged.missing ?? []), ...lacking] }
+      if (asked.min === null || asked.max === null || low === null || high === null) return { ...judged, verdict: 'cannot-tell', sentence: `${capital(lackWords([...(judged.missing ?? []), ...lacking]))}, so the heat treatments can't be compared.`, field: 'pwht.temperature', missing: [...(judged.missing ?? []), ...lacking] }
       if (containsInterval(between('temperature', unit, closed(asked.min), closed(asked.max)), { min: low, max: high }) !== 'within') {
         return { ...judged, verdict: 'outside', sentence: `${side.coupon.number} was heat treated at ${show(low, unit)}${high === low ? '' : ` to ${show(high, unit)}`}, outside the ${show(asked.min, unit)} to ${show(asked.max, unit)} of the procedure.`, field: 'pwht.temperature', fixes: [{ kind: 'plan-coupon', label: 'Weld a coupon with that heat treatment', requirement: `A coupon heat treated at ${show(asked.min, unit)} to ${show(asked.max, unit)}.` }] }
       }

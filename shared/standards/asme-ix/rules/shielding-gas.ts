@@ -17,6 +17,8 @@ const build = (ruleMeta: RuleMeta, field: 'shieldingGas' | 'plasmaGas', label: s
       return value ? [value] : null
     },
     tested: (_context, side) => token(side.block),
+    // A gas that is named without percentages that make up 100 lacks its composition.
+    lacks: (_, block) => (block?.[field] ? [`${field}.components`] : []),
     because: 'Another gas, a mixture for a single gas, or another percentage is another gas; adding or leaving out gas is a change too.',
     plan: (asked) => `A coupon welded under ${asked.join(', ')}.`,
   })

@@ -19,7 +19,8 @@ const base = namedRule({
   },
   tested: (_context, side) => token(side.block?.filler.supplemental),
   because: 'Supplemental filler may be neither added nor removed, nor its volume changed by more than 10 %.',
-  setValue: (name) => name === 'with supplemental filler',
+  // Adding it leaves its volume open, so only leaving it out is a cure.
+  setValue: (name) => (name === 'with supplemental filler' ? undefined : false),
 })
 
 export const supplementalFiller: Rule = {

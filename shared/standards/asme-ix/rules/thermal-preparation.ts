@@ -1,5 +1,5 @@
 /** QW-410.64: P-No. 11A and 11B under 16 mm (5/8 in.) prepared, gouged or repaired by heat need a coupon that was. */
-import { figures } from '../../common/reading.ts'
+import { figures, isStated } from '../../common/reading.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { pNumbers } from '../members.ts'
 import { meta } from '../meta.ts'
@@ -14,8 +14,12 @@ export const thermalPreparation = namedRule({
   label: 'thermal preparation, gouging or repair',
   applies(context) {
     if (!pNumbers(context.procedure).some((p) => p === '11A' || p === '11B')) return false
-    const { min } = figures(context.procedure.thickness, 'length', context.system)
-    return min === null || min < FIGURES[context.system].toughness
+    const { thickness, thicknessB } = context.procedure
+    return [thickness, ...(isStated(thicknessB) ? [thicknessB] : [])].some((interval) => {
+      const { min, max, all } = figures(interval, 'length', context.system)
+      const least = all ? null : (min ?? max)
+      return least === null || least < FIGURES[context.system].toughness
+    })
   },
   asked(context) {
     const value = token(context.block?.technique.thermalPreparation)

@@ -6,6 +6,7 @@ import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleRange } from '../../rule.ts'
 import { memberOf } from '../members.ts'
+import { unlessHeatTreated } from '../heat-treated.ts'
 import { meta } from '../meta.ts'
 import { baseMetalSpan, couponThickness, exemptByHeatTreatment, lacksThickness, lengthRange, toughnessFloor, unknownLength, withFloor } from '../ranges.ts'
 import { askedThickness, memberP } from './base-metal-thickness.ts'
@@ -52,7 +53,7 @@ function join(which: 'a' | 'b', context: RangeContext, sides: readonly CouponSid
 }
 
 const build = (which: 'a' | 'b', file: string): Rule =>
-  figureRule({
+  unlessHeatTreated(figureRule({
     meta: meta('QW-403.6', file, { combine: 'union', ...(which === 'b' ? { title: 'Minimum T with toughness, second member' } : {}) }),
     field: which === 'a' ? 'thickness' : 'thicknessB',
     at: 'weld',
@@ -66,7 +67,7 @@ const build = (which: 'a' | 'b', file: string): Rule =>
       const { T } = floorOf(context, side, which)
       return { how: end === 'lower' ? 'with toughness' : null, coupon: T === null ? 'coupon' : `${show(T, unitOf('length', context.system))} coupon` }
     },
-  })
+  }))
 
 export const toughnessThickness = build('a', 'toughness-thickness')
 export const toughnessThicknessB = build('b', 'toughness-thickness-second')

@@ -28,5 +28,6 @@ export const verticalUphill = namedRule({
   },
   tested: (_context, side) => token(side.block),
   covers: (value) => (value === WEAVE ? [WEAVE, STRINGER, OTHER] : value === STRINGER ? [STRINGER, OTHER] : [OTHER]),
+  lacks: (_, block) => (!block || block.positions.length === 0 ? ['positions'] : [...(block.progression === null ? ['progression'] : []), ...(block.technique.bead === null ? ['technique.bead'] : [])]),
   because: 'Vertical uphill covers all positions; no other position covers it, and uphill stringer beads do not cover weaving.',
 })

@@ -119,7 +119,7 @@ const rows: Row[] = [
   { rule: 'flux-wire-classification', process: 'SAW', toughness: true, both: (b) => Object.assign(b.filler, { fluxClassification: null, fluxTradeName: null }), verdict: 'cannot-tell' },
   { rule: 'flux-wire-classification', process: 'SAW', toughness: false, procedure: (b) => (b.filler.fluxClassification = 'F8A4-EM12K'), verdict: 'within' },
   // Preheat and heat treatment
-  { rule: 'preheat', procedure: (_, v) => (v.preheat.minimum = quantity(-36, 'temperature')), verdict: 'outside', says: '-36 °C is below the -35 °C (55 below) that the 20 °C preheat of PQR-001 qualifies.' },
+  { rule: 'preheat', procedure: (_, v) => (v.preheat.minimum = quantity(-36, 'temperature')), verdict: 'outside', says: '-36 °C is below the -35 °C (55 °C below) that the 20 °C preheat of PQR-001 qualifies.' },
   { rule: 'preheat', procedure: (_, v) => (v.preheat.minimum = null), verdict: 'cannot-tell' },
   { rule: 'preheat', coupon: (_, v) => (v.preheat.minimum = null), verdict: 'cannot-tell', missing: 'PQR-001: preheat.minimum' },
   { rule: 'preheat', procedure: (_, v) => (v.preheat.minimum = quantity(250, 'temperature')), verdict: 'within' },
