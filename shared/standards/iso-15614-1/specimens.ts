@@ -5,7 +5,7 @@ import { metalName, secondMember, siSingle } from '../common/iso-names.ts'
 import { specimenRow } from '../common/iso-tests.ts'
 import { groupsOf, isNonMagnetic, ultrasonicAllowed } from './acceptance.ts'
 import type { Level } from './levels.ts'
-import { isBranch } from './rules/joint.ts'
+import { isBranch } from './weld-types.ts'
 import { testThickness } from './sides.ts'
 
 type Missing = CouponQualification['missing'][number]

@@ -99,7 +99,7 @@ function spoil(value: unknown, random: () => number, path = ''): unknown {
   }))
 }
 
-test('any record, however torn, is answered, and a torn one is never within by silence', () => {
+test('any record, however torn, is answered in whole sentences, and what can\'t be told names what is missing', () => {
   fc.assert(fc.property(fc.integer({ min: 1, max: 2 ** 31 - 1 }), fc.constantFrom(...iso15614Part1.processes), fc.boolean(), fc.constantFrom('1' as const, '2' as const, null), (seed, process, weld, level) => {
     let state = seed
     const random = (): number => { state = (Math.imul(state, 1103515245) + 12345) & 0x7fffffff; return state / 0x7fffffff }
