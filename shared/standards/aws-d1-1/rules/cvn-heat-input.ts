@@ -54,6 +54,7 @@ const base = figureRule({
   dimension: 'heatInput',
   asked(context) {
     if (!context.block) return null
+    if (figures(context.block.electrical.heatInput, 'heatInput', context.system).fault) return 'fault'
     const own = stated(context.block.electrical, context.system) ?? fromBlock(context.block.electrical, context.system)?.most ?? null
     return own === null ? null : { min: 0, max: own }
   },

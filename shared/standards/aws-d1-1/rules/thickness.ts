@@ -42,14 +42,14 @@ export const thickness: Rule = {
   ...base,
   check(context, sides, joined) {
     const places = askedPlaces(context.block?.positions ?? [])
-    if (sides.length < 2 || places.length < 2) return base.check(context, sides, joined)
+    if (sides.length < 2) return base.check(context, sides, joined)
     // A vertical test of thick plate says nothing of thick flat welds: each position is judged by the tests that cover it.
     let worst: RuleVerdict | null = null
     for (const place of places) {
       const own = sides.filter((side) => coveredPlaces(side.block?.positions ?? []).includes(place))
       if (own.length === 0) continue
       const judged = base.check(context, own, unionAll(own.map((side) => thicknessSpan(context, side).range)))
-      if (judged && (!worst || RANK[judged.verdict] > RANK[worst.verdict])) worst = judged.verdict === 'within' ? judged : { ...judged, sentence: `${judged.sentence} This is for the ${place} position, which only ${names(own)} covers.` }
+      if (judged && (!worst || RANK[judged.verdict] > RANK[worst.verdict])) worst = judged.verdict === 'within' || places.length < 2 ? judged : { ...judged, sentence: `${judged.sentence} This is for the ${place} position, which only ${names(own)} covers.` }
     }
     return worst ?? base.check(context, sides, joined)
   },

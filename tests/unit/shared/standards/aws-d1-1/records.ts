@@ -19,15 +19,15 @@ const FILLERS: Record<Arc, { classification: string; specification: string; prod
 const unit = (system: UnitSystem): string => (system === 'SI' ? 'mm' : 'in')
 
 /** A block with single settings, so that percentages have one PQR value. */
-export function block(process: Arc, system: UnitSystem, positions: readonly Position[] = ['1G'], id: string = process): unknown {
+export function block(process: Arc, system: UnitSystem, positions: readonly Position[] = ['1G'], deposit = system === 'SI' ? 20 : 0.75): unknown {
   const filler = FILLERS[process]
   const gas = process === 'GMAW' || process === 'FCAW' || process === 'GTAW'
   const components = process === 'GTAW' ? [{ gas: 'Ar', percent: 100 }] : [{ gas: 'Ar', percent: 75 }, { gas: 'CO2', percent: 25 }]
   return {
-    id,
+    id: process,
     process,
     mechanisation: process === 'SAW' ? 'machine' : process === 'SMAW' || process === 'GTAW' ? 'manual' : 'semiautomatic',
-    depositThickness: interval(system === 'SI' ? 20 : 0.75, undefined, 'length', unit(system)),
+    depositThickness: interval(deposit, undefined, 'length', unit(system)),
     maxPassThickness: quantity(system === 'SI' ? 3 : 0.125, 'length', unit(system)),
     filler: { classification: filler.classification, specification: filler.specification, productForm: filler.productForm, added: true, tradeName: 'Larkfield Trial Wire', diameters: [quantity(system === 'SI' ? filler.mm : filler.inch, 'length', unit(system))], supplemental: false, supplementalAlloyElement: false, fluxClassification: process === 'SAW' ? 'F7A2-EM12K' : null, fluxTradeName: process === 'SAW' ? 'Larkfield Trial Flux' : null, fluxType: process === 'SAW' ? 'neutral' : null, fluxIsRecrushedSlag: process === 'SAW' ? false : null },
     positions: [...positions],
@@ -67,7 +67,7 @@ function variables(given: Given): unknown {
     thickness: interval(min, max, 'length', unit(system)),
     preheat: { minimum: quantity(20, 'temperature'), interpassMaximum: quantity(200, 'temperature') },
     pwht: { condition: 'none' },
-    processes: (given.processes ?? ['SMAW']).map((process) => block(process, system, given.positions)),
+    processes: (given.processes ?? ['SMAW']).map((process) => block(process, system, given.positions, min)),
   }
 }
 
