@@ -67,8 +67,9 @@ function ofDocument({ field, label }: FieldChange): Judged | null {
   return isOfDocument(field) ? plain('editorial', 'revise only', `${label} is part of the document, not of the weld: revise the document.`) : null
 }
 
+const traced = ({ label }: FieldChange): Judged => plain('editorial', 'revise only', `${label} names, traces or explains, and no rule judges it: revise the document.`)
 const unknown = (change: FieldChange, why: string): Judged =>
-  isOfTrace(change.field) ? plain('editorial', 'revise only', `${change.label} names or traces the piece: revise the document.`) : plain('essential', 'cannot tell', `Whether ${change.label} is essential can't be told: ${why}. Treat it as essential until you have looked it up.`)
+  isOfTrace(change.field) ? traced(change) : plain('essential', 'cannot tell', `Whether ${change.label} is essential can't be told: ${why}. Treat it as essential until you have looked it up.`)
 
 function judgeChange(scene: Scene, change: FieldChange, touched: Touched): Judged {
   const { standard, input } = scene
@@ -80,7 +81,8 @@ function judgeChange(scene: Scene, change: FieldChange, touched: Touched): Judge
   const outside = mine.length > 0 ? [] : [...input.before.variables.processes, ...input.after.variables.processes].filter(strange)
   const kind = strongest(touched)
   if (kind === 'editorial') {
-    if (outside.length > 0 && !isOfTrace(change.field)) return unknown(change, `the procedure has a process outside the rules of ${standard.shortName} kept here`)
+    if (outside.length > 0) return unknown(change, `the procedure has a process outside the rules of ${standard.shortName} kept here`)
+    if (isOfTrace(change.field)) return traced(change)
     const [idle] = touched.idle
     if (idle) return { ...ofRules([...touched.idle]), class: 'editorial', standing: 'revise only', sentence: `${change.label} is no variable here, because toughness is not required: revise the document.`, wanted: null }
     return plain('editorial', 'revise only', `No rule of ${standard.shortName} ${input.edition} kept here judges ${change.label}: revise the document.`)

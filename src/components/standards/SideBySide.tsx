@@ -27,29 +27,29 @@ export function SideBySide({ table }: { table: Table }) {
       {rows.length === 0 && <p className="border border-rule bg-sheet px-4 py-3">Nothing can be told yet: state the process, the metals and the thickness of the coupon.</p>}
       {blocks.map(({ processId, rows: own }) => (
         <Sheet key={processId} title={own[0]?.process ?? 'Process not stated'}>
-          <table className="block w-full border-collapse text-left sm:table">
+          <table role="table" className="block w-full border-collapse text-left min-[900px]:table min-[900px]:table-fixed">
             <caption className="sr-only">What the coupon qualifies with {own[0]?.process ?? 'this process'}, under each standard</caption>
-            <thead className="sr-only sm:not-sr-only sm:table-header-group">
-              <tr className="border-b border-rule bg-paper">
-                <th scope="col" className="px-4 py-1.5 font-medium">
+            <thead role="rowgroup" className="sr-only min-[900px]:not-sr-only min-[900px]:table-header-group">
+              <tr role="row" className="border-b border-rule bg-paper">
+                <th role="columnheader" scope="col" className="w-36 px-4 py-1.5 font-medium">
                   Variable
                 </th>
                 {standards.map(({ standard, shortName, edition }) => (
-                  <th key={standard} scope="col" className="px-3 py-1.5 font-medium">
+                  <th key={standard} role="columnheader" scope="col" className="px-3 py-1.5 font-medium">
                     {shortName} <span className="font-normal text-soft">{edition}</span>
                   </th>
                 ))}
               </tr>
             </thead>
-            <tbody className="block sm:table-row-group">
+            <tbody role="rowgroup" className="block min-[900px]:table-row-group">
               {own.map(({ variable, label, cells }) => (
-                <tr key={variable} className="sheet-row block border-b border-hair align-top last:border-b-0 sm:table-row">
-                  <th scope="row" className="block px-4 pt-2.5 font-semibold sm:table-cell sm:w-36 sm:py-2.5 sm:font-medium">
+                <tr key={variable} role="row" className="sheet-row grid border-b border-hair py-1 align-top last:border-b-0 sm:grid-cols-2 min-[900px]:table-row">
+                  <th role="rowheader" scope="row" className="block px-4 pt-2 font-semibold sm:col-span-2 min-[900px]:table-cell min-[900px]:py-2.5 min-[900px]:font-medium">
                     {label}
                   </th>
                   {cells.map((cell) => (
-                    <td key={cell.standard} className="block px-4 py-1.5 break-words sm:table-cell sm:px-3 sm:py-2.5">
-                      <span className="text-soft sm:hidden">{standards.find(({ standard }) => standard === cell.standard)?.shortName}: </span>
+                    <td key={cell.standard} role="cell" className="block min-w-0 px-4 py-1.5 wrap-anywhere min-[900px]:table-cell min-[900px]:px-3 min-[900px]:py-2.5">
+                      <span className="text-soft min-[900px]:hidden">{standards.find(({ standard }) => standard === cell.standard)?.shortName}: </span>
                       <Cell cell={cell} />
                     </td>
                   ))}
@@ -101,14 +101,15 @@ function StandardHead({ head: { standard, shortName, edition, named, readyToCert
 }
 
 function Cell({ cell: { state, words, clause, basis, ranges, standard } }: { cell: SideCell }) {
-  const quiet = state === 'no-range' || state === 'not-a-variable'
-  const rules = [...new Map(ranges.map((range) => [range.ruleId, range])).values()]
+  // Why there is no figure is said small; the figures are what the eye looks for.
+  const quiet = state !== 'range' && !(state === 'cannot-tell' && clause)
+  const rules = [...new Map(ranges.map((range) => [`${range.ruleId} ${range.clause}`, range])).values()]
   return (
     <>
       {state === 'cannot-tell' && <VerdictMark verdict="cannot-tell" className="mr-1.5 size-2.5" />}
       {STATE_WORD[state] && <span className={`mr-1 font-medium ${state === 'cannot-tell' ? 'text-straw-deep' : 'text-soft'}`}>{STATE_WORD[state]}.</span>}
       <span className={quiet ? 'text-sm text-soft' : 'font-medium'}>
-        {words.split('; ').map((part, index) => (
+        {(state === 'range' ? words.split('; ') : [words]).map((part, index) => (
           <Fragment key={part}>
             {index > 0 && <br />}
             {part}
@@ -121,7 +122,7 @@ function Cell({ cell: { state, words, clause, basis, ranges, standard } }: { cel
             rules.map((range, index) => {
               const to = rulePath(standard, range.ruleId)
               return (
-                <Fragment key={range.ruleId}>
+                <Fragment key={`${range.ruleId} ${range.clause}`}>
                   {index > 0 && ', '}
                   {to ? (
                     <Link to={to} className="text-link">

@@ -16,21 +16,21 @@ export const CLASS_LEGEND: readonly (readonly [letter: string, word: string])[] 
 /** Rules of one section, a column a process; on a phone the classes stand in words under each rule. */
 export function RulesTable({ section, rules, standard, target }: { section: string; rules: readonly StandardRule[]; standard: StandardDetail; /** Anchor of the rule that the reader came for. */ target: string }) {
   return (
-    <table className="block w-full border-collapse text-left sm:table">
+    <table role="table" className="block w-full border-collapse text-left sm:table">
       <caption className="sr-only">Rules on {section}</caption>
-      <thead className="sr-only sm:not-sr-only sm:table-header-group">
-        <tr className="border-b border-rule bg-paper">
-          <th scope="col" className="px-4 py-1.5 font-medium">
+      <thead role="rowgroup" className="sr-only sm:not-sr-only sm:table-header-group">
+        <tr role="row" className="border-b border-rule bg-paper">
+          <th role="columnheader" scope="col" className="px-4 py-1.5 font-medium">
             Rule
           </th>
           {standard.processes.map((process) => (
-            <th key={process} scope="col" className="px-1 py-1.5 text-center font-narrow font-medium">
+            <th key={process} role="columnheader" scope="col" className="px-1 py-1.5 text-center font-narrow font-medium">
               {process}
             </th>
           ))}
         </tr>
       </thead>
-      <tbody className="block sm:table-row-group">
+      <tbody role="rowgroup" className="block sm:table-row-group">
         {rules.map((rule) => (
           <RuleRow key={rule.id} rule={rule} standard={standard} targeted={ruleAnchor(rule.id) === target} />
         ))}
@@ -44,8 +44,8 @@ function RuleRow({ rule, standard, targeted }: { rule: StandardRule; standard: S
   const grouped = [...new Set(classes.map((one) => one.class))].map((kind) => [kind, classes.filter((one) => one.class === kind).map(({ process }) => process)] as const)
   const someEditions = editions.length < standard.editions.length
   return (
-    <tr id={ruleAnchor(rule.id)} className={`sheet-row block scroll-mt-16 border-b border-hair align-top last:border-b-0 sm:table-row ${targeted ? 'bg-straw-bg' : ''}`}>
-      <th scope="row" className="block px-4 py-2.5 font-normal sm:table-cell">
+    <tr role="row" id={ruleAnchor(rule.id)} className={`sheet-row block scroll-mt-16 border-b border-hair align-top last:border-b-0 sm:table-row ${targeted ? 'bg-straw-bg' : ''}`}>
+      <th role="rowheader" scope="row" className="block px-4 py-2.5 font-normal sm:table-cell">
         <p className="flex flex-wrap items-baseline gap-x-2.5">
           <a href={`#${ruleAnchor(rule.id)}`} className="text-link font-narrow text-base font-semibold whitespace-nowrap">
             {clause}
@@ -67,7 +67,7 @@ function RuleRow({ rule, standard, targeted }: { rule: StandardRule; standard: S
         <p className="mt-0.5 text-sm sm:hidden">
           {grouped.map(([kind, processes]) => (
             <span key={kind} className="block">
-              <span className="font-medium first-letter:uppercase">{RULE_CLASS_WORD[kind]}</span>: {processes.join(', ')}
+              <span className="inline-block font-medium first-letter:uppercase">{RULE_CLASS_WORD[kind]}</span>: {processes.join(', ')}
             </span>
           ))}
         </p>
@@ -75,7 +75,7 @@ function RuleRow({ rule, standard, targeted }: { rule: StandardRule; standard: S
       {standard.processes.map((process) => {
         const own = classes.find((one) => one.process === process)
         return (
-          <td key={process} className={`hidden w-14 px-1 py-2.5 text-center sm:table-cell ${own?.class === 'essential' ? 'font-semibold' : own ? '' : 'text-soft'}`}>
+          <td key={process} role="cell" className={`hidden w-14 px-1 py-2.5 text-center sm:table-cell ${own?.class === 'essential' ? 'font-semibold' : own ? '' : 'text-soft'}`}>
             {own ? (
               <>
                 <span aria-hidden="true">{LETTER[own.class]}</span>

@@ -8,6 +8,7 @@ import type { ProcedureContent, WeldingVariables } from '@shared/schemas/welding
 import { interval, quantity } from '@shared/units/convert.ts'
 import { block, coupon, procedure, type Given } from '../standards/builders.ts'
 import { processBlockSchema } from '@shared/schemas/welding.ts'
+import { standards } from '@shared/standards/index.ts'
 
 type Change = (variables: WeldingVariables) => void
 const first = (variables: WeldingVariables): WeldingVariables['processes'][number] => {
@@ -213,4 +214,16 @@ describe('whatever is changed', () => {
       const { changes, overall } = asme(build(given, given.one), build(given, given.other), [coupon()])
       if (overall.verdict === 'within') for (const { standing } of changes) expect(['still covered', 'revise only']).toContain(standing)
     }), { numRuns: 40 }))
+
+  // Every standard and route, with none of its clauses named here.
+  const choices = standards.flatMap(({ id, editions, routes = ['test'] }) => routes.flatMap((route) => editions.map(({ id: edition }) => ({ standard: id, edition, route }))))
+  test.each(choices)('$standard $edition by $route: classes hold both ways, and nothing essential is only revised', ({ standard, edition, route }) =>
+    fc.assert(fc.property(scene, (given) => {
+      const [before, after] = [build(given, given.one), build(given, given.other)]
+      const classed = (from: ProcedureContent, to: ProcedureContent): RevisionImpact => revisionImpact({ before: from, after: to, standard, edition, level: null, route, coupons: given.linked ? [coupon()] : [] })
+      const there = classed(before, after)
+      expect(revisionImpactSchema.parse(there)).toEqual(there)
+      expect(there.changes.map(({ field, class: kind }) => `${field} ${kind}`).sort()).toEqual(classed(after, before).changes.map(({ field, class: kind }) => `${field} ${kind}`).sort())
+      for (const { class: kind, standing } of there.changes) expect(standing === 'revise only').toBe(kind === 'editorial' || kind === 'nonessential')
+    }), { numRuns: 12 }))
 })
