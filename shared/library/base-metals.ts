@@ -162,6 +162,7 @@ export function toBaseMetal(content: RowContent<BaseMetalRow>): BaseMetal {
     minTensile: row.min_tensile_mpa === null ? null : quantity(row.min_tensile_mpa, 'stress', 'MPa'),
     minYield: row.min_yield_mpa === null ? null : quantity(row.min_yield_mpa, 'stress', 'MPa'),
     minElongation: row.min_elongation_pct === null ? null : quantity(row.min_elongation_pct, 'percent', '%'),
+    condition: null,
     heatNumber: null,
     certificate: null,
   }
