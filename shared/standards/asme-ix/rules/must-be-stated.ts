@@ -59,9 +59,12 @@ const ROWS: readonly Row[] = [
   { paragraph: 'QW-410.7', file: 'oscillation', field: 'technique.oscillation', at: 'block', label: 'oscillation width, frequency and dwell', applies: byMachine, stated: (_, { technique }) => technique.oscillation !== null },
   { paragraph: 'QW-410.8', file: 'contact-tube-distance', field: 'technique.contactTubeDistance', at: 'block', label: 'contact tube to work distance', stated: (_, { technique }) => isStated(technique.contactTubeDistance) },
   { paragraph: 'QW-410.15', file: 'electrode-spacing', field: 'technique.electrodeSpacing', at: 'block', label: 'electrode spacing', applies: (variables, block) => byMachine(variables, block) && block.technique.electrodes === 'multiple', stated: (_, { technique }) => technique.electrodeSpacing !== null },
-  { paragraph: 'QW-410.25', file: 'mechanisation', field: 'mechanisation', at: 'block', label: 'manual, semiautomatic, machine or automatic welding', stated: (_, { mechanisation }) => mechanisation !== null },
+  { paragraph: 'QW-410.25', file: 'mechanisation', field: 'mechanisation', at: 'block', label: 'mechanisation', stated: (_, { mechanisation }) => mechanisation !== null },
   { paragraph: 'QW-410.26', file: 'peening', field: 'technique.peening', at: 'block', label: 'peening, or none', stated: (_, { technique }) => technique.peening !== null },
 ]
+
+/** The thing itself, for a sentence: "none" is one way of stating it. */
+const plain = (label: string): string => label.replace(/, or none$/, '')
 
 const build = (row: Row): Rule => ({
   meta: meta(row.paragraph, row.file, { withoutCoupon: true }),
@@ -73,8 +76,8 @@ const build = (row: Row): Rule => ({
   check(context) {
     const { procedure, block } = context
     if (!block || (row.applies && !row.applies(procedure, block))) return null
-    if (!row.stated(procedure, block)) return notStated(row.label, pathOf(context, row), { fixes: [{ kind: 'state', label: `State the ${row.label}`, field: pathOf(context, row) }] })
-    return { verdict: 'within', sentence: `The procedure states the ${row.label.replace(/, or none$/, '')}; no coupon limits it.`, asked: null, range: null, tested: [] }
+    if (!row.stated(procedure, block)) return notStated(plain(row.label), pathOf(context, row), { fixes: [{ kind: 'state', label: `State the ${row.label}`, field: pathOf(context, row) }] })
+    return { verdict: 'within', sentence: `The procedure states the ${plain(row.label)}; no coupon limits it.`, asked: null, range: null, tested: [] }
   },
 })
 

@@ -24,11 +24,11 @@ export const toughnessTests: Rule = {
   at: 'weld',
   label: 'Toughness tests',
   range: (_context, side) => ({ range: setRange(tested(side) ? ['with toughness', 'without toughness'] : ['without toughness']), tested: tested(side) ? 'with toughness' : 'without toughness', reason: tested(side) ? 'The coupon carries toughness tests.' : 'The coupon carries no toughness tests.' }),
-  check(_context, sides, joined) {
+  check({ toughness }, sides, joined) {
     if (sides.some(tested)) return { verdict: 'within', sentence: `${names(sides)} ${verb(sides, 'carries', 'carry')} toughness tests.`, asked: ['with toughness'], range: joined }
     const plan = { kind: 'plan-coupon' as const, label: 'Weld a coupon with toughness tests', requirement: 'A coupon with the same essential and supplementary variables, tested for toughness.' }
     const awaited = sides.filter((side) => side.variables.toughnessRequired === true)
     if (awaited.length > 0) return { verdict: 'cannot-tell', sentence: `${names(awaited)} ${verb(awaited, 'was', 'were')} welded for toughness, but no toughness results are recorded yet.`, asked: ['with toughness'], range: joined, missing: awaited.map((side) => `${side.coupon.number}: toughness`) }
-    return { verdict: 'outside', sentence: `Toughness is required, but ${names(sides)} ${verb(sides, 'carries', 'carry')} no toughness tests.`, asked: ['with toughness'], range: joined, fixes: [plan] }
+    return { verdict: 'outside', sentence: `${toughness === null ? '' : 'Toughness is required, but '}${names(sides)} ${verb(sides, 'carries', 'carry')} no toughness tests.`, asked: ['with toughness'], range: joined, fixes: [plan] }
   },
 }
