@@ -10,7 +10,7 @@ export function Toasts() {
       toastOptions={{
         unstyled: true,
         classNames: {
-          toast: 'flex w-88 max-w-[calc(100vw-2rem)] items-start gap-3 border border-ink border-l-[6px] bg-sheet px-3 py-2.5 text-base text-ink',
+          toast: 'flex w-88 font-sans max-w-[calc(100vw-2rem)] items-start gap-3 border border-ink border-l-[6px] bg-sheet px-3 py-2.5 text-base text-ink',
           success: 'border-l-jade!',
           error: 'border-l-oxide!',
           content: 'min-w-0 grow',

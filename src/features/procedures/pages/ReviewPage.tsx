@@ -195,7 +195,7 @@ function Decision({ revision, stands, judged }: { revision: Revision; stands: re
           <div>
             <p className="cell-label">You sign</p>
             <blockquote className="mt-1 border-l-2 border-ink pl-3 text-lg text-pretty">{statementOf({ meaning: 'approved', record: revisionName(revision.number, revision.revision), name: person?.name ?? '', role: 'supervisor', deviations: stands.length })}</blockquote>
-            <p className="mt-2 text-soft">From then on {nameOf(revision)} can&rsquo;t be changed; the revision approved before is superseded, and the shop sees this one.</p>
+            <p className="mt-2 text-soft">From then on {nameOf(revision)} can&rsquo;t be changed, and the shop sees it in place of any revision approved before, which is superseded.</p>
           </div>
           {stands.length > 0 && <TextArea label="Reason" rows={4} maxLength={2000} description={`${stands.length === 1 ? 'One finding is' : `${stands.length} findings are`} outside or cannot be told. Your reason is printed with them.`} value={reason} error={wrong.reason} onChange={(event) => setReason(event.target.value)} />}
           <TextField label="Your password" type="password" autoComplete="current-password" value={password} error={wrong.password} onChange={(event) => setPassword(event.target.value)} />
