@@ -64,7 +64,7 @@ export function TestRow({ list, index, test, mark, onChange, onRemove, children 
   const path = `${list}.${index}`
   return (
     <div id={inputId(path)} role="group" aria-label={mark} tabIndex={-1} className={`sheet-row relative border-b border-hair last:border-b-0 ${worst === 'outside' ? 'wash-outside' : worst === 'cannot-tell' ? 'wash-cannot-tell' : ''}`}>
-      <div className="grid grid-cols-[3.25rem_minmax(0,1fr)] gap-x-3 px-4 py-3">
+      <div className="grid grid-cols-1 gap-x-3 px-4 sm:grid-cols-[3.25rem_minmax(0,1fr)] py-3">
         <p className="pt-0.5 font-narrow text-xl font-semibold break-words">{mark}</p>
         <div className="min-w-0 space-y-2.5">
           <div className="flex items-start gap-2">
