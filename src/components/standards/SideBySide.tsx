@@ -15,10 +15,10 @@ export function SideBySide({ table }: { table: Table }) {
   const blocks = [...new Set(rows.map(({ processId }) => processId))].map((processId) => ({ processId, rows: rows.filter((row) => row.processId === processId) }))
   return (
     <div className="space-y-4">
-      <Sheet title="Under each standard" aside={table.certified ? 'certified' : 'as it would be, once certified'}>
-        <ul className="grid gap-px bg-rule sm:grid-cols-2 xl:grid-cols-5">
+      <Sheet title="Under each standard" className="overflow-hidden" aside={table.certified ? 'certified' : 'as it would be, once certified'}>
+        <ul className="grid sm:grid-cols-2 xl:grid-cols-5">
           {standards.map((head) => (
-            <li key={head.standard} className="bg-sheet px-4 py-3">
+            <li key={head.standard} className="-mr-px -mb-px border-r border-b border-hair px-4 py-3">
               <StandardHead head={head} />
             </li>
           ))}
@@ -85,7 +85,7 @@ function StandardHead({ head: { standard, shortName, edition, named, readyToCert
         </p>
       )}
       {notes.length > 0 && (
-        <details className="mt-1 text-sm">
+        <details className="print-open mt-1 text-sm">
           <summary className="w-fit cursor-pointer py-0.5 text-soft underline decoration-dotted underline-offset-2">
             {notes.length} {notes.length === 1 ? 'note' : 'notes'}
           </summary>

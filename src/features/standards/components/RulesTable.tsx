@@ -45,7 +45,7 @@ function RuleRow({ rule, standard, targeted }: { rule: StandardRule; standard: S
   const someEditions = editions.length < standard.editions.length
   return (
     <tr role="row" id={ruleAnchor(rule.id)} className={`sheet-row block scroll-mt-16 border-b border-hair align-top last:border-b-0 sm:table-row ${targeted ? 'bg-straw-bg' : ''}`}>
-      <th role="rowheader" scope="row" className="block px-4 py-2.5 font-normal sm:table-cell">
+      <th role="rowheader" scope="row" className="block px-4 py-2.5 font-normal sm:table-cell sm:w-full">
         <p className="flex flex-wrap items-baseline gap-x-2.5">
           <a href={`#${ruleAnchor(rule.id)}`} className="text-link font-narrow text-base font-semibold whitespace-nowrap">
             {clause}
@@ -57,7 +57,7 @@ function RuleRow({ rule, standard, targeted }: { rule: StandardRule; standard: S
           {basis === 'memory' ? <strong className="font-semibold text-straw-deep">{BASIS_SENTENCE[basis]}</strong> : BASIS_SENTENCE[basis]} {someEditions && `Editions ${editions.join(', ')} only. `}
           {route === 'prequalified' && 'Prequalified procedures only. '}
         </p>
-        <details className="text-sm text-soft">
+        <details className="print-open text-sm text-soft">
           <summary className="w-fit cursor-pointer py-0.5 underline decoration-dotted underline-offset-2">Source and how it is judged</summary>
           <p>Stands beside: {fieldLabel}.</p>
           <p>Source: {source}.</p>
@@ -75,7 +75,7 @@ function RuleRow({ rule, standard, targeted }: { rule: StandardRule; standard: S
       {standard.processes.map((process) => {
         const own = classes.find((one) => one.process === process)
         return (
-          <td key={process} role="cell" className={`hidden w-14 px-1 py-2.5 text-center sm:table-cell ${own?.class === 'essential' ? 'font-semibold' : own ? '' : 'text-soft'}`}>
+          <td key={process} role="cell" className={`hidden min-w-12 px-1 py-2.5 text-center sm:table-cell ${own?.class === 'essential' ? 'font-semibold' : own ? '' : 'text-soft'}`}>
             {own ? (
               <>
                 <span aria-hidden="true">{LETTER[own.class]}</span>
