@@ -25,7 +25,7 @@ export function InvitationPage() {
           </Link>
         </div>
       )}
-      {who && <SetPassword confirmLabel="Accept and set the password" done="You are in. The password is set." onSet={(password) => call('acceptInvitation', { params: { token }, body: { password } })} />}
+      {who && <SetPassword confirmLabel="Accept and set the password" done="Your account is open and the password is set." onSet={(password) => call('acceptInvitation', { params: { token }, body: { password } })} />}
     </AccountSheet>
   )
 }

@@ -27,7 +27,7 @@ export function OutboxPage() {
       <PageHead title="Outbox">
         {mailIsCaught ? 'This installation has no mail server: every mail is caught here and can be read, links and attachments included.' : 'Every mail that the program sent or will send, newest first.'}
       </PageHead>
-      <FilterBar label="Find a mail" search={filters.values.q} onSearch={(q) => filters.set({ q })} onClear={filters.any ? filters.clear : undefined} />
+      <FilterBar label="Find an e-mail" search={filters.values.q} onSearch={(q) => filters.set({ q })} onClear={filters.any ? filters.clear : undefined} />
       {mails.isPending && <Skeleton label="Reading the outbox" />}
       {mails.isError && <ErrorState error={mails.error} onRetry={() => void mails.refetch()} />}
       {mails.data &&
