@@ -55,14 +55,14 @@ async function visit(page: Page, complaints: string[], path: string, read = READ
 
 const screens: readonly (readonly [Role, ...(string | readonly [label: string, path: () => string])[]])[] = [
   ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], '/account'],
-  ['inspector', '/', '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`]],
+  ['inspector', '/', '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
   ['supervisor', '/', ['a review', () => `/revisions/${found['in-review']}/review`]],
   ['administrator', '/', '/people'],
   ['welder', '/', '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`]],
-  ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/no/such/page'],
+  ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
 ]
 
-describe.each(screens)('%s', (role, ...paths) => {
+describe.each(screens.map(([role, ...paths]) => ({ role, paths })))('$role', ({ role, paths }) => {
   let page: Page
   let complaints: string[]
   beforeAll(async () => {
