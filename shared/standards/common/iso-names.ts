@@ -70,11 +70,27 @@ export function isoPositions(variables: WeldingVariables, block: ProcessBlock): 
 /** Vertical and pipe positions welded downwards. */
 export const DOWNWARD: ReadonlySet<string> = new Set(['PG', 'PJ', 'J-L045'])
 
+const symbols = new Map<string, string | null>()
+const MOST_SYMBOLS = 500
+
+/** Symbol of a composition, worked out once for each. */
+function symbolOf(components: GasMixture['components']): string | null {
+  let key = ''
+  for (const { gas, percent } of components) key += `${gas} ${percent};`
+  let symbol = symbols.get(key)
+  if (symbol === undefined) {
+    if (symbols.size >= MOST_SYMBOLS) symbols.clear()
+    symbol = classifyGas(components).symbol
+    symbols.set(key, symbol)
+  }
+  return symbol
+}
+
 /** The symbol, `none`, or `Z` with the composition; null where neither composition nor symbol says. */
 export function gasSymbol(gas: GasMixture | null): string | null {
   if (!gas) return null
   if (isNoGas(gas)) return 'none'
-  const { symbol } = classifyGas(gas.components)
+  const symbol = symbolOf(gas.components)
   if (symbol === 'Z') return `Z (${gasName(gas) ?? 'mixture'})`
   if (symbol) return symbol
   const written = /(?:^|[\s-])([A-Z]\d{0,2})(?:$|[\s-])/.exec((gas.isoSymbol ?? '').trim().toUpperCase().replace(/^ISO\s*14175[\s-]*/, ''))?.[1] ?? null

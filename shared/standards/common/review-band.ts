@@ -56,8 +56,27 @@ export function visibleBand(sure: NumericRange, maybe: NumericRange): NumericRan
   return segments.length === sure.segments.length ? sure : numericRange(sure.dimension, sure.unit, segments)
 }
 
+/** What was made last for two sides of one context: a rule is asked for the range and then for the verdict of the same coupons. */
+function remember<T>(make: (context: RangeContext, side: CouponSide) => T): (context: RangeContext, side: CouponSide) => T {
+  let of: RangeContext | null = null
+  let sides: readonly [CouponSide | null, CouponSide | null] = [null, null]
+  let made: readonly [T | null, T | null] = [null, null]
+  return (context, side) => {
+    if (of === context) {
+      if (sides[0] === side) return made[0] as T
+      if (sides[1] === side) return made[1] as T
+    }
+    const value = make(context, side)
+    sides = of === context ? [side, sides[0]] : [side, null]
+    made = of === context ? [value, made[0]] : [value, null]
+    of = context
+    return value
+  }
+}
+
 /** A figure that must lie inside a range of which two readings may be known. */
-export function bandRule(spec: BandSpec): Rule {
+export function bandRule(given: BandSpec): Rule {
+  const spec: BandSpec = { ...given, band: remember(given.band) }
   const base = figureRule({
     ...spec,
     range(context, side) {
@@ -69,13 +88,22 @@ export function bandRule(spec: BandSpec): Rule {
     ...base,
     check(context, sides) {
       if (spec.applies && !spec.applies(context)) return null
-      const bands = sides.flatMap((side) => spec.band(context, side) ?? [])
-      const asked = spec.asked(context)
-      if (asked === null || asked === 'fault') return bands.length === 0 && asked === null ? null : base.check(context, sides, bands[0]?.sure ?? null)
+      const bands: Band[] = []
+      for (const side of sides) {
+        const band = spec.band(context, side)
+        if (band) bands.push(band)
+      }
       const first = bands[0]
+      const asked = spec.asked(context)
+      if (asked === null || asked === 'fault') return !first && asked === null ? null : base.check(context, sides, first?.sure ?? null)
       if (!first) return null
-      const sure = bands.map((band) => band.sure).reduce(unionNumeric)
-      const maybe = bands.map((band) => band.maybe).reduce(unionNumeric)
+      let { sure, maybe } = first
+      for (let i = 1; i < bands.length; i += 1) {
+        const band = bands[i]
+        if (!band) continue
+        sure = unionNumeric(sure, band.sure)
+        maybe = unionNumeric(maybe, band.maybe)
+      }
       const settled = { clause: first.clause, basis: first.basis }
       if (containsInterval(sure, asked) === 'within' || containsInterval(maybe, asked) === 'outside') {
         const judged = base.check(context, sides, sure)
@@ -139,10 +167,10 @@ const holds = (covered: readonly string[] | 'any' | undefined, name: string): bo
 
 /** A name that must be covered, of which two readings may be known. */
 export function nameBandRule(spec: NameBandSpec): Rule {
-  const bandOf = (context: RangeContext, side: CouponSide): NameBand | null | undefined => {
+  const read = remember((context, side): { value: readonly string[] | null | undefined; band: NameBand | null | undefined } => {
     const value = spec.tested(context, side)
-    return value === null || value === undefined ? value : spec.covers ? spec.covers(value, context, side) : { sure: value }
-  }
+    return { value, band: value === null || value === undefined ? value : spec.covers ? spec.covers(value, context, side) : { sure: value } }
+  })
   const lacking = (side: CouponSide): string[] => (spec.lacks?.(side) ?? [spec.field]).map((field) => `${side.coupon.number}: ${field}`)
   const rule: Rule = {
     meta: spec.meta,
@@ -151,8 +179,7 @@ export function nameBandRule(spec: NameBandSpec): Rule {
     label: capital(spec.label),
     applies: spec.applies,
     range(context, side) {
-      const value = spec.tested(context, side)
-      const band = bandOf(context, side)
+      const { value, band } = read(context, side)
       if (band === undefined || value === undefined) return null
       if (band === null || value === null) return { range: UNKNOWN_SET, tested: null, reason: `${side.coupon.number} does not record the ${spec.label}.`, missing: lacking(side) }
       return { range: flags(band), tested: list(value), reason: band.why ? `${spec.because} ${band.why}` : spec.because, basis: band.basis, clause: band.clause, missing: band.missing }
@@ -162,22 +189,31 @@ export function nameBandRule(spec: NameBandSpec): Rule {
       const field = pathOf(context, spec)
       const asked = spec.asked(context)
       if (asked === null || asked.length === 0) return notStated(spec.label, field, { range: joined })
-      const bands = sides.map((side) => bandOf(context, side)).filter((band) => band !== undefined)
-      if (bands.length === 0) return null
-      return judgeNames({ spec, context, sides, field, asked, bands, joined, lacks: sides.flatMap((side) => (bandOf(context, side) === null ? lacking(side) : [])) })
+      const bands: NameBand[] = []
+      const lacks: string[] = []
+      for (const side of sides) {
+        const { band } = read(context, side)
+        if (band) bands.push(band)
+        else if (band === null) lacks.push(...lacking(side))
+      }
+      if (bands.length === 0 && lacks.length === 0) return null
+      return judgeNames({ spec, context, sides, field, asked, bands, joined, lacks })
     },
   }
   return rule
 }
 
-interface NamesAsked { spec: NameBandSpec; context: RuleContext; sides: readonly CouponSide[]; field: string; asked: readonly string[]; bands: readonly (NameBand | null)[]; joined: RuleVerdict['range']; lacks: readonly string[] }
+interface NamesAsked { spec: NameBandSpec; context: RuleContext; sides: readonly CouponSide[]; field: string; asked: readonly string[]; bands: readonly NameBand[]; joined: RuleVerdict['range']; lacks: readonly string[] }
 
-function judgeNames({ spec, context, sides, field, asked, bands, joined, lacks }: NamesAsked): RuleVerdict {
-  const known = bands.filter((band) => band !== null)
-  const settled = { basis: known[0]?.basis, clause: known[0]?.clause, asked: [...asked], range: joined }
+const covers = (bands: readonly NameBand[], name: string): boolean => bands.some((band) => holds(band.sure, name))
+
+function judgeNames({ spec, context, sides, field, asked, bands: known, joined, lacks }: NamesAsked): RuleVerdict {
+  const basis = known[0]?.basis
+  const clause = known[0]?.clause
   const askedText = list(asked)
-  const missed = asked.filter((name) => !known.some((band) => holds(band.sure, name)))
-  if (missed.length === 0) return { ...settled, verdict: 'within', sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, reasoning: [spec.because] }
+  if (asked.every((name) => covers(known, name))) return { verdict: 'within', sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, basis, clause, reasoning: [spec.because] }
+  const settled = { basis, clause, asked: [...asked], range: joined }
+  const missed = asked.filter((name) => !covers(known, name))
   const plan: Fix = { kind: 'plan-coupon', label: `Weld a coupon with ${list(missed)}`, requirement: spec.plan ? spec.plan(missed, context) : `A coupon whose ${spec.label} is ${list(missed)}.` }
   if (lacks.length > 0) return { ...couponLacks(spec.label, spec.field, sides, [...asked], joined), missing: lacks }
   const wide = known.filter((band) => missed.every((name) => holds(band.sure, name) || holds(band.maybe, name)))
