@@ -7,7 +7,7 @@ import { preview, type PreviewServer } from 'vite'
 import { afterAll, beforeAll, expect, inject, it } from 'vitest'
 import { freePort } from '../../scripts/lib/ports.mjs'
 import { axe, overflows, widths } from './browser.ts'
-import { complaintsOf, settled, useStage } from './stage.ts'
+import { complaintsOf, useStage } from './stage.ts'
 
 const stage = useStage()
 let folder = ''
@@ -31,7 +31,8 @@ it('shows every component in every state, by day and by night, and axe finds not
   const page = await stage.stranger()
   const complaints = complaintsOf(page)
   await page.goto(`${address}/gallery`)
-  await settled(page)
+  await page.getByRole('heading', { level: 1, name: 'Gallery' }).waitFor()
+  await page.waitForLoadState('networkidle')
   expect(await page.getByRole('heading', { level: 2 }).count(), 'it holds something').toBeGreaterThan(4)
   for (const night of [false, true]) {
     await page.evaluate((on) => document.documentElement.classList.toggle('night', on), night)

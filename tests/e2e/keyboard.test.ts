@@ -1,5 +1,6 @@
 import { expect, it } from 'vitest'
-import { addressOf, eventually, focusInside, newDraft, password, readRevision, saved, settled, useStage } from './stage.ts'
+import type { Coupon } from '@shared/schemas/records.ts'
+import { addressOf, eventually, focusInside, newDraft, password, readRevision, saved, settled, steelDraft, useStage } from './stage.ts'
 
 const stage = useStage()
 
@@ -160,4 +161,44 @@ it('signs an approval with the keyboard only', async () => {
   await supervisor.keyboard.press('Enter')
   await supervisor.waitForURL(`/revisions/${id}`)
   expect(await readRevision(supervisor, id)).toMatchObject({ state: 'approved', deviationReason: 'For the exercise; nothing is welded by it.' })
+})
+
+it('logs passes and rejects a coupon with the keyboard only; Esc keeps the reason', async () => {
+  const page = await stage.as('inspector')
+  const opened = await page.request.post('/api/coupons', { data: { content: steelDraft('Logged without a mouse') } })
+  expect(opened.status(), await opened.text()).toBe(201)
+  const { id, number } = (await opened.json()) as Coupon
+  const read = async () => (await (await page.request.get(`/api/coupons/${id}`)).json()) as Coupon
+  await page.goto(`/coupons/${id}`)
+  await settled(page)
+  await page.getByRole('button', { name: 'Log the first pass' }).focus()
+  await page.keyboard.press('Enter')
+  await page.getByRole('textbox', { name: 'Pass 1, amps', exact: true }).focus()
+  await page.keyboard.type('92')
+  await page.keyboard.press('ArrowRight')
+  await eventually(() => page.evaluate(focused)).toBe('Pass 1, volts')
+  await page.keyboard.type('22.5')
+  await page.keyboard.press('Enter')
+  await eventually(() => page.evaluate(focused)).toBe('Pass 2, volts')
+  await page.keyboard.type('24')
+  await page.keyboard.press('ArrowUp')
+  await eventually(() => page.evaluate(focused)).toBe('Pass 1, volts')
+  await page.keyboard.press('Control+s')
+  await saved(page)
+  expect((await read()).content.runSheet.map(({ pass, current, voltage }) => [pass, current?.min?.si ?? null, voltage?.min?.si ?? null])).toEqual([['1', 92, 22.5], ['2', null, 24]])
+
+  await page.getByRole('button', { name: 'Reject', exact: true }).focus()
+  await page.keyboard.press('Enter')
+  const dialog = page.getByRole('dialog', { name: `Reject ${number}` })
+  await focusInside(dialog)
+  await dialog.getByRole('textbox', { name: 'Why it is rejected' }).focus()
+  await page.keyboard.type('The backing was left out.')
+  await page.keyboard.press('Escape')
+  expect(await dialog.getByRole('textbox', { name: 'Why it is rejected' }).inputValue()).toBe('The backing was left out.')
+  await page.keyboard.press('Tab')
+  await eventually(() => page.evaluate(focused)).toBe('Your password')
+  await page.keyboard.type(password())
+  await page.keyboard.press('Enter')
+  await dialog.waitFor({ state: 'detached' })
+  expect(await read()).toMatchObject({ state: 'rejected', signatures: [{ meaning: 'rejected', reason: 'The backing was left out.' }] })
 })
