@@ -35,11 +35,13 @@ export function JointDrawing({ geometry, maxHeight = 190, bare = false }: JointD
   }
   const has = (kind: string) => dimensions.some((dimension) => dimension.kind === kind)
   const room = bare ? { x: 6, top: 6, bottom: 6 } : { x: 92, top: has('included-angle') ? (has('bevel-angle') ? 80 : 62) : has('bevel-angle') ? 58 : 40, bottom: 38 }
+  // Thicknesses stand to the right of the section, and in inches they are long words.
+  const right = bare ? room.x : Math.max(room.x, ...dimensions.map(({ kind, text }) => (kind.startsWith('thickness') ? 32 + text.length * 7.8 : 0)))
   const wide = Math.max(bounds.maxX - bounds.minX, 1)
   const tall = Math.max(bounds.maxY - bounds.minY, 1)
-  const scale = Math.min(Math.max(width - 2 * room.x, 80) / wide, maxHeight / tall)
+  const scale = Math.min(Math.max(width - room.x - right, 80) / wide, maxHeight / tall)
   const height = tall * scale + room.top + room.bottom
-  const left = (width - wide * scale) / 2
+  const left = Math.max(0, Math.min((width - wide * scale) / 2, width - right - wide * scale))
   const view: View = {
     at: ({ x, y }) => ({ x: left + (x - bounds.minX) * scale, y: room.top + (bounds.maxY - y) * scale }),
     bounds,
