@@ -6,7 +6,7 @@ import { figure, figureOrNull, single, tidy, unitOf } from '../common/reading.ts
 import { list, show } from '../common/wording.ts'
 import { clauseIn } from './editions.ts'
 import { couponThickness, FIGURES, testKind } from './ranges.ts'
-import { identity, members, specKey } from './steels.ts'
+import { identity, members, specKey, systemOf } from './steels.ts'
 
 type Judged = Pick<TestVerdict, 'verdict' | 'sentence'>
 
@@ -131,11 +131,14 @@ const round1 = (value: number): number => Math.round(value * 10) / 10
 /** Plunger for 10 mm (3/8 in.) specimens by specified yield strength (memory). */
 const PLUNGER = { SI: [[345, 38.1], [620, 50.8], [Infinity, 63.5]], US: [[50, 1.5], [90, 2], [Infinity, 2.5]] } as const
 
-/** @param yieldStrength in the system's unit @returns plunger diameter A for a 10 mm (3/8 in.) specimen */
-export function plungerDiameter(yieldStrength: number, system: UnitSystem): number {
-  const [low, middle, high] = PLUNGER[system]
-  return yieldStrength <= low[0] ? low[1] : yieldStrength < middle[0] ? middle[1] : high[1]
+/** Row of the table by a yield strength in the unit of `system`: 0, 1 or 2. */
+function plungerRow(yieldStrength: number, system: UnitSystem): 0 | 1 | 2 {
+  const [low, middle] = PLUNGER[system]
+  return yieldStrength <= low[0] ? 0 : yieldStrength < middle[0] ? 1 : 2
 }
+
+/** @param yieldStrength in the system's unit @returns plunger diameter A for a 10 mm (3/8 in.) specimen */
+export const plungerDiameter = (yieldStrength: number, system: UnitSystem): number => PLUNGER[system][plungerRow(yieldStrength, system)][1]
 
 /** What is wrong with the former of a bend; null when nothing is, or nothing can be said. */
 export function formerIssue(coupon: AssessedCoupon, index: number, edition: string): { field: string; message: string; clause: string } | null {
@@ -145,10 +148,11 @@ export function formerIssue(coupon: AssessedCoupon, index: number, edition: stri
   const unit = unitOf('length', system)
   const t = figureOrNull(bend?.thickness, 'length', system)
   const used = figureOrNull(bend?.formerDiameter, 'length', system)
-  const yields = members(variables, system).map(({ metal }) => figureOrNull(metal.minYield, 'stress', system)).filter((value) => value !== null)
+  // A yield strength typed in MPa belongs to the metric row, whatever the record is in: 345 MPa is 50 ksi here.
+  const yields = members(variables, system).flatMap(({ metal }) => (metal.minYield ? [plungerRow(figure(metal.minYield, 'stress', systemOf(metal.minYield)), systemOf(metal.minYield))] : []))
   // The printed plungers are for 10 mm (3/8 in.) specimens only.
   if (!bend || t === null || used === null || yields.length === 0 || Math.abs(t - (system === 'SI' ? 9.8 : 3 / 8)) > (system === 'SI' ? 0.4 : 0.02)) return null
-  const most = plungerDiameter(Math.max(...yields), system)
+  const most = PLUNGER[system][Math.max(...yields) as 0 | 1 | 2][1]
   if (used <= most + (system === 'SI' ? 0.5 : 0.02)) return null
   return { field: `bends.${index}.formerDiameter`, message: `${bend.specimen} was bent over ${show(used, unit)}; the plunger for this base metal is ${show(most, unit)}.`, clause: clauseIn(edition, '6.10.3') }
 }

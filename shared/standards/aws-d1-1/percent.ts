@@ -64,6 +64,12 @@ function around(spec: PercentSpec, band: Band, low: number, high: number, system
   return between(spec.dimension, unitOf(spec.dimension, system), end(tidy(low * (1 - band.down / 100))), end(tidy(high * (1 + band.up / 100))))
 }
 
+/** The same percentage to both sides, by process; null for a process that the row does not name. */
+export const byProcess = (percent: Partial<Record<Process, number>>) => (process: Process): Band | null => {
+  const figure = percent[process]
+  return figure === undefined ? null : { down: figure, up: figure }
+}
+
 const bandText = ({ down, up, open: isOpen }: Band): string => (down === up && !isOpen ? `within ${down} %` : `less than ${down} % below and less than ${up} % above`)
 
 /** A figure that must stay within a percentage of the PQR value. */

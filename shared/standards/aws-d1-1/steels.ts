@@ -3,6 +3,7 @@
  * Group I was read in the 2015 edition; the other lists are from memory and not complete.
  */
 import type { Basis } from '../../schemas/assessment.ts'
+import type { Quantity } from '../../schemas/common.ts'
 import type { BaseMetal, WeldingVariables } from '../../schemas/welding.ts'
 import type { UnitSystem } from '../../units/types.ts'
 import { figures, isStated, type Figures } from '../common/reading.ts'
@@ -77,6 +78,9 @@ export function secondMetal(variables: WeldingVariables): BaseMetal {
   const { a, b } = variables.baseMetals
   return b.specification || b.grade || b.uns || b.d11Group ? b : a
 }
+
+/** The system in which a stress was typed: the printed pairs of strengths are rounded, not converted. */
+export const systemOf = (quantity: Pick<Quantity, 'unit'>): UnitSystem => (quantity.unit === 'ksi' || quantity.unit === 'psi' ? 'US' : 'SI')
 
 /** Both members with the thickness of each. */
 export function members(variables: WeldingVariables, system: UnitSystem): readonly [{ metal: BaseMetal; thickness: Figures }, { metal: BaseMetal; thickness: Figures }] {

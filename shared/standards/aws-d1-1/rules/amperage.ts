@@ -1,24 +1,18 @@
 /** Row 12: amperage. SMAW is held to the range of the electrode's maker, the other processes to a percentage of the PQR value. */
 import { between, closed, unknownNumeric } from '../../../ranges/numeric.ts'
-import type { Process } from '../../../schemas/welding.ts'
 import { figures, isStated } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { cannotTell, show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { meta } from '../meta.ts'
-import { askedSetting, settingRule } from '../percent.ts'
-
-const PERCENT: Partial<Record<Process, number>> = { SAW: 10, GMAW: 10, FCAW: 10, GTAW: 25 }
+import { askedSetting, byProcess, settingRule } from '../percent.ts'
 
 const byPercent = settingRule({
   meta: meta('amperage'),
   setting: 'current',
   label: 'amperage',
   dimension: 'current',
-  band(process) {
-    const percent = PERCENT[process]
-    return percent === undefined ? null : { down: percent, up: percent }
-  },
+  band: byProcess({ SAW: 10, GMAW: 10, FCAW: 10, GTAW: 25 }),
 })
 
 /** The procedure's own record holds what the maker recommends; no coupon gives it. */

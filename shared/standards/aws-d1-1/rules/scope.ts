@@ -1,11 +1,11 @@
 /** What the standard is for: steel from 3 mm (1/8 in.), specified yield not over 690 MPa (100 ksi). Judged by the procedure alone. */
 import { quantity } from '../../../units/convert.ts'
-import { figureOrNull, unitOf } from '../../common/reading.ts'
+import { figure, unitOf } from '../../common/reading.ts'
 import { list, show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { ownMeta } from '../meta.ts'
 import { FIGURES, lengthRange } from '../ranges.ts'
-import { members } from '../steels.ts'
+import { members, systemOf } from '../steels.ts'
 
 const YIELD = { SI: 690, US: 100 } as const
 
@@ -27,8 +27,8 @@ export const scope: Rule = {
     if (low === null || both.some(({ thickness }) => thickness.fault)) return { verdict: 'cannot-tell', sentence: "The thickness isn't stated, so whether the standard is for it can't be told.", asked: null, range, missing: ['procedure: thickness'], fixes: [{ kind: 'state', label: 'State the thickness', field: 'thickness' }] }
     const asked = { min: low, max: null }
     if (low < least) return { verdict: 'outside', sentence: `Metal of ${show(low, unit)} is thinner than the ${show(least, unit)} for which the standard is written.`, asked, range, fixes: [{ kind: 'set', label: `Set the least thickness to ${show(least, unit)}`, field: 'thickness.min', value: quantity(least, 'length', unit) }] }
-    const strong = both.flatMap(({ metal }) => figureOrNull(metal.minYield, 'stress', system) ?? []).filter((value) => value > YIELD[system])
-    if (strong.length > 0) return { verdict: 'outside', sentence: `A specified yield strength of ${list(strong.map((value) => show(value, unitOf('stress', system))))} is over the ${show(YIELD[system], unitOf('stress', system))} for which the standard is written.`, asked, range, basis: 'memory', field: 'baseMetals.a.minYield' }
+    const strong = both.flatMap(({ metal }) => (metal.minYield && figure(metal.minYield, 'stress', systemOf(metal.minYield)) > YIELD[systemOf(metal.minYield)] ? [metal.minYield] : []))
+    if (strong.length > 0) return { verdict: 'outside', sentence: `A specified yield strength of ${list([...new Set(strong.map(({ typed }) => typed))])} is over the ${show(YIELD[system], unitOf('stress', system))} for which the standard is written.`, asked, range, basis: 'memory', field: 'baseMetals.a.minYield' }
     return { verdict: 'within', sentence: `${show(low, unit)} and more is a thickness for which the standard is written.`, asked, range }
   },
 }

@@ -1,6 +1,6 @@
 /** Tables 6.2 to 6.4 and 10.9: complete penetration covers all, partial penetration covers itself and fillets, a fillet only fillets. */
 import { setRange } from '../../../ranges/set.ts'
-import { names } from '../../common/wording.ts'
+import { list, names } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { ownMeta } from '../meta.ts'
 import { testKind, type TestKind } from '../ranges.ts'
@@ -21,10 +21,10 @@ export const weldKind: Rule = {
   check(context, sides, joined) {
     if (joined?.type !== 'set') return null
     const kind = testKind(context.procedure)
-    const side = sides[0]
-    const known = side ? CLAUSE[testKind(side.variables)] : CLAUSE.complete
+    const tests = sides.map((side) => testKind(side.variables))
+    const known = tests.map((test) => CLAUSE[test])[0]
     if (joined.values.includes(NAME[kind])) return { verdict: 'within', sentence: `${names(sides)} covers ${NAME[kind]}s.`, asked: [NAME[kind]], range: joined, ...known }
     const plan = kind === 'complete' ? 'A complete-penetration groove test.' : 'A groove test.'
-    return { verdict: 'outside', sentence: `A ${NAME[kind]} is not covered: ${names(sides)} is a ${side ? NAME[testKind(side.variables)] : 'other'} test.`, asked: [NAME[kind]], range: joined, ...known, fixes: [{ kind: 'plan-coupon', label: 'Weld a groove coupon', requirement: plan }] }
+    return { verdict: 'outside', sentence: `A ${NAME[kind]} is not covered: ${names(sides)} is a ${list([...new Set(tests.map((test) => NAME[test]))])} test.`, asked: [NAME[kind]], range: joined, ...known, fixes: [{ kind: 'plan-coupon', label: 'Weld a groove coupon', requirement: plan }] }
   },
 }
