@@ -18,6 +18,9 @@ export function stressOf(test: TensionTest): number | null {
   return area > 0 && test.load && test.load.si >= 0 ? tidy((test.load.si * 1000) / area) : null
 }
 
+/** Retest of a destructive specimen (7.6; recalled). */
+const RETEST = ' If only an imperfection of the weld made it fail, two more specimens may be tested for it, and both must pass (7.6).'
+
 const mpa = (value: number): string => `${Math.round(value * 10) / 10} MPa`
 
 /** One transverse tension specimen against the least strength required. @param required MPa, or why it isn't known */
@@ -28,7 +31,7 @@ export function judgeTension(test: TensionTest, required: { value: number; how: 
   if (stress === null) return { ...base, verdict: 'cannot-tell', sentence: `${test.specimen} has neither load and size nor a reported strength.` }
   if ('why' in required) return { ...base, verdict: 'cannot-tell', sentence: `${test.specimen} reached ${mpa(stress)}. ${required.why}` }
   const passed = stress >= required.value
-  return { ...base, verdict: passed ? 'pass' : 'fail', sentence: `${test.specimen} reached ${mpa(stress)}${computed === null ? ' (as reported)' : ''}; at least ${mpa(required.value)} is required (${required.how}).` }
+  return { ...base, verdict: passed ? 'pass' : 'fail', sentence: `${test.specimen} reached ${mpa(stress)}${computed === null ? ' (as reported)' : ''}; at least ${mpa(required.value)} is required (${required.how}).${passed ? '' : RETEST}` }
 }
 
 const FLAW = 3
@@ -36,10 +39,10 @@ const FLAW = 3
 /** One bend: no single flaw above 3 mm in any direction; corner flaws are ignored unless they come from lack of fusion, slag or the like. */
 export function judgeBend(test: BendTest, reference: Reference): TestVerdict {
   const base = { testId: test.id, specimen: test.specimen, ...reference, computed: null }
-  if (test.broke) return { ...base, verdict: 'fail', sentence: `${test.specimen} broke.` }
+  if (test.broke) return { ...base, verdict: 'fail', sentence: `${test.specimen} broke.${RETEST}` }
   const sizes = test.openings.filter(({ corner, fromInternalFlaw }) => !corner || fromInternalFlaw === true).map(({ size }) => tidy(size.si))
   const largest = Math.max(0, ...sizes)
-  if (largest > FLAW) return { ...base, verdict: 'fail', sentence: `${test.specimen} has a flaw of ${show(largest, 'mm')}, above the ${FLAW} mm allowed.` }
+  if (largest > FLAW) return { ...base, verdict: 'fail', sentence: `${test.specimen} has a flaw of ${show(largest, 'mm')}, above the ${FLAW} mm allowed.${RETEST}` }
   const bent = siFigure(test.angle, 'angle')
   if (bent !== null && bent < 180) return { ...base, verdict: 'cannot-tell', sentence: `${test.specimen} was bent to ${show(bent, '°')}; 180° is asked.` }
   if (!test.inspected && test.openings.length === 0) return { ...base, verdict: 'cannot-tell', sentence: `${test.specimen} has no inspection recorded.` }
@@ -48,8 +51,8 @@ export function judgeBend(test: BendTest, reference: Reference): TestVerdict {
 
 export function judgeMacro(test: CouponContent['macros'][number], reference: Reference): TestVerdict {
   const base = { testId: test.id, specimen: test.specimen, ...reference, computed: null }
-  if (test.cracks === true) return { ...base, verdict: 'fail', sentence: `${test.specimen} shows a crack.` }
-  if (test.fusionComplete === false) return { ...base, verdict: 'fail', sentence: `${test.specimen} shows incomplete fusion.` }
+  if (test.cracks === true) return { ...base, verdict: 'fail', sentence: `${test.specimen} shows a crack.${RETEST}` }
+  if (test.fusionComplete === false) return { ...base, verdict: 'fail', sentence: `${test.specimen} shows incomplete fusion.${RETEST}` }
   if (test.cracks === null || test.fusionComplete === null) return { ...base, verdict: 'cannot-tell', sentence: `${test.specimen}: fusion and cracks aren't both recorded.` }
   return { ...base, verdict: 'pass', sentence: `${test.specimen}: fusion complete, no cracks; other imperfections are judged on the section by the quality level.` }
 }

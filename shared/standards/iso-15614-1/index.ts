@@ -17,6 +17,7 @@ export const iso15614Part1: Standard = {
     'beam, friction, resistance, stud and hybrid processes',
     'other routes: pre-production test (15613), tested consumables (15610), previous experience (15611), standard procedure (15612)',
     'whether the workshop stays under the manufacturer that ran the test (8.2)',
+    'rows and places of hardness indents and where specimens were taken, which a record does not hold',
     'filler groups of level 1 (Annex A), nickel alloys beyond the same group (Table 6)',
   ],
   rules,

@@ -32,7 +32,7 @@ function tension(test: AssessedCoupon['content']['tension'][number], required: n
   const judged = judgeTension(test, required === null ? { why: "The parent metal's specified minimum strength isn't recorded." } : { value: required, how: 'specified minimum of the weaker parent' }, reference)
   const stress = stressOf(test) ?? siFigure(test.reportedStrength, 'stress')
   if (judged.verdict !== 'fail' || level === '2' || test.fracture !== 'base-metal' || stress === null || required === null || stress < tidy(0.95 * required)) return judged
-  return { ...judged, verdict: 'cannot-tell', basis: 'memory', sentence: `${judged.sentence} It broke in the parent metal not more than 5 % below; whether level 1 allows that is not known here.` }
+  return { ...judged, verdict: 'cannot-tell', basis: 'memory', sentence: `${judged.sentence.split(' If only')[0] ?? ''} It broke in the parent metal not more than 5 % below; whether level 1 allows that is not known here.` }
 }
 
 /** Every result of a coupon, judged. */

@@ -84,6 +84,7 @@ describe('acceptance', () => {
     expect(bend({ openings: [opening(9, true, null)] })).toBe('pass')
     expect(bend({ openings: [opening(9, true, true)] })).toBe('fail')
     expect(bend({ broke: true })).toBe('fail')
+    expect(judgeResults(coupon({ content: (content) => Object.assign(content.bends[0]!, { broke: true }) }), '2').find(({ testId }) => testId === 'b1')?.sentence).toContain('two more')
     expect(bend({ angle: quantity(120, 'angle') })).toBe('cannot-tell')
     expect(bend({ inspected: false })).toBe('cannot-tell')
     expect(formerDiameter(10, 20)).toBe(40)
