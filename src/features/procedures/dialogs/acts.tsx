@@ -51,6 +51,7 @@ export function SubmitDialog({ isOpen, onClose, revision, blocking, onSubmit }: 
         </>
       }
     >
+      <FormError message={refusal} />
       <p className="text-pretty">{nameOf(revision)} goes to a supervisor and can&rsquo;t be changed while it is under review. A supervisor approves it by signature or returns it to you with a comment. You can&rsquo;t approve what you wrote yourself.</p>
       {blocking.length > 0 ? (
         <div className="space-y-2">
@@ -64,7 +65,6 @@ export function SubmitDialog({ isOpen, onClose, revision, blocking, onSubmit }: 
       ) : (
         <p className="text-jade">Every essential finding is within what the coupons qualify.</p>
       )}
-      <FormError message={refusal} />
     </Dialog>
   )
 }
