@@ -6,8 +6,8 @@ import type { Assessment, AssessedCoupon, CouponQualification, Finding, Qualifie
 import type { Route, StandardId } from '../schemas/common.ts'
 import type { ProcedureContent } from '../schemas/welding.ts'
 import { getStandard } from '../standards/index.ts'
-import type { RuleContext, Standard } from '../standards/rule.ts'
-import { judgeBlock, type BlockJudgement } from './block.ts'
+import type { Standard } from '../standards/rule.ts'
+import { judgeBlock } from './block.ts'
 import { contradictions } from './contradictions.ts'
 import { prepare } from './prepare.ts'
 
@@ -64,16 +64,15 @@ export function assess(given: AssessInput): Assessment {
   else if (!hasRoute) findings.push(plainFinding(input, { ruleId: 'assessment/route', title: 'Route', field: 'standards', sentence: `${standard.shortName} has no prequalified procedures here: every procedure is supported by a qualification test.`, missing: ['a route by test'], fixes: [{ kind: 'state', label: 'Choose the route by test', field: 'standards' }] }))
   else {
     recordFindings(input, standard, findings)
-    const shared = { route, edition: input.edition, level: input.level ?? null, system: variables.unitSystem, toughness: variables.toughnessRequired, procedure: variables, coupons: input.coupons }
-    const judge = (context: RuleContext): void => {
-      const judged: BlockJudgement = judgeBlock(standard, prepared, context, input.otherCoupons ?? [])
-      for (const finding of judged.findings) findings.push(finding)
-      for (const range of judged.ranges) ranges.push(range)
-    }
-    if (prepared.weld.length > 0) judge({ ...shared, path: '', block: null })
+    const { edition, coupons } = input
+    const level = input.level ?? null
+    const { unitSystem: system, toughnessRequired: toughness } = variables
+    const out = { findings, ranges }
+    const others = input.otherCoupons ?? []
+    if (prepared.weld.length > 0) judgeBlock(standard, prepared, { route, edition, level, system, toughness, procedure: variables, coupons, path: '', block: null }, others, out)
     for (let i = 0; i < variables.processes.length; i += 1) {
       const block = variables.processes[i] ?? null
-      if (block) judge({ ...shared, path: `processes.${i}`, block })
+      if (block) judgeBlock(standard, prepared, { route, edition, level, system, toughness, procedure: variables, coupons, path: `processes.${i}`, block }, others, out)
     }
   }
   return { standard: input.standard, edition: input.edition, unitSystem: variables.unitSystem, verdict: overall(findings), counts: count(findings), findings, ranges }

@@ -8,23 +8,48 @@
 import { unionAll } from '../ranges/span.ts'
 import type { AssessedCoupon, Basis, Finding, Fix, QualifiedRange, QualifiedSpan, VariableClass } from '../schemas/assessment.ts'
 import { weakest } from '../standards/common/rule-kinds.ts'
-import { capital, list, names } from '../standards/common/wording.ts'
+import { capital, distinct, list, names } from '../standards/common/wording.ts'
 import type { CouponSide, Rule, RuleContext, RuleRange, RuleVerdict, Standard } from '../standards/rule.ts'
 import { classBasis, effectiveClass, type PreparedEdition, type PreparedRule } from './prepare.ts'
 
 export interface BlockJudgement { findings: Finding[]; ranges: QualifiedRange[] }
 
-interface Item { rule: Rule; class: VariableClass; basis: Basis }
+/** A side with its place in the run and how it has fared so far among the `each` variables. */
+interface Linked extends CouponSide {
+  index: number
+  /** This side alone, as `check` takes it. */
+  alone: readonly Linked[]
+  essentialOutside: number
+  essentialUnsure: number
+  supplementaryOutside: number
+  supplementaryUnsure: number
+}
+
+interface Item {
+  rule: Rule
+  class: VariableClass
+  basis: Basis
+  field: string
+  /** Where its row starts in the run's grids. */
+  row: number
+}
+
 type Judged = RuleVerdict | null
 
 interface Run {
   standard: Standard
   context: RuleContext
-  sides: readonly CouponSide[]
+  sides: readonly Linked[]
   others: readonly AssessedCoupon[]
+  /** Sides of the coupons that are not linked; worked out when first asked for. */
+  otherSides: readonly CouponSide[] | null
   out: BlockJudgement
-  /** Each coupon's range of each rule, worked out once. */
-  known: Map<Rule, Map<CouponSide, RuleRange | null>>
+  /** The coupons named last, because neighbouring findings mostly name the same. */
+  named: readonly Linked[] | null
+  ids: readonly string[]
+  /** Grids of items by sides, row after row; undefined = not asked yet. Each range is worked out once. */
+  ranges: (RuleRange | null | undefined)[]
+  judged: (Judged | undefined)[]
 }
 
 /** Sides of a coupon for a block: its blocks of the same process, or the weld as a whole. */
@@ -39,24 +64,36 @@ export function sidesOf(standard: Standard, coupons: readonly AssessedCoupon[], 
   return sides
 }
 
-/** Judges one block. @returns its findings, and every range of every coupon that was asked */
-export function judgeBlock(standard: Standard, prepared: PreparedEdition, context: RuleContext, others: readonly AssessedCoupon[]): BlockJudgement {
-  const out: BlockJudgement = { findings: [], ranges: [] }
+function link({ coupon, variables, block, role }: CouponSide, index: number): Linked {
+  const alone: Linked[] = []
+  const linked: Linked = { coupon, variables, block, role, index, alone, essentialOutside: 0, essentialUnsure: 0, supplementaryOutside: 0, supplementaryUnsure: 0 }
+  alone.push(linked)
+  return linked
+}
+
+/**
+ * Judges one block.
+ * @param out takes its findings, and every range of every coupon that was asked
+ */
+export function judgeBlock(standard: Standard, prepared: PreparedEdition, context: RuleContext, others: readonly AssessedCoupon[], out: BlockJudgement): void {
   const rules = rulesFor(standard, prepared, context)
-  if (rules.length === 0) return out
-  const run: Run = { standard, context, sides: sidesOf(standard, context.coupons, context), others, out, known: new Map() }
+  if (rules.length === 0) return
+  const sides = sidesOf(standard, context.coupons, context).map(link)
+  const cells = rules.length * sides.length
+  const run: Run = { standard, context, sides, others, otherSides: null, out, named: null, ids: [], ranges: new Array<RuleRange | null | undefined>(cells), judged: new Array<Judged | undefined>(cells) }
   const each: Item[] = []
   const joint: Item[] = []
   const union: Item[] = []
+  let row = 0
   for (const { rule, class: ruleClass, classBasis: basis } of rules) {
-    const item: Item = { rule, class: effectiveClass(ruleClass, context.toughness), basis }
+    const item: Item = { rule, class: effectiveClass(ruleClass, context.toughness), basis, field: fieldOf(context, rule), row }
+    row += sides.length
     if (item.class === 'not-a-variable') notAVariable(run, item)
     else if (item.class === 'nonessential' || rule.meta.withoutCoupon) alone(run, item)
-    else if (run.sides.length === 0) unsupported(run, item)
+    else if (sides.length === 0) unsupported(run, item)
     else (rule.meta.combine === 'each' ? each : rule.meta.combine === 'jointly' ? joint : union).push(item)
   }
   if (each.length + joint.length + union.length > 0) judgeWithCoupons(run, each, joint, union)
-  return out
 }
 
 /** For the weld as a whole a rule takes its class from the first process that has one. */
@@ -71,96 +108,108 @@ function rulesFor(standard: Standard, prepared: PreparedEdition, context: RuleCo
   return rules
 }
 
-function rangeOf(run: Run, rule: Rule, side: CouponSide): RuleRange | null {
-  let row = run.known.get(rule)
-  if (!row) {
-    row = new Map<CouponSide, RuleRange | null>()
-    run.known.set(rule, row)
-  }
-  let range = row.get(side)
+function rangeOf(run: Run, item: Item, side: Linked): RuleRange | null {
+  const at = item.row + side.index
+  let range = run.ranges[at]
   if (range === undefined) {
-    range = rule.range(run.context, side)
-    row.set(side, range)
+    range = item.rule.range(run.context, side)
+    run.ranges[at] = range
   }
   return range
 }
 
-interface Single { range: RuleRange | null; judged: Judged }
+const isWithin = (judged: Judged | undefined): boolean => !judged || judged.verdict === 'within'
+const agreesEssential = (side: Linked): boolean => side.essentialOutside + side.essentialUnsure === 0
+const agreesSupplementary = (side: Linked): boolean => side.supplementaryOutside + side.supplementaryUnsure === 0
+const canFail = (side: Linked): boolean => side.essentialOutside + side.supplementaryOutside > 0
+const hasMechanical = (side: CouponSide): boolean => side.role !== 'toughness-only'
+const carriesToughness = (side: CouponSide): boolean => side.role !== 'mechanical'
+
+/** Judges one coupon by one `each` variable and keeps how it fared. */
+function judgeAlone(run: Run, item: Item, side: Linked): void {
+  const judged = item.rule.check(run.context, side.alone, rangeOf(run, item, side)?.range ?? null)
+  run.judged[item.row + side.index] = judged
+  if (judged === null || judged.verdict === 'within') return
+  if (item.class === 'supplementary') {
+    if (judged.verdict === 'outside') side.supplementaryOutside += 1
+    else side.supplementaryUnsure += 1
+  } else if (judged.verdict === 'outside') side.essentialOutside += 1
+  else side.essentialUnsure += 1
+}
 
 function judgeWithCoupons(run: Run, each: readonly Item[], joint: readonly Item[], union: readonly Item[]): void {
   const { context, sides } = run
   // Toughness coupons answer for supplementary variables; a purely mechanical record can't have recorded them.
-  const tough = context.toughness === true ? sides.filter((side) => side.role !== 'mechanical') : sides
+  const tough = context.toughness === true ? sides.filter(carriesToughness) : sides
   const judgesSupplementary = tough.length > 0 ? tough : sides
-  const grid = new Map<Item, Map<CouponSide, Single>>()
-  for (const item of each) {
-    const row = new Map<CouponSide, Single>()
-    for (const side of item.class === 'supplementary' ? judgesSupplementary : sides) {
-      const range = rangeOf(run, item.rule, side)
-      row.set(side, { range, judged: item.rule.check(context, [side], range?.range ?? null) })
-    }
-    grid.set(item, row)
-  }
-  const verdictsOf = (side: CouponSide, ofClass: VariableClass): Single[] => each.filter((item) => item.class === ofClass).flatMap((item) => grid.get(item)?.get(side) ?? [])
-  const agrees = (side: CouponSide, ofClass: VariableClass): boolean => each.every((item) => item.class !== ofClass || verdictIs(grid.get(item)?.get(side)))
-  const essential = sides.filter((side) => agrees(side, 'essential'))
-  let supplementary = judgesSupplementary.filter((side) => essential.includes(side) && agrees(side, 'supplementary'))
-  const lead = pickLead(sides, (side) => [...verdictsOf(side, 'essential'), ...verdictsOf(side, 'supplementary')])
-  const toughLead = pickLead(essential.some((side) => judgesSupplementary.includes(side)) ? judgesSupplementary.filter((side) => essential.includes(side)) : judgesSupplementary, (side) => verdictsOf(side, 'supplementary'))
+  for (const item of each) for (const side of item.class === 'supplementary' ? judgesSupplementary : sides) judgeAlone(run, item, side)
+  const essential = sides.filter(agreesEssential)
+  let supplementary: readonly Linked[] = judgesSupplementary.filter((side) => agreesEssential(side) && agreesSupplementary(side))
+  const lead = pickLead(sides, true)
+  const toughAgreeing = judgesSupplementary.filter(agreesEssential)
+  const toughLead = pickLead(toughAgreeing.length > 0 ? toughAgreeing : judgesSupplementary, false)
 
   for (const item of each) {
-    const row = grid.get(item)
     const group = item.class === 'essential' ? essential : supplementary
-    const chosen = group.length > 0 ? group : [item.class === 'essential' ? lead : toughLead].filter((side) => side !== null)
-    const first = chosen[0] && row?.get(chosen[0])
-    if (row) for (const [side, { range }] of row) pushRange(run, item, side, range)
-    if (first) pushFinding(run, item, chosen, first.judged, chosen.length < sides.length && group.length === 0 ? [`No linked coupon covers every variable of this process by itself; ${names(chosen)} comes nearest.`] : [])
+    const nearest = item.class === 'essential' ? lead : toughLead
+    const chosen = group.length > 0 ? group : nearest ? nearest.alone : []
+    for (const side of sides) if (run.judged[item.row + side.index] !== undefined) pushRange(run, item, side, rangeOf(run, item, side))
+    const first = chosen[0]
+    const judged = first && run.judged[item.row + first.index]
+    if (judged) pushFinding(run, item, chosen, judged, chosen.length < sides.length && group.length === 0 ? `No linked coupon covers every variable of this process by itself; ${names(chosen)} comes nearest.` : null)
   }
 
   for (const item of joint) {
-    const candidates = supplementary.length > 0 ? supplementary : toughLead ? [toughLead] : []
-    const ranges = candidates.map((side) => rangeOf(run, item.rule, side))
-    candidates.forEach((side, i) => pushRange(run, item, side, ranges[i] ?? null))
-    const alones = candidates.filter((side, i) => verdictIs({ range: ranges[i] ?? null, judged: item.rule.check(context, [side], ranges[i]?.range ?? null) }))
+    const candidates = supplementary.length > 0 ? supplementary : toughLead ? toughLead.alone : []
+    for (const side of candidates) pushRange(run, item, side, rangeOf(run, item, side))
+    const alones = candidates.filter((side) => isWithin(item.rule.check(context, side.alone, rangeOf(run, item, side)?.range ?? null)))
     const used = alones.length > 0 ? alones : candidates
-    const judged = item.rule.check(context, used, joinRanges(run, item.rule, used))
+    const judged = item.rule.check(context, used, joinRanges(run, item, used))
     if (alones.length > 0) supplementary = alones
-    pushFinding(run, item, used, judged, [])
+    pushFinding(run, item, used, judged, null)
   }
 
-  const canFail = (side: CouponSide): boolean => each.some((item) => grid.get(item)?.get(side)?.judged?.verdict === 'outside')
+  if (union.length > 0) judgeUnion(run, each, union, { essential, supplementary, lead })
+}
+
+interface Groups { essential: readonly Linked[]; supplementary: readonly Linked[]; lead: Linked | null }
+
+/** The coupons whose ranges join for a variable of that class. */
+function joining(toughness: boolean | null, essentialClass: boolean, { essential, supplementary, lead }: Groups): readonly Linked[] {
+  let used = essential
+  if (toughness === true) used = essential.filter((side) => side.role === 'mechanical' || supplementary.length === 0 || supplementary.includes(side))
+  else if (!essentialClass) used = supplementary
+  if (essentialClass && used.some(hasMechanical)) used = used.filter(hasMechanical)
+  return used.length === 0 && lead ? lead.alone : used
+}
+
+function judgeUnion(run: Run, each: readonly Item[], union: readonly Item[], groups: Groups): void {
+  const { context, sides } = run
+  const byClass = [joining(context.toughness, true, groups), joining(context.toughness, false, groups)] as const
   for (const item of union) {
-    const mechanical = item.class === 'essential'
-    let used = context.toughness !== true ? essential : essential.filter((side) => (side.role === 'mechanical' ? true : supplementary.length === 0 || supplementary.includes(side)))
-    if (context.toughness !== true && !mechanical) used = supplementary
-    if (mechanical && used.some((side) => side.role !== 'toughness-only')) used = used.filter((side) => side.role !== 'toughness-only')
-    if (used.length === 0 && lead) used = [lead]
-    for (const side of sides) pushRange(run, item, side, rangeOf(run, item.rule, side))
-    const judged = item.rule.check(context, used, joinRanges(run, item.rule, used))
-    const maybe = judged && judged.verdict === 'outside' && sides.length > used.length ? sides.filter((side) => !used.includes(side) && !canFail(side) && side.role !== 'toughness-only') : []
+    const used = item.class === 'essential' ? byClass[0] : byClass[1]
+    for (const side of sides) pushRange(run, item, side, rangeOf(run, item, side))
+    const judged = item.rule.check(context, used, joinRanges(run, item, used))
+    const maybe = judged && judged.verdict === 'outside' && sides.length > used.length ? sides.filter((side) => !used.includes(side) && !canFail(side) && hasMechanical(side)) : []
     if (judged && maybe.length > 0) {
-      const pool = canFail(used[0] as CouponSide) ? maybe : [...used, ...maybe]
-      const wider = item.rule.check(context, pool, joinRanges(run, item.rule, pool))
+      const pool = used[0] && !canFail(used[0]) ? [...used, ...maybe] : maybe
+      const wider = item.rule.check(context, pool, joinRanges(run, item, pool))
       if (wider && wider.verdict !== 'outside') {
-        const missing = maybe.flatMap((side) => each.flatMap((other) => grid.get(other)?.get(side)?.judged?.missing ?? []))
-        pushFinding(run, item, pool, { ...wider, verdict: 'cannot-tell', sentence: `${wider.sentence} But whether ${names(maybe)} agrees in the other variables can't be told yet.`, missing: [...new Set([...(wider.missing ?? []), ...missing])] }, [])
+        const missing = maybe.flatMap((side) => each.flatMap((other) => run.judged[other.row + side.index]?.missing ?? []))
+        pushFinding(run, item, pool, { ...wider, verdict: 'cannot-tell', sentence: `${wider.sentence} But whether ${names(maybe)} agrees in the other variables can't be told yet.`, missing: [...new Set([...(wider.missing ?? []), ...missing])] }, null)
         continue
       }
     }
-    pushFinding(run, item, used, judged, used.length > 1 ? [`${names(used)} agree in the other variables, so their ranges join; a gap stays uncovered.`] : [])
+    pushFinding(run, item, used, judged, used.length > 1 ? `${names(used)} agree in the other variables, so their ranges join; a gap stays uncovered.` : null)
   }
 }
 
-const verdictIs = (single: Single | undefined): boolean => !single || single.judged === null || single.judged.verdict === 'within'
-
 /** The coupon that comes nearest: fewest variables outside, then fewest that can't be told, then as linked. */
-function pickLead(sides: readonly CouponSide[], verdicts: (side: CouponSide) => readonly Single[]): CouponSide | null {
-  if (sides.length < 2) return sides[0] ?? null
-  let best: CouponSide | null = null
+function pickLead(sides: readonly Linked[], withEssential: boolean): Linked | null {
+  let best: Linked | null = null
   let bestScore = Infinity
   for (const side of sides) {
-    let score = 0
-    for (const { judged } of verdicts(side)) score += judged === null || judged.verdict === 'within' ? 0 : judged.verdict === 'outside' ? 1000 : 1
+    const score = side.supplementaryOutside * 1000 + side.supplementaryUnsure + (withEssential ? side.essentialOutside * 1000 + side.essentialUnsure : 0)
     if (score < bestScore) {
       best = side
       bestScore = score
@@ -169,96 +218,120 @@ function pickLead(sides: readonly CouponSide[], verdicts: (side: CouponSide) => 
   return best
 }
 
-function joinRanges(run: Run, rule: Rule, sides: readonly CouponSide[]): QualifiedSpan | null {
-  const ranges = sides.map((side) => rangeOf(run, rule, side))
-  if (rule.join) return rule.join(run.context, sides, ranges)
-  return unionAll(ranges.flatMap((range) => (range ? [range.range] : [])))
+function joinRanges(run: Run, item: Item, sides: readonly Linked[]): QualifiedSpan | null {
+  const { rule } = item
+  if (rule.join) return rule.join(run.context, sides, sides.map((side) => rangeOf(run, item, side)))
+  const spans: QualifiedSpan[] = []
+  for (const side of sides) {
+    const range = rangeOf(run, item, side)
+    if (range) spans.push(range.range)
+  }
+  return unionAll(spans)
 }
 
 function pushRange(run: Run, item: Item, side: CouponSide, given: RuleRange | null): void {
   if (!given) return
   const { rule } = item
+  const { block } = run.context
   run.out.ranges.push({
     ruleId: rule.meta.id,
     variable: rule.meta.title,
     label: rule.label,
-    field: fieldOf(run.context, rule),
-    processId: run.context.block?.id ?? null,
-    process: run.context.block?.process ?? null,
+    field: item.field,
+    processId: block === null ? null : block.id,
+    process: block === null ? null : block.process,
     class: item.class,
     range: given.range,
     tested: given.tested,
     couponId: side.coupon.id,
     clause: given.clause ?? rule.meta.clause,
-    basis: weakest(given.basis ?? rule.meta.basis, item.basis),
+    basis: given.basis ? weakest(given.basis, item.basis) : item.basis,
     reason: given.reason,
   })
 }
 
 const fieldOf = (context: RuleContext, rule: Rule): string => (rule.at === 'block' && context.path ? `${context.path}.${rule.field}` : rule.field)
 
-function pushFinding(run: Run, item: Item, sides: readonly CouponSide[], judged: Judged, notes: readonly string[]): void {
+function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Judged, note: string | null): void {
   if (!judged) return
+  const { context } = run
   const { rule } = item
-  const tentative = item.class === 'supplementary' && run.context.toughness === null && judged.verdict === 'outside'
+  const { meta } = rule
+  const tentative = item.class === 'supplementary' && context.toughness === null && judged.verdict === 'outside'
   const verdict = tentative ? 'cannot-tell' : judged.verdict
-  const fixes: Fix[] = tentative ? [{ kind: 'state', label: 'State whether toughness is required', field: 'toughnessRequired' }, ...(judged.fixes ?? [])] : [...(judged.fixes ?? [])]
+  const fixes: Fix[] = judged.fixes ? [...judged.fixes] : []
+  if (tentative) fixes.unshift({ kind: 'state', label: 'State whether toughness is required', field: 'toughnessRequired' })
   if (verdict !== 'within' && run.others.length > 0 && item.class !== 'nonessential') offerOthers(run, rule, fixes)
-  const tested: Finding['tested'] = judged.tested ? [...judged.tested] : []
-  if (!judged.tested) {
-    for (const side of sides) {
-      const value = rangeOf(run, rule, side)?.tested
-      if (value !== null && value !== undefined) tested.push(value)
-    }
-  }
   run.out.findings.push({
-    ruleId: rule.meta.id,
+    ruleId: meta.id,
     standard: run.standard.id,
-    edition: run.context.edition,
-    clause: judged.clause ?? rule.meta.clause,
-    title: rule.meta.title,
+    edition: context.edition,
+    clause: judged.clause ?? meta.clause,
+    title: meta.title,
     verdict,
     class: judged.class ?? item.class,
-    field: judged.field ?? fieldOf(run.context, rule),
-    processId: run.context.block?.id ?? null,
+    field: judged.field ?? item.field,
+    processId: context.block === null ? null : context.block.id,
     sentence: tentative ? `${judged.sentence} It matters only if toughness is required, which isn't stated.` : judged.sentence,
     asked: judged.asked,
     range: judged.range,
-    tested,
-    couponIds: [...new Set(sides.map((side) => side.coupon.id))],
-    missing: tentative ? ['procedure: toughnessRequired', ...(judged.missing ?? [])] : missingOf(run, rule, sides, judged),
+    tested: judged.tested ? [...judged.tested] : testedOf(run, item, sides),
+    couponIds: idsOf(run, sides),
+    missing: tentative ? ['procedure: toughnessRequired', ...(judged.missing ?? [])] : missingOf(run, item, sides, judged),
     fixes,
-    basis: weakest(judged.basis ?? rule.meta.basis, item.basis),
-    source: rule.meta.source,
-    reasoning: [...steps(run, rule, sides), ...(judged.reasoning ?? []), ...notes],
+    basis: judged.basis ? weakest(judged.basis, item.basis) : item.basis,
+    source: meta.source,
+    reasoning: stepsOf(run, item, sides, judged, note),
   })
 }
 
+const idOf = (side: CouponSide): string => side.coupon.id
+
+function idsOf(run: Run, sides: readonly Linked[]): string[] {
+  if (run.named !== sides) {
+    run.named = sides
+    run.ids = distinct(sides, idOf)
+  }
+  return run.ids.slice()
+}
+
+function testedOf(run: Run, item: Item, sides: readonly Linked[]): Finding['tested'] {
+  const tested: Finding['tested'] = []
+  for (const side of sides) {
+    const value = rangeOf(run, item, side)?.tested
+    if (value !== null && value !== undefined) tested.push(value)
+  }
+  return tested
+}
+
 /** Of the coupons only those that lack something are named; what the procedure lacks stays. */
-function missingOf(run: Run, rule: Rule, sides: readonly CouponSide[], judged: RuleVerdict): string[] {
+function missingOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict): string[] {
   const told = judged.missing ?? []
   if (judged.verdict !== 'cannot-tell') return [...told]
-  const lacking = sides.flatMap((side) => rangeOf(run, rule, side)?.missing ?? [])
+  const lacking = sides.flatMap((side) => rangeOf(run, item, side)?.missing ?? [])
   return lacking.length === 0 ? [...told] : [...new Set([...told.filter((text) => text.startsWith('procedure')), ...lacking])]
 }
 
-/** From each coupon's value to its range, for the opened reasoning. */
-function steps(run: Run, rule: Rule, sides: readonly CouponSide[]): string[] {
+/** From each coupon's value to its range, then the rule's own steps: for the opened reasoning. */
+function stepsOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict, note: string | null): string[] {
   const told: string[] = []
   for (const side of sides) {
-    const range = rangeOf(run, rule, side)
+    const range = rangeOf(run, item, side)
     if (range) told.push(`${side.coupon.number}: ${range.reason}`)
     if (side.variables.unitSystem !== run.context.system) told.push(`${side.coupon.number} is recorded in ${side.variables.unitSystem} units; it is judged by the ${run.context.system} figures, as the procedure is.`)
   }
+  if (judged.reasoning) told.push(...judged.reasoning)
+  if (note !== null) told.push(note)
   return told
 }
 
-/** Stored coupons that would cover this variable. */
+/** Stored coupons that would cover this variable, three at most. */
 function offerOthers(run: Run, rule: Rule, fixes: Fix[]): void {
+  run.otherSides ??= sidesOf(run.standard, run.others, run.context).filter((side) => !run.sides.some((linked) => linked.coupon.id === side.coupon.id))
   let offered = 0
-  for (const side of sidesOf(run.standard, run.others, run.context)) {
-    if (offered === 3 || run.sides.some((linked) => linked.coupon.id === side.coupon.id)) continue
-    const judged = rule.check(run.context, [side], rangeOf(run, rule, side)?.range ?? null)
+  for (const side of run.otherSides) {
+    if (offered === 3) return
+    const judged = rule.check(run.context, [side], rule.range(run.context, side)?.range ?? null)
     if (judged?.verdict !== 'within' || fixes.some((fix) => fix.kind === 'link-coupon' && fix.couponId === side.coupon.id)) continue
     fixes.push({ kind: 'link-coupon', label: `Link ${side.coupon.number}, which covers it`, couponId: side.coupon.id })
     offered += 1
@@ -267,17 +340,17 @@ function offerOthers(run: Run, rule: Rule, fixes: Fix[]): void {
 
 /** The procedure's own value, or a rule that needs no coupon. */
 function alone(run: Run, item: Item): void {
-  pushFinding(run, item, run.sides, item.rule.check(run.context, run.sides, null), [])
+  pushFinding(run, item, run.sides, item.rule.check(run.context, run.sides, null), null)
 }
 
 function notAVariable(run: Run, item: Item): void {
   if (item.rule.applies && !item.rule.applies(run.context)) return
-  pushFinding(run, item, [], { verdict: 'within', sentence: `${item.rule.label} is no variable here, because toughness is not required.`, asked: null, range: null, tested: [] }, [])
+  pushFinding(run, item, [], { verdict: 'within', sentence: `${item.rule.label} is no variable here, because toughness is not required.`, asked: null, range: null, tested: [] }, null)
 }
 
 function unsupported(run: Run, item: Item): void {
   if (item.rule.applies && !item.rule.applies(run.context)) return
   const process = run.context.block?.process ?? 'this weld'
   const why = run.context.coupons.length === 0 ? 'no coupon is linked' : `none of ${list([...new Set(run.context.coupons.map((coupon) => coupon.number))])} was welded with ${process}`
-  pushFinding(run, item, [], { verdict: 'cannot-tell', sentence: `${capital(item.rule.label)} can't be judged: no coupon supports this process (${why}).`, asked: null, range: null, tested: [], missing: [`a coupon welded with ${process}`], fixes: [{ kind: 'plan-coupon', label: `Weld a coupon with ${process}`, requirement: `A coupon welded with ${process}.` }] }, [])
+  pushFinding(run, item, [], { verdict: 'cannot-tell', sentence: `${capital(item.rule.label)} can't be judged: no coupon supports this process (${why}).`, asked: null, range: null, tested: [], missing: [`a coupon welded with ${process}`], fixes: [{ kind: 'plan-coupon', label: `Weld a coupon with ${process}`, requirement: `A coupon welded with ${process}.` }] }, null)
 }

@@ -37,7 +37,7 @@ export function prepare(standard: Standard, edition: string, route: Route = 'tes
 }
 
 function build(standard: Standard, edition: string, route: Route): PreparedEdition {
-  const rules = standard.rules.filter((rule) => rule.meta.editions.includes(edition) && (rule.meta.route ?? route) === route)
+  const rules = standard.rules.filter((rule) => rule.meta.editions.includes(edition) && (rule.meta.route ?? route) === route).map(alike)
   const byProcess = new Map<Process, PreparedRule[]>()
   for (const process of standard.processes) {
     const own: PreparedRule[] = []
@@ -49,6 +49,12 @@ function build(standard: Standard, edition: string, route: Route): PreparedEditi
   }
   return { weld: rules.filter((rule) => rule.meta.scope === 'weld'), byProcess }
 }
+
+const blankMeta = (): Partial<Rule['meta']> => ({ id: undefined, title: undefined, standard: undefined, clause: undefined, editions: undefined, classes: undefined, basis: undefined, classBasis: undefined, source: undefined, statement: undefined, scope: undefined, combine: undefined, route: undefined, withoutCoupon: undefined })
+const blankRule = (): Partial<Rule> => ({ meta: undefined, field: undefined, at: undefined, label: undefined, applies: undefined, range: undefined, join: undefined, check: undefined })
+
+/** The same rule with its properties in one order: rules are written in many shapes, and the engine reads one shape faster. */
+const alike = (rule: Rule): Rule => Object.assign(blankRule(), rule, { meta: Object.assign(blankMeta(), rule.meta) })
 
 /** Basis of the class letter of a rule for a process. */
 export function classBasis(rule: Rule, process: Process | null): Basis {

@@ -50,9 +50,18 @@ export const isCertain = ({ lower, upper }: Segment): boolean => lower.kind !== 
 const bySegment = (a: Segment, b: Segment): number =>
   compareLower(a.lower, b.lower) || compareUpper(a.upper, b.upper) || a.lower.kind.localeCompare(b.lower.kind) || a.upper.kind.localeCompare(b.upper.kind)
 
+/** What two coupons usually give, without sorting. */
+function mergeTwo(a: Segment, b: Segment): Segment[] {
+  const [first, second] = bySegment(a, b) <= 0 ? [a, b] : [b, a]
+  if (!meets(first.upper, second.lower)) return [first, second]
+  return [compareUpper(first.upper, second.upper) < 0 ? { lower: first.lower, upper: second.upper } : first]
+}
+
 /** Sorts, drops empty segments, merges certain ones that meet, and drops uncertain ones told twice. */
 function normalise(segments: readonly Segment[]): Segment[] {
-  if (segments.length === 1 && segments[0] && !isEmpty(segments[0])) return [segments[0]]
+  const [one, two] = segments
+  if (segments.length === 1 && one && !isEmpty(one)) return [one]
+  if (segments.length === 2 && one && two && isCertain(one) && isCertain(two) && !isEmpty(one) && !isEmpty(two)) return mergeTwo(one, two)
   const certain: Segment[] = []
   const uncertain: Segment[] = []
   for (const segment of [...segments].sort(bySegment)) {
@@ -133,6 +142,8 @@ function startsBy(upper: Bound, lower: Bound): boolean {
  */
 export function containsInterval(range: NumericRange, asked: Asked): Verdict {
   if (asked.min !== null && asked.max !== null && asked.min > asked.max) return 'cannot-tell'
+  const [only] = range.segments
+  if (range.segments.length === 1 && only) return covers(range.segments, asked) ? (isCertain(only) ? 'within' : 'cannot-tell') : 'outside'
   const certain = range.segments.every(isCertain) ? range.segments : range.segments.filter(isCertain)
   if (covers(certain, asked)) return 'within'
   if (certain.length === range.segments.length) return 'outside'

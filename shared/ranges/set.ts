@@ -1,10 +1,16 @@
 /** Algebra over ranges that are named values or combinations. `any` covers everything; `unknown` says that more may be covered. */
 import type { SetRange, Verdict } from '../schemas/assessment.ts'
 
+/** Already sorted and told once, as most lists of names are. */
+function isOrdered(values: readonly string[]): boolean {
+  for (let i = 1; i < values.length; i += 1) if ((values[i - 1] ?? '') >= (values[i] ?? '')) return false
+  return true
+}
+
 /** The given names, sorted and told once. */
 export const setRange = (values: readonly string[], flags: { any?: boolean; unknown?: boolean } = {}): SetRange => ({
   type: 'set',
-  values: values.length < 2 ? [...values] : [...new Set(values)].sort(),
+  values: isOrdered(values) ? values.slice() : [...new Set(values)].sort(),
   any: flags.any ?? false,
   unknown: flags.unknown ?? false,
 })
@@ -23,9 +29,14 @@ export function intersectSet(a: SetRange, b: SetRange): SetRange {
   return setRange(a.values.filter((value) => b.values.includes(value)), { unknown: a.unknown || b.unknown })
 }
 
+function includesAll(values: readonly string[], asked: readonly string[]): boolean {
+  for (const name of asked) if (!values.includes(name)) return false
+  return true
+}
+
 /** `within` only when every asked name is certainly covered. Nothing asked can't be judged. */
 export function containsNames(range: SetRange, asked: readonly string[]): Verdict {
   if (asked.length === 0) return 'cannot-tell'
-  if (range.any || asked.every((name) => range.values.includes(name))) return 'within'
+  if (range.any || includesAll(range.values, asked)) return 'within'
   return range.unknown ? 'cannot-tell' : 'outside'
 }

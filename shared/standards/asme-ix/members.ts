@@ -1,15 +1,17 @@
 /** Names of base metals as the rules compare them: P-Numbers, or the metal itself where it has none. */
 import type { BaseMetal, WeldingVariables } from '../../schemas/welding.ts'
 import { figures, isStated } from '../common/reading.ts'
+import { remember, rememberPair } from '../common/remember.ts'
 import type { RangeContext } from '../rule.ts'
 import type { Member } from './ranges.ts'
 
 /** `P-1`, `p 5a`, `1` → `1`, `5A`; null where none is recorded. */
-export function pNumber(metal: BaseMetal): string | null {
-  if (!metal.pNumber) return null
-  const text = metal.pNumber.trim().toUpperCase().replace(/^P(-?\s*NO\.?)?[\s-]*/, '')
+export const pNumber = (metal: BaseMetal): string | null => (metal.pNumber ? bareNumber(metal.pNumber) : null)
+
+const bareNumber = remember((written) => {
+  const text = written.trim().toUpperCase().replace(/^P(-?\s*NO\.?)?[\s-]*/, '')
   return text === '' ? null : text
-}
+})
 
 /** The second member: itself, or the first where nothing is said of a second. */
 export function secondMetal(variables: WeldingVariables): BaseMetal {
@@ -30,11 +32,13 @@ export const pFamily = (p: string): number => Number.parseInt(p, 10)
 export const byPNumber = (a: string, b: string): number => pFamily(b) - pFamily(a) || b.localeCompare(a)
 
 /** One name for a pair of metals whichever way round it is written. */
-export const pairName = (a: string, b: string): string => [a, b].sort(byPNumber).map((p) => `P-${p}`).join(' to ')
+export const pairName = rememberPair((a, b) => [a, b].sort(byPNumber).map((p) => `P-${p}`).join(' to '))
 
 /** P-Numbers of both members, those that are known. */
 export function pNumbers(variables: WeldingVariables): string[] {
-  return [pNumber(variables.baseMetals.a), pNumber(secondMetal(variables))].filter((p) => p !== null)
+  const a = pNumber(variables.baseMetals.a)
+  const b = pNumber(secondMetal(variables))
+  return a === null ? (b === null ? [] : [b]) : b === null ? [a] : [a, b]
 }
 
 /** Iron-based by P-Number (1 to 15); null when not known. */
@@ -49,7 +53,8 @@ export function memberOf(context: Pick<RangeContext, 'procedure' | 'system'>, wh
   if (!procedure || !isStated(procedure.thicknessB)) return 'single'
   const a = figures(procedure.thickness, 'length', system)
   const b = figures(procedure.thicknessB, 'length', system)
-  const top = (end: typeof a): number => (end.all ? Infinity : (end.max ?? Infinity))
-  const aIsThin = top(a) < top(b) || (top(a) === top(b) && (a.min ?? 0) <= (b.min ?? 0))
+  const topA = a.all ? Infinity : (a.max ?? Infinity)
+  const topB = b.all ? Infinity : (b.max ?? Infinity)
+  const aIsThin = topA < topB || (topA === topB && (a.min ?? 0) <= (b.min ?? 0))
   return (which === 'a') === aIsThin ? 'thin' : 'thick'
 }

@@ -45,28 +45,37 @@ export const isLongitudinal = (side: Pick<CouponSide, 'coupon'>): boolean => {
  */
 export function baseMetalLimit(T: number, process: Process, system: UnitSystem, longitudinal = false): Limit {
   const f = FIGURES[system]
-  const unit = unitOf('length', system)
   const twice = 2 * T
-  const clause = longitudinal ? 'QW-451.2' : 'QW-451.1'
-  const basis: Basis = longitudinal ? 'memory' : 'read'
-  if (T < f.thin) return { lower: T, upper: twice, how: { lower: 'T', upper: '2T' }, clause, basis }
+  if (T < f.thin) return limit(T, twice, 'T', '2T', longitudinal)
   const lower = T <= f.low ? f.lowMin : f.highMin
-  const band = T <= f.low ? `for T up to ${show(f.low, unit)}` : `for T above ${show(f.low, unit)}`
-  if (longitudinal || T < f.thick) return { lower, upper: twice, how: { lower: band, upper: '2T' }, clause, basis }
-  if (T <= f.heavy) {
-    return NOTE_3.has(process) ? { lower, upper: f.thickMax, how: { lower: band, upper: `for T from ${show(f.thick, unit)}` }, clause, basis } : { lower, upper: twice, how: { lower: band, upper: '2T' }, clause, basis }
-  }
-  return { lower, upper: tidy(1.33 * T), how: { lower: band, upper: '1.33T' }, clause, basis }
+  const band = T <= f.low ? BANDS[system].low : BANDS[system].high
+  if (longitudinal || T < f.thick) return limit(lower, twice, band, '2T', longitudinal)
+  if (T <= f.heavy) return NOTE_3.has(process) ? limit(lower, f.thickMax, band, BANDS[system].thick, longitudinal) : limit(lower, twice, band, '2T', longitudinal)
+  return limit(lower, tidy(1.33 * T), band, '1.33T', longitudinal)
 }
+
+const limit = (lower: number | null, upper: number | null, howLower: string | null, howUpper: string | null, longitudinal: boolean): Limit => ({
+  lower,
+  upper,
+  how: { lower: howLower, upper: howUpper },
+  clause: longitudinal ? 'QW-451.2' : 'QW-451.1',
+  basis: longitudinal ? 'memory' : 'read',
+})
+
+/** Rows of the table in words. */
+const bandsOf = (system: UnitSystem): { low: string; high: string; thick: string } => {
+  const unit = unitOf('length', system)
+  const f = FIGURES[system]
+  return { low: `for T up to ${show(f.low, unit)}`, high: `for T above ${show(f.low, unit)}`, thick: `for T from ${show(f.thick, unit)}` }
+}
+const BANDS = { SI: bandsOf('SI'), US: bandsOf('US') } as const
 
 /** Deposit limit of one process in the same tables. @param t deposit of the process in the coupon */
 export function depositLimit(T: number, t: number, process: Process, system: UnitSystem, longitudinal = false): Limit {
   const f = FIGURES[system]
-  const table = longitudinal ? ({ clause: 'QW-451.2', basis: 'memory' } as const) : ({ clause: 'QW-451.1', basis: 'read' } as const)
-  const twiceDeposit: Limit = { lower: null, upper: 2 * t, how: { lower: null, upper: '2t' }, ...table }
-  if (longitudinal || T < f.sideBends || t < f.sideBends) return twiceDeposit
+  if (longitudinal || T < f.sideBends || t < f.sideBends) return limit(null, 2 * t, null, '2t', longitudinal)
   const base = baseMetalLimit(T, process, system)
-  return { lower: null, upper: base.upper, how: { lower: null, upper: base.how.upper }, ...table }
+  return limit(null, base.upper, null, base.how.upper, longitudinal)
 }
 
 /** Any pass of this block over 13 mm (1/2 in.): null = not known. A deposit that is no thicker can't hold such a pass. */
@@ -153,13 +162,12 @@ export function baseMetalSpan(context: RangeContext, side: CouponSide, member: M
   if (!block?.process || T === null) {
     return { range: unknownLength(system), tested: null, lower: null, upper: null, how: { lower: null, upper: null }, reason: `${number} has no single thickness recorded.`, clause: 'QW-451', basis: 'read', missing: lacksThickness(side) }
   }
-  const limit = baseMetalLimit(T, block.process, system, isLongitudinal(side))
-  const span: BaseMetalSpan = { range: unknownLength(system), tested: T, lower: limit.lower, upper: limit.upper, how: { ...limit.how }, reason: '', clause: limit.clause, basis: limit.basis, missing: [] }
-  const steps = [`T = ${show(T, unit)} gives ${show(limit.lower ?? 0, unit)} to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`]
-  const upperUnknown = narrow(context, side, block, T, span, steps)
-  lift(context, side, T, member, span, steps)
+  const { lower, upper, how, clause, basis } = baseMetalLimit(T, block.process, system, isLongitudinal(side))
+  const reason = `T = ${show(T, unit)} gives ${show(lower ?? 0, unit)} to ${show(upper ?? 0, unit)} (${how.upper ?? ''}) by ${clause}.`
+  const span: BaseMetalSpan = { range: unknownLength(system), tested: T, lower, upper, how, reason, clause, basis, missing: [] }
+  const upperUnknown = narrow(context, side, block, T, span)
+  lift(context, side, T, member, span)
   span.range = upperUnknown ? uncertainAbove(system, span.lower ?? 0, tidy(1.1 * T), span.upper) : length(system, span.lower, span.upper)
-  span.reason = steps.join(' ')
   return span
 }
 
@@ -173,56 +181,61 @@ function uncertainAbove(system: UnitSystem, lower: number, certain: number, poss
 /** The procedure's entry whose absence leaves QW-403.9 open. */
 export const lacksPassThickness = ({ procedure, block }: RangeContext): string => `procedure: processes.${Math.max(0, procedure?.processes.findIndex(({ id }) => id === block?.id) ?? 0)}.maxPassThickness`
 
+/** Holds the upper end to 1.1 T, unless it is lower already. */
+function cut(span: BaseMetalSpan, T: number, unit: string, clause: string, why: string): void {
+  const upper = tidy(1.1 * T)
+  if (span.upper !== null && span.upper <= upper) return
+  span.upper = upper
+  span.how.upper = '1.1T'
+  span.clause = clause
+  span.basis = 'secondary'
+  span.reason += ` ${why}: ${clause} holds it to ${show(upper, unit)} (1.1T).`
+}
+
 /** QW-403.9 and QW-403.10. @returns true when the upper end can't be told because a pass thickness isn't recorded */
-function narrow(context: RangeContext, side: CouponSide, block: ProcessBlock, T: number, span: BaseMetalSpan, steps: string[]): boolean {
+function narrow(context: RangeContext, side: CouponSide, block: ProcessBlock, T: number, span: BaseMetalSpan): boolean {
   const { system } = context
   const unit = unitOf('length', system)
-  const cut = (clause: string, why: string): void => {
-    const upper = tidy(1.1 * T)
-    if (span.upper !== null && span.upper <= upper) return
-    span.upper = upper
-    span.how.upper = '1.1T'
-    span.clause = clause
-    span.basis = 'secondary'
-    steps.push(`${why}: ${clause} holds it to ${show(upper, unit)} (1.1T).`)
-  }
-  if (shortCircuitBinds(context.edition, block) && T < FIGURES[system].pass) cut('QW-403.10', `Short-circuiting transfer on a coupon under ${show(FIGURES[system].pass, unit)}`)
+  const { pass } = FIGURES[system]
+  if (T < pass && shortCircuitBinds(context.edition, block)) cut(span, T, unit, 'QW-403.10', `Short-circuiting transfer on a coupon under ${show(pass, unit)}`)
   if (block.process === 'GTAW' || block.process === 'PAW') return false
   const own = hasThickPass(block, system, single(block.depositThickness, 'length', system) ?? T)
   const asked = context.block ? hasThickPass(context.block, system, figures(context.block.depositThickness, 'length', system).max) : false
-  if (own === true) cut('QW-403.9', `A pass of the coupon was thicker than ${show(FIGURES[system].pass, unit)}`)
-  else if (asked === true) cut('QW-403.9', `The procedure allows a pass thicker than ${show(FIGURES[system].pass, unit)}`)
+  if (own === true) cut(span, T, unit, 'QW-403.9', `A pass of the coupon was thicker than ${show(pass, unit)}`)
+  else if (asked === true) cut(span, T, unit, 'QW-403.9', `The procedure allows a pass thicker than ${show(pass, unit)}`)
   else if (own === null || asked === null) {
     if (own === null) span.missing.push(`${side.coupon.number}: maxPassThickness`)
     if (asked === null) span.missing.push(lacksPassThickness(context))
-    steps.push(`Whether a pass is thicker than ${show(FIGURES[system].pass, unit)} isn't recorded, so above ${show(tidy(1.1 * T), unit)} (1.1T) it can't be told (QW-403.9).`)
+    span.reason += ` Whether a pass is thicker than ${show(pass, unit)} isn't recorded, so above ${show(tidy(1.1 * T), unit)} (1.1T) it can't be told (QW-403.9).`
     return true
   }
   return false
 }
 
+/** Takes the upper limit away. */
+function free(span: BaseMetalSpan, clause: string, basis: Basis, why: string): void {
+  span.upper = null
+  span.how.upper = null
+  span.clause = clause
+  span.basis = basis
+  span.reason += ` ${why}: ${clause} sets no upper limit.`
+}
+
 /** The clauses that lift the upper limit, where the procedure's weld falls under them. */
-function lift(context: RangeContext, side: CouponSide, T: number, member: Member, span: BaseMetalSpan, steps: string[]): void {
+function lift(context: RangeContext, side: CouponSide, T: number, member: Member, span: BaseMetalSpan): void {
   const { system, procedure } = context
   if (!procedure) return
   const f = FIGURES[system]
   const unit = unitOf('length', system)
-  const free = (clause: string, basis: Basis, why: string): void => {
-    span.upper = null
-    span.how.upper = null
-    span.clause = clause
-    span.basis = basis
-    steps.push(`${why}: ${clause} sets no upper limit.`)
-  }
   // A pass over 13 mm and short-circuiting are limits of their own, which these clauses do not lift.
   if (span.how.upper === '1.1T') return
-  if (procedure.joint.penetration === 'partial' && T >= f.thick) return free('QW-202.2(b)', 'memory', `Partial-penetration groove, coupon T at least ${show(f.thick, unit)}`)
-  if (procedure.joint.work !== undefined && T >= f.thick) return free('QW-202.3', 'memory', `Repair or build-up, coupon T at least ${show(f.thick, unit)}`)
+  if (procedure.joint.penetration === 'partial' && T >= f.thick) return free(span, 'QW-202.2(b)', 'memory', `Partial-penetration groove, coupon T at least ${show(f.thick, unit)}`)
+  if (procedure.joint.work !== undefined && T >= f.thick) return free(span, 'QW-202.3', 'memory', `Repair or build-up, coupon T at least ${show(f.thick, unit)}`)
   if (member === 'thick') {
     const first = pNumber(procedure.baseMetals.a)
     const second = pNumber(secondMetal(procedure))
-    if (first !== null && second === first && RELEASED.has(first) && T >= f.similar) return free('QW-202.4(b)(1)', 'secondary', `Thicker member of P-No. ${first}, coupon T at least ${show(f.similar, unit)}`)
-    if (T >= f.thick) return free('QW-202.4(b)(2)', 'secondary', `Thicker member, coupon T at least ${show(f.thick, unit)}`)
+    if (first !== null && second === first && RELEASED.has(first) && T >= f.similar) return free(span, 'QW-202.4(b)(1)', 'secondary', `Thicker member of P-No. ${first}, coupon T at least ${show(f.similar, unit)}`)
+    if (T >= f.thick) return free(span, 'QW-202.4(b)(2)', 'secondary', `Thicker member, coupon T at least ${show(f.thick, unit)}`)
   }
   const root = rootException(context, side, T)
   if (root && (span.upper === null || root.upper > span.upper)) {
@@ -230,7 +243,7 @@ function lift(context: RangeContext, side: CouponSide, T: number, member: Member
     span.how.upper = `root layers with ${root.number}`
     span.clause = 'QW-200.4(b)'
     span.basis = 'secondary'
-    steps.push(`Root layers from a coupon of at least ${show(f.root, unit)}: QW-200.4(b) lets the base metal go to the ${show(root.upper, unit)} of ${root.number}.`)
+    span.reason += ` Root layers from a coupon of at least ${show(f.root, unit)}: QW-200.4(b) lets the base metal go to the ${show(root.upper, unit)} of ${root.number}.`
   }
 }
 

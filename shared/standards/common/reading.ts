@@ -3,6 +3,7 @@ import type { Interval, Quantity } from '../../schemas/common.ts'
 import type { GasMixture } from '../../schemas/welding.ts'
 import { SHOWN_UNIT, UNITS } from '../../units/convert.ts'
 import type { Dimension, UnitSystem } from '../../units/types.ts'
+import { remember } from './remember.ts'
 
 export interface Figures {
   min: number | null
@@ -58,7 +59,13 @@ export const unitOf = (dimension: Dimension, system: UnitSystem): string => SHOW
 const NO_GAS = /^(none|no gas|not used|without)$/i
 
 /** True when the record says in words that no gas is used: no components and the name "none". */
-export const isNoGas = (gas: GasMixture): boolean => gas.components.length === 0 && NO_GAS.test((gas.name ?? '').trim())
+export const isNoGas = (gas: GasMixture): boolean => gas.components.length === 0 && gas.name !== null && saysNoGas(gas.name)
+
+const saysNoGas = remember((name) => NO_GAS.test(name.trim()))
+
+type Part = GasMixture['components'][number]
+const isPresent = (part: Part): boolean => part.percent > 0
+const byShare = (a: Part, b: Part): number => b.percent - a.percent || a.gas.localeCompare(b.gas)
 
 /** The mixture as one name, e.g. `Ar 75 % + CO2 25 %`, sorted by share; `none`; null when the composition isn't known or doesn't sum to 100. */
 export function gasName(gas: GasMixture | null): string | null {
@@ -67,12 +74,12 @@ export function gasName(gas: GasMixture | null): string | null {
   let total = 0
   for (const part of gas.components) total += part.percent
   if (gas.components.length === 0 || Math.abs(total - 100) > 0.05) return null
-  const parts = gas.components.filter((part) => part.percent > 0)
+  const parts = gas.components.filter(isPresent)
   if (parts.length === 1 && parts[0]) return `${parts[0].gas} 100 %`
-  return parts
-    .sort((a, b) => b.percent - a.percent || a.gas.localeCompare(b.gas))
-    .map((part) => `${part.gas} ${part.percent} %`)
-    .join(' + ')
+  if (parts.length > 2 || (parts[0] && parts[1] && byShare(parts[0], parts[1]) > 0)) parts.sort(byShare)
+  let name = ''
+  for (const part of parts) name += name === '' ? `${part.gas} ${part.percent} %` : ` + ${part.gas} ${part.percent} %`
+  return name
 }
 
 /** Argon, helium or a mixture of both; null when the composition isn't known. */
@@ -82,4 +89,4 @@ export function isInert(gas: GasMixture | null): boolean | null {
 }
 
 /** Text with case and spacing made equal, for comparing names that people typed. */
-export const sameText = (text: string): string => text.trim().toUpperCase().replace(/[\s-]+/g, '')
+export const sameText = remember((text) => text.trim().toUpperCase().replace(/[\s-]+/g, ''))

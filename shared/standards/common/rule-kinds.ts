@@ -57,12 +57,12 @@ function namesNotStated(spec: NamedSpec, context: RuleContext, field: string, jo
 
 /** A variable whose value is a name: covered or not by the names that the coupon covers. */
 export function namedRule(spec: NamedSpec): Rule {
-  const display = spec.display ?? ((name: string) => name)
+  const words: Words = { display: spec.display ?? asItIs, label: capital(spec.label), because: [spec.because] }
   const rule: Rule = {
     meta: spec.meta,
     field: spec.field,
     at: spec.at,
-    label: capital(spec.label),
+    label: words.label,
     applies: spec.applies,
     range(context, side) {
       const value = spec.tested(context, side)
@@ -73,15 +73,14 @@ export function namedRule(spec: NamedSpec): Rule {
         return { range: UNKNOWN_SET, tested: null, reason: lacking[0] === spec.field ? `${side.coupon.number} does not record the ${spec.label}.` : `${lackWords(missing)}.`, missing }
       }
       const covered = spec.covers ? spec.covers(value, context, side) : [value]
-      return { range: covered === 'any' ? setRange([], { any: true }) : setRange(covered), tested: value, reason: spec.because }
+      return { range: covered === 'any' ? setRange([], ANY) : setRange(covered), tested: value, reason: spec.because }
     },
     check(context, sides, joined) {
       if (spec.applies && !spec.applies(context)) return null
-      const field = pathOf(context, spec)
       const asked = spec.asked(context)
-      if (asked === null || asked.length === 0) return namesNotStated(spec, context, field, joined)
+      if (asked === null || asked.length === 0) return namesNotStated(spec, context, pathOf(context, spec), joined)
       if (joined === null) return isStatedOnly(spec.meta, context) ? { verdict: 'within', sentence: `The procedure states the ${spec.label}; without toughness no coupon limits it.`, asked: [...asked], range: null, tested: [] } : null
-      return judgeNames({ spec, display, field, context, sides, joined, asked })
+      return judgeNames(spec, words, context, sides, joined, asked)
     },
   }
   return rule
@@ -90,15 +89,21 @@ export function namedRule(spec: NamedSpec): Rule {
 /** A dual variable without toughness: nonessential, so the procedure only has to state it. */
 const isStatedOnly = (meta: RuleMeta, context: RuleContext): boolean => context.toughness === false && !!context.block?.process && meta.classes[context.block.process] === 'dual'
 
-interface NamesAsked { spec: NamedSpec; display: (name: string) => string; field: string; context: RuleContext; sides: readonly CouponSide[]; joined: QualifiedSpan; asked: readonly string[] }
+const ANY = { any: true } as const
+const asItIs = (name: string): string => name
 
-function judgeNames({ spec, display, field, context, sides, joined, asked }: NamesAsked): RuleVerdict {
+/** What of a rule's wording is the same each time. */
+interface Words { display: (name: string) => string; label: string; because: readonly string[] }
+
+function judgeNames(spec: NamedSpec, words: Words, context: RuleContext, sides: readonly CouponSide[], joined: QualifiedSpan, asked: readonly string[]): RuleVerdict {
+  const { display } = words
   if (joined.type !== 'set') throw new TypeError(`${spec.meta.id} compares names`)
   const verdict = containsNames(joined, asked)
-  if (verdict === 'cannot-tell') return namesNotRecorded({ spec, display, field, context, sides, joined, asked })
-  const askedText = list(asked.map(display))
-  if (verdict === 'within') return { verdict, sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, reasoning: [spec.because] }
+  if (verdict === 'cannot-tell') return namesNotRecorded(spec, context, sides, joined, asked)
+  const askedText = asked.length === 1 && asked[0] !== undefined ? display(asked[0]) : list(asked.map(display))
+  if (verdict === 'within') return { verdict, sentence: `${words.label} ${askedText} is covered by ${names(sides)}.`, asked: asked.slice(), range: joined, reasoning: words.because }
   const { kind } = spec
+  const field = pathOf(context, spec)
   if (kind && !asked.every((name) => joined.values.some((value) => kind(value) === kind(name)))) {
     return cannotTell(`The procedure gives ${askedText} as its ${spec.label} and ${names(sides)} ${verb(sides, 'gives', 'give')} ${list(joined.values.map(display), 'or')}, which can't be compared.`, [`procedure: ${field}`, ...sides.map((side) => `${side.coupon.number}: ${spec.field}`)], { asked: [...asked], range: joined, fixes: [stateFix(spec.label, field)] })
   }
@@ -124,7 +129,7 @@ function judgeNames({ spec, display, field, context, sides, joined, asked }: Nam
 }
 
 /** Coupons that give no name: each with the entries that it lacks. */
-function namesNotRecorded({ spec, context, sides, joined, asked }: NamesAsked): RuleVerdict {
+function namesNotRecorded(spec: NamedSpec, context: RuleContext, sides: readonly CouponSide[], joined: QualifiedSpan, asked: readonly string[]): RuleVerdict {
   const missing = sides.flatMap((side) => (spec.tested(context, side) === null ? lackOf(spec, side.variables, side.block).map((path) => `${side.coupon.number}: ${path}`) : []))
   if (missing.length === 0 || missing.every((text) => text.endsWith(`: ${spec.field}`))) return couponLacks(spec.label, spec.field, sides, [...asked], joined)
   return cannotTell(`${lackWords(missing)}, so what is qualified can't be told.`, missing, { asked: [...asked], range: joined })
@@ -152,33 +157,34 @@ export interface FigureSpec {
 
 /** A variable whose value is a figure or an interval: it must lie inside the range. */
 export function figureRule(spec: FigureSpec): Rule {
+  const label = capital(spec.label)
   return {
     meta: spec.meta,
     field: spec.field,
     at: spec.at,
-    label: capital(spec.label),
+    label,
     applies: spec.applies,
     range: spec.range,
     join: spec.join,
     check(context, sides, joined) {
       if (spec.applies && !spec.applies(context)) return null
       const asked = spec.asked(context)
-      const field = pathOf(context, spec)
-      if (asked === null) return notStated(spec.label, field, { range: joined })
-      if (asked === 'fault') return notStated(spec.label, field, { sentence: `${capital(spec.label)} contradicts itself in the procedure, so it can't be judged.`, range: joined })
+      if (asked === null) return notStated(spec.label, pathOf(context, spec), { range: joined })
+      if (asked === 'fault') return notStated(spec.label, pathOf(context, spec), { sentence: `${label} contradicts itself in the procedure, so it can't be judged.`, range: joined })
       if (joined === null) return null
       if (joined.type !== 'numeric') throw new TypeError(`${spec.meta.id} compares figures`)
-      return judgeFigures(spec, context, sides, joined, asked, field)
+      return judgeFigures(spec, context, sides, joined, asked)
     },
   }
 }
 
-function judgeFigures(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }, field: string): RuleVerdict {
+function judgeFigures(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }): RuleVerdict {
   const verdict = containsInterval(joined, asked)
   if (verdict === 'cannot-tell') return figuresNotKnown(spec, context, sides, joined, asked)
   if (verdict === 'within') {
     return { verdict, sentence: `${capital(showAsked(asked, joined.unit))} lies inside the ${showRange(joined)} that ${names(sides)} ${sides.length > 1 ? 'qualify' : 'qualifies'}.`, asked, range: joined }
   }
+  const field = pathOf(context, spec)
   const { sentence, wrong } = miss(spec, context, sides, joined, asked)
   const fixes: Fix[] = spec.cure ? [...spec.cure(context, joined, field)] : spec.ends ? quantityCures(spec, spec.ends, joined, asked, wrong, field) : intervalCures({ label: spec.label, dimension: spec.dimension, field, current: valueAt(context.procedure, field), range: joined, asked, wrong })
   fixes.push({ kind: 'plan-coupon', label: 'Weld a coupon that covers it', requirement: spec.plan ? spec.plan(asked, context) : `A coupon that qualifies ${spec.label} ${showAsked(asked, joined.unit)}.` })
@@ -204,6 +210,14 @@ function figuresNotKnown(spec: FigureSpec, context: RuleContext, sides: readonly
   })
 }
 
+/** By what the end is set, after a figure: " (2T) that the 10 mm coupon of PQR-1 qualifies". */
+function qualifiedBy(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], end: 'lower' | 'upper'): string {
+  const side = sides[0]
+  const how = sides.length === 1 && side ? spec.how?.(context, side, end) : undefined
+  const tag = how?.how ? ` (${how.how})` : ''
+  return how && side ? `${tag} that the ${how.coupon} of ${side.coupon.number} qualifies` : ` that ${names(sides)} ${sides.length > 1 ? 'together qualify' : 'qualifies'}`
+}
+
 /** Which end is outside, and the sentence that says so with the figures. */
 function miss(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide[], joined: NumericRange, asked: { min: number | null; max: number | null }): { sentence: string; wrong: ('min' | 'max')[] } {
   const unit = joined.unit
@@ -214,24 +228,18 @@ function miss(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide
   const parts: string[] = []
   const low = 'value' in first.lower ? first.lower.value : null
   const high = 'value' in last.upper ? last.upper.value : null
-  const by = (end: 'lower' | 'upper'): string => {
-    const side = sides[0]
-    const how = sides.length === 1 && side ? spec.how?.(context, side, end) : undefined
-    const tag = how?.how ? ` (${how.how})` : ''
-    return how && side ? `${tag} that the ${how.coupon} of ${side.coupon.number} qualifies` : ` that ${names(sides)} ${sides.length > 1 ? 'together qualify' : 'qualifies'}`
-  }
   if (high !== null && (asked.max === null || asked.max > high)) {
     wrong.push('max')
-    parts.push(`${asked.max === null ? 'No upper limit' : show(asked.max, unit)} is above the ${show(high, unit)}${by('upper')}`)
+    parts.push(`${asked.max === null ? 'No upper limit' : show(asked.max, unit)} is above the ${show(high, unit)}${qualifiedBy(spec, context, sides, 'upper')}`)
   }
   if (low !== null && (asked.min === null || asked.min < low)) {
     wrong.push('min')
-    parts.push(`${asked.min === null ? 'no lower limit' : show(asked.min, unit)} is below the ${show(low, unit)}${by('lower')}`)
+    parts.push(`${asked.min === null ? 'no lower limit' : show(asked.min, unit)} is below the ${show(low, unit)}${qualifiedBy(spec, context, sides, 'lower')}`)
   }
   if (parts.length > 0) return { sentence: `${capital(parts.join(', and '))}.`, wrong }
   return { sentence: `${capital(showAsked(asked, unit))} reaches into a gap: ${names(sides)} together qualify ${showRange(joined)}.`, wrong: ['min', 'max'].filter((end) => asked[end as 'min' | 'max'] !== null && containsInterval(joined, { min: asked[end as 'min' | 'max'], max: asked[end as 'min' | 'max'] }) !== 'within') as ('min' | 'max')[] }
 }
 
-const ORDER: readonly Basis[] = ['read', 'secondary', 'common-practice', 'memory']
+const WEAKNESS: Record<Basis, number> = { read: 0, secondary: 1, 'common-practice': 2, memory: 3 }
 /** The weaker of two bases, so that memory always shows through. */
-export const weakest = (a: Basis, b: Basis): Basis => (ORDER.indexOf(a) >= ORDER.indexOf(b) ? a : b)
+export const weakest = (a: Basis, b: Basis): Basis => (WEAKNESS[a] >= WEAKNESS[b] ? a : b)

@@ -1,5 +1,5 @@
 /** Sentences of findings: plain words with the figures, in the units of the record. */
-import type { Fix, NumericRange, QualifiedSpan, RuleVerdictAsked } from './types.ts'
+import type { Fix, NumericRange, QualifiedSpan, RuleVerdictAsked, Segment } from './types.ts'
 import type { CouponSide, RuleVerdict } from '../rule.ts'
 
 /** Rounded for reading: four decimals, without trailing zeros. */
@@ -7,34 +7,46 @@ export const round = (value: number): number => Math.round(value * 10000) / 1000
 
 export const show = (value: number, unit: string): string => `${round(value)} ${unit}`
 
+/** A text of each item, told once, in order. Quicker than a set for the few coupons that a procedure has. */
+export function distinct<T>(items: readonly T[], text: (item: T) => string): string[] {
+  const out: string[] = []
+  for (const item of items) {
+    const one = text(item)
+    if (!out.includes(one)) out.push(one)
+  }
+  return out
+}
+
+const numberOf = (side: CouponSide): string => side.coupon.number
+
 /** "PQR-1", "PQR-1 and PQR-2", "PQR-1, PQR-2 and PQR-3"; a coupon is named once. */
 export function names(sides: readonly CouponSide[]): string {
-  if (sides.length === 1 && sides[0]) return sides[0].coupon.number
-  const all = [...new Set(sides.map((side) => side.coupon.number))]
-  return list(all)
+  return sides.length === 1 && sides[0] ? sides[0].coupon.number : list(distinct(sides, numberOf))
 }
 
 /** The verb that agrees with the named coupons. */
-export const verb = (sides: readonly CouponSide[], one: string, several: string): string => (new Set(sides.map((side) => side.coupon.number)).size > 1 ? several : one)
+export const verb = (sides: readonly CouponSide[], one: string, several: string): string => (sides.length > 1 && distinct(sides, numberOf).length > 1 ? several : one)
 
 /** Words joined as in a sentence. */
 export function list(words: readonly string[], last = 'and'): string {
   if (words.length < 2) return words[0] ?? ''
+  if (words.length === 2) return `${words[0] ?? ''} ${last} ${words[1] ?? ''}`
   return `${words.slice(0, -1).join(', ')} ${last} ${words.at(-1) ?? ''}`
 }
 
 /** "5 mm to 20 mm", "from 5 mm, no upper limit", several parts joined by "and". */
 export function showRange(range: NumericRange): string {
-  if (range.segments.length === 0) return 'nothing'
-  return list(
-    range.segments.map(({ lower, upper }) => {
-      if (lower.kind === 'unknown' || upper.kind === 'unknown') return 'a range that is not known'
-      if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? `any ${range.unit}` : `up to ${show(upper.value, range.unit)}`
-      if (upper.kind === 'unlimited') return lower.value === 0 ? `any ${range.unit}` : `${show(lower.value, range.unit)} and up`
-      if (lower.value === 0 && upper.value !== 0) return `up to ${show(upper.value, range.unit)}`
-      return lower.value === upper.value ? show(lower.value, range.unit) : `${show(lower.value, range.unit)} to ${show(upper.value, range.unit)}`
-    }),
-  )
+  const { segments, unit } = range
+  if (segments.length === 0) return 'nothing'
+  return segments.length === 1 && segments[0] ? showSegment(segments[0], unit) : list(segments.map((segment) => showSegment(segment, unit)))
+}
+
+function showSegment({ lower, upper }: Segment, unit: string): string {
+  if (lower.kind === 'unknown' || upper.kind === 'unknown') return 'a range that is not known'
+  if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? `any ${unit}` : `up to ${show(upper.value, unit)}`
+  if (upper.kind === 'unlimited') return lower.value === 0 ? `any ${unit}` : `${show(lower.value, unit)} and up`
+  if (lower.value === 0 && upper.value !== 0) return `up to ${show(upper.value, unit)}`
+  return lower.value === upper.value ? show(lower.value, unit) : `${show(lower.value, unit)} to ${show(upper.value, unit)}`
 }
 
 export const showSpan = (span: QualifiedSpan | null): string =>
@@ -48,7 +60,11 @@ export function showAsked(asked: { min: number | null; max: number | null }, uni
   return 'every size'
 }
 
-export const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)
+/** With a capital first letter; a text that starts with a figure or a capital stays as it is. */
+export function capital(text: string): string {
+  const first = text.charCodeAt(0)
+  return first < 97 ? text : text.charAt(0).toUpperCase() + text.slice(1)
+}
 
 /** "Cannot tell", with exactly what is missing. */
 export const cannotTell = (sentence: string, missing: readonly string[], more: Partial<RuleVerdict> = {}): RuleVerdict => ({ verdict: 'cannot-tell', sentence, asked: null, range: null, missing, ...more })

@@ -23,7 +23,7 @@ function lacking(variables: WeldingVariables): string[] {
   })
 }
 
-const pair = (a: string, b: string): string => [a, b].sort().join(' to ')
+const pair = (a: string, b: string): string => (a <= b ? `${a} to ${b}` : `${b} to ${a}`)
 
 function tokensOf(variables: WeldingVariables): [string, string] | null {
   const a = token(variables.baseMetals.a)
@@ -43,11 +43,11 @@ const base = namedRule({
   label: 'P-Number and Group Number',
   asked(context) {
     const tokens = tokensOf(context.procedure)
-    return tokens ? [pair(...tokens)] : null
+    return tokens ? [pair(tokens[0], tokens[1])] : null
   },
   tested(_context, side) {
     const tokens = tokensOf(side.variables)
-    return tokens ? pair(...tokens) : null
+    return tokens ? pair(tokens[0], tokens[1]) : null
   },
   covers(value, _context, side) {
     const tokens = tokensOf(side.variables)

@@ -2,6 +2,7 @@
 import { setRange, UNKNOWN_SET } from '../../../ranges/set.ts'
 import type { Basis } from '../../../schemas/assessment.ts'
 import type { WeldingVariables } from '../../../schemas/welding.ts'
+import { rememberPair } from '../../common/remember.ts'
 import { capital, list, names, verb } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule } from '../../rule.ts'
 import { identity, pairName, pNumber, secondMetal } from '../members.ts'
@@ -15,7 +16,7 @@ const DOWNWARD: Readonly<Record<string, readonly string[]>> = { '3': ['3', '1'],
  * The pairs that a coupon of P-Numbers `a` and `b` covers, by QW-424.1. The coupon's own P-Number always stays on one side.
  * @returns names such as `P-4 to P-1`, and how the line of the table is known
  */
-export function coveredPairs(a: string, b: string): { pairs: string[]; basis: Basis } {
+export const coveredPairs = rememberPair((a: string, b: string): { pairs: readonly string[]; basis: Basis } => {
   if (a === b) {
     const down = DOWNWARD[a]
     if (down) return { pairs: down.map((p) => pairName(a, p)), basis: 'read' }
@@ -28,10 +29,10 @@ export function coveredPairs(a: string, b: string): { pairs: string[]; basis: Ba
     if (down && down.includes(y)) return { pairs: down.map((p) => pairName(x, p)), basis: 'memory' }
   }
   return { pairs: [pairName(a, b)], basis: 'read' }
-}
+})
 
 /** QW-403.12, plasma: only melt-in lets P-No. 1, 3, 4 and 5A cover the lower ones (memory). */
-export function coveredPairsPlasma(a: string, b: string, meltIn: boolean): { pairs: string[]; basis: Basis } {
+export function coveredPairsPlasma(a: string, b: string, meltIn: boolean): { pairs: readonly string[]; basis: Basis } {
   const down = a === b && meltIn ? DOWNWARD[a] : undefined
   return { pairs: down ? down.map((p) => pairName(a, p)) : [pairName(a, b)], basis: 'memory' }
 }
@@ -40,14 +41,16 @@ export function coveredPairsPlasma(a: string, b: string, meltIn: boolean): { pai
 function tokens(variables: WeldingVariables): { p: [string, string] | null; own: string | null; lacking: string[] } {
   const first = variables.baseMetals.a
   const second = secondMetal(variables)
-  const p = [pNumber(first), pNumber(second)] as const
-  const lacking = [...(p[0] === null ? ['baseMetals.a.pNumber'] : []), ...(p[1] === null ? [second === first ? 'baseMetals.a.pNumber' : 'baseMetals.b.pNumber'] : [])]
-  const ids = [p[0] === null ? identity(first) : `P-${p[0]}`, p[1] === null ? identity(second) : `P-${p[1]}`]
-  const own = ids[0] && ids[1] && lacking.length > 0 ? [...ids].sort().join(' to ') : null
-  return { p: p[0] !== null && p[1] !== null ? [p[0], p[1]] : null, own, lacking: [...new Set(lacking)] }
+  const a = pNumber(first)
+  const b = pNumber(second)
+  if (a !== null && b !== null) return { p: [a, b], own: null, lacking: [] }
+  const lacking = [...(a === null ? ['baseMetals.a.pNumber'] : []), ...(b === null ? [second === first ? 'baseMetals.a.pNumber' : 'baseMetals.b.pNumber'] : [])]
+  const ids = [a === null ? identity(first) : `P-${a}`, b === null ? identity(second) : `P-${b}`]
+  const own = ids[0] && ids[1] ? [...ids].sort().join(' to ') : null
+  return { p: null, own, lacking: [...new Set(lacking)] }
 }
 
-const covered = (context: RangeContext, side: CouponSide, p: [string, string]): { pairs: string[]; basis: Basis } =>
+const covered = (context: RangeContext, side: CouponSide, p: [string, string]): { pairs: readonly string[]; basis: Basis } =>
   side.block?.process === 'PAW' ? coveredPairsPlasma(p[0], p[1], side.block.technique.keyhole === 'melt-in') : coveredPairs(p[0], p[1])
 
 const build = (paragraph: Paragraph, file: string): Rule => ({
@@ -68,16 +71,19 @@ const build = (paragraph: Paragraph, file: string): Rule => ({
   check(context, sides, joined) {
     if (joined?.type !== 'set') return null
     const { p, own, lacking } = tokens(context.procedure)
-    const couponLacking = sides.flatMap((side) => tokens(side.variables).lacking.map((field) => `${side.coupon.number}: ${field}`))
     if (!p) {
       const field = lacking[0] ?? 'baseMetals.a.pNumber'
       if (own && joined.values.includes(own)) return { verdict: 'within', sentence: `${own} is the metal of ${names(sides)}, which covers itself.`, asked: [own], range: joined, basis: 'memory', field }
       return { verdict: 'cannot-tell', sentence: "A base metal of the procedure has no P-Number, so its coverage can't be told.", asked: own ? [own] : null, range: joined, missing: lacking.map((path) => `procedure: ${path}`), field, fixes: [{ kind: 'state', label: 'State the P-Number', field }] }
     }
     const asked = pairName(p[0], p[1])
-    const basis = sides.map((side) => tokens(side.variables).p).reduce<Basis>((worst, pair, i) => (pair && sides[i] ? covered(context, sides[i], pair).basis : worst), 'read')
+    let basis: Basis = 'read'
+    for (const side of sides) {
+      const pair = tokens(side.variables).p
+      if (pair) ({ basis } = covered(context, side, pair))
+    }
     if (joined.values.includes(asked)) return { verdict: 'within', sentence: `${asked} is covered by ${names(sides)}.`, asked: [asked], range: joined, basis }
-    if (joined.unknown) return { verdict: 'cannot-tell', sentence: `${names(sides)} ${verb(sides, 'has', 'have')} a base metal without P-Number, so whether it covers ${asked} can't be told.`, asked: [asked], range: joined, missing: couponLacking }
+    if (joined.unknown) return { verdict: 'cannot-tell', sentence: `${names(sides)} ${verb(sides, 'has', 'have')} a base metal without P-Number, so whether it covers ${asked} can't be told.`, asked: [asked], range: joined, missing: sides.flatMap((side) => tokens(side.variables).lacking.map((field) => `${side.coupon.number}: ${field}`)) }
     const keyhole = sides.some((side) => side.block?.process === 'PAW' && side.block.technique.keyhole === null && DOWNWARD[tokens(side.variables).p?.[0] ?? ''])
     if (keyhole && sides.some((side) => { const pair = tokens(side.variables).p; return pair && coveredPairsPlasma(pair[0], pair[1], true).pairs.includes(asked) })) {
       return { verdict: 'cannot-tell', sentence: `${names(sides)} covers ${asked} only if it was welded with melt-in technique, which isn't recorded.`, asked: [asked], range: joined, missing: sides.map((side) => `${side.coupon.number}: technique.keyhole`), basis: 'memory' }

@@ -8,7 +8,7 @@ import { meta } from '../meta.ts'
 import { baseMetalSpan, couponThickness } from '../ranges.ts'
 
 /** What the procedure asks of a member's thickness. */
-export function askedThickness(context: RuleContext, which: 'a' | 'b'): { min: number | null; max: number | null } | null | 'fault' {
+export function askedThickness(context: Pick<RuleContext, 'procedure' | 'system'>, which: 'a' | 'b'): { min: number | null; max: number | null } | null | 'fault' {
   const interval = which === 'a' ? context.procedure.thickness : context.procedure.thicknessB
   const asked = figures(interval, 'length', context.system)
   if (asked.fault) return 'fault'

@@ -26,20 +26,22 @@ export function deposit(context: RangeContext, side: CouponSide): (Limit & { t: 
   const T = couponThickness(side, system)
   const t = single(block?.depositThickness, 'length', system)
   if (!block?.process || T === null || t === null) return null
-  const limit = depositLimit(T, t, block.process, system, isLongitudinal(side))
+  const limit: Limit & { t: number; T: number; reason: string } = Object.assign(depositLimit(T, t, block.process, system, isLongitudinal(side)), { t, T, reason: '' })
   const first = `t = ${show(t, unit)} of a ${show(T, unit)} coupon gives up to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`
   if (shortCircuitBinds(context.edition, block) && t < FIGURES[system].pass) {
     const upper = tidy(1.1 * t)
     return { ...limit, upper, how: { lower: null, upper: '1.1t' }, clause: 'QW-404.32', basis: 'secondary', t, T, reason: `${first} Short-circuiting transfer holds it to ${show(upper, unit)} (1.1t) by QW-404.32.` }
   }
   // Beyond the coupon's own base metal range the root exception allows 2t and no more.
-  const asked = context.procedure ? askedThickness({ ...context, procedure: context.procedure, path: '' }, 'a') : null
+  const { procedure } = context
   const twice = 2 * t
-  if (asked && asked !== 'fault' && (limit.upper ?? 0) > twice && rootException(context, side, T)) {
+  const asked = procedure && (limit.upper ?? 0) > twice ? askedThickness({ procedure, system }, 'a') : null
+  if (asked && asked !== 'fault' && rootException(context, side, T)) {
     const own = baseMetalLimit(T, block.process, system)
     if (containsInterval(lengthRange(system, own.lower, own.upper), asked) !== 'within') return { ...limit, upper: twice, how: { lower: null, upper: '2t' }, clause: 'QW-200.4(b)', basis: 'secondary', t, T, reason: `${first} As root layers on thicker metal: ${show(twice, unit)} (2t) by QW-200.4(b).` }
   }
-  return { ...limit, t, T, reason: first }
+  limit.reason = first
+  return limit
 }
 
 export const depositThickness = figureRule({

@@ -1,14 +1,20 @@
 /** QW-404.4: any change of F-Number is essential, up or down; a filler that is not listed covers only itself. */
 import type { Filler } from '../../../schemas/welding.ts'
 import { sameText } from '../../common/reading.ts'
+import { remember } from '../../common/remember.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { meta } from '../meta.ts'
 
+/** `F-6`, `unlisted`, or null where nothing is written. */
+const listed = remember((written) => {
+  const f = written.trim().toUpperCase().replace(/^F(-?\s*NO\.?)?[\s-]*/, '')
+  return f === '' ? null : /^(NONE|UNLISTED|N\/A)$/.test(f) ? 'unlisted' : `F-${f}`
+})
+
 /** `F-6`, or the filler's own name where it is recorded as not listed; null when not recorded. */
 function token(filler: Filler): string | null {
-  const f = filler.fNumber?.trim().toUpperCase().replace(/^F(-?\s*NO\.?)?[\s-]*/, '')
-  if (!f) return null
-  if (!/^(NONE|UNLISTED|N\/A)$/.test(f)) return `F-${f}`
+  const f = filler.fNumber ? listed(filler.fNumber) : null
+  if (f !== 'unlisted') return f
   const name = filler.tradeName ?? filler.classification
   return name ? `filler ${sameText(name)}` : null
 }

@@ -153,13 +153,15 @@ export const heatInput: Rule = unlessHeatTreated({
     }
     let judged = base.check(context, sides, joined)
     if (!judged) return judged
+    const reasoning = [`Asked: ${known.from}.`]
+    if (judged.verdict !== 'cannot-tell') return Object.assign(judged, { reasoning: judged.reasoning ? [...reasoning, ...judged.reasoning] : reasoning })
     const spreads = sides.map((side) => tested(side, context.system))
-    if (judged.verdict === 'cannot-tell' && spreads.every((spread) => 'most' in spread && spread.most < known.value)) {
+    if (spreads.every((spread) => 'most' in spread && spread.most < known.value)) {
       // Above even the most that the readings allow.
       const most = Math.max(...spreads.map((spread) => ('most' in spread ? spread.most : 0)))
       judged = base.check(context, sides, between('heatInput', unitOf('heatInput', context.system), UNLIMITED, closed(most))) ?? judged
     }
     const missing = judged.verdict === 'cannot-tell' ? sides.flatMap((side, i) => { const spread = spreads[i]; return spread && 'missing' in spread ? spread.missing.map((field) => `${side.coupon.number}: ${field}`) : [`${side.coupon.number}: electrical.heatInput`] }) : judged.missing
-    return { ...judged, missing, reasoning: [`Asked: ${known.from}.`, ...(judged.reasoning ?? [])] }
+    return { ...judged, missing, reasoning: [...reasoning, ...(judged.reasoning ?? [])] }
   },
 })

@@ -66,7 +66,7 @@ const ROWS: readonly Row[] = [
 /** The thing itself, for a sentence: "none" is one way of stating it. */
 const plain = (label: string): string => label.replace(/, or none$/, '')
 
-const build = (row: Row): Rule => ({
+const build = (row: Row, stated = `The procedure states the ${plain(row.label)}; no coupon limits it.`): Rule => ({
   meta: meta(row.paragraph, row.file, { withoutCoupon: true }),
   field: row.field,
   at: row.at,
@@ -77,8 +77,8 @@ const build = (row: Row): Rule => ({
     const { procedure, block } = context
     if (!block || (row.applies && !row.applies(procedure, block))) return null
     if (!row.stated(procedure, block)) return notStated(plain(row.label), pathOf(context, row), { fixes: [{ kind: 'state', label: `State the ${row.label}`, field: pathOf(context, row) }] })
-    return { verdict: 'within', sentence: `The procedure states the ${plain(row.label)}; no coupon limits it.`, asked: null, range: null, tested: [] }
+    return { verdict: 'within', sentence: stated, asked: null, range: null, tested: [] }
   },
 })
 
-export const mustBeStated: readonly Rule[] = ROWS.map(build)
+export const mustBeStated: readonly Rule[] = ROWS.map((row) => build(row))

@@ -1,6 +1,6 @@
 /** QW-401: a change of welding process is always essential; no coupon of another process covers it. */
 import { setRange } from '../../../ranges/set.ts'
-import { list } from '../../common/wording.ts'
+import { list, names } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { editionsUntil } from '../editions.ts'
 
@@ -22,11 +22,11 @@ export const process: Rule = {
   field: 'process',
   at: 'block',
   label: 'Welding process',
-  range: (_context, side) => ({ range: setRange([side.block?.process ?? []].flat()), tested: side.block?.process ?? null, reason: 'Another process is never covered.' }),
+  range: (_context, side) => ({ range: setRange(side.block?.process ? [side.block.process] : []), tested: side.block?.process ?? null, reason: 'Another process is never covered.' }),
   check(context, sides) {
     const asked = context.block?.process
     if (!asked) return null
-    if (sides.length > 0) return { verdict: 'within', sentence: `${asked} was welded on ${list([...new Set(sides.map((side) => side.coupon.number))])}.`, asked: [asked], range: setRange([asked]) }
+    if (sides.length > 0) return { verdict: 'within', sentence: `${asked} was welded on ${names(sides)}.`, asked: [asked], range: setRange([asked]) }
     const plan = { kind: 'plan-coupon' as const, label: `Weld a coupon with ${asked}`, requirement: `A coupon welded with ${asked}.` }
     if (context.coupons.length === 0) return { verdict: 'cannot-tell', sentence: `No coupon is linked, so no coupon supports this process.`, asked: [asked], range: null, missing: [`a coupon welded with ${asked}`], fixes: [plan] }
     const unstated = context.coupons.filter((coupon) => coupon.content.variables.processes.some((block) => block.process === null))

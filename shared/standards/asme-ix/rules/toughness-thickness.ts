@@ -33,23 +33,20 @@ function rangeFor(context: RangeContext, side: CouponSide, which: 'a' | 'b'): Ru
 
 /** Full records stand alone; a mechanical record and a toughness record pair up (QW-401.1): maximum of the one, greater minimum of both. */
 function join(which: 'a' | 'b', context: RangeContext, sides: readonly CouponSide[], ranges: readonly (RuleRange | null)[]): NumericRange | null {
-  let joined: NumericRange | null = null
-  const add = (range: NumericRange): void => {
-    joined = joined === null ? range : unionNumeric(joined, range)
-  }
-  sides.forEach((side, i) => {
+  const parts: NumericRange[] = []
+  for (const [i, side] of sides.entries()) {
     const own = ranges[i]?.range
-    if (own?.type !== 'numeric') return
-    if (side.role === 'full' || context.toughness !== true) add(own)
-    if (side.role !== 'mechanical' || context.toughness !== true) return
-    sides.forEach((tough) => {
-      if (tough.role === 'mechanical') return
-      const { floor } = floorOf(context, tough, which)
-      if (floor !== null) add(intersectNumeric(own, lengthRange(context.system, floor, null)))
-    })
-  })
-  const unit = unitOf('length', context.system)
-  return joined ?? (ranges.some((range) => range) ? numericRange('length', unit, []) : null)
+    if (own?.type !== 'numeric') continue
+    if (side.role === 'full' || context.toughness !== true) parts.push(own)
+    if (side.role !== 'mechanical' || context.toughness !== true) continue
+    for (const tough of sides) {
+      const floor = tough.role === 'mechanical' ? null : floorOf(context, tough, which).floor
+      if (floor !== null) parts.push(intersectNumeric(own, lengthRange(context.system, floor, null)))
+    }
+  }
+  const [first, ...more] = parts
+  if (first) return more.reduce((joined, part) => unionNumeric(joined, part), first)
+  return ranges.some((range) => range) ? numericRange('length', unitOf('length', context.system), []) : null
 }
 
 const build = (which: 'a' | 'b', file: string): Rule =>

@@ -7,6 +7,7 @@ import { editionsUntil } from '../editions.ts'
 const GROOVE = 'groove'
 const FILLET = 'fillet that holds no pressure'
 const PRESSURE_FILLET = 'fillet that holds pressure'
+const ALL_KINDS: readonly string[] = [GROOVE, FILLET, PRESSURE_FILLET].sort()
 
 export const weldKind: Rule = {
   meta: {
@@ -27,7 +28,7 @@ export const weldKind: Rule = {
   label: 'Kind of weld',
   range: (_context, side) =>
     side.variables.joint.weld === 'groove'
-      ? { range: setRange([GROOVE, FILLET, PRESSURE_FILLET]), tested: 'groove', reason: 'A groove coupon covers grooves and fillets of every size.', clause: 'QW-451.4' }
+      ? { range: setRange(ALL_KINDS), tested: 'groove', reason: 'A groove coupon covers grooves and fillets of every size.', clause: 'QW-451.4' }
       : { range: setRange([FILLET]), tested: 'fillet', reason: 'A fillet coupon covers only fillets that hold no pressure.', clause: 'QW-202.2(c)' },
   check(context, sides, joined) {
     const { joint } = context.procedure
