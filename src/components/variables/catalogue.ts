@@ -44,6 +44,7 @@ const shaped = (...kinds: string[]) => (weld: WeldingVariables) => groove(weld) 
 const pipe = (weld: WeldingVariables) => weld.product !== 'plate'
 const by = (...processes: string[]) => (_weld: WeldingVariables, block: ProcessBlock | null) => block?.process != null && processes.includes(block.process)
 const mechanised = (_weld: WeldingVariables, block: ProcessBlock | null) => block?.mechanisation === 'machine' || block?.mechanisation === 'automatic'
+const several = (_weld: WeldingVariables, block: ProcessBlock | null) => block?.technique.electrodes === 'multiple'
 const pulsing = (_weld: WeldingVariables, block: ProcessBlock | null) => block?.electrical.pulsed === true || block?.electrical.transferMode === 'pulsed-spray'
 const judgedBy = (...standards: string[]) => (weld: WeldingVariables) => weld.standards.some(({ standard }) => standards.includes(standard))
 const filled = (_weld: WeldingVariables, block: ProcessBlock | null) => block?.filler.added !== false
@@ -56,6 +57,7 @@ export const JOINT: SectionSpec = {
     { kind: 'choice', path: 'joint.weld', label: 'Weld', options: words.WELDS, always: true },
     { kind: 'choice', path: 'joint.type', label: 'Joint', options: words.JOINT_TYPES, always: true },
     { kind: 'choice', path: 'joint.groove', label: 'Groove', options: words.GROOVES, when: groove },
+    { kind: 'text', path: 'joint.designation', label: 'Joint detail', max: 40, hint: 'designation', example: 'TC-U4a-GF', when: (weld) => groove(weld) && judgedBy('aws-d1-1')(weld) },
     { kind: 'choice', path: 'joint.penetration', label: 'Penetration', options: words.PENETRATIONS, always: true, when: groove },
     { kind: 'interval', path: 'joint.includedAngle', label: 'Included angle', dimension: 'angle', when: shaped('-v', '-u') },
     { kind: 'interval', path: 'joint.bevelAngle', label: 'Bevel angle', dimension: 'angle', when: shaped('bevel', '-j') },
@@ -83,6 +85,7 @@ export const BASE_METALS: SectionSpec = {
     { kind: 'pair', path: 'baseMetals.a.iso15608', paths: ['baseMetals.a.iso15608', 'baseMetals.b.iso15608'], label: 'ISO 15608 group', hint: 'A and B', max: 8, when: judgedBy('iso-15614-1', 'iso-15614-2') },
     { kind: 'pair', path: 'baseMetals.a.d11Group', paths: ['baseMetals.a.d11Group', 'baseMetals.b.d11Group'], label: 'D1.1 group', hint: 'A and B', max: 6, when: judgedBy('aws-d1-1') },
     { kind: 'pair', path: 'baseMetals.a.d12MNumber', paths: ['baseMetals.a.d12MNumber', 'baseMetals.b.d12MNumber'], label: 'M-Number', hint: 'A and B', max: 6, when: judgedBy('aws-d1-2') },
+    { kind: 'quantity', path: 'serviceTemperature', label: 'Service temperature', hint: 'where it is high', dimension: 'temperature', when: judgedBy('aws-d1-2') },
     { kind: 'choice', path: 'product', label: 'Product', options: words.PRODUCTS, always: true },
     { kind: 'interval', path: 'thickness', label: 'Thickness', dimension: 'length', allMeans: 'every thickness' },
     { kind: 'interval', path: 'thicknessB', label: 'Thickness of B', dimension: 'length', allMeans: 'every thickness', when: () => false },
@@ -131,7 +134,7 @@ export const BLOCK_SECTIONS: readonly SectionSpec[] = [
     title: 'Filler metals',
     rows: [
       { kind: 'filler', path: 'filler', label: 'Filler metal' },
-      { kind: 'text', path: 'filler.fNumber', label: 'F-Number', max: 6, when: (weld, block) => judgedBy('asme-ix')(weld) && filled(weld, block) },
+      { kind: 'text', path: 'filler.fNumber', label: 'F-Number', max: 6, when: (weld, block) => judgedBy('asme-ix', 'aws-d1-2')(weld) && filled(weld, block) },
       { kind: 'whole', path: 'filler.aNumber', label: 'A-Number', min: 1, max: 12, when: (weld, block) => judgedBy('asme-ix')(weld) && filled(weld, block) },
       { kind: 'text', path: 'filler.depositComposition', label: 'Deposit composition', max: 200, hint: 'where no A-Number fits', example: 'Al-5Mg', when: (weld, block) => filled(weld, block) && block?.filler.aNumber === null },
       { kind: 'choice', path: 'filler.productForm', label: 'Product form', options: words.PRODUCT_FORMS, when: filled },
@@ -175,6 +178,7 @@ export const BLOCK_SECTIONS: readonly SectionSpec[] = [
       { kind: 'flag', path: 'electrical.pulsed', label: 'Pulsed' },
       { kind: 'flag', path: 'electrical.waveformControlled', label: 'Waveform controlled', when: by('GMAW', 'FCAW', 'GTAW', 'SAW') },
       { kind: 'interval', path: 'electrical.current', label: 'Amps', dimension: 'current' },
+      { kind: 'interval', path: 'electrical.makerCurrent', label: "Maker's amps", hint: 'as the maker recommends', dimension: 'current', when: judgedBy('aws-d1-1') },
       { kind: 'interval', path: 'electrical.voltage', label: 'Volts', dimension: 'voltage' },
       { kind: 'interval', path: 'electrical.wireFeed', label: 'Wire feed speed', dimension: 'wireFeed', when: by('GMAW', 'FCAW', 'SAW') },
       { kind: 'interval', path: 'electrical.travelSpeed', label: 'Travel speed', dimension: 'travelSpeed' },
@@ -201,7 +205,13 @@ export const BLOCK_SECTIONS: readonly SectionSpec[] = [
       { kind: 'text', path: 'technique.interpassCleaning', label: 'Interpass cleaning', max: 200, example: 'chip and wire brush' },
       { kind: 'choice', path: 'technique.passesPerSide', label: 'Passes per side', options: words.SINGLE_MULTIPLE },
       { kind: 'choice', path: 'technique.electrodes', label: 'Electrodes', options: words.SINGLE_MULTIPLE },
-      { kind: 'quantity', path: 'technique.electrodeSpacing', label: 'Electrode spacing', dimension: 'length', when: (_weld, block) => block?.technique.electrodes === 'multiple' },
+      { kind: 'quantity', path: 'technique.electrodeSpacing', label: 'Electrode spacing', dimension: 'length', when: several },
+      { kind: 'whole', path: 'technique.electrodeCount', label: 'Number of electrodes', min: 1, max: 12, when: (weld, block) => judgedBy('aws-d1-1')(weld) && several(weld, block) },
+      { kind: 'quantity', path: 'technique.lateralSpacing', label: 'Spacing across the joint', dimension: 'length', when: (weld, block) => judgedBy('aws-d1-1')(weld) && several(weld, block) },
+      { kind: 'quantity', path: 'technique.parallelAngle', label: 'Angle of parallel electrode', dimension: 'angle', when: (weld, block) => judgedBy('aws-d1-1')(weld) && several(weld, block) },
+      { kind: 'quantity', path: 'technique.travelAngle', label: 'Electrode angle, along travel', dimension: 'angle', when: (weld, block) => judgedBy('aws-d1-1')(weld) && by('SAW')(weld, block) },
+      { kind: 'quantity', path: 'technique.normalAngle', label: 'Electrode angle, across travel', dimension: 'angle', when: (weld, block) => judgedBy('aws-d1-1')(weld) && by('SAW')(weld, block) },
+      { kind: 'flag', path: 'technique.hotWire', label: 'Hot wire', when: (weld, block) => by('GTAW')(weld, block) && mechanised(weld, block) },
       { kind: 'interval', path: 'technique.contactTubeDistance', label: 'Contact tube to work', dimension: 'length', when: by('GMAW', 'FCAW', 'SAW') },
       { kind: 'text', path: 'technique.nozzleSize', label: 'Nozzle or cup', max: 40, example: '16 mm', when: by('GMAW', 'FCAW', 'GTAW', 'PAW') },
       { kind: 'choice', path: 'technique.peening', label: 'Peening', options: words.PEENINGS },
