@@ -76,7 +76,7 @@ describe('links from e-mails', () => {
     expect(await screen.findByText(/Use at least 12 characters/)).toBeDefined()
     await userEvent.type(screen.getByLabelText('New password'), ' no, a sentence')
     await userEvent.click(screen.getByRole('button', { name: /Accept/ }))
-    expect(await screen.findByText(/You are in/)).toBeDefined()
+    expect(await screen.findByText(/Your account is open/)).toBeDefined()
     expect(seen.filter(({ method }) => method === 'PUT')).toHaveLength(1)
   })
   it('explains an invitation that does not work', async () => {
