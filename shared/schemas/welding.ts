@@ -77,7 +77,7 @@ export const jointSchema = z
     backGouging: oneOf(['none', 'grinding', 'arc-gouging', 'machining', 'chipping']),
     weldedFromBothSides: bool,
     /** Where the weld mends or builds up rather than joins. */
-    work: z.enum(['repair', 'build-up']).optional(),
+    work: z.enum(['repair', 'build-up']).nullable().optional(),
     /** Whether the weld holds pressure; asked of fillets. */
     pressureRetaining: z.boolean().nullable().optional(),
     notes: textOrNull(1000),

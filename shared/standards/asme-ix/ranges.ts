@@ -230,7 +230,7 @@ function lift(context: RangeContext, side: CouponSide, T: number, member: Member
   // A pass over 13 mm and short-circuiting are limits of their own, which these clauses do not lift.
   if (span.how.upper === '1.1T') return
   if (procedure.joint.penetration === 'partial' && T >= f.thick) return free(span, 'QW-202.2(b)', 'memory', `Partial-penetration groove, coupon T at least ${show(f.thick, unit)}`)
-  if (procedure.joint.work !== undefined && T >= f.thick) return free(span, 'QW-202.3', 'memory', `Repair or build-up, coupon T at least ${show(f.thick, unit)}`)
+  if (procedure.joint.work != null && T >= f.thick) return free(span, 'QW-202.3', 'memory', `Repair or build-up, coupon T at least ${show(f.thick, unit)}`)
   if (member === 'thick') {
     const first = pNumber(procedure.baseMetals.a)
     const second = pNumber(secondMetal(procedure))
