@@ -2,7 +2,8 @@ import { z } from 'zod'
 import { createDocument, type ZodOpenApiOperationObject, type ZodOpenApiParameters, type ZodOpenApiPathsObject, type ZodOpenApiResponsesObject } from 'zod-openapi'
 import { problemSchema } from '../../shared/schemas/common.ts'
 import { COOKIE } from '../middleware/session.ts'
-import { endpoints, type Endpoint } from '../../shared/schemas/endpoints.ts'
+import type { Endpoint } from '../../shared/schemas/endpoint.ts'
+import { endpoints } from '../../shared/schemas/endpoints.ts'
 
 const uploadSchema = z.object({ files: z.array(z.string().meta({ format: 'binary' })) }).meta({ id: 'Upload' })
 const ifMatch = z.string().meta({ description: 'The ETag last read, like "3"; keeps two people from overwriting each other.', example: '"3"' })

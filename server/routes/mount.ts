@@ -1,6 +1,7 @@
 import type { Request, Response, Router } from 'express'
 import { z } from 'zod'
-import { endpoints, type Endpoint, type EndpointName } from '../../shared/schemas/endpoints.ts'
+import type { Endpoint } from '../../shared/schemas/endpoint.ts'
+import { endpoints, type EndpointName } from '../../shared/schemas/endpoints.ts'
 import type { Database, Tenant } from '../config/database.ts'
 import type { Env } from '../config/env.ts'
 import type { Log } from '../config/log.ts'

@@ -1,10 +1,10 @@
 import type { Tenant } from '../config/database.ts'
 import { row } from './query.ts'
 
-const SERIES = { procedures: 'WPS', coupons: 'PQR', jobs: 'JOB' } as const
+const SERIES = { procedures: 'WPS', coupons: 'PQR', jobs: 'JOB', machines: 'M', trials: 'T' } as const
 
 /**
- * The organization's next number of a series: WPS-001, PQR-001, JOB-001. The series' row stays locked until the transaction ends,
+ * The organization's next number of a series: WPS-001, PQR-001, JOB-001, M-001, T-001. The series' row stays locked until the transaction ends,
  * so two at once get two numbers, and a number is never given twice, even when its record was discarded.
  */
 export async function nextNumber(tenant: Tenant, series: keyof typeof SERIES): Promise<string> {

@@ -5,53 +5,16 @@
 import { z } from 'zod'
 import { assessedCouponSchema, assessmentRequestSchema, assessmentSchema } from './assessment.ts'
 import { idSchema, listQuery, pageOf, standardIdSchema, textOrNull } from './common.ts'
+import { byId, endpoint, sorts } from './endpoint.ts'
 import * as people from './people.ts'
 import * as records from './records.ts'
 import * as standards from './standards.ts'
 import { couponContentSchema, procedureContentSchema, processSchema } from './welding.ts'
 
-export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete'
-
-export interface Endpoint<P extends z.ZodType = z.ZodType, Q extends z.ZodType = z.ZodType, B extends z.ZodType = z.ZodType, R extends z.ZodType = z.ZodType> {
-  method: Method
-  /** Below `/api`, Express style. */
-  path: string
-  action: string
-  public: boolean
-  tag: string
-  summary: string
-  params: P
-  query: Q
-  body: B
-  /** What a 2xx carries; z.void() for none. Files are `binary`. */
-  response: R
-  status: number
-  binary?: string
-  /** Multipart upload under the field `files`. */
-  upload?: boolean
-  /** Wants If-Match with the version last read. */
-  ifMatch?: boolean
-}
-
-const none = z.object({}).strict()
-const nothing = z.void()
-type Given<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R extends z.ZodType> = Partial<Endpoint<P, Q, B, R>> & Pick<Endpoint, 'method' | 'path' | 'action' | 'tag' | 'summary'>
-const endpoint = <P extends z.ZodType = typeof none, Q extends z.ZodType = typeof none, B extends z.ZodType = typeof nothing, R extends z.ZodType = typeof nothing>(given: Given<P, Q, B, R>): Endpoint<P, Q, B, R> => ({
-  public: false,
-  status: given.response ? 200 : 204,
-  params: none as unknown as P,
-  query: none as unknown as Q,
-  body: nothing as unknown as B,
-  response: nothing as unknown as R,
-  ...given,
-})
-
-const byId = z.object({ id: idSchema })
 const byToken = z.object({ token: z.string().min(20).max(200) })
 const signing = z.object({ password: z.string().min(1, 'Re-enter your password to sign.').max(200) })
 const mailBody = z.object({ to: z.array(people.emailSchema).min(1, 'Name at least one recipient.').max(20), message: z.string().trim().max(4000).default('') }).meta({ id: 'SendDocument' })
 const paper = z.object({ paper: z.enum(['A4', 'Letter']).default('A4'), units: z.enum(['SI', 'US', 'both']).optional() })
-const sorts = <const T extends readonly [string, ...string[]]>(keys: T) => z.enum(keys).optional()
 
 export const endpoints = {
   readSession: endpoint({ method: 'get', path: '/session', action: 'session.read', public: true, tag: 'Session', summary: 'Who is signed in, and what they may do', response: people.sessionSchema }),

@@ -2,7 +2,8 @@
  * The client's side of the API: one typed function over the shared registry.
  * Paths, methods and shapes come from shared/schemas/endpoints.ts; nothing here knows a resource by name.
  */
-import { endpoints, type BodyOf, type Endpoint, type EndpointName, type ParamsOf, type QueryOf, type ResponseOf } from '@shared/schemas/endpoints.ts'
+import type { Endpoint } from '@shared/schemas/endpoint.ts'
+import { endpoints, type BodyOf, type EndpointName, type ParamsOf, type QueryOf, type ResponseOf } from '@shared/schemas/endpoints.ts'
 import { problemFrom, unreachable, type ProblemError } from './problem.ts'
 
 const BASE = '/api'

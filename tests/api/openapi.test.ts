@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { z } from 'zod'
-import { endpoints, type Endpoint } from '../../shared/schemas/endpoints.ts'
+import type { Endpoint } from '../../shared/schemas/endpoint.ts'
+import { endpoints } from '../../shared/schemas/endpoints.ts'
 import { openApiPath } from '../../server/openapi/document.ts'
 import { startApp, type TestApp } from './harness.ts'
 

@@ -4,7 +4,8 @@
  */
 import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { endpoints, type Endpoint, type EndpointName } from '../../shared/schemas/endpoints.ts'
+import type { Endpoint } from '../../shared/schemas/endpoint.ts'
+import { endpoints, type EndpointName } from '../../shared/schemas/endpoints.ts'
 import { ROLES, type Role } from '../../shared/schemas/people.ts'
 import { problem, startApp, type Agent, type TestApp, type TestOrganization } from './harness.ts'
 
