@@ -315,10 +315,13 @@ function missingOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleV
 /** From each coupon's value to its range, then the rule's own steps: for the opened reasoning. */
 function stepsOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict, note: string | null): string[] {
   const told: string[] = []
+  const { units } = run.standard
+  if (units !== undefined && sides.length > 0 && run.context.system !== units) told.push(`The procedure is written in ${run.context.system} units; it is judged by the ${units} figures, the only ones that ${run.standard.shortName} prints.`)
   for (const side of sides) {
     const range = rangeOf(run, item, side)
     if (range) told.push(`${side.coupon.number}: ${range.reason}`)
-    if (side.variables.unitSystem !== run.context.system) told.push(`${side.coupon.number} is recorded in ${side.variables.unitSystem} units; it is judged by the ${run.context.system} figures, as the procedure is.`)
+    if (units !== undefined && side.variables.unitSystem !== units) told.push(`${side.coupon.number} is recorded in ${side.variables.unitSystem} units; it is judged by the ${units} figures, the only ones that ${run.standard.shortName} prints.`)
+    else if (units === undefined && side.variables.unitSystem !== run.context.system) told.push(`${side.coupon.number} is recorded in ${side.variables.unitSystem} units; it is judged by the ${run.context.system} figures, as the procedure is.`)
   }
   if (judged.reasoning) told.push(...judged.reasoning)
   if (note !== null) told.push(note)

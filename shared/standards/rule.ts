@@ -119,6 +119,8 @@ export interface Standard {
   shortName: string
   editions: readonly { id: string; label: string; note: string | null }[]
   processes: readonly Process[]
+  /** The one unit system that the standard prints; absent = both, and a record is judged by the set in which it is written. */
+  units?: UnitSystem
   /** Routes by which a procedure may be supported; absent = by test alone. */
   routes?: readonly Route[]
   outOfScope: readonly string[]

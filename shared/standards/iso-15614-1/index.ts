@@ -11,6 +11,7 @@ export const iso15614Part1: Standard = {
   shortName: 'ISO 15614-1',
   editions,
   processes: PROCESSES,
+  units: 'SI',
   outOfScope: [
     'gas welding (311), strip submerged arc (122, 126) and processes beyond 111, 114, 12, 13, 14 and 15',
     'corrosion-resistant overlay (ISO 15614-7), tube to tubesheet (ISO 15614-8), finishing of castings (ISO 15614-4)',

@@ -11,6 +11,7 @@ export const iso15614Part2: Standard = {
   shortName: 'ISO 15614-2',
   editions,
   processes: PROCESSES,
+  units: 'SI',
   outOfScope: [
     'finishing welding of castings (ISO 15614-4)',
     'processes other than 131, 141 and 15; process 142 (edition of 2025)',

@@ -136,3 +136,16 @@ describe('the lists of rules', () => {
     }
   })
 })
+
+test('records in US units are told that they are judged by the SI figures', () => {
+  const us = (variables: WeldingVariables): void => { variables.unitSystem = 'US' }
+  const steps = (wps: boolean, one: boolean): string => finding(judge(procedure(wps ? { change: us } : {}), [coupon(one ? { change: us } : {})]), 'parent-thickness').reasoning.join(' ')
+  for (const [wps, one] of [[true, true], [true, false], [false, true]] as const) {
+    const told = steps(wps, one)
+    expect(told).not.toContain('US figures')
+    expect(told).toContain('by the SI figures, the only ones that ISO 15614-1 prints')
+    expect(told.includes('The procedure is written in US units')).toBe(wps)
+    expect(told.includes('PQR-001 is recorded in US units')).toBe(one)
+  }
+  expect(steps(false, false)).not.toContain('units')
+})
