@@ -22,6 +22,14 @@ describe('shell', () => {
     const places = within(screen.getAllByRole('navigation', { name: 'Main' })[0] ?? document.body)
     expect(places.getAllByRole('link').map(({ textContent }) => textContent)).toEqual(['Today', 'Coupons'])
   })
+  it('keeps the lesser places behind one button, by role too', async () => {
+    mockApi(today)
+    const { router } = showRoutes(createRoutes, { as: session(['today.read', 'standards.read', 'outbox.read']) })
+    await userEvent.click(await screen.findByRole('button', { name: 'More' }))
+    expect((await screen.findAllByRole('menuitem')).map(({ textContent }) => textContent)).toEqual(['Standards', 'Outbox'])
+    await userEvent.click(screen.getByRole('menuitem', { name: 'Outbox' }))
+    await waitFor(() => expect(router.state.location.pathname).toBe('/outbox'))
+  })
   it('puts the cursor into the joint search with / and looks the line up', async () => {
     mockApi(today)
     const { router } = showRoutes(createRoutes, { as: session(['today.read', 'lookup.read']) })
