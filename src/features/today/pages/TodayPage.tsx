@@ -18,6 +18,12 @@ const ROLE: Record<Role, { about: string; step: { label: string; to: string; act
   administrator: { about: 'People, their roles, and what the program sends.', step: { label: 'See the people', to: '/people', action: 'people.read' } },
 }
 const KIND: Record<string, string> = { draft: 'Draft', review: 'Review', returned: 'Returned', coupon: 'Coupon', testing: 'Testing', certify: 'Certify', job: 'Job', invitation: 'Invitation', mail: 'Mail', approved: 'Approved' }
+/** What is merely there to be used stands apart from what waits for somebody's hand. */
+const GROUPS = [
+  { title: 'Waiting for you', holds: (kind: string) => kind !== 'approved' && kind !== 'joint' },
+  { title: 'Joints to weld', holds: (kind: string) => kind === 'joint' },
+  { title: 'Newly in force', holds: (kind: string) => kind === 'approved' },
+]
 const words = (name: string) => name.replace(/([a-z])([A-Z])/g, '$1 $2').replace(/[-_.]/g, ' ').toLowerCase()
 
 export function TodayPage() {
@@ -25,6 +31,7 @@ export function TodayPage() {
   const { data, error, refetch } = useQuery(query('readToday'))
   const roles = person?.roles ?? []
   const steps = [...new Map(roles.map((role) => [ROLE[role].step.to, ROLE[role].step])).values()].filter(({ action }) => may.includes(action))
+  const groups = GROUPS.map(({ title, holds }) => ({ title, tasks: (data?.tasks ?? []).filter(({ kind }) => holds(kind)) })).filter(({ tasks }) => tasks.length > 0)
   const counts = Object.entries(data?.counts ?? {})
   return (
     <>
@@ -43,24 +50,28 @@ export function TodayPage() {
       {data && (
         <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_17rem]">
           {data.tasks.length > 0 ? (
-            <Sheet title="Waiting for you" aside={data.tasks.length === 1 ? 'one thing' : `${data.tasks.length} things`}>
-              <ol>
-                {data.tasks.map((task) => (
-                  <li key={`${task.kind} ${task.href} ${task.title}`} className="relative grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 border-b border-hair px-4 py-3 last:border-b-0 hover:bg-paper sm:grid-cols-[6.5rem_minmax(0,1fr)_auto]">
-                    <span className="cell-label pt-0.5 max-sm:col-span-2">{KIND[task.kind] ?? words(task.kind)}</span>
-                    <span className="min-w-0">
-                      <Link to={task.href} className="font-semibold after:absolute after:inset-0 hover:underline">
-                        {task.title}
-                      </Link>
-                      <span className="block text-soft">{task.detail}</span>
-                    </span>
-                    <time dateTime={task.at} className="text-soft">
-                      {day(task.at)}
-                    </time>
-                  </li>
-                ))}
-              </ol>
-            </Sheet>
+            <div className="grid gap-5">
+              {groups.map(({ title, tasks }) => (
+                <Sheet key={title} title={title} aside={tasks.length === 1 ? 'one thing' : `${tasks.length} things`}>
+                  <ol>
+                    {tasks.map((task) => (
+                      <li key={`${task.kind} ${task.href} ${task.title}`} className="relative grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 border-b border-hair px-4 py-3 last:border-b-0 hover:bg-paper sm:grid-cols-[6.5rem_minmax(0,1fr)_auto]">
+                        <span className="cell-label pt-0.5 max-sm:col-span-2">{KIND[task.kind] ?? words(task.kind)}</span>
+                        <span className="min-w-0">
+                          <Link to={task.href} className="font-semibold after:absolute after:inset-0 hover:underline">
+                            {task.title}
+                          </Link>
+                          <span className="block text-soft">{task.detail}</span>
+                        </span>
+                        <time dateTime={task.at} className="text-soft">
+                          {day(task.at)}
+                        </time>
+                      </li>
+                    ))}
+                  </ol>
+                </Sheet>
+              ))}
+            </div>
           ) : (
             <EmptyState title="Nothing waits for you" step={steps[0] && <ButtonLink to={steps[0].to}>{steps[0].label}</ButtonLink>}>
               <p>Whatever needs your hand shows up here: a draft to finish, a coupon to test, a signature to give.</p>
