@@ -1,6 +1,8 @@
+import { bindAttachment } from './attachment.ts'
 import { bindCoupon } from './coupon.ts'
 import { bindJobJoint } from './job-joint.ts'
 import { bindJob } from './job.ts'
+import { bindMachine } from './machine.ts'
 import { bindPhoto } from './photo.ts'
 import { bindProcedureRevision } from './procedure-revision.ts'
 import { bindProcedure } from './procedure.ts'
@@ -8,4 +10,4 @@ import { bindReleasedDocument } from './released-document.ts'
 import { bindSignature } from './signature.ts'
 
 /** The models of the records, for `bindModels`. */
-export const recordBinders = [bindProcedure, bindProcedureRevision, bindCoupon, bindPhoto, bindSignature, bindReleasedDocument, bindJob, bindJobJoint]
+export const recordBinders = [bindProcedure, bindProcedureRevision, bindCoupon, bindPhoto, bindSignature, bindReleasedDocument, bindJob, bindJobJoint, bindMachine, bindAttachment]
