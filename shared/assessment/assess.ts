@@ -9,6 +9,7 @@ import { getStandard } from '../standards/index.ts'
 import type { Standard } from '../standards/rule.ts'
 import { judgeBlock } from './block.ts'
 import { contradictions } from './contradictions.ts'
+import { couponContradictions } from './kept.ts'
 import { prepare } from './prepare.ts'
 
 export interface AssessInput {
@@ -91,7 +92,7 @@ function recordFindings(input: AssessInput, standard: Standard, findings: Findin
       const { clause, basis, source } = standard.certification
       findings.push(plainFinding(input, { ruleId: 'assessment/certification', title: 'Coupon certified', field: 'supportingCoupons', clause, basis, source, couponIds: [coupon.id], sentence: `${coupon.number} isn't certified yet, so it can't support a procedure until it is.`, missing: [`${coupon.number}: certification`] }))
     }
-    for (const { field, sentence } of contradictions(coupon.content.variables, true)) {
+    for (const { field, sentence } of couponContradictions(coupon)) {
       findings.push(plainFinding(input, { ruleId: 'assessment/contradiction', title: 'Contradiction in a coupon', field: 'supportingCoupons', couponIds: [coupon.id], sentence: `${coupon.number}: ${sentence}`, missing: [`${coupon.number}: ${field}`] }))
     }
   }

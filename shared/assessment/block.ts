@@ -6,17 +6,21 @@
  * With toughness, supplementary variables are judged by the coupons that carry toughness tests.
  */
 import { unionAll } from '../ranges/span.ts'
-import type { AssessedCoupon, Basis, Finding, Fix, QualifiedRange, QualifiedSpan, VariableClass } from '../schemas/assessment.ts'
+import type { AssessedCoupon, Finding, Fix, QualifiedRange, QualifiedSpan, VariableClass } from '../schemas/assessment.ts'
 import { weakest } from '../standards/common/rule-kinds.ts'
 import { capital, distinct, list, names } from '../standards/common/wording.ts'
-import type { CouponSide, Rule, RuleContext, RuleRange, RuleVerdict, Standard } from '../standards/rule.ts'
-import { classBasis, effectiveClass, type PreparedEdition, type PreparedRule } from './prepare.ts'
+import type { CouponSide, Rule, RuleContext, RuleVerdict, Standard } from '../standards/rule.ts'
+import { coversAlone, gridOf, rangeOf as keptRangeOf, sidesOf, type Grid, type KeptRange, type KeptSide } from './kept.ts'
+import { effectiveClass, fieldOf, type PreparedEdition, type PreparedRule } from './prepare.ts'
 
 export interface BlockJudgement { findings: Finding[]; ranges: QualifiedRange[] }
 
 /** A side with its place in the run and how it has fared so far among the `each` variables. */
 interface Linked extends CouponSide {
   index: number
+  kept: KeptSide
+  /** The side's ranges under the edition that is judged by. */
+  grid: Grid
   /** This side alone, as `check` takes it. */
   alone: readonly Linked[]
   essentialOutside: number
@@ -26,9 +30,9 @@ interface Linked extends CouponSide {
 }
 
 interface Item {
+  prepared: PreparedRule
   rule: Rule
   class: VariableClass
-  basis: Basis
   field: string
   /** Where its row starts in the run's grids. */
   row: number
@@ -38,35 +42,25 @@ type Judged = RuleVerdict | null
 
 interface Run {
   standard: Standard
+  prepared: PreparedEdition
   context: RuleContext
   sides: readonly Linked[]
   others: readonly AssessedCoupon[]
   /** Sides of the coupons that are not linked; worked out when first asked for. */
-  otherSides: readonly CouponSide[] | null
+  otherSides: readonly KeptSide[] | null
   out: BlockJudgement
   /** The coupons named last, because neighbouring findings mostly name the same. */
   named: readonly Linked[] | null
   ids: readonly string[]
   /** Grids of items by sides, row after row; undefined = not asked yet. Each range is worked out once. */
-  ranges: (RuleRange | null | undefined)[]
+  ranges: (KeptRange | undefined)[]
   judged: (Judged | undefined)[]
 }
 
-/** Sides of a coupon for a block: its blocks of the same process, or the weld as a whole. */
-export function sidesOf(standard: Standard, coupons: readonly AssessedCoupon[], context: Pick<RuleContext, 'block'>): CouponSide[] {
-  const sides: CouponSide[] = []
-  for (const coupon of coupons) {
-    const { variables } = coupon.content
-    const role = standard.role(coupon)
-    if (!context.block) sides.push({ coupon, variables, block: null, role })
-    else for (const block of variables.processes) if (block.process !== null && block.process === context.block.process) sides.push({ coupon, variables, block, role })
-  }
-  return sides
-}
-
-function link({ coupon, variables, block, role }: CouponSide, index: number): Linked {
+function link(prepared: PreparedEdition, context: RuleContext, kept: KeptSide, index: number): Linked {
   const alone: Linked[] = []
-  const linked: Linked = { coupon, variables, block, role, index, alone, essentialOutside: 0, essentialUnsure: 0, supplementaryOutside: 0, supplementaryUnsure: 0 }
+  const { coupon, variables, block, role } = kept
+  const linked: Linked = { coupon, variables, block, role, index, kept, grid: gridOf(kept, prepared, context), alone, essentialOutside: 0, essentialUnsure: 0, supplementaryOutside: 0, supplementaryUnsure: 0 }
   alone.push(linked)
   return linked
 }
@@ -76,17 +70,19 @@ function link({ coupon, variables, block, role }: CouponSide, index: number): Li
  * @param out takes its findings, and every range of every coupon that was asked
  */
 export function judgeBlock(standard: Standard, prepared: PreparedEdition, context: RuleContext, others: readonly AssessedCoupon[], out: BlockJudgement): void {
-  const rules = rulesFor(standard, prepared, context)
+  const rules = rulesFor(prepared, context)
   if (rules.length === 0) return
-  const sides = sidesOf(standard, context.coupons, context).map(link)
+  const sides: Linked[] = []
+  for (const kept of sidesOf(standard, context.coupons, context.block)) sides.push(link(prepared, context, kept, sides.length))
   const cells = rules.length * sides.length
-  const run: Run = { standard, context, sides, others, otherSides: null, out, named: null, ids: [], ranges: new Array<RuleRange | null | undefined>(cells), judged: new Array<Judged | undefined>(cells) }
+  const run: Run = { standard, prepared, context, sides, others, otherSides: null, out, named: null, ids: [], ranges: new Array<KeptRange | undefined>(cells), judged: new Array<Judged | undefined>(cells) }
   const each: Item[] = []
   const joint: Item[] = []
   const union: Item[] = []
   let row = 0
-  for (const { rule, class: ruleClass, classBasis: basis } of rules) {
-    const item: Item = { rule, class: effectiveClass(ruleClass, context.toughness), basis, field: fieldOf(context, rule), row }
+  for (const own of rules) {
+    const { rule } = own
+    const item: Item = { prepared: own, rule, class: effectiveClass(own.class, context.toughness), field: fieldOf(own, context.path), row }
     row += sides.length
     if (item.class === 'not-a-variable') notAVariable(run, item)
     else if (item.class === 'nonessential' || rule.meta.withoutCoupon) alone(run, item)
@@ -97,25 +93,30 @@ export function judgeBlock(standard: Standard, prepared: PreparedEdition, contex
 }
 
 /** For the weld as a whole a rule takes its class from the first process that has one. */
-function rulesFor(standard: Standard, prepared: PreparedEdition, context: RuleContext): readonly PreparedRule[] {
+function rulesFor(prepared: PreparedEdition, context: RuleContext): readonly PreparedRule[] {
   if (context.block) return (context.block.process && prepared.byProcess.get(context.block.process)) || []
   const rules: PreparedRule[] = []
-  for (const rule of prepared.weld) {
-    const process = context.procedure.processes.find((block) => block.process && rule.meta.classes[block.process])?.process
-    const ruleClass = process ? rule.meta.classes[process] : undefined
-    if (process && ruleClass && standard.processes.includes(process)) rules.push({ rule, class: ruleClass, classBasis: classBasis(rule, process) })
+  for (const { byProcess } of prepared.weld) {
+    const first = context.procedure.processes.find((block) => block.process && byProcess.has(block.process))?.process
+    const own = first && byProcess.get(first)
+    if (own) rules.push(own)
   }
   return rules
 }
 
-function rangeOf(run: Run, item: Item, side: Linked): RuleRange | null {
+function rangeOf(run: Run, item: Item, side: Linked): KeptRange {
   const at = item.row + side.index
   let range = run.ranges[at]
   if (range === undefined) {
-    range = item.rule.range(run.context, side)
+    range = keptRangeOf(side.grid, item.prepared, run.context, side.kept)
     run.ranges[at] = range
   }
   return range
+}
+
+const spanOf = (run: Run, item: Item, side: Linked): QualifiedSpan | null => {
+  const { given } = rangeOf(run, item, side)
+  return given === null ? null : given.range
 }
 
 const isWithin = (judged: Judged | undefined): boolean => !judged || judged.verdict === 'within'
@@ -127,7 +128,7 @@ const carriesToughness = (side: CouponSide): boolean => side.role !== 'mechanica
 
 /** Judges one coupon by one `each` variable and keeps how it fared. */
 function judgeAlone(run: Run, item: Item, side: Linked): void {
-  const judged = item.rule.check(run.context, side.alone, rangeOf(run, item, side)?.range ?? null)
+  const judged = item.rule.check(run.context, side.alone, spanOf(run, item, side))
   run.judged[item.row + side.index] = judged
   if (judged === null || judged.verdict === 'within') return
   if (item.class === 'supplementary') {
@@ -153,7 +154,7 @@ function judgeWithCoupons(run: Run, each: readonly Item[], joint: readonly Item[
     const group = item.class === 'essential' ? essential : supplementary
     const nearest = item.class === 'essential' ? lead : toughLead
     const chosen = group.length > 0 ? group : nearest ? nearest.alone : []
-    for (const side of sides) if (run.judged[item.row + side.index] !== undefined) pushRange(run, item, side, rangeOf(run, item, side))
+    for (const side of sides) if (run.judged[item.row + side.index] !== undefined) pushRange(run, item, side)
     const first = chosen[0]
     const judged = first && run.judged[item.row + first.index]
     if (judged) pushFinding(run, item, chosen, judged, chosen.length < sides.length && group.length === 0 ? `No linked coupon covers every variable of this process by itself; ${names(chosen)} comes nearest.` : null)
@@ -161,8 +162,8 @@ function judgeWithCoupons(run: Run, each: readonly Item[], joint: readonly Item[
 
   for (const item of joint) {
     const candidates = supplementary.length > 0 ? supplementary : toughLead ? toughLead.alone : []
-    for (const side of candidates) pushRange(run, item, side, rangeOf(run, item, side))
-    const alones = candidates.filter((side) => isWithin(item.rule.check(context, side.alone, rangeOf(run, item, side)?.range ?? null)))
+    for (const side of candidates) pushRange(run, item, side)
+    const alones = candidates.filter((side) => isWithin(item.rule.check(context, side.alone, spanOf(run, item, side))))
     const used = alones.length > 0 ? alones : candidates
     const judged = item.rule.check(context, used, joinRanges(run, item, used))
     if (alones.length > 0) supplementary = alones
@@ -188,7 +189,7 @@ function judgeUnion(run: Run, each: readonly Item[], union: readonly Item[], gro
   const byClass = [joining(context.toughness, true, groups), joining(context.toughness, false, groups)] as const
   for (const item of union) {
     const used = item.class === 'essential' ? byClass[0] : byClass[1]
-    for (const side of sides) pushRange(run, item, side, rangeOf(run, item, side))
+    for (const side of sides) pushRange(run, item, side)
     const judged = item.rule.check(context, used, joinRanges(run, item, used))
     const maybe = judged && judged.verdict === 'outside' && sides.length > used.length ? sides.filter((side) => !used.includes(side) && !canFail(side) && hasMechanical(side)) : []
     if (judged && maybe.length > 0) {
@@ -220,37 +221,44 @@ function pickLead(sides: readonly Linked[], withEssential: boolean): Linked | nu
 
 function joinRanges(run: Run, item: Item, sides: readonly Linked[]): QualifiedSpan | null {
   const { rule } = item
-  if (rule.join) return rule.join(run.context, sides, sides.map((side) => rangeOf(run, item, side)))
+  if (rule.join) return rule.join(run.context, sides, sides.map((side) => rangeOf(run, item, side).given))
   const spans: QualifiedSpan[] = []
   for (const side of sides) {
-    const range = rangeOf(run, item, side)
-    if (range) spans.push(range.range)
+    const span = spanOf(run, item, side)
+    if (span) spans.push(span)
   }
   return unionAll(spans)
 }
 
-function pushRange(run: Run, item: Item, side: CouponSide, given: RuleRange | null): void {
-  if (!given) return
-  const { rule } = item
+/** The range as it is told; kept, because mostly it is told again of the same block. */
+function pushRange(run: Run, item: Item, side: Linked): void {
+  const kept = rangeOf(run, item, side)
+  const { given, told } = kept
+  if (given === null) return
   const { block } = run.context
-  run.out.ranges.push({
+  const id = block === null ? null : block.id
+  if (told !== null && told.processId === id && told.field === item.field && told.class === item.class) {
+    run.out.ranges.push(told)
+    return
+  }
+  const { rule, prepared: { classBasis } } = item
+  kept.told = {
     ruleId: rule.meta.id,
     variable: rule.meta.title,
     label: rule.label,
     field: item.field,
-    processId: block === null ? null : block.id,
+    processId: id,
     process: block === null ? null : block.process,
     class: item.class,
     range: given.range,
     tested: given.tested,
     couponId: side.coupon.id,
     clause: given.clause ?? rule.meta.clause,
-    basis: given.basis ? weakest(given.basis, item.basis) : item.basis,
+    basis: given.basis ? weakest(given.basis, classBasis) : classBasis,
     reason: given.reason,
-  })
+  }
+  run.out.ranges.push(kept.told)
 }
-
-const fieldOf = (context: RuleContext, rule: Rule): string => (rule.at === 'block' && context.path ? `${context.path}.${rule.field}` : rule.field)
 
 function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Judged, note: string | null): void {
   if (!judged) return
@@ -261,7 +269,7 @@ function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Jud
   const verdict = tentative ? 'cannot-tell' : judged.verdict
   const fixes: Fix[] = judged.fixes ? [...judged.fixes] : []
   if (tentative) fixes.unshift({ kind: 'state', label: 'State whether toughness is required', field: 'toughnessRequired' })
-  if (verdict !== 'within' && run.others.length > 0 && item.class !== 'nonessential') offerOthers(run, rule, fixes)
+  if (verdict !== 'within' && run.others.length > 0 && item.class !== 'nonessential') offerOthers(run, item, fixes)
   run.out.findings.push({
     ruleId: meta.id,
     standard: run.standard.id,
@@ -279,7 +287,7 @@ function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Jud
     couponIds: idsOf(run, sides),
     missing: tentative ? ['procedure: toughnessRequired', ...(judged.missing ?? [])] : missingOf(run, item, sides, judged),
     fixes,
-    basis: judged.basis ? weakest(judged.basis, item.basis) : item.basis,
+    basis: judged.basis ? weakest(judged.basis, item.prepared.classBasis) : item.prepared.classBasis,
     source: meta.source,
     reasoning: stepsOf(run, item, sides, judged, note),
   })
@@ -298,8 +306,8 @@ function idsOf(run: Run, sides: readonly Linked[]): string[] {
 function testedOf(run: Run, item: Item, sides: readonly Linked[]): Finding['tested'] {
   const tested: Finding['tested'] = []
   for (const side of sides) {
-    const value = rangeOf(run, item, side)?.tested
-    if (value !== null && value !== undefined) tested.push(value)
+    const { given } = rangeOf(run, item, side)
+    if (given !== null && given.tested !== null) tested.push(given.tested)
   }
   return tested
 }
@@ -308,7 +316,7 @@ function testedOf(run: Run, item: Item, sides: readonly Linked[]): Finding['test
 function missingOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict): string[] {
   const told = judged.missing ?? []
   if (judged.verdict !== 'cannot-tell') return [...told]
-  const lacking = sides.flatMap((side) => rangeOf(run, item, side)?.missing ?? [])
+  const lacking = sides.flatMap((side) => rangeOf(run, item, side).given?.missing ?? [])
   return lacking.length === 0 ? [...told] : [...new Set([...told.filter((text) => text.startsWith('procedure')), ...lacking])]
 }
 
@@ -318,8 +326,8 @@ function stepsOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVer
   const { units } = run.standard
   if (units !== undefined && sides.length > 0 && run.context.system !== units) told.push(`The procedure is written in ${run.context.system} units; it is judged by the ${units} figures, the only ones that ${run.standard.shortName} prints.`)
   for (const side of sides) {
-    const range = rangeOf(run, item, side)
-    if (range) told.push(`${side.coupon.number}: ${range.reason}`)
+    const { step } = rangeOf(run, item, side)
+    if (step !== null) told.push(step)
     if (units !== undefined && side.variables.unitSystem !== units) told.push(`${side.coupon.number} is recorded in ${side.variables.unitSystem} units; it is judged by the ${units} figures, the only ones that ${run.standard.shortName} prints.`)
     else if (units === undefined && side.variables.unitSystem !== run.context.system) told.push(`${side.coupon.number} is recorded in ${side.variables.unitSystem} units; it is judged by the ${run.context.system} figures, as the procedure is.`)
   }
@@ -329,13 +337,14 @@ function stepsOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVer
 }
 
 /** Stored coupons that would cover this variable, three at most. */
-function offerOthers(run: Run, rule: Rule, fixes: Fix[]): void {
-  run.otherSides ??= sidesOf(run.standard, run.others, run.context).filter((side) => !run.sides.some((linked) => linked.coupon.id === side.coupon.id))
+function offerOthers(run: Run, { prepared }: Item, fixes: Fix[]): void {
+  const { context, sides } = run
+  run.otherSides ??= sidesOf(run.standard, run.others, context.block).filter((side) => !sides.some((linked) => linked.coupon.id === side.coupon.id))
   let offered = 0
   for (const side of run.otherSides) {
     if (offered === 3) return
-    const judged = rule.check(run.context, [side], rule.range(run.context, side)?.range ?? null)
-    if (judged?.verdict !== 'within' || fixes.some((fix) => fix.kind === 'link-coupon' && fix.couponId === side.coupon.id)) continue
+    const range = keptRangeOf(gridOf(side, run.prepared, context), prepared, context, side)
+    if (!coversAlone(prepared.rule, context, side, range) || fixes.some((fix) => fix.kind === 'link-coupon' && fix.couponId === side.coupon.id)) continue
     fixes.push({ kind: 'link-coupon', label: `Link ${side.coupon.number}, which covers it`, couponId: side.coupon.id })
     offered += 1
   }

@@ -10,12 +10,21 @@ export interface PreparedRule {
   class: RuleClass
   /** Weaker of the bases of figure and class letter for this process. */
   classBasis: Basis
+  /** Its place among the rules of the edition. */
+  place: number
+  /** Where its findings stand, by the path of the block ('' = the weld). */
+  fields: Map<string, string>
 }
 
 export interface PreparedEdition {
-  weld: readonly Rule[]
+  /** How many rules there are. */
+  size: number
+  weld: readonly PreparedWeldRule[]
   byProcess: ReadonlyMap<Process, readonly PreparedRule[]>
 }
+
+/** A rule of the weld as a whole, by the process from which it takes its class. */
+export interface PreparedWeldRule { rule: Rule; byProcess: ReadonlyMap<Process, PreparedRule> }
 
 const cache = new WeakMap<Standard, Map<string, PreparedEdition | null>>()
 
@@ -38,16 +47,28 @@ export function prepare(standard: Standard, edition: string, route: Route = 'tes
 
 function build(standard: Standard, edition: string, route: Route): PreparedEdition {
   const rules = standard.rules.filter((rule) => rule.meta.editions.includes(edition) && (rule.meta.route ?? route) === route).map(alike)
-  const byProcess = new Map<Process, PreparedRule[]>()
-  for (const process of standard.processes) {
-    const own: PreparedRule[] = []
-    for (const rule of rules) {
+  const byProcess = new Map<Process, PreparedRule[]>(standard.processes.map((process) => [process, []]))
+  const weld: PreparedWeldRule[] = []
+  rules.forEach((rule, place) => {
+    const own = new Map<Process, PreparedRule>()
+    for (const process of standard.processes) {
       const ruleClass = rule.meta.classes[process]
-      if (rule.meta.scope === 'process' && ruleClass) own.push({ rule, class: ruleClass, classBasis: classBasis(rule, process) })
+      if (ruleClass) own.set(process, { rule, class: ruleClass, classBasis: classBasis(rule, process), place, fields: new Map() })
     }
-    byProcess.set(process, own)
+    if (rule.meta.scope === 'weld') weld.push({ rule, byProcess: own })
+    else for (const [process, prepared] of own) byProcess.get(process)?.push(prepared)
+  })
+  return { size: rules.length, weld, byProcess }
+}
+
+/** Dotted path beside which the findings of a rule stand. */
+export function fieldOf({ rule, fields }: PreparedRule, path: string): string {
+  let field = fields.get(path)
+  if (field === undefined) {
+    field = rule.at === 'block' && path !== '' ? `${path}.${rule.field}` : rule.field
+    fields.set(path, field)
   }
-  return { weld: rules.filter((rule) => rule.meta.scope === 'weld'), byProcess }
+  return field
 }
 
 const blankMeta = (): Partial<Rule['meta']> => ({ id: undefined, title: undefined, standard: undefined, clause: undefined, editions: undefined, classes: undefined, basis: undefined, classBasis: undefined, source: undefined, statement: undefined, scope: undefined, combine: undefined, route: undefined, withoutCoupon: undefined })
