@@ -11,7 +11,7 @@ export const asmeIx: Standard = {
   shortName: 'ASME IX',
   editions,
   processes: ['SMAW', 'SAW', 'GMAW', 'FCAW', 'GTAW', 'PAW'],
-  outOfScope: ['corrosion-resistant overlay and hard-facing', 'clad metal', 'tube to tubesheet', 'temper bead', 'stud, resistance, friction, beam and hybrid processes', 'brazing', 'fusing'],
+  outOfScope: ['fillet mock-ups of a production assembly (QW-181.1.1)', 'corrosion-resistant overlay and hard-facing', 'clad metal', 'tube to tubesheet', 'temper bead', 'stud, resistance, friction, beam and hybrid processes', 'brazing', 'fusing'],
   rules,
   certification: { clause: 'QW-201', basis: 'secondary', source: 'Published interpretations on QW-200.2(b) and QW-201' },
   role,

@@ -7,10 +7,11 @@ import { figureOrNull, unitOf } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
 import type { CouponSide, RangeContext } from '../rule.ts'
 import { formerDiameter, judgeBend, judgeMacro } from './acceptance.ts'
+import { heatInputContradictions } from './heat-input-record.ts'
 import { role } from './role.ts'
 import { rules } from './rules/index.ts'
 import { specimenRequirements } from './specimens.ts'
-import { judgeTension } from './tension.ts'
+import { judgeTension, stressDisagrees, stressText } from './tension.ts'
 
 type Missing = CouponQualification['missing'][number]
 
@@ -116,13 +117,18 @@ export function qualify(coupon: AssessedCoupon, edition: string, level: '1' | '2
   // A coupon that only adds toughness to another record needs no mechanical specimens of its own (QW-401.1).
   if (role(coupon) !== 'toughness-only') {
     for (const row of specimens) {
-      if (row.recorded < row.required) missing.push({ field: row.kind === 'tension' ? 'tension' : row.kind === 'macro' ? 'macros' : 'bends', message: `${row.label}: ${row.required} are required, ${row.recorded} ${row.recorded === 1 ? 'is' : 'are'} recorded.`, clause: row.clause })
+      if (row.recorded < row.required) missing.push({ field: row.kind === 'tension' ? 'tension' : row.kind === 'macro' ? 'macros' : 'bends', message: `${row.label}: ${row.required} are required, ${row.recorded} ${row.recorded === 1 ? 'is' : 'are'} recorded.${row.kind === 'tension' && row.recorded < tension.length && row.alternative ? ` ${row.alternative}` : ''}`, clause: row.clause })
     }
   }
   if (variables.toughnessRequired === true && !coupon.content.toughness.some((test) => test.values.length > 0)) missing.push({ field: 'toughness', message: 'The coupon was welded for toughness; record the toughness results.', clause: 'QW-401.1' })
   for (const result of results) {
     if (result.verdict !== 'pass') missing.push({ field: fieldOfTest(coupon, result.testId), message: result.sentence, clause: result.verdict === 'fail' ? 'QW-202.1' : result.clause })
   }
+  tension.forEach((test, i) => {
+    const apart = stressDisagrees(test)
+    if (apart) missing.push({ field: `tension.${i}.reportedStrength`, message: `${test.specimen}: load and area give ${stressText(apart.computed, variables.unitSystem)}, but ${stressText(apart.reported, variables.unitSystem)} is reported. Check the load, the size and the report.`, clause: 'QW-152' })
+  })
+  missing.push(...heatInputContradictions(coupon))
   bends.forEach((_, i) => {
     const issue = formerIssue(coupon, i)
     if (issue) missing.push(issue)

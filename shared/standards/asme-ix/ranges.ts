@@ -7,15 +7,15 @@ import type { Basis, NumericRange } from '../../schemas/assessment.ts'
 import type { Process, ProcessBlock, WeldingVariables } from '../../schemas/welding.ts'
 import type { UnitSystem } from '../../units/types.ts'
 import { figureOrNull, figures, isStated, single, tidy, unitOf } from '../common/reading.ts'
-import { lacksFigure } from '../common/lacking.ts'
+import { lackWords, lacksFigure } from '../common/lacking.ts'
 import { show } from '../common/wording.ts'
 import type { CouponSide, RangeContext } from '../rule.ts'
 import { pNumber, secondMetal } from './members.ts'
 
 /** The printed pairs (basis of the pairing: memory; figures of QW-451.1 read in 2017). */
 export const FIGURES = {
-  SI: { thin: 1.5, low: 10, lowMin: 1.5, highMin: 5, sideBends: 19, thick: 38, heavy: 150, thickMax: 200, pass: 13, toughness: 16, toughnessHalf: 6, similar: 6, root: 13, electrode: 6, discontinuity: 3 },
-  US: { thin: 1 / 16, low: 3 / 8, lowMin: 1 / 16, highMin: 3 / 16, sideBends: 3 / 4, thick: 1.5, heavy: 6, thickMax: 8, pass: 1 / 2, toughness: 5 / 8, toughnessHalf: 1 / 4, similar: 1 / 4, root: 1 / 2, electrode: 1 / 4, discontinuity: 1 / 8 },
+  SI: { thin: 1.5, low: 10, lowMin: 1.5, highMin: 5, sideBends: 19, thick: 38, heavy: 150, thickMax: 200, pass: 13, toughness: 16, toughnessHalf: 6, similar: 6, root: 13, electrode: 6, discontinuity: 3, tensionSets: 25 },
+  US: { thin: 1 / 16, low: 3 / 8, lowMin: 1 / 16, highMin: 3 / 16, sideBends: 3 / 4, thick: 1.5, heavy: 6, thickMax: 8, pass: 1 / 2, toughness: 5 / 8, toughnessHalf: 1 / 4, similar: 1 / 4, root: 1 / 2, electrode: 1 / 4, discontinuity: 1 / 8, tensionSets: 1 },
 } as const
 
 /** QW-451.1 note 3: 8 in. (200 mm) for these only; FCAW stands under GMAW (secondary). */
@@ -166,8 +166,10 @@ export function baseMetalSpan(context: RangeContext, side: CouponSide, member: M
   const reason = `T = ${show(T, unit)} gives ${show(lower ?? 0, unit)} to ${show(upper ?? 0, unit)} (${how.upper ?? ''}) by ${clause}.`
   const span: BaseMetalSpan = { range: unknownLength(system), tested: T, lower, upper, how, reason, clause, basis, missing: [] }
   const upperUnknown = narrow(context, side, block, T, span)
-  lift(context, side, T, member, span)
-  span.range = upperUnknown ? uncertainAbove(system, span.lower ?? 0, tidy(1.1 * T), span.upper) : length(system, span.lower, span.upper)
+  const own = upperUnknown ? tidy(1.1 * T) : span.upper
+  const root = lift(context, side, T, member, span)
+  const sure = upperUnknown ? own : root && own !== null ? Math.max(own, root.certain) : span.upper
+  span.range = sure === null || sure === span.upper ? length(system, span.lower, span.upper) : uncertainAbove(system, span.lower ?? 0, sure, span.upper)
   return span
 }
 
@@ -213,22 +215,23 @@ function narrow(context: RangeContext, side: CouponSide, block: ProcessBlock, T:
 }
 
 /** Takes the upper limit away. */
-function free(span: BaseMetalSpan, clause: string, basis: Basis, why: string): void {
+function free(span: BaseMetalSpan, clause: string, basis: Basis, why: string): null {
   span.upper = null
   span.how.upper = null
   span.clause = clause
   span.basis = basis
   span.reason += ` ${why}: ${clause} sets no upper limit.`
+  return null
 }
 
-/** The clauses that lift the upper limit, where the procedure's weld falls under them. */
-function lift(context: RangeContext, side: CouponSide, T: number, member: Member, span: BaseMetalSpan): void {
+/** The clauses that lift the upper limit, where the procedure's weld falls under them. @returns the root exception where it is the one that lifts */
+function lift(context: RangeContext, side: CouponSide, T: number, member: Member, span: BaseMetalSpan): RootException | null {
   const { system, procedure } = context
-  if (!procedure) return
+  if (!procedure) return null
   const f = FIGURES[system]
   const unit = unitOf('length', system)
   // A pass over 13 mm and short-circuiting are limits of their own, which these clauses do not lift.
-  if (span.how.upper === '1.1T') return
+  if (span.how.upper === '1.1T') return null
   if (procedure.joint.penetration === 'partial' && T >= f.thick) return free(span, 'QW-202.2(b)', 'memory', `Partial-penetration groove, coupon T at least ${show(f.thick, unit)}`)
   if (procedure.joint.work != null && T >= f.thick) return free(span, 'QW-202.3', 'memory', `Repair or build-up, coupon T at least ${show(f.thick, unit)}`)
   if (member === 'thick') {
@@ -238,23 +241,29 @@ function lift(context: RangeContext, side: CouponSide, T: number, member: Member
     if (T >= f.thick) return free(span, 'QW-202.4(b)(2)', 'secondary', `Thicker member, coupon T at least ${show(f.thick, unit)}`)
   }
   const root = rootException(context, side, T)
-  if (root && (span.upper === null || root.upper > span.upper)) {
-    span.upper = root.upper
-    span.how.upper = `root layers with ${root.number}`
-    span.clause = 'QW-200.4(b)'
-    span.basis = 'secondary'
-    span.reason += ` Root layers from a coupon of at least ${show(f.root, unit)}: QW-200.4(b) lets the base metal go to the ${show(root.upper, unit)} of ${root.number}.`
-  }
+  if (!root || span.upper === null || root.upper <= span.upper) return null
+  span.upper = root.upper
+  span.how.upper = `root layers with ${root.number}`
+  span.clause = 'QW-200.4(b)'
+  span.basis = 'secondary'
+  span.reason += ` Root layers from a coupon of at least ${show(f.root, unit)}: QW-200.4(b) lets the base metal go to the ${show(root.upper, unit)} of ${root.number}.`
+  if (root.missing.length === 0) return root
+  span.missing.push(...root.missing)
+  span.reason += ` Above ${show(root.certain, unit)} that can't be told, because ${lackWords(root.missing)}.`
+  return root
 }
 
 const ROOT_PROCESSES: ReadonlySet<Process> = new Set<Process>(['GTAW', 'SMAW', 'GMAW', 'PAW', 'SAW'])
 
+/** What QW-200.4(b) allows: base metal surely up to `certain`, and up to `upper` where a record that lacks something proves to allow it. */
+export interface RootException { upper: number; number: string; certain: number; missing: string[] }
+
 /** QW-200.4(b): the block lays root layers only, its coupon is at least 13 mm, and a thicker coupon of another process stands in the joint. */
-export function rootException(context: RangeContext, side: CouponSide, T: number): { upper: number; number: string } | null {
+export function rootException(context: RangeContext, side: CouponSide, T: number): RootException | null {
   const { system, procedure, block } = context
   if (!procedure || !block?.process || !ROOT_PROCESSES.has(block.process) || T < FIGURES[system].root) return null
   if (block.passes.length === 0 || !block.passes.every((pass) => pass.layer === 'root')) return null
-  let best: { upper: number; number: string } | null = null
+  const found: RootException[] = []
   for (const other of context.coupons) {
     if (other.id === side.coupon.id) continue
     const otherT = couponThickness({ variables: other.content.variables }, system)
@@ -262,11 +271,12 @@ export function rootException(context: RangeContext, side: CouponSide, T: number
     for (const otherBlock of other.content.variables.processes) {
       const { process } = otherBlock
       if (!process || !ROOT_PROCESSES.has(process) || process === block.process || !procedure.processes.some((asked) => asked.process === process)) continue
-      const span: BaseMetalSpan = baseMetalSpan({ ...context, procedure: null, block: null }, { coupon: other, variables: other.content.variables, block: otherBlock, role: 'full' })
-      if (span.upper !== null && span.missing.length === 0 && (best === null || span.upper > best.upper)) best = { upper: span.upper, number: other.number }
+      const { upper, missing } = baseMetalSpan({ ...context, procedure: null, block: null }, { coupon: other, variables: other.content.variables, block: otherBlock, role: 'full' })
+      if (upper !== null) found.push({ upper, number: other.number, certain: missing.length === 0 ? upper : Math.min(upper, tidy(1.1 * otherT)), missing })
     }
   }
-  return best
+  const best = found.sort((a, b) => b.upper - a.upper || b.certain - a.certain)[0]
+  return best ? { ...best, certain: Math.max(...found.map(({ certain }) => certain)) } : null
 }
 
 /** Fillets: a groove coupon covers every thickness, size and diameter (QW-451.4); so does a fillet coupon (QW-451.3). */

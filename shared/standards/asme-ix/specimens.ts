@@ -1,7 +1,10 @@
 /** Specimens that tables QW-451.1 to QW-451.3 ask of a coupon, and what of them is recorded. */
 import type { AssessedCoupon, Basis, SpecimenRequirement } from '../../schemas/assessment.ts'
 import type { UnitSystem } from '../../units/types.ts'
+import { list, show } from '../common/wording.ts'
+import { unitOf } from '../common/reading.ts'
 import { couponThickness, FIGURES, isLongitudinal } from './ranges.ts'
+import { tensionTests } from './tension.ts'
 
 export interface SpecimenCount {
   tension: number
@@ -35,6 +38,17 @@ export function requiredSpecimens(coupon: AssessedCoupon): SpecimenCount | null 
   return T === null ? null : grooveSpecimens(T, variables.unitSystem, isLongitudinal({ coupon }))
 }
 
+/** Part-thickness specimens of a coupon over 25 mm (1 in.) count by sets. */
+function tensionRow({ content }: AssessedCoupon, row: SpecimenRequirement): SpecimenRequirement {
+  const system = content.variables.unitSystem
+  const T = couponThickness({ variables: content.variables }, system)
+  if (T === null || T <= FIGURES[system].tensionSets) return row
+  const unit = unitOf('length', system)
+  const { tests, left } = tensionTests(content.tension, T, system)
+  const alternative = left.length > 0 ? `${list(left)} ${left.length === 1 ? 'is' : 'are'} too thin to represent ${show(T, unit)}; specimens that together represent the thickness count as one.` : tests < content.tension.length ? 'Specimens that together represent the thickness count as one.' : null
+  return { ...row, recorded: tests, alternative }
+}
+
 /** What is asked for beside what is recorded; four recorded side bends stand for face and root bends where note 5 allows. */
 export function specimenRequirements(coupon: AssessedCoupon): SpecimenRequirement[] {
   const asked = requiredSpecimens(coupon)
@@ -44,7 +58,7 @@ export function specimenRequirements(coupon: AssessedCoupon): SpecimenRequiremen
   const side = count('side')
   const row = (kind: string, label: string, required: number, recorded: number, alternative: string | null = null): SpecimenRequirement => ({ kind, label, required, recorded, alternative, clause: asked.clause, basis: asked.basis })
   if (asked.macro > 0) return [row('macro', 'Macro sections', asked.macro, macros.length)]
-  const rows = [row('tension', 'Tension specimens', asked.tension, tension.length)]
+  const rows = [tensionRow(coupon, row('tension', 'Tension specimens', asked.tension, tension.length))]
   if (asked.side > 0) return [...rows, row('side-bend', 'Side bends', asked.side, side)]
   if (asked.sideAlternative && side > 0 && count('face') + count('root') === 0) return [...rows, { ...row('side-bend', 'Side bends', 4, side, 'Two face bends and two root bends.'), basis: 'memory' }]
   const alternative = asked.sideAlternative ? 'Four side bends may stand for the two face and two root bends.' : null

@@ -5,9 +5,13 @@ import type { BaseMetal, TensionTest, WeldingVariables } from '../../schemas/wel
 import type { UnitSystem } from '../../units/types.ts'
 import { inUnitOf, tidy, unitOf } from '../common/reading.ts'
 import { pFamily, pNumber, secondMetal } from './members.ts'
+import { FIGURES } from './ranges.ts'
 
 /** Five per cent below the specified minimum is allowed for a break in the base metal only (QW-153.1(d); read). */
 const BASE_METAL_BREAK = 0.95
+
+/** How far a reported stress may lie from load over area before somebody must look (practice of reviewers; a rounding of the area stays inside). */
+const AGREES = 0.01
 
 /** Area of a tension specimen in mm²; null when its measures aren't recorded. */
 export function specimenArea(test: TensionTest): number | null {
@@ -34,7 +38,7 @@ const STEP = { SI: 5, US: 1 } as const
 interface Minimum { low: number; high: number; how: string; basis: Basis; unwelded: boolean }
 
 const rounded = (value: number, system: UnitSystem): string => `${Math.round(value * 10) / 10} ${unitOf('stress', system)}`
-const stressText = (mpa: number, system: UnitSystem): string => rounded(inUnitOf(mpa, 'stress', system), system)
+export const stressText = (mpa: number, system: UnitSystem): string => rounded(inUnitOf(mpa, 'stress', system), system)
 
 /** A temper got by work or heat (H1…, T1…), which welding takes away. */
 const TEMPER = /(?:^|[-\s])(?:T[1-9]\d*|H[1-9]\d*)\b/i
@@ -77,6 +81,38 @@ export function requiredStrength(variables: WeldingVariables): Minimum | null {
   if (a === null || b === null) return null
   const [weaker, other] = a.high <= b.high ? [a, b] : [b, a]
   return { ...weaker, low: Math.min(a.low, b.low), unwelded: weaker.unwelded || other.unwelded }
+}
+
+/**
+ * How many tension tests the specimens make (QW-151; read 2010 and 2021). Over 25 mm (1 in.) several part-thickness specimens that together
+ * represent the thickness are one test. Saw and machine take some of it away and no figure is known for that, so a set counts as soon
+ * as no further specimen like its thinnest would have fitted.
+ * @param T thickness of the coupon in the unit of `system`
+ * @returns the tests, and the marks of specimens that are left without a full set
+ */
+export function tensionTests(specimens: readonly TensionTest[], T: number, system: UnitSystem): { tests: number; left: string[] } {
+  const size = (test: TensionTest): number | null => (test.kind === 'reduced-section' && test.thickness && test.thickness.si > 0 ? inUnitOf(test.thickness.si, 'length', system) : null)
+  const isPart = (test: TensionTest): boolean => T > FIGURES[system].tensionSets && (size(test) ?? T) <= T / 2
+  let tests = specimens.filter((test) => !isPart(test)).length
+  let set: TensionTest[] = []
+  let represented = 0
+  for (const test of specimens.filter(isPart).sort((a, b) => (size(b) ?? 0) - (size(a) ?? 0))) {
+    set.push(test)
+    represented += size(test) ?? 0
+    if (T - represented >= (size(test) ?? 0)) continue
+    tests += 1
+    set = []
+    represented = 0
+  }
+  return { tests, left: set.map(({ specimen }) => specimen) }
+}
+
+/** Load and area give another stress than the one reported, by more than 1 % (QW-152): the stress computed and the one reported, MPa; null where they agree or one is missing. */
+export function stressDisagrees(test: TensionTest): { computed: number; reported: number } | null {
+  const computed = computedStress(test)
+  const reported = test.reportedStrength?.si
+  if (computed === null || reported === undefined || Math.abs(reported - computed) <= AGREES * computed) return null
+  return { computed, reported }
 }
 
 /** Judges one tension specimen; the stress is computed from load and area, the reported one only where the measures are missing. */

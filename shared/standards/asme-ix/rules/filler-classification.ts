@@ -4,6 +4,7 @@ import { sameText } from '../../common/reading.ts'
 import { remember } from '../../common/remember.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { meta } from '../meta.ts'
+import { indicatorSystem } from './flux-wire-class.ts'
 
 /** Diffusible hydrogen (H4, H8R …) and moisture resistance (R) designators at the end. */
 const HYDROGEN = /(?:H(?:2|4|5|8|10|15|16)R?|(?<=\d)R)$/
@@ -82,6 +83,6 @@ export const fluxWireClassification = namedRule({
     return value ? [value] : null
   },
   tested: (_context, side) => (side.block ? fluxWire(side.block.filler) : null),
-  kind: (name) => (name.startsWith('flux ') ? 'trade name' : 'classification'),
+  kind: (name) => (name.startsWith('flux ') ? 'trade name' : indicatorSystem(name)),
   because: 'The flux-wire class, or the trade name where it has none, stays; the hydrogen level alone does not count.',
 })

@@ -21,6 +21,15 @@ function token(filler: Filler, kind: Kind): string | null {
   return filler.tradeName ? `${flux}, wire ${sameText(filler.tradeName)}` : null
 }
 
+/**
+ * Which of the two systems a class is written in: tens of ksi (F7…, F11…) or tens of MPa (F43…, F48…). No source here pairs the two, so
+ * a class of the one can't be compared with a class of the other.
+ */
+export function indicatorSystem(fluxClass: string): 'customary class' | 'metric class' | 'class of another kind' {
+  const digits = /^F(\d{1,2})/.exec(fluxClass)?.[1]
+  return digits === undefined ? 'class of another kind' : Number(digits) >= 40 ? 'metric class' : 'customary class'
+}
+
 export const fluxWireClass = namedRule({
   meta: meta('QW-404.9', 'flux-wire-class'),
   field: 'filler.fluxClassification',
@@ -36,5 +45,6 @@ export const fluxWireClass = namedRule({
     if (!block || kindOf(block.filler) === 'tensile') return []
     return [...(block.filler.fluxTradeName ? [] : ['filler.fluxTradeName']), ...(kindOf(block.filler) === 'both names' && !block.filler.tradeName ? ['filler.tradeName'] : [])]
   },
+  kind: (name) => (name.startsWith('F') ? indicatorSystem(name) : 'trade name'),
   because: 'A classified flux and wire keep the tensile indicator; what is not classified, and every A-8 deposit, keeps its trade name.',
 })

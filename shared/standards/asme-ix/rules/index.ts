@@ -18,6 +18,7 @@ import { fluxType } from './flux-type.ts'
 import { fluxWireClass } from './flux-wire-class.ts'
 import { heatInput } from './heat-input.ts'
 import { interpass } from './interpass.ts'
+import { jointFilled } from './joint-filled.ts'
 import { keyhole } from './keyhole.ts'
 import { mustBeStated } from './must-be-stated.ts'
 import { passesPerSide } from './passes-per-side.ts'
@@ -49,6 +50,7 @@ export const rules: readonly Rule[] = [
   passThickness,
   shortCircuitThickness,
   depositThickness,
+  jointFilled,
   shortCircuitDeposit,
   fillerFNumber,
   fillerANumber,

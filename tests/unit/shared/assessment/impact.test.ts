@@ -66,7 +66,7 @@ describe('standing', () => {
   })
 
   test('a coupon that covers the new value leaves it covered', () => {
-    const change = only(revise((v) => (v.thickness = interval(5, 60, 'length')), { thickness: [5, 20], processes: [['SMAW', 20]] }, [coupon({ thickness: 38, processes: [['SMAW', 38]] })]))
+    const change = only(revise((v) => (v.thickness = interval(5, 60, 'length')), { thickness: [5, 20], processes: [['SMAW', 60]] }, [coupon({ thickness: 38, processes: [['SMAW', 38]] })]))
     expect(change).toMatchObject({ class: 'essential', standing: 'still covered', wanted: null })
   })
 

@@ -144,7 +144,7 @@ function productionCase({ given: data, expect: wanted }: Case): void {
   const wps = procedure({
     ...record,
     thickness: num(data.production_thin_mm ?? data.production_base_mm ?? 10),
-    processes: (record.processes ?? []).map(([process]) => [process, production?.[process] ?? Math.min(4, num(data.production_thin_mm ?? 4))] as const),
+    processes: (record.processes ?? []).map(([process]) => [process, production?.[process] ?? num(data.production_thin_mm ?? data.production_base_mm ?? 4)] as const),
     change(variables) {
       record.change?.(variables)
       if (data.production_thick_mm !== undefined) variables.thicknessB = interval(num(data.production_thick_mm), undefined, 'length')
