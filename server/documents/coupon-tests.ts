@@ -1,6 +1,7 @@
 import type { CouponQualification, TestVerdict, Verdict } from '@shared/schemas/assessment.ts'
+import type { Quantity } from '@shared/schemas/common.ts'
 import type { CouponContent } from '@shared/schemas/welding.ts'
-import { STANDARD_NAME, BASIS_WORD, BEND_KIND, capital, PLACE, said, TENSION_KIND, yesNo } from './words.ts'
+import { STANDARD_NAME, BASIS_WORD, BEND_KIND, capital, NDT_METHOD, PLACE, said, TENSION_KIND, yesNo } from './words.ts'
 import { standardWithEdition } from './judgements.ts'
 import { drawTable, type Cell, type Column } from './layout/table.ts'
 import type { Context } from './weld-sections.ts'
@@ -25,6 +26,19 @@ const right = (title: string, unit: string, share: number): Column => ({ title, 
 const RESULT: Column = { title: 'Judged', share: 44 }
 const joinValues = (values: readonly string[]): string => values.join(', ')
 
+/** The visual examination: what was seen, as facts, and how it was judged. */
+function drawVisual({ sheet, figures }: Context, { visual }: CouponContent, judge: (id: string) => Cell): void {
+  if (!visual) return
+  const seen = (label: string, value: boolean | null): string[] => (value === null ? [] : [`${label}: ${yesNo(value)}`])
+  const measured = (label: string, value: Quantity | null): string[] => (value === null ? [] : [`${label}: ${figures.quantity(value, 'length')}`])
+  const found = [
+    ...seen('cracks', visual.cracks), ...seen('craters full', visual.cratersFull), ...seen('root sound', visual.rootSound), ...seen('profile accepted', visual.profileAccepted),
+    ...measured('undercut', visual.undercut), ...measured('reinforcement', visual.reinforcement), ...measured('root concavity', visual.rootConcavity), ...measured('melt-through', visual.meltThrough), ...measured('weld thickness there', visual.weldThickness),
+  ]
+  sheet.subhead('Visual examination', '', 60)
+  drawTable(sheet, [{ title: 'Found', share: 56 }, RESULT], [[capital(found.join('; ')) || 'nothing stated', judge('visual')]])
+}
+
 /** Specimens asked for and recorded, then each kind of test with its results and how they were judged. */
 export function drawTests(context: Context, content: CouponContent, qualifications: readonly CouponQualification[]): void {
   const { sheet, figures } = context
@@ -47,6 +61,10 @@ export function drawTests(context: Context, content: CouponContent, qualificatio
       drawTable(sheet, columns, rows)
     }
     const length = figures.unit('length')
+    drawVisual(context, content, judge)
+    group('Non-destructive testing', [{ title: 'Method', share: 18 }, { title: 'Whole length', share: 12 }, { title: 'Result', share: 14 }, { title: 'Report', share: 14 }, { title: 'Note', share: 18 }, RESULT], (content.ndt ?? []).map((test) => [
+      { text: `${test.method}, ${NDT_METHOD[test.method]}`, strong: true }, yesNo(test.wholeLength) || 'not stated', test.accepted === null ? 'not stated' : test.accepted ? 'accepted' : 'not accepted', test.reportNumber ?? '', { text: test.note ?? '', soft: true }, judge(test.id),
+    ]))
     group('Tension', [{ title: 'Specimen', share: 9 }, { title: 'Kind', share: 12 }, right('Width', length, 10), right('Thickness', length, 10), right('Load', figures.unit('force'), 11), right('Strength', 'from load and area', 12), { title: 'Fracture', share: 15 }, RESULT], content.tension.map((test) => [
       { text: test.specimen, strong: true }, TENSION_KIND[test.kind], test.kind === 'turned' ? `Ø ${figures.cell(test.diameter, 'length')}` : figures.cell(test.width, 'length'), figures.cell(test.thickness, 'length'), figures.cell(test.load, 'force'),
       computed(test.id) || (test.reportedStrength ? `${figures.quantity(test.reportedStrength, 'stress')} reported` : ''), [said(PLACE, test.fracture), test.fractureType].filter(Boolean).join(', '), judge(test.id),
@@ -62,9 +80,9 @@ export function drawTests(context: Context, content: CouponContent, qualificatio
       { text: PLACE[test.place], strong: true }, test.size ?? '', figures.cell(test.temperature, 'temperature'), joinValues(test.values.map((value) => figures.cell(value, 'energy'))), joinValues(test.lateralExpansion.map((value) => figures.cell(value, 'length'))), judge(test.id),
     ]))
     group('Hardness', [{ title: 'Place', share: 16 }, { title: 'Scale', share: 8 }, { title: 'Values', share: 34 }, right('Highest', '', 8), RESULT], content.hardness.map((test) => [
-      { text: PLACE[test.place], strong: true }, test.scale, joinValues(test.values.map(String)), String(Math.max(...test.values)), judge(test.id),
+      { text: PLACE[test.place], strong: true }, test.scale, joinValues(test.values.map(String)), test.values.length > 0 ? String(Math.max(...test.values)) : '', judge(test.id),
     ]))
-    const none = [content.tension, content.bends, content.macros, content.toughness, content.hardness].every((tests) => tests.length === 0)
+    const none = [content.tension, content.bends, content.macros, content.toughness, content.hardness, content.ndt ?? []].every((tests) => tests.length === 0) && !content.visual
     if (none) sheet.callout('No test results recorded', 'Nothing has been tested yet, so this record says nothing about the soundness of the weld.', 'straw')
   }, 80)
 }

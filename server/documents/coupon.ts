@@ -14,7 +14,7 @@ import type { TitleBlock } from './layout/title-block.ts'
 import { CAUTION, UNCONTROLLED } from './notices.ts'
 import { drawRunSheet } from './run-sheet-section.ts'
 import { COUPON_STATE_WORD, dateWords, processName } from './words.ts'
-import { drawBaseMetals, drawElectrical, drawFillers, drawGases, drawHeat, drawPositions, drawTechnique, metalsLine, type Context } from './weld-sections.ts'
+import { drawApplication, drawBaseMetals, drawElectrical, drawFillers, drawGases, drawHeat, drawPositions, drawTechnique, metalsLine, type Context } from './weld-sections.ts'
 
 export interface CouponDocument {
   organization: { name: string; address: string }
@@ -112,6 +112,7 @@ export async function renderCoupon(document: CouponDocument): Promise<Buffer> {
   const context: Context = { sheet, figures, variables, judgements: null }
   drawJoint(context, content.runSheet)
   drawBaseMetals(context)
+  drawApplication(context)
   drawWelding(context, content)
   drawFillers(context)
   drawPositions(context)

@@ -12,7 +12,7 @@ import { drawTable, type Column } from './layout/table.ts'
 import type { TitleBlock } from './layout/title-block.ts'
 import { CAUTION, UNCONTROLLED } from './notices.ts'
 import { dateWords, gasName, processName, said, CURRENT_TYPE, LAYER, STATE_WORD } from './words.ts'
-import { drawBaseMetals, drawElectrical, drawFillers, drawGases, drawHeat, drawPositions, drawTechnique, metalsLine, type Context } from './weld-sections.ts'
+import { drawApplication, drawBaseMetals, drawElectrical, drawFillers, drawGases, drawHeat, drawPositions, drawTechnique, metalsLine, type Context } from './weld-sections.ts'
 
 export interface ProcedureDocument {
   organization: { name: string; address: string }
@@ -78,7 +78,7 @@ function titleBlock(document: ProcedureDocument): TitleBlock {
     title: content.title,
     cells: [
       { label: 'Process', lines: content.variables.processes.map(processName) },
-      { label: 'Standard', share: 1.25, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : ''].filter(Boolean).join(', ')) },
+      { label: 'Standard', share: 1.25, lines: content.variables.standards.map((choice) => [standardWithEdition(choice), choice.level ? `level ${choice.level}` : '', choice.route === 'prequalified' ? 'prequalified' : ''].filter(Boolean).join(', ')) },
       { label: 'Supported by', share: 0.95, lines: document.coupons.length > 0 ? [document.coupons.map((coupon) => coupon.number).join(', ')] : ['none linked'] },
       { label: 'Who and when', share: 1.3, lines: [document.author, `drafted ${dateWords(document.dates.drafted)}`, ...(approver ? [approver.person.name, `approved ${dateWords(approver.signedAt)}`] : [document.dates.approved && state !== 'draft' && state !== 'in-review' ? `approved ${dateWords(document.dates.approved)}` : 'not approved'])] },
     ],
@@ -137,6 +137,7 @@ export async function renderProcedure(document: ProcedureDocument): Promise<Buff
   }
   drawJoint(context)
   drawBaseMetals(context)
+  drawApplication(context)
   drawFillers(context)
   drawPositions(context)
   drawHeat(context)

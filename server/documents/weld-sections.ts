@@ -63,13 +63,18 @@ export function jointFacts(context: Context): Fact[] {
   const groove = joint.weld === 'groove'
   return given([
     always('Weld', [groove ? words.said(words.GROOVE, joint.groove) : '', joint.weld, groove ? `${joint.penetration} penetration` : ''].filter(Boolean).join(', '), marks('joint.weld', 'joint.groove', 'joint.penetration')),
+    fact('Repair or build-up', words.said(words.WORK, joint.work), marks('joint.work')),
     always('Joint', words.said(words.JOINT_TYPE, joint.type), marks('joint.type')),
+    fact('Joint detail', joint.designation, marks('joint.designation')),
+    fact('Branch connection', [words.said(words.BRANCH, joint.branch), figures.interval(joint.branchAngle, 'angle')].filter(Boolean).join(', '), marks('joint.branch', 'joint.branchAngle')),
     fact('Groove angle', figures.interval(joint.includedAngle, 'angle'), marks('joint.includedAngle')),
     fact('Bevel angle', figures.interval(joint.bevelAngle, 'angle'), marks('joint.bevelAngle')),
     fact('Root opening', figures.interval(joint.rootOpening, 'length'), marks('joint.rootOpening')),
     fact('Root face', figures.interval(joint.rootFace, 'length'), marks('joint.rootFace')),
     fact('Root radius', figures.interval(joint.rootRadius, 'length'), marks('joint.rootRadius')),
     fact('Fillet leg', figures.interval(joint.filletLeg, 'length'), marks('joint.filletLeg')),
+    fact('Fillet throat', figures.interval(joint.filletThroat, 'length'), marks('joint.filletThroat')),
+    fact('Holds pressure', words.yesNo(joint.pressureRetaining), marks('joint.pressureRetaining')),
     always('Backing', [words.said(words.BACKING, joint.backing), joint.backingMaterial].filter(Boolean).join(', '), marks('joint.backing', 'joint.backingMaterial')),
     fact('Retainers', words.yesNo(joint.retainers), marks('joint.retainers')),
     fact('Back gouging', words.said(words.BACK_GOUGING, joint.backGouging), marks('joint.backGouging')),
@@ -94,6 +99,9 @@ export function drawBaseMetals(context: Context): void {
       ['AWS D1.2 M-Number', (metal) => metal.d12MNumber, ['d12MNumber']],
       ['Minimum tensile strength', (metal) => figures.quantity(metal.minTensile, 'stress'), ['minTensile']],
       ['Minimum yield strength', (metal) => figures.quantity(metal.minYield, 'stress'), ['minYield']],
+      ['Minimum elongation', (metal) => figures.quantity(metal.minElongation, 'percent'), ['minElongation']],
+      ['Condition or temper', (metal) => metal.condition ?? null, ['condition']],
+      ['Impact values specified', (metal) => words.yesNo(metal.impactSpecified), ['impactSpecified']],
       ['Heat number', (metal) => metal.heatNumber, ['heatNumber']],
       ['Certificate', (metal) => metal.certificate, ['certificate']],
     ]
@@ -108,8 +116,23 @@ export function drawBaseMetals(context: Context): void {
       { label: variables.joint.weld === 'fillet' ? 'Thickness, fillet' : 'Thickness, groove', note: 'base metal at the weld', value: figures.interval(variables.thickness, 'length'), field: 'thickness', must: true },
       { label: 'Thickness of metal B', value: figures.interval(variables.thicknessB, 'length'), field: 'thicknessB' },
       { label: 'Outside diameter', note: `of pipe; product: ${words.said(words.PRODUCT, variables.product)}`, value: figures.interval(variables.diameter, 'length') || (variables.product === 'plate' ? 'plate only' : ''), field: 'diameter', must: variables.product !== 'plate' },
+      { label: 'Diameter of the run pipe', value: figures.interval(variables.diameterB, 'length'), field: 'diameterB' },
     ])
+    drawFacts(sheet, given([fact('Pipe turns under the arc', words.yesNo(variables.pipeRotated), judgements?.marks('pipeRotated'))]))
   })
+}
+
+/** What the work asks beyond the standard; left out where nothing is stated. */
+export function drawApplication(context: Context): void {
+  const { sheet, figures, variables, judgements } = context
+  const marks = (field: string) => judgements?.marks(field)
+  const facts = given([
+    fact('Toughness', variables.toughnessRequired === null ? '' : variables.toughnessRequired ? 'required' : 'not required', marks('toughnessRequired')),
+    fact('Impact test', [figures.quantity(variables.impactEnergy, 'energy'), variables.impactTemperature ? `at ${figures.quantity(variables.impactTemperature, 'temperature')}` : ''].filter(Boolean).join(' '), judgements?.marks('impactEnergy', 'impactTemperature')),
+    fact('Hardness', variables.hardnessRequired === null || variables.hardnessRequired === undefined ? '' : variables.hardnessRequired ? 'tests required' : 'no tests required', marks('hardnessRequired')),
+    fact('Service temperature', figures.quantity(variables.serviceTemperature, 'temperature'), marks('serviceTemperature')),
+  ])
+  if (facts.length > 0) sheet.section('What the application asks', '', () => drawFacts(sheet, facts), 40)
 }
 
 export function drawFillers(context: Context): void {
@@ -125,7 +148,7 @@ export function drawFillers(context: Context): void {
         fact(filler.aNumber === null && filler.depositComposition ? 'Deposit' : 'A-Number', filler.aNumber ? `A-${filler.aNumber}` : filler.depositComposition, marks('aNumber', 'depositComposition')),
         fact('Form', words.said(words.PRODUCT_FORM, filler.productForm), marks('productForm')),
         fact('Diameters', filler.diameters.map((diameter) => figures.quantity(diameter, 'length')).join(', '), marks('diameters')),
-        fact('Lot', filler.lot), fact('Supplemental filler', words.yesNo(filler.supplemental), marks('supplemental')),
+        fact('Lot', filler.lot), fact('Supplemental filler', [words.yesNo(filler.supplemental), figures.quantity(filler.supplementalVolume, 'percent')].filter(Boolean).join(', '), marks('supplemental', 'supplementalVolume')),
         fact('Alloy from the flux', words.yesNo(filler.supplementalAlloyElement), marks('supplementalAlloyElement')),
         fact('Consumable insert', words.yesNo(filler.consumableInsert), marks('consumableInsert')),
         fact('Flux', [filler.fluxClassification, filler.fluxTradeName, filler.fluxType].filter(Boolean).join(', '), marks('fluxClassification', 'fluxTradeName', 'fluxType')),
@@ -160,9 +183,11 @@ export function drawHeat(context: Context): void {
       { label: 'Interpass, maximum', value: figures.quantity(preheat.interpassMaximum, 'temperature'), field: 'preheat.interpassMaximum', must: true },
     ])
     drawFacts(sheet, given([fact('Maintenance', preheat.maintenance, judgements?.marks('preheat.maintenance')), fact('Method', preheat.method, judgements?.marks('preheat.method'))]))
+    const after = variables.postHeating
+    drawFacts(sheet, given([fact('Post-heating', after ? [words.yesNo(after.used), figures.interval(after.temperature, 'temperature'), figures.interval(after.time, 'time')].filter(Boolean).join(', ') : '', judgements?.marks('postHeating', 'postHeating.used', 'postHeating.temperature', 'postHeating.time'))]))
   }, 40)
   sheet.section('Postweld heat treatment', words.said(words.PWHT, pwht.condition) || NOT_STATED, () => {
-    drawFacts(sheet, given([always('Condition', words.said(words.PWHT, pwht.condition), judgements?.marks('pwht', 'pwht.condition')), fact('Heating and cooling rate', pwht.heatingRate, judgements?.marks('pwht.heatingRate'))]))
+    drawFacts(sheet, given([always('Condition', words.said(words.PWHT, pwht.condition), judgements?.marks('pwht', 'pwht.condition')), fact('Ageing', words.said(words.AGEING, pwht.ageing), judgements?.marks('pwht.ageing')), fact('Heating and cooling rate', pwht.heatingRate, judgements?.marks('pwht.heatingRate'))]))
     drawMeasures(context, [
       { label: 'Holding temperature', value: figures.interval(pwht.temperature, 'temperature'), field: 'pwht.temperature', must: pwht.condition !== null && pwht.condition !== 'none' },
       { label: 'Holding time', value: figures.interval(pwht.time, 'time'), field: 'pwht.time', must: pwht.condition !== null && pwht.condition !== 'none' },
@@ -192,7 +217,7 @@ export function drawGases(context: Context): void {
 }
 
 const electricalMeasures: readonly (readonly [keyof ProcessBlock['electrical'], string, Dimension, string?])[] = [
-  ['current', 'Current', 'current'], ['voltage', 'Voltage', 'voltage'], ['wireFeed', 'Wire feed speed', 'wireFeed'], ['travelSpeed', 'Travel speed', 'travelSpeed'],
+  ['current', 'Current', 'current'], ['makerCurrent', 'Current, by the maker', 'current'], ['voltage', 'Voltage', 'voltage'], ['wireFeed', 'Wire feed speed', 'wireFeed'], ['travelSpeed', 'Travel speed', 'travelSpeed'],
   ['heatInput', 'Heat input', 'heatInput'], ['peakCurrent', 'Peak current', 'current'], ['backgroundCurrent', 'Background current', 'current'], ['backgroundVoltage', 'Background voltage', 'voltage'],
   ['pulseFrequency', 'Pulse frequency', 'frequency'], ['pulseOnTime', 'Pulse time', 'pulseTime'], ['acFrequency', 'AC frequency', 'frequency'],
 ]
@@ -211,6 +236,7 @@ export function drawElectrical(context: Context): void {
         fact('Waveform controlled', words.yesNo(electrical.waveformControlled), marks('waveformControlled')),
         fact('Power source', words.said(words.POWER_SOURCE, electrical.powerSource), marks('powerSource')),
         fact('Heat input taken', words.said(words.HEAT_METHOD, electrical.heatInputMethod), marks('heatInputMethod')),
+        fact('The heat figure is', words.said(words.HEAT_QUANTITY, electrical.heatInputQuantity), marks('heatInputQuantity')),
         fact('Tungsten', [electrical.tungstenClassification, figures.quantity(electrical.tungstenDiameter, 'length')].filter(Boolean).join(', '), marks('tungstenClassification', 'tungstenDiameter')),
       ]))
       drawMeasures(context, electricalMeasures.map(([key, label, dimension]) => ({ label, value: figures.interval(electrical[key] as Interval | null, dimension), field: pathOf(index, `electrical.${key}`) })))
@@ -238,6 +264,11 @@ export function drawTechnique(context: Context): void {
         fact('Initial cleaning', technique.initialCleaning, marks('initialCleaning')), fact('Interpass cleaning', technique.interpassCleaning, marks('interpassCleaning')),
         fact('Passes a side', technique.passesPerSide, marks('passesPerSide')), fact('Electrodes', technique.electrodes, marks('electrodes')),
         fact('Electrode spacing', figures.quantity(technique.electrodeSpacing, 'length'), marks('electrodeSpacing')),
+        fact('Number of electrodes', technique.electrodeCount ? String(technique.electrodeCount) : '', marks('electrodeCount')),
+        fact('Spacing across the joint', figures.quantity(technique.lateralSpacing, 'length'), marks('lateralSpacing')),
+        fact('Angle of parallel electrode', figures.quantity(technique.parallelAngle, 'angle'), marks('parallelAngle')),
+        fact('Electrode angle', [technique.travelAngle ? `${figures.quantity(technique.travelAngle, 'angle')} along` : '', technique.normalAngle ? `${figures.quantity(technique.normalAngle, 'angle')} across travel` : ''].filter(Boolean).join(', '), marks('travelAngle', 'normalAngle')),
+        fact('Hot wire', words.yesNo(technique.hotWire), marks('hotWire')),
         fact('Contact tube to work', figures.interval(technique.contactTubeDistance, 'length'), marks('contactTubeDistance')),
         fact('Nozzle', technique.nozzleSize, marks('nozzleSize')), fact('Peening', technique.peening === 'used' ? 'used' : technique.peening, marks('peening')),
         fact('Closed chamber', words.yesNo(technique.closedChamber), marks('closedChamber')), fact('Melt-in or keyhole', technique.keyhole, marks('keyhole')),

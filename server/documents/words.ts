@@ -18,6 +18,11 @@ export const JOINT_TYPE: Words<Joint['type']> = { butt: 'butt joint', tee: 'tee 
 export const GROOVE: Words<Joint['groove']> = { square: 'square', 'single-v': 'single-V', 'double-v': 'double-V', 'single-bevel': 'single-bevel', 'double-bevel': 'double-bevel', 'single-u': 'single-U', 'double-u': 'double-U', 'single-j': 'single-J', 'double-j': 'double-J', 'compound-v': 'compound V', 'flare-bevel': 'flare bevel', 'flare-v': 'flare V' }
 export const BACKING: Words<Joint['backing']> = { none: 'no backing', metal: 'metal', 'weld-metal': 'weld metal', ceramic: 'ceramic', flux: 'flux', 'consumable-insert': 'consumable insert' }
 export const BACK_GOUGING: Words<Joint['backGouging']> = { none: 'none', grinding: 'grinding', 'arc-gouging': 'arc gouging', machining: 'machining', chipping: 'chipping' }
+export const WORK = { repair: 'repair', 'build-up': 'build-up' } as const
+export const BRANCH = { 'set-on': 'set-on', 'set-in': 'set-in', 'set-through': 'set-through' } as const
+export const AGEING = { natural: 'natural', artificial: 'artificial' } as const
+export const HEAT_QUANTITY = { 'arc-energy': 'arc energy, U · I / v', 'heat-input': 'heat input, with factor k' } as const
+export const NDT_METHOD = { VT: 'visual', RT: 'radiography', UT: 'ultrasonics', PT: 'penetrant', MT: 'magnetic particle' } as const
 export const PRODUCT: Words<WeldingVariables['product']> = { plate: 'plate', pipe: 'pipe', 'plate-and-pipe': 'plate and pipe' }
 export const PWHT: Words<WeldingVariables['pwht']['condition']> = {
   none: 'none', 'below-lower-transformation': 'below the lower transformation temperature', 'above-upper-transformation': 'above the upper transformation temperature',

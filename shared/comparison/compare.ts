@@ -41,6 +41,7 @@ function nameOf(listName: string, item: Part, index: number, list: readonly Part
   if (listName === 'passes') return `pass ${text(item.number)}`
   if (listName === 'runSheet') return `Run sheet pass ${text(item.pass)}`
   if (listName === 'toughness' || listName === 'hardness') return `${listName === 'toughness' ? 'Toughness' : 'Hardness'}, ${choiceWord(text(item.place))}`
+  if (listName === 'ndt') return `${fieldLabel('ndt')}, ${text(item.method)}`
   return `${{ tension: 'Tension', bends: 'Bend', macros: 'Macro' }[listName] ?? listName} ${text(item.specimen)}`
 }
 

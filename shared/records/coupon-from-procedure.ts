@@ -32,11 +32,15 @@ function blockOf(block: ProcessBlock): ProcessBlock {
 function variablesOf(asked: WeldingVariables): WeldingVariables {
   return {
     ...asked,
+    // A coupon is a test, by whatever route the procedure goes.
+    standards: asked.standards.map(({ route: _route, ...choice }) => choice),
     product: asked.product === 'plate-and-pipe' ? 'plate' : asked.product,
-    joint: { ...asked.joint, includedAngle: null, bevelAngle: null, rootOpening: null, rootFace: null, rootRadius: null, filletLeg: null },
+    joint: { ...asked.joint, includedAngle: null, bevelAngle: null, rootOpening: null, rootFace: null, rootRadius: null, filletLeg: null, ...(asked.joint.filletThroat && { filletThroat: null }), ...(asked.joint.branchAngle && { branchAngle: null }) },
     thickness: null,
     thicknessB: null,
     diameter: null,
+    ...(asked.diameterB && { diameterB: null }),
+    ...(asked.postHeating && { postHeating: { ...asked.postHeating, temperature: null, time: null } }),
     preheat: { ...asked.preheat, minimum: null, interpassMaximum: null },
     pwht: { ...asked.pwht, temperature: null, time: null },
     processes: asked.processes.map(blockOf),

@@ -10,7 +10,7 @@ import { Field, FieldError, type FieldProps } from './Field.tsx'
 const REST = 500
 
 /** Runs `read` once typing has rested. Nothing is said of a text that can't be read yet: that waits until the field is left. */
-function useRested(text: string, read: () => void): void {
+export function useRested(text: string, read: () => void): void {
   const rested = useEffectEvent(read)
   useEffect(() => {
     const timer = setTimeout(() => rested(), REST)
@@ -18,7 +18,7 @@ function useRested(text: string, read: () => void): void {
   }, [text])
 }
 
-interface Measured extends FieldProps {
+export interface Measured extends FieldProps {
   dimension: Dimension
   /** The system in which a bare figure is read. */
   system: UnitSystem
@@ -34,7 +34,7 @@ interface Measured extends FieldProps {
  * The text of a box: as typed, less the unit that the row already shows. An end worked out from a tolerance
  * (`10 ± 2`) was never typed by itself, so it shows its own figure.
  */
-function textOf(quantity: Quantity | null, dimension: Dimension, system: UnitSystem): string {
+export function textOf(quantity: Quantity | null, dimension: Dimension, system: UnitSystem): string {
   if (!quantity) return ''
   const { si, unit, typed } = quantity
   const shown = SHOWN_UNIT[system][dimension]
@@ -43,7 +43,7 @@ function textOf(quantity: Quantity | null, dimension: Dimension, system: UnitSys
   // A bare figure typed by somebody who reads the other system: without its unit it would be read as this one's.
   return /^[\d\s.,/-]+$/.test(text) ? `${text} ${unit}` : text
 }
-const key = (quantity: Quantity | null): string => (quantity ? `${quantity.si} ${quantity.unit} ${quantity.typed}` : '')
+export const key = (quantity: Quantity | null): string => (quantity ? `${quantity.si} ${quantity.unit} ${quantity.typed}` : '')
 
 /** "= 12.7 mm" when a figure was typed in another unit than the one shown. */
 export function converted(quantity: Quantity | null, dimension: Dimension, system: UnitSystem): string | null {

@@ -2,11 +2,12 @@ import type { Interval, Quantity } from '@shared/schemas/common.ts'
 import type { Position, ProcessBlock } from '@shared/schemas/welding.ts'
 import { formatQuantity } from '@shared/units/format.ts'
 import { parseQuantity } from '@shared/units/parse.ts'
-import type { UnitSystem } from '@shared/units/types.ts'
+import type { Dimension, UnitSystem } from '@shared/units/types.ts'
 import { useState } from 'react'
+import { ObservedField } from '@/components/fields/observed.tsx'
 import { IntervalField, QuantityField } from '@/components/fields/quantity.tsx'
 import { Select, TagPicker, TextArea, TextField } from '@/components/fields/text.tsx'
-import type { RowSpec } from './catalogue.ts'
+import type { PairOf, RowSpec } from './row-spec.ts'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { FillerEditor } from './FillerEditor.tsx'
 import { GasEditor } from './GasEditor.tsx'
@@ -26,7 +27,7 @@ export function Editor({ spec, path, prefix, block }: { spec: RowSpec; path: str
     case 'interval':
       return <IntervalEditor spec={spec} path={path} label={label} />
     case 'quantity':
-      return <QuantityEditor spec={spec} path={path} label={label} />
+      return <QuantityEditor dimension={spec.dimension} path={path} label={label} />
     case 'choice':
       return <ChoiceEditor spec={spec} path={path} label={label} />
     case 'flag':
@@ -39,13 +40,9 @@ export function Editor({ spec, path, prefix, block }: { spec: RowSpec; path: str
     case 'pair':
       return (
         <div className="grid grid-cols-2 gap-2">
-          {spec.paths.map((one, index) =>
-            spec.whole ? (
-              <WholeEditor key={one} min={spec.whole[0]} max={spec.whole[1]} path={`${prefix}${one}`} label={`${label}, ${index === 0 ? 'A' : 'B'}`} />
-            ) : (
-              <TextEditor key={one} spec={{ ...spec, kind: 'text', max: spec.max ?? 20 }} path={`${prefix}${one}`} label={`${label}, ${index === 0 ? 'A' : 'B'}`} />
-            ),
-          )}
+          {spec.paths.map((one, index) => (
+            <HalfEditor key={one} of={spec.of} path={`${prefix}${one}`} label={`${label}, ${index === 0 ? 'A' : 'B'}`} />
+          ))}
         </div>
       )
     case 'sizes':
@@ -65,21 +62,37 @@ export function Editor({ spec, path, prefix, block }: { spec: RowSpec; path: str
   }
 }
 
+/** One of the two values of a pair. */
+function HalfEditor({ of, path, label }: { of: PairOf; path: string; label: string }) {
+  switch (of.kind) {
+    case 'whole':
+      return <WholeEditor min={of.min} max={of.max} path={path} label={label} />
+    case 'quantity':
+      return <QuantityEditor dimension={of.dimension} path={path} label={label} />
+    case 'flag':
+      return <FlagEditor path={path} label={label} />
+    case 'text':
+      return <TextEditor spec={{ kind: 'text', max: of.max }} path={path} label={label} />
+  }
+}
+
+/** What a procedure asks goes from one figure to another; what was measured on a coupon is one figure. */
 function IntervalEditor({ spec, path, label }: { spec: Of<'interval'>; path: string; label: string }) {
-  const { system } = useSheet()
+  const { system, record } = useSheet()
   const { value, set, error } = useSheetField<Interval | null>(`variables.${path}`)
+  if (record === 'coupon') return <ObservedField id={inputId(path)} className="max-w-52" label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} />
   return <IntervalField id={inputId(path)} label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} allowAll={spec.allMeans !== undefined} allMeans={spec.allMeans} />
 }
 
-function QuantityEditor({ spec, path, label }: { spec: Of<'quantity'>; path: string; label: string }) {
+function QuantityEditor({ dimension, path, label }: { dimension: Dimension; path: string; label: string }) {
   const { system } = useSheet()
   const { value, set, error } = useSheetField<Quantity | null>(`variables.${path}`)
-  return <QuantityField id={inputId(path)} label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} />
+  return <QuantityField id={inputId(path)} label={label} labelHidden dimension={dimension} system={system} value={value} onChange={set} error={error} />
 }
 
 function ChoiceEditor({ spec, path, label }: { spec: Of<'choice'>; path: string; label: string }) {
   const { value, set, error, onBlur } = useSheetField<string | null>(`variables.${path}`)
-  return <Select id={inputId(path)} label={label} labelHidden options={spec.options} {...(spec.always ? {} : { empty: 'Not stated' })} value={value ?? ''} onChange={(event) => set(orNull(event.target.value))} onBlur={onBlur} error={error} />
+  return <Select id={inputId(path)} label={label} labelHidden options={spec.options} {...(spec.always ? {} : { empty: spec.none ?? 'Not stated' })} value={value ?? ''} onChange={(event) => set(orNull(event.target.value))} onBlur={onBlur} error={error} />
 }
 
 const YES_NO = [
@@ -91,7 +104,7 @@ function FlagEditor({ path, label }: { path: string; label: string }) {
   return <Select id={inputId(path)} label={label} labelHidden options={YES_NO} empty="Not stated" value={value === null ? '' : value ? 'yes' : 'no'} onChange={(event) => set(event.target.value === '' ? null : event.target.value === 'yes')} onBlur={onBlur} error={error} />
 }
 
-function TextEditor({ spec, path, label }: { spec: Of<'text'> | Of<'paragraph'>; path: string; label: string }) {
+function TextEditor({ spec, path, label }: { spec: Pick<Of<'text'>, 'kind' | 'max' | 'example'> | Pick<Of<'paragraph'>, 'kind' | 'max' | 'example'>; path: string; label: string }) {
   const { value, set, error, onBlur } = useSheetField<string | null>(`variables.${path}`)
   const shared = { id: inputId(path), label, labelHidden: true, maxLength: spec.max, placeholder: spec.example && `e.g. ${spec.example}`, value: value ?? '', onBlur, error }
   return spec.kind === 'text' ? <TextField {...shared} onChange={(event) => set(orNull(event.target.value))} /> : <TextArea {...shared} rows={2} onChange={(event) => set(orNull(event.target.value))} />

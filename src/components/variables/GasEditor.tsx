@@ -5,6 +5,7 @@ import { GASES, gasMixtureSchema, type GasMixture } from '@shared/schemas/weldin
 import { SHOWN_UNIT } from '@shared/units/convert.ts'
 import { Button } from '@/components/Button.tsx'
 import { ComboBox } from '@/components/fields/ComboBox.tsx'
+import { ObservedField } from '@/components/fields/observed.tsx'
 import { IntervalField } from '@/components/fields/quantity.tsx'
 import { Select } from '@/components/fields/text.tsx'
 import { searchLibrary } from '@/lib/library-search.ts'
@@ -17,7 +18,8 @@ type Component = GasMixture['components'][number]
 
 /** A gas: a usual mixture from the library, or its parts by volume, with its flow. The ISO 14175 symbol follows from the parts. */
 export function GasEditor({ path, label }: { path: string; label: string }) {
-  const { system } = useSheet()
+  const { system, record } = useSheet()
+  const Flow = record === 'coupon' ? ObservedField : IntervalField
   const { value, set, error } = useSheetField<GasMixture | null>(`variables.${path}`)
   const gas = value ?? gasMixtureSchema.parse({})
   const classed = classifyGas(gas.components)
@@ -44,7 +46,7 @@ export function GasEditor({ path, label }: { path: string; label: string }) {
           onPick={(item, text) => set(item ? { ...toGasMixture(item.data), flow: gas.flow } : text === '' ? null : gasMixtureSchema.parse({ name: text.slice(0, 80), flow: gas.flow }))}
         />
         <div className="flex min-w-52 grow basis-52 items-center gap-2">
-          <IntervalField className="grow" label={`${label}, flow`} labelHidden dimension="gasFlow" system={system} value={gas.flow} onChange={(flow: Interval | null) => set({ ...gas, flow })} />
+          <Flow className="grow" label={`${label}, flow`} labelHidden dimension="gasFlow" system={system} value={gas.flow} onChange={(flow: Interval | null) => set({ ...gas, flow })} />
           <span className="text-sm text-soft">{SHOWN_UNIT[system].gasFlow}</span>
         </div>
       </div>

@@ -2,7 +2,7 @@ import { ArrowDown, ArrowUp, Plus, X } from 'lucide-react'
 import type { ProcessBlock } from '@shared/schemas/welding.ts'
 import { Button } from '@/components/Button.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
-import { BLOCK_SECTIONS, blockSectionId, type RowSpec, type SectionSpec } from './catalogue.ts'
+import { BLOCK_SECTIONS, blockSectionId, type SectionSpec } from './catalogue.ts'
 import { useSheet } from './context.ts'
 import { gasInWords } from './labels.ts'
 import { MECHANISATIONS, TRANSFER_MODES, wordOf } from './options.ts'
@@ -36,12 +36,10 @@ export interface ProcessSheetsProps {
   onAdd?: () => void
   /** Rows that have no place on this kind of record, by their path from the block. */
   omit?: readonly string[]
-  /** Rows that only this kind of record has, by section. */
-  extra?: Readonly<Record<string, readonly RowSpec[]>>
 }
 
 /** One process after the other, each with its own sheets; where there are several, each opens with its number and name. */
-export function ProcessSheets({ blocks, onMove, onRemove, onAdd, omit = [], extra = {} }: ProcessSheetsProps) {
+export function ProcessSheets({ blocks, onMove, onRemove, onAdd, omit = [] }: ProcessSheetsProps) {
   const several = blocks.length > 1
   return (
     <>
@@ -68,7 +66,7 @@ export function ProcessSheets({ blocks, onMove, onRemove, onAdd, omit = [], extr
             </header>
           )}
           {BLOCK_SECTIONS.map((section) => (
-            <BlockSheet key={section.id} section={{ ...section, rows: [...section.rows.filter(({ path }) => !omit.includes(path)), ...(extra[section.id] ?? [])] }} block={block} index={index} lead={several ? `${block.process ?? 'Process'} · ` : ''} />
+            <BlockSheet key={section.id} section={{ ...section, rows: section.rows.filter(({ path }) => !omit.includes(path)) }} block={block} index={index} lead={several ? `${block.process ?? 'Process'} · ` : ''} />
           ))}
         </div>
       ))}

@@ -12,6 +12,11 @@ export function Reading({ spec, path, prefix }: { spec: RowSpec; path: string; p
   const words = (at: string) => valueInWords(at, readPath(content.variables, at), content, system)
   if (spec.kind === 'passes') return <PassTable passes={readPath(content.variables, path) as Pass[]} />
   if (spec.kind === 'panel') return <PanelReading path={path} />
-  if (spec.kind === 'pair') return <p className="font-medium">{spec.paths.map((one) => words(`${prefix}${one}`)).join(' to ')}</p>
+  if (spec.kind === 'pair') {
+    const both = spec.paths.map((one) => words(`${prefix}${one}`))
+    // Names are read as a pair, "1 to 1"; of a figure or a yes that both share, one is enough.
+    const names = spec.of.kind === 'text' || spec.of.kind === 'whole'
+    return <p className="font-medium">{names ? both.join(' to ') : [...new Set(both)].join(' and ')}</p>
+  }
   return <p className={spec.kind === 'paragraph' ? 'max-w-prose whitespace-pre-line' : 'font-medium'}>{words(path)}</p>
 }

@@ -4,10 +4,10 @@ import type { ProcessBlock } from '@shared/schemas/welding.ts'
 import { SHOWN_UNIT } from '@shared/units/convert.ts'
 import { Margin } from '@/components/margin/Margin.tsx'
 import { RangeGauge } from '@/components/range-gauge/RangeGauge.tsx'
-import { SheetRow } from '@/components/Sheet.tsx'
+import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { worstVerdict } from '@/components/Verdict.tsx'
 import { readPath } from '@/lib/draft/paths.ts'
-import type { RowSpec } from './catalogue.ts'
+import { isOffered, type RowSpec, type SectionSpec } from './catalogue.ts'
 import { useSheet, type SheetValue } from './context.ts'
 import { Editor } from './Editor.tsx'
 import { gaugeOf, testedInWords } from './findings.ts'
@@ -26,12 +26,12 @@ export function isStated(value: unknown): boolean {
 }
 
 /** Whether a row has a place: it arises here, or something is stated or found in it. */
-export function isShown(spec: RowSpec, prefix: string, block: ProcessBlock | null, sheet: Pick<SheetValue, 'content' | 'control' | 'findings'>): boolean {
+export function isShown(spec: RowSpec, prefix: string, block: ProcessBlock | null, sheet: Pick<SheetValue, 'content' | 'control' | 'findings' | 'record'>): boolean {
   const { variables } = sheet.content
   const paths = spec.kind === 'pair' ? spec.paths : [spec.path]
   if (paths.some((path) => isStated(readPath(variables, `${prefix}${path}`)))) return true
   if (sheet.findings.get(`${prefix}${spec.path}`)?.some(({ verdict }) => verdict !== 'within')) return true
-  return sheet.control !== null && (!spec.when || spec.when(variables, block))
+  return sheet.control !== null && isOffered(spec, variables, block, sheet.record ?? 'procedure')
 }
 
 /** A row of the sheet as the catalogue tells it: label, input or value, gauge, and its notes in the margin. */
@@ -56,6 +56,19 @@ export const SheetField = memo(function SheetField({ spec, prefix = '', block = 
     </SheetRow>
   )
 })
+
+/** One part of the weld as a sheet of its own; left out where none of its rows has a place. */
+export function SectionSheet({ section }: { section: SectionSpec }) {
+  const sheet = useSheet()
+  if (!section.rows.some((spec) => isShown(spec, '', null, sheet))) return null
+  return (
+    <Sheet id={section.id} title={section.title}>
+      {section.rows.map((spec) => (
+        <SheetField key={spec.path} spec={spec} />
+      ))}
+    </Sheet>
+  )
+}
 
 /** A row's notes; without a place of its own it stands at the right of its nearest positioned ancestor. */
 export function Notes({ findings }: { findings: readonly Finding[] }) {

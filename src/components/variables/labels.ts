@@ -5,15 +5,16 @@ import { formatInterval, formatQuantity } from '@shared/units/format.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import { findingField } from '@/lib/draft/paths.ts'
 import type { WeldContent } from './context.ts'
-import { BLOCK_SECTIONS, placedRows, type PlacedRow } from './catalogue.ts'
-import { standardName, wordOf } from './options.ts'
+import { BLOCK_SECTIONS, coveredPaths, placedRows, type PlacedRow } from './catalogue.ts'
+import { choiceInWords, wordOf } from './options.ts'
 
 const ROOT: Record<string, string> = { title: 'Title', scope: 'Scope', notes: 'Notes', supportingCoupons: 'Supporting coupons', 'variables.standards': 'Standards', 'variables.processes': 'Order of the processes' }
 
 /** The row that a path points at or into: the longest path that leads to it. */
 export function rowFor(path: string, rows: readonly PlacedRow[]): PlacedRow | null {
   const field = findingField(path)
-  return rows.filter((row) => field === row.path || field.startsWith(`${row.path}.`)).sort((a, b) => b.path.length - a.path.length)[0] ?? null
+  const reach = rows.flatMap((row) => coveredPaths(row).map((at) => ({ row, at })))
+  return reach.filter(({ at }) => field === at || field.startsWith(`${at}.`)).sort((a, b) => b.at.length - a.at.length)[0]?.row ?? null
 }
 
 /** `processes#fill.positions` → `processes.1.positions`, by the blocks of one content. */
@@ -44,7 +45,7 @@ const plain = (value: unknown): string => (typeof value === 'string' || typeof v
 export function valueInWords(path: string, value: unknown, content: WeldContent, system: UnitSystem): string {
   if (value === null || value === undefined || value === '') return 'not stated'
   if (path === 'supportingCoupons') return `${(value as string[]).length} linked`
-  if (path === 'variables.standards') return (value as WeldContent['variables']['standards']).map(({ standard, edition }) => `${standardName(standard)} ${edition}`).join(', ')
+  if (path === 'variables.standards') return (value as WeldContent['variables']['standards']).map(choiceInWords).join(', ')
   if (path === 'variables.processes') return (value as ProcessBlock[]).map(({ process }) => process ?? 'not stated').join(', ')
   const { processes } = content.variables
   const indexed = byIndex(path, processes)
@@ -60,9 +61,11 @@ export function valueInWords(path: string, value: unknown, content: WeldContent,
       return formatQuantity(value as Quantity, spec.dimension, system).text
     case 'choice':
       return wordOf(spec.options, plain(value))
-    case 'metal':
     case 'pair':
+      if (spec.of.kind === 'quantity') return formatQuantity(value as Quantity, spec.of.dimension, system).text
       return typeof value === 'object' ? or(metalInWords(value as BaseMetal)) : plain(value)
+    case 'metal':
+      return or(metalInWords(value as BaseMetal))
     case 'filler':
       return or(fillerInWords(value as Filler))
     case 'gas': {

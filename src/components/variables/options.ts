@@ -1,5 +1,5 @@
 /** The named values of a weld's variables, as people read them. */
-import { STANDARD_IDS, type StandardId } from '@shared/schemas/common.ts'
+import { STANDARD_IDS, type StandardChoice, type StandardId } from '@shared/schemas/common.ts'
 import { POSITIONS, PROCESSES, type Position } from '@shared/schemas/welding.ts'
 import { standards } from '@shared/standards/index.ts'
 import type { Option } from '@/components/fields/text.tsx'
@@ -8,6 +8,12 @@ const options = (words: Readonly<Record<string, string>>): readonly Option[] => 
 
 export const WELDS = options({ groove: 'Groove', fillet: 'Fillet' })
 export const JOINT_TYPES = options({ butt: 'Butt', tee: 'Tee', corner: 'Corner', lap: 'Lap', edge: 'Edge' })
+export const WORKS = options({ repair: 'Repair', 'build-up': 'Build-up' })
+export const BRANCHES = options({ 'set-on': 'Set-on', 'set-in': 'Set-in', 'set-through': 'Set-through' })
+export const AGEINGS = options({ natural: 'Natural', artificial: 'Artificial' })
+export const HEAT_INPUT_QUANTITIES = options({ 'arc-energy': 'Arc energy, U · I ÷ v', 'heat-input': 'Heat input, with factor k' })
+export const LEVELS = options({ '2': 'Level 2', '1': 'Level 1' })
+export const ROUTE_OPTIONS = options({ test: 'By test', prequalified: 'Prequalified' })
 export const PENETRATIONS = options({ full: 'Complete', partial: 'Partial' })
 export const GROOVES = options({
   square: 'Square', 'single-v': 'Single V', 'double-v': 'Double V', 'single-bevel': 'Single bevel', 'double-bevel': 'Double bevel', 'single-u': 'Single U', 'double-u': 'Double U',
@@ -51,5 +57,12 @@ export const standardName = (value: string): string => {
   const id = known(value)
   return id ? NAMES[id] : value
 }
+/** A standard as it was chosen, in one line: "ISO 15614-1 2017+A1:2019, level 2". */
+export const choiceInWords = ({ standard, edition, level, route }: StandardChoice): string =>
+  [`${standardName(standard)} ${edition}`, level && `level ${level}`, route === 'prequalified' && 'prequalified'].filter(Boolean).join(', ')
+/** The standard that qualifies a procedure at one of two levels. */
+export const hasLevels = (standard: StandardId): boolean => standard === 'iso-15614-1'
 /** Standards whose rules the program keeps, each with its editions, newest first. */
-export const STANDARDS = standards.map(({ id, editions }) => ({ id, label: NAMES[id], editions: editions.map((edition) => ({ value: edition.id, label: edition.label })) }))
+export const STANDARDS = standards.map(({ id, editions, routes }) => ({ id, label: NAMES[id], routes: routes ?? ['test'], editions: editions.map((edition) => ({ value: edition.id, label: edition.label })) }))
+/** A standard newly chosen: its newest edition, and the level that applies where none is named. */
+export const freshChoice = (id: StandardId): StandardChoice => ({ standard: id, edition: STANDARDS.find((one) => one.id === id)?.editions.at(-1)?.value ?? '', level: hasLevels(id) ? '2' : null })

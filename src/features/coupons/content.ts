@@ -4,7 +4,7 @@ import { fieldAt, fieldLabel } from '@shared/comparison/fields.ts'
 import { textOf } from '@shared/comparison/describe.ts'
 import { isOpen } from '@shared/records/coupon-states.ts'
 import { couponSchema, type Coupon } from '@shared/schemas/records.ts'
-import { bendTestSchema, couponContentSchema, hardnessTestSchema, macroTestSchema, tensionTestSchema, toughnessTestSchema, type CouponContent } from '@shared/schemas/welding.ts'
+import { bendTestSchema, couponContentSchema, hardnessTestSchema, macroTestSchema, ndtTestSchema, tensionTestSchema, toughnessTestSchema, type CouponContent, type NdtTest } from '@shared/schemas/welding.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import type { ConflictKind } from '@/components/record/ConflictView.tsx'
 import type { DraftKind } from '@/hooks/draft.ts'
@@ -15,7 +15,7 @@ export type Toughness = CouponContent['toughness'][number]
 export type Hardness = CouponContent['hardness'][number]
 
 /** Lists whose items keep their id while they are edited. */
-export const LISTS = ['variables.processes', 'runSheet', 'tension', 'bends', 'macros', 'toughness', 'hardness'] as const
+export const LISTS = ['variables.processes', 'runSheet', 'tension', 'bends', 'macros', 'toughness', 'hardness', 'ndt'] as const
 const OF_COUPON = Object.keys(couponContentSchema.shape)
 
 /** The form's path of a field as the server or the engine names it: `content.bends.0` and `bends.0`, `thickness` and `variables.thickness`. */
@@ -42,9 +42,9 @@ function label(path: string, content: CouponContent): string {
   const [, list, id, rest] = ITEM.exec(path) ?? []
   if (!list || !id) return fieldLabel(path)
   const field = rest ? fieldLabel(`${list}.0.${rest}`) : null
-  const items: { id: string }[] = list === 'processes' ? content.variables.processes : content[list as 'runSheet']
+  const items: { id: string }[] = list === 'processes' ? content.variables.processes : (content[list as 'runSheet' | 'ndt'] ?? [])
   const item = items.find((one) => one.id === id)
-  const name = item && ('process' in item ? item.process : 'specimen' in item ? item.specimen : 'pass' in item ? item.pass : 'place' in item ? item.place : null)
+  const name = item && ('process' in item ? item.process : 'specimen' in item ? item.specimen : 'pass' in item ? item.pass : 'place' in item ? item.place : 'method' in item ? item.method : null)
   const lead = list === 'processes' ? (typeof name === 'string' ? name : 'Process') : `${fieldLabel(list)}${typeof name === 'string' ? ` ${name}` : ''}`
   return field ? `${lead}: ${field}` : lead
 }
@@ -81,3 +81,4 @@ export const newBend = (tests: CouponContent['bends'], kind: BendKind) => {
 export const newMacro = (tests: readonly Macro[]): Macro => macroTestSchema.parse({ id: fresh(), specimen: nextMark('M', tests.map(({ specimen }) => specimen)) })
 export const newToughness = (tests: readonly Toughness[]): Toughness => toughnessTestSchema.parse({ id: fresh(), place: tests.length % 2 === 0 ? 'weld' : 'heat-affected-zone', temperature: tests.at(-1)?.temperature ?? null, size: tests.at(-1)?.size ?? null })
 export const newHardness = (tests: readonly Hardness[]): Hardness => hardnessTestSchema.parse({ id: fresh(), scale: tests.at(-1)?.scale ?? 'HV10', place: (['weld', 'heat-affected-zone', 'base-metal'] as const)[tests.length % 3], values: [] })
+export const newNdt = (method: NdtTest['method']): NdtTest => ndtTestSchema.parse({ id: fresh(), method })

@@ -2,6 +2,7 @@
 import { useDeferredValue, useMemo } from 'react'
 import { qualifyCoupon } from '@shared/assessment/assess.ts'
 import type { CouponQualification, Finding, TestVerdict, Verdict } from '@shared/schemas/assessment.ts'
+import type { StandardId } from '@shared/schemas/common.ts'
 import type { Coupon } from '@shared/schemas/records.ts'
 import type { CouponContent } from '@shared/schemas/welding.ts'
 import { placedRows } from '@/components/variables/catalogue.ts'
@@ -37,9 +38,17 @@ export function missingNotes({ standard, edition, missing }: CouponQualification
 
 export const VERDICT_OF: Record<TestVerdict['verdict'], Verdict> = { pass: 'within', fail: 'outside', 'cannot-tell': 'cannot-tell' }
 
-/** Verdicts on one test, under each standard that judges it; the same sentence once. */
-export function verdictsOn(qualifications: readonly CouponQualification[], testId: string): TestVerdict[] {
-  const found = new Map<string, TestVerdict>()
-  for (const { results } of qualifications) for (const result of results) if (result.testId === testId) found.set(result.sentence, result)
+/** A verdict on a test, with the standard that gives it. */
+export interface JudgedTest extends TestVerdict {
+  standard: StandardId
+  edition: string
+}
+
+/** Verdicts on one test, under each standard that judges it; what several say in the same words is said once. */
+export function verdictsOn(qualifications: readonly CouponQualification[], testId: string): JudgedTest[] {
+  const found = new Map<string, JudgedTest>()
+  for (const { standard, edition, results } of qualifications) {
+    for (const result of results) if (result.testId === testId && !found.has(`${result.clause} ${result.sentence}`)) found.set(`${result.clause} ${result.sentence}`, { ...result, standard, edition })
+  }
   return [...found.values()]
 }

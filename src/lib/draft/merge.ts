@@ -42,7 +42,7 @@ export function mergeContents<C>(base: C, mine: C, theirs: C, lists: readonly st
 
   const settle = (path: string, from: unknown, my: unknown, their: unknown): unknown => {
     if (same(my, their)) return my
-    if (lists.includes(path)) return mergeItems(path, (from ?? []) as Item[], my as Item[], their as Item[])
+    if (lists.includes(path)) return mergeItems(path, (from ?? []) as Item[], (my ?? []) as Item[], (their ?? []) as Item[])
     if (branches(my) && branches(their)) {
       const before = branches(from) ? from : {}
       return Object.fromEntries([...new Set([...Object.keys(my), ...Object.keys(their)])].map((key) => [key, settle(path ? `${path}.${key}` : key, before[key], my[key], their[key])]))

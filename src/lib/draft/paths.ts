@@ -48,10 +48,12 @@ export function writePath<T>(root: T, path: string, value: unknown): T | null {
 }
 const MISSING = Symbol('no such path')
 
-/** Whether two contents say the same, whatever the order of their keys. */
+const stated = (tree: Tree): string[] => Object.keys(tree).filter((key) => tree[key] !== undefined)
+
+/** Whether two contents say the same, whatever the order of their keys; a key that is undefined is not there. */
 export function same(one: unknown, other: unknown): boolean {
   if (Object.is(one, other)) return true
   if (!isTree(one) || !isTree(other) || Array.isArray(one) !== Array.isArray(other)) return false
-  const keys = Object.keys(one)
-  return keys.length === Object.keys(other).length && keys.every((key) => key in other && same(one[key], other[key]))
+  const keys = stated(one)
+  return keys.length === stated(other).length && keys.every((key) => key in other && same(one[key], other[key]))
 }

@@ -17,6 +17,7 @@ import { RunSheet } from './RunSheet.tsx'
 import type { TestList } from './test-fields.ts'
 import { JudgedContext } from './TestRow.tsx'
 import { SpecimensSheet, TestSheets } from './TestSheets.tsx'
+import { showsVisual } from './visual.ts'
 import { LaboratorySheet, NotesSheet, WeldedSheets } from './WeldedSheets.tsx'
 
 interface CouponSheetsProps {
@@ -35,7 +36,7 @@ export function CouponSheets({ coupon, content, control, qualifications, head }:
   const { system } = useUnits()
   const first = qualifications[0]
   const findings = useMemo(() => (first && control ? missingNotes(first, content) : NONE), [first, control, content])
-  const sheet = useMemo(() => ({ content, system, control, findings, attention: false, couponNumber: (id: string) => (id === coupon.id ? coupon.number : undefined) }), [content, system, control, findings, coupon.id, coupon.number])
+  const sheet = useMemo(() => ({ content, system, control, findings, record: 'coupon' as const, attention: false, couponNumber: (id: string) => (id === coupon.id ? coupon.number : undefined) }), [content, system, control, findings, coupon.id, coupon.number])
   return (
     <SheetContext value={sheet}>
       <JudgedContext value={qualifications}>
@@ -56,11 +57,13 @@ export function CouponSheets({ coupon, content, control, qualifications, head }:
 }
 
 const TESTS: readonly (readonly [TestList, string])[] = [['tension', 'Tension'], ['bends', 'Bends'], ['macros', 'Macro'], ['toughness', 'Toughness'], ['hardness', 'Hardness']]
+/** Examined before specimens are cut. */
+const EXAMINED: readonly (readonly [TestList, string])[] = [['ndt', 'NDT']]
 
 function Index({ coupon, content, typed, qualifications }: { coupon: Coupon; content: CouponContent; typed: boolean; qualifications: readonly CouponQualification[] }) {
   const { processes } = content.variables
   const specimens = qualifications.flatMap((one) => one.specimens)
-  const ofTests = (list: TestList): Verdict | null => worstVerdict(content[list].flatMap(({ id }) => verdictsOn(qualifications, id).map(({ verdict }) => VERDICT_OF[verdict])))
+  const ofTests = (list: TestList): Verdict | null => worstVerdict((content[list] ?? []).flatMap(({ id }) => verdictsOn(qualifications, id).map(({ verdict }) => VERDICT_OF[verdict])))
   const sections: SectionLink[] = [
     { id: 'record', label: 'As welded' },
     { id: 'base-metals', label: 'Base metals' },
@@ -70,7 +73,8 @@ function Index({ coupon, content, typed, qualifications }: { coupon: Coupon; con
     { id: 'run-sheet', label: 'Run sheet' },
     { id: 'specimens', label: 'Specimens', verdict: specimens.length === 0 ? null : specimens.every(({ recorded, required }) => recorded >= required) ? 'within' : 'cannot-tell' },
     { id: 'laboratory', label: 'Laboratory' },
-    ...TESTS.filter(([list]) => typed || content[list].length > 0).map(([list, label]) => ({ id: list, label, verdict: ofTests(list) })),
+    ...(showsVisual(content, typed) ? [{ id: 'visual', label: 'Visual', verdict: worstVerdict(verdictsOn(qualifications, 'visual').map(({ verdict }) => VERDICT_OF[verdict])) }] : []),
+    ...[...EXAMINED, ...TESTS].filter(([list]) => typed || (content[list] ?? []).length > 0).map(([list, label]) => ({ id: list, label, verdict: ofTests(list) })),
     { id: 'photos', label: 'Photos' },
     { id: 'qualifies', label: 'Qualifies' },
     ...(typed || content.notes ? [{ id: 'notes', label: 'Notes' }] : []),

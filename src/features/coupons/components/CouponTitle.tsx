@@ -6,7 +6,7 @@ import { formatInterval } from '@shared/units/format.ts'
 import { Stamp } from '@/components/Stamp.tsx'
 import { Tag, TitleBlock } from '@/components/TitleBlock.tsx'
 import { metalInWords } from '@/components/variables/labels.ts'
-import { standardName } from '@/components/variables/options.ts'
+import { choiceInWords } from '@/components/variables/options.ts'
 import { useUnits } from '@/hooks/units.ts'
 import { day } from '@/lib/figures.ts'
 
@@ -24,7 +24,7 @@ export function CouponTitle({ coupon, content, note }: { coupon: Coupon; content
       title={content.title || 'Without a title'}
       cells={[
         { label: processes.length > 1 ? 'Processes' : 'Process', children: processes.map(({ process }) => process ?? 'not stated').join(' + ') },
-        { label: 'Code', children: standards.map(({ standard, edition }) => <p key={standard}>{`${standardName(standard)} · ${edition}`}</p>) },
+        { label: 'Code', children: standards.map((choice) => <p key={choice.standard}>{choiceInWords(choice)}</p>) },
         {
           label: 'Coupon',
           children: (

@@ -10,8 +10,9 @@ export function goTo(field: string, content: CouponContent): void {
   const path = formPath(field)
   const weld = path.startsWith('variables.') ? (rowFor(path, placedRows(content.variables.processes))?.path ?? path.replace('variables.', '')) : path
   const parts = weld.split('.')
-  for (let length = parts.length; length > 0; length -= 1) {
-    const element = document.getElementById(inputId(parts.slice(0, length).join('.')))
+  const exact = path.replace('variables.', '')
+  for (const place of [exact, ...parts.map((_part, index) => parts.slice(0, parts.length - index).join('.'))]) {
+    const element = document.getElementById(inputId(place))
     if (!element) continue
     element.scrollIntoView({ block: 'center' })
     element.focus({ preventScroll: true })

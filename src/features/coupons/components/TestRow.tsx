@@ -1,5 +1,6 @@
 import { X } from 'lucide-react'
 import { createContext, use, type ReactNode } from 'react'
+import { Link } from 'react-router-dom'
 import { fieldAt } from '@shared/comparison/fields.ts'
 import { NOT_STATED, textOf } from '@shared/comparison/describe.ts'
 import type { CouponQualification, TestVerdict } from '@shared/schemas/assessment.ts'
@@ -9,11 +10,13 @@ import { QuantityField } from '@/components/fields/quantity.tsx'
 import { Checkbox, Select, TextField } from '@/components/fields/text.tsx'
 import { Margin } from '@/components/margin/Margin.tsx'
 import { inputId, useSheet } from '@/components/variables/context.ts'
+import { BASIS_SENTENCE } from '@/components/standards/words.ts'
+import { standardName } from '@/components/variables/options.ts'
 import { VerdictMark, worstVerdict } from '@/components/Verdict.tsx'
 import { figure } from '@/lib/figures.ts'
-import { VERDICT_OF, verdictsOn } from '../judged.ts'
+import { VERDICT_OF, verdictsOn, type JudgedTest } from '../judged.ts'
 import { NumbersField, QuantitiesField } from './ListField.tsx'
-import { TEST_FIELDS, type TestField, type TestList } from './test-fields.ts'
+import type { TestField } from './test-fields.ts'
 
 /** How the coupon is judged at the moment, under each of its standards. */
 export const JudgedContext = createContext<readonly CouponQualification[]>([])
@@ -21,8 +24,10 @@ export const JudgedContext = createContext<readonly CouponQualification[]>([])
 const WORD: Record<TestVerdict['verdict'], string> = { pass: 'Accepted', fail: 'Not accepted', 'cannot-tell': 'Cannot tell' }
 const LOOK = { within: 'border-l-jade bg-sheet', outside: 'border-l-oxide bg-oxide-bg', 'cannot-tell': 'border-l-straw bg-straw-bg' } as const
 
-/** One test's verdict in the margin: the word, the sentence with its figures, the clause. */
-export function TestNote({ result }: { result: TestVerdict }) {
+/** One test's verdict in the margin: the word, the sentence with its figures, the clause; it opens to how it was reached. */
+export function TestNote({ result, several = false }: { result: JudgedTest; several?: boolean }) {
+  const { computed } = result
+  const standard = `${standardName(result.standard)} ${result.edition}`
   const verdict = VERDICT_OF[result.verdict]
   return (
     <article aria-label={`${WORD[result.verdict]}: ${result.specimen}`} className={`margin-note border-l-[3px] px-3 py-1.5 text-sm ${LOOK[verdict]}`}>
@@ -30,11 +35,31 @@ export function TestNote({ result }: { result: TestVerdict }) {
         <p className="font-semibold">
           <VerdictMark verdict={verdict} className="mr-1.5 size-2.5 align-[-0.5px]" />
           {WORD[result.verdict]}
+          {several && <span className="font-normal text-soft"> · {standardName(result.standard)}</span>}
         </p>
         <p className="font-narrow text-[0.875rem] leading-[1.125rem] font-medium whitespace-nowrap text-soft">{result.clause}</p>
       </header>
       <p className="text-pretty">{result.sentence}</p>
-      {result.basis === 'memory' && <p className="mt-0.5 text-xs text-soft">From memory: confirm in your edition.</p>}
+      {result.basis === 'memory' && <p className="mt-0.5 text-xs text-soft">{BASIS_SENTENCE.memory}</p>}
+      <details className="mt-0.5">
+        <summary className="w-fit cursor-pointer py-1 text-xs text-soft underline decoration-dotted underline-offset-2">How this was reached</summary>
+        <div className="mt-0.5 space-y-1 text-xs leading-[1.125rem]">
+          <p>
+            {standard}, {result.clause}, judged from what is recorded of {result.specimen}.
+          </p>
+          {computed && (
+            <p>
+              {computed.label}: {figure(computed.value)} {computed.unit}.
+            </p>
+          )}
+          <p className="text-soft">{BASIS_SENTENCE[result.basis]}</p>
+          <p>
+            <Link to={`/standards/${result.standard}`} className="text-link">
+              What is checked of {standardName(result.standard)}
+            </Link>
+          </p>
+        </div>
+      </details>
     </article>
   )
 }
@@ -42,8 +67,9 @@ export function TestNote({ result }: { result: TestVerdict }) {
 type Test = { id: string } & Readonly<Record<string, unknown>>
 
 export interface TestRowProps {
-  list: TestList
-  index: number
+  /** Where the test stands in the content: `tension.0`, `visual`. */
+  path: string
+  fields: readonly TestField[]
   test: Test
   /** "T1", "Weld". */
   mark: string
@@ -55,13 +81,13 @@ export interface TestRowProps {
 }
 
 /** One test: its mark, its fields, what was computed from them, and the verdict in the margin. */
-export function TestRow({ list, index, test, mark, onChange, onRemove, children }: TestRowProps) {
+export function TestRow({ path, fields: every, test, mark, onChange, onRemove, children }: TestRowProps) {
   const { system } = useSheet()
-  const results = verdictsOn(use(JudgedContext), test.id)
+  const judged = use(JudgedContext)
+  const results = verdictsOn(judged, test.id)
   const worst = worstVerdict(results.map(({ verdict }) => VERDICT_OF[verdict]))
   const computed = results.find((result) => result.computed)?.computed
-  const fields = TEST_FIELDS[list].filter(({ when }) => !when || when(test))
-  const path = `${list}.${index}`
+  const fields = every.filter(({ when }) => !when || when(test))
   return (
     <div id={inputId(path)} role="group" aria-label={mark} tabIndex={-1} className={`sheet-row relative border-b border-hair last:border-b-0 ${worst === 'outside' ? 'wash-outside' : worst === 'cannot-tell' ? 'wash-cannot-tell' : ''}`}>
       <div className="grid grid-cols-1 gap-x-3 px-4 sm:grid-cols-[3.25rem_minmax(0,1fr)] py-3">
@@ -103,7 +129,7 @@ export function TestRow({ list, index, test, mark, onChange, onRemove, children 
       {results.length > 0 && (
         <Margin findings={[]}>
           {results.map((result) => (
-            <TestNote key={result.sentence} result={result} />
+            <TestNote key={`${result.standard} ${result.sentence}`} result={result} several={judged.length > 1} />
           ))}
         </Margin>
       )}
@@ -126,7 +152,7 @@ function FieldOf({ field, id, mark, value, onChange }: { field: TestField; id: s
     case 'choice':
       return <Select id={id} label={label} options={field.options} {...(field.always ? {} : { empty: 'Not stated' })} value={(value as string | null) ?? ''} onChange={(event) => onChange(orNull(event.target.value))} />
     case 'flag':
-      return <Select id={id} label={label} options={YES_NO} empty="Not stated" value={value === null ? '' : value ? 'yes' : 'no'} onChange={(event) => onChange(event.target.value === '' ? null : event.target.value === 'yes')} />
+      return <Select id={id} label={label} options={YES_NO} empty="Not stated" value={value === null || value === undefined ? '' : value ? 'yes' : 'no'} onChange={(event) => onChange(event.target.value === '' ? null : event.target.value === 'yes')} />
     case 'tick':
       return (
         <div className="flex min-h-9 items-center">

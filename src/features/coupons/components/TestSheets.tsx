@@ -1,6 +1,6 @@
 import { Plus, X } from 'lucide-react'
 import { use } from 'react'
-import type { BendTest } from '@shared/schemas/welding.ts'
+import type { BendTest, NdtTest } from '@shared/schemas/welding.ts'
 import { formatQuantity } from '@shared/units/format.ts'
 import { Button } from '@/components/Button.tsx'
 import { QuantityField } from '@/components/fields/quantity.tsx'
@@ -8,10 +8,11 @@ import { Checkbox, Select } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { inputId, useSheet } from '@/components/variables/context.ts'
 import { VerdictMark } from '@/components/Verdict.tsx'
-import { newBend, newHardness, newMacro, newTension, newToughness, type BendKind } from '../content.ts'
-import { useCouponContent, useList } from './coupon-sheet.ts'
-import { BEND_KINDS, type TestList } from './test-fields.ts'
+import { newBend, newHardness, newMacro, newNdt, newTension, newToughness, type BendKind } from '../content.ts'
+import { useCouponContent, useList, type Listed as ListOf } from './coupon-sheet.ts'
+import { BEND_KINDS, NDT_METHODS, TEST_FIELDS, type TestList } from './test-fields.ts'
 import { JudgedContext, TestRow } from './TestRow.tsx'
+import { VisualSheet } from './VisualSheet.tsx'
 
 /** How many specimens the standard asks for, how many are recorded, and what may stand for them. */
 export function SpecimensSheet() {
@@ -47,13 +48,15 @@ export function SpecimensSheet() {
 
 const PLACE = { weld: 'Weld', 'heat-affected-zone': 'HAZ', 'base-metal': 'Base' } as const
 
-/** Tension, bends, then the tests that only some coupons have. */
+/** What is examined before specimens are cut, then tension, bends and the tests that only some coupons have. */
 export function TestSheets() {
   const { control } = useSheet()
   const content = useCouponContent()
-  const shows = (list: TestList) => control !== null || content[list].length > 0
+  const shows = (list: TestList) => control !== null || (content[list] ?? []).length > 0
   return (
     <>
+      <VisualSheet />
+      {shows('ndt') && <NdtSheet />}
       {shows('tension') && <Listed list="tension" title="Tension" add="Tension specimen" fresh={newTension} mark={({ specimen }) => specimen} empty="Size, greatest load and where it broke; the stress is computed and judged at once." />}
       {shows('bends') && <BendSheet />}
       {shows('macros') && <Listed list="macros" title="Macro sections" add="Macro section" fresh={newMacro} mark={({ specimen }) => specimen} empty="Asked of fillet coupons: fusion, cracks and the two legs." />}
@@ -63,17 +66,17 @@ export function TestSheets() {
   )
 }
 
-type ItemOf<L extends TestList> = ReturnType<typeof useCouponContent>[L][number]
+type ItemOf<L extends TestList> = ListOf<L>[number]
 interface ListedProps<L extends TestList> {
   list: L
   title: string
   add: string
   empty: string
-  fresh: (items: ReturnType<typeof useCouponContent>[L]) => ItemOf<L>
+  fresh: (items: ListOf<L>) => ItemOf<L>
   mark: (item: ItemOf<L>) => string
 }
 
-function Listed<L extends Exclude<TestList, 'bends'>>(props: ListedProps<L>) {
+function Listed<L extends Exclude<TestList, 'bends' | 'ndt'>>(props: ListedProps<L>) {
   const { control } = useSheet()
   const content = useCouponContent()
   const items: readonly ItemOf<L>[] = content[props.list]
@@ -82,7 +85,7 @@ function Listed<L extends Exclude<TestList, 'bends'>>(props: ListedProps<L>) {
       {control ? (
         <ListedTyped {...props} />
       ) : (
-        items.map((item, index) => <TestRow key={item.id} list={props.list} index={index} test={item} mark={props.mark(item)} />)
+        items.map((item, index) => <TestRow key={item.id} fields={TEST_FIELDS[props.list]} path={`${props.list}.${index}`} test={item} mark={props.mark(item)} />)
       )}
     </Sheet>
   )
@@ -90,13 +93,13 @@ function Listed<L extends Exclude<TestList, 'bends'>>(props: ListedProps<L>) {
 
 const count = (length: number) => (length === 0 ? 'none recorded' : `${length} recorded`)
 
-function ListedTyped<L extends Exclude<TestList, 'bends'>>({ list, add, empty, fresh, mark }: ListedProps<L>) {
+function ListedTyped<L extends Exclude<TestList, 'bends' | 'ndt'>>({ list, add, empty, fresh, mark }: ListedProps<L>) {
   const { items, put, change, remove, error } = useList(list)
   const rows: readonly ItemOf<L>[] = items
   return (
     <div id={inputId(list)} tabIndex={-1}>
       {rows.map((item, index) => (
-        <TestRow key={item.id} list={list} index={index} test={item} mark={mark(item)} onChange={(part) => change(index, part as Partial<ItemOf<L>>)} onRemove={() => remove(index)} />
+        <TestRow key={item.id} fields={TEST_FIELDS[list]} path={`${list}.${index}`} test={item} mark={mark(item)} onChange={(part) => change(index, part as Partial<ItemOf<L>>)} onRemove={() => remove(index)} />
       ))}
       <Foot error={error} empty={rows.length === 0 ? empty : null}>
         <Button icon={<Plus size={15} aria-hidden="true" />} onClick={() => put([...rows, fresh(items)] as typeof items)}>
@@ -123,12 +126,41 @@ function Foot({ error, empty, children }: { error: string | null; empty: string 
   )
 }
 
+/** Non-destructive examinations, a button for each method. */
+function NdtSheet() {
+  const { control } = useSheet()
+  const { ndt = [] } = useCouponContent()
+  return (
+    <Sheet id="ndt" title="Non-destructive testing" aside={count(ndt.length)}>
+      {control ? <NdtTyped /> : ndt.map((test, index) => <TestRow key={test.id} fields={TEST_FIELDS.ndt} path={`ndt.${index}`} test={test} mark={test.method} />)}
+    </Sheet>
+  )
+}
+
+function NdtTyped() {
+  const { items, put, change, remove, error } = useList('ndt')
+  return (
+    <div id={inputId('ndt')} tabIndex={-1}>
+      {items.map((test, index) => (
+        <TestRow key={test.id} fields={TEST_FIELDS.ndt} path={`ndt.${index}`} test={test} mark={test.method} onChange={(part) => change(index, part)} onRemove={() => remove(index)} />
+      ))}
+      <Foot error={error} empty={items.length === 0 ? 'ISO 15614 asks for visual, surface and volumetric testing; AWS D1.1 for radiography or ultrasonics of a complete-penetration groove.' : null}>
+        {NDT_METHODS.map(({ value, label }) => (
+          <Button key={value} icon={<Plus size={15} aria-hidden="true" />} onClick={() => put([...items, newNdt(value as NdtTest['method'])])}>
+            {label}
+          </Button>
+        ))}
+      </Foot>
+    </div>
+  )
+}
+
 function BendSheet() {
   const { control } = useSheet()
   const { bends } = useCouponContent()
   return (
     <Sheet id="bends" title="Bends" aside={count(bends.length)}>
-      {control ? <BendsTyped /> : bends.map((bend, index) => <TestRow key={bend.id} list="bends" index={index} test={bend} mark={bend.specimen}><OpeningsRead openings={bend.openings} /></TestRow>)}
+      {control ? <BendsTyped /> : bends.map((bend, index) => <TestRow key={bend.id} fields={TEST_FIELDS.bends} path={`bends.${index}`} test={bend} mark={bend.specimen}><OpeningsRead openings={bend.openings} /></TestRow>)}
     </Sheet>
   )
 }
@@ -142,7 +174,7 @@ function BendsTyped() {
   return (
     <div id={inputId('bends')} tabIndex={-1}>
       {items.map((bend, index) => (
-        <TestRow key={bend.id} list="bends" index={index} test={bend} mark={bend.specimen} onChange={(part) => change(index, part)} onRemove={() => remove(index)}>
+        <TestRow key={bend.id} fields={TEST_FIELDS.bends} path={`bends.${index}`} test={bend} mark={bend.specimen} onChange={(part) => change(index, part)} onRemove={() => remove(index)}>
           <Openings bend={bend} onChange={(openings) => change(index, { openings })} />
         </TestRow>
       ))}

@@ -1,12 +1,12 @@
 import type { ReactNode } from 'react'
-import type { RowSpec } from '@/components/variables/catalogue.ts'
-import { BASE_METALS, PREHEAT, PWHT, TOUGHNESS, WRITTEN_IN } from '@/components/variables/catalogue.ts'
+import { APPLICATION, BASE_METALS, PREHEAT, PWHT, WRITTEN_IN } from '@/components/variables/catalogue.ts'
 import { inputId, useSheet, useSheetField } from '@/components/variables/context.ts'
 import { JointSheet } from '@/components/variables/JointSheet.tsx'
 import { metalInWords } from '@/components/variables/labels.ts'
-import { standardName } from '@/components/variables/options.ts'
+import { choiceInWords } from '@/components/variables/options.ts'
 import { ProcessSheets } from '@/components/variables/ProcessSheets.tsx'
-import { isShown, SheetField } from '@/components/variables/SheetField.tsx'
+import { SectionSheet, SheetField } from '@/components/variables/SheetField.tsx'
+import { StandardChoices } from '@/components/variables/StandardChoices.tsx'
 import { TextArea, TextField } from '@/components/fields/text.tsx'
 import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { day } from '@/lib/figures.ts'
@@ -36,19 +36,8 @@ const LABORATORY: readonly Row[] = [
   { name: 'testedOn', label: 'Tested on', kind: 'date' },
 ]
 
-const metalRows = (side: 'a' | 'b'): RowSpec[] => {
-  const name = side.toUpperCase()
-  return [
-    { kind: 'text', path: `baseMetals.${side}.heatNumber`, label: `Heat number, ${name}`, max: 60 },
-    { kind: 'text', path: `baseMetals.${side}.certificate`, label: `Certificate, ${name}`, max: 120 },
-    { kind: 'quantity', path: `baseMetals.${side}.minTensile`, label: `Tensile, minimum, ${name}`, dimension: 'stress' },
-    { kind: 'quantity', path: `baseMetals.${side}.minElongation`, label: `Elongation, minimum, ${name}`, dimension: 'percent' },
-  ]
-}
-const METALS: readonly RowSpec[] = [...BASE_METALS.rows.slice(0, 2), ...metalRows('a'), ...metalRows('b'), ...BASE_METALS.rows.slice(2)]
 /** What stands in the run sheet, or is asked of a procedure alone. */
 const OMIT = ['passes', 'electrical.panel', 'electrical.current', 'electrical.voltage', 'electrical.wireFeed', 'electrical.travelSpeed']
-const EXTRA: Readonly<Record<string, readonly RowSpec[]>> = { filler: [{ kind: 'text', path: 'filler.lot', label: 'Lot', max: 60, example: 'batch on the reel or the packet' }] }
 
 /** The coupon as it was welded: the record, the metals, the joint, each process, heat. */
 export function WeldedSheets() {
@@ -58,25 +47,23 @@ export function WeldedSheets() {
   const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
   return (
     <>
-      <Sheet id="record" title="As welded" aside={standards.map(({ standard, edition }) => `${standardName(standard)} ${edition}`).join(', ')}>
+      <Sheet id="record" title="As welded" aside={standards.map(choiceInWords).join('; ')}>
         <Rows rows={RECORD} />
-        <SheetField spec={TOUGHNESS} />
+        <SheetRow label="Standards" unit="tested to each">
+          {sheet.control ? <StandardChoices /> : <p className="font-medium">{standards.map(choiceInWords).join('; ')}</p>}
+        </SheetRow>
         <SheetField spec={WRITTEN_IN} />
       </Sheet>
       <Sheet id="base-metals" title="Base metals" aside={[...new Set(metals)].join(' to ') || undefined}>
-        {METALS.map((spec) => (
+        {BASE_METALS.rows.map((spec) => (
           <SheetField key={spec.path} spec={spec} />
         ))}
       </Sheet>
+      <SectionSheet section={APPLICATION} />
       <JointSheet />
-      <ProcessSheets blocks={processes} omit={OMIT} extra={EXTRA} />
-      {[PREHEAT, PWHT].filter(({ rows }) => rows.some((spec) => isShown(spec, '', null, sheet))).map((section) => (
-        <Sheet key={section.id} id={section.id} title={section.title}>
-          {section.rows.map((spec) => (
-            <SheetField key={spec.path} spec={spec} />
-          ))}
-        </Sheet>
-      ))}
+      <ProcessSheets blocks={processes} omit={OMIT} />
+      <SectionSheet section={PREHEAT} />
+      <SectionSheet section={PWHT} />
     </>
   )
 }

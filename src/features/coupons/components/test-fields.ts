@@ -1,9 +1,11 @@
 /** The fields of each kind of test, as data: typed, read and named from one place. */
 import { fieldLabel } from '@shared/comparison/fields.ts'
+import type { Quantity } from '@shared/schemas/common.ts'
+import type { WeldingVariables } from '@shared/schemas/welding.ts'
 import type { Dimension } from '@shared/units/types.ts'
 import type { Option } from '@/components/fields/text.tsx'
 
-export type TestList = 'tension' | 'bends' | 'macros' | 'toughness' | 'hardness'
+export type TestList = 'tension' | 'bends' | 'macros' | 'toughness' | 'hardness' | 'ndt'
 interface Common {
   key: string
   label: string
@@ -18,17 +20,38 @@ export const BEND_KINDS = options({ face: 'Face', root: 'Root', side: 'Side', 'l
 
 type Own<K extends TestField['kind']> = Omit<Extract<TestField, { kind: K }>, 'label' | 'key' | 'kind'>
 const of =
-  (list: TestList) =>
+  (part: string) =>
   <K extends TestField['kind']>(key: string, kind: K, more: Own<K>, label?: string): TestField =>
-    ({ key, kind, label: label ?? fieldLabel(`${list}.0.${key}`), ...more }) as unknown as TestField
+    ({ key, kind, label: label ?? fieldLabel(`${part}.${key}`), ...more }) as unknown as TestField
 
-const tension = of('tension')
-const bend = of('bends')
-const macro = of('macros')
-const tough = of('toughness')
-const hard = of('hardness')
+const tension = of('tension.0')
+const bend = of('bends.0')
+const macro = of('macros.0')
+const tough = of('toughness.0')
+const hard = of('hardness.0')
+const ndt = of('ndt.0')
+const seen = of('visual')
 const round = (test: Readonly<Record<string, unknown>>) => test.kind !== 'reduced-section'
 const flat = (test: Readonly<Record<string, unknown>>) => test.kind !== 'turned'
+
+/** What a visual examination of such a weld says: of a fillet its profile, of a groove its height, of complete penetration its root. */
+export function visualFields({ joint }: WeldingVariables): readonly TestField[] {
+  const groove = joint.weld === 'groove'
+  const root = groove && joint.penetration === 'full'
+  const concave = (test: Readonly<Record<string, unknown>>) => ((test.rootConcavity as Quantity | null)?.si ?? 0) > 0
+  return [
+    seen('cracks', 'flag', {}),
+    seen('cratersFull', 'flag', {}),
+    ...(root ? [seen('rootSound', 'flag', {})] : []),
+    seen('profileAccepted', 'flag', {}),
+    seen('undercut', 'quantity', { dimension: 'length' }),
+    ...(groove ? [seen('reinforcement', 'quantity', { dimension: 'length' })] : []),
+    ...(root ? [seen('rootConcavity', 'quantity', { dimension: 'length' }), seen('meltThrough', 'quantity', { dimension: 'length' }), seen('weldThickness', 'quantity', { dimension: 'length', when: concave }, 'Weld thickness there')] : []),
+  ]
+}
+
+/** The methods in words, as the buttons and the rows call them. */
+export const NDT_METHODS = options({ VT: 'Visual', RT: 'Radiography', UT: 'Ultrasonics', PT: 'Penetrant', MT: 'Magnetic particle' })
 
 export const TEST_FIELDS: Readonly<Record<TestList, readonly TestField[]>> = {
   tension: [
@@ -60,4 +83,5 @@ export const TEST_FIELDS: Readonly<Record<TestList, readonly TestField[]>> = {
     tough('lateralExpansion', 'quantities', { dimension: 'length', most: 6 }),
   ],
   hardness: [hard('place', 'choice', { options: options({ weld: 'Weld', 'heat-affected-zone': 'Heat-affected zone', 'base-metal': 'Base metal' }), always: true }), hard('scale', 'choice', { options: options({ HV5: 'HV 5', HV10: 'HV 10' }), always: true }), hard('values', 'numbers', { unit: 'HV', most: 60 })],
+  ndt: [ndt('method', 'choice', { options: NDT_METHODS, always: true }), ndt('wholeLength', 'flag', {}), ndt('accepted', 'flag', {}), ndt('reportNumber', 'text', { max: 80 }), ndt('note', 'text', { max: 400 })],
 }

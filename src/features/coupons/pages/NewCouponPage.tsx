@@ -8,11 +8,12 @@ import { baseMetalSchema, couponContentSchema, type BaseMetal, type Process } fr
 import { Button, ButtonLink } from '@/components/Button.tsx'
 import { ComboBox } from '@/components/fields/ComboBox.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
-import { Select, TagPicker, TextField } from '@/components/fields/text.tsx'
+import { TagPicker, TextField } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Breadcrumb, PageHead } from '@/components/states.tsx'
 import { metalInWords } from '@/components/variables/labels.ts'
-import { PROCESS_OPTIONS, STANDARDS } from '@/components/variables/options.ts'
+import { freshChoice, PROCESS_OPTIONS } from '@/components/variables/options.ts'
+import { ChoiceFields } from '@/components/variables/StandardChoices.tsx'
 import { useMay } from '@/hooks/session.ts'
 import { useUnits } from '@/hooks/units.ts'
 import { call } from '@/lib/api.ts'
@@ -88,13 +89,10 @@ function Against({ pending, onOpen }: { pending: boolean; onOpen: (revisionId: s
 function ByItself({ pending, onOpen }: { pending: boolean; onOpen: (content: NonNullable<BodyOf<'createCoupon'>['content']>) => void }) {
   const { system } = useUnits()
   const [title, setTitle] = useState('')
-  const [standard, setStandard] = useState(STANDARDS[0]?.id ?? 'asme-ix')
-  const [edition, setEdition] = useState('')
+  const [choice, setChoice] = useState(() => freshChoice('asme-ix'))
   const [processes, setProcesses] = useState<Process[]>([])
   const [metal, setMetal] = useState<BaseMetal | null>(null)
   const [wrong, setWrong] = useState<string | null>(null)
-  const editions = STANDARDS.find(({ id }) => id === standard)?.editions ?? []
-  const chosen = edition || (editions.at(-1)?.value ?? '')
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (pending) return
@@ -102,25 +100,15 @@ function ByItself({ pending, onOpen }: { pending: boolean; onOpen: (content: Non
     setWrong(null)
     const both = metal ?? {}
     const blocks = (processes.length > 0 ? processes : [null]).map((process, index) => ({ id: `p${index + 1}`, process }))
-    onOpen(couponContentSchema.parse({ title, variables: { standards: [{ standard, edition: chosen }], unitSystem: system, baseMetals: { a: both, b: both }, processes: blocks } }))
+    onOpen(couponContentSchema.parse({ title, variables: { standards: [choice], unitSystem: system, baseMetals: { a: both, b: both }, processes: blocks } }))
   }
   return (
     <Sheet title="By itself">
       <form noValidate onSubmit={submit} className="space-y-4 px-4 py-4">
         <p className="text-pretty text-soft">For a test piece that no procedure here asks for yet.</p>
         <TextField label="Title" maxLength={160} placeholder="e.g. 12 mm plate, 3G" value={title} error={wrong} onChange={(event) => setTitle(event.target.value)} />
-        <div className="grid gap-4 sm:grid-cols-2">
-          <Select
-            label="Standard"
-            options={STANDARDS.map(({ id, label }) => ({ value: id, label }))}
-            value={standard}
-            onChange={(event) => {
-              const next = STANDARDS.find(({ id }) => id === event.target.value)
-              if (next) setStandard(next.id)
-              setEdition('')
-            }}
-          />
-          <Select label="Edition" options={editions} value={chosen} onChange={(event) => setEdition(event.target.value)} />
+        <div className="grid gap-4 sm:grid-cols-[repeat(auto-fit,minmax(9.5rem,1fr))]">
+          <ChoiceFields choice={choice} record="coupon" onChange={setChoice} />
         </div>
         <TagPicker label="Processes" options={PROCESS_OPTIONS as { value: Process; label: string }[]} value={processes} onChange={setProcesses} />
         <ComboBox label="Metal" optional text={metal ? metalInWords(metal) : ''} queryKey="base-metals" load={metals} allowOwn placeholder="Grade, specification, UNS or P-Number" onPick={(item, text) => setMetal(item ? toBaseMetal(item.data) : text === '' ? null : baseMetalSchema.parse({ specification: text.slice(0, 80) }))} />

@@ -5,7 +5,7 @@ import type { ProcedureContent } from '@shared/schemas/welding.ts'
 import { Stamp } from '@/components/Stamp.tsx'
 import { Tag, TitleBlock } from '@/components/TitleBlock.tsx'
 import { day } from '@/lib/figures.ts'
-import { MECHANISATIONS, standardName, wordOf } from '@/components/variables/options.ts'
+import { choiceInWords, MECHANISATIONS, wordOf } from '@/components/variables/options.ts'
 
 const SIGNED = { approved: 'Approved', withdrawn: 'Withdrawn', superseded: 'Superseded' } as const
 
@@ -22,7 +22,7 @@ export function ProcedureTitle({ revision, content, couponNumbers, note }: { rev
       title={content.title || 'Without a title'}
       cells={[
         { label: processes.length > 1 ? 'Processes' : 'Process', children: names.map((name) => <p key={name}>{name}</p>) },
-        { label: 'Code', children: standards.map(({ standard, edition }) => <p key={standard}>{`${standardName(standard)} · ${edition}`}</p>) },
+        { label: 'Code', children: standards.map((choice) => <p key={choice.standard}>{choiceInWords(choice)}</p>) },
         {
           label: 'Supporting records',
           children:

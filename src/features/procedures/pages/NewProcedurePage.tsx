@@ -17,7 +17,8 @@ import { asProblem } from '@/lib/problem.ts'
 import { searchLibrary } from '@/lib/library-search.ts'
 import { revisionQuery } from '../api.ts'
 import { metalInWords } from '@/components/variables/labels.ts'
-import { PROCESS_OPTIONS, STANDARDS, UNIT_SYSTEMS } from '@/components/variables/options.ts'
+import { freshChoice, PROCESS_OPTIONS, UNIT_SYSTEMS } from '@/components/variables/options.ts'
+import { ChoiceFields } from '@/components/variables/StandardChoices.tsx'
 
 const search = searchLibrary('base-metals')
 const empty = baseMetalSchema.parse({})
@@ -29,15 +30,12 @@ export function NewProcedurePage() {
   const mayDraft = useMay('procedures.draft')
   const { system: own } = useUnits()
   const [title, setTitle] = useState('')
-  const [standard, setStandard] = useState(STANDARDS[0]?.id ?? 'asme-ix')
-  const [edition, setEdition] = useState('')
+  const [choice, setChoice] = useState(() => freshChoice('asme-ix'))
   const [system, setSystem] = useState<UnitSystem>(own)
   const [processes, setProcesses] = useState<Process[]>([])
   const [a, setA] = useState<BaseMetal>(empty)
   const [b, setB] = useState<BaseMetal | null>(null)
   const [wrong, setWrong] = useState<string | null>(null)
-  const editions = STANDARDS.find(({ id }) => id === standard)?.editions ?? []
-  const chosen = edition || (editions.at(-1)?.value ?? '')
   const create = useMutation({
     mutationFn: (content: Parameters<typeof procedureContentSchema.parse>[0]) => call('createProcedure', { body: { content: procedureContentSchema.parse(content) } }),
     onSuccess: (revision) => {
@@ -52,7 +50,7 @@ export function NewProcedurePage() {
     if (title.trim() === '') return setWrong('Give the procedure a title, e.g. "Groove weld, carbon steel plate".')
     setWrong(null)
     const named = processes.length > 0 ? processes : [null]
-    create.mutate({ title, variables: { standards: [{ standard, edition: chosen }], unitSystem: system, baseMetals: { a, b: b ?? a }, processes: named.map((process, index) => ({ id: `p${index + 1}`, process })) } })
+    create.mutate({ title, variables: { standards: [choice], unitSystem: system, baseMetals: { a, b: b ?? a }, processes: named.map((process, index) => ({ id: `p${index + 1}`, process })) } })
   }
   const picked = (metal: BaseMetal | null, set: (next: BaseMetal) => void, label: string, description: string) => (
     <ComboBox
@@ -75,18 +73,8 @@ export function NewProcedurePage() {
         <Sheet title="Start" className="max-w-3xl">
           <form noValidate onSubmit={submit} className="space-y-5 px-4 py-4">
             <TextField label="Title" maxLength={160} placeholder="e.g. Groove weld, carbon steel plate" value={title} error={wrong} onChange={(event) => setTitle(event.target.value)} />
-            <div className="grid gap-4 sm:grid-cols-3">
-              <Select
-                label="Standard"
-                options={STANDARDS.map(({ id, label }) => ({ value: id, label }))}
-                value={standard}
-                onChange={(event) => {
-                  const next = STANDARDS.find(({ id }) => id === event.target.value)
-                  if (next) setStandard(next.id)
-                  setEdition('')
-                }}
-              />
-              <Select label="Edition" options={editions} value={chosen} onChange={(event) => setEdition(event.target.value)} />
+            <div className="grid gap-4 sm:grid-cols-[repeat(auto-fit,minmax(9.5rem,1fr))]">
+              <ChoiceFields choice={choice} record="procedure" onChange={setChoice} />
               <Select label="Written in" options={UNIT_SYSTEMS} value={system} onChange={(event) => setSystem(event.target.value === 'US' ? 'US' : 'SI')} />
             </div>
             <TagPicker label="Processes" description="Each gets its own sheets; their order can be changed there." options={PROCESS_OPTIONS as { value: Process; label: string }[]} value={processes} onChange={setProcesses} />

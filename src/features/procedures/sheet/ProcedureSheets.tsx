@@ -2,7 +2,7 @@ import { Sheet, SheetRow } from '@/components/Sheet.tsx'
 import { SectionNav, type SectionLink } from '@/components/SectionNav.tsx'
 import type { ReactNode } from 'react'
 import type { Verdict } from '@shared/schemas/assessment.ts'
-import { BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from '@/components/variables/catalogue.ts'
+import { APPLICATION, BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from '@/components/variables/catalogue.ts'
 import { useSheet } from '@/components/variables/context.ts'
 import { CouponsSheet } from './CouponsSheet.tsx'
 import { JointSheet } from '@/components/variables/JointSheet.tsx'
@@ -10,12 +10,11 @@ import { metalInWords } from '@/components/variables/labels.ts'
 import { ProcessSheets, type ProcessSheetsProps } from '@/components/variables/ProcessSheets.tsx'
 import { useProcedureContent } from './procedure-content.ts'
 import { ScopeSheet, Text } from './ScopeSheet.tsx'
-import { isShown, SheetField } from '@/components/variables/SheetField.tsx'
+import { isShown, SectionSheet, SheetField } from '@/components/variables/SheetField.tsx'
 
 /** The whole procedure as ruled sheets, in document order; typed in where the context has a form, read otherwise. */
 export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
-  const sheet = useSheet()
-  const { control } = sheet
+  const { control } = useSheet()
   const content = useProcedureContent()
   const { baseMetals, processes } = content.variables
   const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
@@ -27,14 +26,10 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
           <SheetField key={spec.path} spec={spec} />
         ))}
       </Sheet>
+      <SectionSheet section={APPLICATION} />
       <ProcessSheets blocks={processes} {...acts} />
-      {[PREHEAT, PWHT].filter(({ rows }) => rows.some((spec) => isShown(spec, '', null, sheet))).map((section) => (
-        <Sheet key={section.id} id={section.id} title={section.title}>
-          {section.rows.map((spec) => (
-            <SheetField key={spec.path} spec={spec} />
-          ))}
-        </Sheet>
-      ))}
+      <SectionSheet section={PREHEAT} />
+      <SectionSheet section={PWHT} />
       <CouponsSheet />
       <ScopeSheet />
       {(control || content.notes) && (
@@ -58,6 +53,7 @@ export function ProcedureNav({ verdicts, children }: { verdicts: ReadonlyMap<str
   const sections = [
     link('joint', 'Joint'),
     link('base-metals', 'Base metals'),
+    ...(APPLICATION.rows.some((spec) => isShown(spec, '', null, sheet)) ? [link('application', APPLICATION.short ?? APPLICATION.title)] : []),
     ...processes.flatMap((block, index) =>
       BLOCK_SECTIONS.filter(({ rows }) => rows.some((spec) => isShown(spec, `processes.${index}.`, block, sheet))).map(({ id, title }) => link(blockSectionId(index, id), processes.length === 1 ? title : `${index + 1} ${id === 'process' && block.process ? block.process : title}`)),
     ),

@@ -21,7 +21,7 @@ describe('placing findings', () => {
     expect(placed.get('processes.1.electrical.heatInput')).toHaveLength(1)
   })
   it('loses none: what has no row stands with the record, what points above rows at the first below', () => {
-    const stray = [{ ...one('thickness'), field: 'standards' }, { ...one('thickness'), field: 'preheat' }, { ...one('thickness'), field: 'variables.processes.0.filler.lot' }]
+    const stray = [{ ...one('thickness'), field: 'standards' }, { ...one('thickness'), field: 'preheat' }, { ...one('thickness'), field: 'variables.processes.0.filler.libraryId' }]
     const placed = placeFindings(stray, rows)
     expect([...placed.values()].flat()).toHaveLength(3)
     expect(placed.get(RECORD)).toHaveLength(1)
