@@ -12,6 +12,8 @@ export interface Job<D extends z.ZodType = z.ZodType> {
   /** Tries after the first; the wait doubles from `retryDelay` seconds. */
   retryLimit: number
   retryDelay: number
+  /** When it is to be done by itself, as cron says it, UTC; its data is then empty. */
+  schedule?: string
   /** Throws to be tried again. */
   run: (services: Services, data: z.output<D>) => Promise<void>
 }

@@ -41,7 +41,6 @@ export async function openQueue(database: Database, log: Log): Promise<Queue> {
   const boss = new PgBoss({
     db: { executeSql: (text: string, values: unknown[]) => database.owner.query(text, values) },
     schema: 'pgboss',
-    schedule: false,
     archiveCompletedAfterSeconds: 3600,
     deleteAfterDays: 7,
   })
@@ -59,6 +58,7 @@ export async function openQueue(database: Database, log: Log): Promise<Queue> {
         await boss.work(job.name, { batchSize: 1, pollingIntervalSeconds: POLL_SECONDS }, async ([next]) => {
           if (next) await perform(services, job, next.data)
         })
+        if (job.schedule) await boss.schedule(job.name, job.schedule, {}, { tz: 'UTC' })
       }
     },
     drain: async (services) => {

@@ -1,4 +1,5 @@
 import type { z } from 'zod'
+import { DUE_SOON_DAYS } from '@shared/machines/calibration.ts'
 import type { Role } from '@shared/schemas/people.ts'
 import type { todaySchema } from '@shared/schemas/records.ts'
 import type { Tenant } from '../config/database.ts'
@@ -43,6 +44,11 @@ const SOURCES: readonly Source[] = [
       from jobs j join job_joints t on t.organization_id = j.organization_id and t.job_id = j.id
       left join procedure_revisions r on r.organization_id = t.organization_id and r.id = t.revision_id
       where j.organization_id = $organizationId and r.state is distinct from 'approved' group by j.id`,
+  },
+  {
+    kind: 'calibration', roles: ['engineer', 'administrator'],
+    sql: `select m.number || ' ' || m.name as title, case when m.calibration_due_on < current_date then 'calibration lapsed on ' else 'calibration due on ' end || m.calibration_due_on as detail, '/machines/' || m.id || '#calibration' as href, m.updated_at as at
+      from machines m where m.organization_id = $organizationId and not m.retired and m.calibration_due_on <= current_date + ${DUE_SOON_DAYS}`,
   },
   { kind: 'invitation', roles: ['administrator'], sql: `select p.name as title, 'invited, not yet here: ' || p.email as detail, '/people' as href, p.created_at as at from people p where p.organization_id = $organizationId and p.state = 'invited'` },
   { kind: 'mail', roles: ['administrator'], sql: `select m.subject as title, coalesce(m.error, 'not sent') as detail, '/outbox/' || m.id as href, m.created_at as at from outbox_mails m where m.organization_id = $organizationId and m.state = 'failed'` },

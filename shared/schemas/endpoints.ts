@@ -6,6 +6,8 @@ import { z } from 'zod'
 import { assessedCouponSchema, assessmentRequestSchema, assessmentSchema } from './assessment.ts'
 import { idSchema, listQuery, pageOf, standardIdSchema, textOrNull } from './common.ts'
 import { byId, endpoint, sorts } from './endpoint.ts'
+import { arcDataEndpoints } from './endpoints-arc-data.ts'
+import { machineEndpoints } from './endpoints-machines.ts'
 import * as people from './people.ts'
 import * as records from './records.ts'
 import * as standards from './standards.ts'
@@ -78,6 +80,10 @@ export const endpoints = {
   createJob: endpoint({ method: 'post', path: '/jobs', action: 'jobs.manage', tag: 'Jobs', summary: 'Open a job', body: records.writeJobSchema, response: records.jobSchema, status: 201 }),
   readJob: endpoint({ method: 'get', path: '/jobs/:id', action: 'jobs.read', tag: 'Jobs', summary: 'A job and its joints', params: byId, response: records.jobSchema }),
   saveJob: endpoint({ method: 'put', path: '/jobs/:id', action: 'jobs.manage', tag: 'Jobs', summary: 'Save a job and its joints', params: byId, body: records.writeJobSchema, response: records.jobSchema, ifMatch: true }),
+
+  ...machineEndpoints,
+
+  ...arcDataEndpoints,
 
   listStandards: endpoint({ method: 'get', path: '/standards', action: 'standards.read', tag: 'Standards', summary: 'Standards whose rules are kept here', response: z.object({ items: z.array(standards.standardRowSchema) }) }),
   readStandard: endpoint({ method: 'get', path: '/standards/:id', action: 'standards.read', tag: 'Standards', summary: 'Every rule of a standard, and what is out of its scope here', params: z.object({ id: standardIdSchema }), response: standards.standardDetailSchema }),

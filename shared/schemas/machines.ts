@@ -91,6 +91,11 @@ const different = (message: string) => (rows: readonly { key: string }[], contex
   rows.forEach((row, index) => { if (rows.findIndex((other) => other.key === row.key) !== index) context.addIssue({ code: 'custom', path: [index, 'key'], message }) })
 }
 
+const accuracyPercent = z.number().positive().max(50, 'An accuracy worse than ± 50 % says nothing.').nullable().default(null)
+export const CALIBRATION_STATES = ['current', 'due-soon', 'lapsed', 'unknown'] as const
+export const calibrationStateSchema = z.enum(CALIBRATION_STATES)
+export type CalibrationState = z.infer<typeof calibrationStateSchema>
+
 export const writeMachineSchema = z
   .object({
     name: z.string().trim().min(1, 'Name the machine as the shop does, e.g. "Bay 2 pulse".').max(120),
@@ -102,7 +107,16 @@ export const writeMachineSchema = z
     /** Share of ten minutes at which the rated current can be held. */
     dutyCycle: z.object({ percent: z.number().min(1).max(100), current: z.number().positive() }).nullable().default(null),
     dataOutput: z.boolean().default(false),
-    calibration: z.object({ certificate: textOrNull(120), doneOn: z.iso.date().nullable().default(null), dueOn: z.iso.date().nullable().default(null), accuracyNote: textOrNull(200) }).prefault({}),
+    calibration: z
+      .object({
+        certificate: textOrNull(120),
+        doneOn: z.iso.date().nullable().default(null),
+        dueOn: z.iso.date().nullable().default(null),
+        accuracyNote: textOrNull(200),
+        /** What the certificate vouches for, as ± per cent of the reading; a card's range is narrowed by it. */
+        accuracy: z.object({ current: accuracyPercent, voltage: accuracyPercent, wireFeed: accuracyPercent }).prefault({}),
+      })
+      .prefault({}),
     retired: z.boolean().default(false),
     notes: textOrNull(4000),
     modes: z.array(machineModeSchema).max(20).default([]).superRefine(different('Two modes carry this key.')),
@@ -112,7 +126,7 @@ export type WriteMachine = z.infer<typeof writeMachineSchema>
 
 export const machineSchema = z.object({ id: idSchema, number: z.string(), version: z.number().int(), updatedAt: z.iso.datetime(), content: writeMachineSchema, may: z.array(z.string()) }).meta({ id: 'Machine' })
 export type Machine = z.infer<typeof machineSchema>
-export const machineRowSchema = z.object({ id: idSchema, number: z.string(), name: z.string(), location: z.string(), modes: z.array(z.object({ key: z.string(), name: z.string(), kind: modeKindSchema })), calibrationDueOn: z.iso.date().nullable(), calibration: z.enum(['current', 'due-soon', 'lapsed', 'unknown']), retired: z.boolean(), updatedAt: z.iso.datetime() }).meta({ id: 'MachineRow' })
+export const machineRowSchema = z.object({ id: idSchema, number: z.string(), name: z.string(), location: z.string(), modes: z.array(z.object({ key: z.string(), name: z.string(), kind: modeKindSchema })), calibrationDueOn: z.iso.date().nullable(), calibration: calibrationStateSchema, processes: z.array(processSchema), retired: z.boolean(), updatedAt: z.iso.datetime() }).meta({ id: 'MachineRow' })
 export type MachineRow = z.infer<typeof machineRowSchema>
 
 /** One line of a panel card, in the panel's own unit and steps; `min`/`max` are the approved range rounded inward. */
@@ -126,14 +140,15 @@ export const panelLineSchema = z
   })
   .meta({ id: 'PanelLine' })
 export type PanelLine = z.infer<typeof panelLineSchema>
+/** `refuse`: nothing may be dialled. `warn`: take care. `note`: good to know. */
 export const panelNoticeSchema = z.object({ level: z.enum(['refuse', 'warn', 'note']), code: z.string(), message: z.string(), basis: z.string().nullable().default(null) }).meta({ id: 'PanelNotice' })
 export type PanelNotice = z.infer<typeof panelNoticeSchema>
 
 /** An approved range turned into the settings of one machine; with any `refuse` notice no value may be dialled from it. */
 export const panelCardSchema = z
-  .object({ machine: z.string(), machineName: z.string(), mode: z.string(), modeName: z.string(), processId: z.string(), ready: z.boolean(), lines: z.array(panelLineSchema), mustMeasure: z.array(z.object({ quantity: panelQuantitySchema, text: z.string() })), notices: z.array(panelNoticeSchema) })
+  .object({ machine: z.string(), machineName: z.string(), mode: z.string(), modeName: z.string(), processId: z.string(), program: z.string().nullable().default(null), programLabel: z.string().nullable().default(null), pass: z.string().nullable().default(null), ready: z.boolean(), lines: z.array(panelLineSchema), mustMeasure: z.array(z.object({ quantity: panelQuantitySchema, text: z.string() })), notices: z.array(panelNoticeSchema) })
   .meta({ id: 'PanelCard' })
 export type PanelCard = z.infer<typeof panelCardSchema>
 
 /** Which machine, mode, process block and program a card is asked for. */
-export const panelQuerySchema = z.object({ machine: idSchema, mode: z.string().trim().min(1).max(40), process: z.string().trim().max(40).optional(), program: z.string().trim().max(40).optional() })
+export const panelQuerySchema = z.object({ machine: idSchema, mode: z.string().trim().min(1).max(40), process: z.string().trim().max(40).optional(), program: z.string().trim().max(40).optional(), /** Number of a pass that has ranges of its own. */ pass: z.string().trim().max(12).optional() })

@@ -75,6 +75,16 @@ const expected: Record<EndpointName, string> = {
   readJob: ALL,
   saveJob: 'es',
 
+  listMachines: ALL,
+  createMachine: 'ae',
+  readMachine: ALL,
+  saveMachine: 'ae',
+  listMachineFiles: ALL,
+  addMachineFiles: 'ae',
+  readMachineFile: ALL,
+  removeMachineFile: 'ae',
+  readPanelCard: ALL,
+
   listStandards: ALL,
   readStandard: ALL,
 
