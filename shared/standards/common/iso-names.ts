@@ -106,6 +106,21 @@ export function materialGroup(metal: BaseMetal): MaterialGroup | null {
   return { main: Number(match[1]), sub: match[2] === undefined ? null : Number(match[2]), text: match[0] }
 }
 
+/** How many sub-groups ISO/TR 15608 gives to each group; none of those that stand whole. */
+const SUB_GROUPS: ReadonlyMap<number, number> = new Map([[1, 4], [2, 2], [3, 3], [4, 2], [5, 4], [6, 4], [7, 3], [8, 3], [9, 3], [10, 3], [11, 3], [21, 0], [22, 4], [23, 2], [24, 2], [25, 0], [26, 0], [41, 0], [42, 0], [43, 0], [44, 0], [45, 0], [46, 0], [47, 0], [48, 0]])
+
+/** Whether ISO/TR 15608 parts this group into sub-groups. */
+export const hasSubGroups = (main: number): boolean => (SUB_GROUPS.get(main) ?? 0) > 0
+
+/** The first group of either member that is none of those wanted, or a sub-group that there is not; null where both fit or none is recorded. */
+export function strangeGroup(variables: WeldingVariables, wanted: (main: number) => boolean): string | null {
+  for (const metal of [variables.baseMetals.a, secondMember(variables)]) {
+    const group = materialGroup(metal)
+    if (group && !(wanted(group.main) && SUB_GROUPS.has(group.main) && (group.sub === null || (group.sub >= 1 && group.sub <= (SUB_GROUPS.get(group.main) ?? 0))))) return group.text
+  }
+  return null
+}
+
 /** The second member: itself, or the first where nothing is said of a second. */
 export function secondMember(variables: WeldingVariables): BaseMetal {
   const { a, b } = variables.baseMetals

@@ -33,7 +33,7 @@ export function energyBand(context: RangeContext, side: CouponSide, limit: (had:
   return { ...band, tested: had.mean, why: unsaid ? `${kindText(null).replace(/^h/, 'H')}: the process factor k may or may not be in the figures. ${band.why ?? ''}`.trim() : band.why, missing: unsaid ? [...(had.kind === null ? [`${side.coupon.number}: electrical.heatInputQuantity`] : []), ...(to === null ? ['procedure: electrical.heatInputQuantity'] : [])] : undefined }
 }
 
-export const asked = (context: RuleContext): Energy | null => {
+export const asked = (context: RangeContext): Energy | null => {
   const known = context.block ? energyOf(context.block) : null
   return known && !('missing' in known) ? known : null
 }

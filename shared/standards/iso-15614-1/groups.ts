@@ -1,7 +1,7 @@
 /** Table 5: which groups of ISO/TR 15608 a test joint covers, with its footnotes on yield and sub-group. */
 import type { BaseMetal, WeldingVariables } from '../../schemas/welding.ts'
 import type { Basis } from '../../schemas/assessment.ts'
-import { materialGroup, metalName, secondMember, siFigure, type MaterialGroup } from '../common/iso-names.ts'
+import { materialGroup, metalName, secondMember, siFigure, strangeGroup, type MaterialGroup } from '../common/iso-names.ts'
 
 interface Row { a: readonly number[]; b: readonly number[]; basis: Basis; review?: readonly number[] }
 
@@ -70,7 +70,14 @@ const YIELD: ReadonlySet<number> = new Set([1, 2, 3, 11])
 const LOWER_SUB: ReadonlySet<number> = new Set([4, 5, 6, 8, 9])
 const SAME_SUB: ReadonlySet<number> = new Set([7, 10])
 
-export interface Member { metal: BaseMetal; group: MaterialGroup }
+/** Steels and nickel alloys: the groups of this standard. */
+const isSteelOrNickel = (main: number): boolean => (main >= 1 && main <= 11) || (main >= 41 && main <= 48)
+
+/** A recorded group that is not of this standard, or no group at all; null where there is none. */
+export const foreignGroup = (variables: WeldingVariables): string | null => strangeGroup(variables, isSteelOrNickel)
+
+/** `place`: which member of the record it is; one metal for both stands as `a`. */
+export interface Member { metal: BaseMetal; group: MaterialGroup; place: 'a' | 'b' }
 
 /** Both members of a joint, the higher group first; null where a group isn't recorded. */
 export function members(variables: WeldingVariables): readonly [Member, Member] | null {
@@ -79,7 +86,7 @@ export function members(variables: WeldingVariables): readonly [Member, Member] 
   const a = materialGroup(first)
   const b = materialGroup(second)
   if (!a || !b) return null
-  const pair: [Member, Member] = [{ metal: first, group: a }, { metal: second, group: b }]
+  const pair: [Member, Member] = [{ metal: first, group: a, place: 'a' }, { metal: second, group: b, place: second === first ? 'a' : 'b' }]
   return a.main >= b.main ? pair : [pair[1], pair[0]]
 }
 
@@ -89,6 +96,9 @@ export const jointName = ([a, b]: readonly [Member, Member]): string => [a.group
 type Covered = 'yes' | 'no' | { unknown: string }
 const NO: Covered = 'no'
 
+/** What is not recorded: of the coupon's member, or of the procedure's where that is null. */
+const lacks = (tested: Member | null, asked: Member, field: string): Covered => ({ unknown: tested ? `coupon: baseMetals.${tested.place}.${field}` : `procedure: baseMetals.${asked.place}.${field}` })
+
 /** Footnotes a to c for one member in the place of a member of the test. */
 function footnote(asked: Member, tested: Member): Covered {
   const same = metalName(asked.metal)
@@ -96,12 +106,12 @@ function footnote(asked: Member, tested: Member): Covered {
   if (YIELD.has(asked.group.main)) {
     const limit = siFigure(tested.metal.minYield, 'stress')
     const own = siFigure(asked.metal.minYield, 'stress')
-    if (limit === null || own === null) return { unknown: own === null ? 'procedure: baseMetals.a.minYield' : 'coupon: baseMetals.a.minYield' }
+    if (limit === null || own === null) return lacks(own === null ? null : tested, asked, 'minYield')
     return own <= limit ? 'yes' : NO
   }
   if (asked.group.main !== tested.group.main) return 'yes'
-  if (asked.group.main >= 41) return 'yes'
-  if (asked.group.sub === null || tested.group.sub === null) return { unknown: asked.group.sub === null ? 'procedure: baseMetals.a.iso15608' : 'coupon: baseMetals.a.iso15608' }
+  if (asked.group.main >= 41) return asked.group.text === tested.group.text ? 'yes' : NO
+  if (asked.group.sub === null || tested.group.sub === null) return lacks(asked.group.sub === null ? null : tested, asked, 'iso15608')
   if (SAME_SUB.has(asked.group.main)) return asked.group.sub === tested.group.sub ? 'yes' : NO
   return LOWER_SUB.has(asked.group.main) && asked.group.sub <= tested.group.sub ? 'yes' : NO
 }
@@ -136,7 +146,9 @@ export function coversGroups(test: readonly [Member, Member], asked: readonly [M
   if (covered === 'yes') return { ...base, covered: 'yes' }
   if (covered !== 'no') return { ...base, covered: 'missing', missing: [covered.unknown] }
   const mains = asked.map(({ group }) => group.main)
-  const related = row.review ? mains.some((main) => row.a.includes(main)) && mains.every((main) => row.review?.includes(main)) && !mains.every((main) => test.some(({ group }) => group.main === main)) : !row.known && mains.some((main) => test.some(({ group }) => group.main === main))
+  // Of Table 6 only the same group is held: whatever else of nickel a nickel coupon may cover must be looked up.
+  const ofNickel = nickel && mains.some((main) => main >= 41)
+  const related = ofNickel || (row.review ? mains.some((main) => row.a.includes(main)) && mains.every((main) => row.review?.includes(main)) && !mains.every((main) => test.some(({ group }) => group.main === main)) : !row.known && mains.some((main) => test.some(({ group }) => group.main === main)))
   return { ...base, covered: related ? 'review' : 'no', basis: related ? 'memory' : row.basis }
 }
 

@@ -1,4 +1,5 @@
 /** ISO 15614-2: procedure tests for arc welding of aluminium; contents of the WPS by ISO 15609-1. */
+import { NOT_HELD } from '../common/iso-15609.ts'
 import type { Standard } from '../rule.ts'
 import { editions } from './editions.ts'
 import { PROCESSES } from './meta.ts'
@@ -18,6 +19,7 @@ export const iso15614Part2: Standard = {
     'beam, friction, resistance, stud and hybrid processes',
     'heat input: what the clause asks of it for aluminium is not held here',
     'material thickness of fillets, pipe covered by plate, and deposits beyond the tested one: not held here',
+    ...NOT_HELD,
     'whether the workshop stays under the manufacturer that ran the test (8.2)',
   ],
   rules,

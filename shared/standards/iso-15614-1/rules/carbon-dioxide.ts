@@ -1,12 +1,22 @@
 /** 8.5: carbon dioxide share of process 13. */
 import { between, closed, numericRange, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
 import type { GasMixture } from '../../../schemas/welding.ts'
+import { gasSymbol } from '../../common/iso-names.ts'
 import { tidy } from '../../common/reading.ts'
 import { bandRule } from '../../common/review-band.ts'
 import { levelTwoLimit } from '../levels.ts'
 import { meta } from '../meta.ts'
 
 const carbonDioxide = (gas: GasMixture | null): number | null => (gas && gas.components.length > 0 ? gas.components.reduce((sum, part) => sum + (part.gas === 'CO2' ? part.percent : 0), 0) : null)
+
+/** Symbols of ISO 14175 whose gas holds carbon dioxide beside another one. */
+const MIXED = /^(?:M12|M14|M2[0134567]|M3[13-5]|C2)$/
+
+/** The share must be told wherever the gas holds carbon dioxide, or may: a symbol alone gives no share. */
+const mayHold = (gas: GasMixture | null): boolean => {
+  const share = carbonDioxide(gas)
+  return share === null ? MIXED.test(gasSymbol(gas) ?? '') : share > 0
+}
 
 export const carbonDioxideShare = levelTwoLimit(
   bandRule({
@@ -16,7 +26,7 @@ export const carbonDioxideShare = levelTwoLimit(
     label: 'carbon dioxide content',
     dimension: 'percent',
     ends: { min: '.components', max: '.components' },
-    applies: (context) => (carbonDioxide(context.block?.shieldingGas ?? null) ?? 0) > 0,
+    applies: (context) => mayHold(context.block?.shieldingGas ?? null),
     asked(context) {
       const share = carbonDioxide(context.block?.shieldingGas ?? null)
       return share === null ? null : { min: share, max: share }

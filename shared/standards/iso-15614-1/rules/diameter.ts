@@ -7,7 +7,7 @@ import { isStated } from '../../common/reading.ts'
 import { bandRule, type Band } from '../../common/review-band.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule } from '../../rule.ts'
-import { levelOf } from '../levels.ts'
+import { freeAtLevelOne, levelOf } from '../levels.ts'
 import { meta } from '../meta.ts'
 import { diameterRange, mm, nothing } from '../tables.ts'
 
@@ -48,7 +48,7 @@ function diameterBand(context: RangeContext, side: CouponSide, which: 'a' | 'b')
 
 const build = (which: 'a' | 'b'): Rule => {
   const rule = bandRule({
-    meta: meta(which === 'a' ? 'diameter' : 'diameter-second', { title: which === 'a' ? 'Outside diameter' : 'Outside diameter of member B', clause: '8.3.3', basis: 'secondary', combine: 'union', statement: which === 'a' ? 'At level 2 a pipe covers half its diameter and up; plate covers pipe above 500 mm, above 150 mm where it turns in PA or PC; pipe covers plate. Of a hollow section that is not round the smaller side counts. Level 1 does not limit it.' : 'Branch and run pipe are each judged by their own diameter.' }),
+    meta: meta(which === 'a' ? 'diameter' : 'diameter-second', { title: which === 'a' ? 'Outside diameter' : 'Outside diameter of member B', clause: '8.3.3', basis: 'secondary', combine: 'union', statement: which === 'a' ? 'At level 2 a pipe covers half its diameter and up; where the edition of 2004 is narrower (at least 25 mm, and up to 25 mm at most twice the diameter) the figure must be looked up. Plate covers pipe above 500 mm, above 150 mm where it turns in PA or PC; pipe covers plate. Of a hollow section that is not round the smaller side counts. Level 1 does not limit it.' : 'Branch and run pipe are each judged by their own diameter.' }),
     field: which === 'a' ? 'diameter' : 'diameterB',
     at: 'weld',
     label: which === 'a' ? 'outside diameter' : 'outside diameter of member B',
@@ -58,7 +58,7 @@ const build = (which: 'a' | 'b'): Rule => {
     band: (context, side) => (which === 'b' && !isStated((context.procedure ?? side.variables).diameterB) ? null : diameterBand(context, side, which)),
     plan: (asked) => `A pipe coupon of at most ${asked.min === null ? 'the least diameter asked' : show(asked.min * 2, 'mm')} diameter.`,
   })
-  return rule
+  return freeAtLevelOne(rule, (context) => !isStated(which === 'a' ? context.procedure.diameter : context.procedure.diameterB))
 }
 
 export const diameter = build('a')

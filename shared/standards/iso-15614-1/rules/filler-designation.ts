@@ -12,7 +12,7 @@ const nameOf = (filler: Filler): string | null => {
 }
 
 export const fillerDesignation = nameBandRule({
-  meta: meta('filler-designation', { title: 'Filler designation', clause: '8.4.4', basis: 'secondary', statement: 'Another filler is covered where its standard designation tells equal mechanical properties, the same covering or core, the same nominal composition and the same or lower hydrogen. Level 1 groups fillers by a table that is not held here, so there only the same designation is sure.' }),
+  meta: meta('filler-designation', { title: 'Filler designation', clause: '8.4.4', basis: 'secondary', statement: 'Another filler is covered where its standard designation tells equal mechanical properties, the same covering or core, the same nominal composition and the same or lower hydrogen; the basic coverings of AWS (15, 16, 18, 48) count as one. Level 1 groups fillers by a table that is not held here, so there only the same designation is sure.' }),
   field: 'filler.classification',
   at: 'block',
   label: 'filler designation',

@@ -3,7 +3,7 @@ import { siSingle } from '../../common/iso-names.ts'
 import { bandRule, type Band } from '../../common/review-band.ts'
 import { show } from '../../common/wording.ts'
 import type { CouponSide, RangeContext } from '../../rule.ts'
-import { levelOf } from '../levels.ts'
+import { freeAtLevelOne, levelOf } from '../levels.ts'
 import { meta } from '../meta.ts'
 import { askedVariables, depositOf, runsOf, throatOf } from '../sides.ts'
 import { mm, nothing, throatRange } from '../tables.ts'
@@ -26,8 +26,8 @@ function throatBand(context: RangeContext, side: CouponSide): Band | null {
   return { sure: reading.sure, maybe: reading.maybe, tested: a, reason: `${from}: ${reading.how} by Table 8.`, why: reading.why, clause, basis: 'memory' }
 }
 
-export const filletThroat = bandRule({
-  meta: meta('fillet-throat', { title: 'Fillet throat', clause: '8.3.2 Table 8', basis: 'memory', combine: 'union', statement: 'At level 2 a single-run fillet covers throats from 0.75 to 1.5 times the tested one; several runs are not limited. A butt coupon stands for the fillet with its deposited thickness. Level 1 does not limit it.' }),
+const limited = bandRule({
+  meta: meta('fillet-throat', { title: 'Fillet throat', clause: '8.3.2 Table 8', basis: 'memory', combine: 'union', statement: 'At level 2 a single-run fillet covers throats from 0.75 to 1.5 times the tested one; several runs are not limited. A butt coupon stands for the fillet with its deposited thickness. From 30 mm material only the tested throat is sure. Level 1 does not limit it.' }),
   field: 'joint.filletThroat',
   at: 'weld',
   label: 'fillet throat',
@@ -36,3 +36,5 @@ export const filletThroat = bandRule({
   asked: (context) => throatOf(context.procedure),
   band: throatBand,
 })
+
+export const filletThroat = freeAtLevelOne(limited, (context) => throatOf(context.procedure) === null)

@@ -6,7 +6,7 @@ import { meta } from '../meta.ts'
 
 /** A coupon proves hardness only with hardness tests. */
 export const hardnessTests: Rule = {
-  meta: meta('hardness-tests', { title: 'Hardness tests', clause: '7.4.5', basis: 'memory', statement: 'Where hardness is required, a supporting coupon carries hardness tests; parents in groups 1.1, 8 and 41 to 48 need none of their own at level 2.' }),
+  meta: meta('hardness-tests', { title: 'Hardness tests', clause: '7.4.5', basis: 'memory', statement: 'Where hardness is required, a supporting coupon carries hardness tests. Whether it is required is taken from the procedure; that level 2 asks hardness tests of the test piece, save of groups 1.1, 8 and 41 to 48, is checked when a coupon is certified.' }),
   field: 'hardnessRequired',
   at: 'weld',
   label: 'Hardness tests',

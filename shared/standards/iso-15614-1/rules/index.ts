@@ -18,6 +18,7 @@ import { fluxMake } from './flux.ts'
 import { hardnessTests } from './hardness-tests.ts'
 import { heatInputMaximum } from './heat-input-maximum.ts'
 import { heatInputMinimum } from './heat-input-minimum.ts'
+import { impactTests } from './impact-tests.ts'
 import { initialHeatTreatment } from './initial-heat-treatment.ts'
 import { interpass } from './interpass.ts'
 import { jointType } from './joint-type.ts'
@@ -66,6 +67,7 @@ export const rules: readonly Rule[] = [
   heatInputMaximum,
   heatInputMinimum,
   waveformControl,
+  impactTests,
   hardnessTests,
   preheat,
   interpass,

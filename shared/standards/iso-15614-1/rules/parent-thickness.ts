@@ -11,17 +11,19 @@ import { askedVariables, memberOf, testThickness } from '../sides.ts'
 import { filletThickness, mm } from '../tables.ts'
 import { noThickness, buttBand } from '../thickness-bands.ts'
 
-/** Table 8 for the material of a fillet; a butt coupon stands with its own thickness. Two test members: what both give is sure. */
-function filletBand(context: RangeContext, side: CouponSide): Band {
+/** Table 8 for the material of a fillet; a butt coupon stands with its own thickness. Of two unequal members each is held to its match, thin to thin. */
+function filletBand(context: RangeContext, side: CouponSide, which: 'a' | 'b'): Band {
   if (levelOf(context) === '1') return { sure: mm(null, null), maybe: mm(null, null), tested: siSingle(side.variables.thickness, 'length'), reason: 'Level 1 does not limit the material thickness of fillets.', clause: '8.3.2 Table 8', basis: 'memory' }
   const first = siSingle(side.variables.thickness, 'length')
   const second = isStated(side.variables.thicknessB) ? siSingle(side.variables.thicknessB, 'length') : first
   if (first === null || second === null) return noThickness(side)
   const a = filletThickness(first)
   const b = filletThickness(second)
-  const sure = intersectNumeric(a.sure, b.sure)
+  const member = memberOf(context.procedure, which)
+  const match = first === second || member === 'single' ? null : (member === 'thin') === (first < second) ? a : b
+  const sure = match ? match.sure : intersectNumeric(a.sure, b.sure)
   const unequal = first === second ? undefined : 'The coupon\'s two members differ; a thickness that only one of them covers must be looked up.'
-  return { sure, maybe: unionNumeric(a.maybe, b.maybe), tested: first, reason: `t = ${show(first, 'mm')}${first === second ? '' : ` and ${show(second, 'mm')}`}: ${a.how} by Table 8.`, why: unequal ?? a.why, clause: '8.3.2 Table 8', basis: 'memory' }
+  return { sure, maybe: unionNumeric(a.maybe, b.maybe), tested: match === b ? second : first, reason: `t = ${show(first, 'mm')}${first === second ? '' : ` and ${show(second, 'mm')}`}: ${(match ?? a).how} by Table 8.`, why: unequal ?? a.why, clause: '8.3.2 Table 8', basis: 'memory' }
 }
 
 const FREE_THICKER = 30
@@ -29,7 +31,7 @@ const FREE_THICKER = 30
 function parentBand(context: RangeContext, side: CouponSide, which: 'a' | 'b'): Band | null {
   if (which === 'b' && !isStated(context.procedure?.thicknessB)) return null
   const asked = askedVariables(context, side).joint.weld
-  if (asked === 'fillet') return filletBand(context, side)
+  if (asked === 'fillet') return filletBand(context, side, which)
   if (side.variables.joint.weld === 'fillet') return null
   const band = buttBand(context, side)
   const t = testThickness(side.variables)
@@ -46,7 +48,7 @@ const build = (which: 'a' | 'b'): Rule =>
       clause: '8.3.2',
       basis: 'memory',
       combine: 'union',
-      statement: which === 'a' ? 'Butt welds by Table 7: at level 2 by rows of the test thickness for one run or several, at level 1 by wider rows; 12 mm at most where impact values are required and the coupon has none. Fillets by Table 8 at level 2, without limit at level 1.' : 'Of two unequal members the thinner is in range; the thicker too, unless the test piece was 30 mm or more.',
+      statement: which === 'a' ? 'Butt welds by Table 7: at level 2 by rows of the test thickness for one run or several, at level 1 by wider rows; 12 mm at most where impact values are required and the coupon has none. Where the editions are recalled differently, and at the row limits of level 1, the figure must be looked up. Fillets by Table 8 at level 2, without limit at level 1.' : 'Of two unequal members the thinner is in range; the thicker too, unless the test piece was 30 mm or more. Of a fillet each member is held to its match on the coupon, thin to thin.',
     }),
     field: which === 'a' ? 'thickness' : 'thicknessB',
     at: 'weld',

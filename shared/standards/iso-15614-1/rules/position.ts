@@ -1,7 +1,8 @@
 /** 8.4.2: welding position; any covers any at level 1, and at level 2 where neither impact nor hardness is required, save downwards. */
 import { setRange } from '../../../ranges/set.ts'
 import type { AssessedCoupon } from '../../../schemas/assessment.ts'
-import { DOWNWARD, hasHardnessTests, hasImpactTests, isoPositions } from '../../common/iso-names.ts'
+import type { WeldingVariables } from '../../../schemas/welding.ts'
+import { DOWNWARD, hasHardnessTests, hasImpactTests, isoPositions, materialGroup, secondMember } from '../../common/iso-names.ts'
 import { nameBandRule, type NameBand } from '../../common/review-band.ts'
 import { list } from '../../common/wording.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext, RuleVerdict } from '../../rule.ts'
@@ -13,6 +14,9 @@ const UPWARD = ['PA', 'PB', 'PC', 'PD', 'PE', 'PF', 'PH', 'PK', 'H-L045']
 const HIGH = 'PF'
 const LOW = 'PC'
 const BOTH: readonly string[] = ['PH', 'H-L045']
+
+/** Duplex: both extremes carry both kinds of test (recalled). */
+const isDuplex = (variables: WeldingVariables): boolean => [variables.baseMetals.a, secondMember(variables)].some((metal) => materialGroup(metal)?.main === 10)
 
 interface Needs { impact: boolean | null; hardness: boolean | null }
 
@@ -35,9 +39,10 @@ function covers(tested: readonly string[], context: RangeContext, coupon: Assess
   const high = tested.includes(HIGH) && hasImpactTests(coupon.content)
   const low = tested.includes(LOW) && hasHardnessTests(coupon.content)
   const both = tested.some((position) => BOTH.includes(position))
-  const enough = (impact !== true || high) && (hardness !== true || low)
+  const duplex = isDuplex(context.procedure ?? coupon.content.variables)
+  const enough = !duplex && (impact !== true || high) && (hardness !== true || low)
   if (enough && impact !== null && hardness !== null) return { sure: free, basis: 'secondary' }
-  const wanted = [...(impact === true ? ['impact specimens from the position of highest heat input (on plate usually PF)'] : []), ...(hardness === true ? ['hardness from the one of lowest (usually PC)'] : [])].join(' and ')
+  const wanted = duplex ? 'impact and hardness tests of both, the position of highest and that of lowest heat input (group 10)' : [...(impact === true ? ['impact specimens from the position of highest heat input (on plate usually PF)'] : []), ...(hardness === true ? ['hardness from the one of lowest (usually PC)'] : [])].join(' and ')
   return { sure: tested, maybe: free, basis: 'secondary', why: `Other positions are covered only with ${wanted}${both ? '; a fixed pipe can supply both, if the specimens were taken there' : ''}.`, missing: [...(impact === null ? ['procedure: toughnessRequired'] : []), ...(hardness === null ? ['procedure: hardnessRequired'] : []), 'which position of the test had the highest and which the lowest heat input'] }
 }
 
@@ -47,14 +52,16 @@ function together(context: RuleContext, sides: readonly CouponSide[]): RuleVerdi
   if (sides.length < 2 || !block || levelOf(context) === '1' || context.toughness !== true || procedure.hardnessRequired !== true) return null
   const asked = isoPositions(procedure, block)
   const has = (symbol: string, tested: (content: AssessedCoupon['content']) => boolean): CouponSide | undefined => sides.find((side) => side.block && isoPositions(side.variables, side.block)?.includes(symbol) && tested(side.coupon.content))
-  const high = has(HIGH, hasImpactTests)
-  const low = has(LOW, hasHardnessTests)
+  const duplex = isDuplex(procedure)
+  const bothTests = (content: AssessedCoupon['content']): boolean => hasImpactTests(content) && hasHardnessTests(content)
+  const high = has(HIGH, duplex ? bothTests : hasImpactTests)
+  const low = has(LOW, duplex ? bothTests : hasHardnessTests)
   if (!asked || !high || !low || !asked.every((symbol) => UPWARD.includes(symbol))) return null
   return { verdict: 'within', sentence: `${list(asked)} is covered: ${high.coupon.number} was tested for impact in ${HIGH} and ${low.coupon.number} for hardness in ${LOW}.`, asked, range: setRange(UPWARD), basis: 'secondary' }
 }
 
 const base = nameBandRule({
-  meta: meta('position', { title: 'Welding position', clause: '8.4.2', basis: 'memory', combine: 'jointly', statement: 'Level 1: any position covers all. Level 2: any covers all but PG, PJ and J-L045 where neither impact nor hardness is required; with impact the specimens come from the position of highest heat input, with hardness from the lowest, usually PF and PC on plate.' }),
+  meta: meta('position', { title: 'Welding position', clause: '8.4.2', basis: 'memory', combine: 'jointly', statement: 'Level 1: any position covers all. Level 2: any covers all but PG, PJ and J-L045 where neither impact nor hardness is required; with impact the specimens come from the position of highest heat input, with hardness from the lowest, usually PF and PC on plate; of group 10 both tests come from both. Whether hardness is required is taken from the procedure.' }),
   field: 'positions',
   at: 'block',
   label: 'position',

@@ -10,7 +10,7 @@ const sequence = (variables: WeldingVariables): string[] => variables.processes.
 
 /** Judged once for the weld, by all linked coupons: a coupon of several processes keeps their order. */
 export const processOrder: Rule = {
-  meta: meta('process-order', { title: 'Order of processes', clause: '8.4.1', basis: 'memory', scope: 'weld', withoutCoupon: true, statement: 'Several processes in one joint are covered by one combined test in the same order, or by a separate test of each, every one within its own deposit.' }),
+  meta: meta('process-order', { title: 'Order of processes', clause: '8.4.1', basis: 'memory', scope: 'weld', withoutCoupon: true, statement: 'Several processes in one joint are covered by one combined test in the same order, or by a separate test of each, every one within its own deposit. One process of a combined test may stand alone if its part was tested as the standard asks, which a record does not tell.' }),
   field: 'processes',
   at: 'weld',
   label: 'Order of processes',

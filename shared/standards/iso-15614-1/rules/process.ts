@@ -9,7 +9,7 @@ import { meta } from '../meta.ts'
 
 const numbered = levelTwoLimit(
   nameBandRule({
-    meta: meta('process', { title: 'Welding process', clause: '8.4.1', basis: 'memory', withoutCoupon: true, statement: 'A process is covered only by a coupon of the same ISO 4063 number, which follows from the process, the filler form and the gas; each variant of process 12 and autogenous TIG stand apart.' }),
+    meta: meta('process', { title: 'Welding process', clause: '8.4.1', basis: 'memory', withoutCoupon: true, statement: 'A process is covered only by a coupon of the same ISO 4063 number, which follows from the process, the filler form and the gas; each variant of process 12 and autogenous TIG stand apart. At level 1 a change of number within one process must be looked up.' }),
     field: 'process',
     at: 'block',
     label: 'ISO 4063 process',

@@ -8,10 +8,11 @@ const TRANSFER: Readonly<Record<string, readonly string[]>> = { 'short-circuitin
 
 export const transferMode = levelTwoLimit(
   nameBandRule({
-    meta: meta('transfer-mode', { title: 'Transfer mode', clause: '8.5', basis: 'memory', processes: ['GMAW'], statement: 'With solid and metal-cored wire short-circuiting covers itself only; spray and globular cover each other. A change to or from pulsed transfer must be looked up.' }),
+    meta: meta('transfer-mode', { title: 'Transfer mode', clause: '8.5', basis: 'memory', processes: ['GMAW', 'FCAW'], statement: 'With solid and metal-cored wire short-circuiting covers itself only; spray and globular cover each other. A change to or from pulsed transfer must be looked up.' }),
     field: 'electrical.transferMode',
     at: 'block',
     label: 'transfer mode',
+    applies: ({ block }) => (block?.process === 'GMAW' ? block.filler.productForm !== 'flux-cored' : block?.filler.productForm === 'metal-cored'),
     asked: (context) => named(context.block?.electrical.transferMode ?? null),
     tested: (_context, side) => named(side.block?.electrical.transferMode ?? null),
     covers([value = '']) {
