@@ -10,7 +10,7 @@ import type { AssessedCoupon, Finding, Fix, QualifiedRange, QualifiedSpan, Varia
 import { weakest } from '../standards/common/rule-kinds.ts'
 import { capital, distinct, list, names } from '../standards/common/wording.ts'
 import type { CouponSide, Rule, RuleContext, RuleVerdict, Standard } from '../standards/rule.ts'
-import { coversAlone, gridOf, rangeOf as keptRangeOf, sidesOf, type Grid, type KeptRange, type KeptSide } from './kept.ts'
+import { coversAlone, gridOf, rangeOf as keptRangeOf, sidesOf, type Grid, type KeptFinding, type KeptRange, type KeptSide } from './kept.ts'
 import { effectiveClass, fieldOf, type PreparedEdition, type PreparedRule } from './prepare.ts'
 
 export interface BlockJudgement { findings: Finding[]; ranges: QualifiedRange[] }
@@ -262,6 +262,28 @@ function pushRange(run: Run, item: Item, side: Linked): void {
 
 function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Judged, note: string | null): void {
   if (!judged) return
+  // What is within and was judged by the very same verdict and ranges is told as it was told last.
+  const first = judged.verdict === 'within' && sides[0] ? rangeOf(run, item, sides[0]) : null
+  if (first?.finding && isSame(run, item, sides, judged, note, first.finding)) {
+    run.out.findings.push(first.finding.finding)
+    return
+  }
+  const finding = findingOf(run, item, sides, judged, note)
+  run.out.findings.push(finding)
+  if (first) first.finding = { finding, judged, note, ranges: sides.map((side) => rangeOf(run, item, side)) }
+}
+
+function isSame(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict, note: string | null, { finding, judged: before, note: noted, ranges }: KeptFinding): boolean {
+  const { block } = run.context
+  if (before !== judged || noted !== note || ranges.length !== sides.length || finding.class !== (judged.class ?? item.class) || finding.field !== (judged.field ?? item.field) || finding.processId !== (block === null ? null : block.id)) return false
+  for (let i = 0; i < sides.length; i += 1) {
+    const side = sides[i]
+    if (!side || ranges[i] !== rangeOf(run, item, side)) return false
+  }
+  return true
+}
+
+function findingOf(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict, note: string | null): Finding {
   const { context } = run
   const { rule } = item
   const { meta } = rule
@@ -270,7 +292,7 @@ function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Jud
   const fixes: Fix[] = judged.fixes ? [...judged.fixes] : []
   if (tentative) fixes.unshift({ kind: 'state', label: 'State whether toughness is required', field: 'toughnessRequired' })
   if (verdict !== 'within' && run.others.length > 0 && item.class !== 'nonessential') offerOthers(run, item, fixes)
-  run.out.findings.push({
+  return {
     ruleId: meta.id,
     standard: run.standard.id,
     edition: context.edition,
@@ -290,7 +312,7 @@ function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Jud
     basis: judged.basis ? weakest(judged.basis, item.prepared.classBasis) : item.prepared.classBasis,
     source: meta.source,
     reasoning: stepsOf(run, item, sides, judged, note),
-  })
+  }
 }
 
 const idOf = (side: CouponSide): string => side.coupon.id

@@ -54,8 +54,8 @@ export function contradictions(variables: WeldingVariables, welded = false): Con
     order(found, `${at}.electrical.wireFeed`, 'Wire feed speed', e.wireFeed, block.id, true)
     order(found, `${at}.electrical.heatInput`, 'Heat input', e.heatInput, block.id, true)
     const deposit = block.depositThickness?.max ?? block.depositThickness?.min
-    const thickest = thickestMember(variables)
-    if (welded && deposit && thickest !== null && variables.joint.weld === 'groove' && variables.joint.work == null && deposit.si > thickest) found.push({ field: `${at}.depositThickness`, processId: block.id, sentence: `Deposit thickness ${deposit.typed} is more than the thickness of the metal that it joins.` })
+    const thickest = welded && deposit ? thickestMember(variables) : null
+    if (deposit && thickest !== null && variables.joint.weld === 'groove' && variables.joint.work == null && deposit.si > thickest) found.push({ field: `${at}.depositThickness`, processId: block.id, sentence: `Deposit thickness ${deposit.typed} is more than the thickness of the metal that it joins.` })
     if (block.maxPassThickness && block.maxPassThickness.si < 0) found.push({ field: `${at}.maxPassThickness`, processId: block.id, sentence: `Pass thickness ${block.maxPassThickness.typed} is negative.` })
   }
   return found

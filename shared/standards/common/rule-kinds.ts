@@ -95,7 +95,21 @@ const asItIs = (name: string): string => name
 /** What of a rule's wording is the same each time. */
 interface Words { display: (name: string) => string; label: string; because: readonly string[] }
 
+/** One coupon's range and the name that it was last asked for: mostly it is asked for the same again. */
+interface KeptWithin { rule: string; number: string; name: string; verdict: RuleVerdict }
+const lastWithin = new WeakMap<QualifiedSpan, KeptWithin>()
+
 function judgeNames(spec: NamedSpec, words: Words, context: RuleContext, sides: readonly CouponSide[], joined: QualifiedSpan, asked: readonly string[]): RuleVerdict {
+  const number = sides.length === 1 && sides[0] ? sides[0].coupon.number : null
+  const name = asked.length === 1 && asked[0] !== undefined ? asked[0] : null
+  const kept = number === null || name === null ? undefined : lastWithin.get(joined)
+  if (kept?.name === name && kept.number === number && kept.rule === spec.meta.id) return kept.verdict
+  const judged = judgeNamesAnew(spec, words, context, sides, joined, asked)
+  if (number !== null && name !== null && judged.verdict === 'within') lastWithin.set(joined, { rule: spec.meta.id, number, name, verdict: judged })
+  return judged
+}
+
+function judgeNamesAnew(spec: NamedSpec, words: Words, context: RuleContext, sides: readonly CouponSide[], joined: QualifiedSpan, asked: readonly string[]): RuleVerdict {
   const { display } = words
   if (joined.type !== 'set') throw new TypeError(`${spec.meta.id} compares names`)
   const verdict = containsNames(joined, asked)

@@ -2,7 +2,7 @@
 import type { ProcessBlock, WeldingVariables } from '../../../schemas/welding.ts'
 import { isStated } from '../../common/reading.ts'
 import { notStated } from '../../common/wording.ts'
-import type { Rule } from '../../rule.ts'
+import type { Rule, RuleVerdict } from '../../rule.ts'
 import { pathOf } from '../../common/rule-kinds.ts'
 import { meta } from '../meta.ts'
 import type { Paragraph } from '../variables.ts'
@@ -66,7 +66,7 @@ const ROWS: readonly Row[] = [
 /** The thing itself, for a sentence: "none" is one way of stating it. */
 const plain = (label: string): string => label.replace(/, or none$/, '')
 
-const build = (row: Row, stated = `The procedure states the ${plain(row.label)}; no coupon limits it.`): Rule => ({
+const build = (row: Row, stated: RuleVerdict = { verdict: 'within', sentence: `The procedure states the ${plain(row.label)}; no coupon limits it.`, asked: null, range: null, tested: [] }): Rule => ({
   meta: meta(row.paragraph, row.file, { withoutCoupon: true }),
   field: row.field,
   at: row.at,
@@ -77,7 +77,7 @@ const build = (row: Row, stated = `The procedure states the ${plain(row.label)};
     const { procedure, block } = context
     if (!block || (row.applies && !row.applies(procedure, block))) return null
     if (!row.stated(procedure, block)) return notStated(plain(row.label), pathOf(context, row), { fixes: [{ kind: 'state', label: `State the ${row.label}`, field: pathOf(context, row) }] })
-    return { verdict: 'within', sentence: stated, asked: null, range: null, tested: [] }
+    return stated
   },
 })
 
