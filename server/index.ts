@@ -12,7 +12,8 @@ const services = await openServices(env)
 const { log } = services
 let draining = false
 const server = createServer(createApp(services, { isDraining: () => draining }))
-server.requestTimeout = 120_000
+// A large recording over a slow line takes minutes; headers must come at once all the same.
+server.requestTimeout = 600_000
 server.headersTimeout = 20_000
 
 await new Promise<void>((resolve, reject) => {

@@ -13,6 +13,8 @@ const envSchema = z.object({
   /** Opens the organization's signing certificate; generated with the other secrets. */
   SIGNING_PASSPHRASE: z.string().min(16, 'SIGNING_PASSPHRASE wants at least 16 characters: npm start makes one.'),
   DATA_DIR: z.string().default('.data'),
+  /** Largest recording of volts and amperes that is taken, MB. */
+  ARC_DATA_MAX_MB: z.coerce.number().min(1).max(10_000).default(1024),
   SMTP_URL: z.string().optional(),
   MAIL_FROM: z.string().default('Sidebend <no-reply@sidebend.example>'),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),

@@ -18,7 +18,7 @@ const receiving = new WeakMap<Request, string>()
 export const filesOf = (req: Request): UploadedFile[] => uploaded.get(req) ?? []
 
 /** A name as shown and kept: no folders, no control characters, not endless. */
-function cleanName(name: string): string {
+export function cleanName(name: string): string {
   const bare = (name.split(/[\\/]/).at(-1) ?? '').replace(/\p{Cc}|\p{Cf}/gu, '').trim()
   return bare.length > 160 ? `${bare.slice(0, 120)}…${bare.slice(-30)}` : bare || 'without a name'
 }

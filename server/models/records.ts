@@ -1,4 +1,5 @@
 import { bindAttachment } from './attachment.ts'
+import { bindArcRecording } from './arc-recording.ts'
 import { bindCoupon } from './coupon.ts'
 import { bindJobJoint } from './job-joint.ts'
 import { bindJob } from './job.ts'
@@ -10,4 +11,4 @@ import { bindReleasedDocument } from './released-document.ts'
 import { bindSignature } from './signature.ts'
 
 /** The models of the records, for `bindModels`. */
-export const recordBinders = [bindProcedure, bindProcedureRevision, bindCoupon, bindPhoto, bindSignature, bindReleasedDocument, bindJob, bindJobJoint, bindMachine, bindAttachment]
+export const recordBinders = [bindProcedure, bindProcedureRevision, bindCoupon, bindPhoto, bindSignature, bindReleasedDocument, bindJob, bindJobJoint, bindMachine, bindAttachment, bindArcRecording]

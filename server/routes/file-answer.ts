@@ -1,3 +1,4 @@
+import { Readable, pipeline } from 'node:stream'
 import type { Response } from 'express'
 
 /** A name that is safe in a header; the browser takes the UTF-8 form. */
@@ -5,7 +6,9 @@ const disposition = (how: 'inline' | 'attachment', name: string): string =>
   `${how}; filename="${name.replace(/[^\w. -]/g, '_')}"; filename*=UTF-8''${encodeURIComponent(name).replace(/['()*]/g, (sign) => `%${sign.charCodeAt(0).toString(16).toUpperCase()}`)}`
 
 export interface FileFacts {
-  bytes: Buffer
+  /** A stream for what is too large to hold; `length` then says how long it is. */
+  bytes: Buffer | Readable
+  length?: number
   mediaType: string
   name: string
   how: 'inline' | 'attachment'
@@ -24,7 +27,7 @@ export class FileAnswer {
   }
 
   send(res: Response): void {
-    const { bytes, mediaType, name, how, sha256 } = this.facts
+    const { bytes, length, mediaType, name, how, sha256 } = this.facts
     res.set({
       'Content-Type': mediaType,
       'Content-Disposition': disposition(how, name),
@@ -34,6 +37,17 @@ export class FileAnswer {
       'Cache-Control': 'private, no-cache',
       ...(sha256 && { ETag: `"${sha256}"` }),
     })
-    res.send(bytes)
+    if (!(bytes instanceof Readable)) {
+      res.send(bytes)
+      return
+    }
+    if (res.req.fresh) {
+      bytes.destroy()
+      res.status(304).end()
+      return
+    }
+    if (length !== undefined) res.set('Content-Length', String(length))
+    // A reader who leaves in the middle is no fault; one whom the disk fails sees the connection end short.
+    pipeline(bytes, res, () => undefined)
   }
 }

@@ -1,3 +1,4 @@
+import type { Readable } from 'node:stream'
 import type { Request, Response, Router } from 'express'
 import { z } from 'zod'
 import type { Endpoint } from '../../shared/schemas/endpoint.ts'
@@ -18,6 +19,10 @@ export interface Storage {
   put: (key: string, bytes: Uint8Array) => Promise<void>
   /** @throws StoredFileMissing when there is no such file */
   get: (key: string) => Promise<Buffer>
+  /** Keeps what the source yields, as `put` does, without holding it in memory; when the source throws, nothing is kept. */
+  putStream: (key: string, source: AsyncIterable<Uint8Array>) => Promise<void>
+  /** The file as a stream. @throws StoredFileMissing when there is no such file */
+  open: (key: string) => Promise<Readable>
   /** Removing what is not there is no error. */
   remove: (key: string) => Promise<void>
 }

@@ -85,6 +85,14 @@ const expected: Record<EndpointName, string> = {
   removeMachineFile: 'ae',
   readPanelCard: ALL,
 
+  listArcRecordings: ALL,
+  addArcRecording: 'eisw',
+  readArcRecording: ALL,
+  plotArcRecording: ALL,
+  attachArcRecording: 'eisw',
+  readArcFile: ALL,
+  removeArcRecording: 'eisw',
+
   listStandards: ALL,
   readStandard: ALL,
 

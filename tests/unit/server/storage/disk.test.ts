@@ -1,4 +1,4 @@
-import { mkdtemp, readdir, rm } from 'node:fs/promises'
+import { mkdtemp, readdir, readFile, rm } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import path from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
@@ -26,6 +26,22 @@ describe('disk storage', () => {
     expect(await readdir(path.join(root, 'files/org-2/documents'))).toEqual(['b.pdf'])
   })
 
+  it('keeps a stream and gives one back; a source that throws leaves nothing', async () => {
+    await storage.putStream('org-3/arc-data/a.csv', (async function* () {
+      for (let at = 0; at < 5; at++) yield Promise.resolve(Buffer.from(`${at};`))
+    })())
+    expect(await readFile(path.join(root, 'files/org-3/arc-data/a.csv'), 'utf8')).toBe('0;1;2;3;4;')
+    const pieces: Buffer[] = []
+    for await (const piece of await storage.open('org-3/arc-data/a.csv')) pieces.push(piece as Buffer)
+    expect(Buffer.concat(pieces).toString()).toBe('0;1;2;3;4;')
+    await expect(storage.putStream('org-3/arc-data/b.csv', (async function* () {
+      yield Promise.resolve(Buffer.from('half'))
+      throw new Error('row 7')
+    })())).rejects.toThrow('row 7')
+    expect(await readdir(path.join(root, 'files/org-3/arc-data'))).toEqual(['a.csv'])
+    await expect(storage.open('org-3/arc-data/b.csv')).rejects.toThrow(StoredFileMissing)
+  })
+
   it('says which key is missing, and removes without complaint', async () => {
     await storage.put('org-1/c.pdf', Buffer.from('x'))
     await storage.remove('org-1/c.pdf')
@@ -37,5 +53,6 @@ describe('disk storage', () => {
     await expect(storage.put(key, Buffer.from('x'))).rejects.toThrow(RangeError)
     await expect(storage.get(key)).rejects.toThrow(RangeError)
     await expect(storage.remove(key)).rejects.toThrow(RangeError)
+    await expect(storage.open(key)).rejects.toThrow(RangeError)
   })
 })
