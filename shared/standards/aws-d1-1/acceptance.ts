@@ -30,6 +30,9 @@ export interface BendJudgement extends Judged {
   disregarded: boolean
 }
 
+/** 180° (memory), less what the specimen springs back. */
+const FULL_BEND = 170
+
 /** Corner cracks first, then single size and sum of the others on the convex face (read 2015, 4.9.3.3). */
 export function bendJudgement(test: BendTest, system: UnitSystem): BendJudgement {
   const f = FIGURES[system]
@@ -49,6 +52,7 @@ export function bendJudgement(test: BendTest, system: UnitSystem): BendJudgement
   if (unsure) return told('cannot-tell', `has a corner crack of ${show(unsure.size, unit)}; whether it comes from slag or another fusion flaw decides, and isn't recorded.`)
   const plain = corners.find(({ size }) => size > f.corner)
   if (plain) return told('cannot-tell', `has a corner crack of ${show(plain.size, unit)} without slag or fusion flaw: the specimen is disregarded and a replacement from the same weld is tested.`, true)
+  if (test.angle && test.angle.si < FULL_BEND) return told('cannot-tell', `was bent to ${show(test.angle.si, '°')} only; a bend of 180° is asked.`)
   if (!test.inspected && test.openings.length === 0) return told('cannot-tell', 'has no inspection recorded.')
   return told('pass', test.openings.length === 0 ? 'shows no opening.' : `is accepted: openings that count sum to ${show(sum, unit)} of ${show(f.openingSum, unit)}.`)
 }
@@ -59,6 +63,7 @@ export function macroJudgement(test: CouponContent['macros'][number], variables:
   if (test.cracks === true) return { verdict: 'fail', sentence: `${test.specimen} shows a crack.` }
   if (test.fusionComplete === false) return { verdict: 'fail', sentence: `${test.specimen} shows incomplete fusion.` }
   if (test.cracks === null || test.fusionComplete === null) return { verdict: 'cannot-tell', sentence: `${test.specimen}: cracks or fusion aren't recorded.` }
+  if (testKind(variables) === 'partial') return { verdict: 'cannot-tell', sentence: `${test.specimen}: fusion complete, no cracks; whether the weld is as large as specified is not part of the record and must be judged by a person.` }
   if (testKind(variables) !== 'fillet') return { verdict: 'pass', sentence: `${test.specimen}: fusion complete, no cracks.` }
   const wanted = single(variables.joint.filletLeg, 'length', system)
   const legs = [test.leg1, test.leg2].map((leg) => figureOrNull(leg, 'length', system))

@@ -2,8 +2,8 @@
 import type { Standard } from '../rule.ts'
 
 export const editions: Standard['editions'] = [
-  { id: '2010', label: '2010', note: 'Tables are numbered as in 2010; figures are those confirmed for 2015 and 2020. Variables of a prequalified procedure follow the limits of the qualification table.' },
-  { id: '2015', label: '2015', note: 'Prequalification stands in Clause 3, qualification in Clause 4.' },
+  { id: '2010', label: '2010', note: 'Findings number their clauses as 2010 does, the list of rules as 2020 does. Figures are those known for 2015 and 2020, save where a rule says otherwise; variables of a prequalified procedure follow the limits of the qualification table.' },
+  { id: '2015', label: '2015', note: 'Prequalification stands in Clause 3, qualification in Clause 4: findings number their clauses so, the list of rules as 2020 does.' },
   { id: '2020', label: '2020', note: null },
 ]
 
@@ -39,7 +39,7 @@ const NUMBERS: readonly (readonly [string, { '2010': string; '2015': string }])[
 
 const known = new Map<string, string>()
 
-/** A clause as the edition numbers it, from its number in 2020; the words around the number stay. */
+/** A clause as the edition numbers it, from its number in 2020; the words around the number stay. Rows are known for 2015 and 2020 alone. */
 export function clauseIn(edition: string, clause: string): string {
   if (edition !== '2010' && edition !== '2015') return clause
   const key = `${edition} ${clause}`
@@ -47,6 +47,7 @@ export function clauseIn(edition: string, clause: string): string {
   if (told === undefined) {
     const row = NUMBERS.find(([number]) => clause.startsWith(number))
     told = row ? row[1][edition] + clause.slice(row[0].length) : clause
+    if (edition === '2010') told = told.replace(/ row \d+$/, '')
     // Clauses come from the rules, of which there is a fixed number.
     known.set(key, told)
   }

@@ -1,5 +1,6 @@
 /** What row 33 is made of: a measure of the groove that may fall or rise by the tolerance, and no further. */
 import { between, closed, UNLIMITED, unknownNumeric } from '../../ranges/numeric.ts'
+import type { Fix, NumericRange } from '../../schemas/assessment.ts'
 import type { Interval } from '../../schemas/common.ts'
 import type { WeldingVariables } from '../../schemas/welding.ts'
 import type { UnitSystem } from '../../units/types.ts'
@@ -14,15 +15,16 @@ export const asksGroove = (context: RuleContext): boolean => context.procedure.j
 export const isGouged = ({ joint }: WeldingVariables): boolean => joint.backGouging !== null && joint.backGouging !== 'none'
 export const isNotSquare = ({ joint }: WeldingVariables): boolean => joint.groove !== 'square'
 
-interface Measure { variable: Variable; field: string; label: string; dimension: 'length' | 'angle'; value: (variables: WeldingVariables) => Interval | null; may: 'fall' | 'rise'; room: (variables: WeldingVariables, system: UnitSystem) => number | null; arises: (variables: WeldingVariables) => boolean }
+export interface Measure { cure?: (context: RuleContext, joined: NumericRange) => readonly Fix[]; variable: Variable; field: string; label: string; dimension: 'length' | 'angle'; value: (variables: WeldingVariables) => Interval | null; may: 'fall' | 'rise'; room: (variables: WeldingVariables, system: UnitSystem) => number | null; arises: (variables: WeldingVariables) => boolean }
 
-export function grooveMeasure({ variable, field, label, dimension, value, may, room, arises }: Measure): Rule {
+export function grooveMeasure({ cure, variable, field, label, dimension, value, may, room, arises }: Measure): Rule {
   return figureRule({
     meta: meta(variable),
     field,
     at: 'weld',
     label,
     dimension,
+    cure,
     applies: (context) => asksGroove(context) && arises(context.procedure),
     asked(context) {
       const { min, max, all, fault } = figures(value(context.procedure), dimension, context.system)
@@ -30,8 +32,7 @@ export function grooveMeasure({ variable, field, label, dimension, value, may, r
       if (all) return { min: null, max: null }
       const low = min ?? max
       const high = max ?? min
-      // Only the end that counts: the smallest opening or angle, the largest face.
-      return low === null || high === null ? null : may === 'fall' ? { min: low, max: low } : { min: high, max: high }
+      return low === null || high === null ? null : { min: low, max: high }
     },
     range(context, side) {
       const { system } = context

@@ -17,13 +17,14 @@ export function meta(variable: Variable, more: Partial<RuleMeta> = {}): RuleMeta
     id: `aws-d1-1/${row.file}`,
     title: row.title,
     standard: 'aws-d1-1',
-    clause: `${row.table} row ${row.row}`,
+    // Rows of Table 6.7 differ between editions, so only the table is named.
+    clause: row.table === 'Table 6.7' ? row.table : `${row.table} row ${row.row}`,
     editions: editionIds,
     classes: Object.fromEntries(processes.map((process) => [process, row.table === 'Table 6.5' ? 'essential' : 'supplementary'])),
     // The figure is known as well as its best-known entry; the entry of each process shows its own basis.
     basis: strongest,
     classBasis: Object.fromEntries(processes.map((process, i) => [process, weakest(bases[i] ?? 'memory', strongest)])),
-    source: `${row.table} row ${row.row}; ${TABLE}`,
+    source: row.table === 'Table 6.7' ? `${row.table}, whose rows differ between editions; ${TABLE}` : `${row.table} row ${row.row}; ${TABLE}`,
     statement: row.statement,
     scope: 'process',
     combine: 'each',

@@ -20,8 +20,11 @@ const COVERED: Readonly<Record<Position, readonly Place[]>> = {
 /** Places that a procedure asks of its positions. */
 export const askedPlaces = (positions: readonly Position[]): Place[] => [...new Set(positions.flatMap((position) => PLACES[position]))]
 
-/** Places that test positions cover together; 2G with 5G covers all. */
-export const coveredPlaces = (positions: readonly Position[]): Place[] => [...new Set(positions.flatMap((position) => COVERED[position]))]
+/** Places that test positions cover together; 2G with 5G covers all, as 6G does. */
+export function coveredPlaces(positions: readonly Position[]): Place[] {
+  const both = positions.includes('2G') && positions.includes('5G')
+  return [...new Set([...positions, ...(both ? (['6G'] as const) : [])].flatMap((position) => COVERED[position]))]
+}
 
 /** 1G of plate was read; the other rows are recalled. */
 export const positionBasis = (positions: readonly Position[], variables: WeldingVariables): 'read' | 'memory' =>

@@ -45,6 +45,8 @@ const splits = (metal: BaseMetal): boolean => {
   return spec === 'A36' || (spec === 'A709' && gradeKey(metal) === '36')
 }
 export const SPLIT = { SI: 20, US: 0.75 } as const
+/** A710 Grade A class 2 is listed up to 2 in. (memory; 50 mm is its usual twin). */
+const A710_TOP = { SI: 50, US: 2 } as const
 
 /** As the list has it, whatever the thickness; null where the list kept here does not name it. */
 export function listedGroup(metal: BaseMetal): Group | null {
@@ -63,6 +65,8 @@ export function groupsOf(metal: BaseMetal, thickness: Figures, system: UnitSyste
   const recorded = metal.d11Group ? GROUP_TEXT[metal.d11Group.trim().toUpperCase().replace(/^GROUP\s*/, '')] : undefined
   const group = listedGroup(metal) ?? recorded ?? null
   if (group === null) return null
+  const top = thickness.all ? Infinity : (thickness.max ?? thickness.min)
+  if (identity(metal) === 'A710 A2' && top !== null && top > A710_TOP[system]) return null
   if (!splits(metal)) return [group]
   if (thickness.all) return ['I', 'II']
   const low = thickness.min ?? thickness.max

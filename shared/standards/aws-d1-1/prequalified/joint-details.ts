@@ -86,6 +86,10 @@ export interface Detail {
   gas: 'required' | 'not required' | null
   backed: boolean
   gouged: boolean
+  /** Welded from both sides without backgouging. */
+  bothSides?: boolean
+  /** Least radius of a U or J groove, with what the drawing may add. */
+  radius?: readonly [Printed, Printed]
   tolerances: Tolerances
   /** Weld size of a partial-penetration detail: groove depth less this, by place. */
   loss?: (place: Place) => Printed
@@ -122,6 +126,8 @@ const pjp = (code: string, least: Printed | null, face: Printed, angle: number, 
 const PJP_WIDE = partial(EIGHTH, SIXTEENTH)
 const PJP_SAW = partial(SIXTEENTH, ZERO)
 
+/** 1/4 in., of which the drawing and the fit-up may each add 1/8 in. */
+const U_RADIUS = [QUARTER, EIGHTH] as const
 const R316 = inch(3 / 16, 5)
 const R38 = inch(3 / 8, 10)
 const R12 = inch(1 / 2, 12)
@@ -140,7 +146,7 @@ export const details: readonly Detail[] = [
   square('B-L1a-GF', 'secondary', inch(3 / 8, 10), { opening: 'T', gas: 'not required', backed: true, gouged: false, tolerances: BACKED }),
   square('B-L1b', 'secondary', QUARTER, { opening: 'T/2' }),
   square('B-L1b-GF', 'secondary', inch(3 / 8, 10), { opening: [ZERO, EIGHTH] }),
-  square('B-L1-S', 'secondary', inch(3 / 8, 10), { places: FLAT, gouged: false, tolerances: SQUARE_SAW }),
+  square('B-L1-S', 'secondary', inch(3 / 8, 10), { places: FLAT, gouged: false, bothSides: true, tolerances: SQUARE_SAW }),
   square('B-L1a-S', 'secondary', inch(5 / 8, 16), { places: FLAT, tolerances: SQUARE_SAW }),
   square('TC-L1b', 'secondary', QUARTER, { opening: 'T/2' }),
   square('TC-L1-GF', 'secondary', inch(3 / 8, 10), { opening: [ZERO, EIGHTH] }),
@@ -155,8 +161,8 @@ export const details: readonly Detail[] = [
   sawGouged('TC-U4b-S', 'read'),
   gouged('B-U3b', 'memory', 60),
   gouged('B-U3-GF', 'memory', 60),
-  gouged('B-U6', 'secondary', 45, { face: [EIGHTH, EIGHTH], tolerances: U_GOUGED }),
-  gouged('B-U6', 'secondary', 20, { face: [EIGHTH, EIGHTH], places: ['flat', 'overhead'], tolerances: U_GOUGED }),
+  gouged('B-U6', 'secondary', 45, { face: [EIGHTH, EIGHTH], radius: U_RADIUS, tolerances: U_GOUGED }),
+  gouged('B-U6', 'secondary', 20, { face: [EIGHTH, EIGHTH], radius: U_RADIUS, places: ['flat', 'overhead'], tolerances: U_GOUGED }),
   pjp('BC-P2', QUARTER, inch(1 / 32, 1), 60, PJP_WIDE, noLoss),
   pjp('BC-P2-GF', QUARTER, EIGHTH, 60, PJP_WIDE, noLoss),
   pjp('BC-P2-S', inch(7 / 16, 11), QUARTER, 60, PJP_SAW, noLoss, FLAT),

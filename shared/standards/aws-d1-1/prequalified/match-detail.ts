@@ -2,8 +2,9 @@
 import type { Interval } from '../../../schemas/common.ts'
 import type { ProcessBlock, WeldingVariables } from '../../../schemas/welding.ts'
 import type { UnitSystem } from '../../../units/types.ts'
-import { figures, isNoGas, isStated, tidy, unitOf } from '../../common/reading.ts'
+import { figures, isNoGas, tidy, unitOf } from '../../common/reading.ts'
 import { list, show } from '../../common/wording.ts'
+import { grooveAngleOf, oneEdgeBevelled } from '../groove-angle.ts'
 import { askedPlaces } from '../positions.ts'
 import { details, readDesignation, type Detail, type Printed } from './joint-details.ts'
 
@@ -49,11 +50,8 @@ function lengthCheck(interval: Interval | null, nominal: readonly [Printed, Prin
 
 function angleCheck(variables: WeldingVariables, detail: Detail, system: UnitSystem): Check {
   if (detail.angle === null) return null
-  const { includedAngle, bevelAngle } = variables.joint
-  const bevel = detail.groove.includes('bevel') || detail.groove.includes('-j')
-  const field = bevel ? 'joint.bevelAngle' : 'joint.includedAngle'
-  const own = bevel ? (isStated(bevelAngle) ? bevelAngle : includedAngle) : includedAngle
-  const had = stated(own, 'angle', system)
+  const field = oneEdgeBevelled(detail.groove) ? 'joint.bevelAngle' : 'joint.includedAngle'
+  const had = stated(grooveAngleOf(variables.joint), 'angle', system)
   if (!had) return { lacks: field }
   const { detailed, fitUp } = detail.tolerances
   const may = allowed({ min: detail.angle, max: detail.angle }, [-detailed.angle[1], detailed.angle[0]], [-fitUp.angle[1], fitUp.angle[0]], had.spread)
@@ -87,6 +85,10 @@ function backingChecks(variables: WeldingVariables, detail: Detail): Check[] {
   const checks: Check[] = []
   if (backing === null) checks.push({ lacks: 'joint.backing' })
   else if (detail.backed !== (backing !== 'none')) checks.push({ field: 'joint.backing', sentence: `${detail.code} is welded ${detail.backed ? 'on backing' : 'without backing'}` })
+  if (detail.bothSides) {
+    if (variables.joint.weldedFromBothSides === null) checks.push({ lacks: 'joint.weldedFromBothSides' })
+    else if (!variables.joint.weldedFromBothSides) checks.push({ field: 'joint.weldedFromBothSides', sentence: `${detail.code} is welded from both sides` })
+  }
   if (detail.gouged) {
     if (backGouging === null) checks.push({ lacks: 'joint.backGouging' })
     else if (backGouging === 'none') checks.push({ field: 'joint.backGouging', sentence: `${detail.code} is backgouged to sound metal before the second side` })
@@ -97,6 +99,8 @@ function backingChecks(variables: WeldingVariables, detail: Detail): Check[] {
 function blockChecks(block: ProcessBlock, detail: Detail): Check[] {
   const checks: Check[] = []
   if (block.positions.length === 0) checks.push({ lacks: 'positions' })
+  // No detail is for short-circuiting; which transfer is meant must be known.
+  if (block.process === 'GMAW' && block.electrical.transferMode === null) checks.push({ lacks: 'electrical.transferMode' })
   const missed = askedPlaces(block.positions).filter((place) => !detail.places.includes(place))
   if (missed.length > 0) checks.push({ field: 'positions', sentence: `${detail.code} is for ${list(detail.places)} welding, not ${list(missed)}` })
   if (detail.gas === 'required' && block.process === 'FCAW') {
@@ -106,13 +110,31 @@ function blockChecks(block: ProcessBlock, detail: Detail): Check[] {
   return checks
 }
 
+/** A detail on backing is drawn without a root face. */
+function noFaceCheck({ joint }: WeldingVariables, detail: Detail, system: UnitSystem): Check {
+  const had = stated(joint.rootFace, 'length', system)
+  return had && had.max > 0 ? { field: 'joint.rootFace', sentence: `root face ${show(had.max, unitOf('length', system))} does not belong to ${detail.code}, which is drawn without one` } : null
+}
+
+function radiusCheck({ joint }: WeldingVariables, detail: Detail, system: UnitSystem): Check {
+  if (!detail.radius) return null
+  const had = stated(joint.rootRadius, 'length', system)
+  if (!had) return { lacks: 'joint.rootRadius' }
+  const unit = unitOf('length', system)
+  const [least, more] = [detail.radius[0][system], detail.radius[1][system]]
+  const most = tidy(least + more * (had.spread ? 2 : 1))
+  if (had.min >= least - EPSILON && had.max <= most + EPSILON) return null
+  return { field: 'joint.rootRadius', sentence: `groove radius ${had.spread ? `${show(had.min, unit)} to ${show(had.max, unit)}` : show(had.min, unit)} is outside ${show(least, unit)} to ${show(most, unit)} of ${detail.code}` }
+}
+
 function checksOf(variables: WeldingVariables, block: ProcessBlock, detail: Detail, system: UnitSystem): Check[] {
   const opening = openingOf(variables, detail, system)
   return [
     thicknessCheck(variables, detail, system),
     opening === null ? { lacks: 'thickness' } : lengthCheck(variables.joint.rootOpening, opening, 'opening', detail, system, 'joint.rootOpening', 'root opening'),
     angleCheck(variables, detail, system),
-    detail.face && !detail.backed ? lengthCheck(variables.joint.rootFace, detail.face, 'face', detail, system, 'joint.rootFace', 'root face') : null,
+    detail.face && !detail.backed ? lengthCheck(variables.joint.rootFace, detail.face, 'face', detail, system, 'joint.rootFace', 'root face') : detail.angle !== null ? noFaceCheck(variables, detail, system) : null,
+    radiusCheck(variables, detail, system),
     ...backingChecks(variables, detail),
     ...blockChecks(block, detail),
   ]
@@ -121,6 +143,7 @@ function checksOf(variables: WeldingVariables, block: ProcessBlock, detail: Deta
 /** Details of such a groove for the process; SMAW details serve GMAW and FCAW only where the figure notes it, which isn't kept here. */
 function candidates(variables: WeldingVariables, block: ProcessBlock): Detail[] {
   const { joint } = variables
+  if (block.process === 'GMAW' && block.electrical.transferMode === 'short-circuiting') return []
   const designation = joint.designation ? readDesignation(joint.designation) : null
   return details.filter((detail) => block.process !== null && detail.processes.includes(block.process) && detail.penetration === joint.penetration && detail.groove === joint.groove && detail.joints.includes(joint.type) && (!designation || detail.code === joint.designation?.trim()))
 }

@@ -12,6 +12,7 @@ const byPercent = settingRule({
   setting: 'current',
   label: 'amperage',
   dimension: 'current',
+  perDiameter: true,
   band: byProcess({ SAW: 10, GMAW: 10, FCAW: 10, GTAW: 25 }),
 })
 

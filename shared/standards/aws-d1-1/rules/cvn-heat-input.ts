@@ -2,7 +2,7 @@
 import { heatInputMeter } from '../../../calculations/heat-input.ts'
 import { between, closed, numericRange, UNKNOWN, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
 import type { Interval } from '../../../schemas/common.ts'
-import type { Electrical } from '../../../schemas/welding.ts'
+import type { Electrical, ProcessBlock } from '../../../schemas/welding.ts'
 import type { UnitSystem } from '../../../units/types.ts'
 import { figures, inUnitOf, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
@@ -30,6 +30,15 @@ function stated(electrical: Electrical, system: UnitSystem): number | null {
   return fault ? null : (max ?? min)
 }
 
+/** The hottest corner of the block and of every pass; what a pass leaves out it takes from the block. Null where one of them gives none. */
+function hottest({ electrical, passes }: ProcessBlock, system: UnitSystem): number | null {
+  const own = fromBlock(electrical, system)
+  const each = passes.map((pass) => fromReadings(pass.voltage ?? electrical.voltage, pass.current ?? electrical.current, pass.travelSpeed ?? electrical.travelSpeed, system))
+  const all = own ? [own, ...each] : each
+  const told = all.filter((one) => one !== null)
+  return told.length === 0 || told.length < all.length ? null : Math.max(...told.map(({ most }) => most))
+}
+
 const fromBlock = (electrical: Electrical, system: UnitSystem): Spread | null => fromReadings(electrical.voltage, electrical.current, electrical.travelSpeed, system)
 
 /** As recorded, else the largest of the run sheet, else from the block's readings. */
@@ -55,12 +64,12 @@ const base = figureRule({
   asked(context) {
     if (!context.block) return null
     if (figures(context.block.electrical.heatInput, 'heatInput', context.system).fault) return 'fault'
-    const own = stated(context.block.electrical, context.system) ?? fromBlock(context.block.electrical, context.system)?.most ?? null
+    const own = stated(context.block.electrical, context.system) ?? hottest(context.block, context.system)
     return own === null ? null : { min: 0, max: own }
   },
   range(context, side) {
     const unit = unitOf('heatInput', context.system)
-    if (refines(side.variables.pwht.condition)) return { range: between('heatInput', unit, UNLIMITED, UNLIMITED), tested: null, reason: 'A grain-refining heat treatment after welding lifts the limit.' }
+    if (refines(side.variables.pwht.condition) && (context.procedure === null || refines(context.procedure.pwht.condition))) return { range: between('heatInput', unit, UNLIMITED, UNLIMITED), tested: null, reason: 'A grain-refining heat treatment after welding lifts the limit.' }
     const had = tested(side, context.system)
     if (!had) return { range: unknownNumeric('heatInput', unit), tested: null, reason: `${side.coupon.number} does not give its heat input.`, missing: [`${side.coupon.number}: electrical.heatInput`] }
     const sure = { lower: UNLIMITED, upper: closed(had.sure) }

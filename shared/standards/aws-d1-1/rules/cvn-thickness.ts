@@ -3,6 +3,7 @@ import { figures, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
 import { meta } from '../meta.ts'
+import { memberCures } from '../member-cures.ts'
 import { couponThickness, lengthRange, unknownLength } from '../ranges.ts'
 
 /** Printed pairs: the floor, the thickness below which it falls to the least, and that least. */
@@ -14,6 +15,7 @@ export const cvnThickness = figureRule({
   at: 'weld',
   label: 'least thickness with CVN',
   dimension: 'length',
+  cure: (context, joined) => memberCures(context, joined, 'thickness'),
   asked(context) {
     const all = [context.procedure.thickness, context.procedure.thicknessB].flatMap((interval) => (interval ? [figures(interval, 'length', context.system)] : []))
     if (all.some(({ fault }) => fault)) return 'fault'

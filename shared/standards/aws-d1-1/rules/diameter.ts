@@ -5,7 +5,7 @@ import { meta } from '../meta.ts'
 import { diameterSpan, lengthRange } from '../ranges.ts'
 
 export const diameter = figureRule({
-  meta: meta('thickness_diameter', { id: 'aws-d1-1/diameter', title: 'Diameter' }),
+  meta: meta('thickness_diameter', { id: 'aws-d1-1/diameter', title: 'Diameter', statement: 'Pipe diameter outside the range that the test qualifies: a job size test its own diameter and over, one of 600 mm (24 in.) and over with more than 10 mm (3/8 in.) wall from 600 mm (24 in.), standard test pipes 20 to 100 mm (3/4 to 4 in.) or 100 mm (4 in.) and over (Table 10.9); a plate test pipe from 600 mm (24 in.) (Table 6.1).' }),
   field: 'diameter',
   at: 'weld',
   label: 'pipe diameter',

@@ -1,11 +1,11 @@
 /** Row 10: nominal diameter of electrode or wire, with a figure of its own for each process. */
-import { closed, containsValue, nearest, numericRange, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
+import { closed, containsValue, nearest, numericRange, UNKNOWN, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
 import type { Segment } from '../../../schemas/assessment.ts'
 import { quantity } from '../../../units/convert.ts'
 import type { UnitSystem } from '../../../units/types.ts'
 import { tidy, unitOf } from '../../common/reading.ts'
 import { pathOf } from '../../common/rule-kinds.ts'
-import { capital, couponLacks, list, names, notStated, show, showRange, verb } from '../../common/wording.ts'
+import { cannotTell, capital, couponLacks, list, names, notStated, show, showRange, verb } from '../../common/wording.ts'
 import type { CouponSide, Rule } from '../../rule.ts'
 import { nominalDiameters } from '../fillers.ts'
 import { meta } from '../meta.ts'
@@ -15,18 +15,26 @@ const STEP = { SI: { SMAW: 0.8, GTAW: 1.6 }, US: { SMAW: 1 / 32, GTAW: 1 / 16 } 
 const LABEL = 'electrode diameter'
 
 /** Sizes that one tested size covers, and the figure in words. */
-function covered(side: CouponSide, d: number, system: UnitSystem): { segment: Segment; words: string } {
+function covered(side: CouponSide, d: number, system: UnitSystem): { segments: Segment[]; words: string } {
   const unit = unitOf('length', system)
   const { SMAW, GTAW } = STEP[system]
   switch (side.block?.process) {
-    case 'SMAW': return { segment: { lower: UNLIMITED, upper: closed(tidy(d + SMAW)) }, words: `up to ${show(SMAW, unit)} larger` }
-    case 'GTAW': return { segment: { lower: closed(tidy(Math.max(0, d - GTAW))), upper: closed(tidy(d + GTAW)) }, words: `up to ${show(GTAW, unit)} larger or smaller` }
-    case 'GMAW': return { segment: { lower: closed(d), upper: closed(d) }, words: 'no other size' }
-    default: return side.block?.process === 'SAW' && side.block.filler.fluxType === 'alloy'
-      ? { segment: { lower: closed(d), upper: closed(d) }, words: 'no other size, because the flux is an alloy flux' }
-      : { segment: { lower: UNLIMITED, upper: closed(d) }, words: 'no larger size' }
+    case 'SMAW': return { segments: [{ lower: UNLIMITED, upper: closed(tidy(d + SMAW)) }], words: `up to ${show(SMAW, unit)} larger` }
+    case 'GTAW': return { segments: [{ lower: closed(tidy(Math.max(0, d - GTAW))), upper: closed(tidy(d + GTAW)) }], words: `up to ${show(GTAW, unit)} larger or smaller` }
+    case 'GMAW': return { segments: [{ lower: closed(d), upper: closed(d) }], words: 'no other size' }
+    case 'SAW': {
+      const { fluxType } = side.block.filler
+      if (fluxType === 'alloy') return { segments: [{ lower: closed(d), upper: closed(d) }], words: 'no other size, because the flux is an alloy flux' }
+      return fluxType === null
+        ? { segments: [{ lower: closed(d), upper: closed(d) }, { lower: UNKNOWN, upper: closed(d) }], words: 'no larger size, and a smaller one only if the flux is no alloy flux' }
+        : { segments: [{ lower: UNLIMITED, upper: closed(d) }], words: 'no larger size' }
+    }
+    default: return { segments: [{ lower: UNLIMITED, upper: closed(d) }], words: 'no larger size' }
   }
 }
+
+/** With an alloy flux a smaller size counts as well; which flux it was isn't recorded. */
+const fluxOpen = (side: CouponSide): boolean => side.block?.process === 'SAW' && side.block.filler.fluxType === null
 
 export const fillerDiameter: Rule = {
   meta: meta('filler_diameter'),
@@ -41,7 +49,7 @@ export const fillerDiameter: Rule = {
     if (side.block?.filler.added === false) return null
     if (had.length === 0) return { range: unknownNumeric('length', unit), tested: null, reason: `${side.coupon.number} records no diameter.`, missing: [`${side.coupon.number}: filler.diameters`] }
     const parts = had.map((d) => covered(side, d, system))
-    return { range: numericRange('length', unit, parts.map(({ segment }) => segment)), tested: Math.max(...had), reason: `${list(had.map((d) => show(d, unit)))} ${had.length > 1 ? 'were' : 'was'} used: ${parts[0]?.words ?? ''}.` }
+    return { range: numericRange('length', unit, parts.flatMap(({ segments }) => segments)), tested: Math.max(...had), reason: `${list(had.map((d) => show(d, unit)))} ${had.length > 1 ? 'were' : 'was'} used: ${parts[0]?.words ?? ''}.`, ...(fluxOpen(side) ? { missing: [`${side.coupon.number}: filler.fluxType`] } : {}) }
   },
   check(context, sides, joined) {
     if (context.block?.filler.added === false) return null
@@ -54,8 +62,13 @@ export const fillerDiameter: Rule = {
     const interval = { min: Math.min(...asked), max: Math.max(...asked) }
     const verdicts = asked.map((d) => containsValue(joined, d))
     const shown = list(asked.map((d) => show(d, unit)))
-    if (verdicts.every((verdict) => verdict === 'within')) return { verdict: 'within', sentence: `${capital(LABEL)} ${shown} is covered by ${names(sides)}.`, asked: interval, range: joined }
+    // GTAW: that a smaller rod is limited as a larger one is, is recalled.
+    const smaller = context.block?.process === 'GTAW' && sides.some((side) => nominalDiameters(side.block, system).every((d) => d > interval.min))
+    const recalled = smaller ? { basis: 'memory' as const } : {}
+    if (verdicts.every((verdict) => verdict === 'within')) return { verdict: 'within', sentence: `${capital(LABEL)} ${shown} is covered by ${names(sides)}.`, asked: interval, range: joined, ...recalled }
     const wrong = asked.flatMap((d, i) => (verdicts[i] === 'outside' ? [{ d, i }] : []))
+    const open = sides.filter(fluxOpen)
+    if (wrong.length === 0 && open.length > 0) return cannotTell(`${capital(LABEL)} ${shown} is smaller than that of ${names(sides)}, which counts with an alloy flux; the kind of flux isn't recorded.`, open.map((side) => `${side.coupon.number}: filler.fluxType`), { asked: interval, range: joined })
     if (wrong.length === 0) return couponLacks(LABEL, 'filler.diameters', sides, interval, joined)
     const fixes = wrong.flatMap(({ d, i }) => {
       const better = nearest(joined, d)
@@ -68,6 +81,7 @@ export const fillerDiameter: Rule = {
       range: joined,
       fixes: [...fixes, { kind: 'plan-coupon', label: 'Weld a coupon with that size', requirement: `A coupon welded with ${list(wrong.map(({ d }) => show(d, unit)))}.` }],
       reasoning: [`Covered: ${showRange(joined)}. Asked: ${shown}.`],
+      ...recalled,
     }
   },
 }

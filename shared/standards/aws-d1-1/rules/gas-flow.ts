@@ -12,6 +12,8 @@ export const gasFlow = percentRule({
   label: 'gas flow',
   dimension: 'gasFlow',
   band: () => ({ down: 20, up: 50, open: true }),
+  // The figures of 2000; from which edition on the later ones hold isn't confirmed.
+  otherBand: (process, edition) => (edition !== '2010' ? null : process === 'GTAW' ? { down: 25, up: 50, open: true } : { down: 10, up: 25, open: true }),
   applies: (context) => usesGas(context.block),
   asked(context) {
     const { min, max, all, fault } = figures(context.block?.shieldingGas?.flow, 'gasFlow', context.system)

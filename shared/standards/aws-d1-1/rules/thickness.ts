@@ -7,6 +7,7 @@ import { names, show } from '../../common/wording.ts'
 import type { Rule, RuleContext, RuleVerdict } from '../../rule.ts'
 import { meta } from '../meta.ts'
 import { askedPlaces, coveredPlaces } from '../positions.ts'
+import { memberCures } from '../member-cures.ts'
 import { thicknessSpan } from '../ranges.ts'
 
 /** Least and greatest thickness of both members. */
@@ -20,6 +21,7 @@ function asked(context: RuleContext): { min: number | null; max: number | null }
 
 const base = figureRule({
   meta: meta('thickness_diameter', { combine: 'union', title: 'Thickness' }),
+  cure: (context, joined) => memberCures(context, joined, 'thickness'),
   field: 'thickness',
   at: 'weld',
   label: 'thickness',

@@ -2,4 +2,4 @@
 import { meta } from '../meta.ts'
 import { settingRule } from '../percent.ts'
 
-export const voltage = settingRule({ meta: meta('voltage'), setting: 'voltage', label: 'voltage', dimension: 'voltage', band: () => ({ down: 7, up: 7 }) })
+export const voltage = settingRule({ meta: meta('voltage'), setting: 'voltage', label: 'voltage', dimension: 'voltage', perDiameter: true, band: () => ({ down: 7, up: 7 }) })

@@ -10,7 +10,7 @@ const COVERS: Record<TestKind, readonly TestKind[]> = { complete: ['complete', '
 const CLAUSE: Record<TestKind, { clause: string; basis: 'read' | 'memory' }> = { complete: { clause: 'Table 10.9', basis: 'read' }, partial: { clause: 'Table 6.3', basis: 'memory' }, fillet: { clause: 'Table 6.4', basis: 'memory' } }
 
 export const weldKind: Rule = {
-  meta: ownMeta('weld-kind', 'Groove or fillet test', 'Table 6.2', 'read', 'Table 9.10 note c, 2015; Tables 6.3 and 6.4 from memory', 'A complete-penetration groove test covers every groove and fillet; a partial-penetration test covers partial penetration and fillets; a fillet test covers fillets only.'),
+  meta: ownMeta('weld-kind', 'Groove or fillet test', 'Table 6.2', 'memory', 'Complete penetration: note c of the tubular table read in 2015; Tables 6.3 and 6.4 from memory', 'A complete-penetration groove test covers every groove and fillet; a partial-penetration test covers partial penetration and fillets; a fillet test covers fillets only.'),
   field: 'joint.weld',
   at: 'weld',
   label: 'Kind of weld',

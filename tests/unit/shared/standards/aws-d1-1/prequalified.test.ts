@@ -27,6 +27,9 @@ const F: Given = { processes: ['FCAW'] }
 const S: Given = { processes: ['SAW'] }
 const partial = (more: object = {}): Change => joint({ penetration: 'partial', groove: 'single-bevel', type: 'tee', includedAngle: null, bevelAngle: interval(45, undefined, 'angle'), rootOpening: interval(0, undefined, 'length'), rootFace: interval(3, undefined, 'length'), backing: 'none', backGouging: 'none', ...more })
 
+const U = { designation: 'B-U6', groove: 'single-u', includedAngle: interval(45, undefined, 'angle'), rootOpening: interval(2, undefined, 'length'), rootFace: interval(3, undefined, 'length'), backing: 'none', backGouging: 'grinding' }
+const SQUARE_SAW = { designation: 'B-L1-S', groove: 'square', includedAngle: null, rootOpening: interval(0, undefined, 'length'), rootFace: null, backing: 'none', backGouging: 'none' }
+
 const OWN: readonly Own[] = [
   { name: 'GMAW without a transfer mode', given: W, change: electrical({ transferMode: null }), rule: 'process', verdict: 'cannot-tell' },
   { name: 'globular GMAW', given: W, change: electrical({ transferMode: 'globular' }), rule: 'process', verdict: 'within' },
@@ -59,6 +62,10 @@ const OWN: readonly Own[] = [
   { name: 'ER70S-6 on Group II', given: W, change: () => undefined, rule: 'filler', verdict: 'within' },
   { name: 'F7A2-EM12K on Group II', given: S, change: () => undefined, rule: 'filler', verdict: 'within' },
   { name: 'F6 on Group II', given: S, change: filler('EL12', { fluxClassification: 'F6A2-EL12' }), rule: 'filler', verdict: 'outside', says: /F6A2-EL12/ },
+  { name: 'E71T12-M of the newer form is no single-pass class', given: F, change: filler('E71T12-M'), rule: 'filler', verdict: 'within' },
+  { name: 'E7048 is low-hydrogen and matches Group I of a mixed joint', change: both(steel('ASTM A36', null, 'ASTM A572', '50'), thick(12), filler('E7048')), rule: 'filler', verdict: 'within' },
+  { name: 'words for Group I name solid and cored wire of 70 ksi', given: W, change: both(steel('ASTM A53', 'B'), filler('ER80S-D2')), rule: 'filler', verdict: 'outside', says: /needs ER70S or E70C\./ },
+  { name: 'A710 class 2 over 50 mm is no longer listed', change: both(steel('ASTM A710', 'A Class 2'), thick(60), filler('E8018-C3')), rule: 'base-metal', verdict: 'cannot-tell' },
   // Preheat
   { name: 'H8 takes category D', change: both(steel('ASTM A913', '65'), filler('E8018-C3-H8'), thick(60), (v) => { v.preheat.minimum = quantity(0, 'temperature') }), rule: 'preheat', verdict: 'within', says: /category D/ },
   { name: 'without H8 it stays C', change: both(steel('ASTM A913', '65'), filler('E8018-C3'), thick(60), (v) => { v.preheat.minimum = quantity(100, 'temperature') }), rule: 'preheat', verdict: 'outside', says: /category C/ },
@@ -77,7 +84,7 @@ const OWN: readonly Own[] = [
   { name: 'an angle beyond', change: joint({ designation: 'B-U2a', includedAngle: interval(60, undefined, 'angle') }), rule: 'joint-detail', verdict: 'outside', says: /groove angle/ },
   { name: 'a range of angle beyond', change: joint({ designation: 'B-U2a', includedAngle: interval(30, 70, 'angle') }), rule: 'joint-detail', verdict: 'outside' },
   { name: 'without name it may fit another', change: joint({ rootOpening: interval(20, undefined, 'length') }), rule: 'joint-detail', verdict: 'cannot-tell', says: /not complete/ },
-  { name: 'something open', change: joint({ rootOpening: null }), rule: 'joint-detail', verdict: 'cannot-tell', says: /joint.rootOpening/ },
+  { name: 'something open', change: joint({ rootOpening: null }), rule: 'joint-detail', verdict: 'cannot-tell', says: /the root opening/ },
   { name: 'the groove open', change: joint({ groove: null }), rule: 'joint-detail', verdict: 'cannot-tell' },
   { name: 'backing and position open', change: both(joint({ backing: null }), positions()), rule: 'joint-detail', verdict: 'cannot-tell', says: /positions/ },
   { name: 'an unreadable name', change: joint({ designation: 'X-9' }), rule: 'joint-detail', verdict: 'cannot-tell' },
@@ -100,7 +107,16 @@ const OWN: readonly Own[] = [
   { name: 'gas given where the line needs it', given: F, change: joint({ designation: 'TC-U4a-GF', type: 'tee', groove: 'single-bevel', includedAngle: interval(30, undefined, 'angle'), rootOpening: interval(5, undefined, 'length') }), rule: 'joint-detail', verdict: 'within' },
   { name: 'a partial-penetration detail', change: both(partial({ designation: 'BTC-P4' }), (v) => { first(v).depositThickness = interval(12, undefined, 'length') }), rule: 'joint-detail', verdict: 'within' },
   { name: 'too thin for it', given: F, change: both(partial({ designation: 'BTC-P4-GF' }), thick(5)), rule: 'joint-detail', verdict: 'outside', says: /under the 6 mm/ },
-  { name: 'a detail of U groove', change: joint({ designation: 'B-U6', groove: 'single-u', includedAngle: interval(45, undefined, 'angle'), rootOpening: interval(2, undefined, 'length'), rootFace: interval(3, undefined, 'length'), backing: 'none', backGouging: 'grinding' }), rule: 'joint-detail', verdict: 'within' },
+  { name: 'a detail of U groove', change: joint({ ...U, rootRadius: interval(6, undefined, 'length') }), rule: 'joint-detail', verdict: 'within' },
+  { name: 'a U groove without its radius', change: joint(U), rule: 'joint-detail', verdict: 'cannot-tell', says: /radius/ },
+  { name: 'a U groove of too small a radius', change: joint({ ...U, rootRadius: interval(5, undefined, 'length') }), rule: 'joint-detail', verdict: 'outside', says: /groove radius/ },
+  { name: 'a root face on a detail that has none', change: joint({ designation: 'B-U2a', rootFace: interval(3, undefined, 'length') }), rule: 'joint-detail', verdict: 'outside', says: /drawn without one/ },
+  { name: 'bevels of a V count together', change: joint({ designation: 'B-U2a', includedAngle: null, bevelAngle: interval(22.5, undefined, 'angle') }), rule: 'joint-detail', verdict: 'within' },
+  { name: 'a square groove from both sides', given: S, change: both(joint({ ...SQUARE_SAW, weldedFromBothSides: true }), thick(10)), rule: 'joint-detail', verdict: 'within' },
+  { name: 'but not from one', given: S, change: both(joint({ ...SQUARE_SAW, weldedFromBothSides: false }), thick(10)), rule: 'joint-detail', verdict: 'outside', says: /both sides/ },
+  { name: 'sides not stated', given: S, change: both(joint({ ...SQUARE_SAW, weldedFromBothSides: null }), thick(10)), rule: 'joint-detail', verdict: 'cannot-tell' },
+  { name: 'no detail is for short-circuiting', given: W, change: both(joint({ designation: 'B-U2a-GF' }), electrical({ transferMode: 'short-circuiting' })), rule: 'joint-detail', verdict: 'cannot-tell' },
+  { name: 'a detail for GMAW of unknown transfer', given: W, change: both(joint({ designation: 'B-U2a-GF' }), electrical({ transferMode: null })), rule: 'joint-detail', verdict: 'cannot-tell', says: /transfer mode/ },
   { name: 'no detail for such a groove', change: joint({ groove: 'double-j' }), rule: 'joint-detail', verdict: 'cannot-tell', says: /No detail/ },
   // Sizes
   { name: 'an 8 mm electrode for a flat fillet', change: both(fillet(8), positions('1F'), size(8)), rule: 'electrode-diameter', verdict: 'within' },

@@ -60,7 +60,9 @@ describe('specimens', () => {
   test('partial penetration asks for macro sections as well', () => {
     const partial = content((c) => { c.variables.joint.penetration = 'partial'; c.macros = [macro(false, true)]; c.ndt = [] })
     expect(partial.specimens.map(({ kind }) => kind)).toEqual(['macro', 'tension', 'side-bend'])
-    expect(partial.missing.map(({ field }) => field)).toEqual(['macros'])
+    // How large the weld came out is no part of the record: a person judges each section.
+    expect(partial.missing.map(({ field }) => field)).toEqual(['macros', 'macros.0'])
+    expect(partial.results.find(({ testId }) => testId.startsWith('m'))).toMatchObject({ verdict: 'cannot-tell' })
     expect(content((c) => { c.variables.joint.penetration = 'partial'; first(c.variables).depositThickness = null }).specimens).toEqual([])
   })
   test('a fillet test asks for three macro sections, no radiography', () => {
@@ -77,6 +79,10 @@ describe('bends', () => {
     ['a corner crack of 6 mm without flaw', [{ size: 6, corner: true, flaw: false }], 'pass'], ['a corner crack of 3 mm from slag', [{ size: 3, corner: true, flaw: true }], 'pass'],
     ['a corner crack of 3.5 mm from slag', [{ size: 3.5, corner: true, flaw: true }], 'fail'], ['a corner crack of unknown origin', [{ size: 4, corner: true }], 'cannot-tell'], ['a small one of unknown origin', [{ size: 2, corner: true }], 'pass'],
   ] as const)('%s: %s', (_name, openings, verdict) => expect(one('B1', 'side', openings)?.verdict).toBe(verdict))
+  test('bent to less than 180°', () => {
+    const of = (angle: number | null) => content((c) => { c.bends = [{ ...bend('B1'), angle: angle === null ? null : quantity(angle, 'angle') }] }).results.find(({ testId }) => testId === 'B1')?.verdict
+    expect([of(90), of(180), of(null)]).toEqual(['cannot-tell', 'pass', 'pass'])
+  })
   test('broken, or not looked at', () => {
     expect(content((c) => { c.bends = [{ ...bend('B1'), broke: true }] }).results.find(({ testId }) => testId === 'B1')?.verdict).toBe('fail')
     expect(content((c) => { c.bends = [{ ...bend('B1'), inspected: false }] }).results.find(({ testId }) => testId === 'B1')?.verdict).toBe('cannot-tell')

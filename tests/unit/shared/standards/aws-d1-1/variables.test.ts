@@ -14,7 +14,7 @@ describe('the matrix of variables', () => {
     expect((known.processes as Record<string, string>)[process]).toBe(row.basis)
     const rule = awsD11.rules.find(({ meta }) => meta.id === `aws-d1-1/${known.file}`)
     expect(rule?.meta.classes[process as Arc]).toBe(row.table.startsWith('Table 6.5') ? 'essential' : 'supplementary')
-    expect(rule?.meta).toMatchObject({ route: 'test', clause: `${row.table.slice(0, 9)} row ${row.row}` })
+    expect(rule?.meta).toMatchObject({ route: 'test', clause: row.table.startsWith('Table 6.5') ? `Table 6.5 row ${row.row}` : 'Table 6.7' })
   })
   test('holds nothing that the reference does not', () => {
     const told = Object.entries(variables).flatMap(([item, { processes }]) => Object.keys(processes).map((process) => `${process} ${item}`))
@@ -96,6 +96,9 @@ const OWN: readonly Own[] = [
   { name: 'alloy from the supplement in other words', given: S, tested: (v) => void Object.assign(first(v).filler, { supplemental: true, supplementalAlloyElement: true, depositComposition: '1 Ni' }), asked: (v) => void Object.assign(first(v).filler, { supplemental: true, supplementalAlloyElement: true, depositComposition: '2 Ni' }), rule: 'supplement-alloy', verdict: 'cannot-tell', says: /judged by a person/ },
   { name: 'alloy from the supplement not recorded', given: S, tested: (v) => void Object.assign(first(v).filler, { supplemental: true, supplementalAlloyElement: null }), asked: (v) => void Object.assign(first(v).filler, { supplemental: true, supplementalAlloyElement: true, depositComposition: '2 Ni' }), rule: 'supplement-alloy', verdict: 'cannot-tell' },
   // Diameters
+  { name: 'SAW smaller, kind of flux not recorded', given: S, tested: (v) => { first(v).filler.fluxType = null }, asked: size(2.4), rule: 'filler-diameter', verdict: 'cannot-tell', says: /kind of flux/ },
+  { name: 'SAW the same, kind of flux not recorded', given: S, tested: (v) => { first(v).filler.fluxType = null }, asked: () => undefined, rule: 'filler-diameter', verdict: 'within' },
+  { name: 'a stronger GMAW wire (column in doubt)', given: W, asked: filler('ER80S-D2'), rule: 'filler-strength', verdict: 'cannot-tell', says: /not confirmed/ },
   { name: 'SMAW two sizes up', asked: size(4.8), rule: 'filler-diameter', verdict: 'outside', says: /4.8 mm is not covered/ },
   { name: 'SMAW smaller', asked: size(2.4), rule: 'filler-diameter', verdict: 'within' },
   { name: 'FCAW smaller', given: { processes: ['FCAW'] }, asked: size(1), rule: 'filler-diameter', verdict: 'within' },
@@ -141,6 +144,12 @@ const OWN: readonly Own[] = [
   { name: 'SAW travel speed by 15 %', given: S, asked: electrical({ travelSpeed: interval(255, 345, 'travelSpeed') }), rule: 'travel-speed', verdict: 'within' },
   { name: 'SAW travel speed by more', given: S, asked: electrical({ travelSpeed: interval(250, 345, 'travelSpeed') }), rule: 'travel-speed', verdict: 'outside' },
   { name: 'GTAW travel speed by 50 %', given: T, asked: electrical({ travelSpeed: interval(150, 450, 'travelSpeed') }), rule: 'travel-speed', verdict: 'within' },
+  { name: 'several diameters: what every reading allows', given: W, tested: both(size(1.2), (v) => { first(v).filler.diameters.push(quantity(1.6, 'length')) }, electrical({ current: interval(190, 210, 'current') })), asked: electrical({ current: interval(195, 205, 'current') }), rule: 'amperage', verdict: 'within' },
+  { name: 'several diameters: what the middle alone would allow', given: W, tested: both(size(1.2), (v) => { first(v).filler.diameters.push(quantity(1.6, 'length')) }, electrical({ current: interval(120, 280, 'current') })), asked: electrical({ current: interval(200, undefined, 'current') }), rule: 'amperage', verdict: 'cannot-tell' },
+  { name: 'several diameters: what no reading allows', given: W, tested: both(size(1.2), (v) => { first(v).filler.diameters.push(quantity(1.6, 'length')) }, electrical({ current: interval(190, 210, 'current') })), asked: electrical({ current: interval(300, undefined, 'current') }), rule: 'amperage', verdict: 'outside' },
+  { name: '2010: flow that both readings allow', given: W, edition: '2010', asked: (v) => { first(v).shieldingGas!.flow = interval(19, 24, 'gasFlow') }, rule: 'gas-flow', verdict: 'within' },
+  { name: '2010: flow that one reading allows', given: W, edition: '2010', asked: (v) => { first(v).shieldingGas!.flow = interval(20, 27, 'gasFlow') }, rule: 'gas-flow', verdict: 'cannot-tell', says: /two readings/ },
+  { name: '2010: flow that neither allows', given: W, edition: '2010', asked: (v) => { first(v).shieldingGas!.flow = interval(20, 31, 'gasFlow') }, rule: 'gas-flow', verdict: 'outside' },
   // Gas
   { name: 'no gas after gas', given: { processes: ['FCAW'] }, asked: (v) => void Object.assign(first(v).shieldingGas!, { components: [], name: 'none' }), rule: 'shielding-gas', verdict: 'outside', says: /no gas/i },
   { name: 'gas in one name only', given: W, asked: (v) => void Object.assign(first(v).shieldingGas!, { components: [], name: 'Larkfield mix' }), rule: 'shielding-gas', verdict: 'cannot-tell' },
@@ -164,6 +173,8 @@ const OWN: readonly Own[] = [
   { name: '6G pipe covers all', tested: at(['6G']), asked: at(['1G', '2G', '3G', '4G']), rule: 'position', verdict: 'within' },
   { name: '2G and 5G together cover all', tested: at(['2G', '5G']), asked: at(['6G']), rule: 'position', verdict: 'within' },
   { name: 'a fixed pipe fillet test covers itself', tested: at(['5F']), asked: at(['5F']), rule: 'position', verdict: 'within' },
+  { name: 'a fixed pipe fillet after plate tests is not confirmed', tested: at(['2G']), asked: at(['5F']), rule: 'position', verdict: 'cannot-tell', says: /5F/ },
+  { name: 'but 2G and 5G together cover it as 6G does', tested: at(['2G', '5G']), asked: at(['5F']), rule: 'position', verdict: 'within' },
   { name: 'what else it covers is not confirmed', tested: at(['5F']), asked: at(['2F']), rule: 'position', verdict: 'cannot-tell' },
   { name: 'T-, Y-, K-details only by their own test', tested: at(['6G']), asked: at(['6GR']), rule: 'position', verdict: 'outside' },
   { name: 'no position stated', asked: at([]), rule: 'position', verdict: 'cannot-tell' },
@@ -241,6 +252,11 @@ const OWN: readonly Own[] = [
   { name: 'Group III to itself', tested: steel(A913), asked: steel(A913), rule: 'base-metal', verdict: 'within' },
   { name: 'a mix of III and special only itself', tested: steel(A913, A514), asked: steel(A913), rule: 'base-metal', verdict: 'outside' },
   { name: 'an unlisted steel by itself', tested: steel(['EN 10025-2', 'S355J2']), asked: steel(['EN 10025-2', 'S355J2']), rule: 'base-metal', verdict: 'within' },
+  { name: 'an unlisted steel to another steel of the same group', tested: steel(['EN 10025-2', 'S355J2'], A36, 12), asked: steel(['EN 10025-2', 'S355J2'], ['ASTM A53', 'B'], 12), rule: 'base-metal', verdict: 'cannot-tell' },
+  { name: 'an unlisted steel to the very steel tested', tested: steel(['EN 10025-2', 'S355J2'], A36, 12), asked: steel(A36, ['EN 10025-2', 'S355J2'], 12), rule: 'base-metal', verdict: 'within' },
+  { name: 'Group IV to another steel of Group I', tested: steel(['ASTM A913', '70'], A36, 12), asked: steel(['ASTM A913', '70'], ['ASTM A53', 'B'], 12), rule: 'base-metal', verdict: 'cannot-tell', says: /no row/ },
+  { name: 'Group IV to the very steel tested', tested: steel(['ASTM A913', '70'], A36, 12), asked: steel(['ASTM A913', '70'], A36, 12), rule: 'base-metal', verdict: 'within' },
+  { name: 'a special steel of another recorded yield strength', tested: both(steel(A514), (v) => { for (const metal of [v.baseMetals.a, v.baseMetals.b]) metal.minYield = quantity(690, 'stress') }), asked: both(steel(A514), (v) => { for (const metal of [v.baseMetals.a, v.baseMetals.b]) metal.minYield = quantity(620, 'stress') }), rule: 'base-metal', verdict: 'outside', says: /yield/ },
   { name: 'an unlisted steel from another test', asked: steel(['EN 10025-2', 'S355J2']), rule: 'base-metal', verdict: 'cannot-tell', says: /not in the list/ },
   { name: 'a steel by its recorded group', asked: (v) => { for (const metal of [v.baseMetals.a, v.baseMetals.b]) Object.assign(metal, { specification: 'EN 10025-2', grade: 'S355J2', d11Group: 'Group 2' }) }, rule: 'base-metal', verdict: 'within' },
   { name: 'a steel by its UNS number', tested: (v) => { for (const metal of [v.baseMetals.a, v.baseMetals.b]) Object.assign(metal, { specification: null, grade: null, uns: 'K99999' }) }, asked: (v) => { for (const metal of [v.baseMetals.a, v.baseMetals.b]) Object.assign(metal, { specification: null, grade: null, uns: 'K99999' }) }, rule: 'base-metal', verdict: 'within' },
@@ -291,6 +307,11 @@ const OWN: readonly Own[] = [
   { name: 'sheet is out of scope', asked: (v) => { v.thickness = interval(2, 10, 'length') }, rule: 'scope', verdict: 'outside' },
   { name: 'every thickness is out of scope', asked: (v) => { v.thickness = { min: null, max: null, all: true } }, rule: 'scope', verdict: 'outside' },
   { name: 'a steel over 690 MPa is out of scope', asked: (v) => { v.baseMetals.a.minYield = quantity(700, 'stress') }, rule: 'scope', verdict: 'outside' },
+  { name: 'a second member under 3 mm is out of scope', asked: (v) => { v.thicknessB = interval(2, undefined, 'length') }, rule: 'scope', verdict: 'outside' },
+  { name: 'aluminium is out of scope', asked: (v) => { v.baseMetals.b = { ...v.baseMetals.b, specification: 'ASTM B209', grade: '6061-T6', d12MNumber: '23' } }, rule: 'scope', verdict: 'outside', says: /not carbon or low-alloy/ },
+  { name: 'stainless steel is out of scope', asked: (v) => { v.baseMetals.a = { ...v.baseMetals.a, iso15608: '8.1' } }, rule: 'scope', verdict: 'outside' },
+  { name: 'an unlisted steel without yield strength', asked: (v) => { v.baseMetals.a = { ...v.baseMetals.a, specification: 'EN 10025-2', grade: 'S355J2', minYield: null } }, rule: 'scope', verdict: 'cannot-tell', says: /yield strength/ },
+  { name: 'build-up is not kept', asked: joint({ work: 'build-up' }), rule: 'scope', verdict: 'cannot-tell' },
   { name: 'no thickness, no scope', asked: (v) => { v.thickness = null }, rule: 'scope', verdict: 'cannot-tell' },
   // CVN
   { name: 'another group', given: C, asked: steel(A36, A36, 12), rule: 'cvn-base-group', verdict: 'outside' },
@@ -325,7 +346,9 @@ const OWN: readonly Own[] = [
   { name: 'heat input not to be told', given: C, asked: electrical({ heatInput: null, voltage: null }), rule: 'cvn-heat-input', verdict: 'cannot-tell', says: /neither a cap/ },
   { name: 'heat input not recorded', given: C, tested: electrical({ heatInput: null, voltage: null }), asked: () => undefined, rule: 'cvn-heat-input', verdict: 'cannot-tell' },
   { name: 'a contradicting heat input', given: C, asked: electrical({ heatInput: interval(2, 1, 'heatInput') }), rule: 'cvn-heat-input', verdict: 'cannot-tell' },
-  { name: 'grain refinement lifts the limit', given: C, tested: (v) => { v.pwht = { ...v.pwht, condition: 'above-upper-transformation' } }, asked: electrical({ heatInput: interval(null, 9, 'heatInput') }), rule: 'cvn-heat-input', verdict: 'within' },
+  { name: 'grain refinement lifts the limit', given: C, tested: (v) => { v.pwht = { ...v.pwht, condition: 'above-upper-transformation' } }, asked: both(electrical({ heatInput: interval(null, 9, 'heatInput') }), (v) => { v.pwht = { ...v.pwht, condition: 'above-upper-transformation' } }), rule: 'cvn-heat-input', verdict: 'within' },
+  { name: 'grain refinement of the test alone lifts nothing', given: C, tested: (v) => { v.pwht = { ...v.pwht, condition: 'above-upper-transformation' } }, asked: electrical({ heatInput: interval(null, 9, 'heatInput') }), rule: 'cvn-heat-input', verdict: 'outside' },
+  { name: 'a hotter pass counts', given: C, asked: (v) => { first(v).electrical.heatInput = null; first(v).passes = [{ number: '1', layer: 'cap', fillerDiameter: null, current: interval(320, undefined, 'current'), voltage: null, wireFeed: null, travelSpeed: null }] }, rule: 'cvn-heat-input', verdict: 'outside' },
   { name: 'weave after stringer in vertical', given: C, tested: at(['3G']), asked: both(at(['3G']), technique({ bead: 'weave' })), rule: 'cvn-weave', verdict: 'outside' },
   { name: 'stringer after weave', given: C, tested: both(at(['3G']), technique({ bead: 'weave' })), asked: at(['3G']), rule: 'cvn-weave', verdict: 'within' },
   { name: 'bead not stated', given: C, tested: at(['3G']), asked: both(at(['3G']), technique({ bead: null })), rule: 'cvn-weave', verdict: 'cannot-tell' },
@@ -351,7 +374,20 @@ describe('our own cases of AWS D1.1 by test', () => {
     if (says) expect(found.sentence).toMatch(says)
     if (verdict === 'cannot-tell') expect(found.missing.length).toBeGreaterThan(0)
     if (verdict !== 'within') expect(assessment.verdict).not.toBe('within')
-    if (edition) expect(found.clause).toBe('Table 4.5 row 10')
+    if (edition) expect(found.clause).toBe(edition === '2010' ? 'Table 4.5' : 'Table 4.5 row 10')
+  })
+})
+
+describe('travel speed of fillets', () => {
+  const fillet = (speed: number, passes: 'single' | 'multiple'): Change => (v) => { Object.assign(v.joint, { weld: 'fillet', type: 'tee', groove: null, filletLeg: interval(8, undefined, 'length') }); Object.assign(first(v), { positions: ['2F'] }); first(v).technique.passesPerSide = passes; first(v).electrical.travelSpeed = interval(speed, undefined, 'travelSpeed') }
+  const tests = [coupon({ ...W, number: 'PQR-S', change: fillet(200, 'single') }), coupon({ ...W, number: 'PQR-M', change: fillet(400, 'multiple') })]
+  const at = (speed: number, list = tests) => finding(judge(procedure({ ...W, change: fillet(speed, 'single') }), list), 'travel-speed')
+  test('between two fillet tests it can\'t be told, beyond both it is outside', () => {
+    expect(at(240).verdict).toBe('within')
+    expect(at(350)).toMatchObject({ verdict: 'within' })
+    expect(at(280)).toMatchObject({ verdict: 'cannot-tell' })
+    expect(at(600).verdict).toBe('outside')
+    expect(at(280, tests.slice(0, 1)).verdict).toBe('outside')
   })
 })
 
