@@ -1,14 +1,22 @@
 /** The demo firm's records in the order in which such a shop would make them. */
 import type { ProcedureRevision } from '../models/procedure-revision.ts'
+import { databaseDay } from '../services/calibration-reminders.ts'
 import { createJob } from '../services/jobs.ts'
+import { createMachine } from '../services/machines.ts'
 import { approve, certify, giveBack, reject, rest, revise, submit, weld, withdraw, write, type Firm } from './acts.ts'
 import { handrail6063, handrail6063Coupon, hull5083, platform6061, platform6061Coupon } from './content/aluminium.ts'
 import { stainless304, stainless304Coupon, stainless316, stainless316Coupon } from './content/stainless.ts'
 import { fcawPlate, fcawPlateCoupon, gmawPlate, gmawPlateCoupon, pipe, pipeCoupon, smawPlate, smawPlateCoupon } from './content/steel.ts'
 import { demoJobs } from './jobs.ts'
+import { demoMachines } from './machines.ts'
 
-/** Twelve procedures, eight coupons, three jobs. */
+/** Twelve procedures, eight coupons, three jobs, three machines. */
 export async function makeRecords(firm: Firm): Promise<void> {
+  // M-001 to M-003, which coupons and panels name.
+  await firm.act(async (tenant) => {
+    for (const machine of demoMachines(await databaseDay(tenant))) await createMachine(tenant, machine)
+  })
+
   const approved = new Map<string, string>()
   const release = async (revision: ProcedureRevision, reason: string | null = null): Promise<ProcedureRevision> => {
     const done = await approve(firm, 'marit', await submit(firm, 'ines', revision), reason)

@@ -78,7 +78,7 @@ function rangesOf(block: ProcessBlock, pass: Pass | null, system: UnitSystem, no
     const { dimension, label } = PANEL_QUANTITY[quantity]
     const given = intervals.filter((one) => spanOf(one) !== null)
     if (dimension === null || given.length === 0) return
-    const words = given.map((one) => (one ? formatInterval(one, dimension, system).text : '')).join(', and ')
+    const words = given.map((one) => (one ? formatInterval(one, dimension, system, { asTyped: true }).text : '')).join(', and ')
     let span: Span | null = { lo: -Infinity, hi: Infinity }
     for (const one of given) {
       const next = spanOf(one)

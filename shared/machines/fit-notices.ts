@@ -6,7 +6,7 @@ import { familiesOf, isAluminiumWire, measurementsFor, programFit, wireFamily } 
 
 const PRACTICE = 'common practice'
 const PULSED: readonly MachineMode['kind'][] = ['pulsed-one-knob', 'manual-pulse', 'double-pulse']
-const list = (words: readonly string[]): string => (words.length < 2 ? (words[0] ?? '') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`)
+export const list = (words: readonly string[]): string => (words.length < 2 ? (words[0] ?? '') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`)
 
 function stateNotices({ state, machine, machineNumber }: CardFacts): PanelNotice[] {
   const found: PanelNotice[] = []
@@ -58,17 +58,17 @@ function dutyNotices({ machine, machineNumber, ranges }: CardFacts): PanelNotice
   return [notice('warn', 'duty-cycle', `${machineNumber} is rated ${duty.current} A at ${duty.percent} %. At ${Math.round(least)} A, the least that the procedure allows, it holds about ${share} % of ten minutes: let it cool between.`, 'calculated: duty cycle falls with the square of the current; common practice')]
 }
 
-function craterNotices({ block, mode, wire }: CardFacts): PanelNotice[] {
+function craterNotices({ mode, wire }: CardFacts): PanelNotice[] {
   if (wire.classification === null || !isAluminiumWire(wire.classification)) return []
   if (mode.has.craterFill || mode.controls.some(({ sets }) => sets === 'craterCurrent' || sets === 'craterTime')) return []
   const aluminium = `${wire.classification} is an aluminium filler, and aluminium cracks in a crater that was not filled`
-  return [notice('warn', 'no-crater-fill', `This mode has no crater fill. ${aluminium}: go back 10 to 20 mm over the bead and break the arc there, trigger again two or three times, or run off on to a tab.${block.electrical.pulsed ? ' The pulse ends as abruptly as any arc.' : ''}`, 'common practice; the cure from an aluminium wire maker (secondary)')]
+  return [notice('warn', 'no-crater-fill', `This mode has no crater fill. ${aluminium}: go back 10 to 20 mm over the bead and break the arc there, trigger again two or three times, or run off on to a tab.`, 'common practice; the cure from an aluminium wire maker (secondary)')]
 }
 
 function gunNotices({ machine, mode }: CardFacts): PanelNotice[] {
   const other = machine.gunTypes.filter((gun) => gun === 'spool-gun' || gun === 'push-pull')
   if (other.length === 0 || machine.gunTypes.length < 2 || !mode.controls.some(({ sets }) => sets === 'wireFeed' || sets === 'knob')) return []
-  return [notice('note', 'guns', `This machine takes several guns. A ${list(other.map((gun) => gun.replace('-', ' ')))} feeds otherwise at the same dial: check the feed by cut length after a change of gun.`, PRACTICE)]
+  return [notice('note', 'guns', `This machine takes several guns. A ${list(other.map((gun) => (gun === 'spool-gun' ? 'spool gun' : 'push-pull gun')))} feeds otherwise at the same dial: check the feed by cut length after a change of gun.`, PRACTICE)]
 }
 
 /** Aluminium of the 4xxx and 5xxx series under one button: the case that a machine's panel hides. */

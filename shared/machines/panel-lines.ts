@@ -5,6 +5,7 @@ import { formatNumber } from '../units/format.ts'
 import { SI_UNIT } from '../units/types.ts'
 import { notice, PROGRAM_KINDS, type Approved, type CardFacts } from './card-facts.ts'
 import { dialFigures, dialStored, narrowed, overlap, type Dialled, type Span } from './dial.ts'
+import { list } from './fit-notices.ts'
 import { fromStorage, PANEL_QUANTITY, toStorage } from './panel-quantities.ts'
 import { commonStretches, isUneven, knobStretches, measuredAt, stationsOf, widest, type Measured } from './program-points.ts'
 import { measurementsFor } from './wires.ts'
@@ -139,7 +140,7 @@ function led(facts: CardFacts, control: PanelControl, notices: PanelNotice[]): L
   }
   const results = sets.map((set) => ({ set, result: knobOf(control, set, held) }))
   const found = results.flatMap(({ result }) => (result && 'dial' in result ? [result] : [])).sort((one, other) => other.dial.max - other.dial.min - (one.dial.max - one.dial.min))[0]
-  const names = (of: readonly Measured[]) => of.map((one) => PANEL_QUANTITY[one].label.toLowerCase()).join(' and ')
+  const names = (of: readonly Measured[]) => list(of.map((one) => PANEL_QUANTITY[one].label.toLowerCase()))
   if (found) {
     const { set, dial, stretches, limits, unknown } = found
     const uneven = limits.filter((of) => isUneven(set.points, of))

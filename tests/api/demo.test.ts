@@ -99,7 +99,7 @@ describe('the demo firm', () => {
     const content = async (number: string) => (await get<Revision>(`revisions/${items.find((one) => one.number === number)?.revisionId}`)).content.variables.processes[0]
     const er5356 = await content('WPS-005')
     expect(er5356?.filler.classification).toBe('ER5356')
-    expect(er5356?.electrical.panel).toMatchObject({ machine: 'M-03', mode: 'manual pulse' })
+    expect(er5356?.electrical.panel).toMatchObject({ machine: 'M-003', mode: 'manual pulse' })
     expect(er5356?.electrical.panel?.settings.map(({ control, value, unit }) => `${control} ${value} ${unit}`)).toEqual(['Wire feed 335 in/min', 'Voltage 23.4 V', 'Background 17.0 V', 'Frequency 120 Hz', 'Pulse on-time 1.9 ms'])
     expect(er5356?.electrical.panel?.caution).toContain('no crater fill')
     expect((await content('WPS-008'))?.filler.classification).toBe('ER4043')

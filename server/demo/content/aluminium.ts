@@ -7,9 +7,9 @@ import { bends, FACE_AND_ROOT, runs, tensions } from './tests.ts'
 type Panel = NonNullable<WeldingVariables['processes'][number]['electrical']['panel']>
 interface PanelSettings { wireFeed: number; voltage: number; background: number; frequency: number; onTime: number }
 
-/** The knobs of machine M-03, in the words on its panel. */
+/** The knobs of machine M-003, in the words on its panel. */
 const panel = ({ wireFeed, voltage, background, frequency, onTime }: PanelSettings): Panel => ({
-  machine: 'M-03',
+  machine: 'M-003',
   mode: 'manual pulse',
   caution: 'This mode has no crater fill: circle back over the last 10 mm and break the arc on the weld, never on the plate.',
   settings: [
@@ -70,7 +70,7 @@ const tested = { laboratory: 'Wharfside Materials Laboratory' }
 export const platform6061Coupon = (): CouponContent =>
   couponContentSchema.parse({
     ...coupon('6061-T6 plate 6 mm, pulsed GMAW, ER5356, 3G up', 'us-b209-6061-t6', 'A55120', 'a510-er5356', PULSE_5356),
-    weldedOn: '2026-04-02', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Hal Ostby', machine: 'M-03',
+    weldedOn: '2026-04-02', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Hal Ostby', machine: 'M-003',
     runSheet: runs('gmaw', 1.2, [['root', 150, 23.3, 480, 19], ['cap', 158, 23.5, 520, 58]], { feed: 8.51 }),
     tension: tensions(19, 6, [21.4, 21.9], 'heat-affected-zone'), bends: bends(FACE_AND_ROOT, 3, 49.5), ...tested, testedOn: '2026-04-10', reportNumber: 'WML-26-0402',
   })
@@ -79,7 +79,7 @@ export const platform6061Coupon = (): CouponContent =>
 export const handrail6063Coupon = (): CouponContent =>
   couponContentSchema.parse({
     ...coupon('6063-T6 section 6 mm, pulsed GMAW, ER4043, 3G up', 'us-b221-6063-t6', 'A60331', 'a510-er4043', PULSE_4043),
-    weldedOn: '2026-05-04', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Sam Ferrow', machine: 'M-03',
+    weldedOn: '2026-05-04', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Sam Ferrow', machine: 'M-003',
     runSheet: runs('gmaw', 1.2, [['root', 149, 23.2, 470, 19], ['cap', 155, 23.4, 510, 55]], { feed: 7.87 }),
     tension: tensions(19, 6, [15.6, 15.9], 'heat-affected-zone'), bends: bends(['face', 'face'], 3, 49.5), ...tested, reportNumber: 'WML-26-0504',
   })

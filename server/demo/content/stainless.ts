@@ -38,7 +38,7 @@ export const stainless304Coupon = (): CouponContent =>
       baseMetals: { a: metal('us-a240-304l', { heatNumber: 'S71840', certificate: 'LF-C-0322' }), b: metal('us-a240-304l', { heatNumber: 'S71840', certificate: 'LF-C-0322' }) },
       processes: [gtaw({ wire: 'a59-er308l', deposit: mm(6), positions: ['3G'], ...settings })],
     }),
-    weldedOn: '2026-03-24', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Hal Ostby', machine: 'M-04',
+    weldedOn: '2026-03-24', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Hal Ostby', machine: 'M-001',
     runSheet: runs('gtaw', 1.6, [['root', 92, 11, 64, 17], ['fill', 112, 11.6, 78, 84], ['cap', 104, 11.4, 70, 128]]),
     tension: tensions(19, 6, [65.4, 66.1]), bends: bends(FACE_AND_ROOT, 6, 24), laboratory: 'Wharfside Materials Laboratory', testedOn: '2026-04-01', reportNumber: 'WML-26-0324',
   })
@@ -52,6 +52,6 @@ export const stainless316Coupon = (): CouponContent =>
       baseMetals: { a: metal('us-a240-316l', { heatNumber: 'S80217' }), b: metal('us-a240-316l', { heatNumber: 'S80217' }) },
       processes: [gtaw({ wire: 'a59-er316l', deposit: mm(6), positions: ['3G'], ...settings })],
     }),
-    weldedOn: '2026-05-06', welder: 'Joe Pell', welderStamp: 'L07', machine: 'M-04',
+    weldedOn: '2026-05-06', welder: 'Joe Pell', welderStamp: 'L07', machine: 'M-001',
     runSheet: runs('gtaw', 1.6, [['root', 94, 11, 66, 18], ['fill', 110, 11.5, 76, 90]]),
   })

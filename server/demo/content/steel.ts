@@ -40,7 +40,7 @@ export const smawPlateCoupon = (): CouponContent =>
       thickness: mm(10), preheat: { ...coldStart, minimum: celsius(18), interpassMaximum: celsius(205) },
       processes: [smaw({ deposit: mm(10), positions: ['3G'], sizes: [3.2], current: amps(85, 125), voltage: volts(21, 24), speed: travel(75, 120) })],
     }),
-    weldedOn: '2026-03-11', welder: 'Joe Pell', welderStamp: 'L07', witness: 'Hal Ostby', machine: 'M-01',
+    weldedOn: '2026-03-11', welder: 'Joe Pell', welderStamp: 'L07', witness: 'Hal Ostby', machine: 'M-001',
     runSheet: runs('smaw', 3.2, [['root', 88, 21.5, 78, 18], ['hot', 112, 22.8, 105, 96], ['fill', 118, 23.2, 112, 148], ['fill', 120, 23.4, 115, 182], ['cap', 116, 23, 98, 205]]),
     tension: tensions(19, 10, [99.6, 100.8]), bends: bends(FACE_AND_ROOT, 10, 40), ...tested, reportNumber: 'WML-26-0311',
   })
@@ -71,7 +71,7 @@ export const gmawPlateCoupon = (): CouponContent =>
       thickness: mm(12), preheat: { ...coldStart, minimum: celsius(16), interpassMaximum: celsius(190) },
       processes: [gmaw({ deposit: mm(12), current: amps(265, 285), voltage: volts(28.5, 29.5), wire: feed(8.6, 9.2), flow: [18], speed: travel(340, 420) })],
     }),
-    weldedOn: '2026-03-12', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Hal Ostby', machine: 'M-02',
+    weldedOn: '2026-03-12', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Hal Ostby', machine: 'M-002',
     runSheet: runs('gmaw', 1.2, [['root', 268, 28.6, 360, 16], ['fill', 276, 29, 380, 110], ['fill', 280, 29.2, 400, 162], ['cap', 272, 28.8, 345, 190]], { feed: 8.9 }),
     tension: tensions(19, 12, [104.2, 105.1]), bends: bends(FOUR_SIDE, 10, 40), ...tested, reportNumber: 'WML-26-0312',
   })
@@ -102,7 +102,7 @@ export const fcawPlateCoupon = (): CouponContent =>
       thickness: mm(12), preheat: { ...coldStart, minimum: celsius(17), interpassMaximum: celsius(175) },
       processes: [fcaw({ deposit: mm(12), current: amps(178, 196), voltage: volts(24, 25), wire: feed(7, 7.6), flow: [20] })],
     }),
-    weldedOn: '2026-04-08', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Sam Ferrow', machine: 'M-02',
+    weldedOn: '2026-04-08', welder: 'Anya Brook', welderStamp: 'L11', witness: 'Sam Ferrow', machine: 'M-002',
     runSheet: runs('fcaw', 1.2, [['root', 180, 24.1, 150, 17], ['fill', 192, 24.6, 165, 120], ['cap', 186, 24.4, 140, 175]], { feed: 7.3 }),
     tension: tensions(19, 12, [101.8, 100.4]), bends: bends(FOUR_SIDE, 10, 40, { S3: 6.5 }), laboratory: tested.laboratory, testedOn: '2026-04-15', reportNumber: 'WML-26-0408',
     notes: 'Slag along one side wall, seen on the opened bend. To be welded again with a wider root.',
@@ -134,7 +134,7 @@ export const pipeCoupon = (): CouponContent =>
       thickness: mm(11), diameter: mm(168.3), preheat: { ...coldStart, minimum: celsius(15), interpassMaximum: celsius(220) },
       processes: [gtawRoot({ deposit: mm(4), current: amps(100, 112), flow: [10] }), pipeFill({ deposit: mm(7), current: amps(82, 110), voltage: volts(21, 24), sizes: [3.2] })],
     }),
-    weldedOn: '2026-03-17', welder: 'Joe Pell', welderStamp: 'L07', witness: 'Hal Ostby', machine: 'M-04',
+    weldedOn: '2026-03-17', welder: 'Joe Pell', welderStamp: 'L07', witness: 'Hal Ostby', machine: 'M-001',
     runSheet: [...runs('gtaw', 2.4, [['root', 102, 11.2, 55, 15], ['hot', 110, 11.6, 70, 92]], { length: 520 }), ...runs('smaw', 3.2, [['fill', 92, 22.4, 85, 150], ['fill', 104, 23, 96, 190], ['cap', 98, 22.6, 80, 220]], { first: 3, length: 520 })],
     tension: tensions(19, 11, [95.2, 96.8]), bends: bends(FOUR_SIDE, 10, 40), ...tested, reportNumber: 'WML-26-0317',
   })
