@@ -46,7 +46,8 @@ function diameterBand(context: RangeContext, side: CouponSide, which: 'a' | 'b')
   return { sure: reading.sure, maybe: reading.maybe, tested: D, reason: `D = ${show(D, 'mm')}: ${reading.how} by Table 9.`, why: reading.why, clause: '8.3.3 Table 9', basis: reading.basis }
 }
 
-const build = (which: 'a' | 'b'): Rule => {
+/** The rule for one of the two members. */
+export const diameterRule = (which: 'a' | 'b'): Rule => {
   const rule = bandRule({
     meta: meta(which === 'a' ? 'diameter' : 'diameter-second', { title: which === 'a' ? 'Outside diameter' : 'Outside diameter of member B', clause: '8.3.3', basis: 'secondary', combine: 'union', statement: which === 'a' ? 'At level 2 a pipe covers half its diameter and up; where the edition of 2004 is narrower (at least 25 mm, and up to 25 mm at most twice the diameter) the figure must be looked up. Plate covers pipe above 500 mm, above 150 mm where it turns in PA or PC; pipe covers plate. Of a hollow section that is not round the smaller side counts. Level 1 does not limit it.' : 'Branch and run pipe are each judged by their own diameter.' }),
     field: which === 'a' ? 'diameter' : 'diameterB',
@@ -61,5 +62,4 @@ const build = (which: 'a' | 'b'): Rule => {
   return freeAtLevelOne(rule, (context) => !isStated(which === 'a' ? context.procedure.diameter : context.procedure.diameterB))
 }
 
-export const diameter = build('a')
-export const diameterSecond = build('b')
+export const diameter = diameterRule('a')

@@ -1,4 +1,4 @@
-/** 8.3.2: parent thickness of both members, Tables 7 and 8. */
+/** 8.3.2: parent thickness, Tables 7 and 8. */
 import { intersectNumeric, unionNumeric } from '../../../ranges/numeric.ts'
 import { askedInterval, hasImpactTests, siSingle } from '../../common/iso-names.ts'
 import { isStated } from '../../common/reading.ts'
@@ -41,7 +41,8 @@ function parentBand(context: RangeContext, side: CouponSide, which: 'a' | 'b'): 
   return { ...band, sure: mm(null, null), maybe: mm(null, null), reason: `The test piece is ${show(t, 'mm')}, ${FREE_THICKER} mm or more: the thicker member is not limited.`, why: undefined, missing: undefined, basis: 'secondary' }
 }
 
-const build = (which: 'a' | 'b'): Rule =>
+/** The rule for one of the two members. */
+export const thicknessRule = (which: 'a' | 'b'): Rule =>
   bandRule({
     meta: meta(which === 'a' ? 'parent-thickness' : 'parent-thickness-second', {
       title: which === 'a' ? 'Parent material thickness' : 'Parent material thickness, second member',
@@ -60,6 +61,4 @@ const build = (which: 'a' | 'b'): Rule =>
     plan: (asked) => `A coupon of level 2 whose range holds ${show(asked.min ?? 0, 'mm')} to ${asked.max === null ? 'every thickness' : show(asked.max, 'mm')} (8.3.2).`,
   })
 
-export const parentThickness = build('a')
-
-export const parentThicknessSecond = build('b')
+export const parentThickness = thicknessRule('a')
