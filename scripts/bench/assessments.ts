@@ -1,33 +1,64 @@
-import { assess, type AssessInput } from '../../shared/assessment/assess.ts'
-import type { Figure } from './measure.ts'
-import type { Caller } from './product.ts'
+/** The engine alone, without database or server: whole assessments a second on one core, and the same rules in a general rule library. */
+import { assess } from '../../shared/assessment/assess.ts'
+import { assessEach } from '../../shared/assessment/throughput.ts'
+import { cases, type Case } from './cases.ts'
+import { compare } from './library.ts'
+import { cpuSlices, median, type Figure, type Slices } from './measure.ts'
 
-/** The stored procedure with the most supporting coupons, as the engine takes it. */
-async function inputFrom(caller: Caller): Promise<{ input: AssessInput; number: string }> {
-  const { items } = await caller.read('listProcedures', { query: { standard: 'asme-ix', state: 'approved', limit: '200' } })
-  const revisions = await Promise.all(items.map((row) => caller.read('readRevision', { id: row.revisionId })))
-  const revision = revisions.sort((a, b) => b.coupons.length - a.coupons.length)[0]
-  const choice = revision?.content.variables.standards.find((one) => one.standard === 'asme-ix')
-  if (!revision || !choice) throw new Error('The demo firm has no approved procedure under ASME IX to assess.')
-  const coupons = await Promise.all(revision.coupons.map((coupon) => caller.read('readCoupon', { id: coupon.id })))
-  return {
-    number: revision.number,
-    input: { procedure: revision.content, standard: choice.standard, edition: choice.edition, level: choice.level, coupons: coupons.map((coupon) => ({ id: coupon.id, number: coupon.number, certified: coupon.state === 'certified', content: coupon.content })) },
-  }
+/** Procedures in a pool; each slice of a measurement takes every one of them once. */
+const POOL = 600
+
+const rates = (slices: Slices): { median: number; best: number; wall: number } => ({ median: 1e6 / median(slices.cpu), best: 1e6 / Math.min(...slices.cpu), wall: 1e6 / median(slices.wall) })
+
+/** Two figures of one measurement: the middle slice, and the one that other work on the machine disturbed least. */
+function figuresOf(name: string, slices: Slices, what: string): Figure[] {
+  const { median: middle, best, wall } = rates(slices)
+  const note = `${what}; processor time of one core, ${slices.cpu.length} slices of ${POOL}`
+  return [
+    { name, value: middle, unit: '/s', note: `median slice; ${note}`, details: { best, wall, slices: slices.cpu.length, procedures: POOL } },
+    { name: `${name}, best slice`, value: best, unit: '/s', note },
+  ]
 }
 
-/** Whole assessments a second on one core, of a stored procedure and its coupons. */
-export async function measureAssessments(caller: Caller, seconds: number): Promise<Figure[]> {
-  const { input, number } = await inputFrom(caller)
-  const { findings } = assess(input)
-  if (findings.length < 5) throw new Error(`The assessment of ${number} has ${findings.length} findings: too few to be one worth measuring.`)
-  for (let i = 0; i < 200; i++) assess(input)
-  const begun = performance.now()
-  let count = 0
-  while (performance.now() - begun < seconds * 1000) {
-    for (let i = 0; i < 50; i++) assess(input)
-    count += 50
+function describe({ input }: Case): { text: string; findings: number } {
+  const { findings, ranges } = assess(input)
+  const judged = findings.filter((one) => one.class !== 'not-a-variable').length
+  return { text: `${judged} variables judged, ${ranges.length} ranges, ${input.coupons.length} coupons, toughness, ${POOL} procedures that differ`, findings: judged }
+}
+
+/** Each case by itself, then ASME IX in turns with the library. @param seconds for each case */
+export async function measureAssessments(seconds: number): Promise<Figure[]> {
+  const figures: Figure[] = []
+  for (const one of cases(POOL)) {
+    const { text, findings } = describe(one)
+    const isMain = one.input.standard === 'asme-ix'
+    if (findings < (isMain ? 40 : 20)) throw new Error(`${one.name} has ${findings} findings: too few to be a case worth measuring.`)
+    const run = { ours: (): number => assessEach(one.pool) }
+    figures.push(...figuresOf(`Assessments, ${one.name}`, (await cpuSlices(run, POOL, seconds)).ours, text))
+    if (isMain) figures.push(...(await measureLibrary(one, findings, seconds)))
   }
-  const perSecond = count / ((performance.now() - begun) / 1000)
-  return [{ name: 'Assessments', value: perSecond, unit: '/s', note: `${number}, ${input.coupons.length} coupon${input.coupons.length === 1 ? '' : 's'}, ${findings.length} findings, one core` }]
+  return figures
+}
+
+async function measureLibrary(one: Case, findings: number, seconds: number): Promise<Figure[]> {
+  const { rules, facts, judge } = await compare(one.input, one.pool)
+  const slices = await cpuSlices(
+    {
+      ours: () => assessEach(one.pool),
+      library: async () => {
+        let covered = 0
+        for (const own of facts) covered += (await judge(own)).length
+        return covered
+      },
+    },
+    POOL,
+    seconds * 2,
+  )
+  const ours = rates(slices.ours)
+  const library = rates(slices.library)
+  return [
+    ...figuresOf('json-rules-engine 7.3.1, ASME IX', slices.library, `${rules.length} of those variables, verdicts alone, facts read beforehand; equal to ours over the pool`),
+    { name: 'Assessments: ours / library', value: ours.median / library.median, unit: '×', note: `whole assessment of ${findings} variables against ${rules.length} in the library; median slices in turns`, details: { best: ours.best / library.best } },
+    { name: 'A variable: ours / library', value: (ours.median * findings) / (library.median * rules.length), unit: '×', note: 'by variable judged, sentences, reasoning, cures and ranges included in ours' },
+  ]
 }

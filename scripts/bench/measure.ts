@@ -5,6 +5,8 @@ export interface Figure {
   unit: 'ms' | 's' | '/s' | '×'
   /** How it was measured, and how often. */
   note: string
+  /** Further figures of the same measurement, for the file alone. */
+  details?: Readonly<Record<string, number>>
 }
 
 /**
@@ -37,6 +39,38 @@ export async function alternate<K extends string>(work: Record<K, () => Promise<
     }
   }
   return times
+}
+
+/** Microseconds for each item, slice by slice: processor time of this process, and time on the clock. */
+export interface Slices { cpu: number[]; wall: number[] }
+
+/**
+ * Does each piece of work in turns, and tells what an item took. Processor time leaves out what other programs took meanwhile.
+ * @param work each goes through `items` items a call; its answer is summed up, so that nothing can be skipped
+ * @param seconds for the whole, after a second of warming up; at least ten rounds are done
+ * @throws Error when a piece of work made nothing
+ */
+export async function cpuSlices<K extends string>(work: Record<K, () => number | Promise<number>>, items: number, seconds: number): Promise<Record<K, Slices>> {
+  const names = Object.keys(work) as K[]
+  const slices = Object.fromEntries(names.map((name) => [name, { cpu: [], wall: [] }])) as unknown as Record<K, Slices>
+  const warm = performance.now() + 1000
+  const end = warm + seconds * 1000
+  let rounds = 0
+  while (rounds < 10 || performance.now() < end) {
+    const counts = performance.now() >= warm
+    for (const name of names) {
+      const clock = performance.now()
+      const cpu = process.cpuUsage()
+      const made = await work[name]()
+      const used = process.cpuUsage(cpu)
+      if (made === 0) throw new Error(`${name} made nothing, so there is nothing to measure.`)
+      if (!counts) continue
+      slices[name].cpu.push((used.user + used.system) / items)
+      slices[name].wall.push(((performance.now() - clock) * 1000) / items)
+    }
+    if (counts) rounds += 1
+  }
+  return slices
 }
 
 const digits = ({ value, unit }: Figure): string => (unit === '/s' ? Math.round(value).toLocaleString('en') : value.toFixed(unit === '×' || value < 10 ? 2 : value < 100 ? 1 : 0))

@@ -1,5 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { alternate, median, table } from '../../../scripts/bench/measure.ts'
+import { assess } from '@shared/assessment/assess.ts'
+import { cases } from '../../../scripts/bench/cases.ts'
+import { compare } from '../../../scripts/bench/library.ts'
+import { alternate, cpuSlices, median, table } from '../../../scripts/bench/measure.ts'
 import { readStatement } from '../../../scripts/bench/statement.ts'
 
 describe('median', () => {
@@ -18,6 +21,46 @@ describe('alternate', () => {
     const times = await alternate({ a: note('a'), b: note('b') }, 0)
     expect(order).toEqual(['a', 'b', 'a', 'b', 'a', 'b', 'a', 'b'])
     expect([times.a.length, times.b.length]).toEqual([3, 3])
+  })
+})
+
+describe('cpuSlices', () => {
+  it('takes turns and tells processor time and clock for each item', async () => {
+    const order: string[] = []
+    const note = (name: string) => () => order.push(name)
+    const { a, b } = await cpuSlices({ a: note('a'), b: note('b') }, 4, 0)
+    expect(order.slice(0, 4)).toEqual(['a', 'b', 'a', 'b'])
+    expect(a.cpu.length).toBeGreaterThanOrEqual(10)
+    expect([a.wall.length, b.cpu.length, b.wall.length]).toEqual([a.cpu.length, a.cpu.length, a.cpu.length])
+    expect([...a.cpu, ...b.wall].every((value) => value >= 0)).toBe(true)
+  })
+  it('does not measure work that makes nothing', async () => {
+    await expect(cpuSlices({ idle: () => 0 }, 1, 0)).rejects.toThrow('idle made nothing')
+  })
+})
+
+describe('the cases of the engine', () => {
+  const all = cases(40)
+  it.each(all)('$name: procedures that all differ, on two coupons, with verdicts of every kind', ({ input, pool }) => {
+    expect(new Set(pool.map(({ procedure }) => JSON.stringify(procedure))).size).toBe(40)
+    expect(new Set(pool.map(({ procedure }) => procedure)).size).toBe(40)
+    expect(input.coupons).toHaveLength(2)
+    expect(new Set(pool.flatMap((one) => assess(one).findings.map(({ verdict }) => verdict)))).toEqual(new Set(['within', 'outside', 'cannot-tell']))
+  })
+  it('judges more than 40 variables under ASME IX, all of them within as the procedure stands', () => {
+    const main = all.find(({ input }) => input.standard === 'asme-ix')
+    const assessment = main && assess(main.input)
+    expect(assessment?.verdict).toBe('within')
+    expect(assessment?.findings.filter((one) => one.class !== 'not-a-variable').length).toBeGreaterThan(40)
+  })
+  it('is judged by the general library as by ourselves', async () => {
+    const main = all.find(({ input }) => input.standard === 'asme-ix')
+    if (!main) throw new Error('no case')
+    const { rules, facts, judge } = await compare(main.input, main.pool)
+    expect(rules.length).toBeGreaterThanOrEqual(12)
+    expect(rules).toEqual(expect.arrayContaining(['asme-ix/base-metal-thickness', 'asme-ix/filler-f-number', 'asme-ix/preheat', 'asme-ix/heat-input', 'asme-ix/shielding-gas']))
+    const covered = await Promise.all(facts.map((own) => judge(own)))
+    expect(covered.filter((ids) => ids.length < rules.length).length).toBeGreaterThan(0)
   })
 })
 
