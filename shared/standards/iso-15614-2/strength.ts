@@ -41,6 +41,7 @@ function ofMember(metal: BaseMetal, ageing: Ageing, name: 'a' | 'b'): Required {
   const at = `variables.baseMetals.${name}`
   if (!group) return { why: 'The ISO/TR 15608 group of the parent metal isn\'t recorded.', field: `${at}.iso15608` }
   if (minimum === null) return { why: 'The specified minimum strength of the parent metal isn\'t recorded.', field: `${at}.minTensile` }
+  if (group.main === 23 && group.sub === null) return { why: 'The sub-group of the parent metal isn\'t recorded: 23.1 and 23.2 have coefficients of their own.', field: `${at}.iso15608` }
   const temper = temperOf(metal.condition)
   const hardening = group.main === 23
   if (hardening && !metal.condition) return { why: 'The temper of the parent metal isn\'t recorded.', field: `${at}.condition` }

@@ -13,13 +13,14 @@ export const nothing: NumericRange = numericRange('length', 'mm', [])
 const WHY = 'The figures recalled and those of the standard before it differ there.'
 const two = (recalled: NumericRange, before: NumericRange, how: string): Reading => ({ sure: intersectNumeric(recalled, before), maybe: unionNumeric(recalled, before), how, why: WHY })
 
-/** Butt welds. @param runs null = not recorded, read as the narrower single run where the two differ */
+/** Butt welds. @param runs null = not recorded: what both give is sure, what either gives may be */
 export function buttThickness(t: number, runs: 'single' | 'multiple' | null): Reading {
   const recalled = t <= 3 ? mm(0.5 * t, 2 * t) : t <= 20 ? mm(3, 2 * t) : mm(0.8 * t, null)
   const how = t <= 3 ? '0.5t to 2t' : t <= 20 ? '3 mm to 2t' : '0.8t and up'
   const single = mm(0.8 * t, 1.1 * t)
   const multiple = t <= 3 ? mm(t, 2 * t) : t <= 12 ? mm(3, 2 * t) : t <= 100 ? mm(0.5 * t, Math.min(2 * t, 150)) : mm(0.5 * t, 1.5 * t)
-  return two(recalled, runs === 'multiple' ? multiple : runs === 'single' ? single : intersectNumeric(single, multiple), how)
+  if (runs === null) return { sure: intersectNumeric(recalled, intersectNumeric(single, multiple)), maybe: unionNumeric(recalled, unionNumeric(single, multiple)), how, why: WHY }
+  return two(recalled, runs === 'multiple' ? multiple : single, how)
 }
 
 export const throat = (a: number): Reading => (a < 10 ? { sure: mm(0.75 * a, 1.5 * a), maybe: mm(0.75 * a, 1.5 * a), how: '0.75a to 1.5a' } : two(mm(7.5, null), mm(10, null), '7.5 mm and up'))

@@ -11,7 +11,7 @@ export const jointType = asTested({
   field: 'joint.weld',
   at: 'weld',
   label: 'type of weld',
-  statement: 'The same type of weld is covered; a fillet coupon proves no mechanical properties, so it covers no butt weld. What else a coupon covers must be looked up.',
+  statement: 'The same type of weld is covered; a fillet coupon proves no mechanical properties, so it covers no butt weld; where a fillet carries load hold a butt record too, which no record tells. What else a coupon covers must be looked up.',
   read: weldType,
   covers: (value) => (value === 'fillet weld' ? { sure: [value] } : sameOnly('Which other types of weld a coupon covers is not held here.')(value)),
 })

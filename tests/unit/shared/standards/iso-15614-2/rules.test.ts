@@ -31,6 +31,12 @@ const rows: Row[] = [
   { rule: 'material-group', coupon: groups('23.1', '22.4'), procedure: groups('22.4', '23.1'), verdict: 'within' },
   { rule: 'material-group', both: groups(null), verdict: 'within' },
   { rule: 'material-group', procedure: (v, b) => { groups(null)(v, b); for (const one of [v.baseMetals.a, v.baseMetals.b]) Object.assign(one, { grade: null, uns: null }) }, verdict: 'cannot-tell' },
+  { rule: 'material-group', both: groups('1.2'), verdict: 'cannot-tell', says: 'no group of aluminium' },
+  { rule: 'material-group', coupon: groups('43'), verdict: 'cannot-tell', says: 'no group of aluminium' },
+  { rule: 'material-group', both: groups('22.9'), verdict: 'cannot-tell' },
+  { rule: 'material-group', both: groups('22'), verdict: 'cannot-tell' },
+  { rule: 'material-group', both: groups('21'), verdict: 'within' },
+  { rule: 'parent-thickness', base: { thickness: 25 }, coupon: (_, b) => (b.technique.passesPerSide = null), procedure: thick(15), verdict: 'cannot-tell' },
   { rule: 'parent-thickness', procedure: thick(3, 20), verdict: 'within' },
   { rule: 'parent-thickness', procedure: thick(21), verdict: 'outside' },
   { rule: 'parent-thickness', base: { thickness: 25 }, procedure: thick(20, 50), verdict: 'within' },
@@ -151,6 +157,7 @@ describe('strength', () => {
     expect(first({ group: '23.1', temper: 'T4', ageing: 'artificial', strengths: [400] }).verdict).toBe('cannot-tell')
     expect(first({ group: '23.1', temper: 'T6', ageing: null }).sentence).toContain('aged')
     expect(first({ group: '23.1', temper: null }).sentence).toContain('temper')
+    expect(first({ group: '23', temper: 'T6' }).sentence).toContain('23.1 and 23.2')
     expect(first({ group: '24.2', temper: 'T6' }).sentence).toContain('design specification')
     expect(first({ change: (v) => (v.baseMetals.a.iso15608 = null) }).verdict).toBe('cannot-tell')
     expect(first({ change: (v) => (v.baseMetals.b.minTensile = null) }).verdict).toBe('cannot-tell')
