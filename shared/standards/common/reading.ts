@@ -20,11 +20,14 @@ const FAULT: Figures = { min: null, max: null, all: false, fault: true }
 /** Nine decimals: takes the last-bit noise off a product, so that 1.1 × 8 is 8.8 at a boundary. Quicker than by digits. */
 export const tidy = (value: number): number => Math.round(value * 1e9) / 1e9
 
+/** Storage keeps nine decimals, which a unit's factor magnifies: of a converted figure seven are told apart. */
+const converted = (value: number): number => Math.round(value * 1e7) / 1e7 + 0
+
 /** A storage figure in the unit of `system`, without the noise that typing it in another unit leaves. */
 export function inUnitOf(si: number, dimension: Dimension, system: UnitSystem): number {
   if (system === 'SI') return tidy(si)
   const unit = UNITS[dimension][SHOWN_UNIT.US[dimension]]
-  return unit ? tidy((si - (unit.offset ?? 0)) / unit.factor) : si
+  return unit ? converted((si - (unit.offset ?? 0)) / unit.factor) : si
 }
 
 /** A quantity as the figure that a rule of `system` compares. */

@@ -2,7 +2,7 @@
 import { describe, expect, test } from 'vitest'
 import { between, closed, numericRange, UNKNOWN, UNLIMITED } from '@shared/ranges/numeric.ts'
 import { setRange } from '@shared/ranges/set.ts'
-import { figures, gasName, isInert, isStated, single } from '@shared/standards/common/reading.ts'
+import { figure, figures, gasName, isInert, isStated, single } from '@shared/standards/common/reading.ts'
 import { figureRule, namedRule, weakest } from '@shared/standards/common/rule-kinds.ts'
 import { list, names, showAsked, showRange, showSpan } from '@shared/standards/common/wording.ts'
 import type { CouponSide, RuleContext, RuleMeta } from '@shared/standards/rule.ts'
@@ -55,22 +55,22 @@ describe('kinds of rule', () => {
   const context: RuleContext = { edition: '2021', level: null, system: 'SI', toughness: false, procedure: wps, block: null, coupons: [], path: '' }
   const tested = coupon()
   const sides: CouponSide[] = [{ coupon: tested, variables: tested.content.variables, block: null, role: 'mechanical' }]
-  const figure = (asked: { min: number | null; max: number | null } | null | 'fault'): ReturnType<typeof figureRule> => figureRule({ meta, field: 'diameter', at: 'weld', label: 'diameter', dimension: 'length', asked: () => asked, range: () => null })
+  const figureOf = (asked: { min: number | null; max: number | null } | null | 'fault'): ReturnType<typeof figureRule> => figureRule({ meta, field: 'diameter', at: 'weld', label: 'diameter', dimension: 'length', asked: () => asked, range: () => null })
   const named = (asked: string[] | null, applies?: () => boolean): ReturnType<typeof namedRule> => namedRule({ meta, field: 'trial', at: 'weld', label: 'trial', applies, asked: () => asked, tested: () => undefined, because: 'trial' })
   test('a figure', () => {
     const range = length(closed(5), closed(20))
-    expect(figure(null).check(context, sides, range)).toMatchObject({ verdict: 'cannot-tell', missing: ['procedure: diameter'] })
-    expect(figure('fault').check(context, sides, range)?.sentence).toContain('contradicts itself')
-    expect(figure({ min: 6, max: 7 }).check(context, sides, null)).toBeNull()
-    expect(figure({ min: 1, max: 30 }).check(context, sides, range)).toMatchObject({ verdict: 'outside', sentence: '30 mm is above the 20 mm that PQR-001 qualifies, and 1 mm is below the 5 mm that PQR-001 qualifies.', fixes: [{ field: 'diameter.max' }, { field: 'diameter.min' }, { kind: 'plan-coupon' }] })
-    expect(figure({ min: null, max: null }).check(context, sides, range)).toMatchObject({ verdict: 'outside', sentence: expect.stringContaining('No upper limit is above the 20 mm') as string, fixes: [{ value: { si: 20 } }, { value: { si: 5 } }, {}] })
-    expect(figure({ min: 1, max: 2 }).check(context, sides, numericRange('length', 'mm', []))?.sentence).toContain('qualifies nothing here')
-    expect(figure({ min: 1, max: 2 }).check(context, sides, length(UNKNOWN, UNKNOWN))).toMatchObject({ verdict: 'cannot-tell' })
-    expect(() => figure({ min: 1, max: 2 }).check(context, sides, setRange(['A']))).toThrow(TypeError)
+    expect(figureOf(null).check(context, sides, range)).toMatchObject({ verdict: 'cannot-tell', missing: ['procedure: diameter'] })
+    expect(figureOf('fault').check(context, sides, range)?.sentence).toContain('contradicts itself')
+    expect(figureOf({ min: 6, max: 7 }).check(context, sides, null)).toBeNull()
+    expect(figureOf({ min: 1, max: 30 }).check(context, sides, range)).toMatchObject({ verdict: 'outside', sentence: '30 mm is above the 20 mm that PQR-001 qualifies, and 1 mm is below the 5 mm that PQR-001 qualifies.', fixes: [{ field: 'diameter.max' }, { field: 'diameter.min' }, { kind: 'plan-coupon' }] })
+    expect(figureOf({ min: null, max: null }).check(context, sides, range)).toMatchObject({ verdict: 'outside', sentence: expect.stringContaining('No upper limit is above the 20 mm') as string, fixes: [{ value: { si: 20 } }, { value: { si: 5 } }, {}] })
+    expect(figureOf({ min: 1, max: 2 }).check(context, sides, numericRange('length', 'mm', []))?.sentence).toContain('qualifies nothing here')
+    expect(figureOf({ min: 1, max: 2 }).check(context, sides, length(UNKNOWN, UNKNOWN))).toMatchObject({ verdict: 'cannot-tell' })
+    expect(() => figureOf({ min: 1, max: 2 }).check(context, sides, setRange(['A']))).toThrow(TypeError)
   })
   test('a gap: the end is moved to where the whole lies on one side of it', () => {
     const gap = numericRange('length', 'mm', [{ lower: closed(1), upper: closed(6) }, { lower: closed(16), upper: closed(50) }])
-    expect(figure({ min: 8, max: 20 }).check(context, sides, gap)).toMatchObject({ verdict: 'outside', sentence: expect.stringContaining('gap') as string, fixes: [{ label: 'Set diameter to 16 mm', field: 'diameter.min' }, { kind: 'plan-coupon' }] })
+    expect(figureOf({ min: 8, max: 20 }).check(context, sides, gap)).toMatchObject({ verdict: 'outside', sentence: expect.stringContaining('gap') as string, fixes: [{ label: 'Set diameter to 16 mm', field: 'diameter.min' }, { kind: 'plan-coupon' }] })
   })
   test('a name', () => {
     expect(named(['A']).check(context, sides, setRange(['A']))?.verdict).toBe('within')
@@ -83,4 +83,14 @@ describe('kinds of rule', () => {
   })
   test('a coupon is named once', () => expect(names([...sides, ...sides])).toBe('PQR-001'))
   test('the weaker basis shows', () => expect([weakest('read', 'memory'), weakest('secondary', 'read'), weakest('read', 'read')]).toEqual(['memory', 'secondary', 'read']))
+})
+
+describe('a figure typed in inches or degrees Fahrenheit', () => {
+  test('is read as it was typed, whatever storage keeps of it', () => {
+    for (const [dimension, unit, from, to] of [['temperature', '°F', -40, 1200], ['length', 'in', 1, 400], ['travelSpeed', 'in/min', 1, 90], ['wireFeed', 'in/min', 40, 700]] as const) {
+      for (let value = from; value <= to; value += 1) expect(figure(quantity(value, dimension, unit), dimension, 'US')).toBe(value)
+    }
+    expect(figure(quantity(1 / 32, 'length', 'in'), 'length', 'US')).toBe(1 / 32)
+    expect(figure(quantity(12.7, 'length', 'mm'), 'length', 'US')).toBe(0.5)
+  })
 })
