@@ -63,7 +63,10 @@ export function numbered(rule: Rule): Rule {
     },
     check(context, sides, joined) {
       const judged = rule.check(context, sides, joined)
-      return judged && { ...judged, clause: clauseIn(context.edition, judged.clause ?? own) }
+      if (judged === null) return null
+      const clause = clauseIn(context.edition, judged.clause ?? own)
+      // Without a clause of its own the verdict stands under the rule's.
+      return clause === (judged.clause ?? own) ? judged : { ...judged, clause }
     },
   }
 }

@@ -7,6 +7,7 @@ import type { Quantity } from '../../schemas/common.ts'
 import type { BaseMetal, WeldingVariables } from '../../schemas/welding.ts'
 import type { UnitSystem } from '../../units/types.ts'
 import { figures, isStated, type Figures } from '../common/reading.ts'
+import { remember } from '../common/remember.ts'
 
 export type Group = 'I' | 'II' | 'III' | 'IV' | 'PQR'
 
@@ -19,17 +20,20 @@ const LIST: readonly (readonly [Group, string])[] = [
 ]
 
 /** Specification as the list writes it: A572, API5L. */
-export function specKey(metal: BaseMetal): string | null {
-  if (!metal.specification) return null
-  const plain = metal.specification.toUpperCase().replace(/\b(ASTM|ASME)\b/g, '').replace(/:.*$/, '').replace(/\s+/g, '').replace(/^A\/S?A-?/, 'A').replace(/^SA-?/, 'A').replace(/^(A)-/, '$1').replace(/\/S?A-?\d+M?$/, '')
+export const specKey = (metal: BaseMetal): string | null => (metal.specification ? plainSpecification(metal.specification) : null)
+
+const plainSpecification = remember((specification) => {
+  const plain = specification.toUpperCase().replace(/\b(ASTM|ASME)\b/g, '').replace(/:.*$/, '').replace(/\s+/g, '').replace(/^A\/S?A-?/, 'A').replace(/^SA-?/, 'A').replace(/^(A)-/, '$1').replace(/\/S?A-?\d+M?$/, '')
   return plain.replace(/^(A\d+)M$/, '$1')
-}
+})
 
 /** Grade without the words around it: `Type E Gr. B` → B, `Grade 50` → 50, `HPS 70W` → HPS70W; '' where there is none. */
-export function gradeKey(metal: BaseMetal): string {
-  const text = (metal.grade ?? '').toUpperCase().replace(/\(.*?\)/g, ' ').replace(/—/g, ' ').replace(/\bTYPE\s+[ESF]\b/g, ' ').replace(/\b(GRADE|GR|CLASS|CL|TYPE)\b\.?/g, ' ').replace(/\/\s*L\d+/, ' ')
+export const gradeKey = (metal: BaseMetal): string => plainGrade(metal.grade ?? '')
+
+const plainGrade = remember((grade) => {
+  const text = grade.toUpperCase().replace(/\(.*?\)/g, ' ').replace(/—/g, ' ').replace(/\bTYPE\s+[ESF]\b/g, ' ').replace(/\b(GRADE|GR|CLASS|CL|TYPE)\b\.?/g, ' ').replace(/\/\s*L\d+/, ' ')
   return text.replace(/\s+/g, '')
-}
+})
 
 const BY_KEY = new Map<string, Group>()
 for (const [group, list] of LIST) {
