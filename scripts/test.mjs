@@ -1,6 +1,7 @@
 /** Type-check, lint and every test, from a clean clone on. Needs nothing but Node. */
 import { existsSync, readFileSync, rmSync } from 'node:fs'
 import path from 'node:path'
+import { casesLines, countCases, readCases } from './lib/cases.mjs'
 import { run } from './lib/children.mjs'
 import { readTestArgs, testSteps } from './lib/options.mjs'
 import { dataDir, root } from './lib/paths.mjs'
@@ -43,6 +44,8 @@ async function runStep(step, rest) {
   const args = ['run', '--project', step, '--reporter=default', '--reporter=json', `--outputFile.json=${file}`, ...(filtered ? ['--passWithNoTests'] : []), ...rest]
   const code = await run(process.execPath, ['node_modules/vitest/vitest.mjs', ...args], { env: { ...process.env, NODE_ENV: 'test' } })
   const report = existsSync(file) ? /** @type {import('./lib/totals.mjs').Report} */ (JSON.parse(readFileSync(file, 'utf8'))) : null
+  // Of a part of the tests the table would show what was left out as missing.
+  if (step === 'unit' && report && !filtered) console.log(`\n${casesLines(countCases(report, readCases(path.join(root, 'tests/fixtures/cases')))).join('\n')}`)
   return countReport(report, code, { mayBeEmpty: filtered })
 }
 

@@ -1,6 +1,6 @@
 /** @typedef {{ passed: number, failed: number, skipped: number }} Totals */
 
-/** @typedef {{ numPassedTests: number, numFailedTests: number, numPendingTests: number, numTodoTests: number, testResults: { status: string, name: string, assertionResults: { status: string }[] }[] }} Report What vitest's JSON reporter writes, as far as it is read here. */
+/** @typedef {{ numPassedTests: number, numFailedTests: number, numPendingTests: number, numTodoTests: number, testResults: { status: string, name: string, assertionResults: { status: string, title: string, meta?: { rules?: { standard: string, name: string, count: number } } }[] }[] }} Report What vitest's JSON reporter writes, as far as it is read here. */
 
 /**
  * Counts one run of tests. Whatever went wrong is in the count, also what no single test can report: a file that

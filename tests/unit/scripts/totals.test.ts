@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { addTotals, countReport, totalsLine } from '../../../scripts/lib/totals.mjs'
 
 const report = (given: Partial<Parameters<typeof countReport>[0] & object>) => ({ numPassedTests: 0, numFailedTests: 0, numPendingTests: 0, numTodoTests: 0, testResults: [], ...given })
-const file = (status: string, tests: string[]) => ({ name: 'a.test.ts', status, assertionResults: tests.map((one) => ({ status: one })) })
+const file = (status: string, tests: string[]) => ({ name: 'a.test.ts', status, assertionResults: tests.map((one) => ({ status: one, title: one })) })
 
 describe('countReport', () => {
   it('counts what the runner counted', () => {
