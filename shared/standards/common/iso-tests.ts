@@ -1,13 +1,13 @@
 /** Results of tests that ISO 15614-1 and -2 judge alike: tension, bends, macro sections, impact sets, non-destructive tests. Figures in SI. */
-import type { AssessedCoupon, Basis, CouponQualification, QualifiedRange, SpecimenRequirement, TestVerdict } from '../../schemas/assessment.ts'
+import type { AssessedCoupon, Basis, SpecimenRequirement, TestVerdict } from '../../schemas/assessment.ts'
 import type { BendTest, CouponContent, NdtTest, TensionTest } from '../../schemas/welding.ts'
-import type { CouponSide, RangeContext, Rule } from '../rule.ts'
+import type { Rule } from '../rule.ts'
+import { couponRanges as rangesOf, type CouponRange, type Missing } from './coupon-ranges.ts'
 import { siFigure } from './iso-names.ts'
 import { tidy } from './reading.ts'
-import { weakest } from './rule-kinds.ts'
 import { show } from './wording.ts'
 
-export type Missing = CouponQualification['missing'][number]
+export type { Missing }
 type Reference = Pick<TestVerdict, 'clause' | 'basis'>
 
 /** Stress from maximum load and least area, MPa; null when a measure is missing. */
@@ -135,48 +135,21 @@ export function missingFromRecord({ content }: AssessedCoupon, clause: string): 
   return needs.filter(([present]) => !present).map(([, field, message]) => ({ field, message, clause }))
 }
 
-export type OwnRange = QualifiedRange & { missing: readonly string[] }
+/**
+ * Every range that a coupon gives by itself. It is asked of plate and pipe alike, since a coupon of either covers some of the other; rules of the
+ * weld as a whole give none.
+ */
+export const couponRanges = (coupon: AssessedCoupon, rules: readonly Rule[], edition: string, level: '1' | '2' | null): CouponRange[] => rangesOf({ coupon, rules: rules.flatMap(ofAnyProduct), role: 'full', edition, level })
 
-/** Every range that a coupon gives by itself. @param toughness whether impact counts for it */
-export function couponRanges(coupon: AssessedCoupon, rules: readonly Rule[], given: Pick<RangeContext, 'edition' | 'level' | 'toughness'>): OwnRange[] {
-  const { variables } = coupon.content
-  const out: OwnRange[] = []
-  const context: RangeContext = { ...given, system: 'SI', procedure: null, block: null, coupons: [coupon] }
-  variables.processes.forEach((block, i) => {
-    if (!block.process) return
-    const side: CouponSide = { coupon, variables, block, role: 'full' }
-    for (const rule of rules) {
-      const ruleClass = rule.meta.classes[block.process]
-      if (!ruleClass || ruleClass === 'nonessential' || rule.meta.scope === 'weld' || !rule.meta.editions.includes(given.edition) || (ruleClass === 'supplementary' && !given.toughness)) continue
-      // Judged as if the coupon's own weld were asked, of plate and pipe alike: variables that do not arise for it give no range.
-      if (rule.applies && !rule.applies({ ...context, procedure: { ...variables, product: 'plate-and-pipe' }, block, path: `processes.${i}` })) continue
-      const range = rule.range(context, side)
-      if (!range) continue
-      out.push({
-        ruleId: rule.meta.id,
-        variable: rule.meta.title,
-        label: rule.label,
-        field: rule.at === 'block' ? `processes.${i}.${rule.field}` : rule.field,
-        processId: block.id,
-        process: block.process,
-        class: ruleClass === 'supplementary' ? 'supplementary' : 'essential',
-        range: range.range,
-        tested: range.tested,
-        couponId: coupon.id,
-        clause: range.clause ?? rule.meta.clause,
-        basis: weakest(range.basis ?? rule.meta.basis, rule.meta.basis),
-        reason: range.reason,
-        missing: range.missing ?? [],
-      })
-    }
-  })
-  return out
+function ofAnyProduct(rule: Rule): Rule[] {
+  if (rule.meta.scope === 'weld') return []
+  return [{ ...rule, applies: rule.applies && ((context) => rule.applies?.({ ...context, procedure: { ...context.procedure, product: 'plate-and-pipe' } }) ?? true) }]
 }
 
 const BLOCK_FIELD = /^(?:process|mechanisation|depositThickness|maxPassThickness|filler|positions|progression|shieldingGas|backingGas|plasmaGas|electrical|technique|passes)(?:\.|$)/
 
 /** What the ranges lack, beside the field that lacks it. */
-export function missingFromRanges(ranges: readonly OwnRange[], coupon: AssessedCoupon): Missing[] {
+export function missingFromRanges(ranges: readonly CouponRange[], coupon: AssessedCoupon): Missing[] {
   const missing = new Map<string, Missing>()
   for (const range of ranges) {
     for (const text of range.missing) {

@@ -1,6 +1,6 @@
 /** A coupon by itself: tests asked and recorded, each result judged, what is missing for certification, and what it qualifies. */
 import type { AssessedCoupon, CouponQualification, TestVerdict } from '../../schemas/assessment.ts'
-import { hasImpactTests, siFigure } from '../common/iso-names.ts'
+import { siFigure } from '../common/iso-names.ts'
 import { couponRanges, judgeBend, judgeImpact, judgeMacro, judgeNdt, judgeTension, missingFromRanges, missingFromRecord, missingResults, missingSpecimens, once, stressOf, type Missing } from '../common/iso-tests.ts'
 import { tidy } from '../common/reading.ts'
 import { show } from '../common/wording.ts'
@@ -61,7 +61,7 @@ export function qualify(coupon: AssessedCoupon, edition: string, asked: '1' | '2
   const level: Level = asked ?? couponLevel({ variables }) ?? '2'
   const tests = extent(coupon, level)
   const results = judgeResults(coupon, level)
-  const ranges = couponRanges(coupon, rules, { edition, level, toughness: variables.toughnessRequired === true || hasImpactTests(coupon.content) })
+  const ranges = couponRanges(coupon, rules, edition, level)
   const missing = once([...missingFromRecord(coupon, '9'), ...tests.missing, ...missingSpecimens(tests.rows), ...missingResults(coupon, results), ...formerIssues(coupon), ...missingFromRanges(ranges, coupon)])
   return { standard: 'iso-15614-1', edition, specimens: tests.rows, results, missing, readyToCertify: missing.length === 0, ranges: ranges.map(({ missing: _, ...range }) => range) }
 }

@@ -71,7 +71,7 @@ function formerIssues({ content }: AssessedCoupon): Missing[] {
 export function qualify(coupon: AssessedCoupon, edition: string): CouponQualification {
   const rows = specimens(coupon)
   const results = judgeResults(coupon)
-  const ranges = couponRanges(coupon, rules, { edition, level: null, toughness: false })
+  const ranges = couponRanges(coupon, rules, edition, null)
   const required = requiredStrength(coupon.content.variables)
   const unknown: Missing[] = 'why' in required && rows.some(({ kind }) => kind === 'tension') ? [{ field: required.field, message: required.why, clause: '7.4.2' }] : []
   const missing = once([...missingFromRecord(coupon, '9'), ...unknown, ...missingSpecimens(rows), ...missingResults(coupon, results), ...formerIssues(coupon), ...missingFromRanges(ranges, coupon)])
