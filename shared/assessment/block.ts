@@ -270,7 +270,8 @@ function pushFinding(run: Run, item: Item, sides: readonly Linked[], judged: Jud
   }
   const finding = findingOf(run, item, sides, judged, note)
   run.out.findings.push(finding)
-  if (first) first.finding = { finding, judged, note, ranges: sides.map((side) => rangeOf(run, item, side)) }
+  // A range that is not kept is another object next time, so nothing would be found on it.
+  if (first && sides[0]?.grid[item.prepared.place] === first) first.finding = { finding, judged, note, ranges: sides.map((side) => rangeOf(run, item, side)) }
 }
 
 function isSame(run: Run, item: Item, sides: readonly Linked[], judged: RuleVerdict, note: string | null, { finding, judged: before, note: noted, ranges }: KeptFinding): boolean {
