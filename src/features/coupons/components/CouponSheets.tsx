@@ -1,8 +1,10 @@
 import { useMemo, type ReactNode } from 'react'
 import type { Control, FieldValues } from 'react-hook-form'
 import type { CouponQualification, Verdict } from '@shared/schemas/assessment.ts'
+import { isOpen } from '@shared/records/coupon-states.ts'
 import type { Coupon } from '@shared/schemas/records.ts'
 import type { CouponContent } from '@shared/schemas/welding.ts'
+import { ArcRecordings } from '@/components/arc/ArcRecordings.tsx'
 import { MarginLayout } from '@/components/margin/MarginLayout.tsx'
 import { Signatures } from '@/components/record/Signatures.tsx'
 import { SectionNav, type SectionLink } from '@/components/SectionNav.tsx'
@@ -43,6 +45,7 @@ export function CouponSheets({ coupon, content, control, qualifications, head }:
         <MarginLayout nav={<Index coupon={coupon} content={content} typed={control !== null} qualifications={qualifications} />} head={head}>
           <WeldedSheets />
           <RunSheet />
+          <ArcRecordings of={{ couponId: coupon.id }} closed={!isOpen(coupon.state)} />
           <SpecimensSheet />
           <LaboratorySheet />
           <TestSheets />
@@ -71,6 +74,7 @@ function Index({ coupon, content, typed, qualifications }: { coupon: Coupon; con
     ...processes.map(({ process }, index) => ({ id: blockSectionId(index, 'process'), label: process ?? 'Process' })),
     { id: 'preheat', label: 'Preheat' },
     { id: 'run-sheet', label: 'Run sheet' },
+    { id: 'arc-data', label: 'Arc data' },
     { id: 'specimens', label: 'Specimens', verdict: specimens.length === 0 ? null : specimens.every(({ recorded, required }) => recorded >= required) ? 'within' : 'cannot-tell' },
     { id: 'laboratory', label: 'Laboratory' },
     ...(showsVisual(content, typed) ? [{ id: 'visual', label: 'Visual', verdict: worstVerdict(verdictsOn(qualifications, 'visual').map(({ verdict }) => VERDICT_OF[verdict])) }] : []),
