@@ -6,6 +6,7 @@ import { findBaseMetals } from '@shared/library/base-metals.ts'
 import { findFillers } from '@shared/library/filler-metals.ts'
 import { findGases } from '@shared/library/gases.ts'
 import { libraryRows } from '@shared/library/library-rows.ts'
+import { readProcess } from '@shared/library/processes.ts'
 import { matchScore } from '@shared/library/search.ts'
 import type { Tenant } from '../config/database.ts'
 import { badRequest, notFound } from '../middleware/problem.ts'
@@ -96,7 +97,7 @@ const columns = 'id, kind, key, title, subtitle, origin, basis, source, content,
 export async function listLibrary(tenant: Tenant, kind: Kind, { q, cursor, limit, process, pNumber, fNumber }: Query): Promise<Page<LibraryItem>> {
   const place = placeBy(kind, q)
   const placed = (await candidates(tenant, kind))
-    .filter((row) => (!process || row.processes?.includes(process)) && (!pNumber || row.pNumber?.toUpperCase() === pNumber.toUpperCase()) && (!fNumber || row.fNumber === fNumber))
+    .filter((row) => (!process || row.processes?.some((written) => written === process || readProcess(written)?.process === process)) && (!pNumber || row.pNumber?.toUpperCase() === pNumber.toUpperCase()) && (!fNumber || row.fNumber === fNumber))
     .flatMap((row) => {
       const at = place(row)
       return at === null ? [] : [{ id: row.id, at, ordinal: row.ordinal }]

@@ -6,6 +6,7 @@ import { demoSignIns, loadDemo } from '../../server/demo/load.ts'
 import { DEMO_PASSWORD, FIRM } from '../../server/demo/people.ts'
 import { picturesOf } from '../../server/demo/pictures.ts'
 import type { Assessment } from '../../shared/schemas/assessment.ts'
+import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
 import type { Page } from '../../shared/schemas/common.ts'
 import { ROLES } from '../../shared/schemas/people.ts'
 import type { Coupon, CouponRow, Job, JobRow, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
@@ -42,7 +43,18 @@ describe('the demo firm', () => {
     await load()
     const { rows } = await app.services.database.owner.query('select 1 from organizations where name = $1', [FIRM.name])
     expect(rows).toHaveLength(1)
-    expect((await procedures()).total).toBe(12)
+    expect((await procedures()).total).toBe(15)
+  })
+
+  it('has a recording of a pulsed arc on the open aluminium coupon, with what the meters missed', async () => {
+    const { items } = await get<Page<ArcRecordingRow>>('arc-recordings')
+    expect(items).toHaveLength(1)
+    const recording = await get<ArcRecording>(`arc-recordings/${items[0]?.id}`)
+    expect(recording).toMatchObject({ attachedTo: 'PQR-006 pass 2', figures: { stopCount: 1, badRows: 0, alternating: false } })
+    expect(recording.figures.pulse?.frequency).toBeCloseTo(110, 0)
+    expect(recording.figures.current.mean).toBeCloseTo(155, -1)
+    expect(recording.figures.meterError).toBeLessThan(-10)
+    expect(recording.heatInput).toBeCloseTo(recording.figures.energy / 51 / 1000, 9)
   })
 
   it('has somebody of each role, two engineers, two welders and somebody with two roles', async () => {
@@ -60,12 +72,12 @@ describe('the demo firm', () => {
     const { items } = await procedures()
     const records = await Promise.all(items.map(({ id }) => get<ProcedureRecord>(`procedures/${id}`)))
     const states = records.flatMap(({ revisions }) => revisions.map(({ state }) => state))
-    expect(Object.fromEntries([...new Set(states)].map((state) => [state, states.filter((one) => one === state).length]))).toEqual({ superseded: 1, approved: 6, withdrawn: 1, draft: 3, 'in-review': 2 })
+    expect(Object.fromEntries([...new Set(states)].map((state) => [state, states.filter((one) => one === state).length]))).toEqual({ superseded: 1, approved: 9, withdrawn: 1, draft: 3, 'in-review': 2 })
   })
 
-  it('has eight coupons with pictures, those certified free of anything missing', async () => {
+  it('has eleven coupons with pictures, those certified free of anything missing', async () => {
     const { items } = await get<Page<CouponRow>>('coupons?limit=200')
-    expect(items.map(({ state }) => state)).toEqual(['certified', 'certified', 'certified', 'certified', 'certified', 'testing', 'welding', 'rejected'])
+    expect(items.map(({ state }) => state)).toEqual(['certified', 'certified', 'certified', 'certified', 'certified', 'testing', 'welding', 'rejected', 'certified', 'certified', 'certified'])
     for (const { id, photoCount, state } of items) {
       expect(photoCount).toBe(state === 'welding' ? 1 : 3)
       const { qualifications } = await get<{ qualifications: { readyToCertify: boolean }[] }>(`coupons/${id}/qualification`)
@@ -76,6 +88,20 @@ describe('the demo firm', () => {
     const { items: photos } = await get<{ items: { id: string; tag: string }[] }>(`coupons/${items[0]?.id}/photos`)
     expect(photos.map(({ tag }) => tag)).toEqual(['plate', 'macro', 'bend'])
     await engineer.get(`/api/photos/${photos[1]?.id}/thumbnail`).expect(200)
+  })
+
+  it('has a coupon of each further code that is ready by the code itself, and a procedure within it', async () => {
+    const { items } = await get<Page<CouponRow>>('coupons?limit=200')
+    const coupons = await Promise.all(items.map(({ id }) => get<Coupon>(`coupons/${id}`)))
+    for (const [standard, level] of [['aws-d1-1', null], ['aws-d1-2', null], ['iso-15614-1', '2']] as const) {
+      const coupon = coupons.find(({ content }) => content.variables.standards[0]?.standard === standard)
+      expect([standard, coupon?.state, coupon?.content.variables.standards[0]?.level]).toEqual([standard, 'certified', level])
+      const { assessments } = await get<{ assessments: Assessment[] }>(`revisions/${coupon?.revisionId}/assessment`)
+      expect(assessments.map((one) => [one.standard, one.verdict])).toEqual([[standard, 'within']])
+      expect((coupon?.content.ndt ?? []).length).toBeGreaterThan(0)
+    }
+    expect(coupons.some(({ content }) => content.visual?.cracks === false)).toBe(true)
+    expect(coupons.some(({ content }) => content.hardness.length > 0 && content.toughness.length > 0 && content.macros.length > 0)).toBe(true)
   })
 
   it('says of itself what the engine says of it', async () => {

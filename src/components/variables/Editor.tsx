@@ -80,7 +80,7 @@ function HalfEditor({ of, path, label }: { of: PairOf; path: string; label: stri
 function IntervalEditor({ spec, path, label }: { spec: Of<'interval'>; path: string; label: string }) {
   const { system, record } = useSheet()
   const { value, set, error } = useSheetField<Interval | null>(`variables.${path}`)
-  if (record === 'coupon') return <ObservedField id={inputId(path)} className="max-w-52" label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} />
+  if (record === 'coupon') return <ObservedField id={inputId(path)} className="sm:max-w-52" label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} />
   return <IntervalField id={inputId(path)} label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} allowAll={spec.allMeans !== undefined} allMeans={spec.allMeans} />
 }
 

@@ -53,7 +53,7 @@ export function GasEditor({ path, label }: { path: string; label: string }) {
       <div className="flex flex-wrap items-center gap-x-3 gap-y-2">
         {gas.components.map((part, index) => (
           <div key={index} className="flex items-center gap-1.5">
-            <Select className="w-20" label={`${label}, part ${index + 1}`} labelHidden options={GAS_OPTIONS} value={part.gas} onChange={(event) => change(index, { gas: event.target.value as Component['gas'] })} />
+            <Select className="w-24" label={`${label}, part ${index + 1}`} labelHidden options={GAS_OPTIONS} value={part.gas} onChange={(event) => change(index, { gas: event.target.value as Component['gas'] })} />
             <input
               type="number"
               min={0}

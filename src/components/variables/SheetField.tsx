@@ -29,9 +29,10 @@ export function isStated(value: unknown): boolean {
 export function isShown(spec: RowSpec, prefix: string, block: ProcessBlock | null, sheet: Pick<SheetValue, 'content' | 'control' | 'findings' | 'record'>): boolean {
   const { variables } = sheet.content
   const paths = spec.kind === 'pair' ? spec.paths : [spec.path]
-  if (paths.some((path) => isStated(readPath(variables, `${prefix}${path}`)))) return true
+  const stated = paths.some((path) => isStated(readPath(variables, `${prefix}${path}`)))
+  if (stated && !spec.told) return true
   if (sheet.findings.get(`${prefix}${spec.path}`)?.some(({ verdict }) => verdict !== 'within')) return true
-  return sheet.control !== null && isOffered(spec, variables, block, sheet.record ?? 'procedure')
+  return (sheet.control !== null || stated) && isOffered(spec, variables, block, sheet.record ?? 'procedure')
 }
 
 /** A row of the sheet as the catalogue tells it: label, input or value, gauge, and its notes in the margin. */
@@ -79,13 +80,14 @@ export function Notes({ findings }: { findings: readonly Finding[] }) {
 
 function unitOf(spec: RowSpec, system: 'SI' | 'US') {
   if (spec.kind === 'interval' || spec.kind === 'quantity') return spec.dimension === 'angle' ? 'degrees' : SHOWN_UNIT[system][spec.dimension]
+  if (spec.kind === 'pair' && spec.of.kind === 'quantity') return `${SHOWN_UNIT[system][spec.of.dimension]}, A and B`
   if (spec.kind === 'sizes') return `${SHOWN_UNIT[system].length}, commas between`
   return spec.hint
 }
 
 /** Kinds whose input uses the row's whole width. */
 const WIDE = ['text', 'paragraph', 'metal', 'filler', 'gas', 'panel', 'passes', 'positions']
-const isWide = (spec: RowSpec) => WIDE.includes(spec.kind) && !(spec.kind === 'text' && spec.max <= 20)
+const isWide = (spec: RowSpec) => (WIDE.includes(spec.kind) && !(spec.kind === 'text' && spec.max <= 20)) || (spec.kind === 'pair' && spec.of.kind === 'text' && spec.of.max > 20)
 
 function gauge(spec: RowSpec, findings: readonly Finding[], { system, couponNumber }: ReturnType<typeof useSheet>) {
   const drawn = gaugeOf(findings)

@@ -19,7 +19,7 @@ export const BLOCK_SECTIONS: readonly SectionSpec[] = [
     title: 'Filler metals',
     rows: [
       { kind: 'filler', path: 'filler', label: 'Filler metal' },
-      { kind: 'text', path: 'filler.specification', label: 'Filler specification', max: 80, example: 'ISO 14341-A', when: ownFiller },
+      { kind: 'text', path: 'filler.specification', label: 'Filler specification', max: 80, example: 'ISO 14341-A', told: true, when: ownFiller },
       { kind: 'text', path: 'filler.fNumber', label: 'F-Number', max: 6, when: all(judgedBy('asme-ix', 'aws-d1-2'), filled) },
       { kind: 'whole', path: 'filler.aNumber', label: 'A-Number', min: 1, max: 12, when: all(judgedBy('asme-ix'), filled) },
       { kind: 'text', path: 'filler.depositComposition', label: 'Deposit composition', max: 200, hint: 'where no A-Number fits', example: 'Al-5Mg', when: all(filled, (_weld, block) => block?.filler.aNumber === null) },

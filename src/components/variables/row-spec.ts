@@ -13,6 +13,8 @@ interface Common {
   hint?: string
   /** Further fields whose findings stand at this row. */
   also?: readonly string[]
+  /** Stated in words elsewhere on the page, so what is stated is no reason to show the row. */
+  told?: true
   /** Offered only then, or once something is stated or found in it. */
   when?: (weld: WeldingVariables, block: ProcessBlock | null, record: RecordKind) => boolean
 }

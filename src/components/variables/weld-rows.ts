@@ -8,7 +8,7 @@ const impacts = some((weld) => weld.toughnessRequired === true, all(judgedBy('is
 const postHeated = (weld: { postHeating?: { used: boolean | null } | null | undefined }) => weld.postHeating?.used === true
 const branched = (weld: { joint: { branch?: string | null | undefined } }) => (weld.joint.branch ?? null) !== null
 /** One value of each metal, side by side. */
-const ofMetals = (field: string, label: string, of: PairOf, when: RowSpec['when'], hint = 'A and B'): RowSpec => ({ kind: 'pair', path: `baseMetals.a.${field}`, paths: [`baseMetals.a.${field}`, `baseMetals.b.${field}`], label, hint, of, ...(when && { when }) })
+const ofMetals = (field: string, label: string, of: PairOf, when: RowSpec['when'], more: Pick<RowSpec, 'hint' | 'told'> = {}): RowSpec => ({ kind: 'pair', path: `baseMetals.a.${field}`, paths: [`baseMetals.a.${field}`, `baseMetals.b.${field}`], label, hint: 'A and B', of, ...(when && { when }), ...more })
 
 export const JOINT: SectionSpec = {
   id: 'joint',
@@ -50,14 +50,14 @@ export const BASE_METALS: SectionSpec = {
     ofMetals('iso15608', 'ISO 15608 group', { kind: 'text', max: 8 }, ISO),
     ofMetals('d11Group', 'D1.1 group', { kind: 'text', max: 6 }, judgedBy('aws-d1-1')),
     ofMetals('d12MNumber', 'M-Number', { kind: 'text', max: 6 }, judgedBy('aws-d1-2')),
-    ofMetals('grade', 'Grade', { kind: 'text', max: 80 }, ownMetal),
-    ofMetals('uns', 'UNS or EN number', { kind: 'text', max: 20 }, ownMetal),
-    ofMetals('productForm', 'Product form', { kind: 'text', max: 80 }, ownMetal),
-    ofMetals('condition', 'Condition or temper', { kind: 'text', max: 40 }, judgedBy('aws-d1-2', 'iso-15614-1', 'iso-15614-2'), 'A and B, e.g. N, Q&T, T6'),
-    ofMetals('impactSpecified', 'Impact values specified', { kind: 'flag' }, judgedBy('iso-15614-1'), 'in their own standards'),
-    ofMetals('minTensile', 'Tensile, minimum', { kind: 'quantity', dimension: 'stress' }, some(onCoupon, ownMetal)),
-    ofMetals('minYield', 'Yield, minimum', { kind: 'quantity', dimension: 'stress' }, some(all(onCoupon, judgedBy('aws-d1-1', 'iso-15614-1')), ownMetal)),
-    ofMetals('minElongation', 'Elongation, minimum', { kind: 'quantity', dimension: 'percent' }, some(onCoupon, ownMetal)),
+    ofMetals('grade', 'Grade', { kind: 'text', max: 80 }, ownMetal, { told: true }),
+    ofMetals('uns', 'UNS or EN number', { kind: 'text', max: 20 }, ownMetal, { told: true }),
+    ofMetals('productForm', 'Product form', { kind: 'text', max: 80 }, ownMetal, { told: true }),
+    ofMetals('condition', 'Condition or temper', { kind: 'text', max: 40 }, judgedBy('aws-d1-2', 'iso-15614-1', 'iso-15614-2'), { hint: 'A and B, e.g. N, Q&T, T6' }),
+    ofMetals('impactSpecified', 'Impact values specified', { kind: 'flag' }, judgedBy('iso-15614-1'), { hint: 'A and B, in their own standards' }),
+    ofMetals('minTensile', 'Tensile, minimum', { kind: 'quantity', dimension: 'stress' }, some(onCoupon, ownMetal), { told: true }),
+    ofMetals('minYield', 'Yield, minimum', { kind: 'quantity', dimension: 'stress' }, some(all(onCoupon, judgedBy('aws-d1-1', 'iso-15614-1')), ownMetal), { told: true }),
+    ofMetals('minElongation', 'Elongation, minimum', { kind: 'quantity', dimension: 'percent' }, some(onCoupon, ownMetal), { told: true }),
     ofMetals('heatNumber', 'Heat number', { kind: 'text', max: 60 }, onCoupon),
     ofMetals('certificate', 'Certificate', { kind: 'text', max: 120 }, onCoupon),
     { kind: 'choice', path: 'product', label: 'Product', options: words.PRODUCTS, always: true },

@@ -9,6 +9,7 @@ interface Shared {
   label: string
   most: number
   id?: string
+  className?: string
 }
 
 /** Texts of a list: parts apart by semicolon, by comma and space, or by spaces between bare figures. */
@@ -18,7 +19,7 @@ export function partsOf(text: string): string[] {
 }
 
 /** Several measured values in one box: `31, 28, 34`. What can't be read stays, with the reason. */
-export function QuantitiesField({ label, most, id, value, onChange, dimension, system }: Shared & { value: readonly Quantity[]; onChange: (next: Quantity[]) => void; dimension: Dimension; system: UnitSystem }) {
+export function QuantitiesField({ label, most, id, className, value, onChange, dimension, system }: Shared & { value: readonly Quantity[]; onChange: (next: Quantity[]) => void; dimension: Dimension; system: UnitSystem }) {
   const shown = value.map((one) => formatQuantity(one, dimension, system).figure).join(', ')
   const read = (text: string) => {
     const readings = partsOf(text).map((part) => parseQuantity(part, dimension, system))
@@ -28,11 +29,11 @@ export function QuantitiesField({ label, most, id, value, onChange, dimension, s
     onChange(readings.flatMap((reading) => (reading.ok ? [reading.quantity] : [])))
     return null
   }
-  return <Listed label={label} id={id} shown={shown} read={read} />
+  return <Listed label={label} id={id} className={className} shown={shown} read={read} />
 }
 
 /** Several bare figures in one box: `182, 190, 201`. */
-export function NumbersField({ label, most, id, value, onChange }: Shared & { value: readonly number[]; onChange: (next: number[]) => void }) {
+export function NumbersField({ label, most, id, className, value, onChange }: Shared & { value: readonly number[]; onChange: (next: number[]) => void }) {
   const read = (text: string) => {
     const parts = partsOf(text)
     const bad = parts.find((part) => !(Number(part) > 0))
@@ -41,10 +42,10 @@ export function NumbersField({ label, most, id, value, onChange }: Shared & { va
     onChange(parts.map(Number))
     return null
   }
-  return <Listed label={label} id={id} shown={value.join(', ')} read={read} />
+  return <Listed label={label} id={id} className={className} shown={value.join(', ')} read={read} />
 }
 
-function Listed({ label, id, shown, read }: { label: string; id: string | undefined; shown: string; read: (text: string) => string | null }) {
+function Listed({ label, id, className, shown, read }: { label: string; id: string | undefined; className: string | undefined; shown: string; read: (text: string) => string | null }) {
   const [text, setText] = useState(shown)
   const [seen, setSeen] = useState(shown)
   const [wrong, setWrong] = useState<string | null>(null)
@@ -54,5 +55,5 @@ function Listed({ label, id, shown, read }: { label: string; id: string | undefi
     setWrong(null)
   }
   const leave = () => setWrong(text === shown ? null : read(text))
-  return <TextField id={id} label={label} autoComplete="off" value={text} error={wrong} onChange={(event) => setText(event.target.value)} onBlur={leave} onKeyDown={(event) => event.key === 'Enter' && leave()} />
+  return <TextField id={id} className={className} label={label} autoComplete="off" value={text} error={wrong} onChange={(event) => setText(event.target.value)} onBlur={leave} onKeyDown={(event) => event.key === 'Enter' && leave()} />
 }

@@ -91,9 +91,9 @@ export function TestRow({ path, fields: every, test, mark, onChange, onRemove, c
   return (
     <div id={inputId(path)} role="group" aria-label={mark} tabIndex={-1} className={`sheet-row relative border-b border-hair last:border-b-0 ${worst === 'outside' ? 'wash-outside' : worst === 'cannot-tell' ? 'wash-cannot-tell' : ''}`}>
       <div className="grid grid-cols-1 gap-x-3 px-4 sm:grid-cols-[3.25rem_minmax(0,1fr)] py-3">
-        <p className="pt-0.5 font-narrow text-xl font-semibold break-words">{mark}</p>
+        <p className="pt-0.5 font-narrow text-xl font-semibold break-words max-sm:pr-10">{mark}</p>
         <div className="min-w-0 space-y-2.5">
-          <div className="flex items-start gap-2">
+          <div className="flex items-start gap-2 max-sm:mt-1">
             {onChange ? (
               <div className="grid min-w-0 grow grid-cols-2 items-end gap-x-3 gap-y-2 sm:grid-cols-[repeat(auto-fill,minmax(9.25rem,1fr))]">
                 {fields.map((field) => (
@@ -113,7 +113,7 @@ export function TestRow({ path, fields: every, test, mark, onChange, onRemove, c
               </dl>
             )}
             {onRemove && (
-              <button type="button" aria-label={`Remove ${mark}`} className="flex size-9 shrink-0 items-center justify-center rounded text-soft hover:text-ink" onClick={onRemove}>
+              <button type="button" aria-label={`Remove ${mark}`} className="flex size-9 shrink-0 items-center justify-center rounded text-soft hover:text-ink max-sm:absolute max-sm:top-2 max-sm:right-3" onClick={onRemove}>
                 <X size={16} aria-hidden="true" />
               </button>
             )}
@@ -137,6 +137,8 @@ export function TestRow({ path, fields: every, test, mark, onChange, onRemove, c
   )
 }
 
+/** A sentence or a row of figures takes more room than one figure. */
+const LONG = 'col-span-2 sm:col-span-3'
 const orNull = (text: string) => (text === '' ? null : text)
 const YES_NO = [
   { value: 'yes', label: 'Yes' },
@@ -160,10 +162,10 @@ function FieldOf({ field, id, mark, value, onChange }: { field: TestField; id: s
         </div>
       )
     case 'text':
-      return <TextField id={id} label={label} maxLength={field.max} value={(value as string | null) ?? ''} error={field.key === 'specimen' && !value ? `Mark the specimen, e.g. ${mark || 'T1'}.` : null} onChange={(event) => onChange(field.key === 'specimen' ? event.target.value : orNull(event.target.value))} />
+      return <TextField id={id} className={field.max > 100 ? LONG : ''} label={label} maxLength={field.max} value={(value as string | null) ?? ''} error={field.key === 'specimen' && !value ? `Mark the specimen, e.g. ${mark || 'T1'}.` : null} onChange={(event) => onChange(field.key === 'specimen' ? event.target.value : orNull(event.target.value))} />
     case 'quantities':
-      return <QuantitiesField id={id} label={`${label}, ${SHOWN_UNIT[system][field.dimension]}`} most={field.most} dimension={field.dimension} system={system} value={value as Quantity[]} onChange={onChange} />
+      return <QuantitiesField id={id} className="col-span-2" label={`${label}, ${SHOWN_UNIT[system][field.dimension]}`} most={field.most} dimension={field.dimension} system={system} value={value as Quantity[]} onChange={onChange} />
     case 'numbers':
-      return <NumbersField id={id} label={`${label}, ${field.unit}`} most={field.most} value={value as number[]} onChange={onChange} />
+      return <NumbersField id={id} className={LONG} label={`${label}, ${field.unit}`} most={field.most} value={value as number[]} onChange={onChange} />
   }
 }

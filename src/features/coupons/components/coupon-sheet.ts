@@ -10,7 +10,7 @@ export type Listed<K extends List> = NonNullable<CouponContent[K]>
 /** A list of the coupon while it is typed in. Every change builds on the list as it stands that instant. */
 export function useList<K extends List>(name: K): { items: Listed<K>; error: string | null; put: (next: Listed<K>) => void; change: (index: number, part: Partial<Listed<K>[number]>) => void; remove: (index: number) => void } {
   const { value: kept, set, error } = useSheetField<Listed<K> | null>(name)
-  const value = kept ?? ([] as unknown as Listed<K>)
+  const value = kept ?? []
   return {
     items: value,
     error,
