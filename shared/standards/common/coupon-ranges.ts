@@ -2,6 +2,7 @@
 import type { AssessedCoupon, CouponQualification, QualifiedRange } from '../../schemas/assessment.ts'
 import type { CouponSide, RangeContext, Rule } from '../rule.ts'
 import type { CouponRole } from '../rule.ts'
+import { fieldWords, lowerFirst } from './lacking.ts'
 import { weakest } from './rule-kinds.ts'
 
 export type Missing = CouponQualification['missing'][number]
@@ -58,7 +59,7 @@ export function missingFromRanges(ranges: readonly CouponRange[], number: string
       if (!text.startsWith(`${number}: `)) continue
       const path = text.slice(number.length + 2)
       const field = path.startsWith('runSheet') ? path : OF_THE_WELD.test(path) || !range.field.startsWith('processes.') && !/^(?:filler|electrical|technique|depositThickness|positions|progression|shieldingGas)/.test(path) ? `variables.${path}` : `variables.processes.${blockOf(range)}.${path}`
-      if (!found.has(field)) found.set(field, { field, message: `Record what ${range.label.charAt(0).toLowerCase()}${range.label.slice(1)} needs.`, clause: range.clause })
+      if (!found.has(field)) found.set(field, { field, message: `Record the ${fieldWords(path)}: the range of ${lowerFirst(range.label)} follows from it.`, clause: range.clause })
     }
   }
   return [...found.values()]

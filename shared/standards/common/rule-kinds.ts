@@ -8,7 +8,7 @@ import type { Dimension } from '../../units/types.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext, RuleMeta, RuleRange, RuleVerdict } from '../rule.ts'
 import { betterEnd, intervalCures, valueAt } from './cures.ts'
 import { fieldWords, lackWords, pathOfMissing } from './lacking.ts'
-import { cannotTell, capital, couponLacks, list, names, notStated, show, showAsked, showRange, showSpan, stateFix, verb } from './wording.ts'
+import { cannotTell, capital, couponLacks, list, names, notStated, show, showAsked, showInside, showRange, showSpan, stateFix, verb } from './wording.ts'
 
 /** Full dotted path of a rule's field. */
 export const pathOf = (context: RuleContext, rule: { at: 'weld' | 'block'; field: string }): string => (rule.at === 'block' && context.path ? `${context.path}.${rule.field}` : rule.field)
@@ -196,7 +196,7 @@ function judgeFigures(spec: FigureSpec, context: RuleContext, sides: readonly Co
   const verdict = containsInterval(joined, asked)
   if (verdict === 'cannot-tell') return figuresNotKnown(spec, context, sides, joined, asked)
   if (verdict === 'within') {
-    return { verdict, sentence: `${capital(showAsked(asked, joined.unit))} lies inside the ${showRange(joined)} that ${names(sides)} ${sides.length > 1 ? 'qualify' : 'qualifies'}.`, asked, range: joined }
+    return { verdict, sentence: `${capital(showAsked(asked, joined.unit))} lies inside ${showInside(joined)} that ${names(sides)} ${sides.length > 1 ? 'qualify' : 'qualifies'}.`, asked, range: joined }
   }
   const field = pathOf(context, spec)
   const { sentence, wrong } = miss(spec, context, sides, joined, asked)

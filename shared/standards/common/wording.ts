@@ -41,10 +41,20 @@ export function showRange(range: NumericRange): string {
   return segments.length === 1 && segments[0] ? showSegment(segments[0], unit) : list(segments.map((segment) => showSegment(segment, unit)))
 }
 
+/** A range after "lies inside": "the 5 mm to 20 mm", "the range from 5 mm up", "the range up to 20 mm", "the range without limits". */
+export function showInside(range: NumericRange): string {
+  const [only] = range.segments
+  const shown = showRange(range)
+  if (range.segments.length !== 1 || !only) return `the ${shown}`
+  if (shown === 'any figure') return 'the range without limits'
+  if (only.upper.kind === 'unlimited' && 'value' in only.lower) return `the range from ${show(only.lower.value, range.unit)} up`
+  return shown.startsWith('up to ') ? `the range ${shown}` : `the ${shown}`
+}
+
 function showSegment({ lower, upper }: Segment, unit: string): string {
   if (lower.kind === 'unknown' || upper.kind === 'unknown') return 'a range that is not known'
-  if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? `any ${unit}` : `up to ${show(upper.value, unit)}`
-  if (upper.kind === 'unlimited') return lower.value === 0 ? `any ${unit}` : `${show(lower.value, unit)} and up`
+  if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? 'any figure' : `up to ${show(upper.value, unit)}`
+  if (upper.kind === 'unlimited') return lower.value === 0 ? 'any figure' : `${show(lower.value, unit)} and up`
   if (lower.value === 0 && upper.value !== 0) return `up to ${show(upper.value, unit)}`
   return lower.value === upper.value ? show(lower.value, unit) : `${show(lower.value, unit)} to ${show(upper.value, unit)}`
 }
@@ -69,9 +79,12 @@ export function capital(text: string): string {
 /** "Cannot tell", with exactly what is missing. */
 export const cannotTell = (sentence: string, missing: readonly string[], more: Partial<RuleVerdict> = {}): RuleVerdict => ({ verdict: 'cannot-tell', sentence, asked: null, range: null, missing, ...more })
 
+/** Labels that name several things. */
+const SEVERAL = /^(?:positions|passes|sides)\b/
+
 /** The procedure does not say it. */
 export const notStated = (label: string, field: string, more: Partial<RuleVerdict> = {}): RuleVerdict =>
-  cannotTell(`${capital(label)} isn't stated in the procedure.`, [`procedure: ${field}`], { field, fixes: [stateFix(label, field)], ...more })
+  cannotTell(`${capital(label)} ${SEVERAL.test(label) ? "aren't" : "isn't"} stated in the procedure.`, [`procedure: ${field}`], { field, fixes: [stateFix(label, field)], ...more })
 
 export const stateFix = (label: string, field: string): Fix => ({ kind: 'state', label: `State the ${label}`, field })
 

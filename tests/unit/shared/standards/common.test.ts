@@ -4,7 +4,7 @@ import { between, closed, numericRange, UNKNOWN, UNLIMITED } from '@shared/range
 import { setRange } from '@shared/ranges/set.ts'
 import { figure, figures, gasName, isInert, isStated, single } from '@shared/standards/common/reading.ts'
 import { figureRule, namedRule, weakest } from '@shared/standards/common/rule-kinds.ts'
-import { list, names, showAsked, showRange, showSpan } from '@shared/standards/common/wording.ts'
+import { list, names, notStated, showAsked, showInside, showRange, showSpan } from '@shared/standards/common/wording.ts'
 import type { CouponSide, RuleContext, RuleMeta } from '@shared/standards/rule.ts'
 import { interval, quantity } from '@shared/units/convert.ts'
 import { coupon, procedure } from './builders.ts'
@@ -17,11 +17,15 @@ describe('wording', () => {
     expect(showRange(length(closed(5), closed(5)))).toBe('5 mm')
     expect(showRange(length(UNLIMITED, closed(20)))).toBe('up to 20 mm')
     expect(showRange(length(closed(5), UNLIMITED))).toBe('5 mm and up')
-    expect(showRange(length(UNLIMITED, UNLIMITED))).toBe('any mm')
+    expect(showRange(length(UNLIMITED, UNLIMITED))).toBe('any figure')
     expect(showRange(length(closed(5), UNKNOWN))).toBe('a range that is not known')
     expect(showRange(numericRange('length', 'mm', []))).toBe('nothing')
     expect(showRange(numericRange('length', 'mm', [{ lower: closed(1), upper: closed(2) }, { lower: closed(5), upper: closed(9) }]))).toBe('1 mm to 2 mm and 5 mm to 9 mm')
   })
+  test('a range after "lies inside"', () => {
+    expect([length(closed(5), closed(20)), length(closed(-37), UNLIMITED), length(UNLIMITED, closed(20)), length(UNLIMITED, UNLIMITED), length(closed(0), UNLIMITED), length(closed(5), closed(5))].map(showInside)).toEqual(['the 5 mm to 20 mm', 'the range from -37 mm up', 'the range up to 20 mm', 'the range without limits', 'the range without limits', 'the 5 mm'])
+  })
+  test('several things aren\'t stated, one isn\'t', () => expect([notStated('positions', 'x').sentence, notStated('thickness', 'x').sentence]).toEqual(["Positions aren't stated in the procedure.", "Thickness isn't stated in the procedure."]))
   test('names', () => {
     expect([showSpan(null), showSpan(setRange([], { any: true })), showSpan(setRange([])), showSpan(setRange([], { unknown: true })), showSpan(setRange(['B', 'A'])), showSpan(length(closed(1), closed(2)))]).toEqual(['nothing', 'any', 'nothing', 'a range that is not known', 'A or B', '1 mm to 2 mm'])
     expect([list([]), list(['a']), list(['a', 'b', 'c'])]).toEqual(['', 'a', 'a, b and c'])
