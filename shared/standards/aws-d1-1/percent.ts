@@ -93,7 +93,7 @@ export const byProcess = (percent: Partial<Record<Process, number>>) => (process
 const bandText = ({ down, up, open: isOpen }: Band): string => (down === up && !isOpen ? `within ${down} %` : `less than ${down} % below and less than ${up} % above`)
 
 /** Set fixes that bring one stated range inside. */
-function lineCures(spec: PercentSpec, { system }: RuleContext, range: NumericRange, { interval, field }: Line): Fix[] {
+export function lineCures(spec: Pick<PercentSpec, 'dimension' | 'label'>, { system }: RuleContext, range: NumericRange, { interval, field }: Line): Fix[] {
   const { min, max, all, fault } = figures(interval, spec.dimension, system)
   if (fault || !isStated(interval)) return []
   const asked = all ? { min: null, max: null } : { min: min ?? max, max: max ?? min }
@@ -164,6 +164,9 @@ function inDoubt(spec: PercentSpec, context: RuleContext, sides: readonly Coupon
   return { ...judged, verdict: 'cannot-tell', sentence: `Of the ${spec.label} two readings of the figure are known for this edition, ${bandText(other)} and another, and they do not agree here; look it up.`, missing: [`the figure of ${clauseIn(context.edition, spec.meta.clause)} for ${spec.label}`], fixes: [] }
 }
 
+/** A setting of the block and of every pass, each with its place. */
+export const settingLines = ({ block, path }: Pick<RuleContext, 'block' | 'path'>, setting: Setting): Line[] => (block ? [{ interval: block.electrical[setting], field: `${path}.electrical.${setting}` }, ...block.passes.map((pass, i) => ({ interval: pass[setting], field: `${path}.passes.${i}.${setting}` }))] : [])
+
 /** A setting of the arc by percentage. */
 export const settingRule = (spec: Omit<PercentSpec, 'field' | 'asked' | 'tested' | 'lines'> & { setting: Setting }): Rule =>
   percentRule({
@@ -171,6 +174,6 @@ export const settingRule = (spec: Omit<PercentSpec, 'field' | 'asked' | 'tested'
     field: `electrical.${spec.setting}`,
     asked: (context) => askedSetting(context.block, spec.setting, spec.dimension, context.system),
     tested: (side, system) => testedSetting(side, spec.setting, spec.dimension, system),
-    lines: ({ block, path }) => (block ? [{ interval: block.electrical[spec.setting], field: `${path}.electrical.${spec.setting}` }, ...block.passes.map((pass, i) => ({ interval: pass[spec.setting], field: `${path}.passes.${i}.${spec.setting}` }))] : []),
+    lines: (context) => settingLines(context, spec.setting),
   })
 

@@ -92,14 +92,16 @@ export function requiredStrength(variables: WeldingVariables, system: UnitSystem
   return a.value === b.value ? lower : { value: lower.value, basis: 'memory' }
 }
 
-/** Alloys of more than 3 % magnesium among those listed (nominal compositions). */
+/** Alloys of at most 3 % magnesium among those listed; the next line holds those of more (nominal compositions). */
+const LOW_MAGNESIUM: ReadonlySet<string> = new Set(['5052', '5454', '5652'])
 const HIGH_MAGNESIUM: ReadonlySet<string> = new Set(['5083', '5086', '5456', '5383', '5154', '5254'])
 
-/** Heat-treatable, or 5xxx with over 3 % magnesium: held to a highest temperature; null where the alloy isn't named. */
+/** Heat-treatable, or 5xxx with over 3 % magnesium: held to a highest temperature; null where the alloy isn't named or its magnesium isn't kept here. */
 export function isHeatLimited(metal: BaseMetal): boolean | null {
   const alloy = readAlloy(metal)?.alloy
   if (alloy === undefined) return null
-  return /^[267]/.test(alloy) || HIGH_MAGNESIUM.has(alloy)
+  if (alloy.startsWith('5')) return HIGH_MAGNESIUM.has(alloy) ? true : LOW_MAGNESIUM.has(alloy) ? false : null
+  return /^[267]/.test(alloy) ? true : /^[134]/.test(alloy) ? false : null
 }
 
 export const thicknessOf = (variables: WeldingVariables, system: UnitSystem): readonly Figures[] => [variables.thickness, variables.thicknessB].filter((interval) => isStated(interval)).map((interval) => figures(interval, 'length', system))

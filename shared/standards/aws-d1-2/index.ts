@@ -11,7 +11,7 @@ export const awsD12: Standard = {
   shortName: 'AWS D1.2',
   editions,
   processes: PROCESSES,
-  outOfScope: ['prequalified procedures (there are none)', 'stud welding', 'friction stir welding', 'number of specimens and range of thickness (Tables 3.4 and 3.5, not confirmed)', 'visual and bend acceptance limits (not confirmed)', 'qualification of welders'],
+  outOfScope: ['prequalified procedures (there are none)', 'overlay, hard-facing and build-up', 'brazing, laser and electron beam welding', 'stud welding', 'plug and slot welds', 'friction stir welding', 'castings beyond a recorded M-Number', 'steel and other metals', 'number of specimens and range of thickness (Tables 3.4 and 3.5, not confirmed)', 'visual and bend acceptance limits (not confirmed)', 'toughness', 'qualification of welders'],
   rules,
   certification: { clause: 'Clause 3', basis: 'memory', source: 'Clause 3: results recorded and certified before they support a procedure; as recalled' },
   role,

@@ -16,7 +16,7 @@ function results({ content }: AssessedCoupon): TestVerdict[] {
     ...content.tension.map((test) => judgeTension(test, required?.value ?? null, system, { clause: CLAUSES.tension.clause, basis: required?.basis ?? CLAUSES.tension.basis })),
     ...content.bends.map((test) => row('bend', test.id, test.specimen, bendJudgement(test))),
     ...content.macros.map((test) => row('macro', test.id, test.specimen, macroJudgement(test))),
-    ...(content.ndt ?? []).filter(({ accepted }) => accepted === false).map((test) => row('ndt', test.id, test.method, { verdict: 'fail', sentence: `${test.method} was not accepted.` })),
+    ...(content.ndt ?? []).filter(({ accepted }) => accepted !== true).map((test) => row('ndt', test.id, test.method, test.accepted === false ? { verdict: 'fail', sentence: `${test.method} was not accepted.` } : { verdict: 'cannot-tell', sentence: `${test.method}: the result isn't recorded.` })),
     ...(content.visual?.cracks === true ? [row('macro', 'visual', 'Visual', { verdict: 'fail', sentence: 'Visual examination: there is a crack.' })] : []),
   ]
 }
@@ -52,6 +52,7 @@ export function qualify(coupon: AssessedCoupon, edition: string, level: '1' | '2
     need(content.tension.length > 0, 'tension', `Record the tension results. ${UNKNOWN_COUNT}`, 'Table 3.4')
     need(content.bends.length > 0, 'bends', `Record the bend results. ${UNKNOWN_COUNT}`, 'Table 3.4')
   }
+  need(content.visual, 'visual', 'Record the visual examination of the test weld.')
   const judged = results(coupon)
   for (const result of judged) if (result.verdict !== 'pass') missing.push({ field: fieldOfTest(coupon, result.testId), message: result.sentence, clause: result.clause })
   content.bends.forEach((bend, i) => {

@@ -91,5 +91,8 @@ export function isInert(gas: GasMixture | null): boolean | null {
   return gas.components.every((part) => part.percent === 0 || part.gas === 'Ar' || part.gas === 'He')
 }
 
+/** Words that people typed, made equal in case, hyphens and spacing, and still readable. */
+export const plainWords = remember((text) => text.trim().toLowerCase().replace(/[\s-]+/g, ' '))
+
 /** Text with case and spacing made equal, for comparing names that people typed. */
 export const sameText = remember((text) => text.trim().toUpperCase().replace(/[\s-]+/g, ''))

@@ -54,12 +54,16 @@ export const pqDiameter = condition({
     const isOver = (size: Size): boolean => size.value > (size.root === true ? root.value : fill.value) + EPSILON
     const over = all.find(isOver)
     if (over && unread && !all.some((size) => size.value > (limitFor(size.root === true, false)?.value ?? 0) + EPSILON)) return cannotTell(`An electrode of ${show(over.value, unit)} is allowed in ${fill.place} position only if it is neither low-hydrogen nor EXX14, which its classification does not tell.`, ['procedure: filler.classification'], { field: `${context.path}.filler.classification`, asked, range, fixes: [{ kind: 'state', label: 'State the filler classification', field: `${context.path}.filler.classification` }] })
+    // One size for all passes lays the root as well.
+    const rootIsLaid = weld === 'fillet' || all.some((size) => size.root === true || size.value <= root.value + EPSILON)
+    const bestFor = (size: Size): number => (size.root === true || (size.root === null && !rootIsLaid) ? root.value : fill.value)
+    const setTo = (size: Size) => ({ kind: 'set' as const, label: `Set the electrode to ${show(bestFor(size), unit)}`, field: size.at, value: quantity(bestFor(size), 'length', unit) })
     if (over) {
       const limit = over.root === true ? root : fill
-      return saysByTable(context, 'outside', `An electrode of ${show(over.value, unit)} is larger than the ${show(limit.value, unit)} allowed for ${over.root === true ? 'root passes' : `${weld} welds`} in ${limit.place} position.`, { asked, range: lengthRange(system, null, limit.value), field: over.at, fixes: all.filter(isOver).map((size) => { const { value } = size.root === true ? root : fill; return { kind: 'set' as const, label: `Set the electrode to ${show(value, unit)}`, field: size.at, value: quantity(value, 'length', unit) } }) })
+      return saysByTable(context, 'outside', `An electrode of ${show(over.value, unit)} is larger than the ${show(limit.value, unit)} allowed for ${over.root === true ? 'root passes' : `${weld} welds`} in ${limit.place} position.`, { asked, range: lengthRange(system, null, limit.value), field: over.at, fixes: all.filter(isOver).map(setTo) })
     }
     const unsure = weld === 'fillet' ? undefined : all.find((size) => size.root === null && size.value > root.value + EPSILON)
-    if (unsure && all.every((size) => size.root === null && size.value > root.value + EPSILON)) return saysByTable(context, 'outside', `Every electrode stated is larger than the ${show(root.value, unit)} allowed for root passes in ${root.place} position.`, { asked, range: lengthRange(system, null, root.value), field })
+    if (unsure && all.every((size) => size.root === null && size.value > root.value + EPSILON)) return saysByTable(context, 'outside', `Every electrode stated is larger than the ${show(root.value, unit)} allowed for root passes in ${root.place} position.`, { asked, range: lengthRange(system, null, root.value), field, fixes: [setTo(unsure)] })
     if (unsure) return cannotTell(`Electrodes of ${show(unsure.value, unit)} may not lay root passes (at most ${show(root.value, unit)}); which size lays the root is not stated.`, ['procedure: electrode diameter of the root pass'], { field: `${context.path}.passes`, asked, range, fixes: [{ kind: 'state', label: 'State the passes with their electrode', field: `${context.path}.passes` }] })
     return saysByTable(context, 'within', `Electrodes up to ${show(top, unit)} are not larger than the ${show(fill.value, unit)} allowed.`, { asked, range })
   },

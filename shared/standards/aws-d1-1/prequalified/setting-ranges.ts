@@ -33,9 +33,14 @@ function lines(block: ProcessBlock, setting: Setting, path: string): { interval:
   return [...(own && isStated(own) ? [{ interval: own, field: `${path}.electrical.${setting}` }] : []), ...block.passes.flatMap((pass, i) => { const interval = pass[setting]; return interval && isStated(interval) ? [{ interval, field: `${path}.passes.${i}.${setting}` }] : [] })]
 }
 
+/** How far a range reaches to either side of its middle, per cent. */
+const reach = (low: number, high: number): number => (low + high === 0 ? 0 : ((high - low) / (low + high)) * 100)
+
 /** The same middle with as much room as every reading of the table allows. */
 function narrowed({ label, field, middle, percent, dimension, unit }: { label: string; field: string; middle: number; percent: number; dimension: Dimension; unit: string }): Fix {
-  const [min, max] = [1 - percent / 100, 1 + percent / 100].map((share) => quantity(tidy(middle * share), dimension, unit))
+  // Rounded inward, to figures that people set.
+  const min = quantity(Math.ceil(tidy(middle * (1 - percent / 100) * 1000)) / 1000, dimension, unit)
+  const max = quantity(Math.floor(tidy(middle * (1 + percent / 100) * 1000)) / 1000, dimension, unit)
   return { kind: 'set', label: `Narrow the ${label} to ${percent} % about its middle`, field, value: { min, max, all: false } }
 }
 
@@ -54,19 +59,25 @@ const width = ({ figure, setting, file, title, dimension, processes, sure, maybe
       if (all.length === 0) return setting === 'wireFeed' || setting === 'current' ? null : notStated(label, `${context.path}.electrical.${setting}`)
       const basis = context.edition === '2010' ? 'secondary' : 'memory'
       let unsure: RuleVerdict | null = null
+      const over = (percent: number) => (one: number): boolean => one > percent + 1e-6
+      const fixes = all.flatMap(({ interval, field }) => {
+        const { min, max, all: every, fault } = figures(interval, dimension, context.system)
+        const [low, high] = [min ?? max, max ?? min]
+        if (every || fault || low === null || high === null || !over(sure(process, context.edition))(reach(low, high))) return []
+        return [narrowed({ label, field, middle: (low + high) / 2, percent: sure(process, context.edition), dimension, unit })]
+      })
       for (const { interval, field } of all) {
         const { min, max, all: every, fault } = figures(interval, dimension, context.system)
         if (fault) return notStated(label, field, { sentence: `The ${label} contradicts itself.` })
         const low = min ?? max
         const high = max ?? min
         if (every || low === null || high === null) return says('outside', `The ${label} has no limits.`, { field, basis })
-        const middle = (low + high) / 2
-        const spread = middle === 0 ? 0 : ((high - low) / 2 / middle) * 100
+        const spread = reach(low, high)
         const most = { sure: sure(process, context.edition), maybe: maybe(process, context.edition) }
         const asked = { min: low, max: high }
-        if (spread <= most.sure + 1e-6) continue
-        const text = `${show(low, unit)} to ${show(high, unit)} reaches ${Math.round(spread * 10) / 10} % to either side of its middle`
-        if (spread > most.maybe + 1e-6) return says('outside', `${text}, over the ${most.maybe} % allowed; use several lines of settings that belong together.`, { asked, field, basis, fixes: [narrowed({ label, field, middle, percent: most.sure, dimension, unit })] })
+        if (!over(most.sure)(spread)) continue
+        const text = `${show(low, unit)} to ${show(high, unit)} reaches ${Math.round(spread * 100) / 100} % to either side of its middle`
+        if (over(most.maybe)(spread)) return says('outside', `${text}, over the ${most.maybe} % allowed; use several lines of settings that belong together.`, { asked, field, basis, fixes })
         unsure = cannotTell(`${text}; the limit is recalled as ${most.sure} or ${most.maybe} %, so look it up in your edition.`, [`the figure of ${clauseIn(context.edition, 'Table 5.2')} for voltage`], { asked, field, basis })
       }
       return unsure ?? says('within', `Every line of ${label} stays within ${sure(process, context.edition)} % of its middle.`, { basis })

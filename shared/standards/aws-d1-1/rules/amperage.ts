@@ -5,7 +5,7 @@ import { figureRule } from '../../common/rule-kinds.ts'
 import { cannotTell, show } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
 import { meta } from '../meta.ts'
-import { askedSetting, byProcess, settingRule } from '../percent.ts'
+import { askedSetting, byProcess, lineCures, settingLines, settingRule } from '../percent.ts'
 
 const byPercent = settingRule({
   meta: meta('amperage'),
@@ -25,6 +25,7 @@ const byMaker = figureRule({
   dimension: 'current',
   asked: (context) => askedSetting(context.block, 'current', 'current', context.system),
   range: () => null,
+  cure: (context, joined) => settingLines(context, 'current').flatMap((line) => lineCures({ label: 'amperage', dimension: 'current' }, context, joined, line)),
 })
 
 export const amperage: Rule = {

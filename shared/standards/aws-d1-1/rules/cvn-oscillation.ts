@@ -1,6 +1,6 @@
 /** Table 6.7: machine oscillation changed by more than 20 %. */
 import type { ProcessBlock } from '../../../schemas/welding.ts'
-import { sameText } from '../../common/reading.ts'
+import { plainWords } from '../../common/reading.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { names } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
@@ -15,8 +15,8 @@ const oscillation = namedRule({
   at: 'block',
   label: 'machine oscillation',
   applies: (context) => swings(context.block),
-  asked: (context) => (context.block?.technique.oscillation ? [sameText(context.block.technique.oscillation)] : null),
-  tested: (_context, side) => (side.block?.technique.oscillation ? sameText(side.block.technique.oscillation) : null),
+  asked: (context) => (context.block?.technique.oscillation ? [plainWords(context.block.technique.oscillation)] : null),
+  tested: (_context, side) => (side.block?.technique.oscillation ? plainWords(side.block.technique.oscillation) : null),
   because: 'With CVN machine oscillation may change by 20 %.',
 })
 

@@ -27,9 +27,8 @@ export const position: Rule = {
     const range = base.range(context, side)
     if (!range || range.range.type !== 'set' || !side.block) return range
     const { positions } = side.block
-    const asksFixedFillet = context.block?.positions.includes('5F') ?? false
     // What a fixed horizontal pipe fillet covers besides itself, and what else covers it, isn't confirmed.
-    const unknown = positions.includes('5F') || (asksFixedFillet && positions.length > 0 && !coveredPlaces(positions).includes('5F'))
+    const unknown = positions.includes('5F')
     return { ...range, range: setRange(range.range.values, { unknown: range.range.unknown || unknown }), basis: positionBasis(positions, side.variables), clause: clauseOf(side), ...(unknown ? { missing: ['what tests cover 5F, and what a test in 5F covers besides it'] } : {}) }
   },
   check(context, sides, joined) {
@@ -37,7 +36,10 @@ export const position: Rule = {
     const first = sides[0]
     if (!judged || !first) return judged
     const settled = { ...judged, clause: clauseOf(first), basis: sides.map((side) => positionBasis(side.block?.positions ?? [], side.variables)).reduce<Basis>(weakest, 'read') }
-    if (judged.verdict !== 'cannot-tell' || judged.asked === null || sides.some((side) => (side.block?.positions.length ?? 0) === 0)) return settled
-    return { ...settled, sentence: `Whether ${names(sides)} ${verb(sides, 'covers', 'cover')} ${list(askedPlaces(context.block?.positions ?? []))} can't be told: what covers a fixed pipe fillet (5F), and what such a test covers besides itself, is not confirmed here.` }
+    if (judged.asked === null || sides.some((side) => (side.block?.positions.length ?? 0) === 0)) return settled
+    const missed = askedPlaces(context.block?.positions ?? []).filter((place) => joined?.type !== 'set' || !joined.values.includes(place))
+    const onlyFixed = judged.verdict === 'outside' && missed.every((place) => place === '5F')
+    if (judged.verdict !== 'cannot-tell' && !onlyFixed) return settled
+    return { ...settled, verdict: 'cannot-tell', missing: ['what tests cover 5F, and what a test in 5F covers besides it'], fixes: judged.fixes ?? [], sentence: `Whether ${names(sides)} ${verb(sides, 'covers', 'cover')} ${list(askedPlaces(context.block?.positions ?? []))} can't be told: what covers a fixed pipe fillet (5F), and what such a test covers besides itself, is not confirmed here.` }
   },
 }

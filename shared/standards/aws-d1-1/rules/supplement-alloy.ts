@@ -1,6 +1,6 @@
 /** Row 9 (SAW): an alloy of the deposit that depends on the supplement. */
 import type { ProcessBlock } from '../../../schemas/welding.ts'
-import { sameText } from '../../common/reading.ts'
+import { plainWords } from '../../common/reading.ts'
 import { namedRule } from '../../common/rule-kinds.ts'
 import { names } from '../../common/wording.ts'
 import type { Rule } from '../../rule.ts'
@@ -11,7 +11,7 @@ function alloy(block: ProcessBlock | null): string | null {
   if (!block) return null
   if (block.filler.supplemental === false || block.filler.supplementalAlloyElement === false) return 'no alloy from the supplement'
   if (block.filler.supplementalAlloyElement === null || block.filler.depositComposition === null) return null
-  return `deposit ${sameText(block.filler.depositComposition)}`
+  return `deposit ${plainWords(block.filler.depositComposition)}`
 }
 
 const base = namedRule({

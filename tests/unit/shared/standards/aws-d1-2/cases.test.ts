@@ -85,6 +85,11 @@ const OWN: readonly Own[] = [
   { name: 'downhill after an uphill test', tested: (v) => { first(v).positions = ['3G'] }, asked: (v) => { Object.assign(first(v), { positions: ['3G'], progression: 'down' }) }, rule: 'vertical-progression', verdict: 'outside' },
   { name: 'both directions after a test of both', tested: (v) => { Object.assign(first(v), { positions: ['3G'], progression: 'both' }) }, asked: (v) => { Object.assign(first(v), { positions: ['3G'], progression: 'both' }) }, rule: 'vertical-progression', verdict: 'within' },
   { name: 'cleaning in other words', asked: (v) => { first(v).technique.initialCleaning = 'solvent' }, rule: 'cleaning', verdict: 'cannot-tell' },
+  { name: 'cleaning is told in the words that were typed', asked: (v) => { first(v).technique.initialCleaning = 'Solvent  Wipe' }, rule: 'cleaning', verdict: 'cannot-tell', says: /not confirmed/ },
+  { name: 'case and hyphens of cleaning don\'t matter', tested: (v) => { first(v).technique.initialCleaning = 'Stainless wire-brush' }, asked: (v) => { first(v).technique.initialCleaning = 'stainless Wire brush' }, rule: 'cleaning', verdict: 'within', says: /stainless wire brush, then/ },
+  { name: 'the cleaning that is missing is named', asked: (v) => { first(v).technique.interpassCleaning = null }, rule: 'cleaning', verdict: 'cannot-tell', says: /interpass cleaning/ },
+  { name: 'an alloy of magnesium that is not kept', given: { alloy: '5754-H111' }, asked: (v) => { v.preheat.interpassMaximum = quantity(100, 'temperature') }, rule: 'highest-temperature', verdict: 'cannot-tell', says: /5754/ },
+  { name: '5052 has too little magnesium for a limit', given: { alloy: '5052-H32' }, asked: (v) => { v.preheat.interpassMaximum = quantity(200, 'temperature') }, rule: 'highest-temperature', verdict: 'within' },
   { name: 'cleaning not stated', asked: (v) => { first(v).technique.initialCleaning = null }, rule: 'cleaning', verdict: 'cannot-tell' },
   { name: 'a single layer after several', asked: (v) => { first(v).technique.passesPerSide = 'single' }, rule: 'layers', verdict: 'cannot-tell' },
   { name: 'heat treatment after an as-welded test', asked: (v) => { v.pwht.condition = 'within-range' }, rule: 'pwht', verdict: 'outside' },
@@ -199,6 +204,8 @@ describe('a coupon by itself', () => {
   })
   test('what the record lacks is named by field', () => {
     const bare = qualify({ content: (c) => { Object.assign(c, { weldedOn: null, welder: null, laboratory: null, reportNumber: null }); c.variables.thickness = null; first(c.variables).process = null } })
+    expect(qualify({ content: (c) => { c.visual = null } }).missing.map(({ field }) => field)).toEqual(['visual'])
+    expect(qualify({ content: (c) => { c.ndt = [{ id: 'n1', method: 'RT', accepted: null, reportNumber: null, note: null }] } }).missing.map(({ field }) => field)).toEqual(['ndt.0'])
     expect(bare.missing.map(({ field }) => field)).toEqual(['variables.thickness', 'weldedOn', 'welder', 'laboratory', 'reportNumber', 'variables.processes.0.process'])
     expect(qualify({ change: (v) => { first(v).electrical.current = null; v.pwht.condition = null } }).missing.map(({ field }) => field)).toEqual(['variables.processes.0.electrical.current', 'variables.pwht.condition'])
   })

@@ -48,6 +48,7 @@ export function coupon(given: GivenCoupon = {}): AssessedCoupon {
   given.change?.(content.variables)
   content.tension = [tension('T1', 190), tension('T2', 185)]
   content.bends = [bend('B1'), bend('B2')]
+  content.visual = { cracks: false, cratersFull: true, rootSound: true, profileAccepted: true, reinforcement: null, undercut: null, rootConcavity: null, meltThrough: null, weldThickness: null }
   Object.assign(content, { weldedOn: '2026-03-02', welder: 'A. Welder', laboratory: 'Trial laboratory', reportNumber: 'R-1', testedOn: '2026-03-09' })
   given.content?.(content)
   const number = given.number ?? 'PQR-001'
