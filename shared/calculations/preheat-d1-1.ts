@@ -40,11 +40,21 @@ export type SusceptibilityGroup = (typeof SUSCEPTIBILITY_GROUPS)[number]
 /** Highest index, rounded to 0.1, of each group. */
 const GROUP_TOP: readonly number[] = [3, 3.5, 4, 4.5, 5, 5.5, 7]
 
+/** Bands of Pcm by which the annex gives the group as well: below each figure, from A for H1, B for H2, C for H3. */
+const PCM_BANDS: readonly number[] = [0.18, 0.23, 0.28, 0.33, 0.38]
+
+/** Group by the annex's bands of Pcm; null for a hydrogen that is none of the three levels, and from Pcm 0.38 on. */
+export function groupByPcm({ pcm, hydrogen }: { pcm: number; hydrogen: number }): SusceptibilityGroup | null {
+  const level = [HYDROGEN_LEVELS.H1, HYDROGEN_LEVELS.H2, HYDROGEN_LEVELS.H3].indexOf(hydrogen)
+  const band = PCM_BANDS.findIndex((top) => above(top, pcm))
+  return level < 0 || band < 0 ? null : (SUSCEPTIBILITY_GROUPS[level + band] ?? null)
+}
+
 /**
- * Susceptibility index 12 Pcm + log10 H and its group.
+ * Susceptibility index 12 Pcm + log10 H and its group. The annex's bands of Pcm do not always give the same letter; a note says where they differ.
  * @param given Pcm in %, hydrogen in ml/100 g (5, 10 or 30 for H1, H2, H3, or the measured value)
  */
-export function susceptibility({ pcm, hydrogen }: { pcm: number; hydrogen: number }): Calculation<{ index: number; group: SusceptibilityGroup | null }> {
+export function susceptibility({ pcm, hydrogen }: { pcm: number; hydrogen: number }): Calculation<{ index: number; group: SusceptibilityGroup | null; groupByPcm: SusceptibilityGroup | null }> {
   const sheet = worksheet(annexSource, { advisory: true })
   sheet.need('pcm', 'Pcm', pcm, { least: 0, most: 100, unit: '%' })
   sheet.need('hydrogen', 'Diffusible hydrogen', hydrogen, { above: 0, unit: 'ml/100 g' })
@@ -54,7 +64,9 @@ export function susceptibility({ pcm, hydrogen }: { pcm: number; hydrogen: numbe
   const group = SUSCEPTIBILITY_GROUPS[GROUP_TOP.findIndex((top) => rounded <= top)] ?? null
   if (group) sheet.stepText('group', `index rounded to one decimal: ${rounded}`, 'A to 3.0, B to 3.5, C to 4.0, D to 4.5, E to 5.0, F to 5.5, G to 7.0', group)
   else sheet.outside(`An index of ${written(rounded)} is above 7.0, where the groups end.`)
-  return sheet.done('', index, { index, group })
+  const byPcm = groupByPcm({ pcm, hydrogen })
+  if (byPcm && group && byPcm !== group) sheet.note(`By the bands of Pcm the group is ${byPcm}, by the index ${group}: take the later letter to be safe, and check the code.`)
+  return sheet.done('', index, { index, group, groupByPcm: byPcm })
 }
 
 export const RESTRAINTS = ['low', 'medium', 'high'] as const
@@ -106,14 +118,19 @@ export function preheatByAnnexGroup({ restraint, thickness, group }: { restraint
   return sheet.done('°C', preheat, { group, band, preheat, fahrenheit, required: true })
 }
 
+/** `group` and `required` are null where the index lies above the groups. */
+export interface AnnexWayFigures extends Omit<AnnexFigures, 'group' | 'required'> { index: number; group: SusceptibilityGroup | null; groupByPcm: SusceptibilityGroup | null; required: boolean | null }
+
 /** The whole way of the annex by hydrogen control: index, group, table. `value` is the preheat, °C; null where ambient is enough or no group holds. */
-export function preheatByAnnex({ pcm, hydrogen, restraint, thickness }: { pcm: number; hydrogen: number; restraint: Restraint; thickness: number }): Calculation<AnnexFigures & { index: number }> {
+export function preheatByAnnex({ pcm, hydrogen, restraint, thickness }: { pcm: number; hydrogen: number; restraint: Restraint; thickness: number }): Calculation<AnnexWayFigures> {
   const index = susceptibility({ pcm, hydrogen })
-  const table = preheatByAnnexGroup({ restraint, thickness, group: index.figures?.group ?? 'A' })
-  const joined = { ...table, problems: [...index.problems, ...table.problems], steps: [...index.steps, ...table.steps], validity: { inside: index.validity.inside && table.validity.inside, said: [...index.validity.said, ...table.validity.said] } }
+  const group = index.figures?.group ?? null
+  // Without a group the table still tells the band and checks the thickness.
+  const table = preheatByAnnexGroup({ restraint, thickness, group: group ?? 'G' })
+  const joined = { ...table, problems: [...index.problems, ...table.problems], notes: [...index.notes, ...table.notes], validity: { inside: index.validity.inside && table.validity.inside, said: [...index.validity.said, ...table.validity.said] } }
   if (!index.figures || !table.figures) return { ...joined, value: null, figures: null, steps: [] }
-  if (!index.figures.group) return { ...joined, value: null, figures: null, steps: index.steps }
-  return { ...joined, figures: { ...table.figures, index: index.figures.index } }
+  if (!group) return { ...joined, value: null, figures: { ...index.figures, band: table.figures.band, preheat: null, fahrenheit: null, required: null }, steps: index.steps }
+  return { ...joined, steps: [...index.steps, ...table.steps], figures: { ...table.figures, ...index.figures } }
 }
 
 export const hardnessControlSource: Source = { ...annexSource, clause: 'preheat annex, hardness control', note: 'For fillet welds: a critical cooling rate from CE (AWS), then a least energy for a single pass from a chart. The charts are not kept here.' }

@@ -124,7 +124,7 @@ export function worksheet(source: Source, { advisory = false }: { advisory?: boo
       return value
     },
     done(unit, value, figures) {
-      const numbers = [value, ...Object.values(figures)].filter((each): each is number => typeof each === 'number')
+      const numbers = [value, ...(Object.values(figures) as unknown[]), ...steps.map((step) => step.value)].filter((each): each is number => typeof each === 'number')
       if (numbers.every(Number.isFinite)) return result(unit, value, figures)
       steps.length = 0
       problems.push({ input: '', message: 'These figures together are too large or too small to calculate with; check the units of each.' })
