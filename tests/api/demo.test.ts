@@ -7,6 +7,7 @@ import { DEMO_PASSWORD, FIRM } from '../../server/demo/people.ts'
 import { picturesOf } from '../../server/demo/pictures.ts'
 import type { Assessment } from '../../shared/schemas/assessment.ts'
 import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
+import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
 import type { Page } from '../../shared/schemas/common.ts'
 import { ROLES } from '../../shared/schemas/people.ts'
 import type { Coupon, CouponRow, Job, JobRow, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
@@ -44,6 +45,17 @@ describe('the demo firm', () => {
     const { rows } = await app.services.database.owner.query('select 1 from organizations where name = $1', [FIRM.name])
     expect(rows).toHaveLength(1)
     expect((await procedures()).total).toBe(15)
+  })
+
+  it('has a recording of a pulsed arc on the open aluminium coupon, with what the meters missed', async () => {
+    const { items } = await get<Page<ArcRecordingRow>>('arc-recordings')
+    expect(items).toHaveLength(1)
+    const recording = await get<ArcRecording>(`arc-recordings/${items[0]?.id}`)
+    expect(recording).toMatchObject({ attachedTo: 'PQR-006 pass 2', figures: { stopCount: 1, badRows: 0, alternating: false } })
+    expect(recording.figures.pulse?.frequency).toBeCloseTo(110, 0)
+    expect(recording.figures.current.mean).toBeCloseTo(155, -1)
+    expect(recording.figures.meterError).toBeLessThan(-10)
+    expect(recording.heatInput).toBeCloseTo(recording.figures.energy / 51 / 1000, 9)
   })
 
   it('has a recording of a pulsed arc on the open aluminium coupon, with what the meters missed', async () => {
