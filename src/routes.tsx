@@ -8,6 +8,7 @@ import { routes as couponRoutes } from '@/features/coupons/routes.tsx'
 import { routes as jobRoutes } from '@/features/jobs/routes.tsx'
 import { routes as libraryRoutes } from '@/features/library/routes.tsx'
 import { routes as lookupRoutes, shopRoutes } from '@/features/lookup/routes.tsx'
+import { routes as machineRoutes } from '@/features/machines/routes.tsx'
 import { routes as outboxRoutes } from '@/features/outbox/routes.tsx'
 import { routes as peopleRoutes } from '@/features/people/routes.tsx'
 import { routes as procedureRoutes } from '@/features/procedures/routes.tsx'
@@ -18,7 +19,7 @@ import { Bare, Shell } from '@/shell/Shell.tsx'
 import { anyone, signedIn } from '@/shell/guard.ts'
 
 /** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
-const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...arcDataRoutes, ...jobRoutes, ...lookupRoutes, ...libraryRoutes, ...standardRoutes]
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...arcDataRoutes, ...jobRoutes, ...machineRoutes, ...lookupRoutes, ...libraryRoutes, ...standardRoutes]
 
 /** Pages without the bar, for people who are signed in: the shop view. */
 const shop: RouteObject[] = [...shopRoutes]

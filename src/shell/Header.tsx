@@ -12,6 +12,7 @@ const PLACES = [
   { to: '/procedures', label: 'Procedures', action: 'procedures.read' },
   { to: '/coupons', label: 'Coupons', action: 'coupons.read' },
   { to: '/jobs', label: 'Jobs', action: 'jobs.read' },
+  { to: '/machines', label: 'Machines', action: 'machines.read' },
   { to: '/library', label: 'Library', action: 'library.read' },
 ] as const
 

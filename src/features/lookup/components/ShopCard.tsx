@@ -6,7 +6,11 @@ import type { ProcessBlock } from '@shared/schemas/welding.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import { Caution, HAZARD_LIST, Responsibility } from '@/components/Caution.tsx'
 import { JointDrawing } from '@/components/joint/JointDrawing.tsx'
+import { CardBody } from '@/components/panel-card/CardBody.tsx'
+import { CardChoices } from '@/components/panel-card/CardChoices.tsx'
+import { NO_CHOICE, usePanelCard, type CardChoice } from '@/components/panel-card/use-panel-card.ts'
 import { Stamp } from '@/components/Stamp.tsx'
+import { useRemembered } from '@/hooks/remembered.ts'
 import { cellsOf, dialsOf, type Dial } from '../shop.ts'
 import { ShopPasses } from './ShopPasses.tsx'
 
@@ -81,7 +85,7 @@ export function ShopCard({ revision, system, joint, fitsJoint = null, inForce, r
           </div>
         ))}
       </dl>
-      <Dials block={block} system={system} approved={approved} />
+      <Settings key={block.id} revision={revision} block={block} system={system} approved={approved} />
       <div className="space-y-4 px-5 py-5">
         <div className="grid grid-cols-2 gap-3">
           <Key pressed={open === 'sketch'} onPress={() => setOpen(open === 'sketch' ? null : 'sketch')}>
@@ -124,6 +128,33 @@ function Key({ pressed, onPress, children }: { pressed: boolean; onPress: () => 
     <button type="button" aria-expanded={pressed} onClick={onPress} className={`min-h-14 border-2 border-ink px-2 font-narrow text-xl font-semibold tracking-[0.05em] uppercase ${pressed ? 'bg-ink text-paper' : ''}`}>
       {children}
     </button>
+  )
+}
+
+const isChoice = (value: unknown): value is string | null => value === null || typeof value === 'string'
+
+/** The settings of the machine in front of the welder, which this device remembers; until one is chosen, what the procedure itself says. */
+function Settings({ revision, block, system, approved }: { revision: Revision; block: ProcessBlock; system: UnitSystem; approved: boolean }) {
+  const [machine, setMachine] = useRemembered<string | null>('shop.machine', null, isChoice)
+  const [rest, setRest] = useState(NO_CHOICE)
+  // A machine of another trade, remembered from the last procedure, is no choice for this one.
+  const wanted: CardChoice = { ...rest, machine }
+  const offered = usePanelCard(revision, block, NO_CHOICE).machines
+  const choice = offered.some(({ id }) => id === machine) ? wanted : { ...rest, machine: null }
+  const state = usePanelCard(revision, block, choice)
+  const change = (next: CardChoice) => {
+    setRest(next)
+    if (next.machine !== choice.machine) setMachine(next.machine)
+  }
+  return (
+    <>
+      {offered.length > 0 && (
+        <section aria-label="Machine" className="no-print border-b border-rule px-5 py-4">
+          <CardChoices state={state} choice={choice} onChange={change} />
+        </section>
+      )}
+      {choice.machine === null || !approved ? <Dials block={block} system={system} approved={approved} /> : <CardBody state={state} />}
+    </>
   )
 }
 

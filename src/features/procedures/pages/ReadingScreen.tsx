@@ -77,6 +77,7 @@ export function ReadingScreen({ revision }: { revision: Revision }) {
                 <a className={buttonClass()} href={hrefOf('printRevision', { id: revision.id })} target="_blank" rel="noreferrer">
                   Print
                 </a>
+                {revision.state === 'approved' && <ButtonLink to={`/machines/card?revision=${revision.id}`}>Panel card</ButtonLink>}
                 {may.includes('send') && <Button onClick={() => setOpen('mail')}>E-mail</Button>}
                 {may.includes('withdraw') && (
                   <Button kind="quiet" onClick={() => setOpen('withdraw')}>

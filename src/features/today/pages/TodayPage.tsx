@@ -17,7 +17,7 @@ const ROLE: Record<Role, { about: string; step: { label: string; to: string; act
   auditor: { about: 'Everything can be read, nothing can be changed.', step: { label: 'Read the procedures', to: '/procedures', action: 'procedures.read' } },
   administrator: { about: 'People, their roles, and what the program sends.', step: { label: 'See the people', to: '/people', action: 'people.read' } },
 }
-const KIND: Record<string, string> = { draft: 'Draft', review: 'Review', returned: 'Returned', coupon: 'Coupon', testing: 'Testing', certify: 'Certify', job: 'Job', invitation: 'Invitation', mail: 'Mail', approved: 'Approved' }
+const KIND: Record<string, string> = { draft: 'Draft', review: 'Review', returned: 'Returned', coupon: 'Coupon', testing: 'Testing', certify: 'Certify', job: 'Job', invitation: 'Invitation', mail: 'Mail', calibration: 'Calibration', approved: 'Approved' }
 /** What is merely there to be used stands apart from what waits for somebody's hand. */
 const GROUPS = [
   { title: 'Waiting for you', holds: (kind: string) => kind !== 'approved' && kind !== 'joint' },
