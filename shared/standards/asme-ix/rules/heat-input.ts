@@ -88,7 +88,10 @@ export const heatInput: Rule = unlessHeatTreated({
   range: (context, side) => (byVolume(context, side) ? weldMetal.range(context, side) : base.range(context, side)),
   check(context, sides, joined) {
     if (!context.block) return null
-    if (byVolume(context)) return weldMetal.check(context, sides, joined)
+    if (byVolume(context)) {
+      const ofMetal = weldMetal.check(context, sides, joined)
+      return ofMetal && { ...ofMetal, basis: 'memory' }
+    }
     const known = asked(context.block, context.system)
     if ('missing' in known) {
       const first = known.missing[0]?.split(' ')[0] ?? 'electrical.heatInput'

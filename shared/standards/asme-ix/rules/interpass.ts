@@ -1,24 +1,17 @@
 /** QW-406.3: with toughness the highest interpass temperature may rise by 55 °C (100 °F) above the coupon's, and no more. */
 import { between, closed, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
-import { figure, figureOrNull, tidy, unitOf } from '../../common/reading.ts'
+import { highestInterpass } from '../../common/interpass.ts'
+import { figureOrNull, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
-import type { UnitSystem } from '../../../units/types.ts'
 import type { CouponSide, RangeContext } from '../../rule.ts'
 import { unlessHeatTreated } from '../heat-treated.ts'
 import { meta } from '../meta.ts'
 import { exemptByHeatTreatment } from '../ranges.ts'
 import { TEMPERATURE_STEP } from './preheat.ts'
 
-/** The highest interpass temperature of a coupon: as recorded, or else the highest of its run sheet. */
-function highestOf({ coupon, variables }: CouponSide, system: UnitSystem): { had: number | null; from: string } {
-  const recorded = figureOrNull(variables.preheat.interpassMaximum, 'temperature', system)
-  const rows = coupon.content.runSheet.flatMap((row) => (row.interpass ? [figure(row.interpass, 'temperature', system)] : []))
-  return recorded !== null || rows.length === 0 ? { had: recorded, from: '' } : { had: Math.max(...rows), from: ' (the highest of the run sheet)' }
-}
-
 function interpassInWords(context: RangeContext, side: CouponSide): string {
-  const { had } = highestOf(side, context.system)
+  const { had } = highestInterpass(side, context.system)
   return had === null ? 'interpass temperature' : `${show(had, unitOf('temperature', context.system))} interpass temperature`
 }
 
@@ -36,7 +29,7 @@ export const interpass = unlessHeatTreated(figureRule({
   range(context, side) {
     const { system } = context
     const unit = unitOf('temperature', system)
-    const { had, from } = highestOf(side, system)
+    const { had, from } = highestInterpass(side, system)
     if (exemptByHeatTreatment(side.variables) === true) return { range: between('temperature', unit, UNLIMITED, UNLIMITED), tested: had, reason: 'The heat treatment after welding lifts the interpass limit.' }
     if (had === null) return { range: unknownNumeric('temperature', unit), tested: null, reason: `${side.coupon.number} has no interpass temperature recorded.`, missing: [`${side.coupon.number}: preheat.interpassMaximum`] }
     const highest = tidy(had + TEMPERATURE_STEP[system])
