@@ -1,5 +1,6 @@
 /** Table 6.7: the highest interpass temperature may rise by 56 °C (100 °F) above that of the test, and no more. */
 import { between, closed, UNLIMITED, unknownNumeric } from '../../../ranges/numeric.ts'
+import { highestInterpass } from '../../common/interpass.ts'
 import { figureOrNull, tidy, unitOf } from '../../common/reading.ts'
 import { figureRule } from '../../common/rule-kinds.ts'
 import { show } from '../../common/wording.ts'
@@ -21,9 +22,9 @@ export const cvnInterpass = figureRule({
   range(context, side) {
     const { system } = context
     const unit = unitOf('temperature', system)
-    const had = figureOrNull(side.variables.preheat.interpassMaximum, 'temperature', system)
+    const { had, from } = highestInterpass(side, system)
     if (had === null) return { range: unknownNumeric('temperature', unit), tested: null, reason: `${side.coupon.number} has no interpass temperature recorded.`, missing: [`${side.coupon.number}: preheat.interpassMaximum`] }
-    return { range: between('temperature', unit, UNLIMITED, closed(tidy(had + STEP[system]))), tested: had, reason: `${show(had, unit)} may rise by ${STEP[system]}.` }
+    return { range: between('temperature', unit, UNLIMITED, closed(tidy(had + STEP[system]))), tested: had, reason: `${show(had, unit)}${from} may rise by ${STEP[system]}.` }
   },
 })
 

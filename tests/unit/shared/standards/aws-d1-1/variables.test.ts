@@ -436,5 +436,7 @@ describe('coupons together', () => {
     expect(finding(assessment, 'amperage')).toMatchObject({ verdict: 'within', tested: [200] })
     expect(finding(assessment, 'cvn-heat-input').verdict).toBe('within')
     expect(finding(assessment, 'interpass-minimum')).toMatchObject({ verdict: 'within', tested: [97.5] })
+    const unrecorded = coupon({ toughness: true, content: (c) => { c.variables.preheat.interpassMaximum = null; c.runSheet = [row(250), row(300)].map((one) => ({ ...one, processId: 'SMAW' })) as typeof c.runSheet } })
+    expect(finding(judge(procedure({ toughness: true }), [unrecorded]), 'cvn-interpass')).toMatchObject({ verdict: 'within', tested: [150] })
   })
 })
