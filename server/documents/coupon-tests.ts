@@ -62,7 +62,7 @@ export function drawTests(context: Context, content: CouponContent, qualificatio
     }
     const length = figures.unit('length')
     drawVisual(context, content, judge)
-    group('Non-destructive testing', [{ title: 'Method', share: 18 }, { title: 'Whole length', share: 12 }, { title: 'Result', share: 14 }, { title: 'Report', share: 14 }, { title: 'Note', share: 18 }, RESULT], (content.ndt ?? []).map((test) => [
+    group('Non-destructive testing', [{ title: 'Method', share: 18 }, { title: 'Whole length', share: 11 }, { title: 'Result', share: 12 }, { title: 'Report', share: 19 }, { title: 'Note', share: 16 }, RESULT], (content.ndt ?? []).map((test) => [
       { text: `${test.method}, ${NDT_METHOD[test.method]}`, strong: true }, yesNo(test.wholeLength) || 'not stated', test.accepted === null ? 'not stated' : test.accepted ? 'accepted' : 'not accepted', test.reportNumber ?? '', { text: test.note ?? '', soft: true }, judge(test.id),
     ]))
     group('Tension', [{ title: 'Specimen', share: 9 }, { title: 'Kind', share: 12 }, right('Width', length, 10), right('Thickness', length, 10), right('Load', figures.unit('force'), 11), right('Strength', 'from load and area', 12), { title: 'Fracture', share: 15 }, RESULT], content.tension.map((test) => [

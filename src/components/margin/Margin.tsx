@@ -10,6 +10,10 @@ export interface MarginProps extends Omit<MarginNoteProps, 'finding'> {
   children?: ReactNode
 }
 
+const nameOf = ({ standard, ruleId, processId, field }: Finding) => `${standard} ${ruleId} ${processId ?? ''} ${field}`
+/** A rule may say several things of one field; each keeps its place, so that an open note stays open while its sentence changes. */
+const keyOf = (finding: Finding, before: readonly Finding[]) => `${nameOf(finding)} ${before.filter((one) => nameOf(one) === nameOf(finding)).length}`
+
 /**
  * The notes of one row, worst first. Inside a MarginLayout wide enough they stand in the right-hand margin beside the row
  * (pushed down where they would overlap); elsewhere, and on a phone, they fold under the row. Reading order is always the row's.
@@ -29,8 +33,8 @@ export function Margin({ findings, children, ...note }: MarginProps) {
   const shown = fold ? sorted.filter((finding) => finding.verdict !== 'within') : sorted
   return (
     <div ref={place} data-margin className="margin-place space-y-1.5">
-      {shown.map((finding) => (
-        <MarginNote key={`${finding.standard} ${finding.ruleId} ${finding.processId ?? ''} ${finding.field}`} finding={finding} {...note} />
+      {shown.map((finding, index) => (
+        <MarginNote key={keyOf(finding, shown.slice(0, index))} finding={finding} {...note} />
       ))}
       {within.length > 1 && (
         <button type="button" aria-expanded={open} onClick={() => setOpen(!open)} className="w-full border-l-[3px] border-l-jade bg-sheet px-3 py-1.5 text-left text-sm">

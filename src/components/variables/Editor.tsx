@@ -39,7 +39,7 @@ export function Editor({ spec, path, prefix, block }: { spec: RowSpec; path: str
       return <WholeEditor min={spec.min} max={spec.max} path={path} label={label} />
     case 'pair':
       return (
-        <div className="grid grid-cols-2 gap-2">
+        <div className={`grid grid-cols-2 gap-2 ${spec.of.kind === 'flag' ? 'sm:max-w-72' : ''}`}>
           {spec.paths.map((one, index) => (
             <HalfEditor key={one} of={spec.of} path={`${prefix}${one}`} label={`${label}, ${index === 0 ? 'A' : 'B'}`} />
           ))}

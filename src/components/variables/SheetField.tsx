@@ -87,7 +87,7 @@ function unitOf(spec: RowSpec, system: 'SI' | 'US') {
 
 /** Kinds whose input uses the row's whole width. */
 const WIDE = ['text', 'paragraph', 'metal', 'filler', 'gas', 'panel', 'passes', 'positions']
-const isWide = (spec: RowSpec) => (WIDE.includes(spec.kind) && !(spec.kind === 'text' && spec.max <= 20)) || (spec.kind === 'pair' && spec.of.kind === 'text' && spec.of.max > 20)
+const isWide = (spec: RowSpec) => (WIDE.includes(spec.kind) && !(spec.kind === 'text' && spec.max <= 20)) || (spec.kind === 'pair' && (spec.of.kind === 'flag' || (spec.of.kind === 'text' && spec.of.max > 20)))
 
 function gauge(spec: RowSpec, findings: readonly Finding[], { system, couponNumber }: ReturnType<typeof useSheet>) {
   const drawn = gaugeOf(findings)

@@ -3,6 +3,8 @@ import { describe, expect, it, vi } from 'vitest'
 import { renderCoupon, type CouponDocument } from '../../../../server/documents/coupon.ts'
 import { aluminiumCoupon, couponDocument, stainlessCoupon, steelCoupon, steelQualification } from '../../../fixtures/samples.ts'
 import { boxesOf, infoOf, pagesOf, wordsOf } from './read.ts'
+import { qualifyCoupon } from '../../../../shared/assessment/assess.ts'
+import { frameD11Coupon, skidIsoCoupon } from '../../../../server/demo/content/codes.ts'
 
 vi.setConfig({ testTimeout: 120_000 })
 const render = (given: Partial<CouponDocument> = {}) => renderCoupon(couponDocument(given))
@@ -69,6 +71,16 @@ describe('a coupon as PDF', () => {
     for (const part of ['PHOTOGRAPHS', 'Root side after cleaning', `SHA-256 ${'b'.repeat(64)}`, 'This picture could not be read.']) expect(text).toContain(part)
     expect(pdf.toString('latin1').match(/\/Subtype \/Image/g)).toHaveLength(2)
     expect(pdf.length).toBeGreaterThan((await sample()).length)
+  })
+
+  it('prints what the application asks, the visual examination and every non-destructive test', async () => {
+    const content = skidIsoCoupon()
+    const qualifications = content.variables.standards.map(({ standard, edition, level }) => qualifyCoupon({ id: 'c', number: 'PQR-011', certified: true, content }, standard, edition, level))
+    const text = wordsOf(await render({ content, qualifications }))
+    for (const part of ['WHAT THE APPLICATION ASKS', '27 J at -20 °C', 'level 2', 'Non-destructive testing', 'VT, visual', 'RT, radiography', 'WML-26-0518-R', '266 HV10', '74, 81, 69', 'Post-heating', 'arc energy', 'Impact values specified']) expect(text).toContain(part)
+    const frame = frameD11Coupon()
+    const seen = wordsOf(await render({ content: frame, qualifications: [qualifyCoupon({ id: 'c', number: 'PQR-009', certified: true, content: frame }, 'aws-d1-1', '2020', null)] }))
+    for (const part of ['Visual examination', 'Cracks: no; craters full: yes; root sound: yes', 'undercut: 0.3 mm', 'Visual examination is accepted. (6.10.1)', 'UT, ultrasonics']) expect(seen).toContain(part)
   })
 
   it('says that an open coupon supports nothing', async () => {

@@ -84,6 +84,39 @@ describe('coupon page', () => {
     fireEvent.click(screen.getByText('Name the welder who welded the coupon.'))
     expect(document.activeElement).toBe(box('#row-welder'))
   })
+  it('takes the visual examination and non-destructive tests, each judged with its clause', async () => {
+    const base = content()
+    const seen = open(coupon({ content: { ...base, variables: { ...base.variables, standards: [{ standard: 'aws-d1-1', edition: '2020', level: null }], joint: { ...base.variables.joint, groove: 'single-v' } } } }))
+    fireEvent.click(await screen.findByText('Visual examination', { selector: 'button' }))
+    const choose = (selector: string, answer: string) => fireEvent.change(box(selector), { target: { value: answer } })
+    choose('#row-visual-cracks', 'no')
+    choose('#row-visual-cratersFull', 'yes')
+    choose('#row-visual-rootSound', 'yes')
+    fill('#row-visual-reinforcement', '2')
+    const doubtful = within(await waitFor(() => box('[aria-label="Cannot tell: Visual"]')))
+    expect(doubtful.getByText(/undercut isn't recorded/)).toBeDefined()
+    fill('#row-visual-undercut', '0.3')
+    const accepted = within(await waitFor(() => box('[aria-label="Accepted: Visual"]')))
+    expect(accepted.getByText(/AWS D1\.1 2020/).textContent).toContain('judged from what is recorded')
+    fireEvent.click(screen.getByText('Radiography', { selector: 'button' }))
+    choose('#row-ndt-0-accepted', 'no')
+    await waitFor(() => box('[aria-label="Not accepted: RT"]'))
+    await waitFor(() => expect(seen.filter(({ method }) => method === 'PUT').length).toBeGreaterThan(0), { timeout: 8000 })
+    const kept = (seen.findLast(({ method }) => method === 'PUT')?.body as { content: CouponContent }).content
+    expect(kept.visual).toMatchObject({ cracks: false, undercut: { si: 0.3 }, rootConcavity: null })
+    expect(kept.ndt).toMatchObject([{ method: 'RT', accepted: false }])
+  })
+  it('saves nothing by being opened, though some fields may be absent', async () => {
+    const seen = open(coupon({ content: { ...content(), variables: { ...content().variables, standards: [{ standard: 'iso-15614-1', edition: '2017+A1:2019', level: '2' }] } } }))
+    await waitFor(() => box('#row-hardnessRequired'))
+    await new Promise((done) => setTimeout(done, 1500))
+    expect(seen.filter(({ method }) => method === 'PUT')).toEqual([])
+    fireEvent.change(box('#row-postHeating-used'), { target: { value: 'yes' } })
+    await waitFor(() => box('#row-postHeating-temperature'))
+    fill('#row-postHeating-temperature', '250')
+    await waitFor(() => expect(seen.some(({ method }) => method === 'PUT')).toBe(true), { timeout: 8000 })
+    await waitFor(() => expect((seen.findLast(({ method }) => method === 'PUT')?.body as { content: CouponContent }).content.variables.postHeating).toMatchObject({ used: true, temperature: { min: { si: 250 }, max: { si: 250 } }, time: null }), { timeout: 8000 })
+  })
   it('is only read once it is certified', async () => {
     open(coupon({ state: 'certified', may: ['send'] }))
     expect((await screen.findAllByText('10 mm plate, 3G')).length).toBeGreaterThan(0)
@@ -138,6 +171,13 @@ describe('two versions of a coupon', () => {
     expect(differences.some(({ by }) => by === 'both')).toBe(false)
     expect(differences.map(({ path }) => couponConflict.label(path, joined))).toContain('Run sheet 1: Interpass temperature')
     expect(couponConflict.words('runSheet#r1.interpass', quantity(60, 'temperature'), joined, 'SI')).toBe('60 °C')
+  })
+  it('are joined where only one of them has non-destructive tests', () => {
+    const base = content()
+    const mine = { ...base, welder: 'Anya Brook' }
+    const theirs: CouponContent = { ...base, ndt: [{ id: 'n1', method: 'RT', accepted: true, reportNumber: null, note: null }] }
+    expect(mergeContents(base, mine, theirs, couponConflict.lists).content).toMatchObject({ welder: 'Anya Brook', ndt: [{ id: 'n1' }] })
+    expect(couponConflict.label('ndt#n1.accepted', theirs)).toBe('Nondestructive testing RT: Accepted')
   })
   it('names fields by the form’s own paths', () => {
     expect(formPath('content.bends.0.angle')).toBe('bends.0.angle')
