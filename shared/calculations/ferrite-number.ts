@@ -7,7 +7,7 @@ import { worksheet, written, type Calculation, type Source, type Worksheet } fro
 import { stainlessDefinitions, type Equivalents } from './stainless-equivalents.ts'
 import { AF_FA_BORDER, FA_F_BORDER, FERRITE_LINES, WRC_AXES, ZERO_FERRITE, type DiagramPoint } from './wrc-diagram.ts'
 
-export const ferriteSource: Source = { standard: 'WRC-1992', edition: '1992', clause: 'figure 6', basis: 'secondary', note: 'Lines digitised by an open teaching repository. Up to FN 30 the published points are met within 0.2 FN; above, six of seven within 1 FN. Predicted and measured FN differ by some ±4 anyway (recalled).' }
+export const ferriteSource: Source = { standard: 'WRC-1992', edition: '1992', clause: 'figure 6', basis: 'secondary', note: 'Lines digitised by an open teaching repository of a university. Up to FN 30 the published points are met within 0.2 FN; above, six of seven within 1 FN. Predicted and measured FN differ by some ±4 anyway (recalled).' }
 
 /** Order in which the melt solidifies: austenite alone, austenite first, ferrite first, ferrite alone. */
 export type SolidificationMode = 'A' | 'AF' | 'FA' | 'F'

@@ -1,6 +1,7 @@
 /** Preheat of AWS D1.1: the table by category, and the annex by hydrogen control (susceptibility index, restraint, thickness). */
 import { minimumPreheat } from '../standards/aws-d1-1/prequalified/limits.ts'
 import type { UnitSystem } from '../units/types.ts'
+import { roundUpPreheat } from './preheat-method-b.ts'
 import { above, worksheet, written, type Calculation, type Source } from './result.ts'
 
 const celsius = (fahrenheit: number): number => (fahrenheit - 32) / 1.8
@@ -92,6 +93,8 @@ export interface AnnexFigures {
   /** °C and °F; null = no more than ambient. */
   preheat: number | null
   fahrenheit: number | null
+  /** °C up to the next 5, as it goes to the welder; null = no more than ambient. */
+  toUse: number | null
   required: boolean
 }
 
@@ -111,11 +114,11 @@ export function preheatByAnnexGroup({ restraint, thickness, group }: { restraint
   sheet.note('To be checked against the code’s table before it is used as a requirement: most cells are recalled.')
   if (fahrenheit === null) {
     sheet.stepText('minimum preheat', 'annex table', where, 'no more than ambient (below 65 °F)')
-    return sheet.done('°C', null, { group, band, preheat: null, fahrenheit: null, required: false })
+    return sheet.done('°C', null, { group, band, preheat: null, fahrenheit: null, toUse: null, required: false })
   }
   sheet.step('minimum preheat', 'annex table', where, fahrenheit, '°F')
   const preheat = sheet.step('in Celsius', '(°F − 32) / 1.8', `(${fahrenheit} − 32) / 1.8`, celsius(fahrenheit), '°C')
-  return sheet.done('°C', preheat, { group, band, preheat, fahrenheit, required: true })
+  return sheet.done('°C', preheat, { group, band, preheat, fahrenheit, toUse: roundUpPreheat(preheat), required: true })
 }
 
 /** `group` and `required` are null where the index lies above the groups. */
@@ -129,7 +132,7 @@ export function preheatByAnnex({ pcm, hydrogen, restraint, thickness }: { pcm: n
   const table = preheatByAnnexGroup({ restraint, thickness, group: group ?? 'G' })
   const joined = { ...table, problems: [...index.problems, ...table.problems], notes: [...index.notes, ...table.notes], validity: { inside: index.validity.inside && table.validity.inside, said: [...index.validity.said, ...table.validity.said] } }
   if (!index.figures || !table.figures) return { ...joined, value: null, figures: null, steps: [] }
-  if (!group) return { ...joined, value: null, figures: { ...index.figures, band: table.figures.band, preheat: null, fahrenheit: null, required: null }, steps: index.steps }
+  if (!group) return { ...joined, value: null, figures: { ...index.figures, band: table.figures.band, preheat: null, fahrenheit: null, toUse: null, required: null }, steps: index.steps }
   return { ...joined, steps: [...index.steps, ...table.steps], figures: { ...table.figures, ...index.figures } }
 }
 

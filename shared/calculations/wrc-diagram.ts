@@ -1,7 +1,7 @@
 /**
  * The WRC-1992 diagram as far as its figures are known: axes, iso-ferrite lines 2 to 100, the curve of FN 0 and the borders of the
  * solidification modes. Points are [Cr equivalent, Ni equivalent] in mass per cent.
- * Digitised from figure 6 of the 1992 paper by an open university teaching repository, rounded to 0.01 (secondary).
+ * Digitised from figure 6 of the 1992 paper by an open teaching repository of a university, rounded to 0.01 (secondary).
  */
 export type DiagramPoint = readonly [crEq: number, niEq: number]
 

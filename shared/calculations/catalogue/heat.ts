@@ -4,7 +4,7 @@ import { calculator, type Calculator } from './define.ts'
 import { choice, number, quantity } from './inputs.ts'
 
 const VALIDITY = 'Any weld; a result outside 0.1 to 10 kJ/mm is likely a slip in units.'
-const energyOutputs = [{ key: 'arcEnergy', label: 'Heat input', dimension: 'heatInput' }, { key: 'kjPerIn', label: 'In inches', unit: 'kJ/in', decimals: 1 }, { key: 'jPerIn', label: 'In inches', unit: 'J/in', decimals: 0 }] as const
+const energyOutputs = [{ key: 'arcEnergy', label: 'Heat input', dimension: 'heatInput' }, { key: 'kjPerIn', label: 'In kJ/in', unit: 'kJ/in', decimals: 1 }, { key: 'jPerIn', label: 'In J/in', unit: 'J/in', decimals: 0 }] as const
 const isoOutputs = [{ key: 'heatInput', label: 'Heat input Q', dimension: 'heatInput' }, { key: 'arcEnergy', label: 'Arc energy E', dimension: 'heatInput' }, { key: 'efficiency', label: 'Thermal efficiency k', decimals: 1 }] as const
 const meter = { voltage: quantity('v', 'Voltage', 'voltage', 24, { least: 0 }), current: quantity('i', 'Current', 'current', 180, { least: 0 }), travelSpeed: quantity('s', 'Travel speed', 'travelSpeed', 250) }
 const process = choice('p', 'Process', efficiencies.map(({ number: value, what }) => ({ value, label: `${value} ${what}` })), '111')

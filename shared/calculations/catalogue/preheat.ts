@@ -51,9 +51,9 @@ export const preheatCalculators: readonly Calculator[] = [
   calculator({
     id: 'preheat-d1-1-annex', title: 'Preheat by the D1.1 annex', group: 'preheat', purpose: 'Preheat by hydrogen control: susceptibility index, restraint and thickness.',
     inputs: { pcm: number('pcm', 'Pcm', '%', 0.23, { least: 0, most: 100 }), hydrogen: number('hd', 'Diffusible hydrogen', 'ml/100 g', 10, { above: 0, help: 'H1 5, H2 10, H3 30, or the measured value.' }), restraint: choice('r', 'Restraint', RESTRAINTS.map((value) => ({ value, label: value })), 'medium'), thickness: quantity('t', 'Thickness', 'length', 25.4) },
-    outputs: [{ key: 'preheat', label: 'Minimum preheat', dimension: 'temperature' }, { key: 'fahrenheit', label: 'In Fahrenheit', unit: '°F', decimals: 0 }, { key: 'index', label: 'Susceptibility index' }, { key: 'group', label: 'Group by the index' }, { key: 'groupByPcm', label: 'Group by bands of Pcm' }, { key: 'band', label: 'Thickness band' }, { key: 'required', label: 'Above ambient' }], calculate: preheatByAnnex,
+    outputs: [{ key: 'preheat', label: 'Minimum preheat', dimension: 'temperature' }, { key: 'toUse', label: 'Preheat, up to the next 5 °C', dimension: 'temperature' }, { key: 'fahrenheit', label: 'In Fahrenheit', unit: '°F', decimals: 0 }, { key: 'index', label: 'Susceptibility index' }, { key: 'group', label: 'Group by the index' }, { key: 'groupByPcm', label: 'Group by bands of Pcm' }, { key: 'band', label: 'Thickness band' }, { key: 'required', label: 'Above ambient' }], calculate: preheatByAnnex,
     formula: ['index = 12 Pcm + log10(H), rounded to one decimal for the group', 'preheat from the table by restraint, thickness and group'], source: annexSource, validity: 'Index to 7.0. Most cells are recalled: check against the code’s table.',
-    example: { from: 'calc-g-ph-05 for index and group; table: medium, over 3/4 to 1-1/2 in, group C, 165 °F', expect: { index: { value: 3.76, within: 0.005 }, group: 'C', groupByPcm: 'D', fahrenheit: { value: 165, within: 0 }, preheat: { value: 73.889, within: 0.001 } } },
+    example: { from: 'calc-g-ph-05 for index and group; table: medium, over 3/4 to 1-1/2 in, group C, 165 °F', expect: { index: { value: 3.76, within: 0.005 }, group: 'C', groupByPcm: 'D', fahrenheit: { value: 165, within: 0 }, preheat: { value: 73.889, within: 0.001 }, toUse: { value: 75, within: 0 } } },
   }),
   calculator({
     id: 'hardness-control-d1-1', title: 'Hardness control of the D1.1 annex', group: 'preheat', purpose: 'States what the charts of the annex are entered with for a fillet weld, and keeps the energy that you read there.',
@@ -65,15 +65,15 @@ export const preheatCalculators: readonly Calculator[] = [
   calculator({
     id: 'preheat-ito-bessyo', title: 'Preheat by Ito–Bessyo', group: 'preheat', purpose: 'A second opinion on preheat from Pcm, hydrogen and thickness.',
     inputs: { pcm: number('pcm', 'Pcm', '%', 0.25, { least: 0, most: 100 }), hydrogen: number('hd', 'Diffusible hydrogen (glycerine)', 'ml/100 g', 3, { least: 0 }), thickness: quantity('t', 'Thickness', 'length', 30) },
-    outputs: [{ key: 'preheat', label: 'Preheat', dimension: 'temperature' }, { key: 'pc', label: 'Pc', unit: '%', decimals: 3 }], calculate: preheatItoBessyo,
+    outputs: [{ key: 'preheat', label: 'Preheat', dimension: 'temperature' }, { key: 'toUse', label: 'Preheat, up to the next 5 °C', dimension: 'temperature' }, { key: 'pc', label: 'Pc', unit: '%', decimals: 3 }], calculate: preheatItoBessyo,
     formula: ['Pc = Pcm + H/60 + t/600', 'T0 = 1440 Pc − 392'], source: { standard: 'Ito–Bessyo', edition: '', clause: '', basis: 'memory', note: 'Recalled.' }, validity: 'Thickness 19 to 50 mm; hydrogen 1 to 5 ml/100 g by the glycerine method; C 0.07 to 0.22 %.',
-    example: { from: 'by hand: Pc 0.25 + 0.05 + 0.05 = 0.35; 1440 × 0.35 − 392 = 112', expect: { pc: { value: 0.35, within: 1e-9 }, preheat: { value: 112, within: 1e-6 } } },
+    example: { from: 'by hand: Pc 0.25 + 0.05 + 0.05 = 0.35; 1440 × 0.35 − 392 = 112', expect: { pc: { value: 0.35, within: 1e-9 }, preheat: { value: 112, within: 1e-6 }, toUse: { value: 115, within: 0 } } },
   }),
   calculator({
     id: 'preheat-seferian', title: 'Preheat by Séférian', group: 'preheat', purpose: 'A conservative preheat from chemistry and thickness.',
     inputs: { thickness: quantity('t', 'Thickness', 'length', 20), ...elements({ c: 0.2, mn: 0.9, cr: 0, ni: 0, mo: 0 }) },
-    outputs: [{ key: 'preheat', label: 'Preheat', dimension: 'temperature' }, { key: 'carbonTotal', label: 'C total', unit: '%', decimals: 3 }], calculate: ({ thickness, ...chemistry }) => preheatSeferian({ chemistry, thickness }),
+    outputs: [{ key: 'preheat', label: 'Preheat', dimension: 'temperature' }, { key: 'toUse', label: 'Preheat, up to the next 5 °C', dimension: 'temperature' }, { key: 'carbonTotal', label: 'C total', unit: '%', decimals: 3 }], calculate: ({ thickness, ...chemistry }) => preheatSeferian({ chemistry, thickness }),
     formula: ['C chem = C + (Mn + Cr)/9 + Ni/18 + 7 Mo/90', 'C total = C chem × (1 + 0.005 × thickness)', 'Tp = 350 √(C total − 0.25), 0 below'], source: { standard: 'Séférian', edition: '', clause: '', basis: 'memory', note: 'Recalled.' }, validity: 'No limits are known; conservative.',
-    example: { from: 'by hand: 0.2 + 0.1 = 0.3; × 1.1 = 0.33; 350 × √0.08 = 98.995', expect: { carbonTotal: { value: 0.33, within: 1e-9 }, preheat: { value: 98.995, within: 0.001 } } },
+    example: { from: 'by hand: 0.2 + 0.1 = 0.3; × 1.1 = 0.33; 350 × √0.08 = 98.995', expect: { carbonTotal: { value: 0.33, within: 1e-9 }, preheat: { value: 98.995, within: 0.001 }, toUse: { value: 100, within: 0 } } },
   }),
 ]
