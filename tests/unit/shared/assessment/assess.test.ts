@@ -101,8 +101,10 @@ describe('coupons together', () => {
     const second = coupon({ thickness: 20, tests: 'toughness', toughness: true, number: 'PQR-2' })
     const wps = procedure({ toughness: true, thickness: [16, 50], processes: [['SMAW', 50]] })
     expect(problems(judge(wps, [first, second]))).toEqual([])
-    second.content.variables.preheat.interpassMaximum = quantity(100, 'temperature')
-    expect(finding(judge(wps, [first, second]), 'interpass')).toMatchObject({ verdict: 'outside', couponIds: ['PQR-2'] })
+    // A record is never changed in place: what is edited is another object.
+    const cooler = structuredClone(second)
+    cooler.content.variables.preheat.interpassMaximum = quantity(100, 'temperature')
+    expect(finding(judge(wps, [first, cooler]), 'interpass')).toMatchObject({ verdict: 'outside', couponIds: ['PQR-2'] })
   })
 })
 
