@@ -16,7 +16,8 @@ export const iso15614Part2: Standard = {
   outOfScope: [
     'finishing welding of castings (ISO 15614-4)',
     'processes other than 131, 141 and 15; process 142 (edition of 2025)',
-    'steels, nickel, copper and other metals; pieces of groups 21 to 26 whose sub-group is not recorded',
+    'steels, nickel, copper and other metals; metals of groups 22 and 23 whose sub-group is not recorded',
+    'other routes: pre-production test (15613), tested consumables (15610), previous experience (15611), standard procedure (15612)',
     'beam, friction, resistance, stud and hybrid processes',
     'micro sections, and who ages or anneals specimens before they are bent',
     'heat input: what the clause asks of it for aluminium is not held here',

@@ -24,7 +24,7 @@ function thicknessBand(context: RangeContext, side: CouponSide): Band | null {
 /** The rule for one of the two members. */
 export const thicknessRule = (which: 'thickness' | 'thicknessB'): Rule =>
   bandRule({
-    meta: meta(which === 'thickness' ? 'parent-thickness' : 'parent-thickness-second', { title: which === 'thickness' ? 'Parent material thickness' : 'Parent material thickness, second member', clause: '8.3.2', combine: 'union', statement: 'Butt welds: up to 3 mm 0.5t to 2t, up to 20 mm 3 mm to 2t, above that 0.8t and up, as recalled; where EN 288-4 is narrower, by single or several runs, the rest must be looked up. Both of two members are in range.' }),
+    meta: meta(which === 'thickness' ? 'parent-thickness' : 'parent-thickness-second', { title: which === 'thickness' ? 'Parent material thickness' : 'Parent material thickness, second member', clause: '8.3.2', combine: 'union', statement: 'Butt welds: up to 3 mm 0.5t to 2t, up to 20 mm 3 mm to 2t, above that 0.8t and up, as recalled; where EN 288-4 is narrower, by single or several runs, the rest must be looked up. Both of two members are in range. Of fillets only the tested thickness is sure.' }),
     field: which,
     at: 'weld',
     label: which === 'thickness' ? 'parent material thickness' : 'thickness of the second member',

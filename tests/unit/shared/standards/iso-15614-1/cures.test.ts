@@ -2,6 +2,7 @@
 import fc from 'fast-check'
 import { describe, expect, test } from 'vitest'
 import type { Assessment, AssessedCoupon, Finding } from '@shared/schemas/assessment.ts'
+import type { Interval } from '@shared/schemas/common.ts'
 import type { ProcedureContent, ProcessBlock, WeldingVariables } from '@shared/schemas/welding.ts'
 import { interval, quantity } from '@shared/units/convert.ts'
 import { couponTwo, judgeTwo, procedureTwo, type GivenTwo } from '../iso-15614-2/builders.ts'
@@ -123,7 +124,7 @@ describe('levels', () => {
 function inUS(content: { variables: WeldingVariables }): void {
   const { variables } = content
   const length = (value: number): number => value / 25.4
-  const again = (one: WeldingVariables['thickness']): WeldingVariables['thickness'] => one && interval(one.min && length(one.min.si), one.max && length(one.max.si), 'length', 'in')
+  const again = (one: Interval | null | undefined): Interval | null => (one ? interval(one.min && length(one.min.si), one.max && length(one.max.si), 'length', 'in') : null)
   const fahrenheit = (one: WeldingVariables['preheat']['minimum']): WeldingVariables['preheat']['minimum'] => one && quantity((one.si * 9) / 5 + 32, 'temperature', '°F')
   Object.assign(variables, { unitSystem: 'US', thickness: again(variables.thickness), diameter: again(variables.diameter) })
   variables.joint.filletThroat = again(variables.joint.filletThroat)
