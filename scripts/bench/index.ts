@@ -7,6 +7,7 @@ import { dataDir, root } from '../lib/paths.mjs'
 import { freePort } from '../lib/ports.mjs'
 import { complain, createSteps } from '../lib/steps.mjs'
 import { ensureCluster, releaseCluster } from '../postgres.ts'
+import { measureArcData } from './arc-data.ts'
 import { measureAssessments } from './assessments.ts'
 import { measureLookup } from './lookup.ts'
 import { median, table, type Figure } from './measure.ts'
@@ -63,6 +64,8 @@ async function bench(): Promise<void> {
       const engineer = await signInAs(baseUrl, 'engineer')
       await measure('Look-up', async () => measureLookup(await signInAs(baseUrl, 'welder'), environment, seconds))
       await measure('PDF', () => measurePdf(engineer, baseUrl, seconds))
+      const { pid } = product
+      await measure('Arc data', () => measureArcData(engineer, baseUrl, pid, seconds))
     }
   } finally {
     await product?.stop()

@@ -2,7 +2,7 @@
 export interface Figure {
   name: string
   value: number
-  unit: 'ms' | 's' | '/s' | '×'
+  unit: 'ms' | 's' | '/s' | '×' | 'MB'
   /** How it was measured, and how often. */
   note: string
   /** Further figures of the same measurement, for the file alone. */

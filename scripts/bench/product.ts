@@ -11,6 +11,8 @@ export interface Product {
   baseUrl: string
   /** Milliseconds from spawning `npm start`'s script to the first 200 of /readyz. */
   readyAfter: number
+  /** Process that starts and watches the server; the server is its child. */
+  pid: number
   stop: () => Promise<void>
 }
 
@@ -34,7 +36,7 @@ export async function startProduct(folder: string, port: number): Promise<Produc
   for (;;) {
     const answer = await fetch(`${baseUrl}/readyz`).catch(() => null)
     await answer?.body?.cancel()
-    if (answer?.status === 200) return { baseUrl, readyAfter: performance.now() - begun, stop }
+    if (answer?.status === 200) return { baseUrl, readyAfter: performance.now() - begun, pid: child.pid ?? 0, stop }
     if (child.exitCode !== null) throw new Error(`The product did not start:\n${readFileSync(log, 'utf8')}`)
     await sleep(20)
   }
