@@ -16,6 +16,7 @@ import { hazHardnessDueren, hazHardnessYurioka } from '../../../../shared/calcul
 import { groupByPcm, preheatByAnnex, preheatByTable, RESTRAINTS } from '../../../../shared/calculations/preheat-d1-1.ts'
 import { preheatMethodA } from '../../../../shared/calculations/preheat-method-a.ts'
 import { cetToUse, preheatMethodB } from '../../../../shared/calculations/preheat-method-b.ts'
+import { pulseChange } from '../../../../shared/calculations/pulse-change.ts'
 import { bringAlong, pulseFigures, sampledPower } from '../../../../shared/calculations/pulse.ts'
 import { charpySubSize } from '../../../../shared/calculations/test-figures.ts'
 import { weldCost } from '../../../../shared/calculations/weld-cost.ts'
@@ -95,7 +96,38 @@ describe('pulse', () => {
       const newPeak = peakCurrent * 0.9
       expect(newPeak ** 2 * (bringAlong.onTimeForPeak({ peakCurrent, onTime, newPeak }) ?? NaN)).toBeCloseTo(peakCurrent ** 2 * onTime, 4)
     }))
+    expect(bringAlong.frequencyForFeed({ frequency: 120, wireFeed: 4.5, newFeed: 6 })).toBeCloseTo(160, 9)
     expect(bringAlong.frequencyForMean({ meanCurrent: 500, peakCurrent: 400, backgroundCurrent: 50, onTime: 2 })).toBeNull()
+  })
+})
+
+describe('a change of pulse settings', () => {
+  const before = { peakCurrent: 400, backgroundCurrent: 50, frequency: 120, onTime: 2, wireFeed: 4.5, wireDiameter: 1.2, peakVoltage: 32, backgroundVoltage: 20 }
+  it('names what moved and offers companions that hold what they say', () => {
+    const settings = fc.record({ peakCurrent: between(250, 550), backgroundCurrent: between(20, 120), frequency: between(40, 150), onTime: between(1, 4), wireFeed: between(2, 10) })
+    fc.assert(fc.property(settings, settings, (one, other) => {
+      const [from, to] = [{ ...before, ...one }, { ...before, ...other }]
+      const change = pulseChange(from, to)
+      if (!change) return
+      const was = figures(pulseFigures(from))
+      for (const { setting, value: proposed, keeps } of change.companions) {
+        const now = figures(pulseFigures({ ...to, [setting]: proposed }))
+        const key = keeps === 'droplet' ? 'dropletVolume' : keeps
+        expect((now[key] ?? NaN) / (was[key] ?? NaN), keeps).toBeCloseTo(1, 6)
+      }
+    }))
+  })
+  it('says what 20 Hz more does', () => {
+    const change = pulseChange(before, { ...before, frequency: 140 })
+    expect(change?.changed).toEqual(['frequency'])
+    expect(change?.deltas.find(({ key }) => key === 'meanCurrent')).toMatchObject({ before: expect.closeTo(134, 9) as number, after: expect.closeTo(148, 9) as number })
+    expect(change?.companions.map(({ setting, keeps }) => [setting, keeps])).toEqual([['frequency', 'droplet'], ['frequency', 'meanCurrent']])
+    expect(pulseChange(before, { ...before, frequency: 600 })).toBeNull()
+    expect(pulseChange(before, before)).toEqual({ changed: [], deltas: [], companions: [] })
+  })
+  it('brings frequency along with feed, and time at peak along with peak', () => {
+    expect(pulseChange(before, { ...before, wireFeed: 6 })?.companions).toMatchObject([{ setting: 'frequency', value: expect.closeTo(160, 9) as number, sentence: 'Pulse frequency of 160 Hz keeps the wire melted per pulse as it was.' }])
+    expect(pulseChange(before, { ...before, peakCurrent: 440 })?.companions.find(({ keeps }) => keeps === 'detachment')).toMatchObject({ setting: 'onTime', value: expect.closeTo(2 * (400 / 440) ** 2, 9) as number })
   })
 })
 
