@@ -21,7 +21,7 @@ async function coverage() {
   if (options.help) return console.log(help)
   const summary = path.join(root, 'coverage', 'coverage-summary.json')
   rmSync(summary, { force: true })
-  const args = ['run', '--project', 'unit', 'tests/unit/shared', '--reporter=default', '--coverage', '--coverage.reportOnFailure', '--coverage.include=shared/standards/**/*.ts']
+  const args = ['run', '--project', 'unit', 'tests/unit/shared', '--reporter=default', '--coverage', '--coverage.reportOnFailure', '--coverage.include=shared/standards/**/*.ts', '--coverage.exclude=tests/**']
   const code = await run(process.execPath, ['node_modules/vitest/vitest.mjs', ...args], { env: { ...process.env, NODE_ENV: 'test' } })
   if (existsSync(summary)) console.log(`\n${branchLines(parse(readFileSync(summary, 'utf8')), root).join('\n')}`)
   else console.log('\nNo coverage was written, because the run stopped before its end.')
