@@ -38,7 +38,6 @@ class Sums {
     this.currentSquared += half * (i0 * i0 + i * i)
     this.voltageSquared += half * (v0 * v0 + v * v)
     this.energy += half * (i0 * v0 + i * v)
-    this.extremes(i, v)
   }
 
   join(other: Sums): void {
@@ -89,10 +88,16 @@ export class Accumulator {
       if (!gap && this.samples > 0) this.sums.step(t - this.t0, this.i0, this.v0, i, v)
       if (size < ARC_OFF) {
         this.lowSince = t
+        // Its reading counts only when the arc turns out to have burned on.
         this.low = new Sums()
-      } else this.pulses.add(t, size)
+        this.low.extremes(i, v)
+      } else {
+        this.sums.extremes(i, v)
+        this.pulses.add(t, size)
+      }
     } else {
       if (!gap) this.low.step(t - this.t0, this.i0, this.v0, i, v)
+      this.low.extremes(i, v)
       if (size >= ARC_ON) {
         this.sums.join(this.low)
         this.lowSince = NaN

@@ -28,13 +28,14 @@ class Times {
     this.count++
   }
 
-  /** Mean of those within 20 % of the middle one, and what share of all they are. */
-  usual(): { mean: number; share: number } {
+  /** Mean of those within 20 % of the middle one, or one and a half steps where that is more, and what share of all they are. */
+  usual(step: number): { mean: number; share: number } {
     let at = 0
     for (let below = this.counts[0] ?? 0; below < this.count / 2 && at < 1039; below += this.counts[at] ?? 0) at++
     let count = 0
     let sum = 0
-    for (let bin = Math.max(0, at - 10); bin <= Math.min(1039, at + 10); bin++) {
+    const reach = Math.ceil(Math.log(1 + Math.max(0.2, (1.5 * step) / (1e-6 * Math.exp(at * 0.02)))) / 0.02)
+    for (let bin = Math.max(0, at - reach); bin <= Math.min(1039, at + reach); bin++) {
       count += this.counts[bin] ?? 0
       sum += this.sums[bin] ?? 0
     }
@@ -235,8 +236,8 @@ function judge(scale: Scale, step: number): { pulse: ArcFigures['pulse']; why: s
   if (scale.samples === 0) return none('Too few samples with the arc burning to look for pulses.')
   if (scale.flat > scale.samples * 0.5) return none('The current is not pulsed: it swings by less than 20 A or a fifth of its mean.')
   if (scale.periods.count < LEAST_PULSES || scale.pulsing < scale.samples * 0.5) return none('The current rises and falls, but not between two steady levels, so it is not told as pulsed.')
-  const period = scale.periods.usual()
-  const onTime = scale.onTimes.usual()
+  const period = scale.periods.usual(step)
+  const onTime = scale.onTimes.usual(step)
   if (period.mean < 4 * step || onTime.mean < 1.5 * step) return none('The current seems pulsed, but there are too few samples in a pulse to measure it. Record it with a higher sample rate.')
   if (period.share < 0.7) return none('The current jumps between two levels, but not at regular intervals, as in short-circuiting transfer: no pulse frequency is given.')
   return { pulse: { frequency: 1 / period.mean, peakCurrent: scale.peakCurrent, backgroundCurrent: scale.backgroundCurrent, onTime: onTime.mean, count: scale.periods.count + 1 }, why: null }

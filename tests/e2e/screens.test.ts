@@ -19,10 +19,11 @@ beforeAll(async () => {
   for (const state of ['certified', 'testing', 'rejected', 'planned', 'welding']) found[`coupon ${state}`] = (await list(`coupons?state=${state}&limit=1`))[0]?.id ?? ''
   found['open coupon'] = found['coupon testing'] || found['coupon welding'] || found['coupon planned'] || ''
   found.job = (await list('jobs?limit=1'))[0]?.id ?? ''
+  found.recording = (await list('arc-recordings?q=PQR&limit=1'))[0]?.id ?? ''
   const to = { to: ['screens@larkfield.example'], message: 'For the outbox.' }
   expect((await page.request.post(`/api/revisions/${found.approved}/mails`, { data: to })).status()).toBe(202)
   found.mail = (await list('outbox?limit=1'))[0]?.id ?? ''
-  for (const name of ['draft', 'in-review', 'approved', 'withdrawn', 'coupon certified', 'open coupon', 'job', 'mail']) expect(found[name], name).toBeTruthy()
+  for (const name of ['draft', 'in-review', 'approved', 'withdrawn', 'coupon certified', 'open coupon', 'job', 'recording', 'mail']) expect(found[name], name).toBeTruthy()
   await page.context().close()
 })
 
@@ -56,7 +57,7 @@ async function visit(page: Page, complaints: string[], path: string, read = READ
 const screens: readonly (readonly [Role, ...(string | readonly [label: string, path: () => string])[]])[] = [
   ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], '/account'],
   ['inspector', '/', '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
-  ['supervisor', '/', ['a review', () => `/revisions/${found['in-review']}/review`]],
+  ['supervisor', '/', '/arc-data', '/arc-data/new', ['a recording of volts and amperes', () => `/arc-data/${found.recording}`], ['a review', () => `/revisions/${found['in-review']}/review`]],
   ['administrator', '/', '/people'],
   ['welder', '/', '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`]],
   ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
@@ -98,7 +99,7 @@ describe('signed out', () => {
 })
 
 describe('a record that is not there', () => {
-  it.each(['/revisions/', '/coupons/', '/jobs/', '/outbox/', '/shop/'])('%s… says so with a head and a way on', async (path) => {
+  it.each(['/revisions/', '/coupons/', '/jobs/', '/arc-data/', '/outbox/', '/shop/'])('%s… says so with a head and a way on', async (path) => {
     const page = await stage.as('engineer')
     await page.goto(`${path}${randomUUID()}`)
     await page.getByText(/not (there|found)|No sheet/i).first().waitFor()
@@ -112,6 +113,8 @@ const dialogs: readonly (readonly [Role, button: string | RegExp, path: () => st
   ['supervisor', 'Withdraw', () => `/revisions/${found.approved}`],
   ['supervisor', 'Return with a comment', () => `/revisions/${found['in-review']}/review`],
   ['inspector', 'Reject', () => `/coupons/${found['open coupon']}`],
+  ['inspector', 'Attach elsewhere', () => `/arc-data/${found.recording}`],
+  ['inspector', 'Write the energy into the pass', () => `/arc-data/${found.recording}`],
   ['administrator', /^Invite/, () => '/people'],
   ['engineer', 'Open a job', () => '/jobs'],
 ]
@@ -142,6 +145,7 @@ describe('when the server fails', () => {
     ['/procedures', 'procedures'],
     ['/coupons', 'coupons'],
     ['/jobs', 'jobs'],
+    ['/arc-data', 'arc-recordings'],
     ['/outbox', 'outbox'],
     ['/people', 'people'],
     ['/library/base-metals', 'library/base-metals'],
@@ -181,7 +185,7 @@ describe('an organization that has just been opened', () => {
     const roles: Role[] = ['administrator', 'engineer', 'inspector', 'supervisor']
     expect((await page.request.patch(`/api/people/${person.id}`, { data: { roles }, headers: { 'If-Match': `"${version}"` } })).status()).toBe(200)
     const complaints = complaintsOf(page)
-    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
+    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
       expect([path, await visit(page, complaints, path, [widths[0]])]).toEqual([path, []])
       await page.getByRole('heading', { level: 2, name: title }).waitFor()
       if (step) await page.getByRole('main').getByRole(path === '/jobs' ? 'button' : 'link', { name: step }).last().waitFor()

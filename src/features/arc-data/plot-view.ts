@@ -71,6 +71,8 @@ export function byKey(key: string, range: Range, whole: Range): Range | null {
 
 /** Seconds as they stand on an axis that spans so much: ms where it is short. */
 export function timeText(seconds: number, span: number): string {
-  if (span < 0.5) return `${Number((seconds * 1000).toPrecision(7))} ms`
-  return `${Number(seconds.toPrecision(6))} s`
+  const [value, shown, unit] = span < 0.5 ? [seconds * 1000, span * 1000, 'ms'] : [seconds, span, 's']
+  // A thousandth of what is shown is as fine as can be seen.
+  const decimals = Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(shown))))
+  return `${Number(value.toFixed(decimals))} ${unit}`
 }

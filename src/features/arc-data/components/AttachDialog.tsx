@@ -18,7 +18,7 @@ import { searchCoupons, useRecordingActs } from '../api.ts'
 /** Says what weld the recording is of: a coupon and its pass, and the length that was welded meanwhile. */
 export function AttachDialog({ recording, onClose }: { recording: ArcRecording; onClose: () => void }) {
   const { attachment } = recording
-  const { system } = useUnits()
+  const { system, unitOf } = useUnits()
   const { attach } = useRecordingActs(recording)
   const [coupon, setCoupon] = useState<{ id: string | null; text: string }>({ id: attachment.couponId, text: attachment.couponId ? (recording.attachedTo?.split(' pass ')[0] ?? '') : '' })
   const [row, setRow] = useState(attachment.runRowId ?? '')
@@ -79,7 +79,7 @@ export function AttachDialog({ recording, onClose }: { recording: ArcRecording; 
           error={at('runRowId')}
         />
       )}
-      <QuantityField label="Length welded meanwhile" optional dimension="length" system={system} value={length} onChange={setLength} onUnread={setUnread} description="For the heat input: the energy is divided by it. Without it the length or travel speed of the pass or bead counts." error={at('weldLength')} />
+      <QuantityField label={`Length welded meanwhile, ${unitOf('length')}`} optional dimension="length" system={system} value={length} onChange={setLength} onUnread={setUnread} description="For the heat input: the energy is divided by it. Without it the length or travel speed of the pass or bead counts." error={at('weldLength')} />
       {problem && problem.fields.length === 0 && <FormError message={problem.message} />}
     </Dialog>
   )

@@ -28,7 +28,7 @@ export function ColumnChoice({ guess, choice, onChoose }: { guess: LayoutGuess; 
           <thead>
             <tr className="border-b border-rule align-bottom">
               {columns.map(({ name }, column) => (
-                <th key={column} scope="col" className="min-w-32 px-2 py-2 text-left">
+                <th key={column} scope="col" className="min-w-26 px-2 py-2 text-left">
                   <span className="mb-1 block font-medium break-words">{name || `Column ${column + 1}`}</span>
                   <select aria-label={`What column ${column + 1} holds`} className="box" value={roleOf(column)} onChange={(event) => assign(column, event.target.value as Role)}>
                     {ROLES.map(({ value, label }) => (

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react'
 import { ARC_OFF, ARC_ON, STOP_AFTER } from '@shared/arc-data/figures.ts'
 import type { ArcFigures, ArcRecording } from '@shared/schemas/arc-data.ts'
+import { fromSi } from '@shared/units/convert.ts'
 import { Sheet } from '@/components/Sheet.tsx'
 import { useUnits } from '@/hooks/units.ts'
 import { figure } from '@/lib/figures.ts'
@@ -26,8 +27,8 @@ function Lines({ lines }: { lines: readonly Line[] }) {
 /** Power, energy and heat input, each with how it was worked out. */
 export function PowerSheet({ recording }: { recording: ArcRecording }) {
   const { figures, heatInput, heatInputHow } = recording
-  const { stored, unitOf } = useUnits()
-  const [heat = ''] = heatInput === null ? [] : stored(heatInput, 'heatInput').split(' ')
+  const { system, unitOf } = useUnits()
+  const heat = heatInput === null ? '' : figure(fromSi(heatInput, 'heatInput', unitOf('heatInput')), system === 'SI' ? 2 : 1)
   return (
     <Sheet title="Power and energy" aside="ASME IX QW-409.1(c)">
       <Lines
@@ -87,22 +88,22 @@ export function ReadingsSheet({ figures }: { figures: ArcFigures }) {
   const rows = [['Current', 'A', figures.current, 1], ['Voltage', 'V', figures.voltage, 2]] as const
   return (
     <Sheet title="Readings" aside="while the arc burns">
-      <div className="overflow-x-auto" role="region" aria-label="Readings" tabIndex={0}>
+      <div className="overflow-x-auto" role="region" aria-label="Readings as a table" tabIndex={0}>
         <table className="w-full max-w-3xl border-collapse text-right">
           <thead>
             <tr className="border-b border-rule">
-              <td className="px-4 py-2" />
+              <td />
               {['Mean', 'RMS', 'Lowest', 'Highest'].map((head) => (
-                <th key={head} scope="col" className="px-4 py-2 font-medium">{head}</th>
+                <th key={head} scope="col" className="px-2 py-2 font-medium sm:px-4">{head}</th>
               ))}
             </tr>
           </thead>
           <tbody>
             {rows.map(([name, unit, { mean, rms, min, max }, digits]) => (
               <tr key={name} className="border-b border-hair last:border-b-0">
-                <th scope="row" className="px-4 py-2 text-left font-medium">{name} <span className="font-normal text-soft">{unit}</span></th>
+                <th scope="row" className="py-2 pr-2 pl-4 text-left font-medium whitespace-nowrap">{name} <span className="font-normal text-soft">{unit}</span></th>
                 {[mean, rms, min, max].map((value, at) => (
-                  <td key={at} className="px-4 py-2">{figure(value, digits)}</td>
+                  <td key={at} className="px-2 py-2 sm:px-4">{figure(value, digits)}</td>
                 ))}
               </tr>
             ))}
@@ -149,7 +150,7 @@ function Wave({ duty, peak, background, onTime, period }: { duty: number; peak: 
   const base = bottom - (background / peak) * (bottom - top)
   const path = [0, 1].map((turn) => `${left + turn * cycle},${base}V${top}H${left + turn * cycle + duty * cycle}V${base}H${left + (turn + 1) * cycle}`).join('L')
   return (
-    <svg viewBox="0 0 288 150" className="m-4 w-full max-w-72 max-lg:mt-0" role="img" aria-label={`Two pulses drawn: ${figure(peak, 0)} A for ${figure(onTime * 1000, 2)} ms, then ${figure(background, 0)} A until ${figure(period * 1000, 2)} ms`}>
+    <svg viewBox="0 0 288 150" className="w-full max-w-72 p-4" role="img" aria-label={`Two pulses drawn: ${figure(peak, 0)} A for ${figure(onTime * 1000, 2)} ms, then ${figure(background, 0)} A until ${figure(period * 1000, 2)} ms`}>
       <line x1={left} x2={right} y1={bottom} y2={bottom} className="stroke-edge" />
       <line x1={left} x2={left} y1={top - 8} y2={bottom} className="stroke-edge" />
       <path d={`M${path}`} className="fill-none stroke-heat-2" strokeWidth={2} />

@@ -4,7 +4,6 @@ import { useState } from 'react'
 import { Link, useNavigate, useParams } from 'react-router-dom'
 import type { ArcRecording } from '@shared/schemas/arc-data.ts'
 import { Button, buttonClass } from '@/components/Button.tsx'
-import { Responsibility } from '@/components/Caution.tsx'
 import { Dialog } from '@/components/Dialog.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Breadcrumb, RecordError, Skeleton } from '@/components/states.tsx'
@@ -55,7 +54,6 @@ export function ArcRecordingPage() {
         <ReadingsSheet figures={figures} />
         <ArcTimeSheet figures={figures} />
         <FileSheet recording={recording} />
-        <Responsibility />
       </div>
     </>
   )

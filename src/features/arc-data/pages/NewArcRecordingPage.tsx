@@ -82,11 +82,11 @@ export function NewArcRecordingPage() {
           <Sheet title="Columns" aside={guess.sure && !guess.needsRate ? 'found' : 'please check'}>
             <div className="space-y-4 px-4 py-4">
               {guess.doubts.length > 0 && (
-                <ul className="border-l-[3px] border-l-straw bg-straw-bg px-3 py-2" role="status">
+                <div className="border-l-[3px] border-l-straw bg-straw-bg px-3 py-2" role="status">
                   {guess.doubts.map((doubt) => (
-                    <li key={doubt}>{doubt}</li>
+                    <p key={doubt}>{doubt}</p>
                   ))}
-                </ul>
+                </div>
               )}
               <ColumnChoice guess={guess} choice={sending.choice} onChoose={sending.choose} />
             </div>

@@ -88,6 +88,10 @@ describe('the arc', () => {
     expect(figures.stops[0]?.to).toBeCloseTo(6, 2)
     expect(figures.arcTime).toBeCloseTo(6, 1)
     expect(figures.voltage.mean).toBeLessThan(25)
+    // The short drop belongs to the arc, the open circuit does not.
+    expect(figures.current.min).toBe(0)
+    const before = read(csv(rows.slice(0, 6900))).figures
+    expect([before.current.min, before.voltage.max]).toEqual([180, 24])
   })
 
   it('alternating is found, compared by RMS, its power from v times i', () => {
@@ -159,6 +163,12 @@ describe('pulses', () => {
     const { pulse, said } = read(csv(Array.from({ length: 40_000 }, (_, k) => [k / 10_000, current(k, random), 22] as const))).figures
     expect(pulse).toBeNull()
     expect(said.join(' ')).toMatch(why)
+  })
+
+  it('of few samples each are measured without leaning to the shorter', () => {
+    const { pulse } = read(csv(square({ rate: 2000, seconds: 6, frequency: 110, onTime: 0.0021, peak: 388, background: 85 }))).figures
+    expect(pulse?.onTime).toBeCloseTo(0.0021, 4)
+    expect(pulse?.frequency).toBeCloseTo(110, 1)
   })
 
   it('sampled too slowly are not measured', () => {
