@@ -25,6 +25,8 @@ export function Margin({ findings, children, ...note }: MarginProps) {
   const [open, setOpen] = useState(false)
   const empty = findings.length === 0 && !children
   useEffect(() => (empty || !place.current ? undefined : margin?.add(place.current)), [margin, empty])
+  // What a note says may change while its row is out of sight, where no size is observed.
+  useEffect(() => margin?.ask(), [margin, findings, open])
   if (empty) return null
 
   const sorted = [...findings].sort((a, b) => ORDER[a.verdict] - ORDER[b.verdict])

@@ -1,7 +1,7 @@
 import { createContext } from 'react'
 
 /** Where notes report themselves; null outside a MarginLayout. */
-export const MarginContext = createContext<{ add: (element: HTMLElement) => () => void } | null>(null)
+export const MarginContext = createContext<{ add: (element: HTMLElement) => () => void; ask: () => void } | null>(null)
 
 export interface Anchored {
   /** Where the note would like to start, from the top of the layout, px. */

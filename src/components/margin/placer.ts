@@ -41,7 +41,8 @@ export class MarginPlacer {
     }
   }
 
-  private ask(): void {
+  /** Places the notes before the next frame is drawn. */
+  ask(): void {
     if (this.asked === 0) this.asked = requestAnimationFrame(() => this.place())
   }
 
