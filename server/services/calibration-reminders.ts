@@ -1,5 +1,5 @@
 import { Op } from 'sequelize'
-import { DUE_SOON_DAYS, calibrationState, daysUntil } from '@shared/machines/calibration.ts'
+import { DUE_SOON_DAYS, calibrationState, daysUntil, dayWords } from '@shared/machines/calibration.ts'
 import type { Tenant } from '../config/database.ts'
 import { baseUrl } from '../config/env.ts'
 import { Machine } from '../models/machine.ts'
@@ -16,7 +16,7 @@ export async function databaseDay(tenant: Tenant): Promise<string> {
 const told = ({ number, name, location, calibrationDueOn }: Machine, today: string): string => {
   const due = calibrationDueOn ?? ''
   const days = daysUntil(due, today)
-  const when = calibrationState(due, today) === 'lapsed' ? `lapsed on ${due}` : `due on ${due}${days === 0 ? ', today' : `, in ${days} ${days === 1 ? 'day' : 'days'}`}`
+  const when = calibrationState(due, today) === 'lapsed' ? `lapsed on ${dayWords(due)}` : `due on ${dayWords(due)}${days === 0 ? ', today' : `, in ${days} ${days === 1 ? 'day' : 'days'}`}`
   return `${number} ${name}${location ? `, ${location}` : ''}: ${when}`
 }
 

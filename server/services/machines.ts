@@ -54,7 +54,7 @@ export async function listMachines(tenant: Tenant, query: QueryRead<'listMachine
   if (query.calibration) where.push(CALIBRATION[query.calibration])
   if (query.retired !== 'with') where.push(query.retired === 'only' ? 'm.retired' : 'not m.retired')
   if (query.process) {
-    where.push("jsonb_path_exists(m.content, '$.modes[*].processes[*] ? (@ == $process)', jsonb_build_object('process', $process::text))")
+    where.push("m.content->'modes' @> jsonb_build_array(jsonb_build_object('processes', jsonb_build_array($process::text)))")
     bind.process = query.process
   }
   const page = await listPage<Row>(

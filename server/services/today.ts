@@ -47,7 +47,7 @@ const SOURCES: readonly Source[] = [
   },
   {
     kind: 'calibration', roles: ['engineer', 'administrator'],
-    sql: `select m.number || ' ' || m.name as title, case when m.calibration_due_on < current_date then 'calibration lapsed on ' else 'calibration due on ' end || m.calibration_due_on as detail, '/machines/' || m.id || '#calibration' as href, m.updated_at as at
+    sql: `select m.number || ' ' || m.name as title, case when m.calibration_due_on < current_date then 'calibration lapsed on ' else 'calibration due on ' end || to_char(m.calibration_due_on, 'FMDD FMMonth YYYY') as detail, '/machines/' || m.id || '#calibration' as href, m.updated_at as at
       from machines m where m.organization_id = $organizationId and not m.retired and m.calibration_due_on <= current_date + ${DUE_SOON_DAYS}`,
   },
   { kind: 'invitation', roles: ['administrator'], sql: `select p.name as title, 'invited, not yet here: ' || p.email as detail, '/people' as href, p.created_at as at from people p where p.organization_id = $organizationId and p.state = 'invited'` },

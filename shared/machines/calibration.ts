@@ -13,3 +13,11 @@ export function calibrationState(dueOn: string | null, today: string): Calibrati
   const days = daysUntil(dueOn, today)
   return days < 0 ? 'lapsed' : days <= DUE_SOON_DAYS ? 'due-soon' : 'current'
 }
+
+const MONTHS = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December']
+
+/** A calendar day in words: 19 December 2026. */
+export function dayWords(day: string): string {
+  const [year = '', month = '', date = ''] = day.split('-')
+  return `${Number(date)} ${MONTHS[Number(month) - 1] ?? month} ${year}`
+}

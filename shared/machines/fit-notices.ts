@@ -1,6 +1,6 @@
 /** Whether the machine, its mode and its program are right for the procedure at all, before any figure is looked at. */
 import type { MachineMode, PanelNotice } from '../schemas/machines.ts'
-import { calibrationState, daysUntil } from './calibration.ts'
+import { calibrationState, daysUntil, dayWords } from './calibration.ts'
 import { notice, PROGRAM_KINDS, type CardFacts } from './card-facts.ts'
 import { familiesOf, isAluminiumWire, measurementsFor, programFit, wireFamily } from './wires.ts'
 
@@ -22,9 +22,9 @@ function calibrationNotices({ machine, machineNumber, today }: CardFacts): Panel
   const basis = 'ISO 3834-2 cl. 16: measuring gear is controlled at stated intervals (secondary); ASME IX and AWS D1.1 ask no calibration of welding sets (secondary)'
   const prove = 'Prove volts, amps and wire feed with calibrated instruments of your own.'
   if (dueOn === null) return [notice('warn', 'calibration-unknown', `No calibration is recorded for ${machineNumber}, so its figures may not be true. ${prove}`, basis)]
-  if (state === 'lapsed') return [notice('warn', 'calibration-lapsed', `The calibration of ${machineNumber} lapsed on ${dueOn}, so its figures may not be true. ${prove}`, basis)]
+  if (state === 'lapsed') return [notice('warn', 'calibration-lapsed', `The calibration of ${machineNumber} lapsed on ${dayWords(dueOn)}, so its figures may not be true. ${prove}`, basis)]
   const days = daysUntil(dueOn, today)
-  return state === 'due-soon' ? [notice('note', 'calibration-due', `The calibration of ${machineNumber} is due on ${dueOn}${days === 0 ? ', today' : days === 1 ? ', tomorrow' : `, in ${days} days`}.`, basis)] : []
+  return state === 'due-soon' ? [notice('note', 'calibration-due', `The calibration of ${machineNumber} is due on ${dayWords(dueOn)}${days === 0 ? ', today' : days === 1 ? ', tomorrow' : `, in ${days} days`}.`, basis)] : []
 }
 
 function modeNotices({ block, mode, machineNumber, ranges }: CardFacts): PanelNotice[] {

@@ -19,11 +19,14 @@ beforeAll(async () => {
   for (const state of ['certified', 'testing', 'rejected', 'planned', 'welding']) found[`coupon ${state}`] = (await list(`coupons?state=${state}&limit=1`))[0]?.id ?? ''
   found['open coupon'] = found['coupon testing'] || found['coupon welding'] || found['coupon planned'] || ''
   found.job = (await list('jobs?limit=1'))[0]?.id ?? ''
+  const machines = await list('machines?sort=number')
+  ;[found['precise machine'], found['plain feeder'], found['lumping machine']] = machines.map(({ id }) => id) as [string, string, string]
+  found['pulsed aluminium'] = (await list('procedures?q=ER5356&state=approved&limit=1'))[0]?.revisionId ?? ''
   found.recording = (await list('arc-recordings?q=PQR&limit=1'))[0]?.id ?? ''
   const to = { to: ['screens@larkfield.example'], message: 'For the outbox.' }
   expect((await page.request.post(`/api/revisions/${found.approved}/mails`, { data: to })).status()).toBe(202)
   found.mail = (await list('outbox?limit=1'))[0]?.id ?? ''
-  for (const name of ['draft', 'in-review', 'approved', 'withdrawn', 'coupon certified', 'open coupon', 'job', 'recording', 'mail']) expect(found[name], name).toBeTruthy()
+  for (const name of ['draft', 'in-review', 'approved', 'withdrawn', 'coupon certified', 'open coupon', 'job', 'recording', 'mail', 'precise machine', 'plain feeder', 'lumping machine', 'pulsed aluminium']) expect(found[name], name).toBeTruthy()
   await page.context().close()
 })
 
@@ -55,11 +58,11 @@ async function visit(page: Page, complaints: string[], path: string, read = READ
 }
 
 const screens: readonly (readonly [Role, ...(string | readonly [label: string, path: () => string])[]])[] = [
-  ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], '/account'],
+  ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], '/machines', '/machines/new', ['a machine with programs', () => `/machines/${found['lumping machine']}`], '/account'],
   ['inspector', '/', '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
   ['supervisor', '/', '/arc-data', '/arc-data/new', ['a recording of volts and amperes', () => `/arc-data/${found.recording}`], ['a review', () => `/revisions/${found['in-review']}/review`]],
   ['administrator', '/', '/people'],
-  ['welder', '/', '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`]],
+  ['welder', '/', '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`], ['a machine as text', () => `/machines/${found['precise machine']}`], '/machines/card', ['a panel card', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=manual-pulse`], ['a panel card of one knob', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=pulse`], ['a panel card that refuses', () => `/machines/${found['plain feeder']}/card?revision=${found['pulsed aluminium']}`]],
   ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
 ]
 
@@ -99,7 +102,7 @@ describe('signed out', () => {
 })
 
 describe('a record that is not there', () => {
-  it.each(['/revisions/', '/coupons/', '/jobs/', '/arc-data/', '/outbox/', '/shop/'])('%s… says so with a head and a way on', async (path) => {
+  it.each(['/revisions/', '/coupons/', '/jobs/', '/machines/', '/arc-data/', '/outbox/', '/shop/'])('%s… says so with a head and a way on', async (path) => {
     const page = await stage.as('engineer')
     await page.goto(`${path}${randomUUID()}`)
     await page.getByText(/not (there|found)|No sheet/i).first().waitFor()
@@ -145,6 +148,7 @@ describe('when the server fails', () => {
     ['/procedures', 'procedures'],
     ['/coupons', 'coupons'],
     ['/jobs', 'jobs'],
+    ['/machines', 'machines'],
     ['/arc-data', 'arc-recordings'],
     ['/outbox', 'outbox'],
     ['/people', 'people'],
@@ -185,14 +189,14 @@ describe('an organization that has just been opened', () => {
     const roles: Role[] = ['administrator', 'engineer', 'inspector', 'supervisor']
     expect((await page.request.patch(`/api/people/${person.id}`, { data: { roles }, headers: { 'If-Match': `"${version}"` } })).status()).toBe(200)
     const complaints = complaintsOf(page)
-    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
+    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/machines', 'No machine yet', /Register a machine/], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
       expect([path, await visit(page, complaints, path, [widths[0]])]).toEqual([path, []])
       await page.getByRole('heading', { level: 2, name: title }).waitFor()
       if (step) await page.getByRole('main').getByRole(path === '/jobs' ? 'button' : 'link', { name: step }).last().waitFor()
     }
     // The other theme has colours of its own, which must be told apart as well.
     expect((await page.request.patch('/api/account', { data: { theme: 'night' } })).status()).toBe(200)
-    for (const path of ['/procedures', '/procedures/new', '/library/base-metals', '/account']) expect(['by night', path, await visit(page, complaints, path, [widths[0]])]).toEqual(['by night', path, []])
+    for (const path of ['/procedures', '/procedures/new', '/machines/new', '/library/base-metals', '/account']) expect(['by night', path, await visit(page, complaints, path, [widths[0]])]).toEqual(['by night', path, []])
     await page.goto('/library/base-metals')
     await eventually(() => page.getByRole('row').count()).toBeGreaterThan(10)
   })

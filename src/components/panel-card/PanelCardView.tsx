@@ -4,7 +4,8 @@ import { barOf, barWords, roomOf } from './layout.ts'
 /** A panel card, read at arm's length: what stands against it first, then what to dial with the room left, then what to measure. */
 export function PanelCardView({ card }: { card: PanelCard }) {
   const of = (level: PanelNotice['level']) => card.notices.filter((notice) => notice.level === level)
-  const [refusals, warnings, notes] = [of('refuse'), of('warn'), of('note')]
+  // What to measure and what is good to know belongs to a weld that may be made.
+  const [refusals, warnings, notes] = [of('refuse'), of('warn').filter(({ code }) => card.ready || code !== 'not-shown'), card.ready ? of('note') : []]
   const dialled = card.lines.filter(({ value }) => value !== null)
   const open = card.lines.filter(({ value }) => value === null)
   return (
@@ -36,7 +37,7 @@ export function PanelCardView({ card }: { card: PanelCard }) {
           {open.length > 0 && <Open lines={open} />}
         </section>
       )}
-      {card.mustMeasure.length > 0 && (
+      {card.ready && card.mustMeasure.length > 0 && (
         <section aria-label="Measure this" className="border-b border-rule px-5 py-4">
           <h2 className="font-narrow text-lg font-medium tracking-[0.055em] text-soft uppercase">Measure this; the panel doesn’t show it</h2>
           <ul className="mt-1 list-disc space-y-1.5 pl-5">
@@ -96,7 +97,7 @@ function LineRow({ line }: { line: PanelLine }) {
           {!line.shown && <span className="block text-base text-straw-deep">not shown on the panel</span>}
         </p>
         <p className="shrink-0 text-right">
-          <span className={`font-narrow leading-none font-semibold text-figure tabular-nums ${figure.length > 6 ? 'text-4xl' : 'text-5xl'}`}>{figure}</span> <span className="text-soft">{line.unit}</span>
+          <span className={`font-narrow leading-none font-semibold text-figure tabular-nums ${figure.length > 6 ? 'text-3xl' : 'text-4xl'}`}>{figure}</span> <span className="text-soft">{line.unit}</span>
         </p>
       </div>
       {bar && (

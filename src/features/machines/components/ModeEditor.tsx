@@ -1,8 +1,10 @@
+import { ChevronDown, ChevronRight } from 'lucide-react'
+import { useState } from 'react'
 import { Controller, useWatch } from 'react-hook-form'
 import { PROGRAM_KINDS } from '@shared/machines/card-facts.ts'
 import { Checkbox, Select, TagPicker, TextField } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
-import { HAS_KEYS, HAS_WORDS, MODE_OPTIONS, POLARITY_OPTIONS, PROCESS_OPTIONS, TRANSFER_OPTIONS, wrong } from '../words.ts'
+import { HAS_KEYS, HAS_WORDS, MODE_OPTIONS, MODE_WORDS, POLARITY_OPTIONS, PROCESS_OPTIONS, TRANSFER_OPTIONS, wrong } from '../words.ts'
 import { ControlGrid, DisplayGrid, ReachFields } from './ControlGrid.tsx'
 import { RowKeys, type MachineForm } from './form-parts.tsx'
 import { ProgramsEditor } from './ProgramsEditor.tsx'
@@ -21,11 +23,23 @@ function Part({ title, about, children }: { title: string; about?: string; child
 /** One mode of the panel: what it is for, its controls, displays, programs and reach. */
 export function ModeEditor({ form, mode, count, onMove, onRemove }: { form: MachineForm; mode: number; count: number; onMove: (from: number, to: number) => void; onRemove: () => void }) {
   const at = `modes.${mode}` as const
-  const [name, kind, programs] = useWatch({ control: form.control, name: [`${at}.name`, `${at}.kind`, `${at}.programs`] })
+  const [name, kind, programs, processes, controls] = useWatch({ control: form.control, name: [`${at}.name`, `${at}.kind`, `${at}.programs`, `${at}.processes`, `${at}.controls`] })
   const error = (path: Parameters<MachineForm['getFieldState']>[0]) => wrong(form.getFieldState(path, form.formState).error)
   const title = name || `Mode ${mode + 1}`
+  // Where there is no room to see all modes at once, each is opened by hand; one with something wrong stands open.
+  const [open, setOpen] = useState(() => count === 1 || typeof matchMedia !== 'function' || matchMedia('(min-width: 80rem)').matches)
+  const shown = open || form.formState.errors.modes?.[mode] !== undefined
   return (
-    <Sheet id={`mode-${mode + 1}`} title={title} className="mt-4" aside={<RowKeys name={title} index={mode} count={count} onMove={onMove} onRemove={onRemove} />}>
+    <Sheet id={`mode-${mode + 1}`} title={title} className="mt-4" aside={
+      <div className="flex items-center gap-2">
+        <button type="button" aria-expanded={shown} aria-controls={`mode-${mode + 1}-body`} aria-label={`${shown ? 'Fold' : 'Open'} ${title}`} className="flex size-9 items-center justify-center rounded hover:text-ink" onClick={() => setOpen(!shown)}>
+          {shown ? <ChevronDown size={18} aria-hidden="true" /> : <ChevronRight size={18} aria-hidden="true" />}
+        </button>
+        <RowKeys name={title} index={mode} count={count} onMove={onMove} onRemove={onRemove} />
+      </div>
+    }>
+      {!shown && <p className="px-4 py-3 text-soft">{[MODE_WORDS[kind], processes.join(', '), controls.length === 1 ? 'one control' : `${controls.length} controls`].filter(Boolean).join(' · ')}</p>}
+      <div id={`mode-${mode + 1}-body`} hidden={!shown}>
       <div className="grid gap-x-6 gap-y-4 px-4 py-4 sm:grid-cols-2">
         <TextField label="Name on the panel" maxLength={60} error={error(`${at}.name`)} {...form.register(`${at}.name`)} />
         <Select label="What it is" options={MODE_OPTIONS} {...form.register(`${at}.kind`)} />
@@ -55,6 +69,7 @@ export function ModeEditor({ form, mode, count, onMove, onRemove }: { form: Mach
       <Part title="Reach" about="what it can put out, where that is less than the scale says">
         <ReachFields form={form} mode={mode} />
       </Part>
+      </div>
     </Sheet>
   )
 }

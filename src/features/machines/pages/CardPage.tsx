@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
+import { useState, type ReactNode } from 'react'
 import { Link, useNavigate, useParams, useSearchParams } from 'react-router-dom'
 import { idSchema } from '@shared/schemas/common.ts'
 import { Button } from '@/components/Button.tsx'
@@ -72,12 +73,14 @@ export function CardPage() {
           {revision.data && choice.machine !== null && <CardBody state={state} />}
           {(revisionId === null || choice.machine === null) && <p className="px-5 py-4 text-pretty">Choose the procedure and the machine in front of you. What the procedure allows becomes the figures to dial, with the room left; where the machine can’t keep it, the card says why.</p>}
         </article>
-        <aside aria-label="What the card is for" className="no-print space-y-3 max-lg:order-first">
+        <aside aria-label="What the card is for" className="no-print max-lg:order-first">
+          <Chosen complete={revision.data !== undefined && choice.machine !== null}>
           {procedures.isError && <ErrorState compact error={procedures.error} onRetry={() => void procedures.refetch()} />}
           <Select label="Procedure" empty="choose an approved procedure" value={revisionId ?? ''} options={choices} onChange={(event) => setSearch(put({ revision: event.target.value, process: null, mode: null, program: null, pass: null }), { replace: true })} />
           {processes.length > 1 && <Select label="Process" value={block?.id ?? ''} options={processes.map((one, index) => ({ value: one.id, label: one.process ?? `Process ${index + 1}` }))} onChange={(event) => setSearch(put({ process: event.target.value, mode: null, program: null, pass: null }), { replace: true })} />}
           {block && <CardChoices state={state} choice={choice} onChange={change} />}
-          <div className="flex flex-wrap items-center gap-x-5 gap-y-2 pt-1">
+          </Chosen>
+          <div className="mt-1 flex flex-wrap items-center gap-x-5 gap-y-2 pt-1">
             {state.card.data && <Button onClick={() => window.print()}>Print</Button>}
             {revision.data && (
               <Link to={`/shop/${revision.data.id}`} className="text-link inline-flex min-h-11 items-center">
@@ -93,5 +96,17 @@ export function CardPage() {
         </aside>
       </div>
     </div>
+  )
+}
+
+/** The choices, folded away on a phone once they are made, so that the card itself stands first. */
+function Chosen({ complete, children }: { complete: boolean; children: ReactNode }) {
+  const [wide] = useState(() => typeof matchMedia !== 'function' || matchMedia('(min-width: 64rem)').matches)
+  if (wide || !complete) return <div className="space-y-3">{children}</div>
+  return (
+    <details>
+      <summary className="flex min-h-12 cursor-pointer items-center font-medium underline underline-offset-4">Change procedure, machine or mode</summary>
+      <div className="space-y-3 pb-2">{children}</div>
+    </details>
   )
 }

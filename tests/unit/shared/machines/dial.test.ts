@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it, test } from 'vitest'
-import { calibrationState, daysUntil } from '../../../../shared/machines/calibration.ts'
+import { calibrationState, daysUntil, dayWords } from '../../../../shared/machines/calibration.ts'
 import { dialFigures, dialStored, narrowed } from '../../../../shared/machines/dial.ts'
 import { fromStorage, PANEL_QUANTITY, panelUnit, toStorage } from '../../../../shared/machines/panel-quantities.ts'
 import { PANEL_QUANTITIES, type PanelControl, type PanelQuantity } from '../../../../shared/schemas/machines.ts'
@@ -123,5 +123,6 @@ describe('calibration', () => {
   ])('due on %s is %s on 1 December 2026', (due, state) => {
     expect(calibrationState(due, '2026-12-01')).toBe(state)
   })
+  it('is told in words', () => expect(dayWords('2026-12-09')).toBe('9 December 2026'))
   it('counts days over the end of a leap February', () => expect(daysUntil('2028-03-01', '2028-02-28')).toBe(2))
 })
