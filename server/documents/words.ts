@@ -19,6 +19,7 @@ export const GROOVE: Words<Joint['groove']> = { square: 'square', 'single-v': 's
 export const BACKING: Words<Joint['backing']> = { none: 'no backing', metal: 'metal', 'weld-metal': 'weld metal', ceramic: 'ceramic', flux: 'flux', 'consumable-insert': 'consumable insert' }
 export const BACK_GOUGING: Words<Joint['backGouging']> = { none: 'none', grinding: 'grinding', 'arc-gouging': 'arc gouging', machining: 'machining', chipping: 'chipping' }
 export const WORK = { repair: 'repair', 'build-up': 'build-up' } as const
+export const ALIGNMENT = { 'root-side': 'flush on the root side', 'face-side': 'flush on the face side', centred: 'centred' } as const
 export const BRANCH = { 'set-on': 'set-on', 'set-in': 'set-in', 'set-through': 'set-through' } as const
 export const AGEING = { natural: 'natural', artificial: 'artificial' } as const
 export const HEAT_QUANTITY = { 'arc-energy': 'arc energy, U · I / v', 'heat-input': 'heat input, with factor k' } as const

@@ -65,7 +65,23 @@ export const jointSchema = z
     rootOpening: intervalOrNull,
     rootFace: intervalOrNull,
     rootRadius: intervalOrNull,
+    /** Depth of preparation on the first side; without it all that the root face and the second side leave. */
+    grooveDepth: intervalSchema.nullable().optional(),
+    /** Of the second side of a double groove, where the sides differ. The angle is that of `includedAngle` or `bevelAngle`. */
+    secondDepth: intervalSchema.nullable().optional(),
+    secondAngle: intervalSchema.nullable().optional(),
+    /** Height above the root side at which the angle of a compound groove changes. */
+    angleChange: intervalSchema.nullable().optional(),
+    /** Leg of the fillet that covers a groove weld in a tee joint. */
+    reinforcingFillet: intervalSchema.nullable().optional(),
+    /** Leg on the lying member A; on both members where `filletLegB` is not given. */
     filletLeg: intervalOrNull,
+    filletLegB: intervalSchema.nullable().optional(),
+    /** Angle between the members on the side of a fillet; without it they stand square. */
+    memberAngle: intervalSchema.nullable().optional(),
+    /** Of a butt joint between unequal thicknesses: the surfaces that are flush, and the slope of the thicker member's taper. */
+    alignment: z.enum(['root-side', 'face-side', 'centred']).nullable().optional(),
+    taperAngle: intervalSchema.nullable().optional(),
     /** Design throat of a fillet; of an equal-leg fillet it follows from the leg. */
     filletThroat: intervalSchema.nullable().optional(),
     /** A branch connection: member A is the branch, member B the run pipe. */
@@ -73,8 +89,14 @@ export const jointSchema = z
     branchAngle: intervalSchema.nullable().optional(),
     backing: oneOf(BACKINGS),
     backingMaterial: textOrNull(120),
+    backingThickness: intervalSchema.nullable().optional(),
+    backingWidth: intervalSchema.nullable().optional(),
+    /** Of a consumable insert: across the joint, and along the thickness. */
+    insertWidth: intervalSchema.nullable().optional(),
+    insertHeight: intervalSchema.nullable().optional(),
     retainers: bool,
     backGouging: oneOf(['none', 'grinding', 'arc-gouging', 'machining', 'chipping']),
+    backGougeDepth: intervalSchema.nullable().optional(),
     weldedFromBothSides: bool,
     /** Where the weld mends or builds up rather than joins. */
     work: z.enum(['repair', 'build-up']).nullable().optional(),
@@ -204,6 +226,12 @@ export const passSchema = z
     voltage: intervalOrNull,
     wireFeed: intervalOrNull,
     travelSpeed: intervalOrNull,
+    /** Section of the bead. */
+    beadArea: quantitySchema.nullable().optional(),
+    /** Side of a joint welded from both, where it does not follow from the layers. */
+    side: z.enum(['first', 'second']).nullable().optional(),
+    /** Place among the passes of all processes; without it they follow the blocks. */
+    order: z.number().int().min(1).max(1600).nullable().optional(),
   })
   .meta({ id: 'Pass' })
 export type Pass = z.infer<typeof passSchema>

@@ -61,7 +61,7 @@ export function PassGrid({ path, label }: { path: string; label: string }) {
     <div id={inputId(path)} tabIndex={-1} className="space-y-2">
       {passes.length > 0 && (
         <div className="-mx-1 overflow-x-auto px-1 pb-1">
-          <table aria-label={label} className="w-full min-w-[44rem] table-fixed border-collapse text-left">
+          <table aria-label={label} className="w-full min-w-[50rem] table-fixed border-collapse text-left">
             <thead>
               <tr className="text-soft">
                 {PASS_COLUMNS.map(({ id, label: head, dimension }) => (

@@ -6,7 +6,7 @@ import { cellText, PASS_COLUMNS } from './pass-grid.ts'
 /** The passes as a ruled table of figures; columns that no pass fills are left away. */
 export function PassTable({ passes }: { passes: readonly Pass[] }) {
   const { system } = useSheet()
-  const columns = PASS_COLUMNS.filter(({ id }) => id === 'number' || passes.some((pass) => pass[id] !== null))
+  const columns = PASS_COLUMNS.filter(({ id }) => id === 'number' || passes.some((pass) => (pass[id] ?? null) !== null))
   return (
     // A table wider than a phone scrolls sideways, so it must be reachable by keyboard.
     <div className="overflow-x-auto" role="group" aria-label="Passes" tabIndex={0}>

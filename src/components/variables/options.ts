@@ -21,6 +21,7 @@ export const GROOVES = options({
 })
 export const BACKINGS = options({ none: 'None', metal: 'Metal', 'weld-metal': 'Weld metal', ceramic: 'Ceramic', flux: 'Flux', 'consumable-insert': 'Consumable insert' })
 export const GOUGINGS = options({ none: 'None', grinding: 'Grinding', 'arc-gouging': 'Arc gouging', machining: 'Machining', chipping: 'Chipping' })
+export const ALIGNMENTS = options({ 'root-side': 'Flush on the root side', 'face-side': 'Flush on the face side', centred: 'Centred' })
 export const PRODUCTS = options({ plate: 'Plate', pipe: 'Pipe', 'plate-and-pipe': 'Plate and pipe' })
 export const MECHANISATIONS = options({ manual: 'Manual', semiautomatic: 'Semiautomatic', machine: 'Machine', automatic: 'Automatic' })
 export const PROGRESSIONS = options({ up: 'Up', down: 'Down', both: 'Up or down' })

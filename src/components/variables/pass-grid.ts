@@ -21,7 +21,11 @@ export const PASS_COLUMNS: readonly GridColumn[] = [
   { id: 'voltage', label: 'Volts', dimension: 'voltage' },
   { id: 'wireFeed', label: 'Wire feed', dimension: 'wireFeed' },
   { id: 'travelSpeed', label: 'Travel', dimension: 'travelSpeed' },
+  { id: 'beadArea', label: 'Bead', dimension: 'area' },
 ]
+/** Fields of a pass that are edited in the sequence beside the drawing. */
+export const SEQUENCE_FIELDS: readonly PassColumn[] = ['side', 'order']
+const isSingle = (id: PassColumn) => id === 'fillerDiameter' || id === 'beadArea'
 export const MAX_PASSES = 200
 
 const bare = (text: string, unit: string) => (unit !== '' && text.endsWith(` ${unit}`) ? text.slice(0, -unit.length - 1) : text)
@@ -51,10 +55,10 @@ export function readIntervalCell(text: string, dimension: Dimension, where: stri
 
 /** What a cell shows: the figure without the unit that stands in the column's head. */
 export function cellText(pass: Pass, { id, dimension }: GridColumn, system: UnitSystem): string {
-  const value = pass[id]
+  const value = pass[id] ?? null
   if (value === null) return ''
   if (!dimension) return id === 'layer' ? (LAYERS.find((one) => one.value === value)?.label ?? '') : pass.number
-  return id === 'fillerDiameter' ? quantityText(value as Quantity, dimension, system) : intervalText(value as Interval, dimension, system)
+  return isSingle(id) ? quantityText(value as Quantity, dimension, system) : intervalText(value as Interval, dimension, system)
 }
 
 export type CellReading = { ok: true; pass: Pass } | { ok: false; message: string }
@@ -70,7 +74,7 @@ export function writeCell(pass: Pass, { id, dimension, label }: GridColumn, text
     return layer ? { ok: true, pass: { ...pass, layer: layer.value as Pass['layer'] } } : { ok: false, message: `${where}"${typed}" is not a layer. Choose ${LAYERS.map((one) => one.label.toLowerCase()).join(', ')}.` }
   }
   if (!dimension) return { ok: false, message: `${where}this cell can't be written.` }
-  const reading = id === 'fillerDiameter' ? readQuantityCell(typed, dimension, where, system) : readIntervalCell(typed, dimension, where, system)
+  const reading = isSingle(id) ? readQuantityCell(typed, dimension, where, system) : readIntervalCell(typed, dimension, where, system)
   return reading.ok ? { ok: true, pass: { ...pass, [id]: reading.value } } : reading
 }
 

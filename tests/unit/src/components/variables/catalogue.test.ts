@@ -1,7 +1,7 @@
 import { describe, expect, it, test } from 'vitest'
 import { z } from 'zod'
 import { placedRows, coveredPaths, isOffered } from '@/components/variables/catalogue.ts'
-import { PASS_COLUMNS } from '@/components/variables/pass-grid.ts'
+import { PASS_COLUMNS, SEQUENCE_FIELDS } from '@/components/variables/pass-grid.ts'
 import { labelOf, rowFor, valueInWords } from '@/components/variables/labels.ts'
 import { choiceInWords, freshChoice, STANDARDS } from '@/components/variables/options.ts'
 import type { RecordKind } from '@/components/variables/row-spec.ts'
@@ -55,7 +55,7 @@ describe('every value of the schema', () => {
     expect([...own].filter((path) => !paths.includes(path) && !parts.includes(path))).toEqual([])
   })
   it('and every column of a pass', () => {
-    expect(PASS_COLUMNS.map(({ id }) => id).sort()).toEqual(Object.keys(passSchema.shape).sort())
+    expect([...PASS_COLUMNS.map(({ id }) => id), ...SEQUENCE_FIELDS].sort()).toEqual(Object.keys(passSchema.shape).sort())
   })
 })
 
