@@ -10,7 +10,7 @@ export const HEAD_BYTES = 65_536
 const LINES_LOOKED_AT = 200
 const DELIMITERS = ['\t', ';', '|', ',', ' '] as const
 
-export interface ArcColumn { name: string; values: string[] }
+interface ArcColumn { name: string; values: string[] }
 export interface LayoutGuess {
   layout: ArcLayout
   /** 10, or 13 for files that know no line feed. */
@@ -24,13 +24,13 @@ export interface LayoutGuess {
   needsRate: boolean
 }
 
-export function textOf(bytes: Uint8Array, encoding: Encoding): string {
+function textOf(bytes: Uint8Array, encoding: Encoding): string {
   return new TextDecoder(encoding).decode(bytes, { stream: true }).replace(/^\uFEFF/, '')
 }
 
 interface Table { delimiter: ArcLayout['delimiter']; decimal: ArcLayout['decimal']; first: number; width: number; rows: string[][] }
 
-export const splitLine = (line: string, delimiter: string): string[] => (delimiter === ' ' ? line.trim().split(/ +/) : line.split(delimiter)).map((field) => field.trim().replace(/^"(.*)"$/, '$1').trim())
+const splitLine = (line: string, delimiter: string): string[] => (delimiter === ' ' ? line.trim().split(/ +/) : line.split(delimiter)).map((field) => field.trim().replace(/^"(.*)"$/, '$1').trim())
 
 const isNumber = (text: string, decimal: string): boolean => (decimal === ',' ? /^[+-]?\d+(,\d+)?(e[+-]?\d+)?$/i : /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i).test(text)
 

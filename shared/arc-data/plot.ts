@@ -1,7 +1,7 @@
 /** Lowest and highest of each stretch of samples in bounded memory: when full, neighbours are joined and stretches are twice as long. */
 import type { ArcPlot } from '../schemas/arc-data.ts'
 
-export const MOST_STRETCHES = 2000
+const MOST_STRETCHES = 2000
 
 export class Decimator {
   private readonly from = new Float64Array(MOST_STRETCHES)

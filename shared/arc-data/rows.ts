@@ -6,7 +6,7 @@ import type { ArcLayout } from '../schemas/arc-data.ts'
 import { ArcDataError, shownText } from './problem.ts'
 
 /** Bytes of a line; more is no row of figures. */
-export const LONGEST_LINE = 65_536
+const LONGEST_LINE = 65_536
 const POWERS = Float64Array.from({ length: 23 }, (_, exponent) => Number(`1e${exponent}`))
 const [SPACE, QUOTE, PLUS, MINUS] = [32, 34, 43, 45]
 

@@ -29,9 +29,9 @@ export type ArcFigures = z.infer<typeof arcFiguresSchema>
 export const arcPlotSchema = z.object({ t: z.array(z.number()), currentMin: z.array(z.number()), currentMax: z.array(z.number()), voltageMin: z.array(z.number()), voltageMax: z.array(z.number()) }).meta({ id: 'ArcPlot' })
 export type ArcPlot = z.infer<typeof arcPlotSchema>
 
-export const arcTimeUnitSchema = z.enum(['s', 'ms', 'µs', 'none'])
-export const arcCurrentUnitSchema = z.enum(['A', 'kA', 'mA'])
-export const arcVoltageUnitSchema = z.enum(['V', 'kV', 'mV'])
+const arcTimeUnitSchema = z.enum(['s', 'ms', 'µs', 'none'])
+const arcCurrentUnitSchema = z.enum(['A', 'kA', 'mA'])
+const arcVoltageUnitSchema = z.enum(['V', 'kV', 'mV'])
 export const arcLayoutSchema = z
   .object({
     delimiter: z.enum([',', ';', '\t', ' ', '|']), decimal: z.enum(['.', ',']), headerRows: z.number().int(), columns: z.object({ time: z.number().int().nullable(), current: z.number().int(), voltage: z.number().int() }), timeUnit: arcTimeUnitSchema,

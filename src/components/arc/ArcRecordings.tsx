@@ -16,7 +16,7 @@ export interface ArcRecordingsProps {
 }
 
 /** "3832 W by v·i, 20.0 % more than the meters say". */
-export function powerInWords({ averageInstantaneousPower, meterError }: Pick<ArcRecordingRow['figures'], 'averageInstantaneousPower' | 'meterError'>): string {
+function powerInWords({ averageInstantaneousPower, meterError }: Pick<ArcRecordingRow['figures'], 'averageInstantaneousPower' | 'meterError'>): string {
   const power = `${figure(averageInstantaneousPower, 0)} W by volts times amperes sample by sample`
   if (Math.abs(meterError) < 0.5) return `${power}; the meters agree`
   return `${power}; the meters would say ${figure(Math.abs(meterError), 1)} % ${meterError < 0 ? 'less' : 'more'}`

@@ -6,7 +6,7 @@ import type { ArcChoice, ArcRecording } from '@shared/schemas/arc-data.ts'
 import { upload } from '@/lib/api.ts'
 import { asProblem, type ProblemError } from '@/lib/problem.ts'
 
-export interface Preview {
+interface Preview {
   guess: LayoutGuess | null
   /** Why no table was found, in a sentence. */
   refusal: string | null

@@ -3,6 +3,7 @@ import { Upload } from 'lucide-react'
 import { useRef, useState, type DragEvent } from 'react'
 import { useNavigate, useSearchParams } from 'react-router-dom'
 import { Button } from '@/components/Button.tsx'
+import { FormError } from '@/components/fields/Field.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Breadcrumb, ErrorState, PageHead, Progress } from '@/components/states.tsx'
 import { sayProblem } from '@/components/toast.tsx'
@@ -92,7 +93,8 @@ export function NewArcRecordingPage() {
             </div>
           </Sheet>
         )}
-        {problem && <ErrorState compact error={problem} />}
+        {/* What is wrong with the file is one sentence; what is wrong with the server has a request to name. */}
+        {problem && (problem.status >= 400 && problem.status < 500 ? <FormError message={problem.message} /> : <ErrorState compact error={problem} />)}
         {guess &&
           (share === null ? (
             <div className="flex flex-wrap gap-2">
