@@ -4,6 +4,7 @@ import type { BendTest, CouponContent, NdtTest, TensionTest } from '../../schema
 import type { Rule } from '../rule.ts'
 import { couponRanges as rangesOf, type CouponRange, type Missing } from './coupon-ranges.ts'
 import { siFigure } from './iso-names.ts'
+import { fieldWords, lowerFirst } from './lacking.ts'
 import { tidy } from './reading.ts'
 import { show } from './wording.ts'
 
@@ -80,24 +81,30 @@ export function judgeImpact(test: CouponContent['toughness'][number], required: 
   const label = `Impact set, ${test.place === 'weld' ? 'weld' : 'heat-affected zone'}`
   const values = test.values.map(({ si }) => tidy(si))
   const mean = values.length === 0 ? null : tidy(values.reduce((a, b) => a + b, 0) / values.length)
-  const base = { testId: test.id, specimen: label, ...reference, computed: mean === null ? null : { label: 'Mean energy', value: mean, unit: 'J' } }
+  const base = { testId: test.id, specimen: label, ...reference, computed: mean === null ? null : { label: 'Mean energy', value: meanShown(mean, required), unit: 'J' } }
   const cannot = (sentence: string): TestVerdict => ({ ...base, verdict: 'cannot-tell', sentence })
   if (mean === null || values.length < 3) return cannot(`${label} has ${values.length} of 3 values.`)
   if (values.length > 3 && values.length < 6) return cannot(`${label} has ${values.length} values; a set has three, with its retest six.`)
-  if (required === null) return cannot(`${label}: mean ${show(mean, 'J')}, but the required energy isn't recorded.`)
+  if (required === null) return cannot(`${label}: mean ${show(meanShown(mean, null), 'J')}, but the required energy isn't recorded.`)
   const at = siFigure(test.temperature, 'temperature')
   if (requiredAt !== null && at !== null && at > requiredAt) return cannot(`${label} was tested at ${show(at, '°C')}, warmer than the ${show(requiredAt, '°C')} required.`)
   const share = widthShare(test.size) ?? 1
   const full = verdictOf(values, mean, required)
-  if (full === null) return { ...base, verdict: 'pass', sentence: `${label}: mean ${show(mean, 'J')} against ${show(required, 'J')} required, lowest ${show(Math.min(...values), 'J')}.` }
-  if (share < 1 && verdictOf(values, mean, required * share) === null) return cannot(`${label}: mean ${show(mean, 'J')} on reduced specimens passes only if the required ${show(required, 'J')} is taken in proportion to the width (${show(tidy(required * share), 'J')}); the application standard decides that.`)
+  if (full === null) return { ...base, verdict: 'pass', sentence: `${label}: mean ${show(meanShown(mean, required), 'J')} against ${show(required, 'J')} required, lowest ${show(Math.min(...values), 'J')}.` }
+  if (share < 1 && verdictOf(values, mean, required * share) === null) return cannot(`${label}: mean ${show(meanShown(mean, required), 'J')} on reduced specimens passes only if the required ${show(required, 'J')} is taken in proportion to the width (${show(tidy(required * share), 'J')}); the application standard decides that.`)
   const retest = values.length === 3 && values.filter((value) => value < 0.7 * required).length <= 1 ? ' Three more specimens may be tested; the mean of all six must then reach it (7.6).' : ''
   return { ...base, verdict: 'fail', sentence: `${label}: ${full}.${retest}` }
 }
 
+/** A mean as it is told: to a tenth, unless that would put it on the other side of what is required. */
+const meanShown = (mean: number, required: number | null): number => {
+  const tenth = Math.round(mean * 10) / 10
+  return required !== null && mean < required !== tenth < required ? mean : tenth
+}
+
 /** What is wrong with a set, or null. */
 function verdictOf(values: readonly number[], mean: number, required: number): string | null {
-  if (mean < tidy(required)) return `mean ${show(mean, 'J')} is below the ${show(tidy(required), 'J')} required`
+  if (mean < tidy(required)) return `mean ${show(meanShown(mean, required), 'J')} is below the ${show(tidy(required), 'J')} required`
   if (values.length > 3) return null
   const low = values.filter((value) => value < tidy(required))
   if (low.length > 1) return `${low.length} values are below the ${show(tidy(required), 'J')} required`
@@ -158,7 +165,7 @@ export function missingFromRanges(ranges: readonly CouponRange[], coupon: Assess
       const place = path.split(' ')[0] ?? path
       const index = coupon.content.variables.processes.findIndex(({ id }) => id === range.processId)
       const field = BLOCK_FIELD.test(place) ? `variables.processes.${Math.max(0, index)}.${place}` : `variables.${place}`
-      if (!missing.has(field)) missing.set(field, { field, message: `Record what ${range.label.toLowerCase()} needs.`, clause: range.clause })
+      if (!missing.has(field)) missing.set(field, { field, message: `Record the ${fieldWords(place)}: the range of ${lowerFirst(range.label)} follows from it.`, clause: range.clause })
     }
   }
   return [...missing.values()]

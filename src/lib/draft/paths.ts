@@ -1,4 +1,5 @@
 /** Dotted paths in a procedure's content. A finding names a field of the weld's variables; the form names it from the content's root. */
+import { fieldAt } from '@shared/comparison/fields.ts'
 import { emptyInterval } from '@shared/schemas/welding.ts'
 
 type Tree = Record<string, unknown>
@@ -32,12 +33,14 @@ export function readPath(root: unknown, path: string): unknown {
  */
 export function writePath<T>(root: T, path: string, value: unknown): T | null {
   const keys = path.split('.')
+  // An optional field that was never given is absent, and may be written.
+  const mayBeAbsent = fieldAt(path) !== null
   const write = (at: unknown, index: number): unknown => {
     const key = keys[index]
     if (key === undefined) return value
     const end = index === keys.length - 1 && (key === 'min' || key === 'max')
     if (end && (at === null || at === undefined)) return { ...emptyInterval, [key]: value }
-    if (!isTree(at) || !(key in at)) return MISSING
+    if (!isTree(at) || (!(key in at) && (Array.isArray(at) || !mayBeAbsent))) return MISSING
     const below = write(at[key], index + 1)
     if (below === MISSING) return MISSING
     if (Array.isArray(at)) return at.map((item: unknown, position) => (position === Number(key) ? below : item))

@@ -119,6 +119,11 @@ describe('acceptance', () => {
     expect(set([])).toBe('cannot-tell')
     expect([widthShare('10 x 7,5'), widthShare('10 x 10'), widthShare(null), widthShare('55')]).toEqual([0.75, 1, null, null])
   })
+  test('a mean is told to a tenth, unless that would hide that it fails', () => {
+    const told = (values: number[]): string => judgeImpact({ id: 'i', place: 'weld', temperature: quantity(-20, 'temperature'), size: '10 x 10', values: values.map((value) => quantity(value, 'energy')), lateralExpansion: [] }, 27, -20, { clause: '7.4.4', basis: 'memory' }).sentence
+    expect(told([74, 75, 75])).toContain('mean 74.7 J against 27 J')
+    expect(told([26.9, 27, 27])).toContain('mean 26.9667 J is below the 27 J required')
+  })
   test('hardness limits by group and condition', () => {
     const limit = (group: string, treated: boolean, strength = 400): number | null => { const [main, sub] = group.split('.').map(Number); return hardnessLimit({ main: main!, sub: sub ?? null, text: group }, treated, strength)?.sure ?? null }
     expect(['1.1', '2.1', '3.1', '4.1', '5.2', '6.4', '9.1', '9.2', '9.3'].map((group) => [limit(group, false), limit(group, true)])).toEqual([[380, 320], [380, 320], [450, 380], [380, 320], [380, 320], [null, 350], [350, 300], [450, 350], [450, 350]])

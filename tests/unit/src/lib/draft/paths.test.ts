@@ -23,6 +23,12 @@ describe('paths', () => {
     expect(readPath(writePath({ ...content, variables: { ...content.variables, thickness: null } }, 'variables.thickness.max', ten), 'variables.thickness')).toEqual({ min: null, max: ten, all: false })
     expect(readPath(writePath({ a: { min: null, max: null, all: true } }, 'a.min', ten), 'a')).toEqual({ min: ten, max: null, all: false })
   })
+  it('writes an optional field that was never given', () => {
+    const { serviceTemperature: _given, ...variables } = content.variables
+    const ninety = quantity(90, 'temperature')
+    expect(readPath(writePath({ ...content, variables }, 'variables.serviceTemperature', ninety), 'variables.serviceTemperature')).toEqual(ninety)
+    expect(readPath(writePath({ ...content, variables }, 'variables.diameterB.max', ninety), 'variables.diameterB')).toEqual({ min: null, max: ninety, all: false })
+  })
   it('refuses a path that is not there', () => {
     expect(writePath(content, 'variables.processes.7.progression', 'up')).toBeNull()
     expect(writePath(content, 'variables.nothing', 1)).toBeNull()
