@@ -123,3 +123,8 @@ export async function readLibraryItem(tenant: Tenant, kind: Kind, id: string): P
   if (!item) throw notFound('library row')
   return item
 }
+
+/** Whether the organization's library has a row with that key. */
+export async function hasLibraryKey(tenant: Tenant, kind: Kind, key: string): Promise<boolean> {
+  return (await candidates(tenant, kind)).some((row) => row.key === key)
+}

@@ -4,6 +4,7 @@ import { fillerSearch, fillers } from './filler-metals.ts'
 import { gasSearch, gasTitle, gases } from './gases.ts'
 import { isoMainPositions, positionSource, positions } from './positions.ts'
 import { processSource, processes } from './processes.ts'
+import type { BaseMetalRow, FillerRow, GasRow } from './rows.ts'
 import { squeeze } from './search.ts'
 
 export const LIBRARY_KINDS = ['base-metals', 'filler-metals', 'gases', 'positions', 'processes'] as const
@@ -25,30 +26,35 @@ export interface LibraryRow {
 
 const list = (parts: readonly (string | number | false | null | undefined)[]): string => parts.filter((part) => part !== null && part !== undefined && part !== false && part !== '').join(' · ')
 
+const told = (row: { id: string; basis: string; source: string }) => ({ key: row.id, basis: row.basis, source: row.source, content: { ...row } })
+
+/** A base metal as it is listed and found. */
+export const baseMetalEntry = (row: BaseMetalRow): LibraryRow => ({
+  ...told(row),
+  kind: 'base-metals',
+  title: baseMetalTitle(row),
+  subtitle: list([row.product_form, row.p_no === null ? 'P-No. not listed' : `P-No. ${row.p_no}${row.group_no === null ? '' : ` Group ${row.group_no}`}`, row.iso_15608_subgroup && `ISO 15608 ${row.iso_15608_subgroup}`, row.uns_or_en_number]),
+  search: baseMetalSearch(row),
+})
+
+/** A filler metal as it is listed and found. */
+export const fillerEntry = (row: FillerRow): LibraryRow => ({
+  ...told(row),
+  kind: 'filler-metals',
+  title: row.classification,
+  subtitle: list([row.spec, row.f_no !== null && `F-No. ${row.f_no}`, row.a_no !== null && `A-No. ${row.a_no}`, row.nominal_composition]),
+  search: fillerSearch(row),
+})
+
+/** A gas as it is listed and found. */
+export const gasEntry = (row: GasRow): LibraryRow => ({ ...told(row), kind: 'gases', title: gasTitle(row), subtitle: list([row.symbol && `ISO 14175 ${row.symbol}`, row.awsDesignation, row.limits, row.use]), search: gasSearch(row) })
+
 /** All rows of the five kinds, in the library's own order. */
 export function libraryRows(): LibraryRow[] {
   return [
-    ...baseMetals.map((row): LibraryRow => ({
-      kind: 'base-metals',
-      key: row.id,
-      title: baseMetalTitle(row),
-      subtitle: list([row.product_form, row.p_no === null ? 'P-No. not listed' : `P-No. ${row.p_no}${row.group_no === null ? '' : ` Group ${row.group_no}`}`, row.iso_15608_subgroup && `ISO 15608 ${row.iso_15608_subgroup}`, row.uns_or_en_number]),
-      search: baseMetalSearch(row),
-      basis: row.basis,
-      source: row.source,
-      content: { ...row },
-    })),
-    ...fillers.map((row): LibraryRow => ({
-      kind: 'filler-metals',
-      key: row.id,
-      title: row.classification,
-      subtitle: list([row.spec, row.f_no !== null && `F-No. ${row.f_no}`, row.a_no !== null && `A-No. ${row.a_no}`, row.nominal_composition]),
-      search: fillerSearch(row),
-      basis: row.basis,
-      source: row.source,
-      content: { ...row },
-    })),
-    ...gases.map((row): LibraryRow => ({ kind: 'gases', key: row.id, title: gasTitle(row), subtitle: list([row.symbol && `ISO 14175 ${row.symbol}`, row.awsDesignation, row.limits, row.use]), search: gasSearch(row), basis: row.basis, source: row.source, content: { ...row } })),
+    ...baseMetals.map(baseMetalEntry),
+    ...fillers.map(fillerEntry),
+    ...gases.map(gasEntry),
     ...positions.map((row): LibraryRow => ({
       kind: 'positions',
       key: squeeze([row.asme_aws ?? 'orbital', row.weld_type, row.product, row.progression ?? ''].join(' ')),

@@ -7,7 +7,10 @@ import { assessedCouponSchema, assessmentRequestSchema, assessmentSchema } from 
 import { idSchema, listQuery, pageOf, standardIdSchema, textOrNull } from './common.ts'
 import { byId, endpoint, sorts } from './endpoint.ts'
 import { arcDataEndpoints } from './endpoints-arc-data.ts'
+import { heatEndpoints } from './endpoints-heats.ts'
+import { libraryEndpoints } from './endpoints-library.ts'
 import { machineEndpoints } from './endpoints-machines.ts'
+import { trialEndpoints } from './endpoints-trials.ts'
 import * as people from './people.ts'
 import * as records from './records.ts'
 import * as standards from './standards.ts'
@@ -81,9 +84,15 @@ export const endpoints = {
   readJob: endpoint({ method: 'get', path: '/jobs/:id', action: 'jobs.read', tag: 'Jobs', summary: 'A job and its joints', params: byId, response: records.jobSchema }),
   saveJob: endpoint({ method: 'put', path: '/jobs/:id', action: 'jobs.manage', tag: 'Jobs', summary: 'Save a job and its joints', params: byId, body: records.writeJobSchema, response: records.jobSchema, ifMatch: true }),
 
+  ...libraryEndpoints,
+
+  ...heatEndpoints,
+
   ...machineEndpoints,
 
   ...arcDataEndpoints,
+
+  ...trialEndpoints,
 
   listStandards: endpoint({ method: 'get', path: '/standards', action: 'standards.read', tag: 'Standards', summary: 'Standards whose rules are kept here', response: z.object({ items: z.array(standards.standardRowSchema) }) }),
   readStandard: endpoint({ method: 'get', path: '/standards/:id', action: 'standards.read', tag: 'Standards', summary: 'Every rule of a standard, and what is out of its scope here', params: z.object({ id: standardIdSchema }), response: standards.standardDetailSchema }),

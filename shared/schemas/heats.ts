@@ -7,9 +7,9 @@ export const ELEMENTS = ['C', 'Si', 'Mn', 'P', 'S', 'Cr', 'Mo', 'Ni', 'Cu', 'V',
 export const elementSchema = z.enum(ELEMENTS)
 export type Element = z.infer<typeof elementSchema>
 
-/** Mass per cent by element; what isn't listed wasn't reported. */
+/** Mass per cent by element; what isn't listed wasn't reported. `atMost`: the certificate says "<", so the figure is a bound. */
 export const chemistrySchema = z
-  .array(z.object({ element: elementSchema, percent: z.number().min(0, 'A share can’t be below 0 %.').max(100, 'A share can’t be above 100 %.') }))
+  .array(z.object({ element: elementSchema, percent: z.number().min(0, 'A share can’t be below 0 %.').max(100, 'A share can’t be above 100 %.'), atMost: z.boolean().optional() }))
   .max(ELEMENTS.length)
   .default([])
   .superRefine((rows, context) => {
@@ -42,7 +42,10 @@ export const writeHeatSchema = z
   .meta({ id: 'WriteHeat' })
 export type WriteHeat = z.infer<typeof writeHeatSchema>
 export const certificateFileSchema = z.object({ id: idSchema, fileName: z.string(), mediaType: z.string(), bytes: z.number().int(), sha256: z.string(), uploadedAt: z.iso.datetime(), uploadedBy: personRefSchema }).meta({ id: 'CertificateFile' })
-export const heatRowSchema = z.object({ id: idSchema, kind: z.enum(['heat', 'lot']), number: z.string(), grade: z.string(), certificate: z.string().nullable(), files: z.number().int(), updatedAt: z.iso.datetime() }).meta({ id: 'HeatRow' })
+export const heatRowSchema = z.object({ id: idSchema, kind: z.enum(['heat', 'lot']), number: z.string(), libraryId: z.string().nullable(), grade: z.string(), certificate: z.string().nullable(), certificateType: z.string().nullable(), receivedOn: z.string().nullable(), chemistryOf: writeHeatSchema.shape.chemistryOf, chemistry: chemistrySchema, files: z.number().int(), updatedAt: z.iso.datetime() }).meta({ id: 'HeatRow' })
 export type HeatRow = z.infer<typeof heatRowSchema>
-export const heatSchema = z.object({ id: idSchema, version: z.number().int(), updatedAt: z.iso.datetime(), content: writeHeatSchema, files: z.array(certificateFileSchema), may: z.array(z.string()) }).meta({ id: 'Heat' })
+/** A record that names a heat, a lot or a library row. */
+export const namedBySchema = z.object({ kind: z.enum(['procedure', 'coupon', 'heat']), id: idSchema, number: z.string(), title: z.string(), state: z.string() }).meta({ id: 'NamedBy' })
+export type NamedBy = z.infer<typeof namedBySchema>
+export const heatSchema = z.object({ id: idSchema, version: z.number().int(), updatedAt: z.iso.datetime(), content: writeHeatSchema, files: z.array(certificateFileSchema), namedBy: z.array(namedBySchema), may: z.array(z.string()) }).meta({ id: 'Heat' })
 export type Heat = z.infer<typeof heatSchema>

@@ -2,6 +2,11 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { libraryRows } from '../../shared/library/library-rows.ts'
 import type { Page } from '../../shared/schemas/common.ts'
 import type { LibraryItem } from '../../shared/schemas/records.ts'
+import { toBaseMetal } from '../../shared/library/base-metals.ts'
+import { toFiller } from '../../shared/library/filler-metals.ts'
+import { toGasMixture } from '../../shared/library/gases.ts'
+import { loadLibrary } from '../../server/services/library.ts'
+import { match, procedureContent, signInAll, type Agents } from './content.ts'
 import { problem, startApp, type Agent, type TestApp, type TestOrganization } from './harness.ts'
 
 let app: TestApp
@@ -76,5 +81,101 @@ describe('the library', () => {
     await welder.get(`/api/library/positions/${gas?.id}`).expect(404)
     const others = await app.agentFor(await app.makeOrganization(), 'welder')
     await others.get(`/api/library/gases/${gas?.id}`).expect(404)
+  })
+})
+
+describe('the organization’s own rows', () => {
+  let agents: Agents
+  beforeAll(async () => {
+    agents = await signInAll(app, organization)
+  })
+  const metal = (part: object = {}) => ({ kind: 'base-metals', content: { spec: 'LF 12', grade: 'Duro 400', product_form: 'plate', p_no: null, iso_15608: '3.1', min_tensile_mpa: 780, min_yield_mpa: 650, source: 'Data sheet of the mill, 2026', ...part } })
+  const add = async (body: object) => (await agents.engineer.post('/api/library').send(body).expect(201)).body as LibraryItem
+
+  it('are found by type-ahead before the reference, shown as own, and copied into a record as any row', async () => {
+    const made = await add(metal())
+    expect(made).toMatchObject({ origin: 'own', basis: 'own', title: 'LF 12 Duro 400', source: 'Data sheet of the mill, 2026', version: 1 })
+    expect((await list('base-metals', { q: 'duro 400' })).items[0]?.id).toBe(made.id)
+    expect((await list('base-metals', { limit: 1 })).items[0]?.id).toBe(made.id)
+    expect(toBaseMetal(made.content)).toMatchObject({ libraryId: made.key, specification: 'LF 12', grade: 'Duro 400', iso15608: '3.1', pNumber: null, minTensile: { si: 780 } })
+    const wire = await add({ kind: 'filler-metals', content: { spec: 'LF wire', classification: 'LFW-70', f_no: 6, processes: ['gmaw'], source: 'Maker' } })
+    expect(titles(await list('filler-metals', { q: 'lfw', process: 'GMAW' }))).toEqual(['LFW-70'])
+    expect(toFiller(wire.content)).toMatchObject({ libraryId: wire.key, classification: 'LFW-70', fNumber: '6', productForm: 'solid' })
+    const gas = await add({ kind: 'gases', content: { name: 'Bay mix', components: [{ gas: 'Ar', percent: 92 }, { gas: 'CO2', percent: 8 }], source: 'Contract with the gas works' } })
+    expect(toGasMixture(gas.content)).toMatchObject({ libraryId: gas.key, isoSymbol: 'M20', name: 'Bay mix' })
+    expect(titles(await list('gases', { q: 'bay mix' }))[0]).toBe('Bay mix')
+  })
+
+  it.each<[string, object, string, RegExp]>([
+    ['gas that does not add up', { kind: 'gases', content: { name: 'X', components: [{ gas: 'Ar', percent: 80 }, { gas: 'CO2', percent: 15 }], source: 's' } }, 'content.components', /add up to 95 %; a mixture is 100 %/],
+    ['a P-Number that does not exist', metal({ p_no: '12' }), 'content.p_no', /no P-Number 12/],
+    ['a P-Number that is divided', metal({ p_no: '5' }), 'content.p_no', /5A, 5B, 5C/],
+    ['a Group Number of aluminium', metal({ p_no: '23', group_no: 1 }), 'content.group_no', /no Group Numbers/],
+    ['a group of ISO 15608 that does not exist', metal({ iso_15608: '1.7' }), 'content.iso_15608', /no group 1.7/],
+    ['a yield above the tensile strength', metal({ min_yield_mpa: 900 }), 'content.min_yield_mpa', /above the tensile strength/],
+    ['figures from nowhere', metal({ source: ' ' }), 'content.source', /where the figures come from/],
+    ['an F-Number that does not exist', { kind: 'filler-metals', content: { spec: 'a', classification: 'b', f_no: 7, processes: ['GMAW'], source: 's' } }, 'content.f_no', /no F-Number 7/],
+    ['an A-Number of aluminium', { kind: 'filler-metals', content: { spec: 'a', classification: 'b', f_no: 23, a_no: 1, processes: ['GMAW'], source: 's' } }, 'content.a_no', /ferrous/],
+    ['a process that nobody knows', { kind: 'filler-metals', content: { spec: 'a', classification: 'b', processes: ['glue'], source: 's' } }, 'content.processes', /“glue” is no process/],
+  ])('refuse %s at the field', async (_what, body, field, sentence) => {
+    const { errors } = problem(await agents.engineer.post('/api/library').send(body).expect(400))
+    expect(errors?.map((one) => one.field)).toContain(field)
+    expect(errors?.find((one) => one.field === field)?.message).toMatch(sentence)
+  })
+
+  it('are changed under If-Match, once each, and only own ones', async () => {
+    const made = await add(metal({ grade: 'Duro 500' }))
+    expect(problem(await agents.engineer.post('/api/library').send(metal({ grade: 'Duro 500' })).expect(422)).errors?.[0]?.field).toBe('content.spec')
+    const address = `/api/library/base-metals/${made.id}`
+    const saved = (await agents.administrator.put(address).set('If-Match', match(made)).send(metal({ grade: 'Duro 500 S' })).expect(200)).body as LibraryItem
+    expect(saved).toMatchObject({ key: made.key, title: 'LF 12 Duro 500 S', version: 2 })
+    expect(problem(await agents.engineer.put(address).set('If-Match', match(made)).send(metal()).expect(409)).current).toMatchObject({ title: 'LF 12 Duro 500 S' })
+    expect(problem(await agents.engineer.put(address).set('If-Match', match(saved)).send({ kind: 'gases', content: { name: 'X', components: [{ gas: 'Ar', percent: 100 }], source: 's' } }).expect(400)).errors?.[0]?.field).toBe('kind')
+    const [reference] = (await list('base-metals', { q: 'A516-70' })).items
+    expect(problem(await agents.engineer.put(`/api/library/base-metals/${reference?.id}`).set('If-Match', '"1"').send(metal()).expect(403)).detail).toMatch(/is a reference row/)
+    await agents.engineer.delete(`/api/library/base-metals/${reference?.id}`).set('If-Match', '"1"').expect(403)
+    await agents.inspector.delete(address).set('If-Match', match(saved)).expect(403)
+    const others = await app.agentFor(await app.makeOrganization(), 'engineer')
+    await others.delete(address).set('If-Match', match(saved)).expect(404)
+  })
+
+  it('stay while something names them, and go when nothing does', async () => {
+    const made = await add(metal({ grade: 'Duro 600' }))
+    const content = procedureContent()
+    content.variables.baseMetals.b = toBaseMetal(made.content)
+    const revision = (await agents.engineer.post('/api/procedures').send({ content }).expect(201)).body as { id: string; version: number }
+    const heat = (await agents.inspector.post('/api/heats').send({ kind: 'heat', number: 'D600-1', grade: made.title, libraryId: made.key }).expect(201)).body as { id: string; version: number }
+    const address = `/api/library/base-metals/${made.id}`
+    const { items } = (await welder.get(`${address}/uses`).expect(200)).body as { items: { kind: string; id: string }[] }
+    expect(items.map(({ kind, id }) => [kind, id])).toEqual([['procedure', revision.id], ['heat', heat.id]])
+    expect(problem(await agents.engineer.delete(address).set('If-Match', match(made)).expect(409)).detail).toMatch(/D600-1 name LF 12 Duro 600, so it stays/)
+    await agents.engineer.delete(`/api/revisions/${revision.id}`).set('If-Match', match(revision)).expect(204)
+    await agents.engineer.delete(address).set('If-Match', match(made)).expect(409)
+    await agents.engineer.delete(`/api/heats/${heat.id}`).set('If-Match', match(heat)).expect(204)
+    await agents.engineer.delete(address).set('If-Match', match(made)).expect(204)
+    expect((await list('base-metals', { q: 'duro 600' })).total).toBe(0)
+  })
+
+  it('outlive a renewal of the reference rows', async () => {
+    const made = await add(metal({ grade: 'Duro 700' }))
+    await app.inTenant(organization, (tenant) => loadLibrary(tenant))
+    expect((await list('base-metals', { q: 'duro 700' })).items).toEqual([made])
+  })
+
+  it('name the uses of gases, fillers, positions and processes too', async () => {
+    const content = procedureContent()
+    const [block] = content.variables.processes
+    const [filler] = (await list('filler-metals', { q: 'E7018' })).items
+    const [gas] = (await list('gases', { q: '82/18' })).items
+    if (!block || !filler || !gas) throw new Error('the sample has a process')
+    block.filler.libraryId = filler.key
+    block.shieldingGas = toGasMixture(gas.content)
+    const revision = (await agents.engineer.post('/api/procedures').send({ content }).expect(201)).body as { id: string }
+    const [position] = (await list('positions', { q: '3G' })).items
+    const [process] = (await list('processes', { q: 'SMAW' })).items
+    for (const item of [filler, gas, position, process]) {
+      const { items } = (await welder.get(`/api/library/${item?.kind}/${item?.id}/uses`).expect(200)).body as { items: { id: string }[] }
+      expect(items.map(({ id }) => id), item?.title).toContain(revision.id)
+    }
   })
 })

@@ -34,6 +34,10 @@ const expected: Record<EndpointName, string> = {
 
   listLibrary: ALL,
   readLibraryItem: ALL,
+  listLibraryUses: ALL,
+  createLibraryItem: 'ae',
+  saveLibraryItem: 'ae',
+  removeLibraryItem: 'ae',
 
   listProcedures: ALL,
   createProcedure: 'e',
@@ -75,6 +79,15 @@ const expected: Record<EndpointName, string> = {
   readJob: ALL,
   saveJob: 'es',
 
+  listHeats: ALL,
+  createHeat: 'aei',
+  readHeat: ALL,
+  saveHeat: 'aei',
+  removeHeat: 'aei',
+  addHeatFiles: 'aei',
+  readHeatFile: ALL,
+  removeHeatFile: 'aei',
+
   listMachines: ALL,
   createMachine: 'ae',
   readMachine: ALL,
@@ -92,6 +105,20 @@ const expected: Record<EndpointName, string> = {
   attachArcRecording: 'eisw',
   readArcFile: ALL,
   removeArcRecording: 'eisw',
+
+  listTrials: ALL,
+  createTrial: 'eisw',
+  readTrial: ALL,
+  saveTrial: 'eisw',
+  discardTrial: 'eisw',
+  addBead: 'eisw',
+  saveBead: 'eisw',
+  removeBead: 'eisw',
+  addBeadPhotos: 'eisw',
+  readBeadPhoto: ALL,
+  readBeadThumbnail: ALL,
+  removeBeadPhoto: 'eisw',
+  promoteBead: 'e',
 
   listStandards: ALL,
   readStandard: ALL,
