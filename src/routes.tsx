@@ -4,6 +4,7 @@ import type { RouteObject } from 'react-router-dom'
 import { Skeleton } from '@/components/states.tsx'
 import { bareRoutes as accountBareRoutes, routes as accountRoutes } from '@/features/account/routes.tsx'
 import { routes as arcDataRoutes } from '@/features/arc-data/routes.tsx'
+import { routes as calculatorRoutes } from '@/features/calculators/routes.tsx'
 import { routes as couponRoutes } from '@/features/coupons/routes.tsx'
 import { routes as jobRoutes } from '@/features/jobs/routes.tsx'
 import { routes as libraryRoutes } from '@/features/library/routes.tsx'
@@ -19,7 +20,7 @@ import { Bare, Shell } from '@/shell/Shell.tsx'
 import { anyone, signedIn } from '@/shell/guard.ts'
 
 /** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
-const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...arcDataRoutes, ...jobRoutes, ...machineRoutes, ...lookupRoutes, ...libraryRoutes, ...standardRoutes]
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...arcDataRoutes, ...jobRoutes, ...machineRoutes, ...lookupRoutes, ...libraryRoutes, ...calculatorRoutes, ...standardRoutes]
 
 /** Pages without the bar, for people who are signed in: the shop view. */
 const shop: RouteObject[] = [...shopRoutes]

@@ -14,6 +14,7 @@ const PLACES = [
   { to: '/jobs', label: 'Jobs', action: 'jobs.read' },
   { to: '/machines', label: 'Machines', action: 'machines.read' },
   { to: '/library', label: 'Library', action: 'library.read' },
+  { to: '/calculators', label: 'Calculators', action: 'library.read' },
 ] as const
 
 /** Places of the second rank: behind one button on the bar, in line with the others in the folded menu. */
