@@ -1,5 +1,5 @@
 import type { PanelCard, PanelLine, PanelNotice } from '@shared/schemas/machines.ts'
-import { barOf, barWords, roomOf } from './layout.ts'
+import { barOf, barWords, roomAt, roomOf } from './layout.ts'
 
 /** A panel card, read at arm's length: what stands against it first, then what to dial with the room left, then what to measure. */
 export function PanelCardView({ card }: { card: PanelCard }) {
@@ -11,13 +11,13 @@ export function PanelCardView({ card }: { card: PanelCard }) {
   return (
     <div>
       {refusals.length > 0 && (
-        <div role="alert" className="border-b-4 border-oxide bg-oxide-bg px-5 py-4">
+        <div role="alert" className="border-b-4 border-oxide bg-oxide-bg px-5 py-4 print:py-2">
           <h2 className="font-narrow text-3xl leading-9 font-semibold text-oxide uppercase">Do not dial from this</h2>
           <Notices notices={refusals} className="mt-1" />
         </div>
       )}
       {warnings.length > 0 && (
-        <section aria-label="Take care" className="border-b border-rule bg-straw-bg px-5 py-4">
+        <section aria-label="Take care" className="border-b border-rule bg-straw-bg px-5 py-4 print:py-2">
           <h2 className="font-narrow text-xl font-semibold tracking-[0.03em] text-straw-deep uppercase">Take care</h2>
           <Notices notices={warnings} className="mt-1" />
         </section>
@@ -38,7 +38,7 @@ export function PanelCardView({ card }: { card: PanelCard }) {
         </section>
       )}
       {card.ready && card.mustMeasure.length > 0 && (
-        <section aria-label="Measure this" className="border-b border-rule px-5 py-4">
+        <section aria-label="Measure this" className="border-b border-rule px-5 py-4 print:py-2">
           <h2 className="font-narrow text-lg font-medium tracking-[0.055em] text-soft uppercase">Measure this; the panel doesn’t show it</h2>
           <ul className="mt-1 list-disc space-y-1.5 pl-5">
             {card.mustMeasure.map(({ quantity, text }) => (
@@ -50,13 +50,13 @@ export function PanelCardView({ card }: { card: PanelCard }) {
         </section>
       )}
       {notes.length > 0 && (
-        <section aria-label="Good to know" className="border-b border-rule px-5 py-4">
+        <section aria-label="Good to know" className="border-b border-rule px-5 py-4 print:py-2">
           <h2 className="font-narrow text-lg font-medium tracking-[0.055em] text-soft uppercase">Good to know</h2>
           <Notices notices={notes} className="mt-1" />
         </section>
       )}
       {card.ready && dialled.length > 0 && (
-        <details className="print-open border-b border-rule px-5 py-2">
+        <details className="no-print border-b border-rule px-5 py-2">
           <summary className="flex min-h-12 cursor-pointer items-center text-soft">Where the figures come from</summary>
           <dl className="space-y-2 pb-3">
             {dialled.map(({ control, label, because }) => (
@@ -74,7 +74,7 @@ export function PanelCardView({ card }: { card: PanelCard }) {
 
 function Notices({ notices, className = '' }: { notices: readonly PanelNotice[]; className?: string }) {
   return (
-    <ul className={`space-y-2.5 ${className}`}>
+    <ul className={`space-y-2.5 print:space-y-1 print:text-sm ${className}`}>
       {notices.map(({ code, message, basis }) => (
         <li key={`${code} ${message}`} className="text-pretty">
           {message}
@@ -89,7 +89,7 @@ function LineRow({ line }: { line: PanelLine }) {
   const bar = barOf(line)
   const figure = line.unit === '' ? line.text : line.text.slice(0, -line.unit.length).trim()
   return (
-    <li className="break-inside-avoid border-b border-rule py-3.5 last:border-b-0">
+    <li className="break-inside-avoid border-b border-rule py-3.5 last:border-b-0 print:py-1.5">
       <div className="flex items-end justify-between gap-4">
         <p className="min-w-0 pb-1 text-lg leading-6 break-words">
           {line.label}
@@ -106,9 +106,11 @@ function LineRow({ line }: { line: PanelLine }) {
             <span className="absolute inset-y-0 bg-figure/55" style={{ left: `${bar.from * 100}%`, width: `max(4px, ${(bar.to - bar.from) * 100}%)` }} />
             <span className="absolute -inset-y-1 w-1 -translate-x-1/2 bg-figure" style={{ left: `${bar.at * 100}%` }} />
           </div>
-          <p aria-hidden="true" className="mt-1.5 flex items-baseline justify-between gap-3 text-base text-soft tabular-nums">
+          <p aria-hidden="true" className="relative mt-1.5 flex items-baseline justify-between text-base text-soft tabular-nums">
             <span>{line.scaleMin}</span>
-            <span className="text-ink">{roomOf(line)}</span>
+            <span className="absolute -translate-x-1/2 whitespace-nowrap text-ink" style={{ left: `${roomAt(bar)}%` }}>
+              {roomOf(line)}
+            </span>
             <span>{line.scaleMax}</span>
           </p>
         </div>

@@ -20,6 +20,9 @@ export function roomOf(line: PanelLine): string {
   return line.min === line.max ? 'only this' : `${figureOf(line.min, line)} to ${figureOf(line.max, line)}`
 }
 
+/** Where the room's words stand under the bar, per cent: below the window, clear of the ends of the scale. */
+export const roomAt = ({ from, to }: { from: number; to: number }): number => Math.max(26, Math.min(74, ((from + to) / 2) * 100))
+
 /** The bar in words, for readers. */
 export function barWords(line: PanelLine): string {
   const unit = line.unit === '' ? '' : ` ${line.unit}`

@@ -59,6 +59,7 @@ export function DisplayGrid({ form, mode }: { form: MachineForm; mode: number })
   const rows = useFieldArray({ control: form.control, name: `modes.${mode}.displays` })
   return (
     <div className="max-w-3xl">
+      {rows.fields.length > 0 && <GridHead template="xl:grid-cols-[minmax(0,1.4fr)_6rem_minmax(0,1.2fr)_6rem_3rem]" columns={['Shows', 'Unit', 'When', 'To the nearest', '']} />}
       {rows.fields.length === 0 && <p className="text-soft">Nothing. What the procedure limits must then be measured.</p>}
       {rows.fields.map((row, index) => {
         const at = `modes.${mode}.displays.${index}` as const

@@ -10,6 +10,7 @@ import { Select } from '@/components/fields/text.tsx'
 import { Stamp } from '@/components/Stamp.tsx'
 import { Breadcrumb, ErrorState, Skeleton } from '@/components/states.tsx'
 import { useTitle } from '@/hooks/title.ts'
+import { day } from '@/lib/figures.ts'
 import { query } from '@/lib/query.ts'
 
 /** A procedure on a machine: chosen by address, so that a card can be bookmarked, printed and hung beside the machine. */
@@ -67,6 +68,7 @@ export function CardPage() {
                 {state.machine && ` · ${state.machine.content.name}`}
               </p>
             )}
+            {state.card.data && <p className="hidden text-sm print:block">Worked out on {day(new Date(state.card.dataUpdatedAt).toISOString())}. It holds for this machine, wire and gas while this revision is in force.</p>}
           </header>
           {revision.isError && <div className="p-4"><ErrorState compact error={revision.error} onRetry={() => void revision.refetch()} /></div>}
           {revisionId !== null && revision.isPending && <Skeleton label="Reading the procedure" rows={4} />}

@@ -5,7 +5,7 @@ import { describe, expect, it, test } from 'vitest'
 import { panelCard } from '@shared/machines/panel-card.ts'
 import type { Machine, MachineRow, WriteMachine } from '@shared/schemas/machines.ts'
 import type { Revision } from '@shared/schemas/records.ts'
-import { barOf, barWords, figureOf, roomOf } from '@/components/panel-card/layout.ts'
+import { barOf, barWords, figureOf, roomAt, roomOf } from '@/components/panel-card/layout.ts'
 import { PanelCardView } from '@/components/panel-card/PanelCardView.tsx'
 import { PointsPlot } from '@/features/machines/components/PointsPlot.tsx'
 import { asFigure, readFigures, readWords, unreadFigures, wrong } from '@/features/machines/words.ts'
@@ -57,6 +57,8 @@ describe('a panel card', () => {
     const line = { ...cardOf(machine([feederMode()])).lines[0]!, min: 5, max: 10, value: 7.5, scaleMin: 0, scaleMax: 20 }
     expect(barOf(line)).toEqual({ from: 0.25, to: 0.5, at: 0.375 })
     expect(barOf({ ...line, min: null })).toBeNull()
+    expect(roomAt({ from: 0.25, to: 0.5 })).toBe(37.5)
+    expect([roomAt({ from: 0, to: 0.1 }), roomAt({ from: 0.9, to: 1 })]).toEqual([26, 74])
     expect(roomOf({ ...line, min: 7.5, max: 7.5 })).toBe('only this')
     expect(figureOf(5, { step: 0.1, text: '7.5 m/min' })).toBe('5.0')
     expect(barWords({ ...line, unit: '', text: '7.5' })).toContain('on a scale from 0 to 20')
