@@ -4,7 +4,6 @@ import { databaseDay } from '../services/calibration-reminders.ts'
 import { createJob } from '../services/jobs.ts'
 import { createMachine } from '../services/machines.ts'
 import { recordArc } from './arc-recording.ts'
-import { recordArc } from './arc-recording.ts'
 import { approve, certify, giveBack, reject, rest, revise, submit, weld, withdraw, write, type Firm } from './acts.ts'
 import { handrail6063, handrail6063Coupon, hull5083, platform6061, platform6061Coupon } from './content/aluminium.ts'
 import { stainless304, stainless304Coupon, stainless316, stainless316Coupon } from './content/stainless.ts'
@@ -50,7 +49,6 @@ export async function makeRecords(firm: Firm): Promise<void> {
   const purged = await certify(firm, 'sam', await weld(firm, 'hal', stainless304Coupon(), { tone: 'stainless', seed: 13, layers: 3, tested: true }, dosing.id))
   const pulse = await certify(firm, 'hal', await weld(firm, 'hal', platform6061Coupon(), { tone: 'aluminium', seed: 21, layers: 2, tested: true }, platform.id))
   const atLaboratory = await weld(firm, 'sam', handrail6063Coupon(), { tone: 'aluminium', seed: 34, layers: 2, tested: true }, handrail.id)
-  await recordArc(firm, 'anya', atLaboratory)
   await recordArc(firm, 'anya', atLaboratory)
   const onBench = await weld(firm, 'hal', stainless316Coupon(), { tone: 'stainless', seed: 55, layers: 3, tested: false }, contact.id)
   const failed = await weld(firm, 'sam', fcawPlateCoupon(), { tone: 'steel', seed: 89, layers: 3, tested: true, open: true }, column.id)
