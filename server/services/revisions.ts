@@ -7,6 +7,7 @@ import { conflict, HttpProblem, notFound } from '../middleware/problem.ts'
 import { Coupon } from '../models/coupon.ts'
 import { Procedure } from '../models/procedure.ts'
 import { ProcedureRevision } from '../models/procedure-revision.ts'
+import { Trial } from '../models/trial.ts'
 import type { Actor } from '../policies/index.ts'
 import { presentRevision } from '../presenters/revision.ts'
 import { nextNumber } from './number-series.ts'
@@ -101,7 +102,10 @@ export async function discardRevision(tenant: Tenant, actor: Actor, id: string, 
   if (coupon) throw new HttpProblem(409, 'A coupon belongs to it', `${coupon.number} was opened against ${nameOf(revision)}, so the draft stays on record.`)
   const used = await ProcedureRevision.count({ where: { organizationId, procedureId: revision.procedureId }, transaction })
   await revision.destroy({ transaction })
-  if (used === 1) await Procedure.destroy({ where: { organizationId, id: revision.procedureId }, transaction })
+  if (used !== 1) return
+  // A trial that it came of may be promoted anew.
+  await Trial.update({ procedureId: null }, { where: { organizationId, procedureId: revision.procedureId }, transaction })
+  await Procedure.destroy({ where: { organizationId, id: revision.procedureId }, transaction })
 }
 
 /** A procedure and all its revisions, oldest first. @throws HttpProblem 404 */

@@ -1,6 +1,6 @@
 /** The dial-in log: trial beads on the way to a setting. */
 import { z } from 'zod'
-import { idSchema, intervalOrNull, quantityOrNull, textOrNull } from './common.ts'
+import { idSchema, intervalOrNull, quantityOrNull, quantitySchema, textOrNull } from './common.ts'
 import { panelQuantitySchema } from './machines.ts'
 import { personRefSchema } from './records.ts'
 import { gasMixtureSchema, positionSchema, processSchema } from './welding.ts'
@@ -48,3 +48,26 @@ export const trialRowSchema = z.object({ id: idSchema, number: z.string(), title
 export type TrialRow = z.infer<typeof trialRowSchema>
 export const trialSchema = trialRowSchema.omit({ beads: true }).extend({ goal: z.string().nullable(), version: z.number().int(), beads: z.array(beadSchema), may: z.array(z.string()) }).meta({ id: 'Trial' })
 export type Trial = z.infer<typeof trialSchema>
+
+/** What differs from the bead that is copied; what isn't named stays. Measured values, faults, score and note are never copied. */
+export const beadChangesSchema = z
+  .object({
+    settings: z.array(z.object({ control: z.string().trim().min(1).max(60), value: z.number().finite() })).max(40).default([]),
+    stickOut: quantitySchema.nullable().optional(),
+    measured: beadContentSchema.shape.measured.optional(),
+    faults: beadContentSchema.shape.faults.optional(),
+    score: z.number().int().min(1).max(5).nullable().optional(),
+    note: z.string().trim().max(2000).nullable().optional(),
+  })
+  .meta({ id: 'BeadChanges' })
+export type BeadChanges = z.infer<typeof beadChangesSchema>
+export const addBeadSchema = z
+  .object({
+    /** Made by the caller, so that a bead sent again after a lost connection is not added twice. */
+    id: idSchema.optional(),
+    content: beadContentSchema.nullable().default(null),
+    copyOf: idSchema.nullable().default(null),
+    changes: beadChangesSchema.nullable().default(null),
+  })
+  .refine(({ content, copyOf }) => (content === null) !== (copyOf === null), { path: ['content'], message: 'Send a bead’s content, or the bead that it copies: one of the two.' })
+  .meta({ id: 'AddBead' })
