@@ -9,6 +9,7 @@ import type { Assessment } from '../../shared/schemas/assessment.ts'
 import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
 import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
 import type { Page } from '../../shared/schemas/common.ts'
+import type { MachineRow, PanelCard } from '../../shared/schemas/machines.ts'
 import { ROLES } from '../../shared/schemas/people.ts'
 import type { Coupon, CouponRow, Job, JobRow, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
 import { startApp, type Agent, type TestApp } from './harness.ts'
@@ -141,6 +142,25 @@ describe('the demo firm', () => {
     expect(er5356?.electrical.panel?.settings.map(({ control, value, unit }) => `${control} ${value} ${unit}`)).toEqual(['Wire feed 335 in/min', 'Voltage 23.4 V', 'Background 17.0 V', 'Frequency 120 Hz', 'Pulse on-time 1.9 ms'])
     expect(er5356?.electrical.panel?.caution).toContain('no crater fill')
     expect((await content('WPS-008'))?.filler.classification).toBe('ER4043')
+  })
+
+  it('has three machines with their limits, on which its procedures become figures to dial or are refused', async () => {
+    const { items: machines } = await get<Page<MachineRow>>('machines')
+    expect(machines.map(({ number, calibration }) => [number, calibration])).toEqual([['M-001', 'current'], ['M-002', 'lapsed'], ['M-003', 'due-soon']])
+    const { items } = await procedures()
+    const revisionOf = (number: string) => items.find((one) => one.number === number)?.revisionId ?? ''
+    const card = (procedure: string, machine: number, mode: string) => get<PanelCard>(`revisions/${revisionOf(procedure)}/panel-card?machine=${machines[machine - 1]?.id}&mode=${mode}`)
+    // The figures that the procedure itself writes for the machine are those of its card.
+    const manual = await card('WPS-005', 3, 'manual-pulse')
+    expect(manual.ready).toBe(true)
+    expect(manual.lines.map(({ label, text }) => `${label} ${text}`)).toEqual(['Wire feed 335 in/min', 'Voltage 23.4 V', 'Background 17.0 V', 'Frequency 120 Hz', 'Pulse on-time 1.9 ms'])
+    expect(manual.notices.map(({ code }) => code)).toContain('no-crater-fill')
+    // One button for ER4043 and ER5356: dialled by the shop's points of ER5356, refused for ER4043, of which there are none.
+    expect(await card('WPS-005', 3, 'pulse')).toMatchObject({ ready: true, program: 'alu-12' })
+    expect((await card('WPS-008', 3, 'pulse')).notices.map(({ code, level }) => `${level} ${code}`)).toEqual(expect.arrayContaining(['refuse no-points', 'warn program-lumps']))
+    expect((await card('WPS-005', 2, 'wire')).notices.filter(({ level }) => level === 'refuse').map(({ code }) => code)).toEqual(['transfer-mode', 'not-pulsed'])
+    expect((await card('WPS-002', 2, 'wire')).notices.map(({ code }) => code)).toContain('calibration-lapsed')
+    expect((await card('WPS-005', 1, 'pulse')).notices.map(({ code }) => code)).not.toContain('no-crater-fill')
   })
 
   it('has jobs whose joints find the procedure that they are to be welded by', async () => {
