@@ -142,6 +142,17 @@ describe('calibration', () => {
   })
 })
 
+it('the reminder comes by itself each morning', async () => {
+  const other = await startApp()
+  try {
+    await other.services.queue.work(other.services)
+    const { rows } = await other.services.database.owner.query('select cron, timezone from pgboss.schedule where name = $1', [calibrationRemindersJob.name])
+    expect(rows).toEqual([{ cron: '15 5 * * *', timezone: 'UTC' }])
+  } finally {
+    await other.close()
+  }
+})
+
 describe('panel cards', () => {
   const steel = () => {
     const content = steelProcedure()
