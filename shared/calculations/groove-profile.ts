@@ -17,6 +17,14 @@ export interface GrooveFigures {
   /** Angle of the upper part of a compound groove. */
   upperBevelAngle: number | null
   rootRadius: number | null
+  /** Depth of the second side of a double groove; half of what the root face leaves unless given. */
+  secondDepth?: number
+  /** Angle of one edge on the second side, where it differs. */
+  secondBevelAngle?: number | null
+  /** Height above the underside at which a compound groove changes its angle; half of the depth unless given. */
+  angleChange?: number | null
+  /** Depth gouged out from the underside. */
+  gouge?: number
 }
 
 /** Offsets of an edge at ascending heights. */
@@ -29,6 +37,8 @@ export interface GrooveProfile {
   top: number
   /** Where the two sides of a double groove meet: the underside of the root face; null for a single groove. */
   meeting: number | null
+  /** Depth gouged from the underside, 0 without. */
+  gouge: number
 }
 
 const ARC_STEPS = 64
@@ -43,12 +53,11 @@ export const hasAngle = (type: GrooveType): boolean => type !== 'square' && !isF
 export const arcHeight = (radius: number, bevel: number): number => radius * (1 - Math.sin(radians(bevel)))
 
 /** One prepared side of depth `depth`: offsets from its bottom, height 0 at the root face. */
-function preparedSide(type: GrooveType, figures: GrooveFigures, depth: number): Edge {
-  const bevel = figures.bevelAngle ?? 0
+function preparedSide(type: GrooveType, figures: GrooveFigures, depth: number, bevel: number): Edge {
   const slope = Math.tan(radians(bevel))
   if (type === 'square') return [{ offset: 0, y: 0 }, { offset: 0, y: depth }]
   if (type === 'compound-v') {
-    const kink = depth / 2
+    const kink = figures.angleChange == null ? depth / 2 : figures.angleChange - figures.rootFace
     const offset = kink * slope
     return [{ offset: 0, y: 0 }, { offset, y: kink }, { offset: offset + (depth - kink) * Math.tan(radians(figures.upperBevelAngle ?? bevel)), y: depth }]
   }
@@ -63,17 +72,41 @@ function preparedSide(type: GrooveType, figures: GrooveFigures, depth: number): 
   return [{ offset: 0, y: 0 }, { offset: depth * slope, y: depth }]
 }
 
-/** A whole edge from underside to top. A double groove is taken equally deep on both sides. */
+const rising = (points: Edge): Edge => points.filter((point, index, all) => index === 0 || point.y > (all[index - 1]?.y ?? -1) + 1e-12)
+
+/** Depth of the second side of a double groove. */
+const secondDepthOf = (figures: GrooveFigures): number => figures.secondDepth ?? (figures.thickness - figures.rootFace) / 2
+
+/** A whole edge from underside to top. */
 function edge(type: GrooveType, figures: GrooveFigures): Edge {
   const { thickness, rootFace } = figures
-  if (isFlare(type)) return preparedSide(type, figures, thickness)
+  const bevel = figures.bevelAngle ?? 0
+  if (isFlare(type)) return preparedSide(type, figures, thickness, bevel)
   if (!isDouble(type)) {
-    const side = preparedSide(type, figures, thickness - rootFace).map(({ offset, y }) => ({ offset, y: y + rootFace }))
+    const side = preparedSide(type, figures, thickness - rootFace, bevel).map(({ offset, y }) => ({ offset, y: y + rootFace }))
     return rootFace > 0 ? [{ offset: 0, y: 0 }, ...side] : side
   }
-  const depth = (thickness - rootFace) / 2
-  const side = preparedSide(type, figures, depth)
-  return [...side.map(({ offset, y }) => ({ offset, y: depth - y })).reverse(), ...side.map(({ offset, y }) => ({ offset, y: depth + rootFace + y }))].filter((point, index, all) => index === 0 || point.y > (all[index - 1]?.y ?? -1) + 1e-12)
+  const second = secondDepthOf(figures)
+  const upper = preparedSide(type, figures, thickness - rootFace - second, bevel)
+  const lower = preparedSide(type, figures, second, figures.secondBevelAngle ?? bevel)
+  return rising([...lower.map(({ offset, y }) => ({ offset, y: second - y })).reverse(), ...upper.map(({ offset, y }) => ({ offset, y: second + rootFace + y }))])
+}
+
+/** Shape of a gouge whose depth alone is given: a round bottom, then sides that open. */
+export const GOUGE_RADIUS_MM = 5
+export const GOUGE_SIDE_DEGREES = 30
+/** How far a gouge reaches from the middle of the root, `up` below its tip. */
+function gougeOffset(up: number): number {
+  const side = radians(GOUGE_SIDE_DEGREES)
+  const arc = GOUGE_RADIUS_MM * (1 - Math.sin(side))
+  return up <= arc ? Math.sqrt(Math.max(0, GOUGE_RADIUS_MM ** 2 - (GOUGE_RADIUS_MM - up) ** 2)) : GOUGE_RADIUS_MM * Math.cos(side) + (up - arc) * Math.tan(side)
+}
+
+/** An edge with what a gouge from the underside takes away as well. */
+function gouged(points: Edge, depth: number): Edge {
+  if (depth <= 0) return points
+  const heights = [...new Set([...points.map(({ y }) => y), ...Array.from({ length: 33 }, (_, step) => depth * (1 - (1 - step / 32) ** 2))])].sort((one, other) => one - other)
+  return rising(heights.map((y) => ({ y, offset: y < depth ? Math.max(offsetAt(points, y), gougeOffset(depth - y)) : offsetAt(points, y) })))
 }
 
 /** Both edges of the groove; the unprepared edge of a bevel or J groove stands straight. */
@@ -82,8 +115,9 @@ export function grooveProfile(type: GrooveType, figures: GrooveFigures): GrooveP
   const top = isFlare(type) ? (figures.rootRadius ?? 0) : figures.thickness
   const straight: Edge = [{ offset: 0, y: 0 }, { offset: 0, y: top }]
   const half = figures.rootOpening / 2
-  const placed = (points: Edge): Edge => points.map(({ offset, y }) => ({ offset: offset + half, y }))
-  return { left: placed(bothEdgesPrepared(type) ? prepared : straight), right: placed(prepared), top, meeting: isDouble(type) ? (figures.thickness - figures.rootFace) / 2 : null }
+  const gouge = figures.gouge ?? 0
+  const placed = (points: Edge): Edge => gouged(points.map(({ offset, y }) => ({ offset: offset + half, y })), gouge)
+  return { left: placed(bothEdgesPrepared(type) ? prepared : straight), right: placed(prepared), top, meeting: isDouble(type) ? secondDepthOf(figures) : null, gouge }
 }
 
 /** Offset of an edge at a height, straight between its points. */

@@ -5,28 +5,23 @@
  */
 import { baseMetalById } from '../library/base-metals.ts'
 import type { Interval } from '../schemas/common.ts'
-import type { Joint, ProcessBlock, WeldingVariables } from '../schemas/welding.ts'
-import { formatInterval } from '../units/format.ts'
-import type { Dimension, UnitSystem } from '../units/types.ts'
+import type { Joint, WeldingVariables } from '../schemas/welding.ts'
+import type { UnitSystem } from '../units/types.ts'
 import { filletGeometry } from './fillet-geometry.ts'
-import { bothEdgesPrepared, grooveProfile, hasAngle, hasRadius, isDouble, isFlare, offsetAt, type GrooveProfile } from './groove-profile.ts'
-import { drawnValue, grooveFigures } from './joint-figures.ts'
-import { bySide, layBackingBeads, layRegion, passesOf, type LaidPass, type Region } from './pass-layout.ts'
-import { boundsOf, polygonArea, type Bounds, type Point, type Polygon } from './polygon.ts'
+import { grooveProfile, isFlare, offsetAt, type GrooveFigures, type GrooveProfile } from './groove-profile.ts'
+import { drawnValue, grooveFigures, Remarks, writerFor, type Problem } from './joint-figures.ts'
+import { grooveMarks, Marks, written, type JointDimension } from './joint-marks.ts'
+import { backingStrip, checkEdgeEnds, edgeMembers, edgeWeldProfile, excessOf, grooveMembers, insertOf, isUnequalButt, memberStands } from './joint-members.ts'
+import { bySide, layBackingBeads, layFillet, layRegion, passesOf, type LaidPass, type PassBlock, type PassToLay, type Region } from './pass-layout.ts'
+import { boundsOf, centroid, polygonArea, type Bounds, type Point, type Polygon } from './polygon.ts'
 
-export interface JointDimension {
-  kind: 'thickness' | 'thickness-b' | 'root-opening' | 'root-face' | 'included-angle' | 'bevel-angle' | 'root-radius' | 'leg'
-  from: Point
-  to: Point
-  /** The corner of an angle, which opens from `from` to `to`. */
-  vertex: Point | null
-  /** The figure as the record states it, in the reader's units. */
-  text: string
-}
+export type { JointDimension } from './joint-marks.ts'
 
 export interface JointGeometry {
   plates: Polygon[]
   backing: Polygon | null
+  /** A consumable insert, which becomes part of the weld. */
+  insert: Polygon | null
   /** Outline of the weld without reinforcement: what is drawn where no passes are listed. */
   weld: Polygon[]
   passes: LaidPass[]
@@ -36,39 +31,55 @@ export interface JointGeometry {
   areaMm2: number | null
   /** null without area or density. */
   weldMetalKgPerM: number | null
-  /** Geometry that can't be, and figures without which nothing can be drawn. */
+  /** Weld metal once round the pipe, kg; null for plate and where it can't be told. */
+  weldMetalRoundKg: number | null
+  /** Throat of a flat fillet, mm. */
+  throatMm: number | null
+  /** Of a pipe: what stands at its axis, which lies on the root side. */
+  axis: string | null
+  /** What can't be, each at the field where it is mended. Where there is any, nothing is drawn. */
+  problems: Problem[]
+  /** The sentences of `problems`. */
   impossible: string[]
   /** What the record leaves open and the drawing had to take. */
   assumed: string[]
+  /** The groove itself, for laying passes and for handles; null for a fillet and where nothing is drawn. */
+  groove: { profile: GrooveProfile; figures: GrooveFigures; regions: readonly Region[] } | null
+  /** A fillet's corner and toes, one for each weld; also the fillets that reinforce a groove. */
+  fillets: { corner: Point; toeA: Point; toeB: Point }[]
 }
 
 export interface JointSetting {
   joint: Joint
   thickness: Interval | null
   thicknessB?: Interval | null
-  blocks?: readonly Pick<ProcessBlock, 'id' | 'passes'>[]
+  blocks?: readonly PassBlock[]
   /** kg/m³ of the deposit; null = not known, then no mass is given. */
   density?: number | null
+  /** Outside diameter of a pipe; absent for plate. */
+  diameter?: Interval | null
   system: UnitSystem
 }
 
 /** Mass of weld metal, kg per metre, of a section in mm² at a density in kg/m³. */
 export const massPerMetre = (areaMm2: number, density: number): number => (areaMm2 * density) / 1e6
 
-const written = (interval: Interval | null, dimension: Dimension, system: UnitSystem): string => (interval ? formatInterval(interval, dimension, system).text : '')
-
 const REINFORCEMENT_MM = 1.5
-const BACKING_MM = 6
 
 /** Parts of the groove to fill, in welding order of their sides. */
 function regions(joint: Joint, profile: GrooveProfile, rootFace: number): Region[] {
   const reinforcement = Math.min(REINFORCEMENT_MM, profile.top * 0.12)
-  const closed = offsetAt(profile.left, 0) + offsetAt(profile.right, 0) < 1e-9
-  if (profile.meeting === null) return [{ from: joint.penetration === 'partial' || closed ? rootFace : 0, to: profile.top, reinforcement }]
+  const closed = offsetAt(profile.left, profile.gouge) + offsetAt(profile.right, profile.gouge) < 1e-9
+  if (profile.meeting === null) {
+    const from = joint.penetration === 'partial' || closed ? rootFace : 0
+    const first = { from: Math.max(from, profile.gouge), to: profile.top, reinforcement }
+    return profile.gouge > 0 ? [first, { from: profile.gouge, to: 0, reinforcement }] : [first]
+  }
   const open = !(joint.penetration === 'partial' || (closed && offsetAt(profile.right, profile.meeting + rootFace / 2) < 1e-9))
+  const second = Math.max(profile.meeting, profile.gouge)
   return [
-    { from: profile.meeting + (open ? 0 : rootFace), to: profile.top, reinforcement },
-    { from: profile.meeting, to: 0, reinforcement },
+    { from: Math.max(profile.meeting + (open ? 0 : rootFace), profile.gouge), to: profile.top, reinforcement },
+    { from: second, to: 0, reinforcement },
   ]
 }
 
@@ -79,104 +90,141 @@ function outline(profile: GrooveProfile, from: number, to: number): Polygon {
   return [...side(profile.left).map(({ x, y }) => ({ x: -x, y })), ...side(profile.right).reverse()]
 }
 
-/** The two members: lying plates, but for a tee or corner joint whose unprepared member stands. */
-function members(joint: Joint, profile: GrooveProfile, thickness: number, standing: number | null): Polygon[] {
-  const reach = Math.max(...profile.left.map(({ offset }) => offset), ...profile.right.map(({ offset }) => offset)) + Math.max(1.2 * thickness, 12)
-  const flare = joint.groove !== null && isFlare(joint.groove)
-  /** Inside of a rounded member's wall, from its top back to its foot; a solid round where the wall is as thick as the radius. */
-  const inside = (centre: number): Point[] => {
-    const radius = Math.max(0, profile.top - thickness)
-    return Array.from({ length: 17 }, (_, step) => ({ x: centre - radius * Math.sin((step / 16) * (Math.PI / 2)), y: radius * Math.cos((step / 16) * (Math.PI / 2)) }))
+const nothing = (remarks: { problems: Problem[]; assumed: string[] }): JointGeometry => ({
+  plates: [], backing: null, insert: null, weld: [], passes: [], dimensions: [], bounds: boundsOf([]), areaMm2: null, weldMetalKgPerM: null, weldMetalRoundKg: null, throatMm: null, axis: null,
+  problems: remarks.problems, impossible: remarks.problems.map(({ sentence }) => sentence), assumed: remarks.assumed, groove: null, fillets: [],
+})
+
+/** Fillets over a groove weld in a tee joint, between its surface and the standing member. */
+function reinforcingFillets(joint: Joint, profile: GrooveProfile, remarks: Remarks, system: UnitSystem): JointGeometry['fillets'] {
+  const leg = drawnValue(joint.reinforcingFillet)
+  if (leg === null) return []
+  if (leg <= 0) remarks.refuse('joint.reinforcingFillet', `A reinforcing fillet of ${writerFor(system).length(leg)} is none; its leg must be above 0.`)
+  if (joint.type !== 'tee' || !memberStands(joint)) {
+    remarks.take('A reinforcing fillet is drawn on tee joints only.')
+    return []
   }
-  const lying = (points: GrooveProfile['left']): Polygon => {
-    const edge = points.map(({ offset, y }) => ({ x: offset, y }))
-    const last = edge.at(-1) ?? { x: 0, y: thickness }
-    return flare ? [...edge, { x: reach, y: last.y }, { x: reach, y: Math.max(0, last.y - thickness) }, ...inside(last.x)] : [...edge, { x: reach, y: last.y }, { x: reach, y: 0 }]
-  }
-  const right = lying(profile.right)
-  const stands = (joint.type === 'tee' || joint.type === 'corner') && joint.groove !== null && !bothEdgesPrepared(joint.groove)
-  const face = -(profile.left[0]?.offset ?? 0)
-  const width = standing ?? thickness
-  const left = stands
-    ? [{ x: face, y: joint.type === 'tee' ? -1.2 * thickness : 0 }, { x: face, y: profile.top + (joint.type === 'tee' ? 1.2 * thickness : 0) }, { x: face - width, y: profile.top + (joint.type === 'tee' ? 1.2 * thickness : 0) }, { x: face - width, y: joint.type === 'tee' ? -1.2 * thickness : 0 }]
-    : flare && !bothEdgesPrepared(joint.groove ?? 'square')
-      ? [{ x: face, y: 0 }, { x: face, y: profile.top }, { x: face - width, y: profile.top }, { x: face - width, y: 0 }]
-      : lying(profile.left).map(({ x, y }) => ({ x: -x, y }))
-  return [left, right]
+  const face = -offsetAt(profile.left, profile.top)
+  const over = { corner: { x: face, y: profile.top }, toeA: { x: face + leg, y: profile.top }, toeB: { x: face, y: profile.top + leg } }
+  const under = { corner: { x: face, y: 0 }, toeA: { x: face + leg, y: 0 }, toeB: { x: face, y: -leg } }
+  return profile.meeting === null && profile.gouge === 0 ? [over] : [over, under]
 }
 
-/** Strip under the root, where the backing is a body of its own. */
-function backingStrip(joint: Joint, rootOpening: number, thickness: number): Polygon | null {
-  if (joint.backing !== 'metal' && joint.backing !== 'ceramic' && joint.backing !== 'flux') return null
-  const [half, depth] = [rootOpening / 2 + Math.max(10, thickness / 2), Math.min(BACKING_MM, Math.max(2, thickness / 2))]
-  return [{ x: -half, y: -depth }, { x: half, y: -depth }, { x: half, y: 0 }, { x: -half, y: 0 }]
+/** Passes in a groove: backing beads under it, passes of its sides, fillets over it. */
+function layGroove(passes: readonly PassToLay[], joint: Joint, profile: GrooveProfile, figures: GrooveFigures, parts: readonly Region[], fillets: JointGeometry['fillets']): LaidPass[] {
+  const covering = fillets.length > 0 ? passes.filter(({ layer }) => layer === 'fillet') : []
+  const twoSides = parts.length > 1
+  const underneath = twoSides ? [] : passes.filter(({ layer }) => layer === 'backing')
+  const inGroove = passes.filter((pass) => !underneath.includes(pass) && !covering.includes(pass))
+  const sides = twoSides ? bySide(inGroove) : [inGroove, []]
+  const half = fillets.length > 1 ? Math.ceil(covering.length / 2) : covering.length
+  return [
+    ...parts.flatMap((part, index) => layRegion(sides[index] ?? [], profile, part)),
+    ...layBackingBeads(underneath, figures.rootOpening, Math.min(2.5, figures.thickness * 0.2)),
+    ...fillets.flatMap(({ corner, toeA, toeB }, index) => layFillet(index === 0 ? covering.slice(0, half) : covering.slice(half), corner, toeA, toeB)),
+  ].sort((one, other) => one.order - other.order)
 }
 
-function grooveDimensions(joint: Joint, profile: GrooveProfile, setting: JointSetting, bounds: Bounds, rootFace: number): JointDimension[] {
-  const { system } = setting
-  const top = profile.top
-  const [leftTop, rightTop] = [-offsetAt(profile.left, top), offsetAt(profile.right, top)]
-  const [leftRoot, rightRoot] = [-offsetAt(profile.left, 0), offsetAt(profile.right, 0)]
-  const list: JointDimension[] = []
-  const add = (kind: JointDimension['kind'], from: Point, to: Point, interval: Interval | null, dimension: Dimension, vertex: Point | null = null) => {
-    const text = written(interval, dimension, system)
-    if (text !== '') list.push({ kind, from, to, vertex, text })
-  }
-  const foot = profile.meeting === null ? 0 : profile.meeting
-  add('thickness', { x: bounds.maxX, y: joint.groove && isFlare(joint.groove) ? Math.max(0, top - (drawnValue(setting.thickness) ?? 0)) : 0 }, { x: bounds.maxX, y: top }, setting.thickness, 'length')
-  add('root-opening', { x: -offsetAt(profile.left, foot), y: foot }, { x: offsetAt(profile.right, foot), y: foot }, joint.rootOpening, 'length')
-  if (rootFace > 0) add('root-face', { x: rightRoot, y: foot }, { x: rightRoot, y: foot + rootFace }, joint.rootFace, 'length')
-  const start = foot + rootFace
-  if (joint.groove && hasAngle(joint.groove)) {
-    const vertex = { x: bothEdgesPrepared(joint.groove) ? (leftRoot + rightRoot) / 2 : offsetAt(profile.right, start), y: start }
-    const upright = { x: offsetAt(profile.right, start), y: top }
-    if (bothEdgesPrepared(joint.groove)) add('included-angle', { x: leftTop, y: top }, { x: rightTop, y: top }, joint.includedAngle, 'angle', vertex)
-    add('bevel-angle', upright, { x: rightTop, y: top }, joint.bevelAngle ?? (bothEdgesPrepared(joint.groove) ? null : joint.includedAngle), 'angle', { x: upright.x, y: start })
-  }
-  if (joint.groove && hasRadius(joint.groove)) {
-    const radius = drawnValue(joint.rootRadius) ?? 0
-    const centre = isFlare(joint.groove) ? { x: offsetAt(profile.right, 0) + radius, y: 0 } : { x: offsetAt(profile.right, start), y: start + radius }
-    add('root-radius', centre, { x: offsetAt(profile.right, start + (isFlare(joint.groove) ? radius * 0.7 : radius * 0.3)), y: start + (isFlare(joint.groove) ? radius * 0.7 : radius * 0.3) }, joint.rootRadius, 'length')
-  }
-  return list
+/** A pipe's wall against its diameter: the axis of the drawing, and the way once round at the weld's centre. */
+function pipeOf({ diameter = null, thickness, system }: JointSetting, wall: number, remarks: Remarks): { axis: string | null; outside: number | null } {
+  const drawn = drawnValue(diameter)
+  if (drawn === null || !diameter || diameter.all) return { axis: null, outside: null }
+  const words = writerFor(system)
+  // A procedure covers ranges: they clash only where the thinnest wall is too thick for the largest pipe.
+  const largest = diameter.max?.si ?? Infinity
+  const thinnest = Math.min(wall, thickness?.min?.si ?? wall)
+  if (largest <= 0) remarks.refuse('diameter', `An outside diameter of ${words.length(largest)} is no pipe; it must be above 0.`)
+  else if (2 * thinnest >= largest) remarks.refuse('thickness', `A wall of ${words.length(thinnest)} does not fit in a pipe of ${words.length(largest)} outside diameter.`)
+  return { axis: `axis of the pipe, ⌀ ${written(diameter, 'length', system)}`, outside: diameter.min && diameter.max && 2 * wall < drawn ? drawn : null }
 }
 
-const nothing = (impossible: string[], assumed: string[]): JointGeometry => ({ plates: [], backing: null, weld: [], passes: [], dimensions: [], bounds: boundsOf([]), areaMm2: null, weldMetalKgPerM: null, impossible, assumed })
+function grooveGeometry(setting: JointSetting, passes: readonly PassToLay[]): JointGeometry {
+  const { joint, system } = setting
+  const words = writerFor(system)
+  const [a, b] = [drawnValue(setting.thickness), drawnValue(setting.thicknessB ?? null)]
+  const unequal = isUnequalButt(joint, a, b)
+  const thinner = unequal && a !== null && b !== null ? Math.min(a, b) : a
+  const { figures, problems, assumed } = grooveFigures(joint, thinner, system, unequal && thinner === b ? (setting.thicknessB ?? null) : setting.thickness)
+  const remarks = new Remarks()
+  remarks.problems.push(...problems)
+  remarks.assumed.push(...assumed)
+  if (b !== null && b <= 0) remarks.refuse('thicknessB', `A thickness of ${words.length(b)} can't be welded; it must be above 0.`)
+  const excess = unequal && a !== null && b !== null ? excessOf(joint, Math.abs(a - b), words, remarks) : null
+  const pipe = pipeOf(setting, thinner ?? 0, remarks)
+  if (!figures || !joint.groove || remarks.problems.length > 0) return nothing(remarks)
+  const wall = thinner ?? figures.thickness
+  const edge = joint.type === 'edge'
+  const profile = edge && joint.groove === 'square' ? edgeWeldProfile(figures, wall, b ?? wall) : grooveProfile(joint.groove, figures)
+  if (edge && joint.groove !== 'square') checkEdgeEnds(profile, figures.rootOpening, wall, b ?? wall, system, remarks)
+  const fillets = reinforcingFillets(joint, profile, remarks, system)
+  if (remarks.problems.length > 0) return nothing(remarks)
+  const parts = regions(joint, profile, figures.rootFace)
+  const weld = [...parts.map(({ from, to }) => outline(profile, from, to)), ...fillets.map(({ corner, toeA, toeB }) => [corner, toeA, toeB])]
+  const laid = layGroove(passes, joint, profile, figures, parts, fillets)
+  const known = joint.rootOpening !== null && (joint.rootFace !== null || (joint.grooveDepth ?? null) !== null || joint.groove === 'square' || isFlare(joint.groove))
+  const areaMm2 = known ? weld.reduce((sum, polygon) => sum + polygonArea(polygon), 0) : null
+  const members = edge ? edgeMembers(joint, profile, wall, b ?? wall) : grooveMembers(joint, profile, unequal ? (a ?? wall) : wall, b, excess)
+  const plates = [members.a, members.b]
+  const backing = edge ? null : backingStrip(joint, figures.rootOpening, wall)
+  const insert = edge ? null : insertOf(joint, figures)
+  const bounds = boundsOf([...plates, ...weld, ...(backing ? [backing] : []), ...laid.map(({ polygon }) => polygon)])
+  const marks = grooveMarks({ joint, thickness: setting.thickness, thicknessB: setting.thicknessB ?? null, profile, figures, members, excess, backing, insert }, system)
+  const top = fillets[0]
+  if (top) {
+    const mark = new Marks(system)
+    mark.add('reinforcing-fillet', 'joint.reinforcingFillet', top.corner, top.toeB, joint.reinforcingFillet, 'length')
+    marks.push(...mark.list)
+  }
+  const kgPerM = areaMm2 !== null && setting.density ? massPerMetre(areaMm2, setting.density) : null
+  return {
+    plates, backing, insert, weld, passes: laid, dimensions: marks, bounds, areaMm2, weldMetalKgPerM: kgPerM,
+    weldMetalRoundKg: kgPerM !== null && pipe.outside !== null && joint.type === 'butt' ? kgPerM * roundM(weld, pipe.outside, profile.top) : null,
+    throatMm: null, axis: joint.type === 'butt' ? pipe.axis : null, problems: [], impossible: [], assumed: remarks.assumed, groove: { profile, figures, regions: parts }, fillets,
+  }
+}
+
+/** Way once round the pipe, m, of the weld's centre of area, which is what its section sweeps over (Pappus). */
+function roundM(weld: readonly Polygon[], outside: number, top: number): number {
+  const areas = weld.map(polygonArea)
+  const whole = areas.reduce((sum, area) => sum + area, 0)
+  if (whole <= 0) return 0
+  const centre = weld.reduce((sum, polygon, index) => sum + centroid(polygon).y * (areas[index] ?? 0), 0) / whole
+  return (2 * Math.PI * (outside / 2 - top + centre)) / 1000
+}
+
+function filletJoint(setting: JointSetting, passes: readonly PassToLay[]): JointGeometry {
+  const { joint, system } = setting
+  const [a, b] = [drawnValue(setting.thickness), drawnValue(setting.thicknessB ?? null)]
+  const fillet = filletGeometry({ joint, thickness: a, thicknessB: b ?? a, thicknessBGiven: setting.thicknessB ?? null, passes, system })
+  if (!fillet.drawn) return nothing(fillet)
+  const { plates, weld, laid, areaMm2, legs, legsB, throat, memberAngle } = fillet.drawn
+  const marks = new Marks(system)
+  marks.add('leg', 'joint.filletLeg', legs.from, legs.to, joint.filletLeg, 'length')
+  marks.add('leg-b', 'joint.filletLegB', legsB.from, legsB.to, joint.filletLegB, 'length')
+  marks.add('thickness', 'thickness', fillet.drawn.thicknessMark.from, fillet.drawn.thicknessMark.to, setting.thickness, 'length')
+  marks.add('thickness-b', 'thicknessB', fillet.drawn.thicknessBMark.from, fillet.drawn.thicknessBMark.to, setting.thicknessB, 'length')
+  marks.add('root-opening', 'joint.rootOpening', { x: legs.from.x, y: 0 }, { x: legs.from.x, y: drawnValue(joint.rootOpening) ?? 0 }, (drawnValue(joint.rootOpening) ?? 0) > 0 ? joint.rootOpening : null, 'length')
+  if (memberAngle !== 90) marks.add('member-angle', 'joint.memberAngle', legs.to, legsB.to, joint.memberAngle, 'angle', legs.from)
+  const fillets = weld.map(([corner, toeA, toeB]) => ({ corner: corner ?? legs.from, toeA: toeA ?? legs.to, toeB: toeB ?? legsB.to }))
+  const bounds = boundsOf([...plates, ...weld])
+  return { plates, backing: null, insert: null, weld, passes: laid, dimensions: marks.list, bounds, areaMm2, weldMetalKgPerM: setting.density ? massPerMetre(areaMm2, setting.density) : null, weldMetalRoundKg: null, throatMm: throat, axis: null, problems: [], impossible: [], assumed: fillet.assumed, groove: null, fillets }
+}
 
 /**
  * The cross-section of a joint.
- * An interval is drawn at its middle and labelled as written. Where `impossible` is not empty nothing is drawn.
+ * An interval is drawn at its middle and labelled as written. Where `problems` is not empty nothing is drawn.
  */
 export function jointGeometry(setting: JointSetting): JointGeometry {
-  const { joint, system } = setting
-  const [thickness, thicknessB] = [drawnValue(setting.thickness), drawnValue(setting.thicknessB ?? null)]
   const passes = passesOf(setting.blocks ?? [])
-  if (joint.weld === 'fillet') {
-    const fillet = filletGeometry({ joint, thickness, thicknessB: thicknessB ?? thickness, passes, system })
-    if (!fillet.drawn) return nothing(fillet.impossible, [])
-    const { plates, weld, laid, areaMm2, legs } = fillet.drawn
-    const dimensions: JointDimension[] = [{ kind: 'leg' as const, ...legs, vertex: null, text: written(joint.filletLeg, 'length', system) }, { kind: 'thickness' as const, ...fillet.drawn.thicknessMark, vertex: null, text: written(setting.thickness, 'length', system) }, ...(setting.thicknessB ? [{ kind: 'thickness-b' as const, ...fillet.drawn.thicknessBMark, vertex: null, text: written(setting.thicknessB, 'length', system) }] : [])]
-    return { plates, backing: null, weld, passes: laid, dimensions: dimensions.filter(({ text }) => text !== ''), bounds: boundsOf([...plates, ...weld]), areaMm2, weldMetalKgPerM: setting.density ? massPerMetre(areaMm2, setting.density) : null, impossible: [], assumed: fillet.assumed }
-  }
-  const { figures, impossible, assumed } = grooveFigures(joint, thickness, system)
-  if (!figures || !joint.groove) return nothing(impossible, assumed)
-  const profile = grooveProfile(joint.groove, figures)
-  const parts = regions(joint, profile, figures.rootFace)
-  const weld = parts.map(({ from, to }) => outline(profile, from, to))
-  const underneath = isDouble(joint.groove) ? [] : passes.filter(({ layer }) => layer === 'backing')
-  const inGroove = passes.filter((pass) => !underneath.includes(pass))
-  const sides = isDouble(joint.groove) ? bySide(inGroove) : [inGroove, []]
-  const laid = [...parts.flatMap((part, index) => layRegion(sides[index] ?? [], profile, part)), ...layBackingBeads(underneath, figures.rootOpening, Math.min(2.5, figures.thickness * 0.2))].sort((one, other) => one.order - other.order)
-  const known = joint.rootOpening !== null && (joint.rootFace !== null || joint.groove === 'square' || isFlare(joint.groove))
-  const areaMm2 = known ? weld.reduce((sum, polygon) => sum + polygonArea(polygon), 0) : null
-  const plates = members(joint, profile, figures.thickness, thicknessB)
-  const backing = backingStrip(joint, figures.rootOpening, figures.thickness)
-  const bounds = boundsOf([...plates, ...(backing ? [backing] : []), ...laid.map(({ polygon }) => polygon)])
-  return { plates, backing, weld, passes: laid, dimensions: grooveDimensions(joint, profile, setting, bounds, figures.rootFace), bounds, areaMm2, weldMetalKgPerM: areaMm2 !== null && setting.density ? massPerMetre(areaMm2, setting.density) : null, impossible: [], assumed }
+  return setting.joint.weld === 'fillet' ? filletJoint(setting, passes) : grooveGeometry(setting, passes)
 }
 
 /** Density of the base metal as a stand-in for that of its weld metal, kg/m³; null for a metal that is not from the library. */
 export const densityOf = (variables: Pick<WeldingVariables, 'baseMetals'>): number | null => (variables.baseMetals.a.libraryId ? (baseMetalById(variables.baseMetals.a.libraryId)?.density_kg_m3 ?? null) : null)
 
+/** What a weld's variables say of its cross-section. */
+export const settingOf = (variables: WeldingVariables, system: UnitSystem = variables.unitSystem): JointSetting => ({ joint: variables.joint, thickness: variables.thickness, thicknessB: variables.thicknessB, blocks: variables.processes, density: densityOf(variables), diameter: variables.product === 'pipe' ? variables.diameter : null, system })
+
 /** The cross-section of a procedure or coupon, with the passes of all its process blocks. */
-export const geometryOf = (variables: WeldingVariables, system: UnitSystem = variables.unitSystem): JointGeometry => jointGeometry({ joint: variables.joint, thickness: variables.thickness, thicknessB: variables.thicknessB, blocks: variables.processes, density: densityOf(variables), system })
+export const geometryOf = (variables: WeldingVariables, system: UnitSystem = variables.unitSystem): JointGeometry => jointGeometry(settingOf(variables, system))
+

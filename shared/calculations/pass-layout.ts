@@ -1,17 +1,31 @@
 /**
  * Where the passes lie: layers from the root outwards, beads side by side. A drawing of the build-up, not a prediction of bead shape:
- * beads of a layer share it evenly, and together they fill the groove without gap or overlap.
+ * together the beads fill the groove without gap or overlap. Where bead sections are given, they are drawn in their proportion; else
+ * layers are alike in height and beads of a layer share it evenly.
  */
 import type { Pass, ProcessBlock } from '../schemas/welding.ts'
 import { offsetAt, type GrooveProfile } from './groove-profile.ts'
 import { centroid, type Point, type Polygon } from './polygon.ts'
 
 /** `order` counts all passes in the order of welding, from 0. */
-export interface PassToLay { order: number; number: string; processId: string; layer: Pass['layer'] }
+export interface PassToLay { order: number; number: string; processId: string; layer: Pass['layer']; /** mm²; null = not given */ beadArea: number | null; side: Pass['side'] }
 export interface LaidPass extends PassToLay { polygon: Polygon; labelAt: Point }
 
+/** A process block, as far as its passes are laid. */
+export type PassBlock = Pick<ProcessBlock, 'id' | 'passes'>
+
+/** Where a pass is kept: its block and its row there. */
+export interface PassPlace { block: number; row: number; pass: Pass; processId: string }
+
+/** The passes of all blocks in the order of welding: by their place in the sequence where one is given, else block after block. */
+export function sequenceOf(blocks: readonly PassBlock[]): PassPlace[] {
+  const all = blocks.flatMap(({ id, passes }, block) => passes.map((pass, row): PassPlace => ({ block, row, pass, processId: id })))
+  if (all.some(({ pass }) => (pass.order ?? null) === null)) return all
+  return all.map((place, natural) => ({ place, natural })).sort((one, other) => (one.place.pass.order ?? 0) - (other.place.pass.order ?? 0) || one.natural - other.natural).map(({ place }) => place)
+}
+
 /** The passes of all process blocks, in the order in which they are welded. */
-export const passesOf = (blocks: readonly Pick<ProcessBlock, 'id' | 'passes'>[]): PassToLay[] => blocks.flatMap(({ id, passes }) => passes.map(({ number, layer }) => ({ number, processId: id, layer }))).map((pass, order) => ({ order, ...pass }))
+export const passesOf = (blocks: readonly PassBlock[]): PassToLay[] => sequenceOf(blocks).map(({ pass, processId }, order) => ({ order, number: pass.number, processId, layer: pass.layer, beadArea: pass.beadArea && pass.beadArea.si > 0 ? pass.beadArea.si : null, side: pass.side ?? null }))
 
 const placed = (pass: PassToLay, polygon: Polygon): LaidPass => ({ ...pass, polygon, labelAt: centroid(polygon) })
 
@@ -52,7 +66,29 @@ function bead(profile: GrooveProfile, y0: number, y1: number, u0: number, u1: nu
   return [...heights.map((y) => at(y, u0)), ...outer.slice(1, -1), ...heights.map((y) => at(y, u1)).reverse()]
 }
 
-const widthAt = (profile: GrooveProfile, y: number): number => offsetAt(profile.left, y) + offsetAt(profile.right, y)
+export const widthAt = (profile: GrooveProfile, y: number): number => offsetAt(profile.left, y) + offsetAt(profile.right, y)
+
+/** Section of the groove between two heights, mm²; exact, as the edges are straight between their points. */
+export function areaBetween(profile: GrooveProfile, from: number, to: number): number {
+  const [low, high] = [Math.min(from, to), Math.max(from, to)]
+  const heights = [low, ...[...profile.left, ...profile.right].map(({ y }) => y).filter((y) => y > low && y < high).sort((one, other) => one - other), high]
+  return heights.slice(1).reduce((sum, y, index) => {
+    const below = heights[index] ?? y
+    return sum + ((widthAt(profile, below) + widthAt(profile, y)) / 2) * (y - below)
+  }, 0)
+}
+
+/** Height at which a region from `from` towards `to` holds `area`; `to` where it never does. */
+export function heightFor(profile: GrooveProfile, from: number, to: number, area: number): number {
+  let [near, far] = [from, to]
+  if (area >= areaBetween(profile, from, to)) return to
+  for (let step = 0; step < 48; step += 1) {
+    const middle = (near + far) / 2
+    if (areaBetween(profile, from, middle) < area) near = middle
+    else far = middle
+  }
+  return (near + far) / 2
+}
 
 /** Beads in each layer: root and hot passes have one layer each, caps share the last, fill passes spread so that beads look like beads. */
 function layersOf(passes: readonly PassToLay[], profile: GrooveProfile, region: Region): number[] {
@@ -75,16 +111,38 @@ function layersOf(passes: readonly PassToLay[], profile: GrooveProfile, region: 
   return [...fixedBefore, ...(best?.beads ?? []), ...fixedAfter]
 }
 
+/** Weight of each pass; where only some sections are given, the others are taken as their mean. null where none is. */
+function weightsOf(passes: readonly PassToLay[]): number[] | null {
+  const given = passes.flatMap(({ beadArea }) => (beadArea === null ? [] : [beadArea]))
+  if (given.length === 0) return null
+  const mean = given.reduce((sum, area) => sum + area, 0) / given.length
+  return passes.map(({ beadArea }) => beadArea ?? mean)
+}
+
 /** Lays passes into one region of a groove, from the root outwards. */
 export function layRegion(passes: readonly PassToLay[], profile: GrooveProfile, region: Region): LaidPass[] {
   if (passes.length === 0) return []
   const layers = layersOf(passes, profile, region)
   const step = (region.to - region.from) / layers.length
+  const whole = areaBetween(profile, region.from, region.to)
+  const weights = whole > 0 ? weightsOf(passes) : null
+  const total = weights?.reduce((sum, weight) => sum + weight, 0) ?? 1
   let next = 0
+  let [y0, filled] = [region.from, 0]
   return layers.flatMap((beads, layer) => {
-    const [y0, y1] = [region.from + step * layer, layer === layers.length - 1 ? region.to : region.from + step * (layer + 1)]
+    const shares = weights?.slice(next, next + beads) ?? Array.from({ length: beads }, () => 1)
+    const here = shares.reduce((sum, share) => sum + share, 0)
+    filled += here
+    const y1 = layer === layers.length - 1 ? region.to : weights ? heightFor(profile, region.from, region.to, (filled / total) * whole) : region.from + step * (layer + 1)
     const crown = layer === layers.length - 1 ? region.reinforcement * Math.sign(step) : 0
-    return passes.slice(next, (next += beads)).map((pass, index) => placed(pass, bead(profile, y0, y1, index / beads, (index + 1) / beads, crown)))
+    const start = y0
+    y0 = y1
+    let share = 0
+    return passes.slice(next, (next += beads)).map((pass, index) => {
+      const u0 = share / here
+      share += shares[index] ?? 0
+      return placed(pass, bead(profile, start, y1, u0, index === beads - 1 ? 1 : share / here, crown))
+    })
   })
 }
 
@@ -101,8 +159,13 @@ export function layBackingBeads(passes: readonly PassToLay[], rootOpening: numbe
   })
 }
 
-/** Passes of a double groove by side: the second side begins after the first run of cap passes, else at half. */
+/** Passes of a double groove by side: as stated, else the second side begins after the first run of cap passes, else at half. */
 export function bySide(passes: readonly PassToLay[]): [PassToLay[], PassToLay[]] {
+  if (passes.some(({ side }) => side !== null)) {
+    let current: Pass['side'] = 'first'
+    const told = passes.map((pass) => ({ pass, side: (current = pass.side ?? current) }))
+    return [told.filter(({ side }) => side === 'first').map(({ pass }) => pass), told.filter(({ side }) => side === 'second').map(({ pass }) => pass)]
+  }
   const firstCap = passes.findIndex(({ layer }) => layer === 'cap')
   const after = firstCap === -1 ? -1 : passes.findIndex(({ layer }, index) => index > firstCap && layer !== 'cap')
   const backing = passes.findIndex(({ layer }) => layer === 'backing')
@@ -111,20 +174,29 @@ export function bySide(passes: readonly PassToLay[]): [PassToLay[], PassToLay[]]
 }
 
 /**
- * Lays passes into a fillet with corner at `corner`, legs along the unit directions `along` and `up`, leg length `leg`:
- * bands parallel to the face, each as large as its beads are many.
+ * Lays passes into a fillet with corner at `corner` and its toes at `toeA` and `toeB`:
+ * bands parallel to the face, each as large as its beads are.
  */
-export function layFillet(passes: readonly PassToLay[], corner: Point, along: Point, up: Point, leg: number): LaidPass[] {
+export function layFillet(passes: readonly PassToLay[], corner: Point, toeA: Point, toeB: Point): LaidPass[] {
   if (passes.length === 0) return []
   let layerCount = 1
   while ((layerCount * (layerCount + 1)) / 2 < passes.length) layerCount += 1
   const layers = spread(passes.length, Array.from({ length: layerCount }, (_, index) => index))
-  const at = (scale: number, u: number): Point => ({ x: corner.x + leg * scale * (along.x * (1 - u) + up.x * u), y: corner.y + leg * scale * (along.y * (1 - u) + up.y * u) })
+  const weights = weightsOf(passes) ?? passes.map(() => 1)
+  const total = weights.reduce((sum, weight) => sum + weight, 0)
+  const at = (scale: number, u: number): Point => ({ x: corner.x + scale * ((toeA.x - corner.x) * (1 - u) + (toeB.x - corner.x) * u), y: corner.y + scale * ((toeA.y - corner.y) * (1 - u) + (toeB.y - corner.y) * u) })
   let next = 0
+  let filled = 0
   return layers.flatMap((beads) => {
-    const [inner, outer] = [Math.sqrt(next / passes.length), Math.sqrt((next + beads) / passes.length)]
+    const shares = weights.slice(next, next + beads)
+    const here = shares.reduce((sum, share) => sum + share, 0)
+    const [inner, outer] = [Math.sqrt(filled / total), Math.sqrt(Math.min(1, (filled + here) / total))]
+    filled += here
+    let share = 0
     return passes.slice(next, (next += beads)).map((pass, index) => {
-      const [u0, u1] = [index / beads, (index + 1) / beads]
+      const u0 = share / here
+      share += shares[index] ?? 0
+      const u1 = index === beads - 1 ? 1 : share / here
       return placed(pass, inner === 0 ? [at(0, 0), at(outer, u0), at(outer, u1)] : [at(inner, u0), at(outer, u0), at(outer, u1), at(inner, u1)])
     })
   })
