@@ -25,7 +25,11 @@ export const stainlessCalculators: readonly Calculator[] = [
       ...elementsOf('a', 'Base metal A', { c: 0.17, mn: 1.3, si: 0.3, cr: 0.05, ni: 0.05, mo: 0.01, nb: 0, n: 0.005, cu: 0.05 }), ...elementsOf('b', 'Base metal B', { c: 0.02, mn: 1.6, si: 0.4, cr: 18.2, ni: 8.1, mo: 0.2, nb: 0, n: 0.07, cu: 0.2 }), ...elementsOf('f', 'Filler', { c: 0.02, mn: 1.8, si: 0.4, cr: 23.5, ni: 13, mo: 0.1, nb: 0, n: 0.05, cu: 0.1 }),
     },
     outputs: ferriteOutputs,
-    calculate: ({ dilution, shareOfA, ...given }) => ferriteWithDilution({ dilution, shareOfA, baseA: chemistryOf(given, 'a'), baseB: chemistryOf(given, 'b'), filler: chemistryOf(given, 'f') }),
+    calculate: ({ dilution, shareOfA, ...given }) => {
+      const baseB = chemistryOf(given, 'b')
+      // Left empty as a whole: both members are of metal A.
+      return ferriteWithDilution({ dilution, shareOfA, baseA: chemistryOf(given, 'a'), baseB: Object.keys(baseB).length > 0 ? baseB : null, filler: chemistryOf(given, 'f') })
+    },
     formula: ['weld = dilution × base + (1 − dilution) × filler, for each element', ...ferriteFormula], source: ferriteSource, validity: ferriteValidity,
     example: { from: 'by hand: Cr equivalent 0.15 × 0.06 + 0.15 × 18.4 + 0.7 × 23.6 = 19.289; Ni equivalent 0.15 × 6.1125 + 0.15 × 10.25 + 0.7 × 14.725 = 12.761875', expect: { crEq: { value: 19.289, within: 1e-6 }, niEq: { value: 12.761875, within: 1e-6 } } },
   }),
