@@ -8,17 +8,17 @@ import { condition } from './meta.ts'
 import { readMetals, unread } from './metals.ts'
 import { byTest, FOUR, says } from './verdict.ts'
 
-type Listed = Exclude<Group, 'PQR'>
+export type Listed = Exclude<Group, 'PQR'>
 /** Strength classes that match, in ksi; solid and metal-cored wires have no 60 ksi class. */
 const STRENGTH: Record<Listed, readonly number[]> = { I: [60, 70], II: [70], III: [80], IV: [90] }
-const classesOf = (group: Listed, process: ProcessBlock['process']): readonly number[] => (process === 'GMAW' && group === 'I' ? [70] : STRENGTH[group])
+export const classesOf = (group: Listed, process: ProcessBlock['process']): readonly number[] => (process === 'GMAW' && group === 'I' ? [70] : STRENGTH[group])
 const ORDER: readonly Group[] = ['I', 'II', 'III', 'IV']
 /** Low-hydrogen electrodes that the table names for Group II. */
 const GROUP_II_SMAW = /^E70(15|16|18|28)/
 const SINGLE_PASS_ONLY = /T-?(2|3|10|13|14|GS)(?![0-9])/
 
 /** Classes that match a group, in words. */
-const wanted = (group: Listed, process: ProcessBlock['process']): string => {
+export const wanted = (group: Listed, process: ProcessBlock['process']): string => {
   const classes = classesOf(group, process).map((ksi) => (process === 'SMAW' ? `E${ksi}XX` : process === 'SAW' ? `F${ksi / 10}XX` : process === 'FCAW' ? `E${ksi / 10}XT` : `ER${ksi}S or E${ksi}C`))
   return `${process === 'SMAW' && group !== 'I' ? 'low-hydrogen ' : ''}${list(classes, 'or')}`
 }
