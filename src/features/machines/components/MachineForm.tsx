@@ -2,10 +2,12 @@ import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { Plus } from 'lucide-react'
 import { useEffect, useEffectEvent, useState } from 'react'
 import { Controller, useFieldArray, useWatch } from 'react-hook-form'
+import { useBlocker } from 'react-router-dom'
 import type { z } from 'zod'
 import { PATTERNS, freshKey } from '@shared/machines/patterns.ts'
 import { machineSchema, writeMachineSchema, type Machine, type WriteMachine } from '@shared/schemas/machines.ts'
 import { Button, ButtonLink } from '@/components/Button.tsx'
+import { Dialog } from '@/components/Dialog.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
 import { Checkbox, Select, TagPicker, TextArea, TextField } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
@@ -48,7 +50,10 @@ export function MachineForm({ machine }: { machine: Machine }) {
     onSuccess: (stored) => {
       client.setQueryData(query('readMachine', { params: { id: machine.id } }).queryKey, stored)
       for (const key of ['listMachines', 'readPanelCard', 'readToday']) void client.invalidateQueries({ queryKey: [key] })
-      take(stored)
+      setSeen(stored)
+      setTheirs(null)
+      // The boxes stay as they are, with the cursor where it was.
+      form.reset(stored.content, { keepValues: true })
       say(`${stored.number} is saved`)
     },
     onError: (error) => {
@@ -68,6 +73,7 @@ export function MachineForm({ machine }: { machine: Machine }) {
     window.addEventListener('beforeunload', listen)
     return () => window.removeEventListener('beforeunload', listen)
   }, [])
+  const leaving = useBlocker(({ currentLocation, nextLocation }) => isDirty && currentLocation.pathname !== nextLocation.pathname)
   const add = (key: string) => {
     const pattern = PATTERNS.find((one) => one.key === key)
     if (pattern) modes.append({ ...structuredClone(pattern.mode), key: freshKey(pattern.mode.key, form.getValues('modes').map((mode) => mode.key)) })
@@ -128,6 +134,17 @@ export function MachineForm({ machine }: { machine: Machine }) {
       {modes.fields.map((field, index) => (
         <ModeEditor key={field.id} form={form} mode={index} count={modes.fields.length} onMove={modes.move} onRemove={() => modes.remove(index)} />
       ))}
+      {leaving.state === 'blocked' && (
+        <Dialog title="Leave without saving?" isOpen onClose={() => leaving.reset()}>
+          <p>What you changed on {seen.number} is not saved yet.</p>
+          <div className="mt-4 flex flex-wrap justify-end gap-2">
+            <Button onClick={() => leaving.proceed()}>Leave without saving</Button>
+            <Button kind="primary" onClick={() => leaving.reset()}>
+              Stay here
+            </Button>
+          </div>
+        </Dialog>
+      )}
       <div className="no-print mt-4 flex flex-wrap items-center gap-2 border border-dashed border-edge px-4 py-4">
         <p className="mr-2 font-medium">Add a mode like</p>
         {PATTERNS.map(({ key, label }) => (

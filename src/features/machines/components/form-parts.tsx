@@ -85,7 +85,8 @@ function ListInput({ label, placeholder, figures, value, onChange, error }: { la
       error={unread.length > 0 ? `${unread.join(', ')} is no figure. Give each in mm, e.g. 0.9, 1.2.` : error}
       onChange={(event) => {
         setText(event.target.value)
-        onChange(figures ? readFigures(event.target.value) : readWords(event.target.value))
+        // What is no figure stands in the list as none, so that nothing is saved without it.
+        onChange(figures ? [...readFigures(event.target.value), ...unreadFigures(event.target.value).map(() => NaN)] : readWords(event.target.value))
       }}
     />
   )
