@@ -10,7 +10,9 @@ import type { Standard } from '../standards/rule.ts'
 import { judgeBlock } from './block.ts'
 import { contradictions } from './contradictions.ts'
 import { couponContradictions } from './kept.ts'
+import { memoryOf } from './plan.ts'
 import { prepare } from './prepare.ts'
+import { readsOf } from './reads.ts'
 
 export interface AssessInput {
   procedure: ProcedureContent
@@ -70,10 +72,14 @@ export function assess(given: AssessInput): Assessment {
     const { unitSystem: system, toughnessRequired: toughness } = variables
     const out = { findings, ranges }
     const others = input.otherCoupons ?? []
-    if (prepared.weld.length > 0) judgeBlock(standard, prepared, { route, edition, level, system, toughness, procedure: variables, coupons, path: '', block: null }, others, out)
+    const memory = memoryOf(standard, prepared, coupons, { level, system, toughness })
+    // Rules know a second member that is not there by its being the first: of values alone they could not tell one object from two.
+    const isTold = variables.baseMetals.a !== variables.baseMetals.b
+    const remembering = memory === null || !isTold ? null : { memory, reads: readsOf(memory.paths, variables) }
+    if (prepared.weld.length > 0) judgeBlock(standard, prepared, { route, edition, level, system, toughness, procedure: variables, coupons, path: '', block: null }, others, remembering, out)
     for (let i = 0; i < variables.processes.length; i += 1) {
       const block = variables.processes[i] ?? null
-      if (block) judgeBlock(standard, prepared, { route, edition, level, system, toughness, procedure: variables, coupons, path: `processes.${i}`, block }, others, out)
+      if (block) judgeBlock(standard, prepared, { route, edition, level, system, toughness, procedure: variables, coupons, path: `processes.${i}`, block }, others, remembering, out)
     }
   }
   return { standard: input.standard, edition: input.edition, unitSystem: variables.unitSystem, verdict: overall(findings), counts: count(findings), findings, ranges }

@@ -3,9 +3,9 @@
  * not look at the procedure. A coupon stays the same while a procedure is edited, or while one is compared with thousands.
  * A record is never changed in place: whoever edits one makes another object.
  */
-import type { AssessedCoupon, Finding, QualifiedRange } from '../schemas/assessment.ts'
+import type { AssessedCoupon, QualifiedRange } from '../schemas/assessment.ts'
 import type { ProcessBlock } from '../schemas/welding.ts'
-import type { CouponSide, Rule, RuleContext, RuleRange, RuleVerdict, Standard } from '../standards/rule.ts'
+import type { CouponSide, Rule, RuleContext, RuleRange, Standard } from '../standards/rule.ts'
 import { contradictions, type Contradiction } from './contradictions.ts'
 import type { PreparedEdition, PreparedRule } from './prepare.ts'
 
@@ -15,12 +15,7 @@ export interface KeptRange {
   step: string | null
   /** As an assessment told it last. */
   told: QualifiedRange | null
-  /** The last finding on it that was within. */
-  finding: KeptFinding | null
 }
-
-/** A finding and all that it was made from besides what a grid belongs to: the same again is the same finding. */
-export interface KeptFinding { finding: Finding; judged: RuleVerdict; ranges: readonly KeptRange[]; note: string | null }
 
 /** The ranges of a side under one edition, for one level, unit system and toughness. */
 interface GridOf {
@@ -34,11 +29,11 @@ interface GridOf {
 /** By the rule's place in the edition; `DEPENDS` where it looks at the procedure, undefined = not asked yet. */
 export type Grid = (KeptRange | typeof DEPENDS | undefined)[]
 
-const DEPENDS = 'depends on the procedure'
+export const DEPENDS = 'depends on the procedure'
 
 export interface KeptSide extends CouponSide { grids: GridOf[] }
 
-interface KeptCoupon {
+export interface KeptCoupon {
   coupon: AssessedCoupon
   weld: KeptSide
   /** One for each process block that names its process. */
@@ -47,8 +42,8 @@ interface KeptCoupon {
 
 const byStandard = new WeakMap<Standard, WeakMap<AssessedCoupon['content'], KeptCoupon>>()
 
-/** The coupon's sides under a standard; made anew where the record has another identity, number or state. */
-function keptCoupon(standard: Standard, coupon: AssessedCoupon): KeptCoupon {
+/** What is kept of a coupon under a standard; made anew where the record has another identity, number or state. */
+export function keptCoupon(standard: Standard, coupon: AssessedCoupon): KeptCoupon {
   let known = byStandard.get(standard)
   if (!known) {
     known = new WeakMap()
@@ -100,7 +95,7 @@ export function rangeOf(grid: Grid, { rule, place }: PreparedRule, context: Rule
   return made
 }
 
-const withStep = (given: RuleRange | null, side: CouponSide): KeptRange => ({ given, step: given === null ? null : `${side.coupon.number}: ${given.reason}`, told: null, finding: null })
+const withStep = (given: RuleRange | null, side: CouponSide): KeptRange => ({ given, step: given === null ? null : `${side.coupon.number}: ${given.reason}`, told: null })
 
 /** The context, and whether anything was read of it that differs from procedure to procedure. Its properties are its own, so that a copy of it counts as looking. */
 function watch(context: RuleContext): { context: RuleContext; looked: () => boolean } {

@@ -1,0 +1,95 @@
+/**
+ * Answers of one rule by the values that it read. A rule is a pure function: what it reads first is always the same, and each
+ * value decides what it reads next. So its answers form a tree of values, and a known answer is found by reading that much and no more.
+ */
+import { markAt, type Reads } from './reads.ts'
+
+interface Step<T> {
+  /** The path read here; `ANSWER` at the end of a branch. */
+  path: number
+  mark: unknown
+  /** Where that mark leads. */
+  next: Step<T> | null
+  /** Where other marks lead. */
+  more: Map<unknown, Step<T>> | null
+  answer: T | null
+}
+
+export interface Remembered<T> {
+  root: Step<T> | null
+  /** Answers in the tree. */
+  size: number
+  hits: number
+  misses: number
+  /** Questions still to be answered without noting what is read. */
+  rest: number
+}
+
+const ANSWER = -1
+/** Most answers kept for one rule and one choice of coupons. */
+const MOST = 64
+/** A rule that is asked for something else nearly each time is left alone for so many questions. */
+const REST = 3000
+
+export const newRemembered = <T>(): Remembered<T> => ({ root: null, size: 0, hits: 0, misses: 0, rest: 0 })
+
+/** The answer given before for the values that the procedure holds; null when there is none. */
+export function recall<T>(remembered: Remembered<T>, reads: Reads): T | null {
+  let step = remembered.root
+  while (step !== null) {
+    if (step.path === ANSWER) {
+      remembered.hits += 1
+      return step.answer
+    }
+    const mark = markAt(reads, step.path)
+    step = step.mark === mark ? step.next : step.more === null ? null : (step.more.get(mark) ?? null)
+  }
+  return null
+}
+
+/** Whether the next answer is worth noting: not for a rule whose values hardly ever come again. */
+export function isWorthNoting<T>(remembered: Remembered<T>): boolean {
+  if (remembered.rest > 0) {
+    remembered.rest -= 1
+    return false
+  }
+  remembered.misses += 1
+  if (remembered.size < MOST) return true
+  const worth = remembered.hits >= 2 * remembered.misses
+  Object.assign(remembered, { root: null, size: 0, hits: 0, misses: 0, rest: worth ? 0 : REST })
+  return worth
+}
+
+/** Never asks this rule's reading again. */
+export function giveUp<T>(remembered: Remembered<T>): void {
+  Object.assign(remembered, { root: null, size: 0, rest: Infinity })
+}
+
+/** Keeps an answer. @param paths on which it rests, as they were read */
+export function keep<T>(remembered: Remembered<T>, reads: Reads, paths: readonly number[], answer: T): void {
+  const left = new Set(paths)
+  let step = remembered.root
+  remembered.size += 1
+  if (step === null) {
+    remembered.root = branch(reads, left, answer)
+    return
+  }
+  while (step.path !== ANSWER) {
+    left.delete(step.path)
+    const mark = markAt(reads, step.path)
+    const next: Step<T> | null | undefined = step.mark === mark ? step.next : step.more?.get(mark)
+    if (!next) {
+      step.more ??= new Map<unknown, Step<T>>()
+      step.more.set(mark, branch(reads, left, answer))
+      return
+    }
+    step = next
+  }
+  step.answer = answer
+}
+
+function branch<T>(reads: Reads, paths: ReadonlySet<number>, answer: T): Step<T> {
+  let step: Step<T> = { path: ANSWER, mark: null, next: null, more: null, answer }
+  for (const path of [...paths].reverse()) step = { path, mark: markAt(reads, path), next: step, more: null, answer: null }
+  return step
+}
