@@ -73,8 +73,8 @@ export function filletGeometry({ joint, thickness, thicknessB, thicknessBGiven =
 
   const memberAngle = drawnValue(joint.memberAngle) ?? 90
   const up: Point = { x: Math.cos(radians(memberAngle)), y: Math.sin(radians(memberAngle)) }
-  const arm = leg + Math.max(1.2 * thickness, 12)
-  const height = Math.max(legB * 1.8, legB + 1.2 * thicknessB, 12)
+  const arm = leg + Math.max(0.8 * thickness, 10)
+  const height = Math.max(legB * 1.6, legB + 0.7 * thicknessB, 10)
   const tee = joint.type === 'tee'
   const lap = joint.type === 'lap'
   // A skewed member is as wide at its foot as its thickness is cut aslant.

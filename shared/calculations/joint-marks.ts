@@ -74,7 +74,8 @@ export function grooveMarks(marked: Marked, system: UnitSystem): JointDimension[
   marks.add('thickness', 'thickness', markA.from, markA.to, marked.thickness, 'length')
   if (markB) marks.add('thickness-b', 'thicknessB', markB.from, markB.to, marked.thicknessB, 'length')
   const at = Math.max(foot, profile.gouge)
-  marks.add('root-opening', 'joint.rootOpening', { x: -offsetAt(profile.left, at), y: at }, { x: offsetAt(profile.right, at), y: at }, joint.rootOpening, 'length')
+  const half = figures.rootOpening / 2
+  if (joint.type !== 'edge' || half > 0) marks.add('root-opening', 'joint.rootOpening', { x: -half, y: at }, { x: half, y: at }, joint.rootOpening, 'length')
   const edge = offsetAt(profile.right, start)
   if (figures.rootFace > 0 && profile.gouge < start) marks.add('root-face', 'joint.rootFace', { x: edge, y: foot }, { x: edge, y: start }, joint.rootFace, 'length')
   markAngles(marks, marked, start)

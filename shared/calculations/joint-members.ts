@@ -23,7 +23,7 @@ export function excessOf(joint: Joint, more: number, words: Writer, remarks: Rem
   return { above: more - below, below, taper }
 }
 
-const reachOf = (profile: GrooveProfile, thickness: number): number => Math.max(...profile.left.map(({ offset }) => offset), ...profile.right.map(({ offset }) => offset)) + Math.max(1.2 * thickness, 12)
+const reachOf = (profile: GrooveProfile, thickness: number): number => Math.max(...profile.left.map(({ offset }) => offset), ...profile.right.map(({ offset }) => offset)) + Math.max(0.6 * thickness, 10)
 const runOf = (rise: number, taper: number | null): number => (taper === null || rise <= 0 ? 0 : rise / Math.tan(radians(taper)))
 
 /** A lying plate to the right of its edge. */
@@ -72,7 +72,7 @@ export function grooveMembers(joint: Joint, profile: GrooveProfile, a: number, b
     return { a: other, b: rounded, markA: { from: { x: reach, y: Math.max(0, top - a) }, to: { x: reach, y: top } }, markB: null }
   }
   if (memberStands(joint)) {
-    const over = joint.type === 'tee' ? 1.2 * a : 0
+    const over = joint.type === 'tee' ? Math.max(0.5 * a, 8, 1.4 * (drawnValue(joint.reinforcingFillet) ?? 0)) : 0
     return { a: block(face - width, -over, face, top + over), b: lyingPlate(profile.right, reach, null), markA: { from: { x: reach, y: 0 }, to: { x: reach, y: top } }, markB: b === null ? null : { from: { x: face - width, y: -over }, to: { x: face, y: -over } } }
   }
   const thickIsB = b !== null && b > a
@@ -89,7 +89,7 @@ export function edgeMembers(joint: Joint, profile: GrooveProfile, a: number, b: 
   const half = profile.right[0]?.offset ?? 0
   const onTop = joint.groove === 'square'
   const top = onTop ? 0 : profile.top
-  const foot = top - Math.max(3 * Math.max(a, b), 2 * profile.top)
+  const foot = top - Math.max(2 * Math.max(a, b), 2 * profile.top)
   const inner = onTop ? [{ x: half, y: 0 }] : profile.right.map(({ offset, y }) => ({ x: offset, y }))
   const outer = onTop ? [{ x: half, y: 0 }] : profile.left.map(({ offset, y }) => ({ x: offset, y }))
   const open = drawnValue(joint.rootOpening) ?? 0

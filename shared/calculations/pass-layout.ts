@@ -63,7 +63,8 @@ function bead(profile: GrooveProfile, y0: number, y1: number, u0: number, u1: nu
     const point = at(y1, u)
     return { x: point.x, y: point.y + crown * (1 - (2 * u - 1) ** 2) }
   })
-  return [...heights.map((y) => at(y, u0)), ...outer.slice(1, -1), ...heights.map((y) => at(y, u1)).reverse()]
+  const sides = heights.slice(0, -1)
+  return [...sides.map((y) => at(y, u0)), ...outer, ...sides.map((y) => at(y, u1)).reverse()]
 }
 
 export const widthAt = (profile: GrooveProfile, y: number): number => offsetAt(profile.left, y) + offsetAt(profile.right, y)

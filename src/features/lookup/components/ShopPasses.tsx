@@ -1,7 +1,7 @@
 import type { ProcessBlock } from '@shared/schemas/welding.ts'
 import { formatInterval, formatQuantity } from '@shared/units/format.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
-import { heatOf } from '@/components/joint/JointDrawing.tsx'
+import { heatOf } from '@shared/calculations/joint-picture.ts'
 
 const HEATS = ['bg-heat-1', 'bg-heat-2', 'bg-heat-3', 'bg-heat-4'] as const
 
