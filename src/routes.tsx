@@ -15,15 +15,16 @@ import { routes as peopleRoutes } from '@/features/people/routes.tsx'
 import { routes as procedureRoutes } from '@/features/procedures/routes.tsx'
 import { routes as standardRoutes } from '@/features/standards/routes.tsx'
 import { routes as todayRoutes } from '@/features/today/routes.tsx'
+import { beadRoutes, routes as trialRoutes } from '@/features/trials/routes.tsx'
 import { NotFound, RouteError } from '@/shell/ErrorPage.tsx'
 import { Bare, Shell } from '@/shell/Shell.tsx'
 import { anyone, signedIn } from '@/shell/guard.ts'
 
 /** Pages with the bar, for people who are signed in. A feature adds its `routes` here. */
-const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...arcDataRoutes, ...jobRoutes, ...machineRoutes, ...lookupRoutes, ...libraryRoutes, ...calculatorRoutes, ...standardRoutes]
+const desk: RouteObject[] = [...todayRoutes, ...accountRoutes, ...peopleRoutes, ...outboxRoutes, ...procedureRoutes, ...couponRoutes, ...arcDataRoutes, ...jobRoutes, ...machineRoutes, ...trialRoutes, ...lookupRoutes, ...libraryRoutes, ...calculatorRoutes, ...standardRoutes]
 
 /** Pages without the bar, for people who are signed in: the shop view. */
-const shop: RouteObject[] = [...shopRoutes]
+const shop: RouteObject[] = [...shopRoutes, ...beadRoutes]
 
 /** Pages without the bar, for anyone: sign-in and the links in e-mails. */
 const open: RouteObject[] = [...accountBareRoutes]

@@ -11,12 +11,14 @@ import { frameD11, frameD11Coupon, gangwayD12, gangwayD12Coupon, skidIso, skidIs
 import { fcawPlate, fcawPlateCoupon, gmawPlate, gmawPlateCoupon, pipe, pipeCoupon, smawPlate, smawPlateCoupon } from './content/steel.ts'
 import { demoJobs } from './jobs.ts'
 import { demoMachines } from './machines.ts'
+import { makeTrials } from './trials.ts'
 
-/** Fifteen procedures, eleven coupons, three jobs, three machines. */
+/** Fifteen procedures, eleven coupons, three jobs, three machines, two trials. */
 export async function makeRecords(firm: Firm): Promise<void> {
   // M-001 to M-003, which coupons and panels name.
+  const machineIds: string[] = []
   await firm.act(async (tenant) => {
-    for (const machine of demoMachines(await databaseDay(tenant))) await createMachine(tenant, machine)
+    for (const machine of demoMachines(await databaseDay(tenant))) machineIds.push((await createMachine(tenant, machine)).id)
   })
 
   const approved = new Map<string, string>()
@@ -80,4 +82,5 @@ export async function makeRecords(firm: Firm): Promise<void> {
   await submit(firm, 'tobias', splash)
 
   for (const job of demoJobs((number) => approved.get(number) ?? '')) await firm.act((tenant) => createJob(tenant, job))
+  await makeTrials(firm, machineIds)
 }

@@ -13,6 +13,7 @@ const PLACES = [
   { to: '/coupons', label: 'Coupons', action: 'coupons.read' },
   { to: '/jobs', label: 'Jobs', action: 'jobs.read' },
   { to: '/machines', label: 'Machines', action: 'machines.read' },
+  { to: '/dial-in', label: 'Dial-in', action: 'trials.read' },
   { to: '/library', label: 'Library', action: 'library.read' },
   { to: '/calculators', label: 'Calculators', action: 'library.read' },
 ] as const
