@@ -29,7 +29,7 @@ export function PanelCardView({ card }: { card: PanelCard }) {
             {card.programLabel && ` · ${card.programLabel}`}
           </h2>
           {dialled.length === 0 && <p className="py-3">No control of this mode is fixed by the procedure. Set it by what you measure.</p>}
-          <ul>
+          <ul className="print:grid print:grid-cols-2 print:gap-x-6">
             {dialled.map((line) => (
               <LineRow key={line.control} line={line} />
             ))}
@@ -50,7 +50,7 @@ export function PanelCardView({ card }: { card: PanelCard }) {
         </section>
       )}
       {notes.length > 0 && (
-        <section aria-label="Good to know" className="border-b border-rule px-5 py-4 print:py-2">
+        <section aria-label="Good to know" className="break-inside-avoid border-b border-rule px-5 py-4 print:py-2">
           <h2 className="font-narrow text-lg font-medium tracking-[0.055em] text-soft uppercase">Good to know</h2>
           <Notices notices={notes} className="mt-1" />
         </section>
