@@ -1,6 +1,7 @@
 import type { CalculatorResult } from '@shared/calculations/catalogue.ts'
 import { written, type Source } from '@shared/calculations/result.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
+import { BASIS_SENTENCE } from '@/components/standards/words.ts'
 
 /** How the result came about: each step with its formula, the figures put in, and what it gave. */
 export function Working({ result, system }: { result: CalculatorResult; system: UnitSystem }) {
@@ -26,20 +27,13 @@ export function Working({ result, system }: { result: CalculatorResult; system: 
   )
 }
 
-const BASIS: Readonly<Record<Source['basis'], string>> = {
-  read: 'Read in the published text.',
-  secondary: 'From a secondary source: check it in your edition.',
-  memory: 'From memory: confirm in your edition.',
-  'common-practice': 'Common practice, not a figure of a standard.',
-}
-
 /** Standard, edition and clause, and plainly on what it rests. */
 export function SourceLine({ source }: { source: Source }) {
   const { standard, edition, clause, basis, note } = source
   return (
     <div>
       <p className="font-medium">{[edition ? `${standard} (${edition})` : standard, clause].filter(Boolean).join(', ')}</p>
-      <p className={basis === 'memory' ? 'font-medium text-straw-deep' : 'text-soft'}>{BASIS[basis]}</p>
+      <p className={basis === 'memory' ? 'font-medium text-straw-deep' : 'text-soft'}>{BASIS_SENTENCE[basis]}</p>
       {note && <p className="text-sm text-soft">{note}</p>}
     </div>
   )

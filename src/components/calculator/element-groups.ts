@@ -38,5 +38,8 @@ export function partedInputs(calculator: Calculator): { plain: [string, Calculat
   return { plain, groups }
 }
 
+/** Whether a calculator asks for a composition. */
+export const elementsOfGroup = (calculator: Calculator): boolean => partedInputs(calculator).groups.length > 0
+
 /** The key of an element's input in a group. */
 export const elementKey = (group: ElementGroup, symbol: string): string | null => group.elements.find((each) => each.symbol === symbol)?.key ?? null

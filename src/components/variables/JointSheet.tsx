@@ -7,6 +7,7 @@ import { figure } from '@/lib/figures.ts'
 import { JOINT } from './catalogue.ts'
 import { useSheet } from './context.ts'
 import { BACKINGS, GROOVES, WELDS, wordOf } from './options.ts'
+import { JointWork } from './RowWork.tsx'
 import { SheetField } from './SheetField.tsx'
 
 /** The joint, drawn as it is typed, with what follows from its figures, then its rows. */
@@ -46,6 +47,7 @@ export function JointSheet() {
           )}
         </figcaption>
       </figure>
+      <JointWork />
       {JOINT.rows.map((spec) => (
         <SheetField key={spec.path} spec={spec} />
       ))}

@@ -13,6 +13,7 @@ import { Editor } from './Editor.tsx'
 import { gaugeOf, testedInWords } from './findings.ts'
 import { missingInWords } from './labels.ts'
 import { Reading } from './Reading.tsx'
+import { RowWork } from './RowWork.tsx'
 
 const NONE: readonly Finding[] = []
 
@@ -52,7 +53,7 @@ export const SheetField = memo(function SheetField({ spec, prefix = '', block = 
     )
   }
   return (
-    <SheetRow label={spec.label} unit={unitOf(spec, sheet.system)} verdict={worstVerdict(findings.map(({ verdict }) => verdict))} gauge={gauge(spec, findings, sheet)} margin={<Notes findings={findings} />}>
+    <SheetRow label={spec.label} unit={unitOf(spec, sheet.system)} verdict={worstVerdict(findings.map(({ verdict }) => verdict))} gauge={gauge(spec, findings, sheet)} margin={<>{sheet.control && <RowWork spec={spec} prefix={prefix} block={block} />}<Notes findings={findings} /></>}>
       {sheet.control ? <Editor spec={spec} path={path} prefix={prefix} block={block} /> : <Reading spec={spec} path={path} prefix={prefix} />}
     </SheetRow>
   )

@@ -22,6 +22,8 @@ export interface SheetValue {
   /** Leaves out what stands within. */
   attention: boolean
   onFix?: (fix: Fix, finding: Finding) => void
+  /** Writes what was worked out beside a field, to be taken back as a fix is. */
+  onUse?: (fix: Fix) => void
   couponNumber: (id: string) => string | undefined
 }
 

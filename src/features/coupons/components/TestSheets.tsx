@@ -1,5 +1,7 @@
 import { Plus, X } from 'lucide-react'
 import { use } from 'react'
+import { BESIDE_BEND, BESIDE_HARDNESS } from '@shared/calculations/beside.ts'
+import type { Quantity } from '@shared/schemas/common.ts'
 import type { BendTest, NdtTest } from '@shared/schemas/welding.ts'
 import { formatQuantity } from '@shared/units/format.ts'
 import { Button } from '@/components/Button.tsx'
@@ -7,7 +9,9 @@ import { QuantityField } from '@/components/fields/quantity.tsx'
 import { Checkbox, Select } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { inputId, useSheet } from '@/components/variables/context.ts'
+import { say } from '@/components/toast.tsx'
 import { VerdictMark } from '@/components/Verdict.tsx'
+import { WorkItOut } from '@/components/work-it-out/WorkItOut.tsx'
 import { newBend, newHardness, newMacro, newNdt, newTension, newToughness, type BendKind } from '../content.ts'
 import { useCouponContent, useList, type Listed as ListOf } from './coupon-sheet.ts'
 import { BEND_KINDS, NDT_METHODS, TEST_FIELDS, type TestList } from './test-fields.ts'
@@ -99,7 +103,9 @@ function ListedTyped<L extends Exclude<TestList, 'bends' | 'ndt'>>({ list, add, 
   return (
     <div id={inputId(list)} tabIndex={-1}>
       {rows.map((item, index) => (
-        <TestRow key={item.id} fields={TEST_FIELDS[list]} path={`${list}.${index}`} test={item} mark={mark(item)} onChange={(part) => change(index, part as Partial<ItemOf<L>>)} onRemove={() => remove(index)} />
+        <TestRow key={item.id} fields={TEST_FIELDS[list]} path={`${list}.${index}`} test={item} mark={mark(item)} onChange={(part) => change(index, part as Partial<ItemOf<L>>)} onRemove={() => remove(index)}>
+          {list === 'hardness' && 'scale' in item && <HardnessWork values={item.values as number[]} mark={mark(item)} />}
+        </TestRow>
       ))}
       <Foot error={error} empty={rows.length === 0 ? empty : null}>
         <Button icon={<Plus size={15} aria-hidden="true" />} onClick={() => put([...rows, fresh(items)] as typeof items)}>
@@ -155,6 +161,24 @@ function NdtTyped() {
   )
 }
 
+/** The largest former that the metals allow, and the strain over the one that was used. */
+function BendWork({ bend, onChange }: { bend: BendTest; onChange: (former: Quantity | null) => void }) {
+  const { content, system } = useSheet()
+  const use = ({ value }: { value: object }, label: string) => {
+    if (!('si' in value)) return
+    const before = bend.formerDiameter
+    onChange(value as Quantity)
+    say(label, { undo: () => onChange(before) })
+  }
+  return <WorkItOut what={`former of ${bend.specimen}`} calculators={BESIDE_BEND} record={{ variables: content.variables, bend }} blockIndex={null} system={system} of="coupon" onUse={use} />
+}
+
+/** Vickers figures in other scales, for whoever asks in them. */
+function HardnessWork({ values, mark }: { values: readonly number[]; mark: string }) {
+  const { content, system } = useSheet()
+  return <WorkItOut what={`hardness of the ${mark.toLowerCase()}`} calculators={BESIDE_HARDNESS} record={{ variables: content.variables, hardness: { values } }} blockIndex={null} system={system} of="coupon" />
+}
+
 function BendSheet() {
   const { control } = useSheet()
   const { bends } = useCouponContent()
@@ -176,6 +200,7 @@ function BendsTyped() {
       {items.map((bend, index) => (
         <TestRow key={bend.id} fields={TEST_FIELDS.bends} path={`bends.${index}`} test={bend} mark={bend.specimen} onChange={(part) => change(index, part)} onRemove={() => remove(index)}>
           <Openings bend={bend} onChange={(openings) => change(index, { openings })} />
+          <BendWork bend={bend} onChange={(formerDiameter) => change(index, { formerDiameter })} />
         </TestRow>
       ))}
       <Foot error={error} empty={items.length === 0 ? 'Each opening on the convex face is measured; one at a corner is told apart, as it may not count.' : null}>

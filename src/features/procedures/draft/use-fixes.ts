@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useEffectEvent, useRef } from 'react'
-import type { Finding, Fix } from '@shared/schemas/assessment.ts'
+import type { Fix } from '@shared/schemas/assessment.ts'
 import { say } from '@/components/toast.tsx'
 import { applyFix, undoFix, type AppliedFix } from './fixes.ts'
 import { contentPath, findingField } from '@/lib/draft/paths.ts'
@@ -14,7 +14,7 @@ export interface FixHandlers {
 }
 
 /** Applies what the margin offers; each is taken back from the toast or with Ctrl+Z (outside of a text that is being typed). */
-export function useFixes(draft: ProcedureDraft, { onPlan, onState }: FixHandlers): (fix: Fix, finding: Finding) => void {
+export function useFixes(draft: ProcedureDraft, { onPlan, onState }: FixHandlers): (fix: Fix) => void {
   const done = useRef<AppliedFix[]>([])
   const latest = useRef(draft)
   useEffect(() => {

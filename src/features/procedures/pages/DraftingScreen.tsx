@@ -126,7 +126,7 @@ export function DraftingScreen({ revision, personId }: { revision: Revision; per
     void navigate(`/coupons/${coupon.id}`)
   }
 
-  const sheet = useMemo(() => ({ content: rested, system, control: form.control, findings, attention, onFix, couponNumber }), [rested, system, form.control, findings, attention, onFix, couponNumber])
+  const sheet = useMemo(() => ({ content: rested, system, control: form.control, findings, attention, onFix, onUse: onFix, couponNumber }), [rested, system, form.control, findings, attention, onFix, couponNumber])
   const numbers = rested.supportingCoupons.map((id) => ({ id, number: couponNumber(id) ?? revision.coupons.find((one) => one.id === id)?.number ?? '…' }))
   const returned = [...revision.signatures].reverse().find(({ meaning }) => meaning === 'returned')
   const note = stands.length === 0 ? 'nothing stands in the way' : `${stands.length} ${stands.length === 1 ? 'finding wants' : 'findings want'} a reason`
