@@ -7,10 +7,12 @@ import { DEMO_PASSWORD, FIRM } from '../../server/demo/people.ts'
 import { picturesOf } from '../../server/demo/pictures.ts'
 import type { Assessment } from '../../shared/schemas/assessment.ts'
 import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
-import type { ArcRecording, ArcRecordingRow } from '../../shared/schemas/arc-data.ts'
 import type { Page } from '../../shared/schemas/common.ts'
 import type { MachineRow, PanelCard } from '../../shared/schemas/machines.ts'
 import { ROLES } from '../../shared/schemas/people.ts'
+import { beadFigures } from '../../shared/trials/bead-figures.ts'
+import { proposeRanges } from '../../shared/trials/propose-ranges.ts'
+import type { Trial, TrialRow } from '../../shared/schemas/trials.ts'
 import type { Coupon, CouponRow, Job, JobRow, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
 import { startApp, type Agent, type TestApp } from './harness.ts'
 
@@ -46,17 +48,6 @@ describe('the demo firm', () => {
     const { rows } = await app.services.database.owner.query('select 1 from organizations where name = $1', [FIRM.name])
     expect(rows).toHaveLength(1)
     expect((await procedures()).total).toBe(15)
-  })
-
-  it('has a recording of a pulsed arc on the open aluminium coupon, with what the meters missed', async () => {
-    const { items } = await get<Page<ArcRecordingRow>>('arc-recordings')
-    expect(items).toHaveLength(1)
-    const recording = await get<ArcRecording>(`arc-recordings/${items[0]?.id}`)
-    expect(recording).toMatchObject({ attachedTo: 'PQR-006 pass 2', figures: { stopCount: 1, badRows: 0, alternating: false } })
-    expect(recording.figures.pulse?.frequency).toBeCloseTo(110, 0)
-    expect(recording.figures.current.mean).toBeCloseTo(155, -1)
-    expect(recording.figures.meterError).toBeLessThan(-10)
-    expect(recording.heatInput).toBeCloseTo(recording.figures.energy / 51 / 1000, 9)
   })
 
   it('has a recording of a pulsed arc on the open aluminium coupon, with what the meters missed', async () => {
@@ -161,6 +152,18 @@ describe('the demo firm', () => {
     expect((await card('WPS-005', 2, 'wire')).notices.filter(({ level }) => level === 'refuse').map(({ code }) => code)).toEqual(['transfer-mode', 'not-pulsed'])
     expect((await card('WPS-002', 2, 'wire')).notices.map(({ code }) => code)).toContain('calibration-lapsed')
     expect((await card('WPS-005', 1, 'pulse')).notices.map(({ code }) => code)).not.toContain('no-crater-fill')
+  })
+
+  it('has a trial on the manual pulse whose best bead can be promoted, with room where the beads show it and none where they don’t', async () => {
+    const { items } = await get<Page<TrialRow>>('trials?sort=number')
+    expect(items.map(({ number, beads, bestScore, machine }) => [number, beads, bestScore, machine])).toEqual([['T-001', 8, 5, 'M-003 Bay 3 pulse'], ['T-002', 3, 4, 'M-002 Bay 2 feeder']])
+    const trial = await get<Trial>(`trials/${items[0]?.id}`)
+    const best = trial.beads.find(({ content }) => content.score === 5)
+    const { ranges, problems } = proposeRanges(trial.beads, best?.id ?? '')
+    expect(problems).toEqual([])
+    expect(ranges.filter(({ from }) => from === 'set').map(({ label, min, max }) => [label, min, max])).toEqual([['Wire feed', 325, 332], ['Voltage', 23, 23], ['Background', 17, 17], ['Frequency', 116, 119], ['Pulse on-time', 1.9, 1.9]])
+    // What the recorder read of peak and background comes to what the meter showed, within a few amperes.
+    for (const { content } of trial.beads.filter((bead) => bead.content.measured.peakCurrent !== null)) expect(Math.abs((beadFigures(content).figures.meanCurrent?.value ?? 0) - (content.measured.current?.min?.si ?? 0))).toBeLessThan(3)
   })
 
   it('has jobs whose joints find the procedure that they are to be welded by', async () => {
