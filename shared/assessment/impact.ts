@@ -103,7 +103,7 @@ function strongest({ rules }: Touched): ImpactClass {
 function ofRules(rules: readonly Rule[], findings: readonly Finding[] = []): Pick<Judged, 'ruleIds' | 'clause' | 'basis'> {
   const clauses = [...new Set(findings.length > 0 ? findings.map(({ clause }) => clause) : rules.map(({ meta }) => meta.clause))]
   const bases: Basis[] = findings.length > 0 ? findings.map(({ basis }) => basis) : rules.map(({ meta }) => meta.basis)
-  return { ruleIds: [...new Set([...rules.map(({ meta }) => meta.id), ...findings.map(({ ruleId }) => ruleId)])], clause: clauses.length > 0 ? list(clauses) : null, basis: bases.length > 0 ? bases.reduce(weakest) : null }
+  return { ruleIds: [...new Set([...findings.map(({ ruleId }) => ruleId), ...rules.map(({ meta }) => meta.id)])], clause: clauses.length > 0 ? list(clauses) : null, basis: bases.length > 0 ? bases.reduce(weakest) : null }
 }
 
 /** Whether the linked coupons cover an essential or supplementary change. */

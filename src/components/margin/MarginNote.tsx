@@ -107,7 +107,7 @@ export function MarginNote({ finding, onFix, couponNumber }: MarginNoteProps) {
       {onFix && fixes.length > 0 && (
         <p className="no-print mt-1 flex flex-wrap gap-x-3">
           {fixes.map((fix) => (
-            <button key={`${fix.kind} ${fix.label}`} type="button" className="min-h-6 text-left font-semibold underline decoration-1 underline-offset-[3px] hover:decoration-2" onClick={() => onFix(fix, finding)}>
+            <button key={`${fix.kind} ${'field' in fix ? fix.field : ''} ${fix.label}`} type="button" className="min-h-6 text-left font-semibold underline decoration-1 underline-offset-[3px] hover:decoration-2" onClick={() => onFix(fix, finding)}>
               {fix.label}
             </button>
           ))}
