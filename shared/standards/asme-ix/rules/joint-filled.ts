@@ -25,7 +25,7 @@ function jointTop({ thickness, thicknessB }: WeldingVariables, system: UnitSyste
 
 /** An autogenous pass fuses the joint without a deposit, so there nothing can be added up; a repair need not fill the thickness. */
 const applies = ({ procedure: { joint, processes } }: RuleContext): boolean =>
-  joint.weld === 'groove' && joint.penetration === 'full' && joint.work === undefined && processes.every(({ filler }) => filler.added === true)
+  joint.weld === 'groove' && joint.penetration === 'full' && joint.work == null && processes.every(({ filler }) => filler.added === true)
 
 export const jointFilled: Rule = {
   meta: {
@@ -61,7 +61,7 @@ export const jointFilled: Rule = {
     if (filled >= joint) return { verdict: 'within', sentence: `The deposits of the procedure together fill ${wanted}.`, asked, range: lengthRange(system, 0, filled === Infinity ? null : filled), tested: [] }
     const open = parts.filter(({ deposit }) => deposit === null)
     if (open.length > 0) {
-      return cannotTell(`Whether the deposits together fill ${wanted} can't be told, because the deposit of ${list(open.map(({ name }) => name))} isn't stated.`, open.map(({ field }) => `procedure: ${field}`), { asked, tested: [], fixes: open.map(({ field }) => stateFix('deposit thickness', field)) })
+      return cannotTell(`Whether the deposits together fill ${wanted} can't be told, because the deposit of ${list(open.map(({ name }) => name))} isn't stated.`, open.map(({ field }) => `procedure: ${field}`), { asked, tested: [], fixes: open.map(({ name, field }) => stateFix(parts.length > 1 ? `deposit thickness of ${name}` : 'deposit thickness', field)) })
     }
     const range = lengthRange(system, 0, filled)
     // Not "outside": no coupon would cure it, the procedure must say how the rest is filled.

@@ -38,6 +38,12 @@ describe('deposits fill a full-penetration groove (QW-202.2, QW-200.4)', () => {
     // What the other fills alone needs no figure.
     expect(run(null, 40)?.verdict).toBe('within')
   })
+  test('a joint that says that it is no repair must be filled as any other', () => {
+    expect(run(10, 29.9, 40, (v) => (v.joint.work = null))?.verdict).toBe('cannot-tell')
+  })
+  test('the fixes of two deposits name their processes', () => {
+    expect(run(null, null)?.fixes.map(({ label }) => label)).toEqual(['State the deposit thickness of GTAW', 'State the deposit thickness of SMAW'])
+  })
   test('every thickness is filled only by a deposit without limit', () => {
     const all = (v: WeldingVariables): void => void (v.thickness = { min: null, max: null, all: true })
     expect(run(10, 30, 40, all)?.sentence).toContain('joints of every thickness')
