@@ -79,7 +79,8 @@ const has = (metal: BaseMetal): boolean => Boolean(metal.specification ?? metal.
 /** Facts of a metal of a record; null when none is stated. */
 export function metalFacts(record: BaseMetal, library: AdviceLibrary = {}): MetalFacts | null {
   if (!has(record)) return null
-  const row = (record.libraryId === null ? null : (baseMetalById(record.libraryId) ?? library.metal?.(record.libraryId) ?? null)) ?? (record.specification ? resolveBaseMetal(record.specification, record.grade ?? '') : null)
+  const listed = record.libraryId === null ? null : (baseMetalById(record.libraryId) ?? library.metal?.(record.libraryId) ?? null)
+  const row = listed ?? (record.specification ? resolveBaseMetal(record.specification, record.grade ?? '') : null)
   const pNumber = record.pNumber ?? null
   const group = record.iso15608 ?? null
   return {
@@ -95,7 +96,8 @@ export function metalFacts(record: BaseMetal, library: AdviceLibrary = {}): Meta
 /** Facts of a filler of a record; null for none, an autogenous weld or an unnamed one. */
 export function fillerFacts(record: Filler, library: AdviceLibrary = {}): FillerFacts | null {
   if (record.added === false || !record.classification) return null
-  const row = (record.libraryId === null ? null : (fillerById(record.libraryId) ?? library.filler?.(record.libraryId) ?? null)) ?? resolveFiller(record.classification, record.specification)
+  const listed = record.libraryId === null ? null : (fillerById(record.libraryId) ?? library.filler?.(record.libraryId) ?? null)
+  const row = listed ?? resolveFiller(record.classification, record.specification)
   const fNumber = record.fNumber === null ? (row?.f_no ?? null) : Number.parseInt(record.fNumber, 10)
   return {
     name: record.classification, record, row,

@@ -19,7 +19,7 @@ const PROCESS_NAMES: ReadonlySet<string> = new Set(processes.flatMap(({ aws, iso
 export const D1_1_GROUPS = ['I', 'II', 'III', 'IV'] as const
 export const FILLER_GROUPS = ['FM1', 'FM2', 'FM3', 'FM4', 'FM5', 'FM6'] as const
 
-const figure = (what: string, most: number, unit: string) => z.number().gt(0, `${what} is above 0 ${unit}.`).max(most, `${what} of more than ${most} ${unit} can’t be.`).nullable().default(null)
+const figure = (what: string, most: number, unit: string) => z.number(`${what} is written as a figure in ${unit}.`).gt(0, `${what} is above 0 ${unit}.`).max(most, `${what} of more than ${most} ${unit} can’t be.`).nullable().default(null)
 const source = z.string().trim().min(1, 'Say where the figures come from: a standard, a data sheet, a letter.').max(300)
 const upper = (max: number) => textOrNull(max).transform((text) => (text === null ? null : text.toUpperCase()))
 
@@ -30,7 +30,7 @@ export const ownBaseMetalSchema = z
     uns_or_en_number: textOrNull(20),
     product_form: z.string().trim().min(1, 'Say in which form it comes: plate, pipe, forging.').max(80),
     p_no: upper(6),
-    group_no: z.number().int('A Group Number is a whole number.').min(1, 'Group Numbers begin at 1.').max(9, 'Group Numbers end at 9.').nullable().default(null),
+    group_no: z.number('A Group Number is a whole number.').int('A Group Number is a whole number.').min(1, 'Group Numbers begin at 1.').max(9, 'Group Numbers end at 9.').nullable().default(null),
     iso_15608: textOrNull(8),
     aws_d1_1_group: z.enum(D1_1_GROUPS, 'AWS D1.1 has groups I to IV.').nullable().default(null),
     aws_d1_2_m_no: textOrNull(6),
@@ -60,8 +60,8 @@ export const ownFillerSchema = z
     spec: z.string().trim().min(1, 'Name the specification, or the maker’s own name for it.').max(80),
     classification: z.string().trim().min(1, 'Give the classification.').max(60),
     uns: textOrNull(20),
-    f_no: z.number().int('An F-Number is a whole number.').nullable().default(null).refine((number) => number === null || F_NUMBERS.includes(number), { error: (issue) => `There is no F-Number ${String(issue.input)}. They are ${F_NUMBERS.join(', ')}.` }),
-    a_no: z.number().int('An A-Number is a whole number.').nullable().default(null).refine((number) => number === null || A_NUMBERS.includes(number), { error: (issue) => `There is no A-Number ${String(issue.input)}. They run from 1 to ${A_NUMBERS.length}, for ferrous weld metal.` }),
+    f_no: z.number('An F-Number is a whole number.').int('An F-Number is a whole number.').nullable().default(null).refine((number) => number === null || F_NUMBERS.includes(number), { error: (issue) => `There is no F-Number ${String(issue.input)}. They are ${F_NUMBERS.join(', ')}.` }),
+    a_no: z.number('An A-Number is a whole number.').int('An A-Number is a whole number.').nullable().default(null).refine((number) => number === null || A_NUMBERS.includes(number), { error: (issue) => `There is no A-Number ${String(issue.input)}. They run from 1 to ${A_NUMBERS.length}, for ferrous weld metal.` }),
     iso_9606_filler_group: z.enum(FILLER_GROUPS, 'ISO 9606 has the filler groups FM1 to FM6.').nullable().default(null),
     hydrogen_designator: textOrNull(40),
     min_tensile_mpa: figure('A tensile strength', 3000, 'MPa'),
@@ -69,7 +69,7 @@ export const ownFillerSchema = z
     min_elongation_pct: figure('An elongation', 100, '%'),
     nominal_composition: textOrNull(120),
     processes: z.array(z.string().trim().max(20)).min(1, 'Name a process that it is for, as AWS letters or an ISO 4063 number.').max(12),
-    diameters_mm: z.array(z.number().gt(0, 'A size is above 0 mm.').max(20, 'A size of more than 20 mm can’t be.')).max(20).default([]),
+    diameters_mm: z.array(z.number('Give each size as a figure in mm, e.g. 0.9, 1.2.').gt(0, 'A size is above 0 mm.').max(20, 'A size of more than 20 mm can’t be.')).max(20).default([]),
     source,
     notes: textOrNull(600),
   })
@@ -86,7 +86,7 @@ export const ownGasSchema = z
   .object({
     name: z.string().trim().min(1, 'Give the mixture a name.').max(80),
     awsDesignation: textOrNull(40),
-    components: z.array(z.object({ gas: z.enum(GASES), percent: z.number().gt(0, 'A share is above 0 %.').max(100, 'A share can’t be above 100 %.') })).min(1, 'Give the parts by volume; pure gas is one part of 100 %.').max(6),
+    components: z.array(z.object({ gas: z.enum(GASES), percent: z.number('Give the share in per cent.').gt(0, 'A share is above 0 %.').max(100, 'A share can’t be above 100 %.') })).min(1, 'Give the parts by volume; pure gas is one part of 100 %.').max(6),
     use: textOrNull(200),
     source,
   })

@@ -11,6 +11,7 @@ import type { PairOf, RowSpec } from './row-spec.ts'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { FillerEditor } from './FillerEditor.tsx'
 import { GasEditor } from './GasEditor.tsx'
+import { HeatNumberEditor } from './HeatNumber.tsx'
 import { MetalEditor } from './MetalEditor.tsx'
 import { positionsFor } from './options.ts'
 import { PanelEditor } from './PanelEditor.tsx'
@@ -34,6 +35,7 @@ export function Editor({ spec, path, prefix, block }: { spec: RowSpec; path: str
       return <FlagEditor path={path} label={label} />
     case 'text':
     case 'paragraph':
+      if (path.endsWith('filler.lot')) return <HeatNumberEditor path={path} label={label} max={spec.max} />
       return <TextEditor spec={spec} path={path} label={label} />
     case 'whole':
       return <WholeEditor min={spec.min} max={spec.max} path={path} label={label} />
@@ -72,7 +74,7 @@ function HalfEditor({ of, path, label }: { of: PairOf; path: string; label: stri
     case 'flag':
       return <FlagEditor path={path} label={label} />
     case 'text':
-      return <TextEditor spec={{ kind: 'text', max: of.max }} path={path} label={label} />
+      return path.endsWith('.heatNumber') ? <HeatNumberEditor path={path} label={label} max={of.max} /> : <TextEditor spec={{ kind: 'text', max: of.max }} path={path} label={label} />
   }
 }
 

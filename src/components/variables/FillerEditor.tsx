@@ -1,9 +1,12 @@
+import { useMemo } from 'react'
 import { fillerSchema, type Filler, type Process } from '@shared/schemas/welding.ts'
 import { toFiller } from '@shared/library/filler-metals.ts'
+import { fillerAdvice } from '@shared/library/filler-advice.ts'
+import { FoldedAdvice } from '@/components/advice/Advice.tsx'
 import { ComboBox } from '@/components/fields/ComboBox.tsx'
 import { Checkbox } from '@/components/fields/text.tsx'
 import { call } from '@/lib/api.ts'
-import { inputId, useSheetField } from './context.ts'
+import { inputId, useSheet, useSheetField } from './context.ts'
 import { fillerInWords } from './labels.ts'
 
 const loader = (process: Process | null) => async (text: string, signal: AbortSignal) => {
@@ -14,6 +17,8 @@ const loader = (process: Process | null) => async (text: string, signal: AbortSi
 /** The filler metal: from the library with its numbers, written as it is called, or none (autogenous). Sizes and lot of the record stay. */
 export function FillerEditor({ path, label, process }: { path: string; label: string; process: Process | null }) {
   const { value, set, error } = useSheetField<Filler>(`variables.${path}`)
+  const { baseMetals, serviceTemperature } = useSheet().content.variables
+  const advice = useMemo(() => fillerAdvice({ ...baseMetals, filler: value, process, serviceTemperature: serviceTemperature?.si ?? null }), [baseMetals, value, process, serviceTemperature])
   const kept = { diameters: value.diameters, tradeName: value.tradeName, lot: value.lot, fluxTradeName: value.fluxTradeName }
   return (
     <div className="flex flex-wrap items-center gap-x-4 gap-y-1.5">
@@ -35,6 +40,7 @@ export function FillerEditor({ path, label, process }: { path: string; label: st
       {value.added !== false && <p className="min-w-0 grow basis-40 text-sm text-soft">{value.libraryId === null && value.classification && !value.fNumber ? 'Not from the library: state its numbers below.' : (value.specification ?? '')}</p>}
       <Checkbox label="No filler (autogenous)" checked={value.added === false} onChange={(event) => set(event.target.checked ? fillerSchema.parse({ added: false }) : fillerSchema.parse({ added: true }))} />
       <span className="sr-only">{fillerInWords(value)}</span>
+      <FoldedAdvice advice={advice} />
     </div>
   )
 }

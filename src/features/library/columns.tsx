@@ -11,21 +11,23 @@ export interface Fact {
   label: string
   /** null = the source lists nothing, which is never equal to another nothing. */
   value: ReactNode | null
+  /** How the figure is known, where the row tells it for this column. */
+  basis?: string | null
+  /** Its basis stands on the row's own page only: in the list it would stand beside every row. */
+  quiet?: boolean
 }
 
-export const KIND_NAMES: Record<LibraryKind, { title: string; find: string; about: string }> = {
-  'base-metals': { title: 'Base metals', find: 'Grade, UNS, P-Number or group', about: 'Grades with their P-Numbers and groups. What a source does not list is shown as not listed, and two grades not listed are never taken for alike.' },
-  'filler-metals': { title: 'Filler metals', find: 'Classification, specification or F-Number', about: 'Classifications with their F- and A-Numbers.' },
-  gases: { title: 'Gases', find: 'Mixture, ISO 14175 symbol or use', about: 'Usual mixtures by volume, and the classes they fall in.' },
-  positions: { title: 'Positions', find: '3G, PF, overhead', about: 'Test positions as ASME and AWS write them beside ISO 6947.' },
-  processes: { title: 'Processes', find: 'GMAW, 135, TIG', about: 'AWS letters beside ISO 4063 numbers.' },
+export const KIND_NAMES: Record<LibraryKind, { title: string; /** In a sentence, with its article. */ one: string; kind: string; find: string; about: string }> = {
+  'base-metals': { title: 'Base metals', one: 'a base metal', kind: 'Base metal', find: 'Grade, UNS, P-Number or group', about: 'Grades with their P-Numbers and groups. What a source does not list is shown as not listed, and two grades not listed are never taken for alike.' },
+  'filler-metals': { title: 'Filler metals', one: 'a filler metal', kind: 'Filler metal', find: 'Classification, specification or F-Number', about: 'Classifications with their F- and A-Numbers.' },
+  gases: { title: 'Gases', one: 'a gas', kind: 'Shielding gas', find: 'Mixture, ISO 14175 symbol or use', about: 'Usual mixtures by volume, and the classes they fall in.' },
+  positions: { title: 'Positions', one: 'a position', kind: 'Welding position', find: '3G, PF, overhead', about: 'Test positions as ASME and AWS write them beside ISO 6947.' },
+  processes: { title: 'Processes', one: 'a process', kind: 'Welding process', find: 'GMAW, 135, TIG', about: 'AWS letters beside ISO 4063 numbers.' },
 }
 
 const stress = (mpa: number | null, system: UnitSystem) => (mpa === null ? null : `${formatNumber(mpa, 'stress', SHOWN_UNIT[system].stress)} ${SHOWN_UNIT[system].stress}`)
 const percent = (value: number | null) => (value === null ? null : `${value} %`)
 const listed = (values: readonly (string | number)[], between = ', ') => (values.length === 0 ? null : values.join(between))
-const doubt = (value: string | number | null, basis: string | null): ReactNode | null => (value === null ? null : basis === 'memory' ? <>{value} <span className="text-sm text-straw-deep">from memory</span></> : value)
-
 /** Every fact of a row in the order of the panel; the first `shown` of them are the list's columns. */
 export function factsOf({ kind, content }: Pick<LibraryItem, 'kind' | 'content'>, system: UnitSystem): { shown: Fact[]; more: Fact[] } {
   switch (kind) {
@@ -34,15 +36,15 @@ export function factsOf({ kind, content }: Pick<LibraryItem, 'kind' | 'content'>
       return {
         shown: [
           { label: 'Product form', value: row.product_form },
-          { label: 'P-Number', value: doubt(row.p_no, row.p_no_basis) },
-          { label: 'Group', value: doubt(row.group_no, row.group_no_basis) },
-          { label: 'ISO 15608', value: doubt(row.iso_15608_subgroup ?? row.iso_15608_group, row.iso_15608_basis) },
+          { label: 'P-Number', value: row.p_no, basis: row.p_no_basis },
+          { label: 'Group', value: row.group_no, basis: row.group_no_basis },
+          { label: 'ISO 15608', value: row.iso_15608_subgroup ?? row.iso_15608_group, basis: row.iso_15608_basis },
           { label: 'UNS or EN', value: row.uns_or_en_number },
-          { label: 'Tensile, min.', value: stress(row.min_tensile_mpa, system) },
+          { label: 'Tensile, min.', value: stress(row.min_tensile_mpa, system), basis: row.properties_basis, quiet: true },
         ],
         more: [
-          { label: 'Yield, min.', value: stress(row.min_yield_mpa, system) },
-          { label: 'Elongation, min.', value: percent(row.min_elongation_pct) },
+          { label: 'Yield, min.', value: stress(row.min_yield_mpa, system), basis: row.properties_basis, quiet: true },
+          { label: 'Elongation, min.', value: percent(row.min_elongation_pct), basis: row.properties_basis, quiet: true },
           { label: 'AWS D1.1 group', value: row.aws_d1_1_group },
           { label: 'AWS D1.2 M-Number', value: row.aws_d1_2_m_no },
           { label: 'Composition', value: row.nominal_composition },
@@ -58,15 +60,15 @@ export function factsOf({ kind, content }: Pick<LibraryItem, 'kind' | 'content'>
         shown: [
           { label: 'Specification', value: row.spec },
           { label: 'F-Number', value: row.f_no },
-          { label: 'A-Number', value: doubt(row.a_no, row.a_no_basis) },
+          { label: 'A-Number', value: row.a_no, basis: row.a_no_basis },
           { label: 'Processes', value: listed(row.processes) },
           { label: 'Composition', value: row.nominal_composition },
-          { label: 'Tensile, min.', value: stress(row.min_tensile_mpa, system) },
+          { label: 'Tensile, min.', value: stress(row.min_tensile_mpa, system), basis: row.properties_basis, quiet: true },
         ],
         more: [
-          { label: 'Yield, min.', value: stress(row.min_yield_mpa, system) },
-          { label: 'Elongation, min.', value: percent(row.min_elongation_pct) },
-          { label: 'UNS', value: row.uns },
+          { label: 'Yield, min.', value: stress(row.min_yield_mpa, system), basis: row.properties_basis, quiet: true },
+          { label: 'Elongation, min.', value: percent(row.min_elongation_pct), basis: row.properties_basis, quiet: true },
+          { label: 'UNS', value: row.uns, basis: row.uns_basis },
           { label: 'ISO 9606 filler group', value: row.iso_9606_filler_group },
           { label: 'Hydrogen', value: row.hydrogen_designator },
           { label: 'Current', value: listed(row.current_types) },
@@ -109,7 +111,7 @@ export function factsOf({ kind, content }: Pick<LibraryItem, 'kind' | 'content'>
         shown: [
           { label: 'Name', value: row.name },
           { label: 'ISO 4063', value: listed(row.iso_4063.map(({ no }) => no)) },
-          { label: 'Thermal efficiency k', value: doubt(row.thermal_efficiency_k, row.k_basis) },
+          { label: 'Thermal efficiency k', value: row.thermal_efficiency_k, basis: row.k_basis },
         ],
         more: [
           { label: 'Numbers', value: row.iso_4063.length === 0 ? null : row.iso_4063.map(({ no, what }) => <span key={no} className="block">{no} <span className="text-soft">{what}</span></span>) },
@@ -122,10 +124,25 @@ export function factsOf({ kind, content }: Pick<LibraryItem, 'kind' | 'content'>
   }
 }
 
-export const BASIS_WORD: Record<string, string> = { read: 'read', secondary: 'secondary', memory: 'from memory', 'common-practice': 'common practice', own: 'own' }
+export const BASIS_WORD: Record<string, string> = { read: 'read', secondary: 'secondary', memory: 'from memory', 'common-practice': 'common practice', derived: 'derived', own: 'own' }
 export const BASIS_SENTENCE: Record<string, string> = {
   read: 'Read in the published text.',
   secondary: 'From a secondary source: check it in your edition.',
   memory: 'From memory: confirm it in your edition before a decision rests on it.',
   'common-practice': 'Common practice, not a figure of a standard.',
+  own: 'Written by your own organization: it stands for its figures.',
 }
+
+/** What is listed, or plainly that nothing is; two that are not listed are never equal. */
+export const Said = ({ value }: { value: Fact['value'] }) => (value === null || value === '' ? <span className="text-soft">not listed</span> : <>{value}</>)
+
+/** Basis of a figure in a word; memory is marked. */
+export const BasisWord = ({ basis }: { basis: string | null | undefined }) => (basis ? <span className={basis === 'memory' ? 'text-straw-deep' : 'text-soft'}>{BASIS_WORD[basis] ?? basis}</span> : null)
+
+/** A fact in a list: the figure, and that it is from memory where it is. */
+export const Listed = ({ fact: { value, basis, quiet } = { label: '', value: null } }: { fact: Fact | undefined }) => (
+  <>
+    <Said value={value} />
+    {value !== null && basis === 'memory' && !quiet && <span className="text-sm text-straw-deep"> from memory</span>}
+  </>
+)
