@@ -38,13 +38,13 @@ const box = (x0: number, y0: number, x1: number, y1: number): Polygon => [{ x: x
 function checkMembers(joint: Joint, thickness: number | null, thicknessB: number | null, thicknessBGiven: Interval | null, system: UnitSystem, remarks: Remarks): void {
   const words = writerFor(system)
   if (joint.type === 'butt' || joint.type === 'edge') remarks.refuse('joint.type', `A fillet weld needs two faces at an angle; choose a tee, corner or lap joint instead of ${joint.type === 'edge' ? 'an edge' : 'a butt'} joint.`)
-  if (thickness === null || thicknessB === null) remarks.refuse('thickness', 'The base metal thickness is not given.')
+  if (thickness === null || thicknessB === null) remarks.lack('thickness', 'The base metal thickness is not given.')
   else if (thickness <= 0 || thicknessB <= 0) remarks.refuse(thickness <= 0 ? 'thickness' : 'thicknessB', 'The base metal thickness must be above 0.')
   const leg = drawnValue(joint.filletLeg)
   const gap = drawnValue(joint.rootOpening) ?? 0
   const legB = drawnValue(joint.filletLegB) ?? leg
   remarks.notNegative('joint.rootOpening', 'A gap', gap, words)
-  if (leg === null) remarks.refuse('joint.filletLeg', 'The fillet leg is not given.')
+  if (leg === null) remarks.lack('joint.filletLeg', 'The fillet leg is not given.')
   else if (leg <= 0) remarks.refuse('joint.filletLeg', `A fillet leg of ${words.length(leg)} is no weld; it must be above 0.`)
   if (leg !== null && legB !== null && legB !== leg && legB <= 0) remarks.refuse('joint.filletLegB', `A leg of ${words.length(legB)} on B is no weld; it must be above 0.`)
   if (leg !== null && leg > 0 && legB !== null && legB > 0) {

@@ -14,7 +14,7 @@ export function drawnValue(interval: Interval | null | undefined): number | null
 }
 
 /** What can't be, in one sentence, at the field of the weld's variables where it is mended. */
-export interface Problem { path: string; sentence: string }
+export interface Problem { path: string; sentence: string; /** A figure that is not given yet, rather than one that can't be. */ lacking?: true }
 
 /** Gathers what is impossible and what is taken. */
 export class Remarks {
@@ -22,6 +22,10 @@ export class Remarks {
   readonly assumed: string[] = []
   refuse(path: string, sentence: string): void {
     this.problems.push({ path, sentence })
+  }
+  /** Refuses because a figure is not given. */
+  lack(path: string, sentence: string): void {
+    this.problems.push({ path, sentence, lacking: true })
   }
   take(sentence: string): void {
     this.assumed.push(sentence)
@@ -60,7 +64,7 @@ function checkAngle(joint: Joint, type: GrooveType, bevel: number | null, words:
   if (!hasAngle(type)) return
   const field = angleField(type)
   const included = drawnValue(joint.includedAngle)
-  if (bevel === null) remarks.refuse(field, bothEdgesPrepared(type) ? 'The included angle is not given.' : 'The bevel angle is not given.')
+  if (bevel === null) remarks.lack(field, bothEdgesPrepared(type) ? 'The included angle is not given.' : 'The bevel angle is not given.')
   else if (included !== null && included >= 180) remarks.refuse('joint.includedAngle', `An included angle of ${words.angle(included)} leaves no plate; it must be below 180°.`)
   else if (bevel >= 90) remarks.refuse('joint.bevelAngle', `A bevel angle of ${words.angle(bevel)} leaves no plate; it must be below 90°.`)
   else if (bevel < 0 || (bevel === 0 && !hasRadius(type))) remarks.refuse(field, `An angle of ${words.angle(bevel)} is no bevel; give an angle above 0°, or choose a square groove.`)
@@ -168,21 +172,22 @@ export function grooveFigures(joint: Joint, thickness: number | null, system: Un
   const type = joint.groove
   const answer = (figures: GrooveFigures | null): FiguresReading => ({ figures: remarks.problems.length > 0 ? null : figures, problems: remarks.problems, assumed: remarks.assumed })
   if (!type) {
-    remarks.refuse('joint.groove', 'The groove type is not given.')
+    remarks.lack('joint.groove', 'The groove type is not given.')
     return answer(null)
   }
-  if (thickness === null && !isFlare(type)) remarks.refuse('thickness', 'The base metal thickness is not given.')
+  if (thickness === null && !isFlare(type)) remarks.lack('thickness', 'The base metal thickness is not given.')
   else if (thickness !== null && thickness <= 0) remarks.refuse('thickness', `A base metal thickness of ${words.length(thickness)} can't be welded; it must be above 0.`)
   const bevel = bevelOf(joint, type)
   checkAngle(joint, type, bevel, words, remarks)
   const radius = drawnValue(joint.rootRadius)
-  if (hasRadius(type) && (radius === null || radius <= 0)) remarks.refuse('joint.rootRadius', isFlare(type) ? 'The outside radius of the rounded member (root radius) is not given.' : 'The root radius is not given.')
+  if (hasRadius(type) && radius === null) remarks.lack('joint.rootRadius', isFlare(type) ? 'The outside radius of the rounded member (root radius) is not given.' : 'The root radius is not given.')
+  else if (hasRadius(type) && radius !== null && radius <= 0) remarks.refuse('joint.rootRadius', `A root radius of ${words.length(radius)} is none; it must be above 0.`)
   const opening = drawnValue(joint.rootOpening)
   if (opening === null) remarks.take('The root opening is not given; the joint is drawn closed.')
   remarks.notNegative('joint.rootOpening', 'A root opening', opening, words)
   checkType(joint, type, remarks)
   const depth = joint.type === 'edge' ? drawnValue(joint.grooveDepth) : thickness
-  if (joint.type === 'edge' && depth === null && !isFlare(type)) remarks.refuse('joint.grooveDepth', 'The groove depth is not given; of an edge joint it is the depth of the weld.')
+  if (joint.type === 'edge' && depth === null && !isFlare(type)) remarks.lack('joint.grooveDepth', 'The groove depth is not given; of an edge joint it is the depth of the weld.')
   else if (joint.type === 'edge' && depth !== null && depth <= 0) remarks.refuse('joint.grooveDepth', `A groove depth of ${words.length(depth)} is no groove; it must be above 0.`)
   if (depth === null || depth <= 0) return answer(isFlare(type) && thickness === null ? { thickness: radius ?? 0, rootOpening: opening ?? 0, rootFace: 0, bevelAngle: bevel, upperBevelAngle: null, rootRadius: radius } : null)
   const plain = type === 'square' || isFlare(type) || joint.type === 'edge'

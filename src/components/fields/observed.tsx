@@ -23,10 +23,12 @@ function shownText(value: Interval | null, dimension: Dimension, system: UnitSys
 export interface ObservedFieldProps extends Measured {
   value: Interval | null
   onChange: (value: Interval | null) => void
+  /** Told at each key what the box would be read as; a text that can't be read yet is passed over. */
+  onTyping?: (value: Interval | null) => void
 }
 
 /** A value as it was measured: one box, read when it is left. One figure is both ends; a spread is typed as `18-22`. */
-export function ObservedField({ value, onChange, dimension, system, onUnread, error, description, label, labelHidden, optional, className, id, ...input }: ObservedFieldProps) {
+export function ObservedField({ value, onChange, dimension, system, onUnread, error, description, label, labelHidden, optional, className, id, onTyping, ...input }: ObservedFieldProps) {
   const shown = shownText(value, dimension, system)
   const [text, setText] = useState(shown)
   const [seen, setSeen] = useState(keyOf(value))
@@ -60,11 +62,18 @@ export function ObservedField({ value, onChange, dimension, system, onUnread, er
     const reading = parseInterval(text, dimension, system)
     if (reading.ok && !reading.interval.all) read()
   })
+  const type = (next: string) => {
+    setText(next)
+    if (!onTyping) return
+    const reading = next.trim() === '' ? null : parseInterval(next, dimension, system)
+    if (reading === null) onTyping(null)
+    else if (reading.ok && !reading.interval.all) onTyping(reading.interval)
+  }
   const other = [value?.min, value?.max].some((end) => end && end.unit !== SHOWN_UNIT[system][dimension])
   const converted = value && other ? `= ${formatInterval(value, dimension, system, { asTyped: false }).text}` : null
   return (
     <Field {...{ label, labelHidden, optional, className, id }} error={unread ?? error ?? null} description={converted ?? description}>
-      {(ids) => <input {...input} {...ids} inputMode="text" autoComplete="off" className="box" value={text} onChange={(event) => setText(event.target.value)} onBlur={read} onKeyDown={(event) => event.key === 'Enter' && read()} />}
+      {(ids) => <input {...input} {...ids} inputMode="text" autoComplete="off" className="box" value={text} onChange={(event) => type(event.target.value)} onBlur={read} onKeyDown={(event) => event.key === 'Enter' && read()} />}
     </Field>
   )
 }

@@ -104,13 +104,15 @@ export interface IntervalFieldProps extends Measured {
   allowAll?: boolean
   /** What "all" means, shown beside it: "plate and pipe". */
   allMeans?: string
+  /** Told at each key what the boxes would be read as; a text that can't be read yet is passed over. */
+  onTyping?: (value: Interval | null) => void
 }
 
 const none: Interval = { min: null, max: null, all: false }
 const intervalKey = (value: Interval | null): string => `${key(value?.min ?? null)}|${key(value?.max ?? null)}|${value?.all ? 'all' : ''}`
 
 /** From and to, in two boxes. `18-22` typed in the first fills both; `all` covers every size where allowed. */
-export function IntervalField({ value, onChange, dimension, system, onUnread, error, description, allowAll = false, allMeans, label, labelHidden, optional, className = '', id: given, ...input }: IntervalFieldProps) {
+export function IntervalField({ value, onChange, dimension, system, onUnread, error, description, allowAll = false, allMeans, onTyping, label, labelHidden, optional, className = '', id: given, ...input }: IntervalFieldProps) {
   const own = useId()
   const id = given ?? own
   const shown = value ?? none
@@ -151,20 +153,30 @@ export function IntervalField({ value, onChange, dimension, system, onUnread, er
     keep(both.interval, textsOf(both.interval, dimension, system))
   }
 
+  /** What both boxes would be read as; undefined where one can't be read yet. */
+  const reading = (at: [string, string]): Interval | undefined => {
+    const was = textsOf(shown, dimension, system)
+    const end = (side: 0 | 1): Quantity | null | undefined => {
+      const text = at[side].trim()
+      // An end that nobody touched stays what it is, in whatever unit it was typed.
+      if (at[side] === was[side]) return side === 0 ? shown.min : shown.max
+      const read = text === '' ? null : parseQuantity(text, dimension, system)
+      return read?.ok ? read.quantity : undefined
+    }
+    const [min, max] = [end(0), end(1)]
+    return min === undefined || max === undefined || (min && max && min.si > max.si) ? undefined : { min, max, all: false }
+  }
   useRested(texts.join(' | '), () => {
     const was = textsOf(shown, dimension, system)
     if (shown.all || (texts[0] === was[0] && texts[1] === was[1])) return
-    const end = (side: 0 | 1): Quantity | null | undefined => {
-      const text = texts[side].trim()
-      // An end that nobody touched stays what it is, in whatever unit it was typed.
-      if (texts[side] === was[side]) return side === 0 ? shown.min : shown.max
-      const reading = text === '' ? null : parseQuantity(text, dimension, system)
-      return reading?.ok ? reading.quantity : undefined
-    }
-    const [min, max] = [end(0), end(1)]
-    if (min === undefined || max === undefined || (min && max && min.si > max.si)) return
-    keep({ min, max, all: false }, texts)
+    const next = reading(texts)
+    if (next) keep(next, texts)
   })
+  const type = (at: [string, string]) => {
+    setTexts(at)
+    const next = onTyping && !shown.all ? reading(at) : undefined
+    if (next) onTyping?.(next.min || next.max ? next : null)
+  }
 
   const message = unread[0] ?? unread[1] ?? error ?? null
   const note = [converted(shown.min, dimension, system), converted(shown.max, dimension, system)].filter((part) => part !== null).join(' to ').replace('to = ', 'to ')
@@ -180,7 +192,7 @@ export function IntervalField({ value, onChange, dimension, system, onUnread, er
       autoComplete="off"
       className="box"
       value={texts[side]}
-      onChange={(event) => setTexts(side === 0 ? [event.target.value, texts[1]] : [texts[0], event.target.value])}
+      onChange={(event) => type(side === 0 ? [event.target.value, texts[1]] : [texts[0], event.target.value])}
       onBlur={() => read(side)}
       onKeyDown={(event) => event.key === 'Enter' && read(side)}
     />

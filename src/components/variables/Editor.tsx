@@ -5,6 +5,7 @@ import { parseQuantity } from '@shared/units/parse.ts'
 import type { Dimension, UnitSystem } from '@shared/units/types.ts'
 import { useState } from 'react'
 import { ObservedField } from '@/components/fields/observed.tsx'
+import { useJointField } from '@/components/joint/live.tsx'
 import { IntervalField, QuantityField } from '@/components/fields/quantity.tsx'
 import { Select, TagPicker, TextArea, TextField } from '@/components/fields/text.tsx'
 import type { PairOf, RowSpec } from './row-spec.ts'
@@ -82,8 +83,14 @@ function HalfEditor({ of, path, label }: { of: PairOf; path: string; label: stri
 function IntervalEditor({ spec, path, label }: { spec: Of<'interval'>; path: string; label: string }) {
   const { system, record } = useSheet()
   const { value, set, error } = useSheetField<Interval | null>(`variables.${path}`)
-  if (record === 'coupon') return <ObservedField id={inputId(path)} className="sm:max-w-52" label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} />
-  return <IntervalField id={inputId(path)} label={label} labelHidden dimension={spec.dimension} system={system} value={value} onChange={set} error={error} allowAll={spec.allMeans !== undefined} allMeans={spec.allMeans} />
+  const joint = useJointField(path)
+  const shown = joint.dragged ? joint.dragged.value : value
+  const shared = { id: inputId(path), label, labelHidden: true, dimension: spec.dimension, system, value: shown, onChange: set, error: error ?? joint.problem, onTyping: joint.typing }
+  return (
+    <div className={`rounded ${joint.hot ? 'outline-2 outline-offset-2 outline-steel' : ''}`} onFocus={joint.enter} onBlur={joint.leave}>
+      {record === 'coupon' ? <ObservedField {...shared} className="sm:max-w-52" /> : <IntervalField {...shared} allowAll={spec.allMeans !== undefined} allMeans={spec.allMeans} />}
+    </div>
+  )
 }
 
 function QuantityEditor({ dimension, path, label }: { dimension: Dimension; path: string; label: string }) {
@@ -94,7 +101,8 @@ function QuantityEditor({ dimension, path, label }: { dimension: Dimension; path
 
 function ChoiceEditor({ spec, path, label }: { spec: Of<'choice'>; path: string; label: string }) {
   const { value, set, error, onBlur } = useSheetField<string | null>(`variables.${path}`)
-  return <Select id={inputId(path)} label={label} labelHidden options={spec.options} {...(spec.always ? {} : { empty: spec.none ?? 'Not stated' })} value={value ?? ''} onChange={(event) => set(orNull(event.target.value))} onBlur={onBlur} error={error} />
+  const { problem } = useJointField(path)
+  return <Select id={inputId(path)} label={label} labelHidden options={spec.options} {...(spec.always ? {} : { empty: spec.none ?? 'Not stated' })} value={value ?? ''} onChange={(event) => set(orNull(event.target.value))} onBlur={onBlur} error={error ?? problem} />
 }
 
 const YES_NO = [

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react'
 import { APPLICATION, BASE_METALS, PREHEAT, PWHT, WRITTEN_IN } from '@/components/variables/catalogue.ts'
 import { inputId, useSheet, useSheetField } from '@/components/variables/context.ts'
+import { JointLiveProvider } from '@/components/joint/live.tsx'
 import { JointSheet } from '@/components/variables/JointSheet.tsx'
 import { metalInWords } from '@/components/variables/labels.ts'
 import { choiceInWords } from '@/components/variables/options.ts'
@@ -46,7 +47,7 @@ export function WeldedSheets() {
   const { standards, baseMetals, processes } = content.variables
   const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
   return (
-    <>
+    <JointLiveProvider>
       <Sheet id="record" title="As welded" aside={standards.map(choiceInWords).join('; ')}>
         <Rows rows={RECORD} />
         <SheetRow label="Standards" unit="tested to each">
@@ -64,7 +65,7 @@ export function WeldedSheets() {
       <ProcessSheets blocks={processes} omit={OMIT} />
       <SectionSheet section={PREHEAT} />
       <SectionSheet section={PWHT} />
-    </>
+    </JointLiveProvider>
   )
 }
 

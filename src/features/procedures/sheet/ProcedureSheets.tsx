@@ -5,6 +5,7 @@ import type { Verdict } from '@shared/schemas/assessment.ts'
 import { APPLICATION, BASE_METALS, BLOCK_SECTIONS, blockSectionId, PREHEAT, PWHT } from '@/components/variables/catalogue.ts'
 import { useSheet } from '@/components/variables/context.ts'
 import { CouponsSheet } from './CouponsSheet.tsx'
+import { JointLiveProvider } from '@/components/joint/live.tsx'
 import { JointSheet } from '@/components/variables/JointSheet.tsx'
 import { metalInWords } from '@/components/variables/labels.ts'
 import { ProcessSheets, type ProcessSheetsProps } from '@/components/variables/ProcessSheets.tsx'
@@ -19,7 +20,7 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
   const { baseMetals, processes } = content.variables
   const metals = [baseMetals.a, baseMetals.b].map(metalInWords).filter(Boolean)
   return (
-    <>
+    <JointLiveProvider>
       <JointSheet />
       <Sheet id="base-metals" title="Base metals" aside={metals.join(' to ') || undefined}>
         {BASE_METALS.rows.map((spec) => (
@@ -39,7 +40,7 @@ export function ProcedureSheets(acts: Omit<ProcessSheetsProps, 'blocks'>) {
           </SheetRow>
         </Sheet>
       )}
-    </>
+    </JointLiveProvider>
   )
 }
 
