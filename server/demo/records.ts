@@ -9,6 +9,7 @@ import { handrail6063, handrail6063Coupon, hull5083, platform6061, platform6061C
 import { stainless304, stainless304Coupon, stainless316, stainless316Coupon } from './content/stainless.ts'
 import { frameD11, frameD11Coupon, gangwayD12, gangwayD12Coupon, skidIso, skidIsoCoupon } from './content/codes.ts'
 import { fcawPlate, fcawPlateCoupon, gmawPlate, gmawPlateCoupon, pipe, pipeCoupon, smawPlate, smawPlateCoupon } from './content/steel.ts'
+import { recordHeats } from './heats.ts'
 import { demoJobs } from './jobs.ts'
 import { demoMachines } from './machines.ts'
 import { makeTrials } from './trials.ts'
@@ -20,6 +21,7 @@ export async function makeRecords(firm: Firm): Promise<void> {
   await firm.act(async (tenant) => {
     for (const machine of demoMachines(await databaseDay(tenant))) machineIds.push((await createMachine(tenant, machine)).id)
   })
+  await recordHeats(firm)
 
   const approved = new Map<string, string>()
   const release = async (revision: ProcedureRevision, reason: string | null = null): Promise<ProcedureRevision> => {

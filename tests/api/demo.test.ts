@@ -13,7 +13,9 @@ import { ROLES } from '../../shared/schemas/people.ts'
 import { beadFigures } from '../../shared/trials/bead-figures.ts'
 import { proposeRanges } from '../../shared/trials/propose-ranges.ts'
 import type { Trial, TrialRow } from '../../shared/schemas/trials.ts'
-import type { Coupon, CouponRow, Job, JobRow, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
+import { heatFigures } from '../../shared/library/heat-figures.ts'
+import type { Heat, HeatRow } from '../../shared/schemas/heats.ts'
+import type { Coupon, CouponRow, Job, JobRow, LibraryItem, LookupResult, ProcedureRecord, ProcedureRow, Revision } from '../../shared/schemas/records.ts'
 import { startApp, type Agent, type TestApp } from './harness.ts'
 
 let app: TestApp
@@ -190,5 +192,30 @@ describe('the demo firm', () => {
     const set = { tone: 'steel', seed: 3, layers: 5, tested: true } as const
     const [one, other] = [await picturesOf(set), await picturesOf(set)]
     expect(one.map(({ jpeg }) => jpeg.toString('base64'))).toEqual(other.map(({ jpeg }) => jpeg.toString('base64')))
+  })
+})
+
+describe('the demo firm’s library', () => {
+  it('has heats and lots with their certificates, named by its coupons, and figures that follow from them', async () => {
+    const { items, total } = await get<Page<HeatRow>>('heats?sort=number&limit=50')
+    expect(total).toBe(8)
+    expect(items.every(({ files }) => files === 1)).toBe(true)
+    const plate = items.find(({ number }) => number === 'K4471')
+    const heat = await get<Heat>(`heats/${plate?.id}`)
+    expect(heat.namedBy.map(({ number }) => number)).toContain('PQR-001')
+    const file = await engineer.get(`/api/heat-files/${heat.files[0]?.id}`).expect(200)
+    expect(Buffer.from(file.body as Buffer).subarray(0, 5).toString()).toBe('%PDF-')
+    const readings = (number: string) => Object.fromEntries(heatFigures(items.find((row) => row.number === number) ?? heat.content).figures.map(({ id, reading }) => [id, reading]))
+    // 0.19 + 1.14/6 + (0.06 + 0.02 + 0.003)/5 + (0.08 + 0.11)/15
+    expect(readings('K4471').ceIiw).toBe('0.409')
+    expect(readings('26-E7018-114').aNumber).toBe('1')
+    expect(Number(readings('308-77193').ferriteNumber)).toBeGreaterThan(4)
+    expect(readings('AM5-20611')).toEqual({})
+  })
+
+  it('has one grade of its own, first in the list', async () => {
+    const { items } = await get<Page<LibraryItem>>('library/base-metals?limit=2')
+    expect(items.map(({ origin }) => origin)).toEqual(['own', 'reference'])
+    expect(items[0]?.title).toBe('LF-MS-014 Wear plate 400')
   })
 })
