@@ -99,7 +99,7 @@ function grooveHandles({ joint, thickness, thicknessB }: JointSetting, geometry:
   }
   const rootY = Math.max(foot, profile.gouge)
   const tight = figures.rootOpening
-  handles.push({ kind: 'root-opening', path: 'joint.rootOpening', label: 'Root opening', dimension: 'length', at: { x: tight / 2, y: rootY }, value: tight, min: 0, max: 50, axis: 'x', read: ({ x }) => 2 * x })
+  handles.push({ kind: 'root-opening', path: 'joint.rootOpening', label: 'Root opening', dimension: 'length', at: { x: -tight / 2, y: rootY }, value: tight, min: 0, max: 50, axis: 'x', read: ({ x }) => -2 * x })
   if (type !== 'square' && !isFlare(type) && !edge) {
     const depth = (joint.rootFace === null && (joint.grooveDepth ?? null) !== null)
     const right = offsetAt(profile.right, start)

@@ -133,7 +133,7 @@ function place(dimension: JointDimension, view: View, { has, row }: Company): Pl
   }
   if (kind === 'root-face') {
     const middle = { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 }
-    const [x, y] = [middle.x + 40, Math.min(view.box.bottom + 18, middle.y + 90)]
+    const [x, y] = [middle.x + 40, Math.min(view.box.bottom + 18, middle.y + 170)]
     return { path: `M${p(middle)}L${round(x)} ${round(y)}H${round(x + 6)}`, heads: head(middle, Math.atan2(middle.y - y, middle.x - x)), text: { x: x + 10, y: y + 5, anchor: 'start', words: text } }
   }
   const [dx, dy] = [Math.abs(to.x - from.x), Math.abs(to.y - from.y)]

@@ -63,8 +63,8 @@ export function JointDesigner({ control, system, sequence }: { control: Control<
 
   return (
     <>
-      <figure className="grid border-b border-rule bg-sheet sm:grid-cols-[minmax(0,1fr)_12.5rem]">
-        <div className="relative min-w-0 px-2 py-2">
+      <figure className="grid border-b border-rule bg-sheet [@media(min-height:800px)_and_(min-width:1024px)]:sticky [@media(min-height:800px)_and_(min-width:1024px)]:top-0 [@media(min-height:800px)_and_(min-width:1024px)]:z-10 sm:grid-cols-[minmax(0,1fr)_12.5rem]">
+        <div className="relative min-h-56 min-w-0 px-2 py-2 sm:min-h-80">
           <div ref={frame} className="min-w-0">
             {picture ? (
               <JointStage geometry={geometry} picture={picture} handles={handles} system={system} hot={hot} hotPass={hotPass} onHot={store.setHot} onMove={(handle, value) => edit.show(handle.path, movedInterval(kept(handle.path), value, handle.dimension, system))} onSettle={edit.settle} onEdit={open} />
@@ -93,7 +93,7 @@ export function JointDesigner({ control, system, sequence }: { control: Control<
             </div>
           )}
           {geometry.assumed.length > 0 && picture && <p className="px-2 pb-1 text-xs text-soft">Drawn with what the record leaves open: {geometry.assumed.join(' ')}</p>}
-          <p className="no-print px-2 text-xs text-soft">Drag a handle, or move it with the arrow keys. A click on a figure, or Enter on its handle, writes it.</p>
+          {picture && <p className="no-print px-2 text-xs text-soft">Drag a handle, or move it with the arrow keys. A click on a figure, or Enter on its handle, writes it.</p>}
         </div>
         <figcaption className="border-hair px-4 py-3 max-sm:border-t sm:border-l">
           <JointFigures geometry={geometry} fillet={joint.weld === 'fillet'} system={system} />

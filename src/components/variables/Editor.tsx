@@ -87,7 +87,7 @@ function IntervalEditor({ spec, path, label }: { spec: Of<'interval'>; path: str
   const shown = joint.dragged ? joint.dragged.value : value
   const shared = { id: inputId(path), label, labelHidden: true, dimension: spec.dimension, system, value: shown, onChange: set, error: error ?? joint.problem, onTyping: joint.typing }
   return (
-    <div className={`rounded ${joint.hot ? 'outline-2 outline-offset-2 outline-steel' : ''}`} onFocus={joint.enter} onBlur={joint.leave}>
+    <div className={`rounded ${joint.hot ? 'outline-offset-2 outline-steel not-focus-within:outline-2' : ''}`} onFocus={joint.enter} onBlur={joint.leave}>
       {record === 'coupon' ? <ObservedField {...shared} className="sm:max-w-52" /> : <IntervalField {...shared} allowAll={spec.allMeans !== undefined} allMeans={spec.allMeans} />}
     </div>
   )

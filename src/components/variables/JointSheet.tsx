@@ -7,6 +7,7 @@ import { Sheet } from '@/components/Sheet.tsx'
 import { JOINT } from './catalogue.ts'
 import { useSheet } from './context.ts'
 import { BACKINGS, GROOVES, WELDS, wordOf } from './options.ts'
+import { JointWork } from './RowWork.tsx'
 import { SheetField } from './SheetField.tsx'
 
 /** The joint, drawn as it is typed and to be changed at the drawing, with what follows from its figures, then its rows. */
@@ -18,9 +19,13 @@ export function JointSheet() {
   return (
     <Sheet id="joint" title="Joint" aside={`${shape}${backing}`}>
       {control ? <JointDesigner control={control} system={system} sequence={record !== 'coupon'} /> : <ReadJoint />}
-      {JOINT.rows.map((spec) => (
-        <SheetField key={spec.path} spec={spec} />
-      ))}
+      <JointWork />
+      {/* The drawing stays in sight on a desk: what has the focus must not lie under it. */}
+      <div className={control ? '[@media(min-height:800px)_and_(min-width:1024px)]:[&_:is(input,select,textarea,button)]:scroll-mt-112' : ''}>
+        {JOINT.rows.map((spec) => (
+          <SheetField key={spec.path} spec={spec} />
+        ))}
+      </div>
     </Sheet>
   )
 }
