@@ -19,9 +19,10 @@ const DIGITS = 4
 /** A quantity as a text that reads the same in either system: a bare decimal is in the storage unit. */
 export function quantityText({ typed, unit }: Quantity, dimension: Dimension): string {
   const text = typed.trim()
+  const figure = text.endsWith(unit) ? text.slice(0, -unit.length).trim() : text
+  if (unit === SI_UNIT[dimension] && PLAIN.test(figure)) return figure
   const bare = /^[\d\s.,/¼½¾⅛⅜⅝⅞⅓⅔-]+$/.test(text)
-  if (!bare) return text
-  return unit === SI_UNIT[dimension] && PLAIN.test(text) ? text : `${text} ${unit}`
+  return bare ? `${text} ${unit}` : text
 }
 
 /** What a person who reads `system` typed into an input, as the text to keep. What can't be read is kept as it is. */

@@ -33,6 +33,7 @@ export function FigureField({ input, value, onChange, system, problem, id, note,
   const [seen, setSeen] = useState(`${system} ${value}`)
   const rested = useDebounced(typed, REST)
   const [left, setLeft] = useState(true)
+  const [touched, setTouched] = useState(false)
   if (seen !== `${system} ${value}`) {
     setSeen(`${system} ${value}`)
     // Our own typing comes back as what is kept of it; only another text replaces it.
@@ -41,7 +42,9 @@ export function FigureField({ input, value, onChange, system, problem, id, note,
   if (input.kind === 'choice')
     return <Select id={id} className={className} label={input.label} options={input.options} value={value} onChange={(event) => onChange(event.target.value)} description={note ?? input.help} error={problem} />
   const unit = unitOf(input, system)
-  const said = left || rested === typed ? problem : null
+  // A box that nobody was in yet is open, not wrong; what it waits for is said with the result.
+  const open = typed.trim() === '' && !touched
+  const said = !open && (left || rested === typed) ? problem : null
   return (
     <Field id={id} className={className} label={input.label} optional={input.optional} error={said} description={<About converted={readAs(input, value, system)} note={note} help={input.help} />}>
       {(ids) => (
@@ -54,7 +57,10 @@ export function FigureField({ input, value, onChange, system, problem, id, note,
             style={{ paddingRight: `${unit.length * 0.5 + 1.25}rem` }}
             value={typed}
             onFocus={() => setLeft(false)}
-            onBlur={() => setLeft(true)}
+            onBlur={() => {
+              setLeft(true)
+              setTouched(true)
+            }}
             onChange={(event) => {
               setTyped(event.target.value)
               onChange(keptText(input, event.target.value, system))

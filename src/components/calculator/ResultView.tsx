@@ -18,7 +18,8 @@ export function ResultView({ calculator, result, texts, system, most }: ResultVi
   const [first, ...rest] = result.shown
   if (!first) return <Waiting calculator={calculator} result={result} texts={texts} />
   const { figure, unit } = readFigure(first, system)
-  const more = most === undefined ? rest : rest.slice(0, most)
+  const told = rest.filter(({ value }) => value !== null)
+  const more = most === undefined ? told : told.slice(0, most)
   return (
     <div className="space-y-3">
       <div aria-live="polite" aria-atomic="true">
@@ -37,7 +38,7 @@ export function ResultView({ calculator, result, texts, system, most }: ResultVi
               <div key={shown.key} className="flex flex-wrap items-baseline justify-between gap-x-4 py-1">
                 <dt>{shown.label}</dt>
                 <dd className="text-right font-semibold">
-                  {shown.value === null ? <span className="font-normal text-soft">not told</span> : read.figure} {shown.value !== null && read.unit && <span className="font-normal text-soft">{read.unit}</span>}
+                  {read.figure} {read.unit && <span className="font-normal text-soft">{read.unit}</span>}
                 </dd>
               </div>
             )

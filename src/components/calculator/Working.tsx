@@ -27,14 +27,14 @@ export function Working({ result, system }: { result: CalculatorResult; system: 
   )
 }
 
-/** Standard, edition and clause, and plainly on what it rests. */
-export function SourceLine({ source }: { source: Source }) {
+/** Standard, edition and clause, and plainly on what it rests; `brief` leaves the particulars out. */
+export function SourceLine({ source, brief = false }: { source: Source; brief?: boolean }) {
   const { standard, edition, clause, basis, note } = source
   return (
     <div>
       <p className="font-medium">{[edition ? `${standard} (${edition})` : standard, clause].filter(Boolean).join(', ')}</p>
       <p className={basis === 'memory' ? 'font-medium text-straw-deep' : 'text-soft'}>{BASIS_SENTENCE[basis]}</p>
-      {note && <p className="text-sm text-soft">{note}</p>}
+      {note && !brief && <p className="text-sm text-soft">{note}</p>}
     </div>
   )
 }

@@ -42,4 +42,4 @@ export function partedInputs(calculator: Calculator): { plain: [string, Calculat
 export const elementsOfGroup = (calculator: Calculator): boolean => partedInputs(calculator).groups.length > 0
 
 /** The key of an element's input in a group. */
-export const elementKey = (group: ElementGroup, symbol: string): string | null => group.elements.find((each) => each.symbol === symbol)?.key ?? null
+export const elementKey = (group: Pick<ElementGroup, 'elements'>, symbol: string): string | null => group.elements.find((each) => each.symbol === symbol)?.key ?? null

@@ -2,16 +2,18 @@ import { useId, useState } from 'react'
 import { Link } from 'react-router-dom'
 import { addressOfInputs, type Calculator } from '@shared/calculations/catalogue.ts'
 import { useOf, type Use } from '@shared/calculations/beside.ts'
-import { emptyTexts, type InputTexts } from '@shared/calculations/calculator-texts.ts'
+import { boxText, emptyTexts, readAs, type InputTexts } from '@shared/calculations/calculator-texts.ts'
 import { fromRecord, type CalculatorRecord, type FromRecord } from '@shared/calculations/from-record.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import { Button } from '@/components/Button.tsx'
 import { elementsOfGroup } from '@/components/calculator/element-groups.ts'
 import { problemsByInput } from '@/components/calculator/figures.ts'
 import { InputsForm } from '@/components/calculator/InputsForm.tsx'
+import { PasteBox } from '@/components/calculator/PasteBox.tsx'
 import { ResultView } from '@/components/calculator/ResultView.tsx'
 import { SourceLine, Working } from '@/components/calculator/Working.tsx'
 import { Select } from '@/components/fields/text.tsx'
+import { AnalysisEntry, readAnalysis } from './AnalysisEntry.tsx'
 import { useShopPrices } from './shop-prices.ts'
 import { useChemistries } from './use-chemistries.ts'
 
@@ -34,11 +36,12 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
   const calculator = calculators.find(({ id }) => id === chosen) ?? calculators[0]
   // What is typed is kept for each calculator while the panel is open; the rest follows the record.
   const [typed, setTyped] = useState<Readonly<Record<string, InputTexts>>>({})
+  const [analysis, setAnalysis] = useState<InputTexts>({})
   const prices = useShopPrices()
   const { variables } = record
   const { chemistries, analyses, choose } = useChemistries(variables, variables.processes[blockIndex ?? 0] ?? null, true)
   if (!calculator) return null
-  const filled = fromRecord(calculator.id, { ...record, chemistries }, blockIndex)
+  const filled = fromRecord(calculator.id, { ...record, chemistries: { ...chemistries, a: readAnalysis(analysis) ?? chemistries.a ?? null } }, blockIndex)
   const own = typed[calculator.id] ?? {}
   const texts = { ...emptyTexts(calculator), ...prices.of(calculator), ...textsOf(filled), ...own }
   const result = calculator.run(texts)
@@ -47,12 +50,13 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
     setTyped({ ...typed, [calculator.id]: { ...own, ...changes } })
     prices.keep(calculator, changes)
   }
-  const needsAnalysis = elementsOfGroup(calculator) || ['cet', 'pcm', 'ce'].some((key) => key in calculator.inputs)
+  const byEquivalent = ['cet', 'pcm', 'ce'].some((key) => key in calculator.inputs)
+  const needsAnalysis = elementsOfGroup(calculator) || byEquivalent
   return (
     <div className="space-y-3">
       <div className="flex flex-wrap items-end gap-x-4 gap-y-2 pr-9">
         {calculators.length > 1 ? (
-          <Select className="min-w-0 grow sm:max-w-96" label="Way" options={calculators.map(({ id, title }) => ({ value: id, label: title }))} value={calculator.id} onChange={(event) => setChosen(event.target.value)} />
+          <Select className="min-w-0 grow sm:max-w-96" label="Method" options={calculators.map(({ id, title }) => ({ value: id, label: title }))} value={calculator.id} onChange={(event) => setChosen(event.target.value)} />
         ) : (
           <p className="font-medium">{calculator.title}</p>
         )}
@@ -75,9 +79,15 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
         system={system}
         problems={problemsByInput(result)}
         idBase={base}
-        noteOf={(key) => <Origin filled={filled} changed={key in own} remembered={prices.remembers(key) && !(key in own) && Boolean(texts[key])} inputKey={key} of={of} />}
-        underGroup={(group) => <GroupOrigin filled={filled} keys={group.elements.map(({ key }) => key)} own={own} />}
+        noteOf={(key) => <Origin filled={filled} changed={key in own} remembered={prices.remembers(key) && !(key in own) && Boolean(texts[key])} inputKey={key} of={of} draftFigure={filled.taken[key] ? shownText(calculator, key, filled.taken[key].text, system) : null} />}
+        underGroup={(group) => (
+          <>
+            <GroupOrigin filled={filled} keys={group.elements.map(({ key }) => key)} own={own} />
+            <PasteBox group={group} onChange={change} />
+          </>
+        )}
       />
+      {byEquivalent && <AnalysisEntry texts={analysis} onChange={(changes) => setAnalysis({ ...analysis, ...changes })} idBase={base} />}
       {filled.said.map((sentence) => (
         <p key={sentence} className="text-sm text-soft">
           {sentence}
@@ -121,9 +131,17 @@ function usable(calculator: Calculator, { ends }: FromRecord, own: InputTexts, t
   return useOf(calculator.id, { single: calculator.run(texts) }, system, blockIndex)
 }
 
-function Origin({ filled, changed, remembered, inputKey, of }: { filled: FromRecord; changed: boolean; remembered: boolean; inputKey: string; of: string }) {
+/** A figure of the record as the reader would write it, with its unit. */
+function shownText({ inputs }: Calculator, key: string, text: string, system: UnitSystem): string {
+  const input = inputs[key]
+  if (!input) return text
+  if (input.kind === 'choice') return input.options.find(({ value }) => value === text)?.label ?? text
+  return (readAs(input, text, system) ?? `${boxText(input, text, system)}${input.unit ? ` ${input.unit}` : ''}`).replace(/^= /, '')
+}
+
+function Origin({ filled, changed, remembered, inputKey, of, draftFigure }: { filled: FromRecord; changed: boolean; remembered: boolean; inputKey: string; of: string; draftFigure: string | null }) {
   const taken = filled.taken[inputKey]
-  if (changed) return <span className="text-plum">Typed here{taken ? `; the ${of} has ${taken.text}` : ''}</span>
+  if (changed) return <span className="text-plum">Typed here{taken && !taken.assumed && draftFigure ? `; the ${of} has ${draftFigure}` : ''}</span>
   if (taken) return <span className={taken.assumed ? 'text-straw-deep' : ''}>{taken.assumed ? `Assumed: ${taken.from}` : `From the ${of}: ${taken.from}`}</span>
   if (remembered) return <span>Kept on this device</span>
   return filled.missing.includes(inputKey) ? <span className="text-straw-deep">Not in the {of}</span> : null

@@ -36,9 +36,11 @@ export function useChemistries({ baseMetals: { a, b } }: WeldingVariables, block
     { part: 'b', label: 'Analysis of metal B', libraryId: sameMetal ? null : b.libraryId, number: b.heatNumber },
     { part: 'filler', label: 'Analysis of the filler', libraryId: block?.filler.libraryId ?? null, number: block?.filler.lot ?? null },
   ]
-  const lists = useQueries({ queries: parts.map(({ libraryId }) => ({ ...query('listHeats', { query: { libraryId: libraryId ?? '', limit: 50 } }), enabled: enabled && may && libraryId !== null, staleTime: 60_000 })) })
-  const analyses = parts.flatMap(({ part, label, number }, index): Analyses[] => {
-    const heats = (lists[index]?.data?.items ?? []).filter(({ chemistry }) => chemistry.length > 0)
+  const ids = [...new Set(parts.map(({ libraryId }) => libraryId).filter((id) => id !== null))]
+  const lists = useQueries({ queries: (enabled && may ? ids : []).map((libraryId) => ({ ...query('listHeats', { query: { libraryId, limit: 50 } }), staleTime: 60_000 })) })
+  const listOf = (libraryId: string | null) => (libraryId === null ? [] : (lists[ids.indexOf(libraryId)]?.data?.items ?? []))
+  const analyses = parts.flatMap(({ part, label, libraryId, number }): Analyses[] => {
+    const heats = listOf(libraryId).filter(({ chemistry }) => chemistry.length > 0)
     const own = picked[part]
     return heats.length === 0 ? [] : [{ part, label, heats, chosen: own === undefined ? usual(heats, number) : (heats.find(({ id }) => id === own) ?? null) }]
   })

@@ -64,7 +64,7 @@ function Drawn({ plotted, points, tied }: { plotted: Plotted; points: readonly P
   const kept: number[] = []
   for (const { fn, high } of wrcDiagram.lines) {
     const last = wrcDiagram.lines.find((line) => line.fn === kept.at(-1))
-    if (NAMED.includes(fn) && (!last || Math.hypot(x(high[0]) - x(last.high[0]), y(high[1]) - y(last.high[1])) > (narrow ? 19 : 17))) kept.push(fn)
+    if (NAMED.includes(fn) && (!last || Math.hypot(x(high[0]) - x(last.high[0]), y(high[1]) - y(last.high[1])) > (narrow ? 24 : 21))) kept.push(fn)
   }
   const modes: [string, number, number][] = [['A', 17.6, 16.6], ['AF', 20.1, 15.2], ['FA', 21.2, 13.6], ['F', 25.5, 12]]
   return (

@@ -32,7 +32,7 @@ export function ExampleTable({ calculator, system, onFill }: { calculator: Calcu
             <Pair key={figure.key} label={figure.label} value={figureInWords(figure, system)} />
           ))}
         </dl>
-        <p className="text-sm text-soft">{calculator.example.from.replace(/calc-[a-z]-([a-z]+)-(\d+)/g, 'published case $1 $2')}</p>
+        <p className="text-sm text-pretty text-soft">{fromWhere(calculator.example.from)}</p>
         <Button className="no-print" onClick={onFill}>
           Fill in the example
         </Button>
@@ -42,6 +42,11 @@ export function ExampleTable({ calculator, system, onFill }: { calculator: Calcu
 }
 
 const MOST = 10
+/** Where the example is from, without the numbers by which the tests know their cases. */
+const fromWhere = (from: string): string => {
+  const said = from.replace(/calc-g-[a-z]+-\d+(?:(?:, | and )calc-g-[a-z]+-\d+)*/g, 'a worked case that is kept with the program')
+  return `${said.charAt(0).toUpperCase()}${said.slice(1)}${/[.!?]$/.test(said) ? '' : '.'}`
+}
 /** A text that carries its own unit keeps it. */
 const withUnit = (text: string, unit: string): string => (/^[\d.,-]+$/.test(text) && unit ? `${text} ${unit}` : text)
 

@@ -5,6 +5,7 @@ import { CALCULATOR_GROUPS, calculatorById, type Calculator } from '@shared/calc
 import { Button, ButtonLink } from '@/components/Button.tsx'
 import { problemsByInput } from '@/components/calculator/figures.ts'
 import { InputsForm } from '@/components/calculator/InputsForm.tsx'
+import { PasteBox } from '@/components/calculator/PasteBox.tsx'
 import { ResultView } from '@/components/calculator/ResultView.tsx'
 import { SourceLine, Working } from '@/components/calculator/Working.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
@@ -55,7 +56,7 @@ function Opened({ calculator }: { calculator: Calculator }) {
         kind={`Calculator · ${groupTitle}`}
         number={title}
         title={purpose}
-        cells={[{ label: 'Source', wide: true, children: <SourceLine source={source} /> }]}
+        cells={[{ label: 'Source', wide: true, children: <SourceLine brief source={source} /> }]}
       />
       <p className="no-print mt-3 flex flex-wrap gap-2">
         <Button icon={<Link2 size={15} aria-hidden="true" />} onClick={() => void copyLink(new URL(`/calculators/${calculator.id}?${address}`, window.location.origin).href)}>
@@ -68,7 +69,7 @@ function Opened({ calculator }: { calculator: Calculator }) {
         <div className="min-w-0 space-y-4">
           <Sheet title="Figures">
             <div className="px-4 py-3">
-              <InputsForm calculator={calculator} texts={texts} onChange={change} system={system} problems={problems} idBase={base} />
+              <InputsForm calculator={calculator} texts={texts} onChange={change} system={system} problems={problems} idBase={base} underGroup={(composition) => <PasteBox group={composition} onChange={change} />} />
             </div>
           </Sheet>
           <div className="lg:hidden">
@@ -91,7 +92,10 @@ function Opened({ calculator }: { calculator: Calculator }) {
             <ResultSheet {...{ calculator, result, texts, system }} />
           </div>
           <Sheet title="Where it holds">
-            <p className="px-4 py-3 text-pretty">{validity}</p>
+            <div className="space-y-2 px-4 py-3">
+              <p className="text-pretty">{validity}</p>
+              {source.note && <p className="text-sm text-pretty text-soft">Source: {source.note}</p>}
+            </div>
           </Sheet>
           <ExampleTable calculator={calculator} system={system} onFill={fillExample} />
           <p className="no-print">
