@@ -23,6 +23,11 @@ beforeAll(async () => {
   ;[found['precise machine'], found['plain feeder'], found['lumping machine']] = machines.map(({ id }) => id) as [string, string, string]
   found['pulsed aluminium'] = (await list('procedures?q=ER5356&state=approved&limit=1'))[0]?.revisionId ?? ''
   found.recording = (await list('arc-recordings?q=PQR&limit=1'))[0]?.id ?? ''
+  found.heat = (await list('heats?q=K4471&limit=1'))[0]?.id ?? ''
+  found.lot = (await list('heats?q=308-77193&limit=1'))[0]?.id ?? ''
+  found['own grade'] = (await list('library/base-metals?q=wear%20plate&limit=1'))[0]?.id ?? ''
+  found.metal = (await list('library/base-metals?q=A516-70&limit=1'))[0]?.id ?? ''
+  found.filler = (await list('library/filler-metals?q=ER5356&limit=1'))[0]?.id ?? ''
   const to = { to: ['screens@larkfield.example'], message: 'For the outbox.' }
   expect((await page.request.post(`/api/revisions/${found.approved}/mails`, { data: to })).status()).toBe(202)
   found.mail = (await list('outbox?limit=1'))[0]?.id ?? ''
@@ -58,12 +63,12 @@ async function visit(page: Page, complaints: string[], path: string, read = READ
 }
 
 const screens: readonly (readonly [Role, ...(string | readonly [label: string, path: () => string])[]])[] = [
-  ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], '/machines', '/machines/new', ['a machine with programs', () => `/machines/${found['lumping machine']}`], '/account'],
-  ['inspector', '/', '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
+  ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], ['a grade of one’s own, changed', () => `/library/base-metals/${found['own grade']}/edit`], '/library/gases/new', ['a filler started from the reference', () => `/library/filler-metals/new?from=${found.filler}`], '/machines', '/machines/new', ['a machine with programs', () => `/machines/${found['lumping machine']}`], '/account'],
+  ['inspector', '/', '/library/heats', '/library/heats/new', '/library/heats/new?kind=lot', ['a heat', () => `/library/heats/${found.heat}`], '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
   ['supervisor', '/', '/arc-data', '/arc-data/new', ['a recording of volts and amperes', () => `/arc-data/${found.recording}`], ['a review', () => `/revisions/${found['in-review']}/review`]],
   ['administrator', '/', '/people'],
   ['welder', '/', '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`], ['a machine as text', () => `/machines/${found['precise machine']}`], '/machines/card', ['a panel card', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=manual-pulse`], ['a panel card of one knob', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=pulse`], ['a panel card that refuses', () => `/machines/${found['plain feeder']}/card?revision=${found['pulsed aluminium']}`]],
-  ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
+  ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/heats', ['a lot as text', () => `/library/heats/${found.lot}`], ['a base metal', () => `/library/base-metals/${found.metal}`], ['a filler metal', () => `/library/filler-metals/${found.filler}`], ['a grade of one’s own', () => `/library/base-metals/${found['own grade']}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
 ]
 
 describe.each(screens.map(([role, ...paths]) => ({ role, paths })))('$role', ({ role, paths }) => {
@@ -102,7 +107,7 @@ describe('signed out', () => {
 })
 
 describe('a record that is not there', () => {
-  it.each(['/revisions/', '/coupons/', '/jobs/', '/machines/', '/arc-data/', '/outbox/', '/shop/'])('%s… says so with a head and a way on', async (path) => {
+  it.each(['/revisions/', '/coupons/', '/jobs/', '/machines/', '/arc-data/', '/outbox/', '/shop/', '/library/heats/', '/library/base-metals/'])('%s… says so with a head and a way on', async (path) => {
     const page = await stage.as('engineer')
     await page.goto(`${path}${randomUUID()}`)
     await page.getByText(/not (there|found)|No sheet/i).first().waitFor()
@@ -118,6 +123,7 @@ const dialogs: readonly (readonly [Role, button: string | RegExp, path: () => st
   ['inspector', 'Reject', () => `/coupons/${found['open coupon']}`],
   ['inspector', 'Attach elsewhere', () => `/arc-data/${found.recording}`],
   ['inspector', 'Write the energy into the pass', () => `/arc-data/${found.recording}`],
+  ['engineer', 'Remove it', () => `/library/base-metals/${found['own grade']}`],
   ['administrator', /^Invite/, () => '/people'],
   ['engineer', 'Open a job', () => '/jobs'],
 ]
@@ -150,6 +156,7 @@ describe('when the server fails', () => {
     ['/jobs', 'jobs'],
     ['/machines', 'machines'],
     ['/arc-data', 'arc-recordings'],
+    ['/library/heats', 'heats'],
     ['/outbox', 'outbox'],
     ['/people', 'people'],
     ['/library/base-metals', 'library/base-metals'],
@@ -189,7 +196,7 @@ describe('an organization that has just been opened', () => {
     const roles: Role[] = ['administrator', 'engineer', 'inspector', 'supervisor']
     expect((await page.request.patch(`/api/people/${person.id}`, { data: { roles }, headers: { 'If-Match': `"${version}"` } })).status()).toBe(200)
     const complaints = complaintsOf(page)
-    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/machines', 'No machine yet', /Register a machine/], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
+    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/machines', 'No machine yet', /Register a machine/], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/library/heats', 'No heat and no lot yet', 'Record a heat'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
       expect([path, await visit(page, complaints, path, [widths[0]])]).toEqual([path, []])
       await page.getByRole('heading', { level: 2, name: title }).waitFor()
       if (step) await page.getByRole('main').getByRole(path === '/jobs' ? 'button' : 'link', { name: step }).last().waitFor()
