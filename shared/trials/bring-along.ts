@@ -3,7 +3,7 @@
  * Drop and mean current follow from the pulse model (calculated); detachment is a recalled relation; aims are common practice.
  */
 import { bringAlong, PULSE_EFFECTS, type PulseSetting } from '../calculations/pulse.ts'
-import { fromStorage, PANEL_QUANTITY } from '../machines/panel-quantities.ts'
+import { fromStorage, PANEL_QUANTITY, toStorage } from '../machines/panel-quantities.ts'
 import { panelFigure } from '../machines/panel-lines.ts'
 import type { MachineMode, PanelControl, PanelQuantity } from '../schemas/machines.ts'
 import type { BeadContent } from '../schemas/trials.ts'
@@ -48,23 +48,25 @@ export function bringAlongAdvice({ before, after, changed, content, mode }: Give
   const moved = (quantity: PanelQuantity): boolean => changed.some(({ control }) => content.settings.some((one) => one.control === control && one.sets === quantity))
   const controlOf = (control: string): PanelControl | null => mode?.controls.find(({ key }) => key === control) ?? null
 
-  const bring = (quantity: PanelQuantity, stored: number | null, why: string, formula: string, basis: string): void => {
-    if (stored === null || !Number.isFinite(stored) || stored <= 0) return
+  /** @returns what is then dialled, in the unit of storage; null where nothing is moved */
+  const bring: Bring = (quantity, stored, why, formula, basis) => {
+    if (stored === null || !Number.isFinite(stored) || stored <= 0) return null
     const setting = content.settings.find(({ sets }) => sets === quantity)
     const { label, dimension } = PANEL_QUANTITY[quantity]
     if (!setting) {
       found.push({ kind: 'watch', control: null, value: null, unit: '', title: `${label} about ${figure(stored)} ${dimension ? SI_UNIT[dimension] : ''}`.trim(), why: `${why} This panel has no knob for it.`, formula, basis })
-      return
+      return null
     }
     const value = onControl(stored, setting, controlOf(setting.control))
     const control = controlOf(setting.control)
     if (value === null) {
       const wanted = fromStorage(stored, setting.sets, setting.unit)
       found.push({ kind: 'watch', control: setting.control, value: null, unit: setting.unit, title: `${setting.label} can’t follow`, why: `${why} ${wanted === null ? 'Its scale has no unit to reckon with.' : `That asks ${figure(wanted)} ${setting.unit}, which is beyond its scale.`}`, formula, basis })
-      return
+      return null
     }
-    if (value === setting.value) return
+    if (value === setting.value) return null
     found.push({ kind: 'bring', control: setting.control, value, unit: setting.unit, title: `${setting.label} to ${control ? panelFigure(value, control) : figure(value)}${setting.unit ? ` ${setting.unit}` : ''}`, why, formula, basis })
+    return toStorage(value, setting.sets, setting.unit)
   }
 
   const [feedMoved, frequencyMoved, onTimeMoved] = [moved('wireFeed'), moved('pulseFrequency'), moved('pulseOnTime')]
@@ -77,16 +79,19 @@ export function bringAlongAdvice({ before, after, changed, content, mode }: Give
   if (frequencyMoved && !feedMoved && f1 && f2 && v1)
     bring('wireFeed', (v1 * f2) / f1, `Frequency went ${f2 > f1 ? 'up' : 'down'} alone: drops get ${f2 > f1 ? 'smaller' : 'larger'} and the arc ${f2 > f1 ? 'longer' : 'shorter'}. Feed in step keeps the drop.`, `feed₂ = feed₁ × f₂ / f₁ = ${figure(v1)} × ${figure(f2)} / ${figure(f1)}`, CALCULATED)
 
-  if (peakShift && !onTimeMoved && t1 && before.peakCurrent && after.peakCurrent)
+  const followed = !(peakShift && !onTimeMoved && t1 && before.peakCurrent && after.peakCurrent) ? null :
     bring('pulseOnTime', bringAlong.onTimeForPeak({ peakCurrent: before.peakCurrent, onTime: t1, newPeak: after.peakCurrent }), `The peak went ${after.peakCurrent > before.peakCurrent ? 'up' : 'down'}; one drop still leaves with each pulse when peak² × on-time stays the same.`, `on-time₂ = on-time₁ × (peak₁ / peak₂)² = ${figure(t1)} × (${figure(before.peakCurrent)} / ${figure(after.peakCurrent)})²`, 'memory: textbook relation, exponent about 2 for steel; the exponent for aluminium is not known')
 
   if ((onTimeMoved || peakShift || backgroundShift) && !frequencyMoved && !feedMoved && f1 && t1 && t2) {
     const known = before.peakCurrent !== null && before.backgroundCurrent !== null && after.peakCurrent !== null && after.backgroundCurrent !== null
+    // Two pieces of advice are meant together: the frequency is reckoned with the on-time that follows the peak.
+    const onTime = followed ?? t2
+    const together = followed === null ? '' : ` with that on-time`
     const what = onTimeMoved ? 'The on-time' : peakShift ? 'The peak' : 'The background'
     if (known) {
       const duty = (f1 * t1) / 1000
       const mean = duty * (before.peakCurrent ?? 0) + (1 - duty) * (before.backgroundCurrent ?? 0)
-      bring('pulseFrequency', bringAlong.frequencyForMean({ meanCurrent: mean, peakCurrent: after.peakCurrent ?? 0, backgroundCurrent: after.backgroundCurrent ?? 0, onTime: t2 }), `${what} moved the mean current off the ${figure(mean)} A that fits this wire feed. This frequency brings it back.`, `f = 1000 × (mean − background) / (peak − background) / on-time = 1000 × (${figure(mean)} − ${figure(after.backgroundCurrent ?? 0)}) / (${figure(after.peakCurrent ?? 0)} − ${figure(after.backgroundCurrent ?? 0)}) / ${figure(t2)}`, CALCULATED)
+      bring('pulseFrequency', bringAlong.frequencyForMean({ meanCurrent: mean, peakCurrent: after.peakCurrent ?? 0, backgroundCurrent: after.backgroundCurrent ?? 0, onTime }), `${what} moved the mean current off the ${figure(mean)} A that fits this wire feed. This frequency brings it back${together}.`, `f = 1000 × (mean − background) / (peak − background) / on-time = 1000 × (${figure(mean)} − ${figure(after.backgroundCurrent ?? 0)}) / (${figure(after.peakCurrent ?? 0)} − ${figure(after.backgroundCurrent ?? 0)}) / ${figure(onTime)}`, CALCULATED)
     } else if (onTimeMoved)
       bring('pulseFrequency', (f1 * t1) / t2, 'With the on-time the share of each period at peak moved, and the mean current with it. This frequency keeps the share, so the mean stays whatever the two currents are.', `f₂ = f₁ × on-time₁ / on-time₂ = ${figure(f1)} × ${figure(t1)} / ${figure(t2)}`, CALCULATED)
   }
@@ -96,7 +101,7 @@ export function bringAlongAdvice({ before, after, changed, content, mode }: Give
   return found
 }
 
-type Bring = (quantity: PanelQuantity, stored: number | null, why: string, formula: string, basis: string) => void
+type Bring = (quantity: PanelQuantity, stored: number | null, why: string, formula: string, basis: string) => number | null
 
 /** Limits that are near, and what each changed setting usually does to the arc. @param bring null where the frequency is advised already */
 function watches({ after, changed, content }: Given, bring: Bring | null): Advice[] {

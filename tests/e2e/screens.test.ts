@@ -23,6 +23,7 @@ beforeAll(async () => {
   ;[found['precise machine'], found['plain feeder'], found['lumping machine']] = machines.map(({ id }) => id) as [string, string, string]
   found['pulsed aluminium'] = (await list('procedures?q=ER5356&state=approved&limit=1'))[0]?.revisionId ?? ''
   found.recording = (await list('arc-recordings?q=PQR&limit=1'))[0]?.id ?? ''
+  found.trial = (await list('trials?sort=number&limit=1'))[0]?.id ?? ''
   found.heat = (await list('heats?q=K4471&limit=1'))[0]?.id ?? ''
   found.lot = (await list('heats?q=308-77193&limit=1'))[0]?.id ?? ''
   found['own grade'] = (await list('library/base-metals?q=wear%20plate&limit=1'))[0]?.id ?? ''
@@ -63,12 +64,12 @@ async function visit(page: Page, complaints: string[], path: string, read = READ
 }
 
 const screens: readonly (readonly [Role, ...(string | readonly [label: string, path: () => string])[]])[] = [
-  ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], ['a grade of one’s own, changed', () => `/library/base-metals/${found['own grade']}/edit`], '/library/gases/new', ['a filler started from the reference', () => `/library/filler-metals/new?from=${found.filler}`], '/machines', '/machines/new', ['a machine with programs', () => `/machines/${found['lumping machine']}`], '/account'],
+  ['engineer', '/', '/procedures', '/procedures?q=nothing-is-called-this', '/procedures/new', ['a draft', () => `/revisions/${found.draft}`], ['an approved procedure', () => `/revisions/${found.approved}`], ['a withdrawn procedure', () => `/revisions/${found.withdrawn}`], '/outbox', ['a mail', () => `/outbox/${found.mail}`], '/jobs', ['a job', () => `/jobs/${found.job}`], ['a grade of one’s own, changed', () => `/library/base-metals/${found['own grade']}/edit`], '/library/gases/new', ['a filler started from the reference', () => `/library/filler-metals/new?from=${found.filler}`], '/machines', '/machines/new', ['a machine with programs', () => `/machines/${found['lumping machine']}`], '/dial-in', ['a trial', () => `/dial-in/${found.trial}?bead=7`], '/account'],
   ['inspector', '/', '/library/heats', '/library/heats/new', '/library/heats/new?kind=lot', ['a heat', () => `/library/heats/${found.heat}`], '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
   ['supervisor', '/', '/arc-data', '/arc-data/new', ['a recording of volts and amperes', () => `/arc-data/${found.recording}`], ['a review', () => `/revisions/${found['in-review']}/review`]],
   ['administrator', '/', '/people'],
-  ['welder', '/', '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`], ['a machine as text', () => `/machines/${found['precise machine']}`], '/machines/card', ['a panel card', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=manual-pulse`], ['a panel card of one knob', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=pulse`], ['a panel card that refuses', () => `/machines/${found['plain feeder']}/card?revision=${found['pulsed aluminium']}`]],
-  ['auditor', '/', ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/heats', ['a lot as text', () => `/library/heats/${found.lot}`], ['a base metal', () => `/library/base-metals/${found.metal}`], ['a filler metal', () => `/library/filler-metals/${found.filler}`], ['a grade of one’s own', () => `/library/base-metals/${found['own grade']}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
+  ['welder', '/', ['the next trial bead', () => `/dial-in/${found.trial}/bead`], ['a first trial bead', () => `/dial-in/${found.trial}/bead?copy=none`], '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`], ['a machine as text', () => `/machines/${found['precise machine']}`], '/machines/card', ['a panel card', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=manual-pulse`], ['a panel card of one knob', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=pulse`], ['a panel card that refuses', () => `/machines/${found['plain feeder']}/card?revision=${found['pulsed aluminium']}`]],
+  ['auditor', '/', ['a trial', () => `/dial-in/${found.trial}`], ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/heats', ['a lot as text', () => `/library/heats/${found.lot}`], ['a base metal', () => `/library/base-metals/${found.metal}`], ['a filler metal', () => `/library/filler-metals/${found.filler}`], ['a grade of one’s own', () => `/library/base-metals/${found['own grade']}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
 ]
 
 describe.each(screens.map(([role, ...paths]) => ({ role, paths })))('$role', ({ role, paths }) => {
@@ -107,7 +108,7 @@ describe('signed out', () => {
 })
 
 describe('a record that is not there', () => {
-  it.each(['/revisions/', '/coupons/', '/jobs/', '/machines/', '/arc-data/', '/outbox/', '/shop/', '/library/heats/', '/library/base-metals/'])('%s… says so with a head and a way on', async (path) => {
+  it.each(['/revisions/', '/coupons/', '/jobs/', '/machines/', '/arc-data/', '/dial-in/', '/outbox/', '/shop/', '/library/heats/', '/library/base-metals/'])('%s… says so with a head and a way on', async (path) => {
     const page = await stage.as('engineer')
     await page.goto(`${path}${randomUUID()}`)
     await page.getByText(/not (there|found)|No sheet/i).first().waitFor()
@@ -126,6 +127,8 @@ const dialogs: readonly (readonly [Role, button: string | RegExp, path: () => st
   ['engineer', 'Remove it', () => `/library/base-metals/${found['own grade']}`],
   ['administrator', /^Invite/, () => '/people'],
   ['engineer', 'Open a job', () => '/jobs'],
+  ['engineer', 'Begin a trial', () => '/dial-in'],
+  ['engineer', 'Make it a procedure', () => `/dial-in/${found.trial}`],
 ]
 
 describe('dialogs', () => {
@@ -156,6 +159,7 @@ describe('when the server fails', () => {
     ['/jobs', 'jobs'],
     ['/machines', 'machines'],
     ['/arc-data', 'arc-recordings'],
+    ['/dial-in', 'trials'],
     ['/library/heats', 'heats'],
     ['/outbox', 'outbox'],
     ['/people', 'people'],
@@ -196,10 +200,10 @@ describe('an organization that has just been opened', () => {
     const roles: Role[] = ['administrator', 'engineer', 'inspector', 'supervisor']
     expect((await page.request.patch(`/api/people/${person.id}`, { data: { roles }, headers: { 'If-Match': `"${version}"` } })).status()).toBe(200)
     const complaints = complaintsOf(page)
-    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/machines', 'No machine yet', /Register a machine/], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/library/heats', 'No heat and no lot yet', 'Record a heat'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
+    for (const [path, title, step] of [['/procedures', 'No procedure yet', 'New procedure'], ['/coupons', 'No coupon yet', /coupon/i], ['/jobs', 'No job yet', 'Open a job'], ['/machines', 'No machine yet', /Register a machine/], ['/arc-data', 'No recording yet', 'Upload a recording'], ['/dial-in', 'No trial yet', 'Begin a trial'], ['/library/heats', 'No heat and no lot yet', 'Record a heat'], ['/outbox', 'Nothing has been sent', null], ['/', 'Nothing waits for you', null]] as const) {
       expect([path, await visit(page, complaints, path, [widths[0]])]).toEqual([path, []])
       await page.getByRole('heading', { level: 2, name: title }).waitFor()
-      if (step) await page.getByRole('main').getByRole(path === '/jobs' ? 'button' : 'link', { name: step }).last().waitFor()
+      if (step) await page.getByRole('main').getByRole(path === '/jobs' || path === '/dial-in' ? 'button' : 'link', { name: step }).last().waitFor()
     }
     // The other theme has colours of its own, which must be told apart as well.
     expect((await page.request.patch('/api/account', { data: { theme: 'night' } })).status()).toBe(200)

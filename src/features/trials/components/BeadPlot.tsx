@@ -6,7 +6,7 @@ import { useUnits } from '@/hooks/units.ts'
 import { useWidth } from '@/hooks/width.ts'
 import { figure } from '@/lib/figures.ts'
 import { SHAPE_WORDS, shapeOf, type ScoreShape } from '../words.ts'
-import { axesOf, pointsOf, scaleOf } from './plot-data.ts'
+import { axesOf, labelsOf, pointsOf, scaleOf } from './plot-data.ts'
 import { ScoreShapeMark } from './ScoreMark.tsx'
 
 const HEIGHT = 320
@@ -54,10 +54,10 @@ export function BeadPlot({ beads }: { beads: readonly Bead[] }) {
             <text x={(EDGE.left + width - EDGE.right) / 2} y={HEIGHT - 8} textAnchor="middle" className="fill-ink text-sm">{named(x)}</text>
             <text transform={`translate(14 ${(HEIGHT - EDGE.bottom + EDGE.top) / 2}) rotate(-90)`} textAnchor="middle" className="fill-ink text-sm">{named(y)}</text>
             {points.length > 1 && <polyline points={points.map((point) => `${px(point.x).toFixed(1)},${py(point.y).toFixed(1)}`).join(' ')} className="fill-none stroke-edge" strokeDasharray="2 4" />}
-            {points.map((point) => (
+            {labelsOf(points).map((point) => (
               <g key={point.number} transform={`translate(${px(point.x).toFixed(1)} ${py(point.y).toFixed(1)})`}>
                 <ScoreShapeMark shape={shapeOf(point.score)} size={7} />
-                <text x={11} y={-7} className="fill-ink stroke-sheet text-sm font-semibold" strokeWidth={3} paintOrder="stroke">{point.number}</text>
+                <text x={11} y={-7} className="fill-ink stroke-sheet text-sm font-semibold" strokeWidth={3} paintOrder="stroke">{point.label}</text>
               </g>
             ))}
           </svg>

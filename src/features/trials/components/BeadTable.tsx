@@ -33,7 +33,7 @@ export function BeadTable({ beads, mode, system, shown }: { beads: readonly Bead
     const one = settingOf(bead.content, key)
     return one ? settingText(one.value, control(key)) : '—'
   }
-  const cell = 'px-3 py-2 align-top'
+  const cell = 'px-2 py-2 align-top first:pl-4 lg:px-3'
   return (
     <>
       <ol className="md:hidden" aria-label="Beads">
@@ -60,7 +60,7 @@ export function BeadTable({ beads, mode, system, shown }: { beads: readonly Bead
             <tr className="border-b border-ink">
               <th scope="col" className={`${cell} cell-label`}>Bead</th>
               {columns.map(({ control: key, label, unit }) => <th key={key} scope="col" className={`${cell} text-right cell-label`}>{label}{unit && <span className="block normal-case">{unit}</span>}</th>)}
-              <th scope="col" className={`${cell} cell-label`}>Measured</th>
+              <th scope="col" className={`${cell} cell-label max-lg:hidden`}>Measured</th>
               <th scope="col" className={`${cell} cell-label`}>Score</th>
               <th scope="col" className={`${cell} cell-label`}>Faults and note</th>
             </tr>
@@ -81,11 +81,11 @@ export function BeadTable({ beads, mode, system, shown }: { beads: readonly Bead
                     </td>
                   )
                 })}
-                <td className={`${cell} min-w-32`}>
+                <td className={`${cell} min-w-32 max-lg:hidden`}>
                   {(['current', 'voltage', 'wireFeed', 'travelSpeed'] as const).flatMap((measure) => measuredText(bead.content.measured[measure], measure, system) ?? []).join(', ') || <span className="text-soft">—</span>}
                 </td>
                 <td className={`${cell} whitespace-nowrap`}><span className="inline-flex items-center gap-1.5"><ScoreMark score={bead.content.score} />{bead.content.score === null ? <span className="text-soft">not scored</span> : <span title={SCORE_WORDS[bead.content.score]}>{bead.content.score}</span>}<span className="sr-only">{shapeOf(bead.content.score)}</span></span></td>
-                <td className={`${cell} min-w-44`}>
+                <td className={`${cell} min-w-40`}>
                   {bead.content.faults.length > 0 && <span className="block">{faultsInWords(bead.content.faults)}</span>}
                   {bead.content.note && <span className="block text-soft">{bead.content.note}</span>}
                 </td>

@@ -53,8 +53,9 @@ function Move({ change }: { change: FigureChange }) {
 
 /** Mean and RMS current, power, drop and energy, before and after. @param brief the four that are looked at between beads */
 export function FigureTable({ comparison, labels, brief = false }: { comparison: BeadComparison; labels: [string, string]; brief?: boolean }) {
-  const rows = comparison.figures.filter(({ key, before, after }) => (brief ? BRIEF.includes(key) : true) && (before !== null || after !== null))
+  const rows = comparison.figures.filter(({ key, before, after }) => (brief ? BRIEF.includes(key) && after !== null : before !== null || after !== null))
   if (rows.length === 0) return <p className="text-soft">{comparison.notes[0] ?? 'The settings don’t say enough to work anything out.'}</p>
+  const notes = brief ? comparison.notes.slice(0, 1) : comparison.notes
   const shown = (value: number | null, key: FigureKey) => (value === null ? '—' : figure(value, DIGITS[key]))
   return (
     <div>
@@ -82,7 +83,7 @@ export function FigureTable({ comparison, labels, brief = false }: { comparison:
           ))}
         </tbody>
       </table>
-      {comparison.notes.map((note) => <p key={note} className="mt-1.5 text-sm text-pretty text-soft">{note}</p>)}
+      {notes.map((note) => <p key={note} className="mt-1.5 text-sm text-pretty text-soft">{note}</p>)}
     </div>
   )
 }

@@ -38,6 +38,15 @@ export function pointsOf(beads: readonly Bead[], x: string, y: string, system: U
   })
 }
 
+/** Points that stand on one another share a label: "2, 3". */
+export function labelsOf(points: readonly Point[]): (Point & { label: string })[] {
+  const at = ({ x, y }: Point) => `${x.toPrecision(8)} ${y.toPrecision(8)}`
+  return points.map((point) => {
+    const same = points.filter((other) => at(other) === at(point))
+    return { ...point, label: same[0]?.number === point.number ? same.map(({ number }) => number).join(', ') : '' }
+  })
+}
+
 export interface Scale { low: number; high: number; ticks: number[] }
 /** A scale with round ticks that holds the values with a little room. */
 export function scaleOf(values: readonly number[]): Scale {

@@ -36,9 +36,12 @@ export function stepped(value: number | null, direction: 1 | -1, control: PanelC
 export function Stepper({ label, unit, value, onChange, control, before }: StepperProps) {
   const id = useId()
   const [text, setText] = useState(() => (value === null ? '' : settingText(value, control)))
+  // The panel's decimals are known once the machine has been read.
+  const [decimals, setDecimals] = useState(control?.step ?? null)
   const [seen, setSeen] = useState(value)
   const [wrong, setWrong] = useState<string | null>(null)
-  if (seen !== value) {
+  if (seen !== value || decimals !== (control?.step ?? null)) {
+    setDecimals(control?.step ?? null)
     setSeen(value)
     setText(value === null ? '' : settingText(value, control))
     setWrong(null)
@@ -63,10 +66,10 @@ export function Stepper({ label, unit, value, onChange, control, before }: Stepp
   return (
     <div className={`border-l-4 py-1.5 pl-3 ${changed ? 'border-l-figure' : 'border-l-transparent'}`}>
       <div className="flex items-end justify-between gap-3">
-        <label htmlFor={id} className="min-w-0 grow pb-2.5">
-          <span className="block font-medium">{label}</span>
-          <span id={`${id}-about`} className="block text-sm text-soft">{changed ? `was ${settingText(before, control)}${unit ? ` ${unit}` : ''}` : control?.where ?? (value === null ? 'not set' : '')}</span>
-        </label>
+        <div className="min-w-0 grow pb-1">
+          <label htmlFor={id} className="block font-medium">{label}</label>
+          <span id={`${id}-about`} className="block text-sm text-soft">{changed ? `was ${settingText(before, control)}${unit ? ` ${unit}` : ''}` : (control?.where ?? (value === null ? 'not set' : ''))}</span>
+        </div>
         <div className="flex items-center gap-1.5">
           <button type="button" className={KEY} aria-label={`${label} down`} disabled={control !== null && value !== null && value <= control.min} onClick={() => onChange(stepped(value, -1, control))}>
             <Minus size={22} aria-hidden="true" />

@@ -1,6 +1,6 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query'
 import { ArrowLeft } from 'lucide-react'
-import { useState } from 'react'
+import { useEffect, useState } from 'react'
 import { Link, useNavigate, useParams, useSearchParams } from 'react-router-dom'
 import { beadContentSchema, beadSchema, type Bead, type BeadContent, type Trial } from '@shared/schemas/trials.ts'
 import { changedSettings } from '@shared/trials/compare-beads.ts'
@@ -26,6 +26,12 @@ export function BeadPage() {
   const trial = useQuery(trialQuery(id))
   const may = useMay('trials.record')
   const { person } = useSession()
+  // Lists and messages open outside this page's own element, so the whole window goes dark with it.
+  useEffect(() => {
+    const before = document.documentElement.classList.contains('night')
+    document.documentElement.classList.add('night')
+    return () => void document.documentElement.classList.toggle('night', before)
+  }, [])
   const edit = search.get('edit')
   const stored = trial.data?.beads.find((bead) => bead.id === edit) ?? null
   return (

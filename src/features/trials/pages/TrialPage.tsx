@@ -78,13 +78,15 @@ function TrialScreen({ trial }: { trial: Trial }) {
         {beads.length === 0 ? <p className="max-w-prose px-4 py-3 text-pretty text-soft">The first bead names the machine, its mode, the wire, the gas and every knob. Each one after that is a copy with one thing changed, by 5 to 10 % at a time, from the best bead so far (common practice).</p> : <BeadTable beads={beads} mode={mode} system={system} shown={shown?.number ?? null} />}
       </Sheet>
       {shown && <BeadDetail key={shown.id} trial={trial} bead={shown} onPromote={() => setOpen({ what: 'promote', bead: shown })} onGone={() => setSearch({}, { replace: true })} />}
-      {beads.length > 1 && (
+      {beads.length > 0 && (
         <div className="grid items-start gap-5 xl:grid-cols-2">
           <CompareSheet beads={beads} mode={mode} />
-          <BeadPlot beads={beads} />
+          <div className="min-w-0 space-y-5">
+            {beads.length > 1 && <BeadPlot beads={beads} />}
+            <WireCurves beads={beads} />
+          </div>
         </div>
       )}
-      {beads.length > 0 && <WireCurves beads={beads} />}
       {open?.what === 'promote' && <PromoteDialog trial={trial} mode={mode} given={open.bead} onClose={() => setOpen(null)} />}
       {open?.what === 'title' && <TrialDialog heading={`Title of ${trial.number}`} submit="Save" given={{ title: trial.title, goal: trial.goal }} isOpen onClose={() => setOpen(null)} onSave={async (body) => { await acts.save.mutateAsync(body); setOpen(null) }} />}
       <Dialog

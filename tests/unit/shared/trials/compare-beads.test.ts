@@ -114,11 +114,18 @@ describe('two beads', () => {
     )
   })
 
-  it('peak moved: on-time for the same detachment, frequency for the same mean', () => {
+  it('peak moved: on-time for the same detachment, and with it the frequency for the same mean', () => {
     const told = compareBeads(pulseBead(), pulseBead({ peak: 400 }), mode)
-    // 1.5 × (350/400)² = 1.148 → 1.1 on steps of 0.1; mean 103.5 A: 1000 × 43.5 / 340 / 1.5 = 85.3 Hz.
-    expect(brings(told)).toEqual(['On-time to 1.1 ms', 'Frequency to 85 Hz'])
+    // 1.5 × (350/400)² = 1.148 → 1.1 on steps of 0.1; mean 103.5 A: 1000 × 43.5 / 340 / 1.1 = 116.3 Hz.
+    expect(brings(told)).toEqual(['On-time to 1.1 ms', 'Frequency to 116 Hz'])
+    const followed = compareBeads(pulseBead(), pulseBead({ peak: 400, onTime: 1.1, frequency: 116 }), mode)
+    expect(Math.abs(figureOf(followed, 'meanCurrent')?.share ?? 1)).toBeLessThan(0.005)
     expect(told.advice[0]?.basis).toMatch(/^memory/)
+  })
+
+  it('background moved: the frequency that keeps the mean', () => {
+    // 1000 × (103.5 − 40) / (350 − 40) / 1.5 = 136.6 Hz
+    expect(brings(compareBeads(pulseBead(), pulseBead({ background: 40 }), mode))).toEqual(['Frequency to 137 Hz'])
   })
 
   it('on-time moved: the frequency that keeps the mean, even with unknown currents', () => {
