@@ -52,7 +52,8 @@ function planRegion(profile: GrooveProfile, region: Region, sizes: readonly Bead
     return Array.from({ length: count }, (): PlannedPass => ({ processId: size.processId, layer: 'fill', side, beadArea: area / count }))
   })
   const [first] = passes
-  if (first) first.layer = 'root'
+  // A second side of one pass is its cap.
+  if (first) first.layer = side === 'second' && passes.length === 1 ? 'cap' : 'root'
   const last = parts.at(-1)
   const fromLast = passes.filter(({ processId, layer }) => layer === 'fill' && processId === last?.size.processId).length
   const caps = last && passes.length > 1 ? capsFor(profile, region.to, last.size.bead, Math.max(1, fromLast)) : 0

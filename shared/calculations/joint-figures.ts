@@ -186,13 +186,14 @@ export function grooveFigures(joint: Joint, thickness: number | null, system: Un
   if (opening === null) remarks.take('The root opening is not given; the joint is drawn closed.')
   remarks.notNegative('joint.rootOpening', 'A root opening', opening, words)
   checkType(joint, type, remarks)
-  const depth = joint.type === 'edge' ? drawnValue(joint.grooveDepth) : thickness
-  if (joint.type === 'edge' && depth === null && !isFlare(type)) remarks.lack('joint.grooveDepth', 'The groove depth is not given; of an edge joint it is the depth of the weld.')
-  else if (joint.type === 'edge' && depth !== null && depth <= 0) remarks.refuse('joint.grooveDepth', `A groove depth of ${words.length(depth)} is no groove; it must be above 0.`)
+  const edge = joint.type === 'edge' && !isFlare(type)
+  const depth = edge ? drawnValue(joint.grooveDepth) : thickness
+  if (edge && depth === null) remarks.lack('joint.grooveDepth', 'The groove depth is not given; of an edge joint it is the depth of the weld.')
+  else if (edge && depth !== null && depth <= 0) remarks.refuse('joint.grooveDepth', `A groove depth of ${words.length(depth)} is no groove; it must be above 0.`)
   if (depth === null || depth <= 0) return answer(isFlare(type) && thickness === null ? { thickness: radius ?? 0, rootOpening: opening ?? 0, rootFace: 0, bevelAngle: bevel, upperBevelAngle: null, rootRadius: radius } : null)
-  const plain = type === 'square' || isFlare(type) || joint.type === 'edge'
+  const plain = type === 'square' || isFlare(type) || edge
   const depths = plain ? { rootFace: 0, first: depth, second: 0 } : depthsOf(joint, type, depth, given, words, remarks)
-  const gouge = joint.type === 'edge' || isFlare(type) ? 0 : checkRoot(joint, opening ?? 0, depth, words, remarks)
+  const gouge = edge || isFlare(type) ? 0 : checkRoot(joint, opening ?? 0, depth, words, remarks)
   if (!depths) return answer(null)
   const secondGiven = isDouble(type) ? drawnValue(joint.secondAngle) : null
   const secondBevel = secondGiven === null ? null : bothEdgesPrepared(type) ? secondGiven / 2 : secondGiven

@@ -153,7 +153,7 @@ function grooveGeometry(setting: JointSetting, passes: readonly PassToLay[]): Jo
   const pipe = pipeOf(setting, thinner ?? 0, remarks)
   if (!figures || !joint.groove || remarks.problems.length > 0) return nothing(remarks)
   const wall = thinner ?? figures.thickness
-  const edge = joint.type === 'edge'
+  const edge = joint.type === 'edge' && !isFlare(joint.groove)
   const profile = edge && joint.groove === 'square' ? edgeWeldProfile(figures, wall, b ?? wall) : grooveProfile(joint.groove, figures)
   if (edge && joint.groove !== 'square') checkEdgeEnds(profile, figures.rootOpening, wall, b ?? wall, system, remarks)
   const fillets = reinforcingFillets(joint, profile, remarks, system)

@@ -89,7 +89,7 @@ function grooveHandles({ joint, thickness, thicknessB }: JointSetting, geometry:
   const foot = profile.meeting ?? 0
   const start = foot + figures.rootFace
   const unequal = isUnequalButt(joint, drawnValue(thickness), drawnValue(thicknessB ?? null))
-  const edge = joint.type === 'edge'
+  const edge = joint.type === 'edge' && !isFlare(type)
   const mark = (kind: MarkKind) => geometry.dimensions.find((one) => one.kind === kind)
   for (const kind of ['thickness', ...(unequal ? ['thickness-b'] : [])] as const) {
     const placed = mark(kind as MarkKind)

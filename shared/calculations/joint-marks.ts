@@ -75,7 +75,7 @@ export function grooveMarks(marked: Marked, system: UnitSystem): JointDimension[
   if (markB) marks.add('thickness-b', 'thicknessB', markB.from, markB.to, marked.thicknessB, 'length')
   const at = Math.max(foot, profile.gouge)
   const half = figures.rootOpening / 2
-  if (joint.type !== 'edge' || half > 0) marks.add('root-opening', 'joint.rootOpening', { x: -half, y: at }, { x: half, y: at }, joint.rootOpening, 'length')
+  if (joint.type !== 'edge' || isFlare(joint.groove ?? 'square') || half > 0) marks.add('root-opening', 'joint.rootOpening', { x: -half, y: at }, { x: half, y: at }, joint.rootOpening, 'length')
   const edge = offsetAt(profile.right, start)
   if (figures.rootFace > 0 && profile.gouge < start) marks.add('root-face', 'joint.rootFace', { x: edge, y: foot }, { x: edge, y: start }, joint.rootFace, 'length')
   markAngles(marks, marked, start)
@@ -88,7 +88,7 @@ export function grooveMarks(marked: Marked, system: UnitSystem): JointDimension[
     marks.add('root-radius', 'joint.rootRadius', centre, onArc, joint.rootRadius, 'length')
   }
   const side = -offsetAt(profile.left, top)
-  if (joint.type === 'edge') marks.add('groove-depth', 'joint.grooveDepth', { x: side, y: 0 }, { x: side, y: top }, joint.grooveDepth, 'length')
+  if (joint.type === 'edge' && !isFlare(joint.groove ?? 'square')) marks.add('groove-depth', 'joint.grooveDepth', { x: side, y: 0 }, { x: side, y: top }, joint.grooveDepth, 'length')
   else marks.add('groove-depth', 'joint.grooveDepth', { x: side, y: start }, { x: side, y: top }, joint.grooveDepth, 'length')
   if (profile.meeting !== null) marks.add('second-depth', 'joint.secondDepth', { x: -offsetAt(profile.left, 0), y: 0 }, { x: -offsetAt(profile.left, 0), y: profile.meeting }, joint.secondDepth, 'length')
   if (profile.gouge > 0) marks.add('gouge-depth', 'joint.backGougeDepth', { x: -offsetAt(profile.left, 0), y: 0 }, { x: -offsetAt(profile.left, 0), y: profile.gouge }, joint.backGougeDepth, 'length')

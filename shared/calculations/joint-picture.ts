@@ -80,9 +80,11 @@ export function jointPicture(geometry: JointGeometry, { width, maxHeight, bare =
   const frame = { width, maxHeight, bare, measure }
   let room: Room = bare ? { left: 6, right: 6, top: 6, bottom: 6 } : { left: 24, right: 24, top: 40, bottom: 38 }
   let laid = layOut(geometry, frame, room)
-  // A smaller section moves its figures; twice is enough to settle.
-  for (let turn = 0; turn < 2 && !bare; turn += 1) {
-    room = need(laid.marks, laid.box, measure, room, width)
+  // A smaller section moves its figures, and they may need more room again.
+  for (let turn = 0; turn < 5 && !bare; turn += 1) {
+    const next = need(laid.marks, laid.box, measure, room, width)
+    if (turn > 1 && Math.max(...(['left', 'right', 'top', 'bottom'] as const).map((side) => next[side] - room[side])) < 0.5) break
+    room = next
     laid = layOut(geometry, frame, room)
   }
   const { at, scale, left, box, marks } = laid

@@ -69,27 +69,39 @@ function bead(profile: GrooveProfile, y0: number, y1: number, u0: number, u1: nu
 
 export const widthAt = (profile: GrooveProfile, y: number): number => offsetAt(profile.left, y) + offsetAt(profile.right, y)
 
-/** Section of the groove between two heights, mm²; exact, as the edges are straight between their points. */
-export function areaBetween(profile: GrooveProfile, from: number, to: number): number {
+/** A groove filled from one height towards another: the section at each of its corners, so that a section leads to its height. */
+interface Filling { heights: number[]; widths: number[]; areas: number[] }
+
+function fillingOf(profile: GrooveProfile, from: number, to: number): Filling {
   const [low, high] = [Math.min(from, to), Math.max(from, to)]
-  const heights = [low, ...[...profile.left, ...profile.right].map(({ y }) => y).filter((y) => y > low && y < high).sort((one, other) => one - other), high]
-  return heights.slice(1).reduce((sum, y, index) => {
-    const below = heights[index] ?? y
-    return sum + ((widthAt(profile, below) + widthAt(profile, y)) / 2) * (y - below)
-  }, 0)
+  const inner = [...new Set([...profile.left, ...profile.right].map(({ y }) => y).filter((y) => y > low && y < high))].sort((one, other) => one - other)
+  const rising = [low, ...inner, high]
+  const heights = to >= from ? rising : rising.reverse()
+  const widths = heights.map((y) => widthAt(profile, y))
+  const areas = [0]
+  for (let index = 1; index < heights.length; index += 1) areas.push((areas[index - 1] ?? 0) + (((widths[index - 1] ?? 0) + (widths[index] ?? 0)) / 2) * Math.abs((heights[index] ?? 0) - (heights[index - 1] ?? 0)))
+  return { heights, widths, areas }
 }
 
-/** Height at which a region from `from` towards `to` holds `area`; `to` where it never does. */
-export function heightFor(profile: GrooveProfile, from: number, to: number, area: number): number {
-  let [near, far] = [from, to]
-  if (area >= areaBetween(profile, from, to)) return to
-  for (let step = 0; step < 48; step += 1) {
-    const middle = (near + far) / 2
-    if (areaBetween(profile, from, middle) < area) near = middle
-    else far = middle
-  }
-  return (near + far) / 2
+/** Height up to which a filling holds `area`; its end where it never does. */
+function heightAt({ heights, widths, areas }: Filling, area: number): number {
+  const end = areas.findIndex((held) => held >= area)
+  if (end === -1) return heights.at(-1) ?? 0
+  if (end === 0) return heights[0] ?? 0
+  const [y0, y1, w0, w1] = [heights[end - 1] ?? 0, heights[end] ?? 0, widths[end - 1] ?? 0, widths[end] ?? 0]
+  const rest = area - (areas[end - 1] ?? 0)
+  const run = Math.abs(y1 - y0)
+  // Between two corners the width grows evenly: w0 h + (w1 - w0) h² / (2 run) = rest.
+  const curve = run > 0 ? (w1 - w0) / (2 * run) : 0
+  const h = Math.abs(curve) < 1e-12 ? (w0 > 0 ? rest / w0 : run) : (2 * rest) / (w0 + Math.sqrt(Math.max(0, w0 * w0 + 4 * curve * rest)))
+  return y0 + Math.sign(y1 - y0) * Math.min(run, h)
 }
+
+/** Section of the groove between two heights, mm²; exact, as the edges are straight between their points. */
+export const areaBetween = (profile: GrooveProfile, from: number, to: number): number => fillingOf(profile, from, to).areas.at(-1) ?? 0
+
+/** Height at which a region from `from` towards `to` holds `area`; `to` where it never does. */
+export const heightFor = (profile: GrooveProfile, from: number, to: number, area: number): number => heightAt(fillingOf(profile, from, to), area)
 
 /** Beads in each layer: root and hot passes have one layer each, caps share the last, fill passes spread so that beads look like beads. */
 function layersOf(passes: readonly PassToLay[], profile: GrooveProfile, region: Region): number[] {
@@ -125,7 +137,8 @@ export function layRegion(passes: readonly PassToLay[], profile: GrooveProfile, 
   if (passes.length === 0) return []
   const layers = layersOf(passes, profile, region)
   const step = (region.to - region.from) / layers.length
-  const whole = areaBetween(profile, region.from, region.to)
+  const filling = fillingOf(profile, region.from, region.to)
+  const whole = filling.areas.at(-1) ?? 0
   const weights = whole > 0 ? weightsOf(passes) : null
   const total = weights?.reduce((sum, weight) => sum + weight, 0) ?? 1
   let next = 0
@@ -134,7 +147,7 @@ export function layRegion(passes: readonly PassToLay[], profile: GrooveProfile, 
     const shares = weights?.slice(next, next + beads) ?? Array.from({ length: beads }, () => 1)
     const here = shares.reduce((sum, share) => sum + share, 0)
     filled += here
-    const y1 = layer === layers.length - 1 ? region.to : weights ? heightFor(profile, region.from, region.to, (filled / total) * whole) : region.from + step * (layer + 1)
+    const y1 = layer === layers.length - 1 ? region.to : weights ? heightAt(filling, (filled / total) * whole) : region.from + step * (layer + 1)
     const crown = layer === layers.length - 1 ? region.reinforcement * Math.sign(step) : 0
     const start = y0
     y0 = y1

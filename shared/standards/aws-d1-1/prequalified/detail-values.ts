@@ -1,4 +1,5 @@
 /** A prequalified groove detail as values of a joint: as the drawing may state them, and what a fitter may then find. */
+import { typedQuantity } from '../../../calculations/joint-handles.ts'
 import type { Basis } from '../../../schemas/assessment.ts'
 import type { Interval } from '../../../schemas/common.ts'
 import type { Joint, Process } from '../../../schemas/welding.ts'
@@ -7,15 +8,16 @@ import { formatInterval } from '../../../units/format.ts'
 import type { UnitSystem } from '../../../units/types.ts'
 import { details, fitUp, type Detail, type Printed, type Tolerance } from './joint-details.ts'
 
-const unitOf = (system: UnitSystem): 'mm' | 'in' => (system === 'SI' ? 'mm' : 'in')
+const millimetres = (value: number, system: UnitSystem): number => (system === 'SI' ? value : value * 25.4)
+/** A range of lengths in the system's unit, inches as fractions; null leaves an end open. */
+const lengths = (min: number | null, max: number | null, system: UnitSystem): Interval => ({ min: min === null ? null : typedQuantity(millimetres(min, system), 'length', system), max: max === null ? null : typedQuantity(millimetres(max, system), 'length', system), all: false })
 const sized = (printed: Printed | null, system: UnitSystem): number => (printed === null ? Infinity : printed[system])
-const tidy = (value: number): number => Number(value.toFixed(6))
 
 /** From the least to the largest that a drawing may state; an end without limit is left open. */
 function stated(nominal: readonly [number, number], { up, down }: Tolerance, system: UnitSystem): Interval {
   const low = Math.max(0, nominal[0] - (down === null ? 0 : down[system]))
   const high = nominal[1] + sized(up, system)
-  return interval(tidy(low), Number.isFinite(high) ? tidy(high) : null, 'length', unitOf(system))
+  return lengths(low, Number.isFinite(high) ? high : null, system)
 }
 
 /** Root opening of a detail; null where it follows a thickness that is not given. */
@@ -41,7 +43,7 @@ export function jointOfDetail(detail: Detail, joint: Pick<Joint, 'type' | 'backi
   const opening = openingOf(detail, thickness, system)
   const angle = detail.angle === null ? null : interval(detail.angle + detailed.angle[1], detail.angle + detailed.angle[0], 'angle')
   const face = detail.face === null ? null : stated([detail.face[0][system], detail.face[1][system]], detailed.face, system)
-  const radius = detail.radius ? interval(detail.radius[0][system], tidy(detail.radius[0][system] + detail.radius[1][system]), 'length', unitOf(system)) : null
+  const radius = detail.radius ? lengths(detail.radius[0][system], detail.radius[0][system] + detail.radius[1][system], system) : null
   const [first] = detail.joints
   return {
     weld: 'groove',
@@ -52,7 +54,7 @@ export function jointOfDetail(detail: Detail, joint: Pick<Joint, 'type' | 'backi
     includedAngle: bothEdges(detail) ? angle : null,
     bevelAngle: bothEdges(detail) ? null : angle,
     rootOpening: opening && stated(opening, detailed.opening, system),
-    rootFace: detail.groove === 'square' ? null : detail.backed ? interval(0, undefined, 'length', unitOf(system)) : face,
+    rootFace: detail.groove === 'square' ? null : detail.backed ? lengths(0, 0, system) : face,
     rootRadius: radius,
     grooveDepth: null,
     secondDepth: null,
@@ -69,8 +71,9 @@ export interface DetailSheet { detail: Detail; lines: DetailLine[]; notes: strin
 const figure = { rootOpening: 'Root opening', rootFace: 'Root face', angle: 'Groove angle' } as const
 const span = (reach: { min: number; max: number } | null, dimension: 'length' | 'angle', system: UnitSystem): string => {
   if (reach === null) return 'not told'
-  if (!Number.isFinite(reach.max)) return reach.min > 0 ? formatInterval(interval(tidy(reach.min), null, dimension, dimension === 'angle' ? undefined : unitOf(system)), dimension, system).text : 'not limited'
-  return formatInterval(interval(tidy(reach.min), tidy(reach.max), dimension, dimension === 'angle' ? undefined : unitOf(system)), dimension, system).text
+  if (dimension === 'angle') return formatInterval(interval(reach.min, reach.max, 'angle'), 'angle', system).text
+  if (!Number.isFinite(reach.max)) return reach.min > 0 ? formatInterval(lengths(reach.min, null, system), 'length', system).text : 'not limited'
+  return formatInterval(lengths(reach.min, reach.max, system), 'length', system).text
 }
 
 /**
@@ -94,8 +97,8 @@ export function detailSheet(detail: Detail, thickness: number | null, system: Un
     lines.push({ label: figure.angle, detailed: span({ min: detail.angle + detailed.angle[1], max: detail.angle + detailed.angle[0] }, 'angle', system), fitUp: span(at, 'angle', system) })
   }
   const notes = [
-    detail.most ? `Base metal at most ${words(interval(detail.most[system], undefined, 'length', unitOf(system)))}.` : '',
-    detail.least ? `Base metal at least ${words(interval(detail.least[system], undefined, 'length', unitOf(system)))}.` : '',
+    detail.most ? `Base metal at most ${words(lengths(detail.most[system], detail.most[system], system))}.` : '',
+    detail.least ? `Base metal at least ${words(lengths(detail.least[system], detail.least[system], system))}.` : '',
     `Positions: ${detail.places.join(', ')}.`,
     detail.backed ? 'On backing.' : detail.gouged ? 'Back gouged to sound metal before the second side; choose how.' : detail.bothSides ? 'Welded from both sides.' : '',
     detail.gas === 'required' ? 'FCAW needs an external gas.' : '',
