@@ -32,7 +32,7 @@ const BESIDE: Readonly<Record<string, Beside>> = {
     const heat = iso ? (waveform ? ['heat-input-iso-power'] : ['heat-input-iso', 'heat-input-iso-power']) : sectionIx
     return [...heat, ...(ferritic(baseFamilies(weld)) ? ['cooling-time', 'heat-input-for-cooling-time', 'haz-hardness-yurioka', 'haz-hardness-dueren'] : [])]
   },
-  'electrical.current': (weld, block) => [burnsOff(weld, block) && 'current-from-wire-feed', gasShielded(block) && 'spray-transition'],
+  'electrical.current': (weld, block) => [burnsOff(weld, block) && 'current-from-wire-feed', block?.process === 'GMAW' && 'spray-transition'],
   'electrical.wireFeed': (weld, block) => [burnsOff(weld, block) && 'wire-feed-from-current', burnsOff(weld, block) && weldFamily(weld, block) === 'steel' && 'shop-settings', gasShielded(block) && 'deposition-rate'],
   'electrical.travelSpeed': () => ['travel-speed'],
   'electrical.peakCurrent': () => ['pulse', 'pulse-detachment'],

@@ -21,7 +21,13 @@ import { GROOVE_AREA_TYPES } from './groove-area.ts'
 import { geometryOf, massPerMetre } from './joint-geometry.ts'
 import { isoProcess, weldFamily } from './record-metals.ts'
 
-export interface Chemistries { a?: Chemistry | null; b?: Chemistry | null; filler?: Chemistry | null }
+export interface Chemistries {
+  a?: Chemistry | null
+  b?: Chemistry | null
+  filler?: Chemistry | null
+  /** What each is: `heat 48213`, `typed here`. */
+  names?: Readonly<Partial<Record<'a' | 'b' | 'filler', string>>>
+}
 /** A record as calculators ask it; `bend` and `hardness` where they stand beside such a test of a coupon. */
 export interface CalculatorRecord { variables: WeldingVariables; chemistries?: Chemistries; bend?: Pick<BendTest, 'thickness' | 'formerDiameter'>; hardness?: { values: readonly number[] } }
 
@@ -32,6 +38,8 @@ export interface Taken {
   from: string
   /** Not in the record: a usual figure, to be looked at. */
   assumed?: true
+  /** Not in the record: of a heat's or lot's analysis. */
+  analysis?: true
 }
 export type Inputs = Readonly<Record<string, Taken | null | undefined>>
 /** Inputs that give the least and the greatest result over the ranges of the record. */
@@ -82,17 +90,20 @@ function equivalent({ chemistries }: Given, name: CarbonEquivalent): Taken | nul
     return value === null ? [] : [{ value, side }]
   })
   const [most] = known.sort((x, y) => y.value - x.value)
-  return most ? whole(String(Number(most.value.toFixed(3))), `Analysis of metal ${most.side.toUpperCase()}`) : null
+  return most ? { text: String(Number(most.value.toFixed(3))), from: analysed(chemistries, most.side), analysis: true } : null
 }
 
-const elementsFrom = (chemistry: Chemistry | null | undefined, from: string, letter = ''): Record<string, Taken> =>
-  Object.fromEntries((Object.entries(chemistry ?? {}) as [Element, number | null][]).flatMap(([element, value]) => (value === null ? [] : [[letter === '' ? element : `${letter}${ELEMENT_SYMBOLS[element]}`, whole(String(value), from)]])))
-/** The metal with the higher carbon equivalent, which decides what a weld can stand. */
-function decisive({ chemistries }: Given): { chemistry: Chemistry; from: string } | null {
+const PARTS = { a: 'Metal A', b: 'Metal B', filler: 'Filler' } as const
+type Part = keyof typeof PARTS
+const analysed = (chemistries: Chemistries | undefined, part: Part): string => `Analysis of ${PARTS[part].toLowerCase().replace(/ [ab]$/, (letter) => letter.toUpperCase())}${chemistries?.names?.[part] ? `, ${chemistries.names[part]}` : ''}`
+const elementsFrom = (chemistries: Chemistries | undefined, part: Part | null, letter = ''): Record<string, Taken> =>
+  part === null ? {} : Object.fromEntries((Object.entries(chemistries?.[part] ?? {}) as [Element, number | null][]).flatMap(([element, value]): [string, Taken][] => (value === null ? [] : [[letter === '' ? element : `${letter}${ELEMENT_SYMBOLS[element]}`, { text: String(value), from: analysed(chemistries, part), analysis: true }]])))
+/** The metal with the higher carbon equivalent, which decides what a weld can stand; `differ` where the other has another. */
+function decisive({ chemistries }: Given): { part: Part | null; differ: boolean } {
   const [a, b] = [chemistries?.a, chemistries?.b]
   const ce = (chemistry: Chemistry) => carbonEquivalent('ceIiw', chemistry).value ?? 0
-  if (a && (!b || ce(a) >= ce(b))) return { chemistry: a, from: 'Analysis of metal A' }
-  return b ? { chemistry: b, from: 'Analysis of metal B' } : null
+  if (a && b) return { part: ce(a) >= ce(b) ? 'a' : 'b', differ: ce(a) !== ce(b) }
+  return { part: a ? 'a' : b ? 'b' : null, differ: false }
 }
 
 /** Heat input with thermal efficiency, kJ/mm: as stated, else from the meters. */
@@ -246,8 +257,8 @@ const gasShares = ({ block }: Given): Inputs => {
 
 const AMBIENT = usual('20', 'a usual shop; colder steel needs more')
 const base = (given: Given): Reading => {
-  const found = decisive(given)
-  return { inputs: found ? elementsFrom(found.chemistry, found.from) : {}, said: [found && given.chemistries?.a && given.chemistries.b ? 'The metal with the higher carbon equivalent is filled in.' : null] }
+  const { part, differ } = decisive(given)
+  return { inputs: elementsFrom(given.chemistries, part), said: [differ ? 'The metal with the higher carbon equivalent is filled in.' : null] }
 }
 const hazard = (given: Given): Reading => ({ inputs: { ...base(given).inputs, t85: coolingOf(given) }, said: ['Least heat input, thickest part and the metal with the higher carbon equivalent: the hardest case.'] })
 const spray = (given: Given): Inputs => {
@@ -278,10 +289,10 @@ const CASES: Readonly<Record<string, (given: Given) => Reading>> = {
   'preheat-seferian': (given) => ({ inputs: { ...base(given).inputs, thickness: thickest(given) } }),
   'haz-hardness-yurioka': hazard,
   'haz-hardness-dueren': hazard,
-  'a-number': ({ chemistries }) => ({ inputs: elementsFrom(chemistries?.filler, 'Analysis of the filler lot') }),
-  pren: (given) => ({ inputs: elementsFrom(given.chemistries?.a ?? given.chemistries?.b, 'Analysis of the base metal') }),
-  'ferrite-number': ({ chemistries }) => ({ inputs: elementsFrom(chemistries?.filler, 'Analysis of the filler lot') }),
-  'ferrite-dilution': ({ chemistries }) => ({ inputs: { ...elementsFrom(chemistries?.a, 'Analysis of metal A', 'a'), ...elementsFrom(chemistries?.b, 'Analysis of metal B', 'b'), ...elementsFrom(chemistries?.filler, 'Analysis of the filler lot', 'f'), shareOfA: usual('50', 'both edges melt alike') } }),
+  'a-number': ({ chemistries }) => ({ inputs: elementsFrom(chemistries, 'filler') }),
+  pren: (given) => ({ inputs: elementsFrom(given.chemistries, given.chemistries?.a ? 'a' : 'b') }),
+  'ferrite-number': ({ chemistries }) => ({ inputs: elementsFrom(chemistries, 'filler') }),
+  'ferrite-dilution': ({ chemistries }) => ({ inputs: { ...elementsFrom(chemistries, 'a', 'a'), ...elementsFrom(chemistries, 'b', 'b'), ...elementsFrom(chemistries, 'filler', 'f'), shareOfA: usual('50', 'both edges melt alike') } }),
   'preheat-method-b': (given) => ({ inputs: { cet: equivalent(given, 'cet'), thickness: thickest(given), hydrogen: hydrogen(given), heatInput: heatWithEfficiency(given, 'least'), ambient: AMBIENT, yieldStrength: yieldOf(given) }, said: ['The lowest heat input and the thickest part ask for most preheat.'] }),
   'preheat-method-a': (given) => ({ inputs: { ce: equivalent(given, 'ceIiw'), hydrogen: hydrogen(given), joint: jointKind(given), thickness: of(given.variables.thickness, 'length', 'Thickness', 'most'), thicknessB: of(given.variables.thicknessB, 'length', 'Thickness of B', 'most') ?? of(given.variables.thickness, 'length', 'Thickness, as of A', 'most'), heatInput: heatWithEfficiency(given, 'least') } }),
   'preheat-d1-1-table': (given) => ({ inputs: { category: category(given), thickness: thickest(given), system: usualSystem(given) } }),

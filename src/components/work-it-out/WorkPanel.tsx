@@ -41,7 +41,8 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
   const { variables } = record
   const { chemistries, analyses, choose } = useChemistries(variables, variables.processes[blockIndex ?? 0] ?? null, true)
   if (!calculator) return null
-  const filled = fromRecord(calculator.id, { ...record, chemistries: { ...chemistries, a: readAnalysis(analysis) ?? chemistries.a ?? null } }, blockIndex)
+  const typedAnalysis = readAnalysis(analysis)
+  const filled = fromRecord(calculator.id, { ...record, chemistries: typedAnalysis ? { ...chemistries, a: typedAnalysis, names: { ...chemistries.names, a: 'typed here' } } : chemistries }, blockIndex)
   const own = typed[calculator.id] ?? {}
   const texts = { ...emptyTexts(calculator), ...prices.of(calculator), ...textsOf(filled), ...own }
   const result = calculator.run(texts)
@@ -58,7 +59,7 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
         {calculators.length > 1 ? (
           <Select className="min-w-0 grow sm:max-w-96" label="Method" options={calculators.map(({ id, title }) => ({ value: id, label: title }))} value={calculator.id} onChange={(event) => setChosen(event.target.value)} />
         ) : (
-          <p className="font-medium">{calculator.title}</p>
+          <p className="py-2 font-medium">{calculator.title}</p>
         )}
         <Link className="text-link py-2 text-sm" to={`/calculators/${calculator.id}?${addressOfInputs(calculator, texts)}`} target="_blank">
           Full page with these figures
@@ -142,7 +143,7 @@ function shownText({ inputs }: Calculator, key: string, text: string, system: Un
 function Origin({ filled, changed, remembered, inputKey, of, draftFigure }: { filled: FromRecord; changed: boolean; remembered: boolean; inputKey: string; of: string; draftFigure: string | null }) {
   const taken = filled.taken[inputKey]
   if (changed) return <span className="text-plum">Typed here{taken && !taken.assumed && draftFigure ? `; the ${of} has ${draftFigure}` : ''}</span>
-  if (taken) return <span className={taken.assumed ? 'text-straw-deep' : ''}>{taken.assumed ? `Assumed: ${taken.from}` : `From the ${of}: ${taken.from}`}</span>
+  if (taken) return <span className={taken.assumed ? 'text-straw-deep' : ''}>{taken.assumed ? `Assumed: ${taken.from}` : taken.analysis ? taken.from : `From the ${of}: ${taken.from}`}</span>
   if (remembered) return <span>Kept on this device</span>
   return filled.missing.includes(inputKey) ? <span className="text-straw-deep">Not in the {of}</span> : null
 }

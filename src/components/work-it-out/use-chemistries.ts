@@ -44,9 +44,14 @@ export function useChemistries({ baseMetals: { a, b } }: WeldingVariables, block
     const own = picked[part]
     return heats.length === 0 ? [] : [{ part, label, heats, chosen: own === undefined ? usual(heats, number) : (heats.find(({ id }) => id === own) ?? null) }]
   })
+  const chosenOf = (part: Part) => analyses.find((each) => each.part === part)?.chosen
   const of = (part: Part): Chemistry | null => {
-    const chosen = analyses.find((each) => each.part === part)?.chosen
+    const chosen = chosenOf(part)
     return chosen ? analysisOf(chosen) : null
   }
-  return { analyses, choose: (part, id) => setPicked((before) => ({ ...before, [part]: id })), chemistries: { a: of('a'), b: sameMetal ? of('a') : of('b'), filler: of('filler') } }
+  const names = Object.fromEntries(parts.flatMap(({ part }): [Part, string][] => {
+    const chosen = chosenOf(part === 'b' && sameMetal ? 'a' : part)
+    return chosen ? [[part, `${chosen.kind} ${chosen.number}`]] : []
+  }))
+  return { analyses, choose: (part, id) => setPicked((before) => ({ ...before, [part]: id })), chemistries: { a: of('a'), b: sameMetal ? of('a') : of('b'), filler: of('filler'), names } }
 }

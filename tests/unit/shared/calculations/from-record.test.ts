@@ -105,7 +105,7 @@ describe('preheat', () => {
   const given = (change: object = {}, block: object = {}) => record(change, { ...block, filler: { classification: 'ER70S-6', ...(block as { filler?: object }).filler } }, { chemistries: { a: analysis } })
   it('takes CET from the analysis, the thickest part and the lowest heat input with k', () => {
     const { taken } = fromRecord('preheat-method-b', given({ thicknessB: interval(30, 40, 'length') }), 0)
-    expect(taken.cet).toEqual({ text: '0.331', from: 'Analysis of metal A' })
+    expect(taken.cet).toEqual({ text: '0.331', from: 'Analysis of metal A', analysis: true })
     expect(taken.thickness).toEqual({ text: '40', from: 'Thickness of B, upper end' })
     // 0.8 × 24 × 200 × 60 / 400 / 1000
     expect(taken.heatInput?.text).toBe('0.576')

@@ -69,7 +69,7 @@ describe('beside a field', () => {
     await user.selectOptions(choice, heats[0]?.id ?? '')
     // 0.20 + 1.4/10
     await waitFor(() => expect(box('CET').value).toBe('0.34'))
-    expect(within(panel).getByText('From the draft: Analysis of metal A')).toBeTruthy()
+    expect(within(panel).getByText('Analysis of metal A, heat 48213')).toBeTruthy()
   })
 
   it('takes the only heat of the grade by itself', async () => {
