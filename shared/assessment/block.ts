@@ -159,7 +159,7 @@ function judgeUnion(run: Run, each: readonly Item[], union: readonly Item[], gro
       if (wider && wider.verdict !== 'outside') {
         const missing = maybe.flatMap((side) => each.flatMap((other) => judgedOf(run, other, side)?.missing ?? []))
         const told: RuleVerdict = { ...wider, verdict: 'cannot-tell', sentence: `${wider.sentence} But whether ${names(maybe)} agrees in the other variables can't be told yet.`, missing: [...new Set([...(wider.missing ?? []), ...missing])] }
-        pushFinding(run, item, pool, { judged: [told], used: null, ranges: null, told: [] } satisfies Answer, told, null)
+        pushFinding(run, item, pool, { judged: [told], used: null, ranges: null, told: null } satisfies Answer, told, null)
         continue
       }
     }
@@ -189,5 +189,9 @@ function joinRanges(run: Run, item: Item, sides: readonly Linked[], context: Rul
     const span = spanOf(run, item, side, context)
     if (span) spans.push(span)
   }
-  return unionAll(spans)
+  const { joined } = item
+  if (joined !== null && joined.of.length === spans.length && joined.of.every((span, i) => span === spans[i])) return joined.span
+  const span = unionAll(spans)
+  item.joined = { of: spans, span }
+  return span
 }

@@ -1,10 +1,11 @@
 /** Tells ranges and findings: the words around a rule's verdict, in the shapes that are drawn, printed and sent. */
-import type { Finding, Fix } from '../schemas/assessment.ts'
+import type { Finding, Fix, QualifiedRange } from '../schemas/assessment.ts'
 import { weakest } from '../standards/common/rule-kinds.ts'
 import { distinct } from '../standards/common/wording.ts'
 import type { CouponSide, RuleVerdict } from '../standards/rule.ts'
 import { coversAlone, gridOf, rangeOf as keptRangeOf, sidesOf } from './kept.ts'
 import type { Answer, Item, Judged } from './plan.ts'
+import { lasting } from './remembered.ts'
 import { maskOf, rangeOf, type Linked, type Run } from './run.ts'
 
 /** The range as it is told; kept, because mostly it is told again of the same block. */
@@ -14,12 +15,12 @@ export function pushRange(run: Run, item: Item, side: Linked): void {
   if (given === null) return
   const { block } = run.context
   const id = block === null ? null : block.id
-  if (told !== null && told.processId === id && told.field === item.field && told.class === item.class) {
+  if (told && told.processId === id && told.field === item.field && told.class === item.class) {
     run.out.ranges.push(told)
     return
   }
   const { rule, prepared: { classBasis } } = item
-  kept.told = {
+  const range: QualifiedRange = {
     ruleId: rule.meta.id,
     variable: rule.meta.title,
     label: rule.label,
@@ -34,7 +35,8 @@ export function pushRange(run: Run, item: Item, side: Linked): void {
     basis: given.basis ? weakest(given.basis, classBasis) : classBasis,
     reason: given.reason,
   }
-  run.out.ranges.push(kept.told)
+  if (told !== undefined) kept.told = lasting(range)
+  run.out.ranges.push(range)
 }
 
 /**
@@ -43,21 +45,23 @@ export function pushRange(run: Run, item: Item, side: Linked): void {
  */
 export function pushFinding(run: Run, item: Item, sides: readonly Linked[], answer: Answer, judged: Judged, note: string | null, lone = false): void {
   if (!judged) return
-  const mask = run.reads === null ? -1 : maskOf(sides)
-  const processId = run.context.block === null ? null : run.context.block.id
   // Which other coupons there are to offer is no part of an answer.
-  const keeps = mask >= 0 && (judged.verdict === 'within' || run.others.length === 0)
-  if (keeps) {
-    for (const told of answer.told) {
+  const known = judged.verdict === 'within' || run.others.length === 0 ? answer.told : null
+  if (known === null) {
+    run.out.findings.push(findingOf(run, item, sides, judged, note))
+  } else {
+    const mask = maskOf(sides)
+    const processId = run.context.block === null ? null : run.context.block.id
+    for (const told of known) {
       if (told.mask === mask && told.lone === lone && told.processId === processId) {
         run.out.findings.push(told.finding)
         return
       }
     }
+    const finding = findingOf(run, item, sides, judged, note)
+    run.out.findings.push(finding)
+    if (known.length < MOST_TOLD) known.push({ mask, lone, processId, finding: lasting(finding) })
   }
-  const finding = findingOf(run, item, sides, judged, note)
-  run.out.findings.push(finding)
-  if (keeps && answer.told.length < MOST_TOLD) answer.told.push({ mask, lone, processId, finding })
 }
 
 const MOST_TOLD = 8

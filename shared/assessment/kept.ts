@@ -8,13 +8,14 @@ import type { ProcessBlock } from '../schemas/welding.ts'
 import type { CouponSide, Rule, RuleContext, RuleRange, Standard } from '../standards/rule.ts'
 import { contradictions, type Contradiction } from './contradictions.ts'
 import type { PreparedEdition, PreparedRule } from './prepare.ts'
+import { lasting } from './remembered.ts'
 
 /** One rule's range of a side, with the step of the reasoning that tells of it. */
 export interface KeptRange {
   given: RuleRange | null
   step: string | null
-  /** As an assessment told it last. */
-  told: QualifiedRange | null
+  /** As an assessment told it last; undefined where the range itself is not kept. */
+  told: QualifiedRange | null | undefined
 }
 
 /** The ranges of a side under one edition, for one level, unit system and toughness. */
@@ -91,11 +92,16 @@ export function rangeOf(grid: Grid, { rule, place }: PreparedRule, context: Rule
   if (known !== undefined) return known
   const watched = watch(context)
   const made = withStep(rule.range(watched.context, side), side)
-  grid[place] = watched.looked() ? DEPENDS : made
-  return made
+  if (watched.looked()) {
+    grid[place] = DEPENDS
+    return made
+  }
+  const kept: KeptRange = { ...lasting(made), told: null }
+  grid[place] = kept
+  return kept
 }
 
-const withStep = (given: RuleRange | null, side: CouponSide): KeptRange => ({ given, step: given === null ? null : `${side.coupon.number}: ${given.reason}`, told: null })
+const withStep = (given: RuleRange | null, side: CouponSide): KeptRange => ({ given, step: given === null ? null : `${side.coupon.number}: ${given.reason}`, told: undefined })
 
 /** The context, and whether anything was read of it that differs from procedure to procedure. Its properties are its own, so that a copy of it counts as looking. */
 function watch(context: RuleContext): { context: RuleContext; looked: () => boolean } {

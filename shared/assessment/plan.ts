@@ -2,7 +2,7 @@
  * What a run goes through, worked out once for each choice of coupons: the rules by how they combine, the coupons' sides, and
  * what each rule answered before. It is remembered from the third run on, since a choice that comes once gains nothing.
  */
-import type { AssessedCoupon, Finding, VariableClass } from '../schemas/assessment.ts'
+import type { AssessedCoupon, Finding, QualifiedSpan, VariableClass } from '../schemas/assessment.ts'
 import type { Rule, RuleContext, RuleVerdict, Standard } from '../standards/rule.ts'
 import { keptCoupon, sidesOf, type KeptCoupon, type KeptRange, type KeptSide } from './kept.ts'
 import { effectiveClass, fieldOf, type PreparedEdition, type PreparedRule } from './prepare.ts'
@@ -19,8 +19,8 @@ export interface Answer {
   used: readonly number[] | null
   /** Ranges that looked at the procedure, by the side's place; null where none did. */
   ranges: readonly (KeptRange | undefined)[] | null
-  /** Findings made of it. */
-  told: ToldFinding[]
+  /** Findings made of it; null where it is not kept. */
+  told: ToldFinding[] | null
 }
 
 /** A finding with what else than the answer it rests on. */
@@ -40,6 +40,10 @@ export interface Item {
   row: number
   /** What it answered, by the sides that were asked as bits. */
   remembered: Map<number, Remembered<Answer>>
+  /** Ranges that look at the procedure, by the side's place. */
+  ranges: (Remembered<KeptRange> | undefined)[]
+  /** Ranges that were joined last. */
+  joined: { of: readonly QualifiedSpan[]; span: QualifiedSpan | null } | null
 }
 
 export interface Plan {
@@ -122,7 +126,7 @@ function newPlan(standard: Standard, prepared: PreparedEdition, context: RuleCon
     const { rule } = own
     const variableClass = effectiveClass(own.class, context.toughness)
     const manner: Manner = variableClass === 'not-a-variable' ? variableClass : variableClass === 'nonessential' || rule.meta.withoutCoupon ? 'alone' : sides.length === 0 ? 'unsupported' : rule.meta.combine
-    lists[manner].push({ prepared: own, rule, class: variableClass, field: fieldOf(own, context.path), manner, index, row: index * sides.length, remembered: new Map<number, Remembered<Answer>>() })
+    lists[manner].push({ prepared: own, rule, class: variableClass, field: fieldOf(own, context.path), manner, index, row: index * sides.length, remembered: new Map<number, Remembered<Answer>>(), ranges: [], joined: null })
   })
   return { sides, items: rules.length, direct, each, joint, union }
 }

@@ -5,7 +5,7 @@ import { DEPENDS, gridOf, rangeOf as keptRangeOf, type Grid, type KeptRange, typ
 import type { Answer, Item, Plan } from './plan.ts'
 import type { PreparedEdition } from './prepare.ts'
 import { pathsRead, traceOf, type Reads } from './reads.ts'
-import { giveUp, isWorthNoting, keep, newRemembered, recall } from './remembered.ts'
+import { giveUp, isWorthNoting, keep, lasting, newRemembered, recall } from './remembered.ts'
 
 export interface BlockJudgement { findings: Finding[]; ranges: QualifiedRange[] }
 
@@ -76,9 +76,26 @@ export function rangeOf(run: Run, item: Item, side: Linked, context: RuleContext
   const at = item.row + side.index
   const known = context === run.context ? run.ranges[at] : undefined
   if (known !== undefined) return known
-  const range = keptRangeOf(side.grid, item.prepared, context, side.kept)
+  const range = settled === DEPENDS && context === run.context && run.reads !== null ? rangeByValues(run, item, side, run.reads) : keptRangeOf(side.grid, item.prepared, context, side.kept)
   run.ranges[at] = range
   return range
+}
+
+/** A range that looks at the procedure mostly looks at little of it: it is told again although its rule is asked for something else. */
+function rangeByValues(run: Run, item: Item, side: Linked, reads: Reads): KeptRange {
+  const remembered = (item.ranges[side.index] ??= newRemembered<KeptRange>())
+  const known = recall(remembered, reads)
+  if (known !== null) return known
+  if (!isWorthNoting(remembered)) return keptRangeOf(side.grid, item.prepared, run.context, side.kept)
+  const { trace, context } = traceOf(reads, run.context)
+  const range = keptRangeOf(side.grid, item.prepared, context, side.kept)
+  const paths = pathsRead(trace, range)
+  if (paths !== null) {
+    keep(remembered, reads, paths, { ...lasting(range), told: null })
+    return range
+  }
+  giveUp(remembered)
+  return keptRangeOf(side.grid, item.prepared, run.context, side.kept)
 }
 
 export function spanOf(run: Run, item: Item, side: Linked, context?: RuleContext): QualifiedSpan | null {
@@ -113,7 +130,7 @@ export function answerOf(run: Run, item: Item, sides: readonly Linked[], ask: Qu
   const answer = anew(run, item, sides, ask, context)
   const paths = pathsRead(trace, [answer.judged, answer.ranges])
   if (paths !== null) {
-    keep(remembered, reads, paths, answer)
+    keep(remembered, reads, paths, keptAnswer(answer))
     return answer
   }
   giveUp(remembered)
@@ -121,11 +138,14 @@ export function answerOf(run: Run, item: Item, sides: readonly Linked[], ask: Qu
   return anew(run, item, sides, ask, run.context)
 }
 
+/** Ranges that are kept are told as they were told before. */
+const keptAnswer = ({ judged, used, ranges }: Answer): Answer => ({ judged: lasting(judged), used, ranges: ranges === null ? null : ranges.map((range) => range && { ...lasting(range), told: null }), told: [] })
+
 function anew(run: Run, item: Item, sides: readonly Linked[], ask: Question, context: RuleContext): Answer {
   const { judged, used } = ask(run, item, sides, context)
   // A finding tells of the ranges, whether the verdict looked at them or not.
   if (judged.some((one) => one)) for (const side of sides) rangeOf(run, item, side, context)
-  return { judged, used, ranges: rangesLooking(run, item, sides), told: [] }
+  return { judged, used, ranges: rangesLooking(run, item, sides), told: null }
 }
 
 /** The ranges of the sides asked that looked at the procedure. */
