@@ -9,7 +9,6 @@ const SILICON: ReadonlySet<string> = new Set(['4009', '4010', '4043', '4047', '4
 /** About 3 % magnesium and more. */
 const RICH: ReadonlySet<string> = new Set(['5356', '5183', '5556'])
 const HOT_FIT: ReadonlySet<string> = new Set(['4043', '5554'])
-const PAIR: Readonly<Record<string, string>> = { '4043': 'ER5356', '5356': 'ER4043' }
 
 /** Alloy of a filler: `ER5356`, `S Al 4043A (AlSi5(A))` → 5356, 4043. */
 export const alloyOfFiller = (classification: string): string | null => /(?:^|[^\d])([1-7]\d{3})(?!\d)/.exec(classification)?.[1] ?? null
@@ -33,10 +32,10 @@ function suits(metal: MetalFacts, filler: string): { verdict: Verdict; text: str
   if (alloy.startsWith('5') && magnesium === null) return { verdict: 'cannot-tell', text: `The magnesium of ${metal.name} isn’t stated, and 2.5 % of it decides.` }
   if (alloy.startsWith('5') && magnesium !== null && magnesium > 2.5) {
     if (SILICON.has(filler)) return { verdict: 'unfit', text: `${filler} is not for ${metal.name}: above 2.5 % magnesium a silicon filler makes the weld brittle. Take 5356, 5183 or 5556.` }
-    if (RICH.has(filler) && ['5083', '5086', '5456'].includes(alloy)) return { verdict: 'suits', text: `${filler} is usual for ${metal.name}.` }
+    if (RICH.has(filler) && ['5083', '5086', '5456'].includes(alloy)) return { verdict: 'suits', text: `5356, 5183 and 5556 are usual for ${metal.name}.` }
     if (filler === '5554' && alloy === '5454') return { verdict: 'suits', text: '5554 is usual for 5454, also in hot service.' }
   }
-  if ((alloy.startsWith('6') || alloy === '5052') && ['4043', '5356'].includes(filler)) return { verdict: 'suits', text: `${filler} is one of the two usual fillers for ${metal.name}; the other is ${PAIR[filler]}.` }
+  if ((alloy.startsWith('6') || alloy === '5052') && ['4043', '5356'].includes(filler)) return { verdict: 'suits', text: `4043 and 5356 are the two usual fillers for ${metal.name}.` }
   return { verdict: 'cannot-tell', text: `Nothing here says whether ${filler} suits ${metal.name}.` }
 }
 

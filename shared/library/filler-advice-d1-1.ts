@@ -13,6 +13,7 @@ export function matchingSentence({ metals, filler, process }: Asked): Remark | n
   const [low, high] = [sorted[0], sorted.at(-1)]
   const ksi = strengthClass(process, filler.record)
   if (!low || !high || sorted.length < metals.length || ksi === null || process === null || !['SMAW', 'GMAW', 'FCAW', 'SAW'].includes(process)) return null
+  if (/Single pass only/i.test(filler.row?.notes ?? '')) return remark('d1-1', 'unfit', 'By AWS D1.1 a single-pass-only class matches no group.', SOURCE, 'memory')
   const strengths = new Set([...classesOf(low, process), ...classesOf(high, process)])
   const named = low === high ? `Group ${low}` : `Group ${low} to Group ${high}`
   if (!strengths.has(ksi)) return remark('d1-1', 'unfit', `By AWS D1.1 it does not match ${namesOf(metals)} (${named}): ${low === high ? wanted(low, process) : `${wanted(low, process)} or ${wanted(high, process)}`} would.`, SOURCE, 'memory')

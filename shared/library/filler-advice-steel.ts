@@ -66,7 +66,7 @@ export function alloyFit(asked: Asked): Remark[] {
   const wanted = [...new Set(metals.map(groupFor))]
   const given = filler.row?.iso_9606_filler_group ?? null
   const [group] = wanted
-  if (said.length === 0 && wanted.length === 1 && group && given === group && group === 'FM1') said.push(remark('filler-group', 'suits', `${filler.name} is of the filler group for ${forGroup(group)} (${group}), and so are the metals.`, FM, 'memory'))
+  if (said.length === 0 && wanted.length === 1 && group && given === group && group === 'FM1') said.push(remark('filler-group', 'suits', `Of the filler group for ${forGroup(group)} (${group}), as the metals are.`, FM, 'memory'))
   const d11 = matchingSentence(asked)
   if (d11) said.push(d11)
   if (said.length === 0) said.push(remark('nothing', 'cannot-tell', given && group && given === group ? `${filler.name} is of the filler group for ${forGroup(group)} (${group}), but its alloy (${filler.composition ?? 'not listed'}) is another than that of ${namesOf(metals)}: whether it suits can’t be told here.` : `Nothing here says whether ${filler.name} suits ${namesOf(metals)}.`, FM, 'memory'))

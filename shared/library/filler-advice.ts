@@ -66,7 +66,7 @@ export function fillerAdvice({ a, b, filler, process, serviceTemperature = null,
 /**
  * Fillers of the reference that suit a pair of metals.
  * @param process only fillers of this process
- * @returns the rows with what is said of them, those of matching strength first; undermatching ones are left out
+ * @returns the rows with what is said of them, those of matching strength first; undermatching and single-pass ones are left out
  */
 export function suitableFillers(a: BaseMetal, b: BaseMetal, process: Process | null): { row: FillerRow; advice: FillerAdvice }[] {
   const strong = ({ advice }: { advice: FillerAdvice }): number => (advice.remarks.some(({ id, kind }) => id === 'strength' && kind === 'suits') ? 0 : 1)
@@ -75,7 +75,7 @@ export function suitableFillers(a: BaseMetal, b: BaseMetal, process: Process | n
       const of = process ?? row.processes.map((name) => readProcess(name)?.process ?? null).find((one) => one !== null) ?? null
       if (process !== null && !row.processes.some((name) => readProcess(name)?.process === process)) return []
       const advice = fillerAdvice({ a, b, filler: toFiller(row), process: of })
-      return advice.verdict === 'suits' && !advice.remarks.some(({ id }) => id === 'undermatching') ? [{ row, advice }] : []
+      return advice.verdict === 'suits' && !advice.remarks.some(({ id }) => id === 'undermatching' || id === 'single-pass') ? [{ row, advice }] : []
     })
     .sort((one, other) => strong(one) - strong(other))
 }

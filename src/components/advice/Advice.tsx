@@ -22,7 +22,7 @@ export function Remarks({ remarks }: { remarks: readonly Remark[] }) {
   return (
     <ul className="divide-y divide-hair">
       {remarks.map(({ id, kind, text, source, basis }) => (
-        <li key={id} className="grid gap-x-4 py-2 sm:grid-cols-[7.5rem_minmax(0,1fr)]">
+        <li key={id} className="grid items-start gap-x-4 py-2 sm:grid-cols-[7.5rem_minmax(0,1fr)]">
           <RemarkWord kind={kind} />
           <div className="min-w-0">
             <p className="max-w-prose text-pretty">{text}</p>

@@ -6,12 +6,13 @@ import { FoldedAdvice } from '@/components/advice/Advice.tsx'
 import { ComboBox } from '@/components/fields/ComboBox.tsx'
 import { Checkbox } from '@/components/fields/text.tsx'
 import { call } from '@/lib/api.ts'
+import { subtitleOf } from '@/lib/library-search.ts'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { fillerInWords } from './labels.ts'
 
 const loader = (process: Process | null) => async (text: string, signal: AbortSignal) => {
   const page = await call('listLibrary', { params: { kind: 'filler-metals' }, query: { q: text || undefined, limit: 20, ...(process && process !== 'OTHER' ? { process } : {}) }, signal })
-  return page.items.map((item) => ({ id: item.id, title: item.title, subtitle: item.subtitle, data: item.content }))
+  return page.items.map((item) => ({ id: item.id, title: item.title, subtitle: subtitleOf(item), data: item.content }))
 }
 
 /** The filler metal: from the library with its numbers, written as it is called, or none (autogenous). Sizes and lot of the record stay. */

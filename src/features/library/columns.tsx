@@ -139,10 +139,14 @@ export const Said = ({ value }: { value: Fact['value'] }) => (value === null || 
 /** Basis of a figure in a word; memory is marked. */
 export const BasisWord = ({ basis }: { basis: string | null | undefined }) => (basis ? <span className={basis === 'memory' ? 'text-straw-deep' : 'text-soft'}>{BASIS_WORD[basis] ?? basis}</span> : null)
 
-/** A fact in a list: the figure, and that it is from memory where it is. */
-export const Listed = ({ fact: { value, basis, quiet } = { label: '', value: null } }: { fact: Fact | undefined }) => (
-  <>
-    <Said value={value} />
-    {value !== null && basis === 'memory' && !quiet && <span className="text-sm text-straw-deep"> from memory</span>}
-  </>
-)
+/** A fact in a list: the figure, and that it is from memory where the others of its row are not. */
+export const Listed = ({ facts, at }: { facts: readonly Fact[]; at: number }) => {
+  const { value, basis, quiet } = facts[at] ?? { value: null, basis: null, quiet: true }
+  const told = facts.some((fact) => fact.value !== null && fact.basis && !fact.quiet && fact.basis !== 'memory')
+  return (
+    <>
+      <Said value={value} />
+      {value !== null && basis === 'memory' && !quiet && told && <span className="text-sm text-straw-deep"> from memory</span>}
+    </>
+  )
+}

@@ -3,7 +3,6 @@ import { pasteChemistry, printChemistry, type Unread } from '@shared/library/pas
 import { chemistrySchema, ELEMENTS, type Chemistry, type Element } from '@shared/schemas/heats.ts'
 import { Button } from '@/components/Button.tsx'
 import { FieldError } from '@/components/fields/Field.tsx'
-import { Select } from '@/components/fields/text.tsx'
 
 export const USUAL = {
   steel: ['C', 'Si', 'Mn', 'P', 'S', 'Cr', 'Mo', 'Ni', 'Cu', 'V', 'Nb', 'Ti', 'Al', 'N', 'B'],
@@ -89,7 +88,19 @@ export function ChemistryEditor({ value, onChange, usual, onUnread, error }: Che
             </div>
           )
         })}
-        {more.length > 0 && <Select label="Another" options={more.map((element) => ({ value: element, label: element }))} empty="…" value="" onChange={(event) => setTexts({ ...texts, [event.target.value]: '' })} />}
+        {more.length > 0 && (
+          <div className="min-w-0">
+            <label htmlFor={`${id}-more`} className="mb-0.5 block text-sm font-medium">
+              Another
+            </label>
+            <select id={`${id}-more`} className="box pr-7" value="" onChange={(event) => setTexts({ ...texts, [event.target.value]: '' })}>
+              <option value="">…</option>
+              {more.map((element) => (
+                <option key={element}>{element}</option>
+              ))}
+            </select>
+          </div>
+        )}
       </div>
       <div>
         <p className={told ? 'hidden' : 'text-soft'}>{value.length === 0 ? 'Nothing is entered yet. What is left empty counts as not reported.' : `${Number(sum.toFixed(4))} % in ${value.length} ${value.length === 1 ? 'element' : 'elements'}; the rest is not reported.`}</p>

@@ -1,10 +1,10 @@
 import { useMemo, useState } from 'react'
 import { Link } from 'react-router-dom'
-import { baseMetalTitle, toBaseMetal } from '@shared/library/base-metals.ts'
+import { toBaseMetal } from '@shared/library/base-metals.ts'
 import { fillerAdvice, fillerCare, suitableFillers } from '@shared/library/filler-advice.ts'
 import { toFiller } from '@shared/library/filler-metals.ts'
 import { readProcess } from '@shared/library/processes.ts'
-import { baseMetalRowSchema, fillerRowSchema } from '@shared/library/rows.ts'
+import { baseMetalRowSchema, fillerRowSchema, type FillerRow } from '@shared/library/rows.ts'
 import { processSchema, type Process } from '@shared/schemas/welding.ts'
 import type { LibraryItem } from '@shared/schemas/records.ts'
 import { Remarks, RemarkWord } from '@/components/advice/Advice.tsx'
@@ -14,10 +14,10 @@ import { Sheet } from '@/components/Sheet.tsx'
 import { PROCESS_OPTIONS } from '@/components/variables/options.ts'
 import { useUnits } from '@/hooks/units.ts'
 import { searchLibrary } from '@/lib/library-search.ts'
+import { BASIS_WORD } from '../columns.tsx'
 
 type Picked = ComboItem<Record<string, unknown>>
 const search = searchLibrary('base-metals')
-const MOST = 12
 
 /** A base metal chosen to ask about. */
 function MetalPick({ label, description, picked, onPick }: { label: string; description?: string; picked: Picked | null; onPick: (item: Picked | null) => void }) {
@@ -57,17 +57,33 @@ export function FillerSheets({ item }: { item: LibraryItem }) {
   )
 }
 
+interface Named { text: string; source: string; rows: FillerRow[] }
+
+/** Rows by the reason for which they suit, in the order in which the reasons come. */
+function byReason(found: ReturnType<typeof suitableFillers>): Named[] {
+  const groups = new Map<string, Named>()
+  for (const { row, advice } of found) {
+    const why = advice.remarks.find(({ kind, id }) => kind === 'suits' && id !== 'strength')
+    if (!why) continue
+    // The filler's own name begins some sentences; what follows is the reason.
+    const text = why.text.startsWith(row.classification) ? why.text.slice(row.classification.length).trim() : why.text
+    const key = `${why.id} ${why.id === 'alloy' ? '' : text}`
+    const group = groups.get(key) ?? { text: why.id === 'alloy' ? 'Hold no less Cr, Ni and Mo than the metals.' : text, source: `${why.source} · ${BASIS_WORD[why.basis] ?? why.basis}`, rows: [] }
+    group.rows.push(row)
+    groups.set(key, group)
+  }
+  return [...groups.values()]
+}
+
 /** The reference’s fillers that suit a base metal, by itself or joined to another. */
 export function SuitableSheet({ item }: { item: LibraryItem }) {
   const { stored } = useUnits()
   const [process, setProcess] = useState<Process | null>(null)
   const [b, setB] = useState<Picked | null>(null)
-  const [all, setAll] = useState(false)
   const found = useMemo(() => {
     const metal = toBaseMetal(item.content)
     return suitableFillers(metal, b ? toBaseMetal(b.data) : metal, process)
   }, [item.content, b, process])
-  const shown = all ? found : found.slice(0, MOST)
   return (
     <Sheet id="fillers" title="Fillers that suit" aside={found.length > 0 ? found.length : undefined}>
       <div className="grid gap-4 px-4 py-4 sm:grid-cols-2">
@@ -75,28 +91,24 @@ export function SuitableSheet({ item }: { item: LibraryItem }) {
         <Select label="Process" empty="Every process" options={PROCESS_OPTIONS.filter(({ value }) => value !== 'OTHER')} value={process ?? ''} onChange={(event) => setProcess(processSchema.safeParse(event.target.value).data ?? null)} />
       </div>
       <div className="border-t border-hair px-4 py-1" aria-live="polite">
-        {found.length === 0 && <p className="py-2 text-soft">Cannot tell: no source kept here names a filler for {b ? `${baseMetalTitle(baseMetalRowSchema.parse(item.content))} to ${b.title}` : 'this metal'}{process ? ` by ${process}` : ''}.</p>}
-        <ul>
-          {shown.map(({ row, advice }) => {
-            const [why] = advice.remarks.filter(({ kind }) => kind === 'suits')
-            return (
-              <li key={row.id} className="grid gap-x-4 border-b border-hair py-2 last:border-b-0 sm:grid-cols-[11rem_minmax(0,1fr)_auto]">
-                <Link to={`/library/filler-metals?q=${encodeURIComponent(row.classification)}`} className="text-link font-semibold">
-                  {row.classification}
-                </Link>
-                <span className="min-w-0">
-                  {why?.text} <span className="text-xs text-soft">{why && `${why.source} · ${why.basis === 'memory' ? 'from memory' : why.basis.replace('-', ' ')}`}</span>
-                </span>
-                <span className="whitespace-nowrap text-soft">{row.min_tensile_mpa === null ? 'strength not set' : stored(row.min_tensile_mpa, 'stress')}</span>
-              </li>
-            )
-          })}
-        </ul>
-        {found.length > shown.length && (
-          <button type="button" className="text-link my-2" onClick={() => setAll(true)}>
-            Show all {found.length}
-          </button>
-        )}
+        {found.length === 0 && <p className="py-2 text-soft">Cannot tell: no source kept here names a filler for {b ? `${item.title} to ${b.title}` : 'this metal'}{process ? ` by ${process}` : ''}.</p>}
+        {byReason(found).map(({ text, source, rows }) => (
+          <section key={text} className="border-b border-hair py-2.5 last:border-b-0">
+            <p>{text}</p>
+            <p className="text-xs text-soft">{source}</p>
+            <ul className="mt-1.5 grid grid-cols-[repeat(auto-fill,minmax(10.5rem,1fr))] gap-x-4">
+              {rows.map((row) => (
+                <li key={row.id} className="flex items-baseline justify-between gap-2 py-0.5">
+                  <Link to={`/library/filler-metals?q=${encodeURIComponent(row.classification)}`} className="text-link font-semibold">
+                    {row.classification}
+                  </Link>
+                  <span className="text-sm whitespace-nowrap text-soft">{row.min_tensile_mpa === null ? 'not set' : stored(row.min_tensile_mpa, 'stress')}</span>
+                </li>
+              ))}
+            </ul>
+          </section>
+        ))}
+        {found.length > 0 && <p className="py-2 text-sm text-soft">With the minimum strength of the weld metal; undermatching fillers are left out. Fillers of which nothing is said here may suit as well.</p>}
       </div>
     </Sheet>
   )

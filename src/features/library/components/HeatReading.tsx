@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom'
 import { printChemistry } from '@shared/library/paste-chemistry.ts'
 import type { Quantity } from '@shared/schemas/common.ts'
 import type { Heat, WriteHeat } from '@shared/schemas/heats.ts'
@@ -20,7 +21,7 @@ export function HeatTitle({ heat, content }: { heat: Heat; content: WriteHeat })
       cells={[
         { label: 'Certificate', children: orNot([content.certificate, content.certificateType && `type ${content.certificateType}`].filter(Boolean).join(', ')) },
         { label: 'Received', children: orNot(content.receivedOn && day(content.receivedOn)) },
-        { label: 'Library row', children: content.libraryId ?? <span className="text-soft">none</span> },
+        { label: 'Library', children: content.libraryId === null ? <span className="text-soft">not of a row there</span> : <Link to={`/library/${HEAT_KINDS[content.kind].library}?q=${encodeURIComponent(content.grade)}`} className="text-link">its row</Link> },
         { label: 'Changed', children: day(heat.updatedAt) },
       ]}
     />

@@ -61,7 +61,7 @@ function Kind({ kind }: { kind: LibraryKind }) {
   const columns = useMemo<Column<LibraryItem>[]>(
     () => [
       { id: 'title', header: kind === 'positions' ? 'ASME and AWS' : kind === 'processes' ? 'AWS' : 'Name', className: 'md:min-w-28', cell: (row) => row.title },
-      ...heads.map((header, index): Column<LibraryItem> => ({ id: `fact-${index}`, header, wideOnly: WIDE_ONLY.has(header), className: header === 'Tensile, min.' ? 'whitespace-nowrap' : '', align: header === 'Tensile, min.' ? 'right' : 'left', cell: (row) => <Listed fact={factsOf(row, system).shown[index]} /> })),
+      ...heads.map((header, index): Column<LibraryItem> => ({ id: `fact-${index}`, header, wideOnly: WIDE_ONLY.has(header), className: header === 'Tensile, min.' ? 'whitespace-nowrap' : '', align: header === 'Tensile, min.' ? 'right' : 'left', cell: (row) => <Listed facts={factsOf(row, system).shown} at={index} /> })),
       { id: 'basis', header: 'Basis', className: 'whitespace-nowrap', cell: (row) => (row.origin === 'own' ? <Own /> : <BasisWord basis={row.basis} />) },
       { id: 'source', header: 'Source', hidden: true, cell: (row) => <span className="text-sm text-soft">{row.source}</span> },
     ],

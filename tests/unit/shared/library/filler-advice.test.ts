@@ -23,6 +23,7 @@ describe('whether a filler suits', () => {
     ['us-a516-70', 'us-a36', 'E7018', 'SMAW', 'suits'],
     ['us-a36', 'us-a36', 'ER70S-6', 'GMAW', 'suits'],
     ['us-a572-50', 'us-a572-50', 'E6010', 'SMAW', 'unfit'],
+    ['us-a36', 'us-a36', 'E71T-GS', 'FCAW', 'unfit'],
     ['us-a514-f', 'us-a514-f', 'E7018', 'SMAW', 'cannot-tell'],
     ['us-a387-11-1', 'us-a387-11-1', 'E8018-B2', 'SMAW', 'cannot-tell'],
     ['us-a387-12-1', 'us-a387-12-1', 'E9018-B3', 'SMAW', 'cannot-tell'],
