@@ -28,9 +28,14 @@ export function BeadPage() {
   const { person } = useSession()
   // Lists and messages open outside this page's own element, so the whole window goes dark with it.
   useEffect(() => {
-    const before = document.documentElement.classList.contains('night')
-    document.documentElement.classList.add('night')
-    return () => void document.documentElement.classList.toggle('night', before)
+    const { classList } = document.documentElement
+    const before = classList.contains('night')
+    // After the layout around it has put the person's own theme.
+    const timer = setTimeout(() => classList.add('night'))
+    return () => {
+      clearTimeout(timer)
+      classList.toggle('night', before)
+    }
   }, [])
   const edit = search.get('edit')
   const stored = trial.data?.beads.find((bead) => bead.id === edit) ?? null

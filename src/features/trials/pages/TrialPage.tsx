@@ -18,7 +18,7 @@ import { BeadDetail } from '../components/BeadDetail.tsx'
 import { BeadPlot } from '../components/BeadPlot.tsx'
 import { BeadTable } from '../components/BeadTable.tsx'
 import { CompareSheet } from '../components/CompareSheet.tsx'
-import { PromoteDialog } from '../components/PromoteDialog.tsx'
+import { bestOf, PromoteDialog } from '../components/PromoteDialog.tsx'
 import { TrialDialog } from '../components/TrialDialog.tsx'
 import { WaitingList } from '../components/WaitingList.tsx'
 import { WireCurves } from '../components/WireCurves.tsx'
@@ -52,6 +52,9 @@ function TrialScreen({ trial }: { trial: Trial }) {
   const { mode } = useMachineMode(last?.content.machineId ?? null, last?.content.modeKey ?? null)
   const shown = beads.find(({ number }) => String(number) === search.get('bead')) ?? null
   const records = trial.may.includes('record')
+  // From a bead that went wrong one goes back to the best before another knob is tried. [common practice]
+  const best = bestOf(beads)
+  const back = best !== null && last !== undefined && best.id !== last.id && (last.content.score ?? 5) < (best.content.score ?? 0) ? best : null
   const none = <span className="text-soft">not yet</span>
   return (
     <div className="space-y-5">
@@ -69,6 +72,7 @@ function TrialScreen({ trial }: { trial: Trial }) {
       {trial.goal && <p className="max-w-prose text-pretty"><span className="font-medium">Good when:</span> {trial.goal}</p>}
       <div className="no-print flex flex-wrap items-center gap-x-4 gap-y-2">
         {records && <ButtonLink kind="primary" to={last || waiting.beads.length > 0 ? `/dial-in/${trial.id}/bead` : `/dial-in/${trial.id}/bead?copy=none`} className="min-h-14 px-6 text-lg! max-sm:w-full">{last || waiting.beads.length > 0 ? 'Copy last bead, change one thing' : 'Log the first bead'}</ButtonLink>}
+        {records && back && <ButtonLink to={`/dial-in/${trial.id}/bead?copy=${back.id}`} className="min-h-14 px-5 text-lg! max-sm:w-full">Back to bead {back.number}, the best</ButtonLink>}
         {trial.may.includes('promote') && beads.length > 0 && <Button className="max-sm:min-h-12 max-sm:grow" onClick={() => setOpen({ what: 'promote', bead: shown })}>Make it a procedure</Button>}
         {trial.may.includes('save') && <Button kind="quiet" className="max-sm:min-h-12" onClick={() => setOpen({ what: 'title' })}>Change title and goal</Button>}
         {trial.may.includes('discard') && <Button kind="quiet" className="max-sm:min-h-12" onClick={() => setOpen({ what: 'discard' })}>Discard the trial</Button>}
