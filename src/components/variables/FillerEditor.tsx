@@ -1,4 +1,3 @@
-import { useMemo } from 'react'
 import { fillerSchema, type Filler, type Process } from '@shared/schemas/welding.ts'
 import { toFiller } from '@shared/library/filler-metals.ts'
 import { fillerAdvice } from '@shared/library/filler-advice.ts'
@@ -9,6 +8,7 @@ import { call } from '@/lib/api.ts'
 import { subtitleOf } from '@/lib/library-search.ts'
 import { inputId, useSheet, useSheetField } from './context.ts'
 import { fillerInWords } from './labels.ts'
+import { useOwnRows } from './own-rows.ts'
 
 const loader = (process: Process | null) => async (text: string, signal: AbortSignal) => {
   const page = await call('listLibrary', { params: { kind: 'filler-metals' }, query: { q: text || undefined, limit: 20, ...(process && process !== 'OTHER' ? { process } : {}) }, signal })
@@ -19,7 +19,8 @@ const loader = (process: Process | null) => async (text: string, signal: AbortSi
 export function FillerEditor({ path, label, process }: { path: string; label: string; process: Process | null }) {
   const { value, set, error } = useSheetField<Filler>(`variables.${path}`)
   const { baseMetals, serviceTemperature } = useSheet().content.variables
-  const advice = useMemo(() => fillerAdvice({ ...baseMetals, filler: value, process, serviceTemperature: serviceTemperature?.si ?? null }), [baseMetals, value, process, serviceTemperature])
+  const library = useOwnRows(baseMetals.a, baseMetals.b, value)
+  const advice = fillerAdvice({ ...baseMetals, filler: value, process, serviceTemperature: serviceTemperature?.si ?? null, library })
   const kept = { diameters: value.diameters, tradeName: value.tradeName, lot: value.lot, fluxTradeName: value.fluxTradeName }
   return (
     <div className="flex flex-wrap items-center gap-x-4 gap-y-1.5">
