@@ -9,6 +9,7 @@ import { complain, createSteps } from '../lib/steps.mjs'
 import { ensureCluster, releaseCluster } from '../postgres.ts'
 import { measureArcData } from './arc-data.ts'
 import { measureAssessments } from './assessments.ts'
+import { measureJoint, measureJointGeometry } from './joint.ts'
 import { measureLookup } from './lookup.ts'
 import { median, table, type Figure } from './measure.ts'
 import { measurePdf } from './pdf.ts'
@@ -64,6 +65,7 @@ async function bench(): Promise<void> {
       const engineer = await signInAs(baseUrl, 'engineer')
       await measure('Look-up', async () => measureLookup(await signInAs(baseUrl, 'welder'), environment, seconds))
       await measure('PDF', () => measurePdf(engineer, baseUrl, seconds))
+      await measure('Joint', () => measureJoint(engineer, baseUrl, seconds))
       const { pid } = product
       await measure('Arc data', () => measureArcData(engineer, baseUrl, pid, seconds))
     }
@@ -76,6 +78,7 @@ async function bench(): Promise<void> {
 
 try {
   await measure('Assessments', () => measureAssessments(seconds))
+  await measure('Joint geometry', () => measureJointGeometry(seconds))
   if (!engineOnly) await bench()
 } catch (error) {
   complain(error)

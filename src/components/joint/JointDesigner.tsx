@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { useDeferredValue, useState } from 'react'
 import type { Control, FieldValues } from 'react-hook-form'
 import type { Interval } from '@shared/schemas/common.ts'
 import { handlesOf, movedInterval, type JointHandle } from '@shared/calculations/joint-handles.ts'
@@ -40,6 +40,8 @@ export function JointDesigner({ control, system, sequence }: { control: Control<
   const picture = drawable ? jointPicture(geometry, { width, maxHeight: width < 520 ? 220 : 300 }) : null
   const handles = drawable ? handlesOf(setting, geometry) : []
   const { joint } = variables
+  // The list below follows when there is time; the drawing at once.
+  const [restedVariables, restedGeometry] = [useDeferredValue(variables), useDeferredValue(geometry)]
 
   const open = (field: string, handle: JointHandle | null) => {
     if (!picture) return
@@ -105,7 +107,7 @@ export function JointDesigner({ control, system, sequence }: { control: Control<
         </figcaption>
       </figure>
       <DetailNote joint={joint} thickness={variables.thickness} system={variables.unitSystem} />
-      {sequence && <PassSequence variables={variables} geometry={geometry} system={system} onBlocks={edit.setBlocks} onHot={setHotPass} />}
+      {sequence && <PassSequence variables={restedVariables} geometry={restedGeometry} system={system} onChange={edit.changeBlocks} onHot={setHotPass} />}
       {picking && <DetailPicker variables={variables} onClose={() => setPicking(false)} onPick={takeDetail} />}
     </>
   )

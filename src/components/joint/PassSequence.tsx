@@ -1,5 +1,5 @@
 import { ArrowDown, ArrowUp, Plus, X } from 'lucide-react'
-import { useId, useState } from 'react'
+import { memo, useId, useState } from 'react'
 import type { Quantity } from '@shared/schemas/common.ts'
 import { layOutPasses, passEstimate } from '@shared/calculations/bead-layout.ts'
 import type { JointGeometry } from '@shared/calculations/joint-geometry.ts'
@@ -23,7 +23,7 @@ export interface PassSequenceProps {
   variables: WeldingVariables
   geometry: JointGeometry
   system: UnitSystem
-  onBlocks: (blocks: ProcessBlock[]) => void
+  onChange: (change: (blocks: ProcessBlock[]) => ProcessBlock[]) => void
   /** The pass that is pointed at, by its place. */
   onHot: (order: number | null) => void
 }
@@ -34,31 +34,35 @@ const nameOf = (blocks: readonly ProcessBlock[], block: ProcessBlock, index: num
 }
 
 /** The passes of all processes in the order in which they are welded: moved, given to another process, or laid out from bead sizes. */
-export function PassSequence({ variables, geometry, system, onBlocks, onHot }: PassSequenceProps) {
+export const PassSequence = memo(function PassSequence({ variables, geometry, system, onChange, onHot }: PassSequenceProps) {
   const blocks = variables.processes
   const head = useId()
   const steps = sequenceOf(blocks)
   const twoSides = (geometry.groove?.regions.length ?? 0) > 1 || (geometry.groove === null && geometry.fillets.length > 1)
-  const change = (next: ProcessBlock[]) => onBlocks(next)
   const move = (at: number, by: 1 | -1) => {
-    change(movedPass(blocks, at, at + by))
+    onChange((now) => movedPass(now, at, at + by))
     requestAnimationFrame(() => document.getElementById(`${head}-${at + by}-${by === 1 ? 'down' : 'up'}`)?.focus())
+  }
+  const planned = (next: ProcessBlock[]) => {
+    const before = blocks
+    onChange((now) => now.map((block) => ({ ...block, passes: next.find(({ id }) => id === block.id)?.passes ?? block.passes })))
+    say('Passes laid out from the bead sizes', { undo: () => onChange((now) => now.map((block) => ({ ...block, passes: before.find(({ id }) => id === block.id)?.passes ?? block.passes }))) })
   }
   return (
     <section aria-labelledby={head} className="no-print border-b border-rule px-4 py-3">
       <h3 id={head} className="cell-label">
         Pass sequence
       </h3>
-      <LayOut {...{ variables, geometry, system, twoSides }} onPlan={(next) => { const before = blocks; change(next); say('Passes laid out from the bead sizes', { undo: () => onBlocks([...before]) }) }} />
+      <LayOut {...{ variables, geometry, system, twoSides }} onPlan={planned} />
       {steps.length > 0 && (
         <ol className="mt-3 border-t border-hair">
           {steps.map(({ block, pass }, order) => (
             <li key={order} className="flex flex-wrap items-center gap-x-2 gap-y-1 border-b border-hair py-1" onPointerEnter={() => onHot(order)} onPointerLeave={() => onHot(null)} onFocus={() => onHot(order)} onBlur={() => onHot(null)}>
               <span aria-hidden="true" className={`h-8 w-1.5 shrink-0 ${HEATS[heatOf(order, steps.length)] ?? HEATS[3]}`} />
               <span className="w-8 shrink-0 font-narrow text-lg font-semibold">{pass.number}</span>
-              <Choice label={`Place ${order + 1}, process`} value={blocks[block]?.id ?? ''} options={blocks.map((one, index) => ({ value: one.id, label: nameOf(blocks, one, index) }))} onChange={(id) => change(passToProcess(blocks, order, id))} wide />
-              <Choice label={`Place ${order + 1}, layer`} value={pass.layer ?? ''} empty="Layer" options={LAYERS} onChange={(layer) => change(changedPass(blocks, order, { layer: (layer || null) as Pass['layer'] }))} />
-              {twoSides && <Choice label={`Place ${order + 1}, side`} value={pass.side ?? ''} empty="Side" options={[{ value: 'first', label: 'Side 1' }, { value: 'second', label: 'Side 2' }]} onChange={(side) => change(changedPass(blocks, order, { side: (side || null) as Pass['side'] }))} />}
+              <Choice label={`Place ${order + 1}, process`} value={blocks[block]?.id ?? ''} options={blocks.map((one, index) => ({ value: one.id, label: nameOf(blocks, one, index) }))} onChange={(id) => onChange((now) => passToProcess(now, order, id))} wide />
+              <Choice label={`Place ${order + 1}, layer`} value={pass.layer ?? ''} empty="Layer" options={LAYERS} onChange={(layer) => onChange((now) => changedPass(now, order, { layer: (layer || null) as Pass['layer'] }))} />
+              {twoSides && <Choice label={`Place ${order + 1}, side`} value={pass.side ?? ''} empty="Side" options={[{ value: 'first', label: 'Side 1' }, { value: 'second', label: 'Side 2' }]} onChange={(side) => onChange((now) => changedPass(now, order, { side: (side || null) as Pass['side'] }))} />}
               <span className="min-w-20 grow text-right text-sm text-soft">{pass.beadArea ? `${figure(fromSi(pass.beadArea.si, 'area', SHOWN_UNIT[system].area), system === 'SI' ? 1 : 3)} ${SHOWN_UNIT[system].area}` : ''}</span>
               <span className="flex shrink-0">
                 <Icon id={`${head}-${order}-up`} label={`Move place ${order + 1} earlier`} disabled={order === 0} onClick={() => move(order, -1)}>
@@ -67,7 +71,7 @@ export function PassSequence({ variables, geometry, system, onBlocks, onHot }: P
                 <Icon id={`${head}-${order}-down`} label={`Move place ${order + 1} later`} disabled={order === steps.length - 1} onClick={() => move(order, 1)}>
                   <ArrowDown size={15} aria-hidden="true" />
                 </Icon>
-                <Icon id={`${head}-${order}-out`} label={`Take out place ${order + 1}`} disabled={false} onClick={() => change(withoutPass(blocks, order))}>
+                <Icon id={`${head}-${order}-out`} label={`Take out place ${order + 1}`} disabled={false} onClick={() => onChange((now) => withoutPass(now, order))}>
                   <X size={15} aria-hidden="true" />
                 </Icon>
               </span>
@@ -77,14 +81,14 @@ export function PassSequence({ variables, geometry, system, onBlocks, onHot }: P
       )}
       {steps.length < MOST && blocks.length > 0 && (
         <p className="mt-2">
-          <Button kind="quiet" icon={<Plus size={14} aria-hidden="true" />} onClick={() => change(withPass(blocks))}>
+          <Button kind="quiet" icon={<Plus size={14} aria-hidden="true" />} onClick={() => onChange((now) => withPass(now))}>
             Add to the sequence
           </Button>
         </p>
       )}
     </section>
   )
-}
+})
 
 /** Bead sections of each process, and the passes that they make. */
 function LayOut({ variables, geometry, system, twoSides, onPlan }: { variables: WeldingVariables; geometry: JointGeometry; system: UnitSystem; twoSides: boolean; onPlan: (blocks: ProcessBlock[]) => void }) {

@@ -1,5 +1,5 @@
 import { useController, useWatch, type Control, type FieldValues } from 'react-hook-form'
-import { useEffect, useEffectEvent, useMemo, useRef } from 'react'
+import { useCallback, useEffect, useEffectEvent, useMemo, useRef } from 'react'
 import type { Interval } from '@shared/schemas/common.ts'
 import type { Joint, ProcessBlock, WeldingVariables } from '@shared/schemas/welding.ts'
 import { jointGeometry, settingOf, type JointGeometry, type JointSetting } from '@shared/calculations/joint-geometry.ts'
@@ -39,7 +39,7 @@ export interface JointEdit {
   /** Writes a value at once. */
   write: (field: string, value: Interval | null) => void
   setJoint: (change: Partial<Joint>) => void
-  setBlocks: (blocks: ProcessBlock[]) => void
+  changeBlocks: (change: (blocks: ProcessBlock[]) => ProcessBlock[]) => void
 }
 
 /** The joint of a form, drawn at every keystroke and move of the hand. */
@@ -71,6 +71,16 @@ export function useJointEdit(control: Control<FieldValues>, system: UnitSystem):
       else if (field === 'thicknessB') thicknessB.onChange(value)
     }
   }
+  const writeBlocks = processes.onChange
+  // Two quick changes build on one another, also before the first is drawn.
+  const blocks = useRef(typed.processes)
+  useEffect(() => {
+    blocks.current = typed.processes
+  }, [typed.processes])
+  const changeBlocks = useCallback((change: (blocks: ProcessBlock[]) => ProcessBlock[]) => {
+    blocks.current = change(blocks.current)
+    writeBlocks(blocks.current)
+  }, [writeBlocks])
   const timer = useRef<ReturnType<typeof setTimeout> | null>(null)
   const settle = () => {
     if (timer.current) clearTimeout(timer.current)
@@ -103,6 +113,6 @@ export function useJointEdit(control: Control<FieldValues>, system: UnitSystem):
       writeAll([[field, value]])
     },
     setJoint: (change) => joint.onChange({ ...(joint.value as Joint), ...change }),
-    setBlocks: (blocks) => processes.onChange(blocks),
+    changeBlocks,
   }
 }
