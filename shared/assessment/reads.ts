@@ -33,9 +33,18 @@ const KEYS = ' keys'
  * The values of one procedure by path, each looked up once. A mark is what can be compared: the value itself, or that it is a
  * record, is not there, or has no record around it; undefined = not looked up yet.
  */
-export interface Reads { paths: Paths; values: unknown[]; marks: unknown[] }
+export interface Reads {
+  paths: Paths
+  values: unknown[]
+  marks: unknown[]
+  /** Traces that may still be taken. */
+  traces: number
+}
 
-export const readsOf = (paths: Paths, procedure: WeldingVariables): Reads => ({ paths, values: [procedure], marks: [RECORD] })
+/** Noting what is read takes far longer than reading: a few rules a run, so that no single run is slow. */
+const MOST_TRACES = 6
+
+export const readsOf = (paths: Paths, procedure: WeldingVariables): Reads => ({ paths, values: [procedure], marks: [RECORD], traces: MOST_TRACES })
 
 /** What the procedure holds at a path, as a mark. */
 export function markAt(reads: Reads, path: number): unknown {
@@ -73,6 +82,7 @@ export interface Trace {
 export function traceOf(reads: Reads, context: RuleContext): { trace: Trace; context: RuleContext } {
   const trace: Trace = { reads, read: new Set(), watched: new Map(), lost: false }
   let block = 0
+  reads.traces -= 1
   if (context.block !== null) for (const key of context.path.split('.')) block = childOf(reads.paths, block, key)
   if (block !== 0) markAt(reads, block)
   return { trace, context: { ...context, procedure: watch(trace, 0) as WeldingVariables, block: context.block === null ? null : (watch(trace, block) as RuleContext['block']) } }

@@ -86,7 +86,7 @@ function rangeByValues(run: Run, item: Item, side: Linked, reads: Reads): KeptRa
   const remembered = (item.ranges[side.index] ??= newRemembered<KeptRange>())
   const known = recall(remembered, reads)
   if (known !== null) return known
-  if (!isWorthNoting(remembered)) return keptRangeOf(side.grid, item.prepared, run.context, side.kept)
+  if (reads.traces === 0 || !isWorthNoting(remembered)) return keptRangeOf(side.grid, item.prepared, run.context, side.kept)
   const { trace, context } = traceOf(reads, run.context)
   const range = keptRangeOf(side.grid, item.prepared, context, side.kept)
   const paths = pathsRead(trace, range)
@@ -125,7 +125,7 @@ export function answerOf(run: Run, item: Item, sides: readonly Linked[], ask: Qu
     if (ranges !== null) for (let i = 0; i < ranges.length; i += 1) if (ranges[i] !== undefined) run.ranges[item.row + i] = ranges[i]
     return known
   }
-  if (!isWorthNoting(remembered)) return anew(run, item, sides, ask, run.context)
+  if (reads.traces === 0 || !isWorthNoting(remembered)) return anew(run, item, sides, ask, run.context)
   const { trace, context } = traceOf(reads, run.context)
   const answer = anew(run, item, sides, ask, context)
   const paths = pathsRead(trace, [answer.judged, answer.ranges])

@@ -64,13 +64,13 @@ describe('a procedure that is edited', () => {
     const freeze = (value: unknown): void => { if (typeof value === 'object' && value !== null) Object.values(Object.freeze(value)).forEach(freeze) }
     const frozen = structuredClone(by.procedure)
     freeze(frozen)
-    const all = Array.from({ length: 6 }, () => assess({ ...by, coupons, procedure: frozen }))
+    const all = Array.from({ length: 20 }, () => assess({ ...by, coupons, procedure: frozen }))
     for (const one of all) expect(one).toEqual(assess({ ...by, coupons: structuredClone(coupons) }))
   })
   test('a record edited in place between two runs is judged as it stands', () => {
     const [{ coupons, ...by }] = scenes as [Scene]
     const own = structuredClone(by.procedure)
-    for (let run = 0; run < 5; run += 1) assess({ ...by, coupons, procedure: own })
+    for (let run = 0; run < 20; run += 1) assess({ ...by, coupons, procedure: own })
     own.variables.thickness = interval(400, undefined, 'length')
     expect(assess({ ...by, coupons, procedure: own })).toEqual(assess({ ...by, coupons: structuredClone(coupons), procedure: own }))
   })
