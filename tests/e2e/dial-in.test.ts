@@ -1,3 +1,4 @@
+import path from 'node:path'
 import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { PanelCard } from '@shared/schemas/machines.ts'
@@ -82,7 +83,10 @@ describe('from six trial beads to a procedure with a panel card', () => {
     await phone.getByRole('button', { name: 'Set Frequency to 120 Hz' }).click()
     expect(await phone.getByRole('textbox', { name: 'Frequency', exact: true }).inputValue()).toBe('120')
     await phone.getByText('2 things changed').waitFor()
+    await phone.getByLabel('Take a photo').setInputFiles(path.join(import.meta.dirname, '../fixtures/photos/macro-with-place.jpg'))
+    await phone.getByRole('list', { name: 'Photos to send' }).getByText('macro-with-place.jpg').waitFor()
     await saveBead(2)
+    await eventually(async () => (await trial()).beads[1]?.photos.map(({ mediaType }) => mediaType)).toEqual(['image/jpeg'])
   })
 
   it('loses nothing when the network drops between two beads', async () => {

@@ -17,7 +17,9 @@ export type BeadDraft = z.infer<typeof draftSchema>
 const waitingSchema = z.object({ id: z.uuid(), content: beadContentSchema, at: z.iso.datetime(), /** Why the server will not take it as it stands. */ refusal: z.string().nullable().default(null) })
 export type WaitingBead = z.infer<typeof waitingSchema>
 
-const draftKey = (personId: string, trialId: string, beadId: string | null) => `sidebend.bead.${personId}.${trialId}.${beadId ?? 'new'}`
+/** A new bead is kept by the bead that it copies, so that starting another copy never writes over one half written. */
+const newKeys = (personId: string, trialId: string) => `sidebend.bead.${personId}.${trialId}.new.`
+const editKey = (personId: string, trialId: string, beadId: string) => `sidebend.bead.${personId}.${trialId}.${beadId}`
 const waitingKey = (personId: string, trialId: string) => `sidebend.beads.${personId}.${trialId}`
 
 function read<T>(schema: z.ZodType<T>, name: string): T | null {
@@ -39,8 +41,21 @@ function write(name: string, value: unknown): boolean {
   }
 }
 
-export const readDraft = (personId: string, trialId: string, beadId: string | null): BeadDraft | null => read(draftSchema, draftKey(personId, trialId, beadId))
-export const keepDraft = (personId: string, trialId: string, beadId: string | null, draft: BeadDraft | null): boolean => write(draftKey(personId, trialId, beadId), draft)
+/** New beads of a trial that were left half written, the latest first. */
+export function readNewDrafts(personId: string, trialId: string): BeadDraft[] {
+  try {
+    const names = Object.keys(localStorage).filter((name) => name.startsWith(newKeys(personId, trialId)))
+    return names.flatMap((name) => read(draftSchema, name) ?? []).sort((one, other) => other.at.localeCompare(one.at))
+  } catch {
+    return []
+  }
+}
+export const keepNewDraft = (personId: string, trialId: string, draft: BeadDraft): boolean => write(`${newKeys(personId, trialId)}${draft.from ?? 'first'}`, draft)
+export const dropNewDraft = (personId: string, trialId: string, from: string | null): boolean => write(`${newKeys(personId, trialId)}${from ?? 'first'}`, null)
+
+/** Changes to a stored bead that are not on the server yet. */
+export const readEdit = (personId: string, trialId: string, beadId: string): BeadDraft | null => read(draftSchema, editKey(personId, trialId, beadId))
+export const keepEdit = (personId: string, trialId: string, beadId: string, draft: BeadDraft | null): boolean => write(editKey(personId, trialId, beadId), draft)
 
 export const readWaiting = (personId: string, trialId: string): WaitingBead[] => read(z.array(waitingSchema), waitingKey(personId, trialId)) ?? []
 export const keepWaiting = (personId: string, trialId: string, beads: readonly WaitingBead[]): boolean => write(waitingKey(personId, trialId), beads.length > 0 ? beads : null)

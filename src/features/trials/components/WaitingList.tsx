@@ -1,6 +1,6 @@
 import { useNavigate } from 'react-router-dom'
 import { Button } from '@/components/Button.tsx'
-import { heldPictures, keepDraft } from '../kept.ts'
+import { heldPictures, keepNewDraft } from '../kept.ts'
 import type { Waiting } from '../waiting.ts'
 
 /** Beads that this device holds and the server does not have yet. */
@@ -11,7 +11,7 @@ export function WaitingList({ waiting, trialId, personId }: { waiting: Waiting; 
   const refused = beads.filter(({ refusal }) => refusal !== null)
   const waits = beads.filter(({ refusal }) => refusal === null)
   const open = (bead: (typeof beads)[number]) => {
-    keepDraft(personId, trialId, null, { id: bead.id, content: bead.content, from: null, version: null, at: bead.at })
+    keepNewDraft(personId, trialId, { id: bead.id, content: bead.content, from: null, version: null, at: new Date().toISOString() })
     waiting.take(bead.id)
     void navigate(`/dial-in/${trialId}/bead`)
   }

@@ -17,7 +17,7 @@ import { same } from '@/lib/draft/paths.ts'
 import { asProblem } from '@/lib/problem.ts'
 import { trialQuery } from '../api.ts'
 import { BeadForm } from '../form/BeadForm.tsx'
-import { freshBead, holdPictures, keepDraft, keepWaiting, readDraft, readWaiting, type BeadDraft } from '../kept.ts'
+import { dropNewDraft, freshBead, holdPictures, keepEdit, keepNewDraft, keepWaiting, readEdit, readNewDrafts, readWaiting, type BeadDraft } from '../kept.ts'
 
 /** The form of a bead by night: a new one, copied from another (`?copy=`), or one that is stored (`?edit=`). */
 export function BeadPage() {
@@ -79,38 +79,40 @@ function baseOf(trial: Trial, copy: string | null, personId: string): Pick<Bead,
 }
 
 function NewBead({ trial, copy, personId }: { trial: Trial; copy: string | null; personId: string }) {
+  const client = useQueryClient()
   const navigate = useNavigate()
   const { system } = useUnits()
   const [base] = useState(() => baseOf(trial, copy, personId))
   const fresh = () => freshBead(base ? copyBead(base.content) : beadContentSchema.parse({}), base?.id ?? null)
   const [kept] = useState(() => {
-    const found = readDraft(personId, trial.id, null)
-    // What was typed is shown again unless another bead is copied by choice.
-    return found && (found.from === (base?.id ?? null) || copy === null) ? found : null
+    const drafts = readNewDrafts(personId, trial.id)
+    // Copying the last goes on with whatever was left half written; copying a bead by choice, only with a copy of that one.
+    return (copy === null ? drafts[0] : drafts.find(({ from }) => from === (base?.id ?? null))) ?? null
   })
   const [draft, setDraft] = useState<BeadDraft>(() => kept ?? fresh())
   const [pictures, setPictures] = useState<readonly File[]>([])
-  const [resumed, setResumed] = useState(kept !== null && (kept.version !== null || !same(kept.content, fresh().content)))
+  const [resumed, setResumed] = useState(kept !== null)
   const from = trial.beads.find(({ id }) => id === draft.from) ?? (base?.id === draft.from ? base : null)
   const number = (trial.beads.at(-1)?.number ?? 0) + readWaiting(personId, trial.id).length + 1
 
   const change = (content: BeadContent) => {
     const next = { ...draft, content, at: new Date().toISOString() }
     setDraft(next)
-    keepDraft(personId, trial.id, null, next)
+    keepNewDraft(personId, trial.id, next)
   }
   const save = (content: BeadContent) => {
     // First onto this device, then on its way: a dropped network costs nothing.
     const safe = keepWaiting(personId, trial.id, [...readWaiting(personId, trial.id).filter(({ id }) => id !== draft.id), { id: draft.id, content, at: new Date().toISOString(), refusal: null }])
     if (!safe) return void sendAtOnce(content)
     holdPictures(draft.id, pictures)
-    keepDraft(personId, trial.id, null, null)
+    dropNewDraft(personId, trial.id, draft.from)
     void navigate(`/dial-in/${trial.id}`)
   }
   /** Where the device keeps nothing, the form stays until the server has the bead. */
   const sendAtOnce = async (content: BeadContent) => {
     try {
       await call('addBead', { params: { id: trial.id }, body: { id: draft.id, content } })
+      await client.invalidateQueries({ queryKey: trialQuery(trial.id).queryKey })
       if (pictures.length > 0) await upload('addBeadPhotos', { params: { id: draft.id }, files: pictures })
       void navigate(`/dial-in/${trial.id}`)
     } catch (error) {
@@ -120,14 +122,19 @@ function NewBead({ trial, copy, personId }: { trial: Trial; copy: string | null;
   return (
     <>
       <Head title={`Bead ${number}`} about={from ? `A copy of bead ${from.number}${from.content.score ? `, which scored ${from.content.score}` : ''}${from.content.faults.length > 0 ? ` (${faultsInWords(from.content.faults)})` : ''}. Change one thing.` : `The first bead of ${trial.number}, ${trial.title}.`} />
-      {resumed && (
-        <div role="status" className="mx-4 mb-4 flex flex-wrap items-center justify-between gap-3 border-l-4 border-l-straw bg-straw-bg px-3 py-2">
-          <p>You were writing this bead; it is as you left it.</p>
-          <Button className="min-h-12" onClick={() => { setDraft(fresh()); keepDraft(personId, trial.id, null, null); setResumed(false) }}>Start anew</Button>
-        </div>
-      )}
+      {resumed && <Resumed said="You were writing this bead; it is as you left it." otherwise="Start anew" onOtherwise={() => { dropNewDraft(personId, trial.id, draft.from); setDraft(fresh()); setResumed(false) }} />}
       <BeadForm content={draft.content} onChange={change} before={from} system={system} pictures={pictures} onPictures={setPictures} onSave={save} saveLabel={`Save bead ${number}`} />
     </>
+  )
+}
+
+/** What was typed before is here again, and the way out of it. */
+function Resumed({ said, otherwise, onOtherwise }: { said: string; otherwise: string; onOtherwise: () => void }) {
+  return (
+    <div role="status" className="mx-4 mb-4 flex flex-wrap items-center justify-between gap-3 border-l-4 border-l-straw bg-straw-bg px-3 py-2">
+      <p>{said}</p>
+      <Button className="min-h-12" onClick={onOtherwise}>{otherwise}</Button>
+    </div>
   )
 }
 
@@ -135,7 +142,10 @@ function EditBead({ trial, bead, personId }: { trial: Trial; bead: Bead; personI
   const client = useQueryClient()
   const navigate = useNavigate()
   const { system } = useUnits()
-  const [draft, setDraft] = useState<BeadDraft>(() => readDraft(personId, trial.id, bead.id) ?? { id: bead.id, content: bead.content, from: null, version: bead.version, at: bead.weldedAt })
+  const asStored = (): BeadDraft => ({ id: bead.id, content: bead.content, from: null, version: bead.version, at: bead.weldedAt })
+  const [kept] = useState(() => readEdit(personId, trial.id, bead.id))
+  const [draft, setDraft] = useState<BeadDraft>(() => kept ?? asStored())
+  const [resumed, setResumed] = useState(kept !== null && !same(kept.content, bead.content))
   const [pictures, setPictures] = useState<readonly File[]>([])
   const [pending, setPending] = useState(false)
   const [refusal, setRefusal] = useState<string>()
@@ -143,14 +153,14 @@ function EditBead({ trial, bead, personId }: { trial: Trial; bead: Bead; personI
   const before = trial.beads.filter(({ number }) => number < bead.number).at(-1) ?? null
   const keep = (next: BeadDraft) => {
     setDraft(next)
-    keepDraft(personId, trial.id, bead.id, next)
+    keepEdit(personId, trial.id, bead.id, next)
   }
   const save = async (content: BeadContent, version = draft.version ?? bead.version) => {
     setPending(true)
     setRefusal(undefined)
     try {
       const stored = await call('saveBead', { params: { id: bead.id }, body: { content }, ifMatch: version })
-      keepDraft(personId, trial.id, bead.id, null)
+      keepEdit(personId, trial.id, bead.id, null)
       if (pictures.length > 0) await upload('addBeadPhotos', { params: { id: bead.id }, files: pictures }).catch(sayProblem)
       client.setQueryData(trialQuery(trial.id).queryKey, (known) => known && { ...known, beads: known.beads.map((one) => (one.id === stored.id ? stored : one)) })
       await client.invalidateQueries({ queryKey: trialQuery(trial.id).queryKey })
@@ -168,6 +178,7 @@ function EditBead({ trial, bead, personId }: { trial: Trial; bead: Bead; personI
   return (
     <>
       <Head title={`Bead ${bead.number}`} about={`Welded by ${bead.by.name}. What you change is kept on this device until it is saved.`} />
+      {resumed && <Resumed said="You were changing this bead; it is as you left it." otherwise="Back to what is stored" onOtherwise={() => { keepEdit(personId, trial.id, bead.id, null); setDraft(asStored()); setResumed(false) }} />}
       {theirs && <TwoVersions mine={draft.content} theirs={theirs} onMine={() => { const { version } = theirs; setTheirs(null); keep({ ...draft, version }); void save(draft.content, version) }} onTheirs={() => { keep({ ...draft, content: theirs.content, version: theirs.version }); setTheirs(null) }} />}
       <BeadForm content={draft.content} onChange={(content) => keep({ ...draft, content, at: new Date().toISOString() })} before={before} system={system} pictures={pictures} onPictures={setPictures} onSave={(content) => void save(content)} pending={pending} refusal={refusal} saveLabel={`Save bead ${bead.number}`} />
     </>

@@ -83,6 +83,25 @@ describe('the form between two beads', () => {
     expect(sent?.body).toMatchObject({ id: expect.stringMatching(/^[0-9a-f-]{36}$/) as string, content: { note: 'hum, no ticks', score: 4, faults: [{ fault: 'spatter', severity: 2 }] } })
   })
 
+  it('keeps a bead half written while another is copied and sent', async () => {
+    const stored = { [`POST /api/trials/${TRIAL}/beads`]: ({ body }: { body: unknown }) => ({ status: 201, body: { ...beadOf(4, (body as { content: BeadContent }).content), id: (body as { id: string }).id } }) }
+    const first = open(stored)
+    fireEvent.change(await box('Note'), { target: { value: 'half a sentence' } })
+    first.unmount()
+    const second = open(stored, `bead?copy=${beads[1]?.id}`)
+    expect((await box('Note')).value).toBe('')
+    fireEvent.change(await box('Note'), { target: { value: 'the other one' } })
+    fireEvent.click(screen.getByRole('button', { name: 'Save bead 4' }))
+    await screen.findByRole('heading', { level: 1, name: 'T-004' })
+    await waitFor(() => expect(kept()).toHaveLength(1))
+    second.unmount()
+    open(stored)
+    expect((await box('Note')).value).toBe('half a sentence')
+    fireEvent.click(screen.getByRole('button', { name: 'Start anew' }))
+    expect((await box('Note')).value).toBe('')
+    expect(kept()).toEqual([])
+  })
+
   it('waits on this device when the server can’t be reached, says so, and goes when asked', async () => {
     let reachable = false
     const { seen } = open({ [`POST /api/trials/${TRIAL}/beads`]: ({ body }) => (reachable ? { status: 201, body: { ...beadOf(4, (body as { content: BeadContent }).content), id: (body as { id: string }).id } } : problem(503, 'Not now.')) })
