@@ -51,7 +51,7 @@ export const besideRow = (path: string, weld: WeldingVariables, block: ProcessBl
 /** Beside the joint's computed figures. */
 export const besideJoint = (weld: WeldingVariables): string[] => ['consumption', 'cost', 'passes', ...(weld.joint.weld === 'groove' ? ['groove-weld'] : ['fillet-throat', 'fillet-leg']), 'deposition-rate']
 
-/** Beside a bend test of a coupon, and beside a row of indentations. */
+/** Beside a bend test of a coupon, and beside a row of indentations: to be read, as what was used or measured is written and never worked out. */
 export const BESIDE_BEND: readonly string[] = ['bend-former', 'bend-strain']
 export const BESIDE_HARDNESS: readonly string[] = ['hardness-conversion']
 
@@ -91,14 +91,12 @@ const TARGETS: Readonly<Record<string, Target>> = {
   'current-from-wire-feed': { path: 'electrical.current', ofBlock: true, output: 'current', dimension: 'current', kind: 'interval' },
   'travel-speed': { path: 'electrical.travelSpeed', ofBlock: true, output: 'travelSpeed', dimension: 'travelSpeed', kind: 'interval' },
   'fillet-leg': { path: 'joint.filletLeg', output: 'legToWeld', dimension: 'length', kind: 'interval', end: 'min' },
-  // Beside a bend test, whose row it is written into.
-  'bend-former': { path: 'formerDiameter', output: 'former', dimension: 'length', kind: 'quantity' },
   'fillet-throat': { path: 'joint.filletThroat', output: 'throat', dimension: 'length', kind: 'interval', end: 'min' },
 }
 
 /** Which way a figure may be rounded so that it stays on the safe side. */
 type Side = 'up' | 'down' | 'nearest'
-const sideOf = ({ path, end }: Target, at: 'min' | 'max' | null): Side => (path === 'preheat.minimum' || path === 'joint.filletLeg' ? 'up' : path === 'joint.filletThroat' || path === 'formerDiameter' ? 'down' : (at ?? end) === 'max' ? 'up' : (at ?? end) === 'min' ? 'down' : 'nearest')
+const sideOf = ({ path, end }: Target, at: 'min' | 'max' | null): Side => (path === 'preheat.minimum' || path === 'joint.filletLeg' ? 'up' : path === 'joint.filletThroat' ? 'down' : (at ?? end) === 'max' ? 'up' : (at ?? end) === 'min' ? 'down' : 'nearest')
 
 /** A storage figure as a quantity that a person who reads `system` would write. */
 function writtenAs(si: number, dimension: Dimension, system: UnitSystem, side: Side, unit: string = SHOWN_UNIT[system][dimension]): Quantity {

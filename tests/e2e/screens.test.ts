@@ -68,7 +68,7 @@ const screens: readonly (readonly [Role, ...(string | readonly [label: string, p
   ['inspector', '/', '/library/heats', '/library/heats/new', '/library/heats/new?kind=lot', ['a heat', () => `/library/heats/${found.heat}`], '/coupons', '/coupons/new', ['an open coupon', () => `/coupons/${found['open coupon']}`], ['a certified coupon', () => `/coupons/${found['coupon certified']}`], ['a coupon under each standard', () => `/coupons/${found['coupon certified']}/standards`]],
   ['supervisor', '/', '/arc-data', '/arc-data/new', ['a recording of volts and amperes', () => `/arc-data/${found.recording}`], ['a review', () => `/revisions/${found['in-review']}/review`]],
   ['administrator', '/', '/people'],
-  ['welder', '/', ['the next trial bead', () => `/dial-in/${found.trial}/bead`], ['a first trial bead', () => `/dial-in/${found.trial}/bead?copy=none`], '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`], ['a machine as text', () => `/machines/${found['precise machine']}`], '/machines/card', ['a panel card', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=manual-pulse`], ['a panel card of one knob', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=pulse`], ['a panel card that refuses', () => `/machines/${found['plain feeder']}/card?revision=${found['pulsed aluminium']}`]],
+  ['welder', '/', '/calculators', '/calculators?q=t8/5', '/calculators/heat-input-meter', '/calculators/ferrite-dilution', '/calculators/preheat-method-b?cet=0.6&t=18-22&hd=5&q=1.5&ta=20', ['the next trial bead', () => `/dial-in/${found.trial}/bead`], ['a first trial bead', () => `/dial-in/${found.trial}/bead?copy=none`], '/look-up', '/look-up?line=12%20mm%20A516-70%20to%20A516-70%20SMAW%203G', '/look-up?line=200%20mm%20unobtainium', ['the shop view', () => `/shop/${found.approved}`], ['the shop view of a draft', () => `/shop/${found.draft}`], ['a machine as text', () => `/machines/${found['precise machine']}`], '/machines/card', ['a panel card', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=manual-pulse`], ['a panel card of one knob', () => `/machines/${found['lumping machine']}/card?revision=${found['pulsed aluminium']}&mode=pulse`], ['a panel card that refuses', () => `/machines/${found['plain feeder']}/card?revision=${found['pulsed aluminium']}`]],
   ['auditor', '/', ['a trial', () => `/dial-in/${found.trial}`], ['a procedure in review', () => `/revisions/${found['in-review']}`], ['a job', () => `/jobs/${found.job}`], '/library/heats', ['a lot as text', () => `/library/heats/${found.lot}`], ['a base metal', () => `/library/base-metals/${found.metal}`], ['a filler metal', () => `/library/filler-metals/${found.filler}`], ['a grade of one’s own', () => `/library/base-metals/${found['own grade']}`], '/library/base-metals', '/library/filler-metals', '/library/gases', '/library/positions', '/library/processes', '/standards', '/standards/asme-ix', '/no/such/page'],
 ]
 
@@ -142,6 +142,21 @@ describe('dialogs', () => {
       expect([width, await overflows(page)]).toEqual([width, false])
     }
     expect(await axe(page)).toEqual([])
+    await page.context().close()
+  })
+})
+
+describe('worked out in a draft', () => {
+  it('every calculator beside a field opens in its place', async () => {
+    const page = await stage.as('engineer')
+    const complaints = complaintsOf(page)
+    await page.goto(`/revisions/${found.draft}`)
+    await settled(page)
+    const openers = page.getByRole('button', { name: /^Work it out/ })
+    expect(await openers.count()).toBeGreaterThan(3)
+    for (const opener of await openers.all()) await opener.click()
+    expect(await page.getByRole('region', { name: /^Work it out/ }).count()).toBe(await openers.count())
+    expect([...(await faultsOf(page)), ...complaints]).toEqual([])
     await page.context().close()
   })
 })

@@ -37,7 +37,7 @@ export function WorkItOut({ what, calculators, className = '', ...rest }: WorkIt
     <div className={`no-print ${className}`}>
       <button ref={opener} type="button" aria-expanded={open} aria-controls={id} className="inline-flex min-h-6 items-center gap-1.5 text-sm text-steel hover:underline max-sm:min-h-11" onClick={() => setOpen(!open)}>
         <CalculatorIcon size={14} aria-hidden="true" />
-        Work it out<span className="sr-only">: {what}</span>
+        Work it out<span className="sr-only"> for {what}</span>
       </button>
       {open && (
         <section id={id} aria-label={`Work it out: ${what}`} className="relative mt-1.5 border border-edge bg-paper px-3.5 py-3" onKeyDown={(event) => event.key === 'Escape' && close()}>

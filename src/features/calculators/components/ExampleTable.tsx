@@ -15,7 +15,7 @@ export function ExampleTable({ calculator, system, onFill }: { calculator: Calcu
   const { shown: results } = calculator.run(texts)
   const expected = results.filter(({ key, value }) => key in calculator.example.expect && value !== null)
   return (
-    <Sheet title="Worked example">
+    <Sheet title="Worked example" className="no-print">
       <div className="space-y-2 px-4 py-3">
         <dl className="grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 gap-y-0.5">
           {shown.map(([key, input]) => (
@@ -23,7 +23,7 @@ export function ExampleTable({ calculator, system, onFill }: { calculator: Calcu
           ))}
         </dl>
         {given.length > shown.length && (
-          <Button kind="quiet" className="no-print" onClick={() => setAll(true)}>
+          <Button kind="quiet" onClick={() => setAll(true)}>
             {given.length - shown.length} more figures
           </Button>
         )}
@@ -33,7 +33,7 @@ export function ExampleTable({ calculator, system, onFill }: { calculator: Calcu
           ))}
         </dl>
         <p className="text-sm text-pretty text-soft">{fromWhere(calculator.example.from)}</p>
-        <Button className="no-print" onClick={onFill}>
+        <Button onClick={onFill}>
           Fill in the example
         </Button>
       </div>

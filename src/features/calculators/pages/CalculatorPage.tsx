@@ -111,7 +111,7 @@ function Opened({ calculator }: { calculator: Calculator }) {
 
 function ResultSheet(props: React.ComponentProps<typeof ResultView>) {
   return (
-    <Sheet title="Result">
+    <Sheet title="Result" className="break-inside-avoid">
       <div className="px-4 py-3">
         <ResultView {...props} />
       </div>

@@ -1,7 +1,6 @@
 import { Plus, X } from 'lucide-react'
 import { use } from 'react'
 import { BESIDE_BEND, BESIDE_HARDNESS } from '@shared/calculations/beside.ts'
-import type { Quantity } from '@shared/schemas/common.ts'
 import type { BendTest, NdtTest } from '@shared/schemas/welding.ts'
 import { formatQuantity } from '@shared/units/format.ts'
 import { Button } from '@/components/Button.tsx'
@@ -9,7 +8,6 @@ import { QuantityField } from '@/components/fields/quantity.tsx'
 import { Checkbox, Select } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { inputId, useSheet } from '@/components/variables/context.ts'
-import { say } from '@/components/toast.tsx'
 import { VerdictMark } from '@/components/Verdict.tsx'
 import { WorkItOut } from '@/components/work-it-out/WorkItOut.tsx'
 import { newBend, newHardness, newMacro, newNdt, newTension, newToughness, type BendKind } from '../content.ts'
@@ -162,15 +160,9 @@ function NdtTyped() {
 }
 
 /** The largest former that the metals allow, and the strain over the one that was used. */
-function BendWork({ bend, onChange }: { bend: BendTest; onChange: (former: Quantity | null) => void }) {
+function BendWork({ bend }: { bend: BendTest }) {
   const { content, system } = useSheet()
-  const use = ({ value }: { value: object }, label: string) => {
-    if (!('si' in value)) return
-    const before = bend.formerDiameter
-    onChange(value as Quantity)
-    say(label, { undo: () => onChange(before) })
-  }
-  return <WorkItOut what={`former of ${bend.specimen}`} calculators={BESIDE_BEND} record={{ variables: content.variables, bend }} blockIndex={null} system={system} of="coupon" onUse={use} />
+  return <WorkItOut what={`former of ${bend.specimen}`} calculators={BESIDE_BEND} record={{ variables: content.variables, bend }} blockIndex={null} system={system} of="coupon" />
 }
 
 /** Vickers figures in other scales, for whoever asks in them. */
@@ -200,7 +192,7 @@ function BendsTyped() {
       {items.map((bend, index) => (
         <TestRow key={bend.id} fields={TEST_FIELDS.bends} path={`bends.${index}`} test={bend} mark={bend.specimen} onChange={(part) => change(index, part)} onRemove={() => remove(index)}>
           <Openings bend={bend} onChange={(openings) => change(index, { openings })} />
-          <BendWork bend={bend} onChange={(formerDiameter) => change(index, { formerDiameter })} />
+          <BendWork bend={bend} />
         </TestRow>
       ))}
       <Foot error={error} empty={items.length === 0 ? 'Each opening on the convex face is measured; one at a corner is told apart, as it may not count.' : null}>

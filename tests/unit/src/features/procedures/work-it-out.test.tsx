@@ -46,7 +46,7 @@ const box = (label: string): HTMLInputElement => {
 describe('worked out in a draft', { timeout: 90_000 }, () => {
   it('is written into the field, and taken back with Ctrl+Z', async () => {
     const sent = await open()
-    await press(/Work it out: Preheat, minimum/)
+    await press(/Work it out for Preheat, minimum/)
     fireEvent.change(await waitFor(() => box('CET'), SLOW), { target: { value: '0.36' } })
     await press(/^Use \d+ °C$/)
     const field = () => document.querySelector<HTMLInputElement>('#row-preheat-minimum')?.value
@@ -61,7 +61,7 @@ describe('worked out in a draft', { timeout: 90_000 }, () => {
 
   it('follows the draft while the panel is open, and writes both ends of heat input', async () => {
     const sent = await open()
-    await press(/Work it out: SMAW, Heat input/)
+    await press(/Work it out for SMAW, Heat input/)
     await waitFor(() => expect(box('Voltage').value).toBe('25'), SLOW)
     const volts = document.querySelector<HTMLInputElement>('#row-processes-0-electrical-voltage-to')
     if (!volts) throw new Error('no volts')
