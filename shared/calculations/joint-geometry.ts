@@ -104,7 +104,7 @@ function reinforcingFillets(joint: Joint, profile: GrooveProfile, remarks: Remar
     remarks.take('A reinforcing fillet is drawn on tee joints only.')
     return []
   }
-  const face = -offsetAt(profile.left, profile.top)
+  const face = -(drawnValue(joint.rootOpening) ?? 0) / 2
   const over = { corner: { x: face, y: profile.top }, toeA: { x: face + leg, y: profile.top }, toeB: { x: face, y: profile.top + leg } }
   const under = { corner: { x: face, y: 0 }, toeA: { x: face + leg, y: 0 }, toeB: { x: face, y: -leg } }
   return profile.meeting === null && profile.gouge === 0 ? [over] : [over, under]
@@ -158,7 +158,8 @@ function grooveGeometry(setting: JointSetting, passes: readonly PassToLay[]): Jo
   if (edge && joint.groove !== 'square') checkEdgeEnds(profile, figures.rootOpening, wall, b ?? wall, system, remarks)
   const fillets = reinforcingFillets(joint, profile, remarks, system)
   if (remarks.problems.length > 0) return nothing(remarks)
-  const parts = regions(joint, profile, figures.rootFace)
+  // A fillet over the groove is its reinforcement.
+  const parts = regions(joint, profile, figures.rootFace).map((part) => (fillets.length > 0 ? { ...part, reinforcement: 0 } : part))
   const weld = [...parts.map(({ from, to }) => outline(profile, from, to)), ...fillets.map(({ corner, toeA, toeB }) => [corner, toeA, toeB])]
   const laid = layGroove(passes, joint, profile, figures, parts, fillets)
   const known = joint.rootOpening !== null && (joint.rootFace !== null || (joint.grooveDepth ?? null) !== null || joint.groove === 'square' || isFlare(joint.groove))

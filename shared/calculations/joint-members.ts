@@ -63,7 +63,7 @@ export interface Members {
  */
 export function grooveMembers(joint: Joint, profile: GrooveProfile, a: number, b: number | null, excess: Excess | null): Members {
   const top = profile.top
-  const face = -(profile.left[0]?.offset ?? 0)
+  const face = -(drawnValue(joint.rootOpening) ?? 0) / 2
   const width = b ?? a
   const reach = reachOf(profile, Math.min(a, b ?? a)) + (excess ? Math.max(runOf(excess.above, excess.taper), runOf(excess.below, excess.taper)) : 0)
   if (joint.groove !== null && isFlare(joint.groove)) {
@@ -73,7 +73,10 @@ export function grooveMembers(joint: Joint, profile: GrooveProfile, a: number, b
   }
   if (memberStands(joint)) {
     const over = joint.type === 'tee' ? Math.max(0.5 * a, 8, 1.4 * (drawnValue(joint.reinforcingFillet) ?? 0)) : 0
-    return { a: block(face - width, -over, face, top + over), b: lyingPlate(profile.right, reach, null), markA: { from: { x: reach, y: 0 }, to: { x: reach, y: top } }, markB: b === null ? null : { from: { x: face - width, y: -over }, to: { x: face, y: -over } } }
+    // A gouge may bite into the standing member too.
+    const surface = profile.left.map(({ offset, y }) => ({ x: -offset, y }))
+    const standing = [{ x: face, y: -over }, ...surface, { x: face, y: top + over }, { x: face - width, y: top + over }, { x: face - width, y: -over }]
+    return { a: over > 0 ? standing : [...surface, { x: face - width, y: top }, { x: face - width, y: 0 }], b: lyingPlate(profile.right, reach, null), markA: { from: { x: reach, y: 0 }, to: { x: reach, y: top } }, markB: b === null ? null : { from: { x: face - width, y: -over }, to: { x: face, y: -over } } }
   }
   const thickIsB = b !== null && b > a
   const left = mirror(lyingPlate(profile.left, reach, thickIsB ? null : excess))

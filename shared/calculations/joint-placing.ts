@@ -107,7 +107,7 @@ function angle(from: Point, to: Point, vertex: Point, beyond: number, words: str
   return {
     path: `M${p(from)}L${p(out(a, reach + 5))}M${p(to)}L${p(out(b, reach + 5))}M${p(out(a, reach))}A${round(reach)} ${round(reach)} 0 0 ${sweep} ${p(last)}`,
     heads: head(out(a, reach), a - (tilt * Math.PI) / 2) + head(last, b + (tilt * Math.PI) / 2),
-    text: side === 'under' ? { x: last.x + (last.x >= vertex.x ? 10 : -10), y: last.y + (last.y < vertex.y ? 18 : -8), anchor: last.x >= vertex.x ? 'start' : 'end', words } : side === 'middle' ? { x: middle.x, y: middle.y + (downwards ? 18 : -8), anchor: 'middle', words } : { x: last.x + (last.x >= vertex.x ? 10 : -10), y: last.y + 2, anchor: last.x >= vertex.x ? 'start' : 'end', words },
+    text: side === 'under' ? { x: last.x + (last.x >= vertex.x ? 10 : -10), y: last.y + (last.y < vertex.y ? 18 : -8), anchor: last.x >= vertex.x ? 'start' : 'end', words } : side === 'middle' ? { x: middle.x, y: middle.y + (downwards ? 18 : -8), anchor: 'middle', words } : { x: last.x + (last.x >= vertex.x ? 10 : -10), y: last.y - 6, anchor: last.x >= vertex.x ? 'start' : 'end', words },
   }
 }
 
