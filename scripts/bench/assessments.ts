@@ -23,7 +23,7 @@ function figuresOf(name: string, slices: Slices, what: string): Figure[] {
 function describe({ input }: Case): { text: string; findings: number } {
   const { findings, ranges } = assess(input)
   const judged = findings.filter((one) => one.class !== 'not-a-variable').length
-  return { text: `${judged} variables judged, ${ranges.length} ranges, ${input.coupons.length} coupons, toughness, ${POOL} procedures that differ`, findings: judged }
+  return { text: `${judged} variables judged, ${ranges.length} ranges, ${input.coupons.length} coupons, toughness, ${POOL} procedures that differ; a rule is not asked again for values that it has met with these coupons`, findings: judged }
 }
 
 /** Each case by itself, then ASME IX in turns with the library. @param seconds for each case */
