@@ -3,7 +3,6 @@ import { metalFacts } from '@shared/library/filler-advice-facts.ts'
 import { baseMetalById, toBaseMetal } from '@shared/library/base-metals.ts'
 import { fillerById } from '@shared/library/filler-metals.ts'
 import { familyOf } from '@shared/library/heat-figures.ts'
-import type { Quantity } from '@shared/schemas/common.ts'
 import type { WriteHeat } from '@shared/schemas/heats.ts'
 import { SHOWN_UNIT } from '@shared/units/convert.ts'
 import type { Dimension } from '@shared/units/types.ts'
@@ -78,5 +77,5 @@ export function HeatFields({ form, onUnread }: { form: HeatForm; onUnread: (unre
 /** A measured value of the certificate. */
 function Figure({ form, name, label, dimension }: { form: HeatForm; name: 'thickness' | 'diameter' | 'tensile' | 'yield' | 'elongation'; label: string; dimension: Dimension }) {
   const { system } = useUnits()
-  return <Controller control={form.control} name={name} render={({ field }) => <QuantityField label={`${label}, ${SHOWN_UNIT[system][dimension]}`} optional dimension={dimension} system={system} value={field.value as Quantity | null} onChange={field.onChange} error={form.formState.errors[name]?.message ?? null} />} />
+  return <Controller control={form.control} name={name} render={({ field }) => <QuantityField label={`${label}, ${SHOWN_UNIT[system][dimension]}`} optional dimension={dimension} system={system} value={field.value} onChange={field.onChange} error={form.formState.errors[name]?.message ?? null} />} />
 }

@@ -1,9 +1,20 @@
-import { useMemo } from 'react'
+import { useMemo, type ReactNode } from 'react'
 import { Link } from 'react-router-dom'
 import { FAMILY_WORDS, heatFigures, sharesOf, type HeatFigure } from '@shared/library/heat-figures.ts'
 import type { WriteHeat } from '@shared/schemas/heats.ts'
 import { SourceLine } from '@/components/calculator/Working.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
+
+/** The figures beside what they follow from; where there is no room beside it, directly under it and before the rest. */
+export function BesideFigures({ main, figures, rest }: { main: ReactNode; figures: ReactNode; rest: ReactNode }) {
+  return (
+    <div className="mt-4 grid items-start gap-4 xl:grid-cols-[minmax(0,1fr)_24rem] xl:grid-rows-[auto_1fr]">
+      <div className="min-w-0">{main}</div>
+      <div className="min-w-0 xl:col-start-2 xl:row-span-2 xl:row-start-1">{figures}</div>
+      <div className="min-w-0 space-y-4 xl:col-start-1">{rest}</div>
+    </div>
+  )
+}
 
 /** What follows from the chemistry, as it is typed: each figure with its formula, where it holds and what it rests on. */
 export function HeatFiguresSheet({ content }: { content: Pick<WriteHeat, 'kind' | 'chemistryOf' | 'chemistry'> }) {

@@ -17,7 +17,7 @@ import { showProblem, useZodForm } from '@/lib/forms.ts'
 import { asProblem } from '@/lib/problem.ts'
 import { query } from '@/lib/query.ts'
 import { HeatFields } from '../components/HeatFields.tsx'
-import { HeatFiguresSheet } from '../components/HeatFiguresSheet.tsx'
+import { BesideFigures, HeatFiguresSheet } from '../components/HeatFiguresSheet.tsx'
 import { HeatReading, HeatTitle } from '../components/HeatReading.tsx'
 import { NamedBySheet } from '../components/NamedBySheet.tsx'
 import { PARTS } from '../heat-form.ts'
@@ -40,13 +40,7 @@ function Read({ heat }: { heat: Heat }) {
   return (
     <>
       <HeatTitle heat={heat} content={heat.content} />
-      <div className="mt-4 grid items-start gap-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
-        <div className="min-w-0 space-y-4">
-          <HeatReading content={heat.content} />
-          <Rest heat={heat} />
-        </div>
-        <HeatFiguresSheet content={heat.content} />
-      </div>
+      <BesideFigures main={<div className="space-y-4"><HeatReading content={heat.content} /></div>} figures={<HeatFiguresSheet content={heat.content} />} rest={<Rest heat={heat} />} />
     </>
   )
 }
@@ -157,15 +151,7 @@ function Form({ heat }: { heat: Heat }) {
       <div className="mt-4">
         <FormError message={errors.root?.message} />
       </div>
-      <div className="mt-4 grid items-start gap-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
-        <div className="min-w-0">
-          <HeatFields form={form} onUnread={setUnread} />
-          <div className="mt-4 space-y-4">
-            <Rest heat={heat} />
-          </div>
-        </div>
-        <HeatFiguresSheet content={content} />
-      </div>
+      <BesideFigures main={<HeatFields form={form} onUnread={setUnread} />} figures={<HeatFiguresSheet content={content} />} rest={<Rest heat={heat} />} />
       {removing && (
         <Dialog
           title={`Remove ${seen.content.number}?`}

@@ -19,7 +19,7 @@ const none = <span className="text-soft">none</span>
 
 /** The figures of a row in a line: CE and Pcm of a steel, FN and PREN of a stainless one, the A-Number of a deposit. */
 function inShort(row: HeatRow): string {
-  return heatFigures(row).figures.flatMap(({ id, label, reading }) => (reading === null || id === 'cet' || id === 'cen' ? [] : [`${id === 'ceIiw' ? 'CE' : id === 'ferriteNumber' ? 'FN' : id === 'aNumber' ? 'A-No.' : label} ${reading}`])).join(' · ')
+  return heatFigures(row).figures.flatMap(({ id, label, reading }) => (reading === null || id === 'cet' || id === 'cen' ? [] : [`${id === 'ceIiw' ? 'CE' : id === 'ferriteNumber' ? 'FN' : id === 'aNumber' ? 'A-No.' : label}\u00a0${reading}`])).join(' · ')
 }
 
 export function HeatsPage() {
@@ -35,9 +35,9 @@ export function HeatsPage() {
       { id: 'kind', header: 'Kind', cell: (row) => row.kind },
       { id: 'grade', header: 'Grade or classification', sort: 'grade', cell: (row) => row.grade },
       { id: 'figures', header: 'From its chemistry', className: 'tabular-nums', cell: (row) => inShort(row) || <span className="text-soft">{row.chemistry.length === 0 ? 'no chemistry' : 'none stated for it'}</span> },
-      { id: 'certificate', header: 'Certificate', cell: (row) => [row.certificate, row.certificateType].filter(Boolean).join(', ') || none },
+      { id: 'certificate', header: 'Certificate', wideOnly: true, cell: (row) => [row.certificate, row.certificateType].filter(Boolean).join(', ') || none },
       { id: 'files', header: 'Papers', align: 'right', cell: (row) => (row.files === 0 ? none : row.files) },
-      { id: 'received', header: 'Received', wideOnly: true, className: 'whitespace-nowrap', cell: (row) => (row.receivedOn ? day(row.receivedOn) : <span className="text-soft">not stated</span>) },
+      { id: 'received', header: 'Received', className: 'whitespace-nowrap', cell: (row) => (row.receivedOn ? day(row.receivedOn) : <span className="text-soft">not stated</span>) },
       { id: 'changed', header: 'Changed', sort: 'updatedAt', hidden: true, className: 'whitespace-nowrap', cell: (row) => day(row.updatedAt) },
     ],
     [],

@@ -16,7 +16,7 @@ import { call } from '@/lib/api.ts'
 import { showProblem, useZodForm } from '@/lib/forms.ts'
 import { query } from '@/lib/query.ts'
 import { HeatFields } from '../components/HeatFields.tsx'
-import { HeatFiguresSheet } from '../components/HeatFiguresSheet.tsx'
+import { BesideFigures, HeatFiguresSheet } from '../components/HeatFiguresSheet.tsx'
 import { HEAT_KINDS } from '../heat-form.ts'
 
 export const heatFormSchema = writeHeatSchema as unknown as z.ZodType<WriteHeat, WriteHeat>
@@ -72,20 +72,22 @@ function Form({ kind: begun, item }: { kind: WriteHeat['kind']; item: LibraryIte
       <PageHead title={HEAT_KINDS[begun].title} actions={<ButtonLink to={`/library/heats/new?kind=${begun === 'heat' ? 'lot' : 'heat'}`}>{begun === 'heat' ? 'A lot of filler instead' : 'A heat of base metal instead'}</ButtonLink>}>
         Copy it from the certificate; the paper itself is added on the next page.
       </PageHead>
-      <form noValidate onSubmit={(event) => void submit(event)} className="grid items-start gap-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
-        <div className="min-w-0">
-          <HeatFields form={form} onUnread={setUnread} />
-          <div className="mt-4 space-y-3">
-            <FormError message={errors.root?.message} />
-            <div className="flex flex-wrap gap-2">
-              <Button kind="primary" type="submit" pending={create.isPending}>
-                Record it
-              </Button>
-              <ButtonLink to="/library/heats">Not now</ButtonLink>
-            </div>
-          </div>
-        </div>
-        <HeatFiguresSheet content={content} />
+      <form noValidate onSubmit={(event) => void submit(event)}>
+        <BesideFigures
+          main={<HeatFields form={form} onUnread={setUnread} />}
+          figures={<HeatFiguresSheet content={content} />}
+          rest={
+            <>
+              <FormError message={errors.root?.message} />
+              <div className="flex flex-wrap gap-2">
+                <Button kind="primary" type="submit" pending={create.isPending}>
+                  Record it
+                </Button>
+                <ButtonLink to="/library/heats">Not now</ButtonLink>
+              </div>
+            </>
+          }
+        />
       </form>
     </>
   )

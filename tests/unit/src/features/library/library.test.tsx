@@ -80,6 +80,6 @@ describe('library', () => {
     await userEvent.clear(screen.getByLabelText(/^P-Number/))
     await userEvent.click(screen.getByRole('button', { name: 'Add it' }))
     expect(await screen.findByText('LF 12 is in your library already.')).toBeDefined()
-    expect((screen.getByLabelText(/Standard or specification/) as HTMLInputElement).value).toBe('LF 12')
+    expect(screen.getByLabelText<HTMLInputElement>(/Standard or specification/).value).toBe('LF 12')
   })
 })
