@@ -21,8 +21,8 @@ export const FIGURE: { readonly [F in FigureKey]: { label: string; unit: string;
   detachment: { label: 'Peak² × on-time', unit: 'A²s', dimension: null, formula: 'peak² × on-time / 1000' },
 }
 
-/** `model`: from the settings by the rectangular pulse; `measured`: read off a meter; `meters`: mean volts × mean amperes. */
-export type How = 'model' | 'measured' | 'meters'
+/** `model`: from the settings by the rectangular pulse; `measured`: read off a meter; `meters`: mean volts × mean amperes; `recorded`: volts × amperes sample by sample. */
+export type How = 'model' | 'measured' | 'meters' | 'recorded'
 export interface Told { value: number; how: How }
 export interface BeadFigures {
   /** Pulsed by hand: frequency and on-time are known. */
@@ -52,8 +52,12 @@ export function pulseInputs(content: BeadContent, { dialled = false } = {}): Pul
 
 const told = (value: number | null | undefined, how: How): Told | null => (value === null || value === undefined || !Number.isFinite(value) ? null : { value, how })
 
-/** The figures of a bead. @param inputs other inputs than the bead's own, e.g. with a current taken over from the bead before */
-export function beadFigures(content: BeadContent, inputs: PulseInputs = pulseInputs(content)): BeadFigures {
+/**
+ * The figures of a bead.
+ * @param inputs other inputs than the bead's own, e.g. with a current taken over from the bead before
+ * @param recordedPower W, average instantaneous power of a recording of this bead's arc: it goes before any model
+ */
+export function beadFigures(content: BeadContent, inputs: PulseInputs = pulseInputs(content), recordedPower: number | null = null): BeadFigures {
   const figures = Object.fromEntries(FIGURES.map((key) => [key, null])) as Record<FigureKey, Told | null>
   const [notes, problems]: [string[], string[]] = [[], []]
   const { peakCurrent, backgroundCurrent, frequency, onTime, wireFeed, wireDiameter } = inputs
@@ -80,6 +84,10 @@ export function beadFigures(content: BeadContent, inputs: PulseInputs = pulseInp
   }
   const [current, voltage] = [middleOf(measuredSpread(content, 'current')), middleOf(measuredSpread(content, 'voltage'))]
   figures.meanCurrent ??= told(current, 'measured')
+  if (recordedPower !== null) {
+    figures.power = told(recordedPower, 'recorded')
+    figures.energyPerLength = travelSpeed === null ? null : told((recordedPower * 60) / travelSpeed / 1000, 'recorded')
+  }
   if (!figures.power && problems.length === 0) {
     const [amps, volts] = [current ?? settingOf(content, 'current'), voltage ?? settingOf(content, 'voltage')]
     if (amps !== null && volts !== null) {

@@ -89,15 +89,17 @@ const figureChange = (key: FigureKey, before: Told | null, after: Told | null): 
 /**
  * Compares two beads of a trial. `after` may be a bead that is not welded yet: what only measuring can tell is then taken from `before` and said so.
  * @param mode of the machine, for the steps and ends of its controls
+ * @param power W, from recordings of both arcs; with one of them alone nothing could be compared, so it is left out
  */
-export function compareBeads(before: BeadContent, after: BeadContent, mode: MachineMode | null = null): BeadComparison {
+export function compareBeads(before: BeadContent, after: BeadContent, mode: MachineMode | null = null, power: { before: number | null; after: number | null } = { before: null, after: null }): BeadComparison {
   const settings = changedSettings(before.settings, after.settings)
   const [were, are] = [circumstancesOf(before), circumstancesOf(after)]
   const circumstances = are.flatMap(({ key, label, text }, index) => (text === were[index]?.text ? [] : [{ key, label, before: were[index]?.text ?? NONE, after: text }]))
   const both = before.measured.wireFeed !== null && after.measured.wireFeed !== null
   const from = pulseInputs(before, { dialled: !both })
   const { inputs, notes } = carriedOver(from, pulseInputs(after, { dialled: !both }))
-  const [was, is] = [beadFigures(before, from), beadFigures(after, inputs)]
+  const recorded = power.before !== null && power.after !== null
+  const [was, is] = [beadFigures(before, from, recorded ? power.before : null), beadFigures(after, inputs, recorded ? power.after : null)]
   return {
     settings, circumstances,
     figures: FIGURES.map((key) => figureChange(key, was.figures[key], is.figures[key])),

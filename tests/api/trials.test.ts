@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import sharp from 'sharp'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import type { ArcRecording } from '../../shared/schemas/arc-data.ts'
 import type { Page } from '../../shared/schemas/common.ts'
 import type { Machine, PanelCard } from '../../shared/schemas/machines.ts'
 import type { Revision } from '../../shared/schemas/records.ts'
@@ -130,6 +131,26 @@ describe('photos', () => {
     const bead = await add(await begin(), { content: pulseBead() })
     const pdf = Buffer.from('%PDF-1.4\n1 0 obj<</Type/Catalog>>endobj\ntrailer<</Root 1 0 R>>\n%%EOF\n')
     expect(problem(await agents.welder.post(`/api/beads/${bead.id}/photos`).attach('files', pdf, 'report.pdf').expect(422)).detail).toMatch(/report\.pdf is a paper/)
+  })
+})
+
+describe('recordings of the arc', () => {
+  it('stay when their bead or its trial goes, attached to nothing', async () => {
+    const trial = await begin()
+    const beads = [await add(trial, { content: pulseBead() }), await add(trial, { content: pulseBead() })]
+    const csv = Buffer.from(`t,I,U\n${Array.from({ length: 400 }, (_, index) => `${(index / 1000).toFixed(3)},${index % 10 < 3 ? 350 : 60},${index % 10 < 3 ? 28 : 19}`).join('\n')}\n`)
+    const attached: string[] = []
+    for (const bead of beads) {
+      const recording = (await agents.welder.post('/api/arc-recordings').attach('files', csv, 'bead.csv').expect(201)).body as ArcRecording
+      await agents.welder.put(`/api/arc-recordings/${recording.id}/attachment`).set('If-Match', match(recording)).send({ beadId: bead.id, weldLength: 150 }).expect(200)
+      attached.push(recording.id)
+    }
+    const beadOf = async (id: string | undefined) => ((await agents.welder.get(`/api/arc-recordings/${id}`).expect(200)).body as ArcRecording).attachment.beadId
+    expect(await beadOf(attached[0])).toBe(beads[0]?.id)
+    await agents.welder.delete(`/api/beads/${beads[0]?.id}`).set('If-Match', '"1"').expect(204)
+    expect([await beadOf(attached[0]), await beadOf(attached[1])]).toEqual([null, beads[1]?.id])
+    await agents.welder.delete(`/api/trials/${trial.id}`).set('If-Match', match(trial)).expect(204)
+    expect(await beadOf(attached[1])).toBeNull()
   })
 })
 

@@ -1,7 +1,8 @@
 /** What the pages of the dial-in log read and change. */
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
+import type { ArcRecordingRow } from '@shared/schemas/arc-data.ts'
 import type { Machine, MachineMode } from '@shared/schemas/machines.ts'
-import type { Trial } from '@shared/schemas/trials.ts'
+import type { Bead, Trial } from '@shared/schemas/trials.ts'
 import type { BodyOf } from '@shared/schemas/endpoints.ts'
 import { call } from '@/lib/api.ts'
 import { query } from '@/lib/query.ts'
@@ -14,6 +15,9 @@ export function useMachineMode(machineId: string | null, modeKey: string | null)
   const machine = machineId === null ? null : read.isError ? null : read.data
   return { machine, mode: machine?.content.modes.find(({ key }) => key === modeKey) ?? null }
 }
+
+/** Recordings of one bead's arc, the latest first; the same request as the sheet of recordings makes. */
+export const useRecordings = (beadId: string | undefined): readonly ArcRecordingRow[] => useQuery({ ...query('listArcRecordings', { query: { beadId, limit: 100 } }), enabled: beadId !== undefined }).data?.items ?? []
 
 /** What may happen to a trial and its beads, the form of a bead apart. */
 export function useTrialActs(trial: Pick<Trial, 'id' | 'version'>) {
@@ -30,6 +34,7 @@ export function useTrialActs(trial: Pick<Trial, 'id' | 'version'>) {
     }),
     discard: useMutation({ mutationFn: () => call('discardTrial', { params, ifMatch: trial.version }), onSuccess: () => client.invalidateQueries({ queryKey: ['listTrials'] }) }),
     removeBead: useMutation({ mutationFn: ({ id, version }: { id: string; version: number }) => call('removeBead', { params: { id }, ifMatch: version }), onSettled: refresh }),
+    saveBead: useMutation({ mutationFn: ({ id, version, content }: Pick<Bead, 'id' | 'version' | 'content'>) => call('saveBead', { params: { id }, body: { content }, ifMatch: version }), onSettled: refresh }),
     removePhoto: useMutation({ mutationFn: (id: string) => call('removeBeadPhoto', { params: { id } }), onSettled: refresh }),
     promote: useMutation({
       mutationFn: (body: BodyOf<'promoteBead'>) => call('promoteBead', { params, body }),

@@ -1,8 +1,8 @@
 import { useState } from 'react'
 import type { MachineMode } from '@shared/schemas/machines.ts'
-import { useMachineMode } from '../api.ts'
 import type { Bead, Trial } from '@shared/schemas/trials.ts'
 import { MEASURE, MEASURES, travelSpread } from '@shared/trials/bead-values.ts'
+import { measuredFromRecording } from '@shared/trials/from-recording.ts'
 import { faultsInWords, SCORE_WORDS } from '@shared/trials/faults.ts'
 import { formatNumber } from '@shared/units/format.ts'
 import { SHOWN_UNIT } from '@shared/units/convert.ts'
@@ -14,9 +14,10 @@ import { Sheet } from '@/components/Sheet.tsx'
 import { say, sayProblem } from '@/components/toast.tsx'
 import { useUnits } from '@/hooks/units.ts'
 import { hrefOf } from '@/lib/api.ts'
+import { same } from '@/lib/draft/paths.ts'
 import { moment } from '@/lib/figures.ts'
 import { asProblem } from '@/lib/problem.ts'
-import { useTrialActs } from '../api.ts'
+import { useMachineMode, useRecordings, useTrialActs } from '../api.ts'
 import { measuredText, settingText, setUpInWords } from '../words.ts'
 
 /** One bead whole: settings, figures, faults, note, photos, recordings of its arc. */
@@ -70,6 +71,7 @@ export function BeadDetail({ trial, bead, onPromote, onGone }: { trial: Trial; b
         )}
       </Sheet>
       <ArcRecordings of={{ beadId: bead.id }} />
+      {records && <TakeFigures trial={trial} bead={bead} />}
       <Dialog
         title={`Remove bead ${bead.number}`} isOpen={removing} onClose={() => setRemoving(false)}
         footer={<><Button onClick={() => setRemoving(false)}>Keep it</Button><Button kind="danger" pending={acts.removeBead.isPending} onClick={() => acts.removeBead.mutate({ id: bead.id, version: bead.version }, { onSuccess: () => { say(`Bead ${bead.number} was removed`); onGone() } })}>Remove bead {bead.number}</Button></>}
@@ -77,6 +79,23 @@ export function BeadDetail({ trial, bead, onPromote, onGone }: { trial: Trial; b
         <FormError message={acts.removeBead.isError ? asProblem(acts.removeBead.error).message : undefined} />
         <p>Bead {bead.number} and its photos are removed for good. Recordings of its arc stay, attached to nothing. A bad bead is worth keeping: it is what ends a range.</p>
       </Dialog>
+    </div>
+  )
+}
+
+/** Offers the figures of the latest recording as the bead's measured ones, where they differ. */
+function TakeFigures({ trial, bead }: { trial: Trial; bead: Bead }) {
+  const { saveBead } = useTrialActs(trial)
+  const [recording] = useRecordings(bead.id)
+  if (!recording) return null
+  const measured = measuredFromRecording(bead.content.measured, recording.figures)
+  if (same(measured, bead.content.measured)) return null
+  const { pulse, current, voltage } = recording.figures
+  const said = `${pulse ? `peak ${Math.round(pulse.peakCurrent)} A, background ${Math.round(pulse.backgroundCurrent)} A, ` : ''}mean ${Math.round(current.mean)} A and ${voltage.mean.toFixed(1)} V`
+  return (
+    <div className="no-print flex flex-wrap items-center justify-between gap-x-4 gap-y-2 border border-plum bg-plum-bg px-4 py-3">
+      <p className="text-pretty">{recording.fileName} says {said}. Taken over as measured, they let current and drop be compared from bead to bead.</p>
+      <Button className="max-sm:min-h-12" pending={saveBead.isPending} onClick={() => saveBead.mutate({ id: bead.id, version: bead.version, content: { ...bead.content, measured } }, { onSuccess: () => say(`Bead ${bead.number} has the recording’s figures`), onError: sayProblem })}>Take them over</Button>
     </div>
   )
 }

@@ -4,6 +4,7 @@ import type { Bead } from '@shared/schemas/trials.ts'
 import { compareBeads } from '@shared/trials/compare-beads.ts'
 import { Select } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
+import { useRecordings } from '../api.ts'
 import { settingText } from '../words.ts'
 import { AdviceList, FigureTable } from './Compared.tsx'
 
@@ -12,8 +13,9 @@ export function CompareSheet({ beads, mode }: { beads: readonly Bead[]; mode: Ma
   const [chosen, setChosen] = useState<{ before: number | null; after: number | null }>({ before: null, after: null })
   const after = beads.find(({ number }) => number === chosen.after) ?? beads.at(-1)
   const before = beads.find(({ number }) => number === chosen.before) ?? beads.filter(({ number }) => number < (after?.number ?? 0)).at(-1) ?? beads[0]
+  const [recorded, recordedAfter] = [useRecordings(before?.id), useRecordings(after?.id)]
   if (!before || !after || beads.length < 2) return null
-  const told = compareBeads(before.content, after.content, mode)
+  const told = compareBeads(before.content, after.content, mode, { before: recorded[0]?.figures.averageInstantaneousPower ?? null, after: recordedAfter[0]?.figures.averageInstantaneousPower ?? null })
   const options = beads.map(({ number, content }) => ({ value: String(number), label: `Bead ${number}${content.score === null ? '' : `, score ${content.score}`}` }))
   const control = (key: string) => mode?.controls.find((one) => one.key === key)
   const shown = (value: number | null, key: string, unit: string) => (value === null ? 'not set' : `${settingText(value, control(key))}${unit ? ` ${unit}` : ''}`)

@@ -36,7 +36,7 @@ export function AdviceList({ advice, onDial }: { advice: readonly Advice[]; onDi
 
 const BRIEF: readonly FigureKey[] = ['meanCurrent', 'dropletVolume', 'duty', 'power']
 const DIGITS: Record<FigureKey, number> = { duty: 3, meanCurrent: 0, rmsCurrent: 0, power: 0, dropletVolume: 2, dropletDiameter: 2, energyPerLength: 2, detachment: 0 }
-const HOW = { model: 'from the settings', measured: 'off the meter', meters: 'mean volts × amps' } as const
+const HOW = { model: 'from the settings', measured: 'off the meter', meters: 'mean volts × amps', recorded: 'off the recording' } as const
 const WORD: Record<Direction, string> = { up: 'up', down: 'down', same: 'same', unknown: 'can’t be told' }
 
 function Move({ change }: { change: FigureChange }) {

@@ -5,6 +5,7 @@ import { interval, quantity } from '@shared/units/convert.ts'
 import { beadFigures } from '@shared/trials/bead-figures.ts'
 import { beadValues, settingOf, travelSpread } from '@shared/trials/bead-values.ts'
 import { compareBeads, type BeadComparison } from '@shared/trials/compare-beads.ts'
+import { measuredFromRecording } from '@shared/trials/from-recording.ts'
 import { measuredTravel, pulseBead, pulseMachine, type Settings } from '../../../fixtures/trials.ts'
 
 const [mode] = pulseMachine().modes
@@ -75,6 +76,21 @@ describe('the figures of a bead', () => {
     const bare = { ...bead, settings: [{ control: 'feed', label: 'Wire', sets: 'wireFeed' as const, value: 6, unit: '' }] }
     expect(settingOf(bare, 'wireFeed')).toBeNull()
     expect(beadValues(bare)[0]).toMatchObject({ value: 6, unit: '', dimension: null })
+  })
+})
+
+describe('a recording of the arc', () => {
+  const figures = { current: { mean: 133.96, rms: 200, min: 0, max: 410 }, voltage: { mean: 22.884, rms: 23, min: 0, max: 33 }, arcTime: 17.64, alternating: false, pulse: { frequency: 120, peakCurrent: 399.7, backgroundCurrent: 50.2, onTime: 2, count: 900 } }
+  it('gives what the panel does not show as measured, and leaves the rest', () => {
+    const measured = measuredFromRecording({ ...measuredTravel(450), current: interval(120, undefined, 'current') }, figures)
+    expect(measured).toMatchObject({ travelSpeed: { min: { si: 450 } }, current: { min: { si: 134 }, max: { si: 134 } }, voltage: { min: { si: 22.9 } }, peakCurrent: { si: 400 }, backgroundCurrent: { si: 50 }, arcTime: { si: 17.6 } })
+    expect(measuredFromRecording(measuredTravel(450), { ...figures, pulse: null, alternating: true })).toMatchObject({ current: { min: { si: 200 } }, peakCurrent: null, backgroundCurrent: null })
+  })
+  it('goes before any model of the power, and is compared only with another recording', () => {
+    const [before, after] = [pulseBead({}, { measured: { ...measuredTravel(400), current: interval(134, undefined, 'current'), voltage: interval(23, undefined, 'voltage') } }), pulseBead({ feed: 7 }, { measured: { ...measuredTravel(400), current: interval(140, undefined, 'current'), voltage: interval(23, undefined, 'voltage') } })]
+    expect(figureOf(compareBeads(before, after, mode, { before: 3832, after: 4000 }), 'power')).toMatchObject({ before: 3832, after: 4000, how: 'recorded', direction: 'up' })
+    expect(figureOf(compareBeads(before, after, mode, { before: 3832, after: 4000 }), 'energyPerLength')?.after).toBeCloseTo(0.6, 9)
+    expect(figureOf(compareBeads(before, after, mode, { before: 3832, after: null }), 'power')).toMatchObject({ before: 134 * 23, after: 140 * 23, how: 'meters' })
   })
 })
 

@@ -205,6 +205,16 @@ describe('the trial', () => {
     await waitFor(() => expect(seen.find(({ method }) => method === 'POST')?.body).toMatchObject({ beadId: beads[1]?.id, title: 'ER5356 on 6 mm', standards: [{ standard: 'asme-ix' }], unitSystem: 'SI' }))
   })
 
+  it('takes the figures of a recording over as measured, on asking', async () => {
+    const figures = { rows: 9, badRows: 0, samplesPerSecond: 5000, duration: 18, bad: [], gaps: { count: 0, duration: 0 }, alternating: false, arcTime: 17.6, stops: [], stopCount: 0, current: { mean: 103.6, rms: 150, min: 0, max: 360 }, voltage: { mean: 22.4, rms: 22.5, min: 0, max: 30 }, averageInstantaneousPower: 2600, energy: 45000, meterPower: 2320, meterError: -10.8, pulse: { frequency: 100, peakCurrent: 350.2, backgroundCurrent: 60.1, onTime: 1.5, count: 1760 }, said: [] }
+    const recording = { id: ids.other, fileName: 'bead 2.csv', bytes: 100, rows: 9, uploadedAt: '2026-11-02T08:00:00Z', by: { id: ids.me, name: 'Anya Brook' }, attachment: { couponId: null, runRowId: null, beadId: beads[1]?.id ?? null, weldLength: null }, attachedTo: 'T-004 bead 2', figures }
+    const seen = mockApi({ ...answers(trial()), 'GET /api/arc-recordings': page([recording]), [`PUT /api/beads/${beads[1]?.id}`]: ({ body }) => ({ body: { ...beads[1], version: 2, content: (body as { content: BeadContent }).content } }) })
+    showRoutes(createRoutes, { as: engineer, path: `/dial-in/${TRIAL}?bead=2` })
+    await screen.findByText(/bead 2.csv says peak 350 A, background 60 A, mean 104 A and 22.4 V/)
+    fireEvent.click(screen.getByRole('button', { name: 'Take them over' }))
+    await waitFor(() => expect(seen.find(({ method }) => method === 'PUT')?.body).toMatchObject({ content: { measured: { peakCurrent: { si: 350 }, backgroundCurrent: { si: 60 }, current: { min: { si: 104 } }, travelSpeed: { min: { si: 450 } } } } }))
+  })
+
   it('teaches what to do while it is empty, and offers no acts to those who only read', async () => {
     open(trial({ beads: [], bestScore: null, machine: null, wire: null, metal: null, may: [] }), session(['trials.read']))
     await screen.findByText(/Each one after that is a copy with one thing changed/)
