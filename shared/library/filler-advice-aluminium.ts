@@ -31,7 +31,7 @@ function suits(metal: MetalFacts, filler: string): { verdict: Verdict; text: str
   if (alloy === null) return { verdict: 'cannot-tell', text: `The alloy of ${metal.name} isn’t stated.` }
   if (alloy.startsWith('5') && magnesium === null) return { verdict: 'cannot-tell', text: `The magnesium of ${metal.name} isn’t stated, and 2.5 % of it decides.` }
   if (alloy.startsWith('5') && magnesium !== null && magnesium > 2.5) {
-    if (SILICON.has(filler)) return { verdict: 'unfit', text: `${filler} is not for ${metal.name}: above 2.5 % magnesium a silicon filler makes the weld brittle. Take 5356, 5183 or 5556.` }
+    if (SILICON.has(filler)) return { verdict: 'unfit', text: `${filler} is not for ${metal.name}: above 2.5 % magnesium a silicon filler is never taken. Take 5356, 5183 or 5556.` }
     if (RICH.has(filler) && ['5083', '5086', '5456'].includes(alloy)) return { verdict: 'suits', text: `5356, 5183 and 5556 are usual for ${metal.name}.` }
     if (filler === '5554' && alloy === '5454') return { verdict: 'suits', text: '5554 is usual for 5454, also in hot service.' }
   }

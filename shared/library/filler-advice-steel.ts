@@ -27,14 +27,34 @@ function alloyOf(composition: string | null): Record<(typeof ELEMENTS)[number], 
 
 const same = (one: string | null, other: string | null): boolean => one !== null && one === other
 
+/** Structure of a stainless metal by its ISO 15608 group: 8 austenitic, 10 duplex, 7 ferritic or martensitic. */
+const structureOfMetal = ({ group, pNumber }: MetalFacts): string | null => ({ '8': 'austenitic', '10': 'duplex', '7': 'ferritic or martensitic' })[group?.split('.')[0] ?? ''] ?? (pNumber === '8' ? 'austenitic' : pNumber === '10H' ? 'duplex' : null)
+
+/** Structure of a stainless deposit by its nominal composition: `22Cr-9Ni-3Mo-N` duplex, `12Cr-4.5Ni-0.5Mo` of straight chromium, else austenitic. */
+function structureOfFiller(composition: string | null): string | null {
+  const alloy = alloyOf(composition)
+  if (alloy === null) return null
+  if (alloy.Ni < 7) return 'ferritic or martensitic'
+  return alloy.Cr >= 22 && alloy.Ni < 11 && /-N\b/.test(composition ?? '') ? 'duplex' : 'austenitic'
+}
+
 function stainlessFit(metals: readonly MetalFacts[], filler: FillerFacts): Remark {
   const basis = weakest('common-practice', filler.basis)
   const deposit = alloyOf(filler.composition)
   const bases = metals.map(({ composition }) => alloyOf(composition))
   if (deposit === null || bases.some((base) => base === null)) return remark('alloy', 'cannot-tell', 'The nominal composition of filler or metal isn’t in the library, so their alloys can’t be compared.', NOMINAL, 'memory')
+  const structure = structureOfFiller(filler.composition)
+  const other = metals.find((metal) => structureOfMetal(metal) !== structure)
+  if (other) return remark('alloy', 'cannot-tell', `${other.name} is ${structureOfMetal(other) ?? 'of a structure that is not stated'}, ${filler.name} is ${structure}: nothing here says whether that suits.`, NOMINAL, basis)
   const short = ELEMENTS.filter((element) => bases.some((base) => base !== null && deposit[element] < base[element]))
   if (short.length > 0) return remark('alloy', 'unfit', `${filler.name} (${filler.composition}) holds less ${short.join(' and ')} than ${namesOf(metals)} (${[...new Set(metals.map(({ composition }) => composition))].join('; ')}): the weld would be the poorer alloy.`, NOMINAL, basis)
   return remark('alloy', 'suits', `${filler.name} (${filler.composition}) holds no less Cr, Ni and Mo than ${namesOf(metals)} (${[...new Set(metals.map(({ composition }) => composition))].join('; ')}). Whether the service wants another alloy is for the engineer.`, NOMINAL, basis)
+}
+
+/** How far a deposit is alloyed beyond a metal, summed over Cr, Ni and Mo in nominal per cent; 0 where either is not listed. */
+export function excessAlloy(metal: string | null, filler: string | null): number {
+  const [base, deposit] = [alloyOf(metal), alloyOf(filler)]
+  return base && deposit ? ELEMENTS.reduce((sum, element) => sum + deposit[element] - base[element], 0) : 0
 }
 
 /** Whether the kind and alloy of a filler suit the metals. */

@@ -5,7 +5,7 @@
 import type { BaseMetal, Filler, Process } from '../schemas/welding.ts'
 import { aluminiumCare, aluminiumFit } from './filler-advice-aluminium.ts'
 import { fillerFacts, metalFacts, remark, type AdviceLibrary, type Asked, type MetalFacts, type Remark, type Verdict } from './filler-advice-facts.ts'
-import { alloyFit, hydrogenLevel, lowCarbonCare, strengthMatch } from './filler-advice-steel.ts'
+import { alloyFit, excessAlloy, hydrogenLevel, lowCarbonCare, strengthMatch } from './filler-advice-steel.ts'
 import { fillers, toFiller } from './filler-metals.ts'
 import { readProcess } from './processes.ts'
 import type { FillerRow } from './rows.ts'
@@ -66,9 +66,10 @@ export function fillerAdvice({ a, b, filler, process, serviceTemperature = null,
 /**
  * Fillers of the reference that suit a pair of metals.
  * @param process only fillers of this process
- * @returns the rows with what is said of them, those of matching strength first; undermatching and single-pass ones are left out
+ * @returns the rows with what is said of them, those of matching strength first, then the nearest in alloy; undermatching and single-pass ones are left out
  */
 export function suitableFillers(a: BaseMetal, b: BaseMetal, process: Process | null): { row: FillerRow; advice: FillerAdvice }[] {
+  const composition = metalFacts(a)?.composition ?? null
   const strong = ({ advice }: { advice: FillerAdvice }): number => (advice.remarks.some(({ id, kind }) => id === 'strength' && kind === 'suits') ? 0 : 1)
   return fillers
     .flatMap((row) => {
@@ -77,5 +78,5 @@ export function suitableFillers(a: BaseMetal, b: BaseMetal, process: Process | n
       const advice = fillerAdvice({ a, b, filler: toFiller(row), process: of })
       return advice.verdict === 'suits' && !advice.remarks.some(({ id }) => id === 'undermatching' || id === 'single-pass') ? [{ row, advice }] : []
     })
-    .sort((one, other) => strong(one) - strong(other))
+    .sort((one, other) => strong(one) - strong(other) || excessAlloy(composition, one.row.nominal_composition) - excessAlloy(composition, other.row.nominal_composition))
 }

@@ -68,7 +68,7 @@ function byReason(found: ReturnType<typeof suitableFillers>): Named[] {
     // The filler's own name begins some sentences; what follows is the reason.
     const text = why.text.startsWith(row.classification) ? why.text.slice(row.classification.length).trim() : why.text
     const key = `${why.id} ${why.id === 'alloy' ? '' : text}`
-    const group = groups.get(key) ?? { text: why.id === 'alloy' ? 'Hold no less Cr, Ni and Mo than the metals.' : text, source: `${why.source} · ${BASIS_WORD[why.basis] ?? why.basis}`, rows: [] }
+    const group = groups.get(key) ?? { text: why.id === 'alloy' ? 'Hold no less Cr, Ni and Mo than the metals; the nearest first.' : text, source: `${why.source} · ${BASIS_WORD[why.basis] ?? why.basis}`, rows: [] }
     group.rows.push(row)
     groups.set(key, group)
   }

@@ -32,6 +32,11 @@ describe('whether a filler suits', () => {
     ['us-a240-316l', 'us-a240-316l', 'ER308L', 'GTAW', 'unfit'],
     ['us-a240-316l', 'us-a240-316l', 'ER316L', 'GTAW', 'suits'],
     ['us-a240-2205', 'us-a240-2205', 'ER2209', 'GTAW', 'suits'],
+    ['us-a240-304l', 'us-a240-304l', 'ER2209', 'GTAW', 'cannot-tell'],
+    ['us-a240-2205', 'us-a240-2205', 'ER309LMo', 'GTAW', 'cannot-tell'],
+    ['us-a240-410', 'us-a240-410', 'ER308L', 'GTAW', 'cannot-tell'],
+    ['us-a240-410', 'us-a240-410', 'ER430', 'GTAW', 'suits'],
+    ['us-a240-904l', 'us-a240-904l', 'ER385', 'GTAW', 'unfit'],
     ['us-a240-304l', 'us-a36', 'E309L-16', 'SMAW', 'suits'],
     ['us-a240-304l', 'us-a36', 'E7018', 'SMAW', 'cannot-tell'],
     ['us-a553-1', 'us-a553-1', 'ENiCrMo-6', 'SMAW', 'suits'],
@@ -132,6 +137,12 @@ describe('fillers for a pair', () => {
     expect(found.every(({ row }) => row.processes.some((name) => ['SMAW', '111'].includes(name)))).toBe(true)
     expect(found.map(({ row }) => row.classification)).not.toContain('E6010')
     expect(suitableFillers(metal('us-b209-5083-o'), metal('us-b209-5083-o'), null).map(({ row }) => row.classification)).toEqual(expect.arrayContaining(['ER5356', 'ER5183', 'ER5556']))
+  })
+
+  it('stand nearest in alloy first for stainless metals', () => {
+    const found = suitableFillers(metal('us-a240-304l'), metal('us-a240-304l'), 'GTAW').map(({ row }) => row.classification)
+    expect(found.slice(0, 3).every((name) => /308L|347|19 9 L/.test(name)), found.join()).toBe(true)
+    expect(found.indexOf('ER310')).toBeGreaterThan(found.indexOf('ER316L'))
   })
 
   it('never throw, and every remark names what it rests on', () => {
