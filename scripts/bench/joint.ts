@@ -69,12 +69,12 @@ function handle(page: Page, rounds: number): Promise<Times> {
     }
     const input = document.querySelector<HTMLInputElement>('#row-joint-rootOpening')
     const grip = document.querySelector<SVGGElement>('[data-handle="joint.includedAngle"]')
-    const write = Object.getOwnPropertyDescriptor(HTMLInputElement.prototype, 'value')?.set
-    if (!input || !grip || !write) throw new Error('The designer is not on the page.')
+    const value = Object.getOwnPropertyDescriptor(HTMLInputElement.prototype, 'value')
+    if (!input || !grip || !value?.set) throw new Error('The designer is not on the page.')
     const type: number[] = []
     input.focus()
     for (let turn = 0; turn < turns; turn += 1) type.push(await timed(() => {
-      write.call(input, ['2.5', '2', '3.5', '3'][turn % 4])
+      value.set?.call(input, ['2.5', '2', '3.5', '3'][turn % 4])
       input.dispatchEvent(new Event('input', { bubbles: true }))
     }))
     input.blur()

@@ -1,4 +1,5 @@
-import { densityOf, geometryOf, jointGeometry } from '@shared/calculations/joint-geometry.ts'
+import { geometryOf, jointGeometry, settingOf } from '@shared/calculations/joint-geometry.ts'
+import { dimensionsInWords } from '@shared/calculations/joint-placing.ts'
 import { passSchema, type RunRow } from '@shared/schemas/welding.ts'
 import { drawFactColumn, drawFacts, drawWideFact, factsHeight, type Fact } from './layout/facts.ts'
 import type { Figures } from './layout/figures.ts'
@@ -27,10 +28,11 @@ export function drawJoint(context: Context, beads: readonly RunRow[] = []): void
   const { sheet, figures, variables } = context
   const { joint } = variables
   const welded = variables.processes.map(({ id }) => ({ id, passes: beads.filter((row) => row.processId === id).map((row) => passSchema.parse({ number: row.pass, layer: row.layer })) }))
-  const geometry = beads.length > 0 ? jointGeometry({ joint, thickness: variables.thickness, thicknessB: variables.thicknessB, blocks: welded, density: densityOf(variables), system: figures.first }) : geometryOf(variables, figures.first)
+  const geometry = beads.length > 0 ? jointGeometry({ ...settingOf(variables, figures.first), blocks: welded }) : geometryOf(variables, figures.first)
   const facts: Fact[] = [
     ...jointFacts(context),
     ...(geometry.areaMm2 === null ? [] : [{ label: 'Weld section', value: figures.value(geometry.areaMm2, 'area') }]),
+    ...(geometry.throatMm === null ? [] : [{ label: 'Throat, flat face', value: figures.value(Number(geometry.throatMm.toFixed(2)), 'length') }]),
     ...(geometry.weldMetalKgPerM === null ? [] : [{ label: 'Weld metal', value: massWords(geometry.weldMetalKgPerM, figures) }]),
   ]
   const summary = [said(GROOVE, joint.groove), joint.weld, said(JOINT_TYPE, joint.type)].filter(Boolean).join(', ')
@@ -46,7 +48,7 @@ export function drawJoint(context: Context, beads: readonly RunRow[] = []): void
       sheet.ensure(Math.max(height, factsTall + 8))
       const top = sheet.y
       const frame = { x: sheet.left, y: top, width, height: height - heightOf(lines, SOFT) - 6 }
-      const words = `Cross-section of the joint: ${summary}. ${geometry.dimensions.map((mark) => `${mark.kind.replace('-', ' ')} ${mark.text}`).join(', ')}. ${geometry.passes.length > 0 ? `Passes in order: ${geometry.passes.map((pass) => pass.number).join(', ')}.` : ''}`
+      const words = `Cross-section of the joint: ${summary}. ${dimensionsInWords(geometry.dimensions)}. ${geometry.passes.length > 0 ? `Passes in order: ${geometry.passes.map((pass) => pass.number).join(', ')}.` : ''}`
       sheet.tag('Figure', () => drawJointSection(sheet.doc, sheet.faces, geometry, frame), { alt: words })
       sheet.tag('P', () => drawLines(sheet.faces, SOFT, lines, sheet.left + PAD, top + height - heightOf(lines, SOFT) - 4))
       const used = Math.max(height, factsTall + 8)

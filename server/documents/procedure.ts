@@ -1,3 +1,4 @@
+import { sequenceOf } from '@shared/calculations/pass-layout.ts'
 import type { Assessment } from '@shared/schemas/assessment.ts'
 import type { RevisionState, Signature } from '@shared/schemas/records.ts'
 import type { ProcedureContent } from '@shared/schemas/welding.ts'
@@ -89,7 +90,7 @@ function titleBlock(document: ProcedureDocument): TitleBlock {
 
 function drawPasses(context: Context): void {
   const { sheet, figures, variables } = context
-  const passes = variables.processes.flatMap((block) => block.passes.map((pass) => ({ block, pass })))
+  const passes = sequenceOf(variables.processes).flatMap(({ block, pass }) => { const laidBy = variables.processes[block]; return laidBy ? [{ block: laidBy, pass }] : [] })
   if (passes.length === 0) return
   const column = (title: string, unit: string, share: number): Column => ({ title, unit, share, align: 'right' })
   sheet.section('Pass table', `${passes.length} ${passes.length === 1 ? 'entry' : 'entries'}`, () => {

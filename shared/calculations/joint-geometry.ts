@@ -135,7 +135,7 @@ function pipeOf({ diameter = null, thickness, system }: JointSetting, wall: numb
   const thinnest = Math.min(wall, thickness?.min?.si ?? wall)
   if (largest <= 0) remarks.refuse('diameter', `An outside diameter of ${words.length(largest)} is no pipe; it must be above 0.`)
   else if (2 * thinnest >= largest) remarks.refuse('thickness', `A wall of ${words.length(thinnest)} does not fit in a pipe of ${words.length(largest)} outside diameter.`)
-  return { axis: `axis of the pipe, ⌀ ${written(diameter, 'length', system)}`, outside: diameter.min && diameter.max && 2 * wall < drawn ? drawn : null }
+  return { axis: `axis of the pipe, Ø ${written(diameter, 'length', system)}`, outside: diameter.min && diameter.max && 2 * wall < drawn ? drawn : null }
 }
 
 function grooveGeometry(setting: JointSetting, passes: readonly PassToLay[]): JointGeometry {

@@ -19,6 +19,14 @@ const CASES: [string, JointGeometry][] = [
   ['Single bevel, tee', draw({ type: 'tee', groove: 'single-bevel', bevelAngle: degrees(45), rootOpening: mm(3), rootFace: mm(1) }, 12, ['root', 'fill', 'cap'])],
   ['Square, no passes', draw({ groove: 'square', rootOpening: mm(1.5) }, 3, [])],
   ['Fillet', draw({ weld: 'fillet', type: 'tee', filletLeg: mm(8) }, 10, ['fillet', 'fillet', 'fillet'], 12)],
+  ['Double V, unequal, gouged', draw({ groove: 'double-v', includedAngle: degrees(50), secondAngle: degrees(60), rootOpening: mm(0, 3), rootFace: mm(2), secondDepth: mm(8), backGouging: 'arc-gouging', backGougeDepth: mm(11) }, 28, ['root', 'fill', 'cap', 'root', 'fill', 'cap'])],
+  ['Unequal plates, insert', draw({ groove: 'single-v', includedAngle: degrees(75), rootOpening: mm(3), rootFace: mm(1.5), backing: 'consumable-insert', insertWidth: mm(3), insertHeight: mm(3), taperAngle: degrees(14), alignment: 'root-side' }, 8, ['root', 'fill', 'cap'], 12)],
+  ['Compound V', draw({ groove: 'compound-v', includedAngle: degrees(75), bevelAngle: degrees(10), rootOpening: mm(3), rootFace: mm(1.5), angleChange: mm(19) }, 40, ['root', 'fill', 'fill', 'fill', 'fill', 'cap', 'cap'])],
+  ['Tee, both sides, fillets over', draw({ type: 'tee', groove: 'double-bevel', bevelAngle: degrees(45), rootOpening: mm(2), rootFace: mm(2), reinforcingFillet: mm(6) }, 25, ['root', 'fill', 'cap', 'root', 'fill', 'cap', 'fillet', 'fillet'], 15)],
+  ['Skewed fillet', draw({ weld: 'fillet', type: 'tee', filletLeg: mm(8), filletLegB: mm(11), memberAngle: degrees(70) }, 12, ['fillet', 'fillet', 'fillet'], 10)],
+  ['Edge', draw({ type: 'edge', groove: 'single-v', includedAngle: degrees(60), rootOpening: mm(0), grooveDepth: mm(8) }, 10, ['root', 'cap'], 12)],
+  ['Flare bevel', draw({ type: 'corner', groove: 'flare-bevel', rootOpening: mm(0), rootRadius: mm(12) }, 6, ['root', 'cap'])],
+  ['Ceramic backing', draw({ groove: 'single-v', includedAngle: degrees(50), rootOpening: mm(4, 6), rootFace: mm(0, 1), backing: 'ceramic' }, 14, ['root', 'fill', 'cap', 'cap'])],
   ['Nothing to draw from', draw({ groove: 'single-v' }, 0, [])],
 ]
 

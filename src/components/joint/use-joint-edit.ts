@@ -1,5 +1,5 @@
 import { useController, useWatch, type Control, type FieldValues } from 'react-hook-form'
-import { useCallback, useEffect, useEffectEvent, useMemo, useRef } from 'react'
+import { useCallback, useEffect, useMemo, useRef } from 'react'
 import type { Interval } from '@shared/schemas/common.ts'
 import type { Joint, ProcessBlock, WeldingVariables } from '@shared/schemas/welding.ts'
 import { jointGeometry, settingOf, type JointGeometry, type JointSetting } from '@shared/calculations/joint-geometry.ts'
@@ -90,7 +90,10 @@ export function useJointEdit(control: Control<FieldValues>, system: UnitSystem):
     writeAll(moved.map(([field, { value }]) => [field, value] as const))
     for (const [field] of moved) store.clear(field)
   }
-  const settleLater = useEffectEvent(settle)
+  const settleNow = useRef(settle)
+  useEffect(() => {
+    settleNow.current = settle
+  })
   useEffect(
     () => () => {
       if (timer.current) clearTimeout(timer.current)
@@ -102,7 +105,7 @@ export function useJointEdit(control: Control<FieldValues>, system: UnitSystem):
     if (jointGeometry({ ...candidate, blocks: [] }).problems.length > 0) return false
     store.show(field, value, 'drawing')
     if (timer.current) clearTimeout(timer.current)
-    timer.current = setTimeout(() => settleLater(), REST)
+    timer.current = setTimeout(() => settleNow.current(), REST)
     return true
   }
   return {

@@ -90,7 +90,7 @@ export function detailSheet(detail: Detail, thickness: number | null, system: Un
   }
   const { detailed } = detail.tolerances
   const words = (value: Interval) => formatInterval(value, 'length', system).text
-  const lines: DetailLine[] = [{ label: figure.rootOpening, detailed: nominal ? words(stated(nominal, detailed.opening, system)) : `as the thickness asks (${String(detail.opening)})`, fitUp: nominal ? span(reach('opening'), 'length', system) : 'follows the thickness' }]
+  const lines: DetailLine[] = [{ label: figure.rootOpening, detailed: nominal ? words(stated(nominal, detailed.opening, system)) : `as the thickness asks (${typeof detail.opening === 'string' ? detail.opening : ''})`, fitUp: nominal ? span(reach('opening'), 'length', system) : 'follows the thickness' }]
   if (ends.face) lines.push({ label: figure.rootFace, detailed: words(stated(ends.face, detailed.face, system)), fitUp: detail.tolerances.fitUp.face.up === null ? 'not limited' : span(reach('face'), 'length', system) })
   if (detail.angle !== null) {
     const at = fitUp(detail, { opening: null, face: null, angle: detail.angle }, system).angle
