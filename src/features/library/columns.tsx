@@ -83,7 +83,8 @@ export function factsOf({ kind, content }: Pick<LibraryItem, 'kind' | 'content'>
       return {
         shown: [
           { label: 'Parts by volume', value: listed(row.components.map(({ gas, percent: share }) => `${gas} ${share} %`), ' + ') ?? row.limits },
-          { label: 'ISO 14175', value: row.symbol },
+          // Worked out from the parts by the table of the standard, which is remembered.
+          { label: 'ISO 14175', value: row.symbol, basis: row.id.startsWith('iso-') ? row.basis : 'memory', quiet: true },
           { label: 'AWS A5.32', value: row.awsDesignation },
           { label: 'Use', value: row.use },
         ],

@@ -47,6 +47,7 @@ function Opened({ item }: { item: LibraryItem }) {
   const records = items.filter((one) => one.kind !== 'heat')
   const heats = items.filter((one) => one.kind === 'heat')
   const melted = kind === 'base-metals' || kind === 'filler-metals'
+  const usedIn = uses.data && <NamedBySheet title="Used in" none="No procedure or coupon names it." items={records} />
   const mayRecord = useMay('heats.manage') && melted
   return (
     <article>
@@ -83,10 +84,11 @@ function Opened({ item }: { item: LibraryItem }) {
             <p className="border-t border-hair px-4 py-3 text-sm text-soft">{BASIS_SENTENCE[item.basis ?? ''] ?? 'The basis is not stated.'} What is not listed is not known here; it is never taken as nothing required.</p>
           </Sheet>
           {uses.isError && <ErrorState compact error={uses.error} onRetry={() => void uses.refetch()} />}
-          {uses.data && <NamedBySheet title="Used in" none="No procedure or coupon names it." items={records} />}
+          {melted && usedIn}
           {uses.data && melted && <NamedBySheet title={kind === 'base-metals' ? 'Heats' : 'Lots'} none={`No ${kind === 'base-metals' ? 'heat' : 'lot'} of it is recorded.`} items={heats} />}
         </div>
         <div className="min-w-0 space-y-4">
+          {!melted && usedIn}
           {kind === 'base-metals' && <SuitableSheet item={item} />}
           {kind === 'filler-metals' && <FillerSheets item={item} />}
         </div>
