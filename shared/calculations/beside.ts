@@ -124,7 +124,7 @@ const figureOf = ({ shown }: CalculatorResult, key: string): number | null => {
  * @param results of both ends of the record's ranges where they were worked out, else of the figures as they stand
  * @returns null for a calculator that writes nowhere, without a result, or where the field may not be written
  */
-export function useOf(calculatorId: string, results: { single: CalculatorResult } | { least: CalculatorResult; most: CalculatorResult }, system: UnitSystem, blockIndex: number | null): Use | null {
+export function toWrite(calculatorId: string, results: { single: CalculatorResult } | { least: CalculatorResult; most: CalculatorResult }, system: UnitSystem, blockIndex: number | null): Use | null {
   const target = TARGETS[calculatorId]
   if (!target || (target.ofBlock && blockIndex === null)) return null
   const field = target.ofBlock ? `processes.${blockIndex}.${target.path}` : target.path

@@ -53,7 +53,7 @@ export function readAs(input: CalculatorInput, kept: string, system: UnitSystem)
 }
 
 /** A storage figure as a person who reads `system` would type it. */
-export function figureText(input: CalculatorInput, value: InputValue, system: UnitSystem): string {
+function figureText(input: CalculatorInput, value: InputValue, system: UnitSystem): string {
   if (value === null) return ''
   if (input.kind !== 'quantity' || typeof value !== 'number') return String(value)
   const shown = SHOWN_UNIT[system][input.dimension]
@@ -68,7 +68,7 @@ export function exampleTexts(calculator: Calculator, system: UnitSystem): InputT
 }
 
 /** Whether an address names any of the inputs; one that names none opens the worked example. */
-export const isAsked = (calculator: Calculator, search: URLSearchParams): boolean => Object.values(calculator.inputs).some(({ address }) => search.has(address))
+const isAsked = (calculator: Calculator, search: URLSearchParams): boolean => Object.values(calculator.inputs).some(({ address }) => search.has(address))
 
 /** The texts that an address asks for. */
 export function textsFromAddress(calculator: Calculator, search: URLSearchParams, system: UnitSystem): InputTexts {

@@ -31,7 +31,7 @@ export interface Chemistries {
 /** A record as calculators ask it; `bend` and `hardness` where they stand beside such a test of a coupon. */
 export interface CalculatorRecord { variables: WeldingVariables; chemistries?: Chemistries; bend?: Pick<BendTest, 'thickness' | 'formerDiameter'>; hardness?: { values: readonly number[] } }
 
-export interface Taken {
+interface Taken {
   /** As `calculator-texts` keeps it. */
   text: string
   /** In words: `Thickness, upper end`. */
@@ -41,9 +41,9 @@ export interface Taken {
   /** Not in the record: of a heat's or lot's analysis. */
   analysis?: true
 }
-export type Inputs = Readonly<Record<string, Taken | null | undefined>>
+type Inputs = Readonly<Record<string, Taken | null | undefined>>
 /** Inputs that give the least and the greatest result over the ranges of the record. */
-export interface Ends { least: Readonly<Record<string, string>>; most: Readonly<Record<string, string>> }
+interface Ends { least: Readonly<Record<string, string>>; most: Readonly<Record<string, string>> }
 export interface FromRecord {
   taken: Readonly<Record<string, Taken>>
   /** Inputs that must be given and that the record doesn't give. */

@@ -28,7 +28,7 @@ function byPNumber(pNumber: string): MetalFamily | null {
 }
 
 /** @returns null when the record doesn't tell */
-export function metalFamily(metal: BaseMetal): MetalFamily | null {
+function metalFamily(metal: BaseMetal): MetalFamily | null {
   if (metal.iso15608) return byIsoGroup(metal.iso15608)
   if (metal.pNumber) return byPNumber(metal.pNumber)
   if (metal.d12MNumber) return 'aluminium'

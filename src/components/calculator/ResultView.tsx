@@ -57,7 +57,7 @@ export function ResultView({ calculator, result, texts, system, most }: ResultVi
 }
 
 /** The limits that are passed, in words and loud. */
-export function Outside({ said }: { said: readonly string[] }) {
+function Outside({ said }: { said: readonly string[] }) {
   if (said.length === 0) return null
   return (
     <div role="note" aria-label="Outside its validity" className="border-l-[6px] border-straw bg-straw-bg px-3.5 py-2.5">

@@ -13,7 +13,7 @@ const group = source ? partedInputs(source).groups[0] : undefined
 export function readAnalysis(texts: Readonly<Record<string, string>>): Chemistry | null {
   if (!source || Object.values(texts).every((text) => text.trim() === '')) return null
   const { inputs } = source.run(texts)
-  return inputs && carbonEquivalent('ceIiw', inputs as Chemistry).value !== null ? (inputs as Chemistry) : null
+  return inputs && carbonEquivalent('ceIiw', inputs).value !== null ? inputs : null
 }
 
 export interface AnalysisEntryProps {

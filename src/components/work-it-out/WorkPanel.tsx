@@ -1,11 +1,12 @@
 import { useId, useState } from 'react'
 import { Link } from 'react-router-dom'
 import { addressOfInputs, type Calculator } from '@shared/calculations/catalogue.ts'
-import { useOf, type Use } from '@shared/calculations/beside.ts'
+import { toWrite, type Use } from '@shared/calculations/beside.ts'
 import { boxText, emptyTexts, readAs, type InputTexts } from '@shared/calculations/calculator-texts.ts'
 import { fromRecord, type CalculatorRecord, type FromRecord } from '@shared/calculations/from-record.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
 import { Button } from '@/components/Button.tsx'
+import { drawingOf } from '@/components/calculator/Diagram.tsx'
 import { elementsOfGroup } from '@/components/calculator/element-groups.ts'
 import { problemsByInput } from '@/components/calculator/figures.ts'
 import { InputsForm } from '@/components/calculator/InputsForm.tsx'
@@ -46,6 +47,7 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
   const own = typed[calculator.id] ?? {}
   const texts = { ...emptyTexts(calculator), ...prices.of(calculator), ...textsOf(filled), ...own }
   const result = calculator.run(texts)
+  const drawing = drawingOf({ calculator, result, system })
   const use = usable(calculator, filled, own, texts, system, blockIndex)
   const change = (changes: Record<string, string>) => {
     setTyped({ ...typed, [calculator.id]: { ...own, ...changes } })
@@ -102,6 +104,12 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
       <div className="border-t border-rule pt-3">
         <ResultView calculator={calculator} result={result} texts={texts} system={system} most={5} />
       </div>
+      {drawing && result.figures && (
+        <details>
+          <summary className="cursor-pointer py-1 font-medium">{drawing.title}</summary>
+          <div className="mt-1 border border-rule bg-sheet px-2 py-2">{drawing.drawn}</div>
+        </details>
+      )}
       {onUse && use && (
         <p className="flex flex-wrap items-center gap-x-3 gap-y-1.5">
           <Button kind="primary" onClick={() => onUse(use, `${what}: ${use.text}, ${calculator.title.charAt(0).toLowerCase()}${calculator.title.slice(1)}`)}>
@@ -126,10 +134,10 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
 function usable(calculator: Calculator, { ends }: FromRecord, own: InputTexts, texts: InputTexts, system: UnitSystem, blockIndex: number | null): Use | null {
   const untouched = ends && ![...Object.keys(ends.least), ...Object.keys(ends.most)].some((key) => key in own)
   if (untouched) {
-    const both = useOf(calculator.id, { least: calculator.run({ ...texts, ...ends.least }), most: calculator.run({ ...texts, ...ends.most }) }, system, blockIndex)
+    const both = toWrite(calculator.id, { least: calculator.run({ ...texts, ...ends.least }), most: calculator.run({ ...texts, ...ends.most }) }, system, blockIndex)
     if (both) return both
   }
-  return useOf(calculator.id, { single: calculator.run(texts) }, system, blockIndex)
+  return toWrite(calculator.id, { single: calculator.run(texts) }, system, blockIndex)
 }
 
 /** A figure of the record as the reader would write it, with its unit. */

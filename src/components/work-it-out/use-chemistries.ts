@@ -18,7 +18,7 @@ export interface Analyses {
 
 const BY_SYMBOL = new Map(ELEMENTS.map((element) => [ELEMENT_SYMBOLS[element], element]))
 /** A certificate's analysis as the calculations read it; elements that no formula knows are left out. */
-export const analysisOf = ({ chemistry }: Pick<HeatRow, 'chemistry'>): Chemistry => Object.fromEntries(chemistry.flatMap(({ element, percent }): [Element, number][] => (BY_SYMBOL.has(element) ? [[BY_SYMBOL.get(element) as Element, percent]] : [])))
+const analysisOf = ({ chemistry }: Pick<HeatRow, 'chemistry'>): Chemistry => Object.fromEntries(chemistry.flatMap(({ element, percent }): [Element, number][] => (BY_SYMBOL.has(element) ? [[BY_SYMBOL.get(element) as Element, percent]] : [])))
 
 /** The heat that the record names, else the only one of its grade; with several, somebody chooses. */
 const usual = (heats: readonly HeatRow[], number: string | null): HeatRow | null => heats.find((heat) => number !== null && heat.number === number) ?? (heats.length === 1 ? (heats[0] ?? null) : null)

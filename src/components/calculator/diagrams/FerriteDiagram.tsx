@@ -20,7 +20,7 @@ export function FerriteDiagram({ result }: { result: CalculatorResult }) {
   const single = !('dilution' in inputs)
   const b = chemistryOf(inputs, 'b')
   const figures: (FerriteReading & Partial<Pick<DilutedFerrite, 'points'>>) | null = single
-    ? ferriteNumber(inputs as Record<string, number | null>).figures
+    ? ferriteNumber(inputs).figures
     : ferriteWithDilution({ dilution: Number(inputs.dilution), shareOfA: Number(inputs.shareOfA), baseA: chemistryOf(inputs, 'a'), baseB: Object.keys(b).length > 0 ? b : null, filler: chemistryOf(inputs, 'f') }).figures
   if (!figures) return <p className="text-soft">The diagram stands here once the compositions can be read.</p>
   const mix = figures.points

@@ -3,6 +3,7 @@ import { useId } from 'react'
 import { Link, useParams } from 'react-router-dom'
 import { CALCULATOR_GROUPS, calculatorById, type Calculator } from '@shared/calculations/catalogue.ts'
 import { Button, ButtonLink } from '@/components/Button.tsx'
+import { drawingOf } from '@/components/calculator/Diagram.tsx'
 import { problemsByInput } from '@/components/calculator/figures.ts'
 import { InputsForm } from '@/components/calculator/InputsForm.tsx'
 import { PasteBox } from '@/components/calculator/PasteBox.tsx'
@@ -13,7 +14,6 @@ import { Breadcrumb, EmptyState, PageHead } from '@/components/states.tsx'
 import { TitleBlock } from '@/components/TitleBlock.tsx'
 import { say } from '@/components/toast.tsx'
 import { useUnits } from '@/hooks/units.ts'
-import { Diagram } from '../components/Diagram.tsx'
 import { ExampleTable } from '../components/ExampleTable.tsx'
 import { useAddressedInputs } from '../use-calculator.ts'
 
@@ -47,6 +47,7 @@ function Opened({ calculator }: { calculator: Calculator }) {
   const { texts, change, fillExample, address } = useAddressedInputs(calculator)
   const result = calculator.run(texts)
   const problems = problemsByInput(result)
+  const drawing = drawingOf({ calculator, result, system })
   const { title, purpose, group, formula, source, validity } = calculator
   const groupTitle = CALCULATOR_GROUPS.find((each) => each.id === group)?.title ?? ''
   return (
@@ -75,7 +76,11 @@ function Opened({ calculator }: { calculator: Calculator }) {
           <div className="lg:hidden">
             <ResultSheet {...{ calculator, result, texts, system }} />
           </div>
-          <Diagram calculator={calculator} result={result} system={system} />
+          {drawing && (
+            <Sheet title={drawing.title}>
+              <div className="px-4 py-3">{drawing.drawn}</div>
+            </Sheet>
+          )}
           <Sheet title="How it comes about">
             <div className="space-y-3 px-4 py-3">
               <ul className="border-l-2 border-rule pl-3 text-[0.9375rem]">

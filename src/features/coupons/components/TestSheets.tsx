@@ -102,7 +102,7 @@ function ListedTyped<L extends Exclude<TestList, 'bends' | 'ndt'>>({ list, add, 
     <div id={inputId(list)} tabIndex={-1}>
       {rows.map((item, index) => (
         <TestRow key={item.id} fields={TEST_FIELDS[list]} path={`${list}.${index}`} test={item} mark={mark(item)} onChange={(part) => change(index, part as Partial<ItemOf<L>>)} onRemove={() => remove(index)}>
-          {list === 'hardness' && 'scale' in item && <HardnessWork values={item.values as number[]} mark={mark(item)} />}
+          {list === 'hardness' && 'scale' in item && <HardnessWork values={item.values} mark={mark(item)} />}
         </TestRow>
       ))}
       <Foot error={error} empty={rows.length === 0 ? empty : null}>

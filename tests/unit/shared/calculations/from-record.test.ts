@@ -1,6 +1,6 @@
 /** What a record gives each calculator, what it leaves open, and what a result would write back. */
 import { describe, expect, it, test } from 'vitest'
-import { BESIDE_BEND, BESIDE_HARDNESS, besideJoint, besideRow, useOf } from '../../../../shared/calculations/beside.ts'
+import { BESIDE_BEND, BESIDE_HARDNESS, besideJoint, besideRow, toWrite } from '../../../../shared/calculations/beside.ts'
 import { calculatorById, calculators, type Calculator } from '../../../../shared/calculations/catalogue.ts'
 import { boxText, emptyTexts, exampleTexts, keptText, readAs, textsFromAddress } from '../../../../shared/calculations/calculator-texts.ts'
 import { CALCULATOR_WORDS, findCalculators } from '../../../../shared/calculations/calculator-search.ts'
@@ -66,7 +66,8 @@ describe('every calculator', () => {
   it('says of an empty record only what is missing, and assumes in so many words', () => {
     const { taken, missing } = fromRecord('preheat-method-b', { variables: weldingVariablesSchema.parse({ standards: [{ standard: 'asme-ix', edition: '2021' }], processes: [{ id: 'p1' }] }) }, 0)
     expect(missing).toEqual(['cet', 'thickness', 'hydrogen', 'heatInput'])
-    expect(taken).toEqual({ ambient: { text: '20', from: expect.any(String), assumed: true } })
+    expect(Object.keys(taken)).toEqual(['ambient'])
+    expect(taken.ambient).toMatchObject({ text: '20', assumed: true })
   })
 })
 
@@ -82,12 +83,12 @@ describe('heat input', () => {
     // 24 × 200 × 60 / 400 = 720 J/mm; 28 × 260 × 60 / 250 = 1747.2 J/mm, rounded outward.
     expect(results.least.value).toBeCloseTo(0.72, 9)
     expect(results.most.value).toBeCloseTo(1.7472, 9)
-    expect(useOf('heat-input-meter', results, 'SI', 0)).toMatchObject({ field: 'processes.0.electrical.heatInput', text: '0.72 kJ/mm to 1.75 kJ/mm', value: { min: { si: 0.72 }, max: { si: 1.75 }, all: false } })
+    expect(toWrite('heat-input-meter', results, 'SI', 0)).toMatchObject({ field: 'processes.0.electrical.heatInput', text: '0.72 kJ/mm to 1.75 kJ/mm', value: { min: { si: 0.72 }, max: { si: 1.75 }, all: false } })
   })
   it('gives one end where there is one figure', () => {
     const given = record({}, { electrical: { current: interval(200, undefined, 'current'), voltage: interval(24, undefined, 'voltage'), travelSpeed: interval(300, undefined, 'travelSpeed') } })
     expect(fromRecord('heat-input-meter', given, 0).ends).toBeNull()
-    expect(useOf('heat-input-meter', { single: run('heat-input-meter', given) }, 'SI', 0)).toMatchObject({ field: 'processes.0.electrical.heatInput.max', value: { si: 0.96 } })
+    expect(toWrite('heat-input-meter', { single: run('heat-input-meter', given) }, 'SI', 0)).toMatchObject({ field: 'processes.0.electrical.heatInput.max', value: { si: 0.96 } })
   })
   it('by ISO takes the process number from process, wire and gas', () => {
     expect(textOf('heat-input-iso', record(), 'process')).toBe('135')
@@ -125,9 +126,9 @@ describe('preheat', () => {
   it('writes the figure rounded up, and the code’s own Fahrenheit for who reads it', () => {
     const table = named('preheat-d1-1-table')
     const result = table.run({ category: 'B', thickness: '50', system: 'US' })
-    expect(useOf('preheat-d1-1-table', { single: result }, 'US', null)).toMatchObject({ field: 'preheat.minimum', value: { unit: '°F', typed: '150 °F' } })
+    expect(toWrite('preheat-d1-1-table', { single: result }, 'US', null)).toMatchObject({ field: 'preheat.minimum', value: { unit: '°F', typed: '150 °F' } })
     const b = named('preheat-method-b').run({ cet: '0.35', thickness: '30', hydrogen: '5', heatInput: '1.5', ambient: '20' })
-    expect(useOf('preheat-method-b', { single: b }, 'SI', null)).toMatchObject({ field: 'preheat.minimum', value: { si: 120 }, text: '120 °C' })
+    expect(toWrite('preheat-method-b', { single: b }, 'SI', null)).toMatchObject({ field: 'preheat.minimum', value: { si: 120 }, text: '120 °C' })
   })
   it('tells the category only where both metals agree and the filler tells its hydrogen', () => {
     expect(textOf('preheat-d1-1-table', given(), 'category')).toBe('B')
@@ -199,7 +200,7 @@ describe('joint, cost and tests', () => {
     expect(textOf('bend-former', given, 'elongation')).toBe('16.7')
     const result = run('bend-former', given)
     expect(result.value).toBeCloseTo(100 * 10 / 16.7 - 10, 6)
-    expect(useOf('bend-former', { single: result }, 'SI', null)).toBeNull()
+    expect(toWrite('bend-former', { single: result }, 'SI', null)).toBeNull()
   })
   it('takes the highest indentation', () => {
     expect(textOf('hardness-conversion', record({}, {}, { hardness: { values: [180, 244, 210] } }), 'figure')).toBe('244')

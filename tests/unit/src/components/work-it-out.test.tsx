@@ -1,5 +1,5 @@
 // @vitest-environment jsdom
-import { screen, waitFor, within } from '@testing-library/react'
+import { configure, screen, waitFor, within } from '@testing-library/react'
 import userEvent from '@testing-library/user-event'
 import { describe, expect, it, vi } from 'vitest'
 import type { Use } from '@shared/calculations/beside.ts'
@@ -8,6 +8,10 @@ import { weldingVariablesSchema } from '@shared/schemas/welding.ts'
 import { interval, quantity } from '@shared/units/convert.ts'
 import { WorkItOut, type WorkItOutProps } from '@/components/work-it-out/WorkItOut.tsx'
 import { mockApi, session, show } from '../support/render.tsx'
+
+// What a busy machine may take.
+configure({ asyncUtilTimeout: 15_000 })
+vi.setConfig({ testTimeout: 60_000 })
 
 const steel = { libraryId: 'us-a516-70', specification: 'A/SA-516', grade: '70', pNumber: '1', groupNumber: 2 }
 const record = (change: object = {}, block: object = {}): CalculatorRecord => ({

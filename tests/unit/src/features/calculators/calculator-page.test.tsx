@@ -1,10 +1,14 @@
 // @vitest-environment jsdom
-import { screen, waitFor, within } from '@testing-library/react'
+import { configure, screen, waitFor, within } from '@testing-library/react'
 import userEvent from '@testing-library/user-event'
 import { beforeAll, describe, expect, it, vi } from 'vitest'
 import { calculators } from '../../../../../shared/calculations/catalogue.ts'
 import { routes } from '../../../../../src/features/calculators/routes.tsx'
 import { session, showRoutes } from '../../support/render.tsx'
+
+// What a busy machine may take.
+configure({ asyncUtilTimeout: 15_000 })
+vi.setConfig({ testTimeout: 60_000 })
 
 // A page is a chunk of its own; the first reading of it takes longer than a test waits.
 beforeAll(() => Promise.all([import('../../../../../src/features/calculators/pages/CalculatorPage.tsx'), import('../../../../../src/features/calculators/pages/CalculatorsPage.tsx')]))

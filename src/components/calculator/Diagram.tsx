@@ -1,19 +1,19 @@
 import type { ReactNode } from 'react'
 import type { Calculator, CalculatorResult } from '@shared/calculations/catalogue.ts'
 import type { UnitSystem } from '@shared/units/types.ts'
-import { CoolingDiagram } from '@/components/calculator/diagrams/CoolingDiagram.tsx'
-import { FerriteDiagram } from '@/components/calculator/diagrams/FerriteDiagram.tsx'
-import { PulseDiagram } from '@/components/calculator/diagrams/PulseDiagram.tsx'
-import { WireFeedDiagram } from '@/components/calculator/diagrams/WireFeedDiagram.tsx'
-import { Sheet } from '@/components/Sheet.tsx'
+import { CoolingDiagram } from './diagrams/CoolingDiagram.tsx'
+import { FerriteDiagram } from './diagrams/FerriteDiagram.tsx'
+import { PulseDiagram } from './diagrams/PulseDiagram.tsx'
+import { WireFeedDiagram } from './diagrams/WireFeedDiagram.tsx'
 
-export interface DiagramProps {
+interface DiagramProps {
   calculator: Calculator
   result: CalculatorResult
   system: UnitSystem
 }
 
-function drawing({ calculator, result, system }: DiagramProps): { title: string; drawn: ReactNode } | null {
+/** The drawing that belongs to a calculator, where people would rather look than read; null for one without. */
+export function drawingOf({ calculator, result, system }: DiagramProps): { title: string; drawn: ReactNode } | null {
   switch (calculator.id) {
     case 'ferrite-number':
     case 'ferrite-dilution':
@@ -29,15 +29,4 @@ function drawing({ calculator, result, system }: DiagramProps): { title: string;
     default:
       return null
   }
-}
-
-/** The drawing that belongs to a calculator, where people would rather look than read. */
-export function Diagram(props: DiagramProps) {
-  const found = drawing(props)
-  if (!found) return null
-  return (
-    <Sheet title={found.title}>
-      <div className="px-4 py-3">{found.drawn}</div>
-    </Sheet>
-  )
 }
