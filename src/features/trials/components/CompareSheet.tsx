@@ -35,7 +35,7 @@ export function CompareSheet({ beads, mode }: { beads: readonly Bead[]; mode: Ma
         {told.problems.map((problem) => <p key={problem} className="font-medium text-oxide">{problem}</p>)}
         <FigureTable comparison={told} labels={[`bead ${before.number}`, `bead ${after.number}`]} />
         <AdviceList advice={told.advice} />
-        <p className="text-sm text-soft">Worked out from a rectangular pulse; real ramps move the mean by 5 to 10 %. Advice, never a limit.</p>
+        {told.figures.some(({ key, after: is }) => key === 'duty' && is !== null) && <p className="text-sm text-soft">Worked out from a rectangular pulse; real ramps move the mean by 5 to 10 %. Advice, never a limit.</p>}
       </div>
     </Sheet>
   )

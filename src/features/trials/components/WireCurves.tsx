@@ -8,7 +8,7 @@ import { useUnits } from '@/hooks/units.ts'
 import { useWidth } from '@/hooks/width.ts'
 import { figure } from '@/lib/figures.ts'
 import { query } from '@/lib/query.ts'
-import { curveOf, wireSentences, wiresOf, type Wire, type WireCurve } from './curves.ts'
+import { counterpartOf, curveOf, wireSentences, wiresOf, type Wire, type WireCurve } from './curves.ts'
 import { scaleOf } from './plot-data.ts'
 
 const HEIGHT = 280
@@ -25,7 +25,7 @@ export function WireCurves({ beads }: { beads: readonly Bead[] }) {
   const name = ({ name: wire, diameter }: Wire) => `${wire} ${figure(diameter)} mm`
   const [chosen, setChosen] = useState<{ one: string | null; other: string | null }>({ one: null, other: null })
   const one = wires.find((wire) => name(wire) === chosen.one) ?? wires[0]
-  const other = wires.find((wire) => name(wire) === chosen.other) ?? wires.find((wire) => one && wire.name !== one.name && wire.diameter === one.diameter) ?? wires.find((wire) => wire !== one)
+  const other = wires.find((wire) => name(wire) === chosen.other) ?? (one && counterpartOf(one, wires))
   const [frame, width] = useWidth(480)
   if (!one || !other) return null
   const extension = beads.at(-1)?.content.stickOut?.si ?? 15

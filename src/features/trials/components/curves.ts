@@ -44,6 +44,13 @@ export function wiresOf(beads: readonly Bead[], machines: readonly Machine[]): W
   return found
 }
 
+/** What a wire is best held against: another alloy of its kind in the same size, else another size of it. */
+export function counterpartOf(wire: Wire, wires: readonly Wire[]): Wire | undefined {
+  const others = wires.filter((other) => other !== wire)
+  const akin = others.filter((other) => burnOffMaterial(other.name) === burnOffMaterial(wire.name))
+  return akin.find((other) => !isSameWire(other.name, wire.name) && isSameDiameter(other.diameter, wire.diameter)) ?? akin.find((other) => isSameWire(other.name, wire.name)) ?? akin[0] ?? others[0]
+}
+
 /** What is known of two wires beside their curves; basis in each sentence. */
 export function wireSentences(one: Wire, other: Wire): string[] {
   const said: string[] = []

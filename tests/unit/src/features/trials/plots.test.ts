@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest'
 import type { PanelControl } from '@shared/schemas/machines.ts'
 import { newControl } from '@shared/machines/patterns.ts'
 import { interval } from '@shared/units/convert.ts'
-import { curveOf, wireSentences, wiresOf } from '@/features/trials/components/curves.ts'
+import { counterpartOf, curveOf, wireSentences, wiresOf } from '@/features/trials/components/curves.ts'
 import { axesOf, labelsOf, pointsOf, scaleOf } from '@/features/trials/components/plot-data.ts'
 import { stepped } from '@/features/trials/form/Stepper.tsx'
 import { beadOf, measuredTravel, pulseBead } from '../../../../fixtures/trials.ts'
@@ -79,6 +79,12 @@ describe('wire-feed curves', () => {
     const said = wireSentences({ name: 'ER5356', diameter: 1.2 }, { name: 'AWS A5.10 ER4043', diameter: 1.6 })
     expect(said).toEqual([expect.stringMatching(/ER5356 wants some 10 to 20 % more feed/), expect.stringMatching(/2 to 3 V apart/), expect.stringMatching(/1.6 mm has 1.78 times the section of 1.2 mm/)])
     expect(wireSentences({ name: 'ER70S-6', diameter: 1 }, { name: 'ER70S-6', diameter: 1 })).toEqual([])
+  })
+  it('are held against another alloy of the same kind and size, or another size of the same', () => {
+    const wires = wiresOf([bead], [])
+    expect(counterpartOf(wires[0] ?? { name: '', diameter: 0 }, wires)).toEqual({ name: 'ER4043', diameter: 1.2 })
+    const steel = [{ name: 'ER70S-6', diameter: 1.2 }, { name: 'ER5356', diameter: 1.2 }, { name: 'ER70S-6', diameter: 0.9 }]
+    expect(counterpartOf(steel[0] ?? { name: '', diameter: 0 }, steel)).toEqual({ name: 'ER70S-6', diameter: 0.9 })
   })
   it('begin with the trial’s own wire', () => expect(wiresOf([bead], [])[0]).toEqual({ name: 'ER5356', diameter: 1.2 }))
 })
