@@ -22,7 +22,7 @@ export async function findHeat({ organizationId, transaction }: Tenant, id: stri
 const called = { heat: 'heat', lot: 'lot' } as const
 
 /** Records that name the heat or lot by its number. */
-export const recordsOfHeat = (tenant: Tenant, { kind, number }: Pick<Heat, 'kind' | 'number'>): Promise<NamedBy[]> => recordsNaming(tenant, kind, number)
+const recordsOfHeat = (tenant: Tenant, { kind, number }: Pick<Heat, 'kind' | 'number'>): Promise<NamedBy[]> => recordsNaming(tenant, kind, number)
 
 /** One number of one grade is one heat; the library row that it is said to be of is there. @throws HttpProblem 422 by field */
 async function check(tenant: Tenant, content: WriteHeat, id: string | null): Promise<void> {

@@ -4,14 +4,14 @@ import { remark, type Asked, type FillerFacts, type MetalFacts, type Remark, typ
 const GUIDES = 'Guides of filler makers and a trade journal'
 const SHOP = 'Shop practice; no published figure'
 /** °C above which fillers of about 3 % magnesium and more are open to stress corrosion. */
-export const HOT_SERVICE_C = 65
+const HOT_SERVICE_C = 65
 const SILICON: ReadonlySet<string> = new Set(['4009', '4010', '4043', '4047', '4145', '4643'])
 /** About 3 % magnesium and more. */
 const RICH: ReadonlySet<string> = new Set(['5356', '5183', '5556'])
 const HOT_FIT: ReadonlySet<string> = new Set(['4043', '5554'])
 
 /** Alloy of a filler: `ER5356`, `S Al 4043A (AlSi5(A))` → 5356, 4043. */
-export const alloyOfFiller = (classification: string): string | null => /(?:^|[^\d])([1-7]\d{3})(?!\d)/.exec(classification)?.[1] ?? null
+const alloyOfFiller = (classification: string): string | null => /(?:^|[^\d])([1-7]\d{3})(?!\d)/.exec(classification)?.[1] ?? null
 
 /** Alloy of a metal: `6061-T6`, `EN AW-5083 O/H111`, `A96061` → 6061, 5083, 6061. */
 function alloyOf({ record }: MetalFacts): string | null {

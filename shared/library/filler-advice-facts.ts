@@ -39,7 +39,7 @@ export interface AdviceLibrary { metal?(id: string): BaseMetalRow | null; filler
 
 const STRENGTH: readonly Basis[] = ['read', 'secondary', 'memory', 'common-practice']
 /** A basis of a library row; an own row rests on what its organization wrote, which nobody here has read. */
-export const basisOf = (text: string | null | undefined): Basis => STRENGTH.find((basis) => basis === text) ?? 'memory'
+const basisOf = (text: string | null | undefined): Basis => STRENGTH.find((basis) => basis === text) ?? 'memory'
 /** The weakest of several. */
 export const weakest = (...bases: Basis[]): Basis => STRENGTH[Math.max(...bases.map((basis) => STRENGTH.indexOf(basis)))] ?? 'memory'
 

@@ -7,8 +7,7 @@ import type { Calculation } from '../calculations/result.ts'
 import { pren } from '../calculations/stainless-equivalents.ts'
 import type { Chemistry, WriteHeat } from '../schemas/heats.ts'
 
-export const FAMILIES = ['steel', 'stainless', 'aluminium', 'nickel', 'other'] as const
-export type Family = (typeof FAMILIES)[number]
+export type Family = 'steel' | 'stainless' | 'aluminium' | 'nickel' | 'other'
 export const FAMILY_WORDS: Readonly<Record<Family, string>> = { steel: 'a ferritic steel', stainless: 'a stainless steel', aluminium: 'aluminium', nickel: 'a nickel alloy', other: 'a metal of another kind' }
 
 /** From this chromium on a steel counts as stainless (10.5 %, the limit of EN 10088-1; recalled). */

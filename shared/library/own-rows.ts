@@ -6,7 +6,7 @@ import { baseMetalRowSchema, fillerRowSchema, gasRowSchema, type BaseMetalRow, t
 import { squeeze } from './search.ts'
 
 /** Basis of every figure of an own row. */
-export const OWN_BASIS = 'own'
+const OWN_BASIS = 'own'
 const basisOf = (value: unknown): string | null => (value === null ? null : OWN_BASIS)
 const keyOf = (...parts: string[]): string => `own-${parts.map(squeeze).filter(Boolean).join('-') || 'row'}`.slice(0, 80)
 

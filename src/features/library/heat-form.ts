@@ -1,5 +1,5 @@
 /** Words and helpers of the form of a heat or lot. */
-import type { Heat, WriteHeat } from '@shared/schemas/heats.ts'
+import type { WriteHeat } from '@shared/schemas/heats.ts'
 import type { Option } from '@/components/fields/text.tsx'
 
 export const HEAT_KINDS: Readonly<Record<WriteHeat['kind'], { title: string; number: string; of: string; library: 'base-metals' | 'filler-metals' }>> = {
@@ -12,5 +12,3 @@ export const chemistryOptions = (kind: WriteHeat['kind']): Option[] => (kind ===
 
 /** What each field is called where two versions are told apart. */
 export const PARTS: Readonly<Record<keyof WriteHeat, string>> = { kind: 'the kind', number: 'the number', libraryId: 'the library row', grade: 'the grade', certificate: 'the certificate', certificateType: 'the type of certificate', receivedOn: 'the day of receipt', thickness: 'thickness', diameter: 'diameter', tensile: 'tensile strength', yield: 'yield', elongation: 'elongation', chemistryOf: 'what the chemistry is of', chemistry: 'the chemistry', notes: 'notes' }
-
-export const heatTitle = ({ content }: Pick<Heat, 'content'>): string => `${content.number}, ${content.grade}`
