@@ -66,7 +66,7 @@ const askAlone: Question = (_, item, sides, context) => ({ judged: [item.rule.ch
 const applies = ({ rule }: Item, context: RuleContext): boolean => !rule.applies || rule.applies(context)
 
 const askNotAVariable: Question = (_, item, __, context) => ({
-  judged: [applies(item, context) ? { verdict: 'within', sentence: `${item.rule.label} is no variable here, because toughness is not required.`, asked: null, range: null, tested: [] } : null],
+  judged: [applies(item, context) ? { verdict: 'within', sentence: `${item.rule.label} ${/ and /.test(item.rule.label) ? 'are no variables' : 'is no variable'} here, because toughness is not required.`, asked: null, range: null, tested: [] } : null],
   used: null,
 })
 

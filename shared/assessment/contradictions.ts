@@ -4,7 +4,8 @@ import type { WeldingVariables } from '../schemas/welding.ts'
 
 export interface Contradiction { field: string; sentence: string; processId: string | null }
 
-const shown = (interval: Interval): string => `${interval.min?.typed ?? ''} to ${interval.max?.typed ?? ''}`
+/** "5 mm to 20 mm"; one end where only one is given, or both are the same. */
+const shown = ({ min, max }: Interval): string => [...new Set([min, max].flatMap((end) => end?.typed ?? []))].join(' to ')
 
 /** @param at path of the block with its dot, '' for the weld; put before the field only where there is something to say */
 function order(found: Contradiction[], at: string, name: string, label: string, interval: Interval | null, processId: string | null, positive: boolean): void {

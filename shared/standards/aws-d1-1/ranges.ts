@@ -44,6 +44,8 @@ export type TestKind = 'complete' | 'partial' | 'fillet'
 export const testKind = ({ joint }: Pick<WeldingVariables, 'joint'>): TestKind => (joint.weld === 'fillet' ? 'fillet' : joint.penetration === 'partial' ? 'partial' : 'complete')
 
 export const isPipe = ({ product }: Pick<WeldingVariables, 'product'>): boolean => product === 'pipe'
+/** Where it stands that a complete-penetration test covers fillets and partial penetration of every size: in a note of the table of the product welded. */
+export const coversAll = (welded: Pick<WeldingVariables, 'product'>): [clause: string, basis: Basis] => (isPipe(welded) ? ['Table 10.9', 'read'] : ['Table 6.2', 'memory'])
 
 /** Coupon thickness: the thinner of two unequal members. */
 export function couponThickness(variables: Pick<WeldingVariables, 'thickness' | 'thicknessB'>, system: UnitSystem): number | null {
@@ -120,7 +122,7 @@ export function thicknessSpan(context: RangeContext, side: CouponSide): Span {
   const T = couponThickness(side.variables, system)
   const any = (reason: string, clause: string, basis: Basis): Span => ({ range: lengthRange(system, null, null), tested: T, limits: null, reason, clause, basis, missing: [] })
   if (tested === 'fillet') return any('A fillet test covers fillets on every thickness.', 'Table 6.4', 'memory')
-  if (tested === 'complete' && asked !== 'complete') return any('A complete-penetration test of any thickness and diameter covers fillets and partial-penetration grooves of every size.', 'Table 10.9', 'read')
+  if (tested === 'complete' && asked !== 'complete') return any('A complete-penetration test of any thickness and diameter covers fillets and partial-penetration grooves of every size.', ...coversAll(side.variables))
   if (tested === 'partial' && asked === 'fillet') return any('A partial-penetration test covers fillets of every size on every thickness.', 'Table 6.3', 'memory')
   const depth = tested === 'partial' ? grooveDepth(side, system) : T
   const word = tested === 'partial' ? 'groove depth' : 'thickness'
@@ -158,7 +160,7 @@ export function diameterSpan(context: RangeContext, side: CouponSide): Span {
   const asked = testKind(context.procedure ?? side.variables)
   const span = (lower: number | null, upper: number | null, tested: number | null, reason: string, clause: string, basis: Basis): Span => ({ range: lengthRange(system, lower, upper), tested, limits: { lower, upper, how: { lower: null, upper: null }, clause, basis }, reason, clause, basis, missing: [] })
   const tested = testKind(side.variables)
-  if (tested === 'complete' && asked !== 'complete') return span(null, null, null, 'A complete-penetration test of any diameter covers fillets and partial-penetration grooves on every diameter.', 'Table 10.9', 'read')
+  if (tested === 'complete' && asked !== 'complete') return span(null, null, null, 'A complete-penetration test of any diameter covers fillets and partial-penetration grooves on every diameter.', ...coversAll(side.variables))
   if (!isPipe(side.variables)) return span(f.bigPipe, null, null, `A plate test covers pipe from ${show(f.bigPipe, unit)} outside diameter, and welds along the axis of any pipe.`, 'Table 6.1', 'read')
   const D = single(side.variables.diameter, 'length', system)
   const T = couponThickness(side.variables, system)

@@ -1,6 +1,6 @@
 /** Values inside the range that are nearest to what a procedure asks, as fixes that turn the finding within. */
-import { containsInterval, isCertain, nearest, outerEnds } from '../../ranges/numeric.ts'
-import type { Fix, NumericRange } from '../../schemas/assessment.ts'
+import { containsInterval, isCertain, outerEnds } from '../../ranges/numeric.ts'
+import type { Bound, Fix, NumericRange } from '../../schemas/assessment.ts'
 import type { Interval, Quantity } from '../../schemas/common.ts'
 import { quantity } from '../../units/convert.ts'
 import type { Dimension } from '../../units/types.ts'
@@ -20,16 +20,32 @@ export interface CureOf {
   wrong: readonly ('min' | 'max')[]
 }
 
+/** Figures that a person would write down: four digits and common fractions of an inch stay, a longer one is no setting. */
+const isPlain = (value: number, unit: string): boolean => Math.abs(value - Number(value.toPrecision(4))) < 1e-9 || (unit === 'in' && Number.isInteger(value * 64))
+
+/** The figure at a bound that may be written: the bound itself, or, where that is not covered or too long, the next one of three digits inside. */
+function settable(bound: Bound, inward: 1 | -1, unit: string): number[] {
+  if (!('value' in bound)) return []
+  const { value } = bound
+  if (bound.kind === 'closed' && isPlain(value, unit)) return [value]
+  const step = value === 0 ? 0.1 : 10 ** (Math.floor(Math.log10(Math.abs(value))) - 2)
+  const whole = inward === 1 ? Math.ceil(value / step - 1e-9) : Math.floor(value / step + 1e-9)
+  const short = Number(((bound.kind === 'open' && Math.abs(whole * step - value) < 1e-9 ? whole + inward : whole) * step).toPrecision(6))
+  return bound.kind === 'closed' ? [short, value] : [short]
+}
+
 /** The nearest figure inside for one end; of those, one that brings all of `asked` inside where there is one. */
 export function betterEnd(range: NumericRange, asked: Asked, end: 'min' | 'max'): number | null {
   const value = asked[end]
   if (value === null) {
     const outer = outerEnds(range)[end === 'max' ? 'upper' : 'lower']
-    return 'value' in outer ? outer.value : null
+    return settable(outer, end === 'max' ? -1 : 1, range.unit)[0] ?? null
   }
-  const ends = range.segments.filter(isCertain).flatMap(({ lower, upper }) => [lower, upper].flatMap((bound) => (bound.kind === 'closed' ? [bound.value] : [])))
-  const curing = ends.filter((candidate) => containsInterval(range, { ...asked, [end]: candidate }) === 'within').sort((a, b) => Math.abs(a - value) - Math.abs(b - value))
-  return curing[0] ?? nearest(range, value)
+  const inside = (candidate: number): boolean => containsInterval(range, { min: candidate, max: candidate }) === 'within'
+  const ends = range.segments.filter(isCertain).flatMap(({ lower, upper }) => [settable(lower, 1, range.unit), settable(upper, -1, range.unit)].flatMap((figures) => figures.find(inside) ?? []))
+  ends.sort((a, b) => Math.abs(a - value) - Math.abs(b - value))
+  if (inside(value)) ends.unshift(value)
+  return ends.find((candidate) => containsInterval(range, { ...asked, [end]: candidate }) === 'within') ?? ends[0] ?? null
 }
 
 const isInterval = (value: unknown): value is Interval => typeof value === 'object' && value !== null && 'all' in value

@@ -8,7 +8,7 @@ import type { Basis, Bound, Fix, NumericRange, SetRange } from '../../schemas/as
 import type { Dimension } from '../../units/types.ts'
 import type { CouponSide, RangeContext, Rule, RuleContext, RuleMeta, RuleVerdict } from '../rule.ts'
 import { figureRule, pathOf } from './rule-kinds.ts'
-import { cannotTell, capital, couponLacks, list, names, notStated, showAsked, showRange, stateFix, verb } from './wording.ts'
+import { cannotTell, capital, couponLacks, list, names, notStated, showAsked, showInside, showRange, stateFix, verb } from './wording.ts'
 
 /** Range of one coupon with what is sure of it and what may be. */
 export interface Band {
@@ -128,7 +128,7 @@ function unsure(spec: BandSpec, context: RuleContext, sides: readonly CouponSide
   const why = bands.find((band) => band.why)?.why ?? (missing.length > 0 ? `Not recorded: ${list(missing)}.` : CONFIRM)
   const fixes: Fix[] = [...missing.filter((text) => text.startsWith('procedure: ')).map((text) => stateFix('missing value', text.slice(11))), { kind: 'plan-coupon', label: 'Weld a coupon that covers it', requirement: spec.plan ? spec.plan(asked, context) : `A coupon that surely qualifies ${spec.label} ${showAsked(asked, sure.unit)}.` }]
   return cannotTell(
-    `${capital(showAsked(asked, sure.unit))} lies beyond the ${showRange(sure)} that ${names(sides)} surely ${verb(sides, 'qualifies', 'qualify')}. ${why}`,
+    `${capital(showAsked(asked, sure.unit))} lies beyond ${showInside(sure)} that ${names(sides)} surely ${verb(sides, 'qualifies', 'qualify')}. ${why}`,
     missing.length > 0 ? missing : [confirmInEdition(first?.clause ?? spec.meta.clause)],
     { ...settled, field, fixes, reasoning: [`Sure: ${showRange(sure)}. Possible: ${showRange(maybe)}. Asked: ${showAsked(asked, sure.unit)}.`] },
   )
@@ -182,7 +182,7 @@ export function nameBandRule(spec: NameBandSpec): Rule {
       const { value, band } = read(context, side)
       if (band === undefined || value === undefined) return null
       if (band === null || value === null) return { range: UNKNOWN_SET, tested: null, reason: `${side.coupon.number} does not record the ${spec.label}.`, missing: lacking(side) }
-      return { range: flags(band), tested: list(value), reason: band.why ? `${spec.because} ${band.why}` : spec.because, basis: band.basis, clause: band.clause, missing: band.missing }
+      return { range: flags(band), tested: list(value), reason: !band.why ? spec.because : band.sure !== 'any' && band.sure.length === 0 ? band.why : `${spec.because} ${band.why}`, basis: band.basis, clause: band.clause, missing: band.missing }
     },
     check(context, sides, joined) {
       if (spec.applies && !spec.applies(context)) return null
@@ -211,7 +211,7 @@ function judgeNames({ spec, context, sides, field, asked, bands: known, joined, 
   const basis = known[0]?.basis
   const clause = known[0]?.clause
   const askedText = list(asked)
-  if (asked.every((name) => covers(known, name))) return { verdict: 'within', sentence: `${capital(spec.label)} ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, basis, clause, reasoning: [spec.because] }
+  if (asked.every((name) => covers(known, name))) return { verdict: 'within', sentence: `${capital(spec.label)}: ${askedText} is covered by ${names(sides)}.`, asked: [...asked], range: joined, basis, clause, reasoning: [spec.because] }
   const settled = { basis, clause, asked: [...asked], range: joined }
   const missed = asked.filter((name) => !covers(known, name))
   const plan: Fix = { kind: 'plan-coupon', label: `Weld a coupon with ${list(missed)}`, requirement: spec.plan ? spec.plan(missed, context) : `A coupon whose ${spec.label} is ${list(missed)}.` }
@@ -229,7 +229,7 @@ function judgeNames({ spec, context, sides, field, asked, bands: known, joined, 
   return {
     ...settled,
     verdict: 'outside',
-    sentence: `${capital(spec.label)} ${list(missed)} is not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${covered.length === 0 ? 'none' : list(covered, 'or')} only.`,
+    sentence: `${capital(spec.label)}: ${list(missed)} is not covered; ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${covered.length === 0 ? 'none' : `${list(covered, 'or')} only`}.`,
     fixes: [...(value === undefined ? [] : [{ kind: 'set' as const, label: `Set the ${spec.label} to ${first ?? ''}`, field, value }]), plan],
     reasoning: [spec.because, `Covered: ${list(covered, 'or')}. Asked: ${askedText}.`],
   }

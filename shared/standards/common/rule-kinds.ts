@@ -115,7 +115,7 @@ function judgeNamesAnew(spec: NamedSpec, words: Words, context: RuleContext, sid
   const verdict = containsNames(joined, asked)
   if (verdict === 'cannot-tell') return namesNotRecorded(spec, context, sides, joined, asked)
   const askedText = asked.length === 1 && asked[0] !== undefined ? display(asked[0]) : list(asked.map(display))
-  if (verdict === 'within') return { verdict, sentence: `${words.label} ${askedText} is covered by ${names(sides)}.`, asked: asked.slice(), range: joined, reasoning: words.because }
+  if (verdict === 'within') return { verdict, sentence: `${words.label}: ${askedText} is covered by ${names(sides)}.`, asked: asked.slice(), range: joined, reasoning: words.because }
   const { kind } = spec
   const field = pathOf(context, spec)
   if (kind && !asked.every((name) => joined.values.some((value) => kind(value) === kind(name)))) {
@@ -134,7 +134,7 @@ function judgeNamesAnew(spec: NamedSpec, words: Words, context: RuleContext, sid
   const missed = asked.filter((name) => !joined.values.includes(name)).map(display)
   return {
     verdict,
-    sentence: `${capital(spec.label)} ${list(missed)} is not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${covered.length === 0 ? 'none' : list(covered, 'or')} only.`,
+    sentence: `${capital(spec.label)}: ${list(missed)} is not covered; ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${covered.length === 0 ? 'none' : `${list(covered, 'or')} only`}.`,
     asked: [...asked],
     range: joined,
     fixes,
@@ -251,6 +251,13 @@ function miss(spec: FigureSpec, context: RuleContext, sides: readonly CouponSide
     parts.push(`${asked.min === null ? 'no lower limit' : show(asked.min, unit)} is below the ${show(low, unit)}${qualifiedBy(spec, context, sides, 'lower')}`)
   }
   if (parts.length > 0) return { sentence: `${capital(parts.join(', and '))}.`, wrong }
+  // A figure that stands on a bound which is itself not covered.
+  if (high !== null && last.upper.kind === 'open' && asked.max === high) wrong.push('max')
+  if (low !== null && first.lower.kind === 'open' && asked.min === low) wrong.push('min')
+  if (wrong.length > 0) {
+    const limits = [...new Set([...(wrong.includes('min') ? [low] : []), ...(wrong.includes('max') ? [high] : [])])].map((limit) => show(limit ?? 0, unit))
+    return { sentence: `${list(limits)} ${limits.length > 1 ? 'are limits that are themselves' : 'is a limit that is itself'} not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${showRange(joined)}.`, wrong }
+  }
   return { sentence: `${capital(showAsked(asked, unit))} reaches into a gap: ${names(sides)} together qualify ${showRange(joined)}.`, wrong: ['min', 'max'].filter((end) => asked[end as 'min' | 'max'] !== null && containsInterval(joined, { min: asked[end as 'min' | 'max'], max: asked[end as 'min' | 'max'] }) !== 'within') as ('min' | 'max')[] }
 }
 

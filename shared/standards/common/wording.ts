@@ -42,20 +42,28 @@ export function showRange(range: NumericRange): string {
 }
 
 /** A range after "lies inside": "the 5 mm to 20 mm", "the range from 5 mm up", "the range up to 20 mm", "the range without limits". */
-export function showInside(range: NumericRange): string {
+export function showInside(whole: NumericRange): string {
+  // What lies inside lies in a part that is known; a part that can't be told is not spoken of.
+  const known = whole.segments.filter(({ lower, upper }) => lower.kind !== 'unknown' && upper.kind !== 'unknown')
+  const range = known.length > 0 && known.length < whole.segments.length ? { ...whole, segments: known } : whole
   const [only] = range.segments
   const shown = showRange(range)
   if (range.segments.length !== 1 || !only) return `the ${shown}`
   if (shown === 'any figure') return 'the range without limits'
-  if (only.upper.kind === 'unlimited' && 'value' in only.lower) return `the range from ${show(only.lower.value, range.unit)} up`
-  return shown.startsWith('up to ') ? `the range ${shown}` : `the ${shown}`
+  if (only.upper.kind === 'unlimited' && only.lower.kind === 'closed') return `the range from ${show(only.lower.value, range.unit)} up`
+  return /^(?:up to|above|below|from) /.test(shown) ? `the range ${shown}` : `the ${shown}`
 }
 
+/** A bound that is itself not covered is said as "above" or "below", never as if it were. */
 function showSegment({ lower, upper }: Segment, unit: string): string {
   if (lower.kind === 'unknown' || upper.kind === 'unknown') return 'a range that is not known'
-  if (lower.kind === 'unlimited') return upper.kind === 'unlimited' ? 'any figure' : `up to ${show(upper.value, unit)}`
-  if (upper.kind === 'unlimited') return lower.value === 0 ? 'any figure' : `${show(lower.value, unit)} and up`
-  if (lower.value === 0 && upper.value !== 0) return `up to ${show(upper.value, unit)}`
+  const top = upper.kind === 'unlimited' ? null : `${upper.kind === 'open' ? 'below' : 'up to'} ${show(upper.value, unit)}`
+  // Nought is no limit of a size; of a temperature it is one.
+  const fromNought = 'value' in lower && lower.kind === 'closed' && lower.value === 0 && unit !== '°C' && unit !== '°F'
+  if (lower.kind === 'unlimited' || (fromNought && (upper.kind === 'unlimited' || upper.value !== 0))) return top ?? 'any figure'
+  if (lower.kind === 'open') return `above ${show(lower.value, unit)}${top === null ? '' : upper.kind === 'open' ? ` and ${top}` : `, ${top}`}`
+  if (upper.kind === 'unlimited') return `${show(lower.value, unit)} and up`
+  if (upper.kind === 'open') return `from ${show(lower.value, unit)} to below ${show(upper.value, unit)}`
   return lower.value === upper.value ? show(lower.value, unit) : `${show(lower.value, unit)} to ${show(upper.value, unit)}`
 }
 

@@ -42,13 +42,13 @@ export interface GaugeOf {
   tested: number[]
 }
 
-/** What a row's gauge draws: the worst finding that compares figures; without one, a range that stands beside the row. */
+/** What a row's gauge draws: the worst finding that compares figures; of equals, one of what a coupon qualifies before one of the procedure with itself. */
 export function gaugeOf(findings: readonly Finding[]): GaugeOf | null {
-  for (const finding of worstFirst(findings)) {
-    const { range, asked, tested } = finding
-    if (range?.type === 'numeric') return { range, asked: asked && !Array.isArray(asked) ? asked : null, tested: tested.filter((one) => typeof one === 'number') }
-  }
-  return null
+  const figures = worstFirst(findings).flatMap((finding) => (finding.range?.type === 'numeric' ? [{ finding, range: finding.range, tested: finding.tested.filter((one) => typeof one === 'number') }] : []))
+  const drawn = figures.find(({ finding, tested }) => tested.length > 0 && finding.verdict === figures[0]?.finding.verdict) ?? figures[0]
+  if (!drawn) return null
+  const { asked } = drawn.finding
+  return { range: drawn.range, asked: asked && !Array.isArray(asked) ? asked : null, tested: drawn.tested }
 }
 
 /** What stands in a gauge's place where names are compared: "PQR-009 welded 23 to 23". */

@@ -27,7 +27,7 @@ export function deposit(context: RangeContext, side: CouponSide): (Limit & { t: 
   const t = single(block?.depositThickness, 'length', system)
   if (!block?.process || T === null || t === null) return null
   const limit: Limit & { t: number; T: number; reason: string } = Object.assign(depositLimit(T, t, block.process, system, isLongitudinal(side)), { t, T, reason: '' })
-  const first = `t = ${show(t, unit)} of a ${show(T, unit)} coupon gives up to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`
+  const first = `t = ${show(t, unit)} on a coupon of ${show(T, unit)} gives up to ${show(limit.upper ?? 0, unit)} (${limit.how.upper ?? ''}) by ${limit.clause}.`
   if (shortCircuitBinds(context.edition, block) && t < FIGURES[system].pass) {
     const upper = tidy(1.1 * t)
     return { ...limit, upper, how: { lower: null, upper: '1.1t' }, clause: 'QW-404.32', basis: 'secondary', t, T, reason: `${first} Short-circuiting transfer holds it to ${show(upper, unit)} (1.1t) by QW-404.32.` }

@@ -6,6 +6,7 @@ import { capital, list, names, verb } from '../../common/wording.ts'
 import type { CouponSide, Rule, RuleContext } from '../../rule.ts'
 import { meta } from '../meta.ts'
 import { groupsOf, identity, members, type Group } from '../steels.ts'
+import { isOtherMetal } from './scope.ts'
 
 /** One member as the table sees it: a group for I and II, the steel itself otherwise. */
 interface Member { name: string; group: Group | null; steel: string | null }
@@ -73,6 +74,8 @@ export const baseMetal: Rule = {
     const read = readings(side.variables, context.system)
     const [a, b] = [read?.[0][0], read?.[1][0]]
     if (!read || !a || !b) return { range: UNKNOWN_SET, tested: null, reason: `${side.coupon.number} names no steel that the table knows.`, clause: 'Table 6.8', missing: lacking(side.variables, context.system).map((field) => `${side.coupon.number}: ${field}`) }
+    const other = members(side.variables, context.system).find(({ metal }) => isOtherMetal(metal))
+    if (other) return { range: setRange([]), tested: nameOf(a, b), reason: `${identity(other.metal) ?? 'The base metal'} is not carbon or low-alloy steel, for which the standard is written, so ${side.coupon.number} covers no base metal here.`, clause: 'Clause 1' }
     const { pairs } = coveredPairs(a, b)
     return { range: setRange(pairs), tested: nameOf(a, b), reason: `${nameOf(a, b)} covers ${list(pairs)}.`, clause: 'Table 6.8' }
   },
@@ -103,6 +106,6 @@ export const baseMetal: Rule = {
       const field = 'baseMetals.a.d11Group'
       return { ...base, verdict: 'cannot-tell', sentence: `${list([...new Set(unlisted.map(({ name }) => name))])} is not in the list of steels kept here; state its group, else only a test of that very steel covers it.`, asked, missing: ['procedure: group of the base metal'], field, fixes: [{ kind: 'state', label: 'State the D1.1 group', field }, { kind: 'plan-coupon', label: 'Weld a coupon of that steel', requirement: `A coupon of ${list(missed)}.` }] }
     }
-    return { ...base, verdict: 'outside', sentence: `${capital(list(missed))} ${missed.length > 1 ? 'are' : 'is'} not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${list(joined.values)} only.`, asked, fixes: [{ kind: 'plan-coupon', label: `Weld a coupon of ${list(missed)}`, requirement: `A coupon of ${list(missed)}.` }] }
+    return { ...base, verdict: 'outside', sentence: `${capital(list(missed))} ${missed.length > 1 ? 'are' : 'is'} not covered: ${names(sides)} ${verb(sides, 'qualifies', 'qualify')} ${joined.values.length === 0 ? 'no steel' : `${list(joined.values)} only`}.`, asked, fixes: [{ kind: 'plan-coupon', label: `Weld a coupon of ${list(missed)}`, requirement: `A coupon of ${list(missed)}.` }] }
   },
 }

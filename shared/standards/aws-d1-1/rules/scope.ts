@@ -11,7 +11,7 @@ import { groupsOf, identity, members, systemOf } from '../steels.ts'
 const YIELD = { SI: 690, US: 100 } as const
 
 /** Groups of ISO/TR 15608 and M-Numbers that are no carbon or low-alloy steel: stainless, cast iron, aluminium, copper, nickel, titanium, zirconium. */
-function isOtherMetal({ iso15608, d12MNumber, pNumber }: BaseMetal): boolean {
+export function isOtherMetal({ iso15608, d12MNumber, pNumber }: BaseMetal): boolean {
   const group = Number(/^\d+/.exec(iso15608 ?? '')?.[0] ?? NaN)
   const p = Number(/^\d+/.exec(pNumber ?? '')?.[0] ?? NaN)
   return d12MNumber !== null || group === 7 || group === 8 || group === 10 || group >= 21 || (p >= 6 && p <= 8) || (p >= 10 && /^10H/i.test(pNumber ?? '')) || p >= 21

@@ -4,10 +4,13 @@ import { plainWords } from '../../common/reading.ts'
 import { meta, TABLE } from '../meta.ts'
 import { unconfirmedName } from '../unconfirmed.ts'
 
+/** A full stop at the end of a note is no part of the method. */
+const method = (text: string): string => plainWords(text).replace(/\.$/, '')
+
 const cleaningToken = (block: ProcessBlock | null): string | null => {
   if (!block) return null
   const { initialCleaning, interpassCleaning } = block.technique
-  return initialCleaning === null || interpassCleaning === null ? null : `${plainWords(initialCleaning)}, then ${plainWords(interpassCleaning)}`
+  return initialCleaning === null || interpassCleaning === null ? null : `${method(initialCleaning)}, then ${method(interpassCleaning)}`
 }
 
 /** Cleaning is kept in words: other words may mean the same method. */

@@ -7,7 +7,7 @@ import { asTested } from '../as-tested.ts'
 
 const NUMBERS = ['131', '141', '15']
 
-const numbered = asTested({ file: 'process', title: 'Welding process', clause: '8.4.1', field: 'process', at: 'block', label: 'ISO 4063 process', statement: 'Processes 131, 141 and 15, each by itself; the number follows from process, filler form and gas. Autogenous TIG (142) belongs to the edition of 2025, which is not held.', read: (_, block) => isoProcessNumber(block), covers: (value) => ({ sure: NUMBERS.includes(value) ? [value] : [], ...(value === '142' ? { maybe: ['142'], why: 'Process 142 belongs to the edition of 2025, which is not held here.' } : {}) }) })
+const numbered = asTested({ file: 'process', title: 'Welding process', clause: '8.4.1', field: 'process', at: 'block', label: 'ISO 4063 process', statement: 'Processes 131, 141 and 15, each by itself; the number follows from process, filler form and gas. Autogenous TIG (142) belongs to the edition of 2025, which is not held.', read: (_, block) => isoProcessNumber(block), covers: (value) => (NUMBERS.includes(value) ? { sure: [value] } : value === '142' ? { sure: [], maybe: ['142'], why: 'Process 142 belongs to the edition of 2025, which is not held here.' } : { sure: [], why: `Process ${value} is none of those for which this standard is written (131, 141 and 15).` }) })
 
 /** Judged without coupons too: no coupon of another process covers it. */
 export const process: Rule = {

@@ -1,8 +1,9 @@
 /** What every standard's rules share: reading records, wording findings, the two kinds of rule. */
 import { describe, expect, test } from 'vitest'
-import { between, closed, numericRange, UNKNOWN, UNLIMITED } from '@shared/ranges/numeric.ts'
+import { between, closed, numericRange, open, UNKNOWN, UNLIMITED } from '@shared/ranges/numeric.ts'
 import { setRange } from '@shared/ranges/set.ts'
 import { figure, figures, gasName, isInert, isStated, single } from '@shared/standards/common/reading.ts'
+import { betterEnd } from '@shared/standards/common/cures.ts'
 import { figureRule, namedRule, weakest } from '@shared/standards/common/rule-kinds.ts'
 import { list, names, notStated, showAsked, showInside, showRange, showSpan } from '@shared/standards/common/wording.ts'
 import type { CouponSide, RuleContext, RuleMeta } from '@shared/standards/rule.ts'
@@ -21,6 +22,21 @@ describe('wording', () => {
     expect(showRange(length(closed(5), UNKNOWN))).toBe('a range that is not known')
     expect(showRange(numericRange('length', 'mm', []))).toBe('nothing')
     expect(showRange(numericRange('length', 'mm', [{ lower: closed(1), upper: closed(2) }, { lower: closed(5), upper: closed(9) }]))).toBe('1 mm to 2 mm and 5 mm to 9 mm')
+  })
+  test('a bound that is itself not covered is never told as covered', () => {
+    const parts = [length(open(16), open(30)), length(open(500), UNLIMITED), length(UNLIMITED, open(30)), length(closed(5), open(9)), length(open(5), closed(9))]
+    expect(parts.map(showRange)).toEqual(['above 16 mm and below 30 mm', 'above 500 mm', 'below 30 mm', 'from 5 mm to below 9 mm', 'above 5 mm, up to 9 mm'])
+    expect(showInside(numericRange('length', 'mm', [{ lower: closed(10), upper: closed(10) }, { lower: UNKNOWN, upper: UNKNOWN }]))).toBe('the 10 mm')
+    expect(parts.slice(0, 2).map(showInside)).toEqual(['the range above 16 mm and below 30 mm', 'the range above 500 mm'])
+  })
+  test('nought is no limit of a size, but it is one of a temperature', () => {
+    expect([showRange(length(closed(0), UNLIMITED)), showRange(between('temperature', '°C', closed(0), UNLIMITED)), showRange(length(closed(0), closed(9)))]).toEqual(['any figure', '0 °C and up', 'up to 9 mm'])
+  })
+  test('a fix writes a figure that can be set: inside an open bound, and short', () => {
+    expect([betterEnd(length(open(16), open(30)), { min: 16, max: 20 }, 'min'), betterEnd(length(open(16), open(30)), { min: 20, max: 30 }, 'max')]).toEqual([16.1, 29.9])
+    expect([betterEnd(length(closed(23.064), closed(26.536)), { min: 23, max: 25 }, 'min'), betterEnd(length(closed(23.064), closed(26.536)), { min: 24, max: 27 }, 'max')]).toEqual([23.1, 26.5])
+    expect(betterEnd(length(closed(112.5), closed(187.5)), { min: 120, max: 200 }, 'max')).toBe(187.5)
+    expect(betterEnd(between('length', 'in', closed(0), closed(1.3125)), { min: 1, max: 2 }, 'max')).toBe(1.3125)
   })
   test('a range after "lies inside"', () => {
     expect([length(closed(5), closed(20)), length(closed(-37), UNLIMITED), length(UNLIMITED, closed(20)), length(UNLIMITED, UNLIMITED), length(closed(0), UNLIMITED), length(closed(5), closed(5))].map(showInside)).toEqual(['the 5 mm to 20 mm', 'the range from -37 mm up', 'the range up to 20 mm', 'the range without limits', 'the range without limits', 'the 5 mm'])
@@ -81,7 +97,7 @@ describe('kinds of rule', () => {
     expect(named([]).check(context, sides, setRange(['A']))?.verdict).toBe('cannot-tell')
     expect(named(['A']).check(context, sides, null)).toBeNull()
     expect(named(['A'], () => false).check(context, sides, setRange(['A']))).toBeNull()
-    expect(named(['A']).check(context, sides, setRange([]))?.sentence).toBe('Trial A is not covered: PQR-001 qualifies none only.')
+    expect(named(['A']).check(context, sides, setRange([]))?.sentence).toBe('Trial: A is not covered; PQR-001 qualifies none.')
     expect(named(['A']).range(context, sides[0]!)).toBeNull()
     expect(() => named(['A']).check(context, sides, length(closed(1), closed(2)))).toThrow(TypeError)
   })

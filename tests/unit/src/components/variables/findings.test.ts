@@ -35,6 +35,10 @@ describe('placing findings', () => {
   })
   it('draws the worst that compares figures, and words where names are compared', () => {
     expect(gaugeOf([one('preheat.minimum'), one('thickness')])).toMatchObject({ asked: { min: 5, max: 25 }, tested: [10] })
+    const own = { ...one('thickness'), tested: [], asked: { min: 0, max: 25 } }
+    expect(gaugeOf([own, one('thickness')])).toMatchObject({ asked: { min: 5, max: 25 }, tested: [10] })
+    expect(gaugeOf([own])).toMatchObject({ asked: { min: 0, max: 25 }, tested: [] })
+    expect(gaugeOf([{ ...one('thickness'), verdict: 'within' }, { ...own, verdict: 'outside' }])).toMatchObject({ tested: [] })
     expect(gaugeOf([one('baseMetals.a.pNumber')])).toBeNull()
     expect(testedInWords([one('baseMetals.a.pNumber')], () => 'PQR-009')).toBe('PQR-009 welded 1 to 1')
   })
