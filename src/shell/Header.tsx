@@ -43,7 +43,7 @@ export function Header() {
         key={to}
         to={to}
         end={to === '/'}
-        className={({ isActive }) => `${wide ? 'py-1' : 'block border-t border-bar-raised px-4 py-3.5 text-lg sm:px-7'} ${isActive ? 'font-medium text-bar-text' : 'text-bar-soft hover:text-bar-text'}`}
+        className={({ isActive }) => `${wide ? 'py-1 whitespace-nowrap' : 'block border-t border-bar-raised px-4 py-3.5 text-lg sm:px-7'} ${isActive ? 'font-medium text-bar-text' : 'text-bar-soft hover:text-bar-text'}`}
       >
         {label}
       </NavLink>

@@ -85,7 +85,7 @@ function Waiting({ calculator, result, texts }: Pick<ResultViewProps, 'calculato
       {open.length > 0 && <p>Still wanted: {names(open)}.</p>}
       {wrong.length > 0 && <p>To be put right: {names([...new Set(wrong.map(({ input }) => input))])}. The field says what is wrong; what you typed stays.</p>}
       {elsewhere.map((message) => (
-        <p key={message} className="font-medium text-oxide">
+        <p key={message} className="font-medium">
           {message}
         </p>
       ))}

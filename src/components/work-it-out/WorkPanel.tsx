@@ -12,6 +12,7 @@ import { problemsByInput } from '@/components/calculator/figures.ts'
 import { InputsForm } from '@/components/calculator/InputsForm.tsx'
 import { PasteBox } from '@/components/calculator/PasteBox.tsx'
 import { ResultView } from '@/components/calculator/ResultView.tsx'
+import { runTexts } from '@/components/calculator/run.ts'
 import { SourceLine, Working } from '@/components/calculator/Working.tsx'
 import { Select } from '@/components/fields/text.tsx'
 import { AnalysisEntry, readAnalysis } from './AnalysisEntry.tsx'
@@ -46,7 +47,7 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
   const filled = fromRecord(calculator.id, { ...record, chemistries: typedAnalysis ? { ...chemistries, a: typedAnalysis, names: { ...chemistries.names, a: 'typed here' } } : chemistries }, blockIndex)
   const own = typed[calculator.id] ?? {}
   const texts = { ...emptyTexts(calculator), ...prices.of(calculator), ...textsOf(filled), ...own }
-  const result = calculator.run(texts)
+  const result = runTexts(calculator, texts)
   const drawing = drawingOf({ calculator, result, system })
   const use = usable(calculator, filled, own, texts, system, blockIndex)
   const change = (changes: Record<string, string>) => {
@@ -134,10 +135,10 @@ export function WorkPanel({ what, calculators, record, blockIndex, system, of = 
 function usable(calculator: Calculator, { ends }: FromRecord, own: InputTexts, texts: InputTexts, system: UnitSystem, blockIndex: number | null): Use | null {
   const untouched = ends && ![...Object.keys(ends.least), ...Object.keys(ends.most)].some((key) => key in own)
   if (untouched) {
-    const both = toWrite(calculator.id, { least: calculator.run({ ...texts, ...ends.least }), most: calculator.run({ ...texts, ...ends.most }) }, system, blockIndex)
+    const both = toWrite(calculator.id, { least: runTexts(calculator, { ...texts, ...ends.least }), most: runTexts(calculator, { ...texts, ...ends.most }) }, system, blockIndex)
     if (both) return both
   }
-  return toWrite(calculator.id, { single: calculator.run(texts) }, system, blockIndex)
+  return toWrite(calculator.id, { single: runTexts(calculator, texts) }, system, blockIndex)
 }
 
 /** A figure of the record as the reader would write it, with its unit. */

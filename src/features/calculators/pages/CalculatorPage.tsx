@@ -8,6 +8,7 @@ import { problemsByInput } from '@/components/calculator/figures.ts'
 import { InputsForm } from '@/components/calculator/InputsForm.tsx'
 import { PasteBox } from '@/components/calculator/PasteBox.tsx'
 import { ResultView } from '@/components/calculator/ResultView.tsx'
+import { runTexts } from '@/components/calculator/run.ts'
 import { SourceLine, Working } from '@/components/calculator/Working.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
 import { Breadcrumb, EmptyState, PageHead } from '@/components/states.tsx'
@@ -45,7 +46,7 @@ function Opened({ calculator }: { calculator: Calculator }) {
   const { system } = useUnits()
   const base = useId()
   const { texts, change, fillExample, address } = useAddressedInputs(calculator)
-  const result = calculator.run(texts)
+  const result = runTexts(calculator, texts)
   const problems = problemsByInput(result)
   const drawing = drawingOf({ calculator, result, system })
   const { title, purpose, group, formula, source, validity } = calculator

@@ -87,6 +87,19 @@ describe('typing', () => {
     expect((manganese as HTMLInputElement).value).toBe('104')
   })
 
+  it('asks for a composition that is empty, rather than count it as nothing', async () => {
+    await open('/calculators/carbon-equivalents?c=')
+    expect(results()[0]).toContain('The composition is not given.')
+    expect(results()[0]).not.toMatch(/\d/)
+  })
+
+  it('lets base metal B be left out', async () => {
+    await open('/calculators/ferrite-dilution?d=30&sa=50&aCr=18&aNi=9&aC=0.05&fCr=20&fNi=10&fC=0.02')
+    expect(results()[0]).toMatch(/FN|below/)
+    expect(screen.getByRole('rowheader', { name: 'Base metal A' })).toBeTruthy()
+    expect(screen.queryByRole('rowheader', { name: 'Base metal B' })).toBeNull()
+  })
+
   it('fills in the example again', async () => {
     const user = userEvent.setup()
     await open('/calculators/heat-input-meter?v=99&i=180&s=250')
