@@ -28,7 +28,7 @@ export async function presentBead(tenant: Tenant, bead: Bead): Promise<BeadRecor
 }
 
 /** The words by which a list tells a bead: wire with diameter, metal. */
-export const wireInWords = ({ wire, wireId, wireDiameter }: Pick<BeadContent, 'wire' | 'wireId' | 'wireDiameter'>): string | null => {
+const wireInWords = ({ wire, wireId, wireDiameter }: Pick<BeadContent, 'wire' | 'wireId' | 'wireDiameter'>): string | null => {
   const name = wire ?? wireId
   return name === null ? null : wireDiameter ? `${name} ${/[a-z]/i.test(wireDiameter.typed) ? wireDiameter.typed : `${wireDiameter.typed} ${wireDiameter.unit}`}` : name
 }

@@ -7,10 +7,10 @@ import { gasMixtureSchema, positionSchema, processSchema } from './welding.ts'
 
 /** Faults by which a trial bead is scored. */
 export const BEAD_FAULTS = ['spatter', 'undercut', 'cold-lap', 'porosity', 'crater-crack', 'arc-too-long', 'arc-too-short', 'bead-too-high', 'bead-too-wide', 'burn-through', 'soot'] as const
-export const beadFaultSchema = z.enum(BEAD_FAULTS)
+const beadFaultSchema = z.enum(BEAD_FAULTS)
 
 /** A panel setting as dialled: the words and the unit on the panel. */
-export const beadSettingSchema = z.object({ control: z.string().trim().min(1).max(60), label: z.string().trim().min(1).max(60), sets: panelQuantitySchema, value: z.number().finite(), unit: z.string().trim().max(16).default('') }).meta({ id: 'BeadSetting' })
+const beadSettingSchema = z.object({ control: z.string().trim().min(1).max(60), label: z.string().trim().min(1).max(60), sets: panelQuantitySchema, value: z.number().finite(), unit: z.string().trim().max(16).default('') }).meta({ id: 'BeadSetting' })
 export type BeadSetting = z.infer<typeof beadSettingSchema>
 
 export const beadContentSchema = z
@@ -50,7 +50,7 @@ export const trialSchema = trialRowSchema.omit({ beads: true }).extend({ goal: z
 export type Trial = z.infer<typeof trialSchema>
 
 /** What differs from the bead that is copied; what isn't named stays. Measured values, faults, score and note are never copied. */
-export const beadChangesSchema = z
+const beadChangesSchema = z
   .object({
     settings: z.array(z.object({ control: z.string().trim().min(1).max(60), value: z.number().finite() })).max(40).default([]),
     stickOut: quantitySchema.nullable().optional(),

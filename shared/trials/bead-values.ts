@@ -25,7 +25,7 @@ export interface Spread { lo: number; hi: number }
 const isInterval = (value: Interval | Quantity): value is Interval => 'all' in value
 
 /** A measured value in the unit of storage: one figure, or what the meter wandered between. Null when not measured. */
-export function spreadOf(value: Interval | Quantity | null): Spread | null {
+function spreadOf(value: Interval | Quantity | null): Spread | null {
   if (value === null) return null
   if (!isInterval(value)) return { lo: value.si, hi: value.si }
   const [lo, hi] = [value.min?.si ?? value.max?.si, value.max?.si ?? value.min?.si]
@@ -72,7 +72,7 @@ export interface BeadValue {
   dimension: Dimension | null
 }
 
-export function settingValue(setting: BeadSetting): BeadValue {
+function settingValue(setting: BeadSetting): BeadValue {
   const { control, label, sets, value, unit } = setting
   const stored = toStorage(value, sets, unit)
   const { dimension } = PANEL_QUANTITY[sets]

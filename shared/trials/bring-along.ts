@@ -34,7 +34,7 @@ const figure = (value: number): string => String(Number(value.toPrecision(4)))
 const CALCULATED = 'calculated: the rectangular pulse'
 
 /** The nearest position of a control, in its own unit; null where the figure lies off its scale. */
-export function onControl(stored: number, setting: { sets: PanelQuantity; unit: string }, control: PanelControl | null): number | null {
+function onControl(stored: number, setting: { sets: PanelQuantity; unit: string }, control: PanelControl | null): number | null {
   const wanted = fromStorage(stored, setting.sets, setting.unit)
   if (wanted === null) return null
   if (!control) return Number(wanted.toPrecision(4))

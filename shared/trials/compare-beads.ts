@@ -8,7 +8,7 @@ import { bringAlongAdvice, type Advice } from './bring-along.ts'
 
 export type Direction = 'up' | 'down' | 'same' | 'unknown'
 export interface SettingChange { control: string; label: string; unit: string; before: number | null; after: number | null; direction: Direction }
-export interface Circumstance { key: string; label: string; before: string; after: string }
+interface Circumstance { key: string; label: string; before: string; after: string }
 export interface FigureChange { key: FigureKey; label: string; unit: string; before: number | null; after: number | null; direction: Direction; /** (after − before) / before; null when either isn't known. */ share: number | null; how: How | null }
 
 export interface BeadComparison {
@@ -24,7 +24,7 @@ export interface BeadComparison {
 }
 
 const NOISE = 1e-9
-export function directionOf(before: number | null, after: number | null): Direction {
+function directionOf(before: number | null, after: number | null): Direction {
   if (before === null || after === null) return 'unknown'
   if (Math.abs(after - before) <= NOISE * Math.max(1, Math.abs(before), Math.abs(after))) return 'same'
   return after > before ? 'up' : 'down'

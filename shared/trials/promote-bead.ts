@@ -28,7 +28,7 @@ export interface Promotion extends RangeProposal {
 }
 
 /** A proposed range as a procedure states it, in the unit in which it was dialled or measured. */
-export function asInterval({ min, max, dimension, unit, sets, from }: ProposedRange): Interval | null {
+function asInterval({ min, max, dimension, unit, sets, from }: ProposedRange): Interval | null {
   if (dimension === null) return null
   const name = from === 'set' && sets ? panelUnit(sets, unit) : SI_UNIT[dimension]
   if (name === null) return null

@@ -11,8 +11,8 @@ import { fromStorage, PANEL_QUANTITY, toStorage } from '../machines/panel-quanti
 import { MEASURE, measuredSpread, type Measure, type Spread } from './bead-values.ts'
 import { faultsInWords } from './faults.ts'
 
-export const GOOD = 4
-export const BAD = 2
+const GOOD = 4
+const BAD = 2
 
 export interface ProposedRange {
   /** `set:<control>`, `measured:<name>` or `stick-out`. */
@@ -40,7 +40,7 @@ const sameText = (one: string | null, other: string | null): boolean => (one ?? 
 const sameSize = (one: BeadContent['thickness'], other: BeadContent['thickness'], same: (a: number, b: number) => boolean): boolean => (one === null || other === null ? one === other : same(one.si, other.si))
 
 /** What sets a bead apart from the chosen one, so that its score says nothing about these settings; null when they are comparable. */
-export function differsIn(chosen: BeadContent, other: BeadContent): string | null {
+function differsIn(chosen: BeadContent, other: BeadContent): string | null {
   if (chosen.machineId !== other.machineId) return 'machine'
   if (!sameText(chosen.modeKey, other.modeKey)) return 'mode'
   if (!sameText(chosen.programKey, other.programKey)) return 'program'

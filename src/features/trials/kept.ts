@@ -67,7 +67,7 @@ export const heldPictures = (beadId: string): readonly File[] => pictures.get(be
 export const dropPictures = (beadId: string): void => void pictures.delete(beadId)
 
 /** A UUID; `crypto.randomUUID` is there on secure pages only, and a shop's server may be reached without TLS. */
-export function newId(): string {
+function newId(): string {
   const bytes = crypto.getRandomValues(new Uint8Array(16))
   bytes[6] = ((bytes[6] ?? 0) & 0x0f) | 0x40
   bytes[8] = ((bytes[8] ?? 0) & 0x3f) | 0x80

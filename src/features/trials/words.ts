@@ -9,7 +9,7 @@ import { MEASURE, type Measure } from '@shared/trials/bead-values.ts'
 import { figure } from '@/lib/figures.ts'
 import { panelFigure } from '@shared/machines/panel-lines.ts'
 
-export const wireInWords = ({ wire, wireId, wireDiameter }: Pick<BeadContent, 'wire' | 'wireId' | 'wireDiameter'>, system: UnitSystem): string => [wire ?? wireId, wireDiameter && formatQuantity(wireDiameter, 'length', system, { asTyped: true }).text].filter(Boolean).join(' ')
+const wireInWords = ({ wire, wireId, wireDiameter }: Pick<BeadContent, 'wire' | 'wireId' | 'wireDiameter'>, system: UnitSystem): string => [wire ?? wireId, wireDiameter && formatQuantity(wireDiameter, 'length', system, { asTyped: true }).text].filter(Boolean).join(' ')
 
 /** One line that says on what a bead was welded. */
 export function setUpInWords(content: BeadContent, machine: Machine | null | undefined, mode: MachineMode | null, system: UnitSystem): string[] {

@@ -6,13 +6,13 @@ import type { Machine } from '@shared/schemas/machines.ts'
 import type { Bead } from '@shared/schemas/trials.ts'
 
 export interface Wire { name: string; /** mm */ diameter: number }
-export interface CurvePoint { current: number; wireFeed: number; from: string }
+interface CurvePoint { current: number; wireFeed: number; from: string }
 export interface WireCurve { wire: Wire; /** Textbook, m/min over A; empty where no constant is known. */ curve: { current: number; wireFeed: number }[]; points: CurvePoint[]; basis: string }
 
 const CURRENTS = Array.from({ length: 23 }, (_, index) => 60 + index * 10)
 
 /** The material for which burn-off constants are known; null for stainless and others. */
-export const burnOffMaterial = (name: string): BurnOffMaterial | null => (isAluminiumWire(name) ? 'aluminium' : wireFamily(name)?.key === 'steel' ? 'carbon-steel' : null)
+const burnOffMaterial = (name: string): BurnOffMaterial | null => (isAluminiumWire(name) ? 'aluminium' : wireFamily(name)?.key === 'steel' ? 'carbon-steel' : null)
 
 /** A wire's curve and the shop's own points of it: from the programs of its machines, and from beads with a measured current. */
 export function curveOf(wire: Wire, machines: readonly Machine[], beads: readonly Bead[], extension: number): WireCurve {

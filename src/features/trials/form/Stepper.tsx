@@ -19,7 +19,7 @@ export interface StepperProps {
 const KEY = 'flex size-12 shrink-0 items-center justify-center rounded border border-edge bg-sheet text-ink disabled:opacity-40'
 
 /** A twentieth of the figure, to a round step, where the register doesn't say. */
-export const stepOf = (control: PanelControl | null, value: number | null): number => control?.step ?? 10 ** Math.floor(Math.log10(Math.max(Math.abs(value ?? 1), 1e-3) / 10))
+const stepOf = (control: PanelControl | null, value: number | null): number => control?.step ?? 10 ** Math.floor(Math.log10(Math.max(Math.abs(value ?? 1), 1e-3) / 10))
 
 /** The next position up or down: on the control's own steps, inside its scale. From nothing it starts in the middle. */
 export function stepped(value: number | null, direction: 1 | -1, control: PanelControl | null): number {
