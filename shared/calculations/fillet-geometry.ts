@@ -53,7 +53,7 @@ function checkMembers(joint: Joint, thickness: number | null, thicknessB: number
   }
   const angle = drawnValue(joint.memberAngle)
   if (angle === null) return
-  if (angle <= 0 || angle >= 180) remarks.refuse('joint.memberAngle', `Members at ${words.angle(angle)} leave no corner for a fillet; the angle must be above 0° and below 180°.`)
+  if (angle < 5 || angle > 175) remarks.refuse('joint.memberAngle', `Members at ${words.angle(angle)} leave no corner for a fillet; give an angle from 5° to 175°.`)
   else if (joint.type === 'lap' && Math.abs(angle - 90) > 1e-9) remarks.refuse('joint.memberAngle', 'The faces of a lap joint stand square to each other; take the angle out, or choose a tee joint.')
 }
 

@@ -15,7 +15,7 @@ export interface Excess { above: number; below: number; taper: number | null }
 /** How the thicker member of an unequal butt joint lies; refuses a taper that can't be. */
 export function excessOf(joint: Joint, more: number, words: Writer, remarks: Remarks): Excess {
   const taper = drawnValue(joint.taperAngle)
-  if (taper !== null && (taper <= 0 || taper >= 90)) remarks.refuse('joint.taperAngle', `A taper of ${words.angle(taper)} can’t be; it must be above 0° and below 90°.`)
+  if (taper !== null && (taper < 1 || taper >= 90)) remarks.refuse('joint.taperAngle', `A taper of ${words.angle(taper)} can’t be drawn; it must be at least 1° and below 90°.`)
   else if (taper === null) remarks.take(`No taper is given for the ${words.length(more)} by which one member is thicker; it is drawn as a step.`)
   const alignment = joint.alignment ?? null
   if (alignment === null) remarks.take('Which surfaces are flush is not given; the root side is.')

@@ -48,7 +48,7 @@ export function spread(count: number, weightsGiven: readonly number[]): number[]
 /** A part of the groove that is filled from `from` to `to`; `to` lies below `from` on the second side. */
 export interface Region { from: number; to: number; reinforcement: number }
 
-const EDGE_STEPS = 24
+const CROWN_STEPS = 24
 const BEAD_SHAPE = 1.8
 
 /** A bead between two heights, from fraction `u0` to `u1` of the width; the outer layer carries the reinforcement. */
@@ -57,9 +57,12 @@ function bead(profile: GrooveProfile, y0: number, y1: number, u0: number, u1: nu
     const [left, right] = [-offsetAt(profile.left, y), offsetAt(profile.right, y)]
     return { x: left + u * (right - left), y }
   }
-  const heights = [...new Set([...Array.from({ length: EDGE_STEPS + 1 }, (_, step) => y0 + ((y1 - y0) * step) / EDGE_STEPS), ...[...profile.left, ...profile.right].map(({ y }) => y).filter((y) => y > Math.min(y0, y1) && y < Math.max(y0, y1))])].sort((one, other) => (y1 > y0 ? one - other : other - one))
-  const outer = Array.from({ length: EDGE_STEPS + 1 }, (_, step) => {
-    const u = u0 + ((u1 - u0) * step) / EDGE_STEPS
+  // Edges are straight between their corners, and so is every line that divides the width between them.
+  const corners = [...new Set([...profile.left, ...profile.right].map(({ y }) => y))].filter((y) => y > Math.min(y0, y1) && y < Math.max(y0, y1))
+  const heights = [y0, ...corners, y1].sort((one, other) => (y1 > y0 ? one - other : other - one))
+  const steps = crown === 0 ? 1 : CROWN_STEPS
+  const outer = Array.from({ length: steps + 1 }, (_, step) => {
+    const u = u0 + ((u1 - u0) * step) / steps
     const point = at(y1, u)
     return { x: point.x, y: point.y + crown * (1 - (2 * u - 1) ** 2) }
   })
@@ -165,8 +168,8 @@ export function layBackingBeads(passes: readonly PassToLay[], rootOpening: numbe
   const half = rootOpening / 2 + height
   return passes.map((pass, index) => {
     const [u0, u1] = [index / passes.length, (index + 1) / passes.length]
-    const curve = Array.from({ length: EDGE_STEPS + 1 }, (_, step) => {
-      const u = u0 + ((u1 - u0) * step) / EDGE_STEPS
+    const curve = Array.from({ length: CROWN_STEPS + 1 }, (_, step) => {
+      const u = u0 + ((u1 - u0) * step) / CROWN_STEPS
       return { x: -half + 2 * half * u, y: -height * (1 - (2 * u - 1) ** 2) }
     })
     return placed(pass, [{ x: curve[0]?.x ?? 0, y: 0 }, ...curve, { x: curve.at(-1)?.x ?? 0, y: 0 }])
