@@ -221,7 +221,7 @@ export function jointGeometry(setting: JointSetting): JointGeometry {
 }
 
 /** Density of the base metal as a stand-in for that of its weld metal, kg/m³; null for a metal that is not from the library. */
-export const densityOf = (variables: Pick<WeldingVariables, 'baseMetals'>): number | null => (variables.baseMetals.a.libraryId ? (baseMetalById(variables.baseMetals.a.libraryId)?.density_kg_m3 ?? null) : null)
+const densityOf = (variables: Pick<WeldingVariables, 'baseMetals'>): number | null => (variables.baseMetals.a.libraryId ? (baseMetalById(variables.baseMetals.a.libraryId)?.density_kg_m3 ?? null) : null)
 
 /** What a weld's variables say of its cross-section. */
 export const settingOf = (variables: WeldingVariables, system: UnitSystem = variables.unitSystem): JointSetting => ({ joint: variables.joint, thickness: variables.thickness, thicknessB: variables.thicknessB, blocks: variables.processes, density: densityOf(variables), diameter: variables.product === 'pipe' ? variables.diameter : null, system })

@@ -24,7 +24,7 @@ export interface JointStore {
 
 const NOTHING: JointLive = { hot: null, preview: new Map(), problems: new Map() }
 
-export function createJointStore(): JointStore {
+function createJointStore(): JointStore {
   let live = NOTHING
   const listeners = new Set<() => void>()
   const put = (next: Partial<JointLive>) => {
