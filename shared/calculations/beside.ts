@@ -67,6 +67,8 @@ interface Target {
   kind: 'quantity' | 'interval'
   /** A single figure becomes this end of the interval and leaves the other; else it becomes both ends. */
   end?: 'min' | 'max'
+  /** Which way it is rounded, where that doesn't follow from its end: a bound worked out for an aim stays inside the aim. */
+  side?: Side
 }
 
 const preheat = (output: string, us?: Target['us']): Target => ({ path: 'preheat.minimum', output, dimension: 'temperature', kind: 'quantity', ...(us ? { us } : {}) })
@@ -85,7 +87,7 @@ const TARGETS: Readonly<Record<string, Target>> = {
   'heat-input-energy': heat('arcEnergy'),
   'heat-input-iso': heat('heatInput'),
   'heat-input-iso-power': heat('heatInput'),
-  'heat-input-for-cooling-time': heat('heatInput'),
+  'heat-input-for-cooling-time': { ...heat('heatInput'), side: 'down' },
   'wire-feed-from-current': { path: 'electrical.wireFeed', ofBlock: true, output: 'wireFeed', dimension: 'wireFeed', kind: 'interval' },
   'shop-settings': { path: 'electrical.wireFeed', ofBlock: true, output: 'wireFeed', dimension: 'wireFeed', kind: 'interval' },
   'current-from-wire-feed': { path: 'electrical.current', ofBlock: true, output: 'current', dimension: 'current', kind: 'interval' },
@@ -96,7 +98,7 @@ const TARGETS: Readonly<Record<string, Target>> = {
 
 /** Which way a figure may be rounded so that it stays on the safe side. */
 type Side = 'up' | 'down' | 'nearest'
-const sideOf = ({ path, end }: Target, at: 'min' | 'max' | null): Side => (path === 'preheat.minimum' || path === 'joint.filletLeg' ? 'up' : path === 'joint.filletThroat' ? 'down' : (at ?? end) === 'max' ? 'up' : (at ?? end) === 'min' ? 'down' : 'nearest')
+const sideOf = ({ path, end, side }: Target, at: 'min' | 'max' | null): Side => side ?? (path === 'preheat.minimum' || path === 'joint.filletLeg' ? 'up' : path === 'joint.filletThroat' ? 'down' : (at ?? end) === 'max' ? 'up' : (at ?? end) === 'min' ? 'down' : 'nearest')
 
 /** A storage figure as a quantity that a person who reads `system` would write. */
 function writtenAs(si: number, dimension: Dimension, system: UnitSystem, side: Side, unit: string = SHOWN_UNIT[system][dimension]): Quantity {

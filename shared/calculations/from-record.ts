@@ -19,6 +19,7 @@ import { coolingTime, JOINT_FACTORS } from './cooling-time.ts'
 import { DENSITIES, DEPOSITION_EFFICIENCIES, depositionRate } from './deposition.ts'
 import { GROOVE_AREA_TYPES } from './groove-area.ts'
 import { geometryOf, massPerMetre } from './joint-geometry.ts'
+import { cetToUse } from './preheat-method-b.ts'
 import { isoProcess, weldFamily } from './record-metals.ts'
 
 export interface Chemistries {
@@ -63,22 +64,22 @@ const one = (quantity: Quantity | null | undefined, dimension: Dimension, from: 
 
 type End = 'least' | 'most' | 'middle'
 const END_WORDS: Readonly<Record<End, string>> = { least: 'lower end', most: 'upper end', middle: 'middle' }
-/** One figure of an interval; none for "all". */
+/** One figure of an interval; none for "all", and none for an end that is left open: the other end would stand for what it is not. */
 function of(interval: Interval | null | undefined, dimension: Dimension, from: string, end: End): Taken | null {
   if (!interval || interval.all) return null
   const { min, max } = interval
   const single = min && max && min.si === max.si
   if (end === 'middle' && min && max && !single) return { text: plain((min.si + max.si) / 2), from: `${from}, middle` }
-  const quantity = end === 'least' ? (min ?? max) : (max ?? min)
+  const quantity = end === 'least' ? min : end === 'most' ? max : (min ?? max)
   return one(quantity, dimension, single || !(min && max) ? from : `${from}, ${END_WORDS[end]}`)
 }
-const si = (interval: Interval | null | undefined, end: 'least' | 'most'): number | null => (!interval || interval.all ? null : ((end === 'least' ? interval.min?.si : interval.max?.si) ?? interval.max?.si ?? interval.min?.si ?? null))
+const si = (interval: Interval | null | undefined, end: 'least' | 'most'): number | null => (!interval || interval.all ? null : ((end === 'least' ? interval.min?.si : interval.max?.si) ?? null))
 const ranges = (interval: Interval | null | undefined): boolean => Boolean(interval?.min && interval.max && interval.min.si !== interval.max.si)
 
-/** The thicker of both members, at its upper end. */
+/** The thicker of both members, at its upper end; none where one has no upper end. */
 function thickest({ variables: { thickness, thicknessB } }: Given): Taken | null {
   const [a, b] = [si(thickness, 'most'), si(thicknessB, 'most')]
-  if (thickness?.all || thicknessB?.all) return null
+  if ([thickness, thicknessB].some((each) => each && (each.all || !each.max))) return null
   return b !== null && (a === null || b > a) ? of(thicknessB, 'length', 'Thickness of B', 'most') : of(thickness, 'length', 'Thickness', 'most')
 }
 
@@ -91,6 +92,17 @@ function equivalent({ chemistries }: Given, name: CarbonEquivalent): Taken | nul
   })
   const [most] = known.sort((x, y) => y.value - x.value)
   return most ? { text: String(Number(most.value.toFixed(3))), from: analysed(chemistries, most.side), analysis: true } : null
+}
+
+/** CET for method B: the parent's, unless the filler's + 0.03 is higher. */
+function decisiveCet(given: Given): { cet: Taken | null; said: string | null } {
+  const parent = equivalent(given, 'cet')
+  const { filler } = given.chemistries ?? {}
+  const weldMetal = filler ? carbonEquivalent('cet', filler).value : null
+  if (parent === null) return { cet: null, said: null }
+  if (weldMetal === null) return { cet: parent, said: 'CET is that of the base metal. Where it is not at least 0.03 above that of the weld metal, take the weld metal’s plus 0.03.' }
+  const { figures } = cetToUse({ parent: Number(parent.text), weldMetal })
+  return figures?.decides === 'weld-metal' ? { cet: { text: String(Number(figures.cet.toFixed(3))), from: `${analysed(given.chemistries, 'filler')}, + 0.03`, analysis: true }, said: null } : { cet: parent, said: null }
 }
 
 const PARTS = { a: 'Metal A', b: 'Metal B', filler: 'Filler' } as const
@@ -176,7 +188,7 @@ function meter({ block }: Given): Reading {
   const inputs = { voltage: of(voltage, 'voltage', 'Volts', 'most'), current: of(current, 'current', 'Amps', 'most'), travelSpeed: of(travelSpeed, 'travelSpeed', 'Travel speed', 'least') }
   const other = { voltage: of(voltage, 'voltage', '', 'least'), current: of(current, 'current', '', 'least'), travelSpeed: of(travelSpeed, 'travelSpeed', '', 'most') }
   const [least, most] = [textsOf(other), textsOf(inputs)]
-  const ends = Object.keys(least).length === 3 && [voltage, current, travelSpeed].some(ranges) ? { least, most } : null
+  const ends = Object.keys(least).length === 3 && Object.keys(most).length === 3 && [voltage, current, travelSpeed].some(ranges) ? { least, most } : null
   return { inputs, ends, said: [ends && 'The ends that give the highest heat input are filled in: highest volts and amps, slowest travel.'] }
 }
 const textsOf = (inputs: Inputs): Record<string, string> => Object.fromEntries(Object.entries(inputs).flatMap(([key, taken]) => (taken ? [[key, taken.text]] : [])))
@@ -218,7 +230,8 @@ function consumption(given: Given): Reading {
   const geometry = geometryOf(given.variables)
   const [size, share] = [given.block?.filler.diameters[0]?.si, efficiency(given)]
   const [wire, rho] = [given.block?.electrical.wireFeed, density(given)]
-  const middle = wire && !wire.all ? ((si(wire, 'least') ?? NaN) + (si(wire, 'most') ?? NaN)) / 2 : NaN
+  const [slow, fast] = [si(wire, 'least'), si(wire, 'most')]
+  const middle = ((slow ?? fast ?? NaN) + (fast ?? slow ?? NaN)) / 2
   const rate = size && share && rho && Number.isFinite(middle) ? depositionRate({ wireDiameter: size, wireFeed: middle, density: Number(rho.text), efficiency: Number(share.text) / 100 }).value : null
   // A metal that is not from the library has no density of its own here: the usual one of its family stands in.
   const mass = geometry.weldMetalKgPerM ?? (geometry.areaMm2 !== null && rho ? massPerMetre(geometry.areaMm2, Number(rho.text) * 1000) : null)
@@ -293,7 +306,10 @@ const CASES: Readonly<Record<string, (given: Given) => Reading>> = {
   pren: (given) => ({ inputs: elementsFrom(given.chemistries, given.chemistries?.a ? 'a' : 'b') }),
   'ferrite-number': ({ chemistries }) => ({ inputs: elementsFrom(chemistries, 'filler') }),
   'ferrite-dilution': ({ chemistries }) => ({ inputs: { ...elementsFrom(chemistries, 'a', 'a'), ...elementsFrom(chemistries, 'b', 'b'), ...elementsFrom(chemistries, 'filler', 'f'), shareOfA: usual('50', 'both edges melt alike') } }),
-  'preheat-method-b': (given) => ({ inputs: { cet: equivalent(given, 'cet'), thickness: thickest(given), hydrogen: hydrogen(given), heatInput: heatWithEfficiency(given, 'least'), ambient: AMBIENT, yieldStrength: yieldOf(given) }, said: ['The lowest heat input and the thickest part ask for most preheat.'] }),
+  'preheat-method-b': (given) => {
+    const { cet, said } = decisiveCet(given)
+    return { inputs: { cet, thickness: thickest(given), hydrogen: hydrogen(given), heatInput: heatWithEfficiency(given, 'least'), ambient: AMBIENT, yieldStrength: yieldOf(given) }, said: ['The lowest heat input and the thickest part ask for most preheat.', said] }
+  },
   'preheat-method-a': (given) => ({ inputs: { ce: equivalent(given, 'ceIiw'), hydrogen: hydrogen(given), joint: jointKind(given), thickness: of(given.variables.thickness, 'length', 'Thickness', 'most'), thicknessB: of(given.variables.thicknessB, 'length', 'Thickness of B', 'most') ?? of(given.variables.thickness, 'length', 'Thickness, as of A', 'most'), heatInput: heatWithEfficiency(given, 'least') } }),
   'preheat-d1-1-table': (given) => ({ inputs: { category: category(given), thickness: thickest(given), system: usualSystem(given) } }),
   'preheat-d1-1-annex': (given) => ({ inputs: { pcm: equivalent(given, 'pcm'), hydrogen: hydrogen(given), thickness: thickest(given) } }),

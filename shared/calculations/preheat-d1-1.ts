@@ -52,7 +52,7 @@ export function groupByPcm({ pcm, hydrogen }: { pcm: number; hydrogen: number })
 }
 
 /**
- * Susceptibility index 12 Pcm + log10 H and its group. The annex's bands of Pcm do not always give the same letter; a note says where they differ.
+ * Susceptibility index 12 Pcm + log10 H and its group. The annex's bands of Pcm do not always give the same letter; a note says where they differ, and the preheat goes by the later one.
  * @param given Pcm in %, hydrogen in ml/100 g (5, 10 or 30 for H1, H2, H3, or the measured value)
  */
 export function susceptibility({ pcm, hydrogen }: { pcm: number; hydrogen: number }): Calculation<{ index: number; group: SusceptibilityGroup | null; groupByPcm: SusceptibilityGroup | null }> {
@@ -66,7 +66,7 @@ export function susceptibility({ pcm, hydrogen }: { pcm: number; hydrogen: numbe
   if (group) sheet.stepText('group', `index rounded to one decimal: ${rounded}`, 'A to 3.0, B to 3.5, C to 4.0, D to 4.5, E to 5.0, F to 5.5, G to 7.0', group)
   else sheet.outside(`An index of ${written(rounded)} is above 7.0, where the groups end.`)
   const byPcm = groupByPcm({ pcm, hydrogen })
-  if (byPcm && group && byPcm !== group) sheet.note(`By the bands of Pcm the group is ${byPcm}, by the index ${group}: take the later letter to be safe, and check the code.`)
+  if (byPcm && group && byPcm !== group) sheet.note(`By the bands of Pcm the group is ${byPcm}, by the index ${group}: the later letter is the safe one; check the code.`)
   return sheet.done('', index, { index, group, groupByPcm: byPcm })
 }
 
@@ -127,13 +127,17 @@ export interface AnnexWayFigures extends Omit<AnnexFigures, 'group' | 'required'
 /** The whole way of the annex by hydrogen control: index, group, table. `value` is the preheat, °C; null where ambient is enough or no group holds. */
 export function preheatByAnnex({ pcm, hydrogen, restraint, thickness }: { pcm: number; hydrogen: number; restraint: Restraint; thickness: number }): Calculation<AnnexWayFigures> {
   const index = susceptibility({ pcm, hydrogen })
-  const group = index.figures?.group ?? null
+  const byIndex = index.figures?.group ?? null
+  // Where the two ways differ the later letter counts: never less preheat than either asks. A measured hydrogen asks no less than the level below it.
+  const level = Math.max(...Object.values(HYDROGEN_LEVELS).filter((each) => each <= hydrogen))
+  const byPcm = groupByPcm({ pcm, hydrogen: level })
+  const group = byIndex && byPcm && byPcm > byIndex ? byPcm : byIndex
   // Without a group the table still tells the band and checks the thickness.
   const table = preheatByAnnexGroup({ restraint, thickness, group: group ?? 'G' })
-  const joined = { ...table, problems: [...index.problems, ...table.problems], notes: [...index.notes, ...table.notes], validity: { inside: index.validity.inside && table.validity.inside, said: [...index.validity.said, ...table.validity.said] } }
+  const joined = { ...table, problems: [...index.problems, ...table.problems], notes: [...index.notes, ...(group !== byIndex ? [`Group ${group ?? ''} of the bands of Pcm counts here: it is later than ${byIndex ?? ''} of the index.`] : []), ...table.notes], validity: { inside: index.validity.inside && table.validity.inside, said: [...index.validity.said, ...table.validity.said] } }
   if (!index.figures || !table.figures) return { ...joined, value: null, figures: null, steps: [] }
   if (!group) return { ...joined, value: null, figures: { ...index.figures, band: table.figures.band, preheat: null, fahrenheit: null, toUse: null, required: null }, steps: index.steps }
-  return { ...joined, steps: [...index.steps, ...table.steps], figures: { ...table.figures, ...index.figures } }
+  return { ...joined, steps: [...index.steps, ...table.steps], figures: { ...table.figures, ...index.figures, group } }
 }
 
 export const hardnessControlSource: Source = { ...annexSource, clause: 'preheat annex, hardness control', note: 'For fillet welds: a critical cooling rate from CE (AWS), then a least energy for a single pass from a chart. The charts are not kept here.' }

@@ -28,7 +28,7 @@ export type CombinedJoint = (typeof COMBINED_JOINTS)[number]
  * @param given mm; for a tee `thickness` is the through plate, which counts twice, and `thicknessB` the standing plate
  */
 export function combinedThickness({ joint, thickness, thicknessB }: { joint: CombinedJoint; thickness: number; thicknessB: number }): Calculation<{ combinedThickness: number }> {
-  const sheet = worksheet({ ...methodASource, clause: 'C.2.4' }, { advisory: true })
+  const sheet = worksheet(joint === 'tee-both-sides' ? { ...methodASource, basis: 'memory', note: 'Half of the sum for two fillets laid at once is recalled.' } : { ...methodASource, note: 'Sums by joint from published help pages; the average over 75 mm is recalled.' }, { advisory: true })
   const tee = joint === 'tee' || joint === 'tee-both-sides'
   sheet.need('thickness', tee ? 'Thickness of the through plate' : 'First thickness', thickness, { above: 0, unit: 'mm' })
   sheet.need('thicknessB', tee ? 'Thickness of the standing plate' : 'Second thickness', thicknessB, { above: 0, unit: 'mm' })

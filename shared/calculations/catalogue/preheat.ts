@@ -38,7 +38,7 @@ export const preheatCalculators: readonly Calculator[] = [
     id: 'combined-thickness', title: 'Combined thickness', group: 'preheat', purpose: 'The sum of the thicknesses by which heat leaves a joint.',
     inputs: { joint, thickness: quantity('t1', 'Thickness (through plate of a tee)', 'length', 20), thicknessB: quantity('t2', 'Second thickness (standing plate)', 'length', 12) },
     outputs: [{ key: 'combinedThickness', label: 'Combined thickness', dimension: 'length' }], calculate: combinedThickness,
-    formula: ['butt and corner: t1 + t2', 'tee: 2 × through plate + standing plate', 'both fillets at once: half of that'], source: { ...methodASource, clause: 'C.2.4' }, validity: 'Each thickness averaged over 75 mm from the weld.',
+    formula: ['butt and corner: t1 + t2', 'tee: 2 × through plate + standing plate', 'both fillets at once: half of that'], source: { ...methodASource, note: 'Sums by joint from published help pages; the average over 75 mm, and the half for both fillets at once, are recalled.' }, validity: 'Each thickness averaged over 75 mm from the weld.',
     example: { from: 'calc-g-ph-04', expect: { combinedThickness: { value: 52, within: 0.01 } } },
   }),
   calculator({
@@ -51,9 +51,9 @@ export const preheatCalculators: readonly Calculator[] = [
   calculator({
     id: 'preheat-d1-1-annex', title: 'Preheat by the D1.1 annex', group: 'preheat', purpose: 'Preheat by hydrogen control: susceptibility index, restraint and thickness.',
     inputs: { pcm: number('pcm', 'Pcm', '%', 0.23, { least: 0, most: 100 }), hydrogen: number('hd', 'Diffusible hydrogen', 'ml/100 g', 10, { above: 0, help: 'H1 5, H2 10, H3 30, or the measured value.' }), restraint: choice('r', 'Restraint', RESTRAINTS.map((value) => ({ value, label: value })), 'medium'), thickness: quantity('t', 'Thickness', 'length', 25.4) },
-    outputs: [{ key: 'preheat', label: 'Minimum preheat', dimension: 'temperature' }, { key: 'toUse', label: 'Preheat, up to the next 5 °C', dimension: 'temperature' }, { key: 'fahrenheit', label: 'In Fahrenheit', unit: '°F', decimals: 0 }, { key: 'index', label: 'Susceptibility index' }, { key: 'group', label: 'Group by the index' }, { key: 'groupByPcm', label: 'Group by bands of Pcm' }, { key: 'band', label: 'Thickness band' }, { key: 'required', label: 'Above ambient' }], calculate: preheatByAnnex,
-    formula: ['index = 12 Pcm + log10(H), rounded to one decimal for the group', 'preheat from the table by restraint, thickness and group'], source: annexSource, validity: 'Index to 7.0. Most cells are recalled: check against the code’s table.',
-    example: { from: 'calc-g-ph-05 for index and group; table: medium, over 3/4 to 1-1/2 in, group C, 165 °F', expect: { index: { value: 3.76, within: 0.005 }, group: 'C', groupByPcm: 'D', fahrenheit: { value: 165, within: 0 }, preheat: { value: 73.889, within: 0.001 }, toUse: { value: 75, within: 0 } } },
+    outputs: [{ key: 'preheat', label: 'Minimum preheat', dimension: 'temperature' }, { key: 'toUse', label: 'Preheat, up to the next 5 °C', dimension: 'temperature' }, { key: 'fahrenheit', label: 'In Fahrenheit', unit: '°F', decimals: 0 }, { key: 'index', label: 'Susceptibility index' }, { key: 'group', label: 'Group that counts' }, { key: 'groupByPcm', label: 'Group by bands of Pcm' }, { key: 'band', label: 'Thickness band' }, { key: 'required', label: 'Above ambient' }], calculate: preheatByAnnex,
+    formula: ['index = 12 Pcm + log10(H), rounded to one decimal for the group', 'where the bands of Pcm give a later letter, that one counts', 'preheat from the table by restraint, thickness and group'], source: annexSource, validity: 'Index to 7.0. Most cells are recalled: check against the code’s table.',
+    example: { from: 'calc-g-ph-05 for the index, which alone gives C; H2 below Pcm 0.28 is D, the later letter; table: medium, over 3/4 to 1-1/2 in, group D, 230 °F', expect: { index: { value: 3.76, within: 0.005 }, group: 'D', groupByPcm: 'D', fahrenheit: { value: 230, within: 0 }, preheat: { value: 110, within: 1e-9 }, toUse: { value: 110, within: 0 } } },
   }),
   calculator({
     id: 'hardness-control-d1-1', title: 'Hardness control of the D1.1 annex', group: 'preheat', purpose: 'States what the charts of the annex are entered with for a fillet weld, and keeps the energy that you read there.',

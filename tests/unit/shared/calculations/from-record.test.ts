@@ -264,3 +264,55 @@ describe('finding a calculator', () => {
   ])('"%s" finds %s first', (asked, id) => expect(findCalculators(asked)[0]?.id).toBe(id))
   it('finds nothing for what is not here', () => expect(findCalculators('zzz')).toEqual([]))
 })
+
+describe('an end that the record leaves open', () => {
+  const open = { min: null, all: false } as const
+  it('a greatest heat input alone is never the lowest one: meters tell it, or it stays open', () => {
+    const stated = { heatInput: { ...open, max: quantity(2.5, 'heatInput') }, heatInputQuantity: 'heat-input' as const }
+    // 0.8 × 24 V × 200 A × 60 / 400 mm/min / 1000
+    const metered = record({}, { electrical: { ...weld().processes[0]?.electrical, ...stated } })
+    expect(textOf('preheat-method-b', metered, 'heatInput')).toBe('0.576')
+    const bare = record({}, { electrical: stated })
+    for (const id of ['preheat-method-b', 'preheat-method-a', 'cooling-time']) expect(fromRecord(id, bare, 0).missing).toContain('heatInput')
+    expect(textOf('preheat-method-b', record({}, { electrical: { ...stated, heatInput: interval(1.1, 2.5, 'heatInput') } }), 'heatInput')).toBe('1.1')
+  })
+  it('a thickness without an upper end has no thickest part', () => {
+    const upward = { min: quantity(10, 'length'), max: null, all: false }
+    for (const id of ['preheat-method-b', 'preheat-method-a', 'preheat-d1-1-table', 'cooling-time']) expect(fromRecord(id, record({ thickness: upward }), 0).missing).toContain('thickness')
+    expect(fromRecord('preheat-method-b', record({ thicknessB: upward }), 0).missing).toContain('thickness')
+    expect(textOf('preheat-method-b', record({ thicknessB: interval(40, undefined, 'length') }), 'thickness')).toMatch(/^40/)
+  })
+  it('a fastest travel speed alone gives no highest heat input', () => {
+    const { taken, missing, ends } = fromRecord('heat-input-meter', record({}, { electrical: { current: interval(200, 260, 'current'), voltage: interval(24, 28, 'voltage'), travelSpeed: { ...open, max: quantity(400, 'travelSpeed') } } }), 0)
+    expect(taken).not.toHaveProperty('travelSpeed')
+    expect(missing).toContain('travelSpeed')
+    expect(ends).toBeNull()
+  })
+})
+
+describe('the CET that decides', () => {
+  const weak = { c: 0.08, mn: 1.2 }
+  it('is that of the weld metal + 0.03 unless the parent’s is that much higher', () => {
+    // CET of `analysis` 0.331; of C 0.22 Mn 1.5 it is 0.37, and 0.40 with 0.03 on top.
+    const strong = fromRecord('preheat-method-b', record({}, {}, { chemistries: { a: analysis, filler: { c: 0.22, mn: 1.5 } } }), 0)
+    expect(strong.taken.cet).toMatchObject({ text: '0.4', from: 'Analysis of filler, + 0.03', analysis: true })
+    expect(textOf('preheat-method-b', record({}, {}, { chemistries: { a: analysis, filler: weak } }), 'cet')).toBe('0.331')
+  })
+  it('is the parent’s with a word of warning where the filler has no analysis', () => {
+    const { taken, said } = fromRecord('preheat-method-b', record({}, {}, { chemistries: { a: analysis } }), 0)
+    expect(taken.cet?.text).toBe('0.331')
+    expect(said.join(' ')).toContain('the weld metal’s plus 0.03')
+    expect(fromRecord('preheat-method-b', record({}, {}, { chemistries: { a: analysis, filler: weak } }), 0).said.join(' ')).not.toContain('plus 0.03')
+  })
+})
+
+describe('rounding to the safe side', () => {
+  it('keeps a heat input for a cooling time inside the aim', () => {
+    const calculator = named('heat-input-for-cooling-time')
+    const result = calculator.run(exampleTexts(calculator, 'SI'))
+    expect(result.value).toBeCloseTo(1.6727, 3)
+    expect(toWrite('heat-input-for-cooling-time', { single: result }, 'SI', 0)?.text).toBe('1.67 kJ/mm as the greatest')
+    const us = toWrite('heat-input-for-cooling-time', { single: result }, 'US', 0)?.value
+    expect(us && 'si' in us ? us.si : NaN).toBeLessThanOrEqual(result.value ?? 0)
+  })
+})

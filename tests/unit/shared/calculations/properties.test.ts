@@ -13,7 +13,7 @@ import { filletFromLegs, legFromThroat } from '../../../../shared/calculations/f
 import { grooveArea } from '../../../../shared/calculations/groove-area.ts'
 import { convertHardness, HARDNESS_TABLE } from '../../../../shared/calculations/hardness-conversion.ts'
 import { hazHardnessDueren, hazHardnessYurioka } from '../../../../shared/calculations/haz-hardness.ts'
-import { groupByPcm, preheatByAnnex, preheatByTable, RESTRAINTS } from '../../../../shared/calculations/preheat-d1-1.ts'
+import { groupByPcm, preheatByAnnex, preheatByTable, RESTRAINTS, susceptibility } from '../../../../shared/calculations/preheat-d1-1.ts'
 import { preheatMethodA } from '../../../../shared/calculations/preheat-method-a.ts'
 import { cetToUse, preheatMethodB } from '../../../../shared/calculations/preheat-method-b.ts'
 import { pulseChange } from '../../../../shared/calculations/pulse-change.ts'
@@ -272,11 +272,14 @@ describe('preheat', () => {
   })
   it('of the D1.1 annex: the two routes to the group lie at most one letter apart, and a note says where they differ', () => {
     fc.assert(fc.property(between(0.14, 0.379), fc.constantFrom(5, 10, 30), (pcm, hydrogen) => {
-      const { figures: found, notes } = preheatByAnnex({ pcm, hydrogen, restraint: 'low', thickness: 10 })
+      const { figures: found, notes } = susceptibility({ pcm, hydrogen })
       const [byIndex, byPcm] = [found?.group ?? '', found?.groupByPcm ?? '']
       expect(Math.abs('ABCDEFG'.indexOf(byIndex) - 'ABCDEFG'.indexOf(byPcm))).toBeLessThanOrEqual(1)
       expect(notes.some((note) => note.startsWith('By the bands of Pcm'))).toBe(byIndex !== byPcm)
+      expect(preheatByAnnex({ pcm, hydrogen, restraint: 'low', thickness: 10 }).figures?.group).toBe(byIndex > byPcm ? byIndex : byPcm)
     }))
+    // Pcm 0.23, H2: index 3.76 gives C, the bands give D; 11 ml asks no less than 10.
+    for (const hydrogen of [10, 11]) expect(preheatByAnnex({ pcm: 0.23, hydrogen, restraint: 'medium', thickness: 25.4 }).figures).toMatchObject({ group: 'D', fahrenheit: 230 })
     expect(groupByPcm({ pcm: 0.27, hydrogen: 10 })).toBe('D')
     expect(groupByPcm({ pcm: 0.17, hydrogen: 5 })).toBe('A')
     expect(groupByPcm({ pcm: 0.37, hydrogen: 30 })).toBe('G')
