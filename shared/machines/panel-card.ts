@@ -6,8 +6,9 @@ import type { PanelCard, PanelLine, PanelNotice, PanelQuantity } from '../schema
 import type { WeldingVariables } from '../schemas/welding.ts'
 import { fromSi, settle } from '../units/convert.ts'
 import { formatInterval } from '../units/format.ts'
+import { SI_UNIT } from '../units/types.ts'
 import { cardFacts, notice, spanOf, type Approved, type CardFacts, type PanelCardInput } from './card-facts.ts'
-import type { Span } from './dial.ts'
+import { narrowed, type Span } from './dial.ts'
 import { fitNotices } from './fit-notices.ts'
 import { heldRange, panelLines } from './panel-lines.ts'
 import { PANEL_QUANTITY } from './panel-quantities.ts'
@@ -16,8 +17,16 @@ export type { PanelCardInput } from './card-facts.ts'
 
 const ORDER: Readonly<Record<PanelNotice['level'], number>> = { refuse: 0, warn: 1, note: 2 }
 
-/** Inward to the given step; an open end stays out. */
-const inward = ({ lo, hi }: Span, step: number): { lo: number | null; hi: number | null } => ({ lo: Number.isFinite(lo) ? settle(Math.ceil(settle(lo / step) - 1e-9) * step) : null, hi: Number.isFinite(hi) ? settle(Math.floor(settle(hi / step) + 1e-9) * step) : null })
+/** Inward to the given step, to a finer one where nothing of a narrow range would be left; an open end stays out. */
+function inward({ lo, hi }: Span, step: number): { lo: number | null; hi: number | null } {
+  for (const fine of [step, step / 5, step / 50]) {
+    const [from, to] = [settle(Math.ceil(settle(lo / fine) - 1e-9) * fine), settle(Math.floor(settle(hi / fine) + 1e-9) * fine)]
+    if (from <= to) return { lo: Number.isFinite(lo) ? from : null, hi: Number.isFinite(hi) ? to : null }
+  }
+  // A single figure leaves no inside: it is told as near as it is measured.
+  const middle = lo === hi ? settle((Math.round((lo / step) * 5) / 5) * step) : Number(((lo + hi) / 2).toFixed(3))
+  return { lo: middle, hi: middle }
+}
 const words = ({ lo, hi }: { lo: number | null; hi: number | null }, unit: string): string => (lo !== null && hi !== null ? (lo === hi ? `${lo} ${unit}` : `${lo} to ${hi} ${unit}`) : lo !== null ? `at least ${lo} ${unit}` : `at most ${hi ?? '?'} ${unit}`)
 
 /** Seconds for which wire is run without arc, and what comes out is measured. */
@@ -49,6 +58,15 @@ function howToMeasure(quantity: PanelQuantity, approved: Approved, system: CardF
   return `${label}, ${approved.text}: measure it ${HOW[quantity] ?? 'while welding'}.`
 }
 
+/** What the machine's own meter may show, where its accuracy is known and takes a part of the range. [calculated] */
+function readingText({ machine }: CardFacts, quantity: PanelQuantity, { span }: Approved): string {
+  if (quantity !== 'current' && quantity !== 'voltage' && quantity !== 'wireFeed') return ''
+  const accuracy = machine.calibration.accuracy[quantity]
+  const held = narrowed(span, accuracy)
+  if (accuracy === null || accuracy === 0 || !held) return ''
+  return `; as the meter is true to ± ${accuracy} %, the reading stays at ${words(inward(held, quantity === 'current' ? 1 : 0.1), SI_UNIT[quantity])}`
+}
+
 const WHEN = { always: 'The display shows it all the time', 'while-welding': 'The display shows it while you weld', 'after-welding': 'The display holds it when the arc has stopped' } as const
 
 /** What is limited: seen on the panel, told where; or not, and then it must be measured. */
@@ -59,7 +77,7 @@ function watched(facts: CardFacts, lines: readonly PanelLine[], notices: PanelNo
     const display = mode.displays.find((one) => one.quantity === quantity)
     const set = lines.some((line) => line.quantity === quantity && line.shown && line.value !== null)
     if (quantity === 'gasFlow' && !mode.controls.some(({ sets }) => sets === 'gasFlow')) continue
-    if (display && !mode.controls.some(({ sets }) => sets === quantity)) notices.push(notice('note', 'watch', `${PANEL_QUANTITY[quantity].label}: keep ${approved.text}. ${WHEN[display.when]}.`))
+    if (display && !mode.controls.some(({ sets }) => sets === quantity)) notices.push(notice('note', 'watch', `${PANEL_QUANTITY[quantity].label}: keep ${approved.text}${readingText(facts, quantity, approved)}. ${WHEN[display.when]}.`))
     if (!display && !set) must.push({ quantity, text: howToMeasure(quantity, approved, system) })
   }
   if (must.length > 0) notices.push(notice('warn', 'not-shown', `The procedure limits ${must.map(({ quantity }) => PANEL_QUANTITY[quantity].label.toLowerCase()).join(', ')}, which this panel does not show: measure it, see below.`, 'common practice'))

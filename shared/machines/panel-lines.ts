@@ -189,11 +189,15 @@ function asWritten(facts: CardFacts, control: PanelControl, worked: PanelLine, n
   const why = `The procedure itself writes ${text} for this control.`
   const onStep = control.step === null || Math.abs(settle((value - control.min) / control.step) - Math.round((value - control.min) / control.step)) < 1e-9
   if (worked.value === null && facts.ranges[control.sets] === undefined && control.sets !== 'knob') {
-    const [min, max] = [setting.min ?? value, setting.max ?? value]
-    return onStep && min <= value && value <= max ? { ...worked, value, text, min: Math.max(min, control.min), max: Math.min(max, control.max), because: why } : worked
+    const bar = dialFigures(control, { lo: setting.min ?? value, hi: setting.max ?? value })
+    return onStep && bar.ok && bar.min <= value && value <= bar.max ? { ...worked, value, text, min: bar.min, max: bar.max, because: why } : worked
   }
   if (worked.value === null || worked.min === null || worked.max === null) return worked
-  if (onStep && value >= worked.min && value <= worked.max) return { ...worked, value, text, because: `${why} ${worked.because}` }
+  if (onStep && value >= worked.min && value <= worked.max) {
+    // A bar of its own that the procedure writes for the control binds too; the narrower counts.
+    const bar = dialFigures(control, { lo: Math.max(worked.min, setting.min ?? worked.min), hi: Math.min(worked.max, setting.max ?? worked.max) })
+    return { ...worked, value, text, ...(bar.ok && bar.min <= value && value <= bar.max ? { min: bar.min, max: bar.max } : {}), because: `${why} ${worked.because}` }
+  }
   notices.push(notice('warn', 'written-outside', `${control.label}: the procedure writes ${text} for this machine, which is not inside what its ranges leave (${withUnit(`${panelFigure(worked.min, control)} to ${panelFigure(worked.max, control)}`, control.unit)}). The card goes by the ranges.`))
   return worked
 }

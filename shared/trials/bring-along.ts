@@ -48,6 +48,7 @@ export function bringAlongAdvice({ before, after, changed, content, mode }: Give
   const moved = (quantity: PanelQuantity): boolean => changed.some(({ control }) => content.settings.some((one) => one.control === control && one.sets === quantity))
   const controlOf = (control: string): PanelControl | null => mode?.controls.find(({ key }) => key === control) ?? null
 
+  let onTimeBrought: number | null = null
   /** @returns what is then dialled, in the unit of storage; null where nothing is moved */
   const bring: Bring = (quantity, stored, why, formula, basis) => {
     if (stored === null || !Number.isFinite(stored) || stored <= 0) return null
@@ -65,6 +66,11 @@ export function bringAlongAdvice({ before, after, changed, content, mode }: Give
       return null
     }
     if (value === setting.value) return null
+    const pulses = quantity === 'pulseFrequency' ? { frequency: stored, onTime: onTimeBrought ?? after.onTime } : quantity === 'pulseOnTime' ? { frequency: after.frequency, onTime: stored } : null
+    if (pulses?.frequency && pulses.onTime && (pulses.frequency * pulses.onTime) / 1000 >= 1) {
+      found.push({ kind: 'watch', control: setting.control, value: null, unit: setting.unit, title: `${setting.label} can’t follow`, why: `${why} That asks ${figure(value)} ${setting.unit}, at which the on-time fills the whole period and no background is left: go back with the setting that was changed.`, formula, basis })
+      return null
+    }
     found.push({ kind: 'bring', control: setting.control, value, unit: setting.unit, title: `${setting.label} to ${control ? panelFigure(value, control) : figure(value)}${setting.unit ? ` ${setting.unit}` : ''}`, why, formula, basis })
     return toStorage(value, setting.sets, setting.unit)
   }
@@ -82,6 +88,7 @@ export function bringAlongAdvice({ before, after, changed, content, mode }: Give
   const followed = !(peakShift && !onTimeMoved && t1 && before.peakCurrent && after.peakCurrent) ? null :
     bring('pulseOnTime', bringAlong.onTimeForPeak({ peakCurrent: before.peakCurrent, onTime: t1, newPeak: after.peakCurrent }), `The peak went ${after.peakCurrent > before.peakCurrent ? 'up' : 'down'}; one drop still leaves with each pulse when peak² × on-time stays the same.`, `on-time₂ = on-time₁ × (peak₁ / peak₂)² = ${figure(t1)} × (${figure(before.peakCurrent)} / ${figure(after.peakCurrent)})²`, 'memory: textbook relation, exponent about 2 for steel; the exponent for aluminium is not known')
 
+  onTimeBrought = followed
   if ((onTimeMoved || peakShift || backgroundShift) && !frequencyMoved && !feedMoved && f1 && t1 && t2) {
     const known = before.peakCurrent !== null && before.backgroundCurrent !== null && after.peakCurrent !== null && after.backgroundCurrent !== null
     // Two pieces of advice are meant together: the frequency is reckoned with the on-time that follows the peak.

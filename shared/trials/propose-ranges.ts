@@ -51,6 +51,8 @@ function differsIn(chosen: BeadContent, other: BeadContent): string | null {
   if (!sameGas(chosen.gas, other.gas)) return 'gas'
   if (!(chosen.metalId !== null && chosen.metalId === other.metalId) && !sameText(chosen.metal ?? chosen.metalId, other.metal ?? other.metalId)) return 'metal'
   if (!sameSize(chosen.thickness, other.thickness, (a, b) => Math.abs(a - b) < 1e-6)) return 'thickness'
+  // A setting that is good in the flat says nothing of one overhead. Left unsaid on either bead, the two are taken as alike.
+  if (chosen.position !== null && other.position !== null && chosen.position !== other.position) return 'position'
   return null
 }
 
@@ -118,7 +120,7 @@ function rangeOf(subject: Subject, chosen: Bead, kin: readonly Bead[], bad: read
 
 export interface RangeProposal {
   ranges: ProposedRange[]
-  /** Beads that speak for or against: same machine, mode, wire, gas, metal, thickness. */
+  /** Beads that speak for or against: same machine, mode, wire, gas, metal, thickness, position. */
   kin: number[]
   /** The others, and in what they differ. */
   leftOut: { number: number; differsIn: string }[]

@@ -48,6 +48,20 @@ describe('a plain feeder', () => {
     expect(made.notices.find(({ code }) => code === 'arc-volts')).toMatchObject({ level: 'note', basis: 'common practice' })
     expect(made.mustMeasure).toEqual([])
   })
+  it('narrows what its display may show by its known accuracy', () => {
+    const made = card(steel(), machine([feederMode()], { calibration: { dueOn: '2027-06-01', accuracy: { current: 2.5 } } }))
+    // 180 / 0.975 = 184.6 and 240 / 1.025 = 234.1, inward.
+    expect(said(made, 'watch')).toContain('the reading stays at 185 to 234 A')
+    expect(said(card(steel()), 'watch')).not.toContain('reading')
+  })
+  it('gives a travel speed or a feed of one figure as one time and one length, never with the ends crossed', () => {
+    // 100 mm at 280 mm/min: 21.43 s; at 590 to 595 mm/min: 10.084 to 10.169 s.
+    expect(said(card(steel({ travelSpeed: interval(280, undefined, 'travelSpeed') })), 'travel')).toContain('100 mm in 21.4 s')
+    expect(said(card(steel({ travelSpeed: interval(590, 595, 'travelSpeed') })), 'travel')).toContain('100 mm in 10.1 s')
+    const hidden = feederMode({ controls: [], displays: [] })
+    const made = card({ ...steel({ wireFeed: interval(5.5, undefined, 'wireFeed') }), unitSystem: 'US' }, machine([hidden]))
+    expect(made.mustMeasure.find((one) => one.quantity === 'wireFeed')?.text).toContain('21.66 in')
+  })
   it('whose panel hides the feed has it measured by cut length', () => {
     const hidden = feederMode({ controls: [{ key: 'feed', label: 'Wire feed', sets: 'wireFeed', unit: '', min: 1, max: 10, step: 1, shown: false }], displays: [] })
     const made = card(steel(), machine([hidden]))
@@ -198,6 +212,14 @@ describe('what the procedure itself writes for the machine', () => {
   const panel = (value: string) => ({ machine: 'm-001', mode: null, caution: null, settings: [{ control: 'wire feed', hint: null, value, unit: 'm/min', scaleMin: null, scaleMax: null, min: null, max: null }] })
   it('is dialled where it lies inside', () => {
     expect(line(card(steel({ panel: panel('7.2') })), 'feed')).toMatchObject({ value: 7.2, min: 6.5, max: 9 })
+  })
+  it('binds with its own bar where that is narrower, rounded inward', () => {
+    const [setting] = panel('7.2').settings
+    const barred = { ...panel('7.2'), settings: [{ ...setting!, min: 7.03, max: 7.68 }] }
+    expect(line(card(steel({ panel: barred })), 'feed')).toMatchObject({ value: 7.2, min: 7.1, max: 7.6 })
+    expect(line(card(steel({ panel: { ...barred, settings: [{ ...setting!, min: 5, max: 12 }] } })), 'feed')).toMatchObject({ min: 6.5, max: 9 })
+    const unlimited = card(steel({ panel: barred, wireFeed: null }))
+    expect(line(unlimited, 'feed')).toMatchObject({ value: 7.2, min: 7.1, max: 7.6 })
   })
   it('gives way, with a warning, where it does not', () => {
     const made = card(steel({ panel: panel('9.6') }))

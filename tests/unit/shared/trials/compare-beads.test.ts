@@ -95,6 +95,14 @@ describe('a recording of the arc', () => {
 })
 
 describe('two beads', () => {
+  it('advise no frequency at which the on-time would fill the whole period', () => {
+    // 250 Hz × 8.1 / 6 = 337.5 Hz, and 3 ms of it is a duty of 1.01.
+    const told = compareBeads(pulseBead({ frequency: 250, onTime: 3 }), pulseBead({ feed: 8.1, frequency: 250, onTime: 3 }), mode)
+    expect(brings(told)).toEqual([])
+    expect(told.advice.find(({ title }) => title === 'Frequency can’t follow')?.why).toMatch(/no background is left/)
+    expect(brings(compareBeads(pulseBead({ frequency: 250, onTime: 3 }), pulseBead({ feed: 7.8, frequency: 250, onTime: 3 }), mode))).toEqual(['Frequency to 325 Hz'])
+  })
+
   it('with themselves: nothing changed, nothing to bring along', () => {
     fc.assert(
       fc.property(settingsArbitrary, fc.option(fc.integer({ min: 100, max: 900 })), (settings, speed) => {

@@ -39,6 +39,13 @@ describe('ranges from the beads around one', () => {
     expect(told.ranges.every(({ min, max }) => min === max)).toBe(true)
   })
 
+  it('count no bead of another position; one whose position is not said counts', () => {
+    const flat = scored(1, 5, {}, { position: '1G' })
+    const told = proposeRanges([flat, scored(2, 5, { feed: 5 }, { position: '4G' }), scored(3, 5, { feed: 6.4 }, { position: null })], flat.id)
+    expect(told.leftOut).toEqual([{ number: 2, differsIn: 'position' }])
+    expect(told.ranges.find(({ key }) => key === 'set:feed')).toMatchObject({ min: 6, max: 6.4 })
+  })
+
   it('refuse a bead that was bad itself, and one without any figure', () => {
     expect(proposeRanges([scored(1, 2, {})], beadOf(1, pulseBead()).id).problems.join(' ')).toMatch(/Bead 1 scored 2: choose a bead that you would weld again/)
     expect(proposeRanges([beadOf(1, beadContentSchema.parse({}))], beadOf(1, pulseBead()).id).problems.join(' ')).toMatch(/no setting and no measured value/)
