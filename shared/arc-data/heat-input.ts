@@ -22,9 +22,11 @@ export interface RecordedWeld {
 const shown = (value: number): string => String(Number(value.toPrecision(5)))
 
 /** null where neither a length nor a travel speed is known. Of a range of speeds the slowest counts: it gives the most heat. */
-export function arcHeatInput({ energy, averageInstantaneousPower: power }: Pick<ArcFigures, 'energy' | 'averageInstantaneousPower'>, { weldLength, length, travelSpeed, of }: RecordedWeld): ArcHeatInput | null {
+export function arcHeatInput({ energy, averageInstantaneousPower: power, gaps }: Pick<ArcFigures, 'energy' | 'averageInstantaneousPower'> & Partial<Pick<ArcFigures, 'gaps'>>, { weldLength, length, travelSpeed, of }: RecordedWeld): ArcHeatInput | null {
   const over = weldLength ?? length
-  if (over !== null && over > 0) return { heatInput: heatInputInstantaneous({ energy, length: over }), how: `energy ${shown(energy)} J over ${shown(over)} mm${weldLength === null ? `, the length of ${of}` : ''}` }
+  // Energy that was not recorded is missing from the sum, while its length is not: the figure can only be too low.
+  const lost = gaps && gaps.duration > 0 ? `; too low where the arc burned in the ${shown(gaps.duration)} s that were not recorded` : ''
+  if (over !== null && over > 0) return { heatInput: heatInputInstantaneous({ energy, length: over }), how: `energy ${shown(energy)} J over ${shown(over)} mm${weldLength === null ? `, the length of ${of}` : ''}${lost}` }
   const ends = [travelSpeed?.min?.si, travelSpeed?.max?.si].filter((end) => end !== undefined && end > 0) as number[]
   if (ends.length === 0) return null
   const slowest = Math.min(...ends)
