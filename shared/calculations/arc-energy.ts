@@ -24,7 +24,7 @@ export interface ArcEnergyFigures {
 
 /** Warns of a likely slip in units. */
 const plausible = (sheet: Worksheet, energy: number): void => {
-  if (energy < 0.1 || energy > 10) sheet.outside(`An arc energy of ${written(energy)} kJ/mm is outside 0.1 to 10 kJ/mm, where arc welds lie; check the units of each figure.`)
+  if (energy < 0.1 || energy > 10) sheet.outside(`An arc energy of ${written(energy)} kJ/mm is outside 0.1 to 10 kJ/mm, our own bounds for a likely slip; check the units of each figure.`)
 }
 
 function finish(sheet: Worksheet, energy: number, process: string | null): Calculation<ArcEnergyFigures> {

@@ -214,8 +214,9 @@ function burnOff(given: Given, key: 'current' | 'wireFeed', interval: Interval |
 
 /** Share of the filler that becomes weld metal, by process and gas, as handbooks average it. */
 function efficiency({ block }: Given): Taken | null {
-  const co2 = block?.shieldingGas?.components.find(({ gas }) => gas === 'CO2')?.percent ?? 0
-  const id = block?.process === 'SAW' ? 'saw' : block?.process === 'FCAW' ? (block.shieldingGas ? 'fcaw-g' : null) : block?.process === 'GMAW' ? (block.filler.productForm === 'metal-cored' ? 'metal-cored' : co2 >= 100 ? 'gmaw-co2' : co2 > 5 ? 'gmaw-75-25' : 'gmaw-ar-o2') : null
+  const parts = block?.shieldingGas?.components ?? []
+  const co2 = parts.find(({ gas }) => gas === 'CO2')?.percent ?? 0
+  const id = block?.process === 'SAW' ? 'saw' : block?.process === 'FCAW' ? (block.shieldingGas ? 'fcaw-g' : null) : block?.process === 'GMAW' ? (block.filler.productForm === 'metal-cored' ? 'metal-cored' : parts.length === 0 ? null : co2 >= 100 ? 'gmaw-co2' : co2 > 5 ? 'gmaw-75-25' : 'gmaw-ar-o2') : null
   const row = DEPOSITION_EFFICIENCIES.find((each) => each.id === id)
   return row ? usual(String(row.efficiency * 100), `${row.label}: handbook average`) : null
 }

@@ -4,7 +4,7 @@
  */
 import { worksheet, written, type Calculation, type Source } from './result.ts'
 
-export const isoConversionSource: Source = { standard: 'ISO 18265', edition: '2013', clause: 'table A.1', basis: 'secondary', note: 'A published table headed DIN 50150, which the standard took over. Three figures of strength that are obvious slips there are set right from memory (HV 80, 120, 360).' }
+export const isoConversionSource: Source = { standard: 'ISO 18265', edition: '', clause: 'table A.1', basis: 'secondary', note: 'A published table headed DIN 50150, which the standard took over; its edition is not told there. Three figures of strength that are obvious slips there are set right from memory (HV 80, 120, 360).' }
 export const astmConversionSource: Source = { standard: 'ASTM E140', edition: '', clause: 'table 1', basis: 'secondary', note: 'Selected points for non-austenitic steel; the Brinell figures (10 mm, 3000 kgf) are recalled.' }
 
 interface Row { hv: number; hb: number | null; hrc: number | null; rm: number | null }

@@ -93,7 +93,9 @@ export function beadFigures(content: BeadContent, inputs: PulseInputs = pulseInp
     if (amps !== null && volts !== null) {
       figures.power = told(amps * volts, 'meters')
       figures.energyPerLength = travelSpeed !== null ? told((amps * volts * 60) / travelSpeed / 1000, 'meters') : null
-      if (pulsed) notes.push('Power is mean volts × mean amperes. In a pulsed arc that is off, often by a fifth: attach a recording of the arc for the true figure.')
+      const asSet = [...(current === null ? ['amperes'] : []), ...(voltage === null ? ['volts'] : [])]
+      if (asSet.length > 0) notes.push(`Power counts the ${asSet.join(' and ')} as set, not as measured: arc volts are lower than those at the terminals, and amperes move with the stick-out.`)
+      if (pulsed) notes.push('Power is mean volts × mean amperes. In a pulsed arc that is off, by a fifth for a usual pulse and to either side: attach a recording of the arc for the true figure.')
     } else if (pulsed) notes.push('Without the voltages of peak and background, or mean volts and amperes off a meter, no power or energy is told.')
   }
   if (figures.power && travelSpeed === null) notes.push('Without travel speed, or length and arc time, no energy per length is told.')

@@ -316,3 +316,8 @@ describe('rounding to the safe side', () => {
     expect(us && 'si' in us ? us.si : NaN).toBeLessThanOrEqual(result.value ?? 0)
   })
 })
+
+it('takes no deposition efficiency of a gas-shielded wire while the gas is not stated', () => {
+  expect(textOf('deposition-rate', record(), 'efficiency')).toBe('96')
+  expect(fromRecord('deposition-rate', record({}, { shieldingGas: null }), 0).missing).toContain('efficiency')
+})

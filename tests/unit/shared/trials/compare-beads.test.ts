@@ -53,6 +53,11 @@ describe('the figures of a bead', () => {
     const meters = beadFigures({ ...whole, measured: { ...measuredTravel(400), current: interval(134, undefined, 'current'), voltage: interval(22.88, undefined, 'voltage') } })
     expect(meters.figures.power).toEqual({ value: expect.closeTo(3065.9, 0) as number, how: 'meters' })
     expect(meters.notes.join(' ')).toMatch(/In a pulsed arc that is off/)
+    expect(meters.notes.join(' ')).not.toMatch(/as set/)
+    const set = [{ control: 'v', label: 'Volts', sets: 'voltage' as const, value: 24, unit: 'V' }]
+    const dialled = beadFigures(beadContentSchema.parse({ settings: set, measured: { ...measuredTravel(400), current: interval(150, undefined, 'current') } }))
+    expect(dialled.figures.power?.value).toBe(3600)
+    expect(dialled.notes.join(' ')).toMatch(/Power counts the volts as set, not as measured/)
   })
 
   it('refuse a pulse longer than its period, and a travel speed of nothing, in a sentence each', () => {
