@@ -131,7 +131,14 @@ export function guessLayout(head: Uint8Array, choice: ArcChoice = {}, whole = fa
   const { time, current, voltage } = byValue
   const aboveWidth = splitLine(lines[table.first - 1] ?? '', table.delimiter).length
   if ((current === null || voltage === null) && table.delimiter === ',' && aboveWidth > 1 && aboveWidth * 2 === table.width) throw new ArcDataError('The comma seems to stand both between the columns and before the decimals, so they cannot be told apart. Export the recording with a semicolon or tab between the columns.', { row: table.first + 1 })
-  if (current === null || voltage === null) throw new ArcDataError(`The columns of ${current === null && voltage === null ? 'current and voltage' : current === null ? 'the current' : 'the voltage'} could not be told from the ${table.width} columns. Choose them.`, { row: table.first + 1, asks: 'columns' })
+  if (current === null || voltage === null) {
+    const missing = current === null && voltage === null ? 'current and voltage' : current === null ? 'the current' : 'the voltage'
+    const found = Object.fromEntries(Object.entries(byValue).filter((entry): entry is [Meaning, number] => entry[1] !== null))
+    // Beside a time by name, a second column alone can't be both.
+    if (table.width < 3 && byName.time.column !== null && chosen.time === undefined) throw new ArcDataError(`The file has no column for ${missing} beside the time${current === null && voltage === null ? '' : current === null ? ' and the voltage' : ' and the current'}. A recording needs both volts and amperes: export it again with both.`, { row: table.first + 1 })
+    const both = current === null && voltage === null
+    throw new ArcDataError(`The ${both ? 'columns' : 'column'} of ${missing} could not be told from the ${table.width} columns. Choose ${both ? 'them' : 'it'}.`, { row: table.first + 1, asks: 'columns', found })
+  }
   if (current === voltage || time === current || time === voltage) throw new ArcDataError('Time, current and voltage must each have a column of its own. Choose them.', { asks: 'columns' })
   const timeUnit = time === null ? 'none' : (choice.timeUnit ?? readings[time]?.timeUnit ?? 's')
   if (time !== null && choice.timeUnit === undefined && !readings[time]?.timeUnit) doubts.push('The time column states no unit; it is read as seconds.')

@@ -84,6 +84,7 @@ export function heatFigures({ kind, chemistryOf, chemistry }: Pick<WriteHeat, 'k
   const bounds = chemistry.filter(({ atMost }) => atMost).map(({ element }) => element)
   if (bounds.length > 0 && family !== null) notes.push(`${bounds.join(', ')} ${bounds.length === 1 ? 'is given as a bound and counts' : 'are given as bounds and count'} at that bound.`)
   if (family === null) return { family, figures: [], notes }
+  if (chemistry.reduce((sum, { percent }) => sum + percent, 0) > 100.0001) return { family: null, figures: [], notes: ['The elements add up to more than 100 %, so one of them is wrong; nothing is worked out before it is put right.'] }
   if (family === 'aluminium' || family === 'nickel' || family === 'other') return { family, figures: [], notes: [...notes, `By its chemistry this is ${FAMILY_WORDS[family]}: carbon equivalents, A-Number, ferrite number and PREN are not stated for it.`] }
   const figures = family === 'steel' ? equivalents(shares) : stainless(shares, chemistry)
   if (kind === 'lot' && chemistryOf === 'deposit') figures.push(aNumber(shares))

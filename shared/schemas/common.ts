@@ -16,7 +16,7 @@ export const intervalSchema = z
   .meta({ id: 'Interval' })
 export type Interval = z.infer<typeof intervalSchema>
 
-export const idSchema = z.uuid()
+export const idSchema = z.uuid('This is not the id of a record; the address may be cut short or mistyped.')
 export const textOrNull = (max = 400) => z.string().trim().max(max).nullable().default(null)
 export const quantityOrNull = quantitySchema.nullable().default(null)
 export const intervalOrNull = intervalSchema.nullable().default(null)

@@ -12,6 +12,14 @@ interface Preview {
   refusal: string | null
 }
 
+/** Three different columns to choose from: what is known stays, what is open takes the first that is free. */
+export function columnsToStartFrom({ time = -1, current, voltage }: ArcChoice): { time: number; current: number; voltage: number } {
+  const free = (...taken: readonly (number | undefined)[]) => [0, 1, 2].find((column) => !taken.includes(column)) ?? 0
+  const first = current ?? free(time, voltage)
+  const second = voltage === undefined || voltage === first ? free(first, time) : voltage
+  return { time: time === first || time === second ? -1 : time, current: first, voltage: second }
+}
+
 /** What the first lines of a file say, read in the browser before a byte is sent. */
 function previewOf(head: Uint8Array, whole: boolean, choice: ArcChoice): Preview {
   try {
@@ -21,8 +29,7 @@ function previewOf(head: Uint8Array, whole: boolean, choice: ArcChoice): Preview
     // Columns can still be chosen where only their meaning is open.
     if (error.asks !== 'columns') return { guess: null, refusal: error.message }
     try {
-      const { time = -1, current = 0, voltage = 1 } = choice
-      const forced = guessLayout(head, { ...choice, time: time === current || time === voltage ? -1 : time, current, voltage: voltage === current ? (current === 0 ? 1 : 0) : voltage }, whole)
+      const forced = guessLayout(head, { ...choice, ...columnsToStartFrom({ ...error.found, ...choice }) }, whole)
       return { guess: { ...forced, sure: false, doubts: [error.message] }, refusal: null }
     } catch {
       return { guess: null, refusal: error.message }

@@ -2,19 +2,34 @@ import { useQueryClient } from '@tanstack/react-query'
 import { Upload } from 'lucide-react'
 import { useRef, useState, type DragEvent } from 'react'
 import { useNavigate, useSearchParams } from 'react-router-dom'
-import { Button } from '@/components/Button.tsx'
+import { Button, ButtonLink } from '@/components/Button.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
-import { Breadcrumb, ErrorState, PageHead, Progress } from '@/components/states.tsx'
+import { Breadcrumb, EmptyState, ErrorState, PageHead, Progress } from '@/components/states.tsx'
 import { sayProblem } from '@/components/toast.tsx'
+import { useMay } from '@/hooks/session.ts'
 import { call } from '@/lib/api.ts'
 import { fileSize } from '@/lib/figures.ts'
 import { recordingQuery } from '../api.ts'
 import { ColumnChoice } from '../components/ColumnChoice.tsx'
 import { useSending } from '../sending.ts'
 
-/** Choose a file, look at its columns, send it. `couponId`, `runRowId` or `beadId` in the address attach it at once. */
+/** Where a recording is uploaded, or why it can't be with these roles: said before a file is chosen. */
 export function NewArcRecordingPage() {
+  const records = useMay('arc.record')
+  if (records) return <NewArcRecording />
+  return (
+    <>
+      <PageHead title="Not for your roles" />
+      <EmptyState title="You read the recordings; others upload them" step={<ButtonLink to="/arc-data">Back to the list</ButtonLink>}>
+        <p>Hand the file to the welder, inspector or engineer of the weld.</p>
+      </EmptyState>
+    </>
+  )
+}
+
+/** Choose a file, look at its columns, send it. `couponId`, `runRowId` or `beadId` in the address attach it at once. */
+function NewArcRecording() {
   const navigate = useNavigate()
   const client = useQueryClient()
   const [search] = useSearchParams()

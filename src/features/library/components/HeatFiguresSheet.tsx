@@ -24,7 +24,7 @@ export function HeatFiguresSheet({ content }: { content: Pick<WriteHeat, 'kind' 
   return (
     <Sheet id="figures" title="What follows from it" aside={family && FAMILY_WORDS[family]}>
       <div aria-live="polite">
-        {family === null && <p className="px-4 py-3 text-soft">Carbon equivalents, A-Number, ferrite number and PREN stand here as soon as the chemistry is entered.</p>}
+        {family === null && notes.length === 0 && <p className="px-4 py-3 text-soft">Carbon equivalents, A-Number, ferrite number and PREN stand here as soon as the chemistry is entered.</p>}
         {figures.map((figure) => (
           <Figure key={figure.id} figure={figure} address={address} />
         ))}

@@ -8,7 +8,8 @@ import { Button, ButtonLink } from '@/components/Button.tsx'
 import { FormError } from '@/components/fields/Field.tsx'
 import { Checkbox, TextField } from '@/components/fields/text.tsx'
 import { Sheet } from '@/components/Sheet.tsx'
-import { Breadcrumb, PageHead } from '@/components/states.tsx'
+import { Breadcrumb, EmptyState, PageHead } from '@/components/states.tsx'
+import { useMay } from '@/hooks/session.ts'
 import { call } from '@/lib/api.ts'
 import { showProblem, useZodForm } from '@/lib/forms.ts'
 
@@ -22,8 +23,22 @@ function kindOf(keys: readonly PatternKey[]): WriteMachine['kind'] {
   return wire ? (stick ? 'wire-and-stick' : 'wire') : stick ? 'stick' : 'wire'
 }
 
-/** A machine begins with a name and the patterns that its panel is like; the page after this sets them right. */
+/** Where a machine is registered, or why it can't be with these roles: said before anything is typed. */
 export function NewMachinePage() {
+  const manages = useMay('machines.manage')
+  if (manages) return <NewMachine />
+  return (
+    <>
+      <PageHead title="Not for your roles" />
+      <EmptyState title="You read the machines; others register them" step={<ButtonLink to="/machines">Back to the list</ButtonLink>}>
+        <p>Ask an engineer to register the machine, with a photo of its panel.</p>
+      </EmptyState>
+    </>
+  )
+}
+
+/** A machine begins with a name and the patterns that its panel is like; the page after this sets them right. */
+function NewMachine() {
   const navigate = useNavigate()
   const client = useQueryClient()
   const form = useZodForm(schema, { name: '', serial: '', location: '' })

@@ -59,6 +59,7 @@ export function BeadForm({ content, onChange, before, system, pictures, onPictur
   const controls = mode?.controls ?? []
   const rows = controls.length > 0 ? controls.map((control) => ({ control: control.key, label: control.label, unit: control.unit, sets: control.sets, known: control })) : content.settings.map(({ control, label, unit, sets }) => ({ control, label, unit, sets, known: null }))
   const setSetting = (row: (typeof rows)[number], value: number | null) => {
+    noteUnread(`settings.${row.control}`, null)
     const rest = content.settings.filter(({ control }) => control !== row.control)
     const order = rows.map(({ control }) => control)
     const next = value === null ? rest : [...rest, { control: row.control, label: row.label, sets: row.sets, unit: row.unit, value }]
@@ -95,7 +96,7 @@ export function BeadForm({ content, onChange, before, system, pictures, onPictur
         {rows.length === 0 && <p className="text-soft">{content.machineId === null ? 'Choose the machine and its mode in the set-up; its knobs appear here.' : content.modeKey === null ? 'Choose the mode in the set-up; its knobs appear here.' : machine === undefined ? 'Reading the panel.' : 'The register lists no controls for this mode. An engineer adds them on the machine’s page.'}</p>}
         <div className="-ml-4 space-y-1">
           {rows.map((row) => (
-            <Stepper key={row.control} label={row.label} unit={row.unit} control={row.known} value={settingOf(content, row.control)?.value ?? null} before={before ? (settingOf(before.content, row.control)?.value ?? null) : null} onChange={(value) => setSetting(row, value)} />
+            <Stepper key={row.control} label={row.label} unit={row.unit} control={row.known} value={settingOf(content, row.control)?.value ?? null} before={before ? (settingOf(before.content, row.control)?.value ?? null) : null} onChange={(value) => setSetting(row, value)} onUnread={(message) => noteUnread(`settings.${row.control}`, message)} />
           ))}
         </div>
         {changes > 1 && <p className="mt-2 text-sm text-straw-deep">With more than one thing changed, the bead can’t tell which of them did it, unless the others were only brought along.</p>}

@@ -10,6 +10,8 @@ export interface StepperProps {
   /** Null until it is set: a knob that nobody looked at is not recorded. */
   value: number | null
   onChange: (value: number | null) => void
+  /** What was typed can't be taken as a figure; the bead isn't saved over it. The next figure takes it back. */
+  onUnread: (message: string) => void
   /** The control on the panel; without it steps are of the figure's own size. */
   control: PanelControl | null
   /** What it was on the bead before; a difference is marked. */
@@ -33,7 +35,7 @@ export function stepped(value: number | null, direction: 1 | -1, control: PanelC
 }
 
 /** A panel setting between a minus and a plus, each a thumb wide; the figure can be typed as well. */
-export function Stepper({ label, unit, value, onChange, control, before }: StepperProps) {
+export function Stepper({ label, unit, value, onChange, onUnread, control, before }: StepperProps) {
   const id = useId()
   const [text, setText] = useState(() => (value === null ? '' : settingText(value, control)))
   // The panel's decimals are known once the machine has been read.
@@ -57,7 +59,15 @@ export function Stepper({ label, unit, value, onChange, control, before }: Stepp
       return onChange(null)
     }
     const figure = Number(plain)
-    if (!Number.isFinite(figure)) return setWrong(`“${typed.trim()}” is no figure. Write it as on the panel, e.g. ${control ? settingText(control.min, control) : '120'}.`)
+    const why = !Number.isFinite(figure)
+      ? `“${typed.trim()}” is no figure. Write it as on the panel, e.g. ${control ? settingText(control.min, control) : '120'}.`
+      : control && control.min >= 0 && figure < 0
+        ? `${label} can’t be below nothing: its scale runs from ${settingText(control.min, control)} to ${settingText(control.max, control)}${unit ? ` ${unit}` : ''}.`
+        : null
+    if (why) {
+      setWrong(why)
+      return onUnread(`${label}: ${why}`)
+    }
     setWrong(null)
     setSeen(figure)
     onChange(figure)

@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { ArcChoice, ArcLayout } from '../../../../shared/schemas/arc-data.ts'
+import { columnsToStartFrom } from '../../../../src/features/arc-data/sending.ts'
 import { guessLayout } from '../../../../shared/arc-data/layout.ts'
 import { RowReader } from '../../../../shared/arc-data/rows.ts'
 import { readHeader } from '../../../../shared/arc-data/words.ts'
@@ -68,6 +69,25 @@ it.each([
   ['Current setpoint (A)', 'current', { asked: true }],
 ])('the head %s', (head, meaning, more) => {
   expect(readHeader(head)).toMatchObject({ meaning, ...more })
+})
+
+describe('a column that is missing', () => {
+  it('is named where the file has only time and one of the two', () => {
+    expect(() => guess('time,volts\n0,24.1\n0.001,24.1\n0.002,24.2\n')).toThrow('The file has no column for the current beside the time and the voltage. A recording needs both volts and amperes: export it again with both.')
+    expect(() => guess('time,amps\n0,180\n0.001,181\n0.002,180\n')).toThrow(/no column for the voltage beside the time and the current/)
+  })
+
+  it('leaves the columns that were told as they are', () => {
+    let caught: unknown
+    try { guess('a\n1,20,200,5,6,7\n2,21,180,8,2,9\n3,20,200,1,2,3\n', { voltage: 4 }) } catch (error) { caught = error }
+    expect(caught).toMatchObject({ asks: 'columns', found: { voltage: 4 } })
+  })
+
+  it('takes the first that is free to choose from', () => {
+    expect(columnsToStartFrom({})).toEqual({ time: -1, current: 0, voltage: 1 })
+    expect(columnsToStartFrom({ time: 0, voltage: 1 })).toEqual({ time: 0, current: 2, voltage: 1 })
+    expect(columnsToStartFrom({ current: 1, voltage: 1 })).toEqual({ time: -1, current: 1, voltage: 0 })
+  })
 })
 
 describe('numbers', () => {

@@ -15,6 +15,12 @@ describe('figures of a heat', () => {
     for (const { calculation, formula } of figures(steel).figures) expect([calculation.source.basis, calculation.advisory, formula.length > 5]).toEqual(['secondary', true, true])
   })
 
+  it('are not worked out from elements that add up to more than the whole', () => {
+    const over = figures('C 0.18 Si 0.35 Mn 1.45 Fe 97 Cr 12.5')
+    expect([over.family, over.figures]).toEqual([null, []])
+    expect(over.notes).toEqual(['The elements add up to more than 100 %, so one of them is wrong; nothing is worked out before it is put right.'])
+  })
+
   it('say where a formula is not stated for the steel', () => {
     const pcm = figures(steel).figures.find(({ id }) => id === 'pcm')
     expect(pcm?.calculation.validity).toEqual({ inside: false, said: ['Pcm is stated for C up to 0.17 %; this steel has 0.18 %.'] })

@@ -204,6 +204,13 @@ describe('the list', () => {
     expect(table.getByText('Lapsed')).toBeDefined()
     expect(screen.getByRole('link', { name: 'Register a machine' }).getAttribute('href')).toBe('/machines/new')
   })
+  it('tells who only reads that others register, before anything is typed', async () => {
+    mockApi({})
+    showRoutes(createRoutes, { as: welder, path: '/machines/new' })
+    await screen.findByText('You read the machines; others register them')
+    expect(screen.queryByRole('textbox', { name: 'Name' })).toBeNull()
+  })
+
   it('begins a machine from patterns', async () => {
     const seen = mockApi({ 'POST /api/machines': ({ body }) => ({ status: 201, body: stored(body as WriteMachine) }) })
     showRoutes(createRoutes, { as: engineer, path: '/machines/new' })

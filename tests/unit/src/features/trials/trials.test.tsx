@@ -51,6 +51,21 @@ describe('the form between two beads', () => {
     expect(screen.getByText(/A copy of bead 3, which scored 1 \(spatter, bad\)/)).toBeDefined()
   })
 
+  it('is not saved over a knob whose text is no figure, or below nothing', async () => {
+    const { seen } = open()
+    const feed = await box('Wire feed')
+    await waitFor(() => expect(feed.value).toBe('6.8'))
+    for (const [typed, said] of [['abc', /“abc” is no figure/], ['-5', /Wire feed can’t be below nothing/]] as const) {
+      fireEvent.change(feed, { target: { value: typed } })
+      fireEvent.click(screen.getByRole('button', { name: 'Save bead 4' }))
+      expect((await screen.findAllByText(said)).length).toBe(2)
+      expect(feed.value).toBe(typed)
+    }
+    expect(seen.filter(({ method }) => method === 'POST')).toEqual([])
+    fireEvent.change(feed, { target: { value: '6.9' } })
+    expect(screen.queryByText(/can’t be below nothing/)).toBeNull()
+  })
+
   it('changes one thing by steps of the control, says what to bring along, and dials it on asking', async () => {
     open({}, `bead?copy=${beads[1]?.id}`)
     await waitFor(async () => expect((await box('Wire feed')).value).toBe('6.0'))
