@@ -83,7 +83,7 @@ function thickest({ variables: { thickness, thicknessB } }: Given): Taken | null
   return b !== null && (a === null || b > a) ? of(thicknessB, 'length', 'Thickness of B', 'most') : of(thickness, 'length', 'Thickness', 'most')
 }
 
-/** The higher equivalent of both metals, from their analyses. */
+/** The higher equivalent of both metals, from their analyses; not rounded as it is shown, since it is worked on with. */
 function equivalent({ chemistries }: Given, name: CarbonEquivalent): Taken | null {
   const known = (['a', 'b'] as const).flatMap((side) => {
     const chemistry = chemistries?.[side]
@@ -91,7 +91,7 @@ function equivalent({ chemistries }: Given, name: CarbonEquivalent): Taken | nul
     return value === null ? [] : [{ value, side }]
   })
   const [most] = known.sort((x, y) => y.value - x.value)
-  return most ? { text: String(Number(most.value.toFixed(3))), from: analysed(chemistries, most.side), analysis: true } : null
+  return most ? { text: String(Number(most.value.toFixed(5))), from: analysed(chemistries, most.side), analysis: true } : null
 }
 
 /** CET for method B: the parent's, unless the filler's + 0.03 is higher. */
@@ -102,7 +102,7 @@ function decisiveCet(given: Given): { cet: Taken | null; said: string | null } {
   if (parent === null) return { cet: null, said: null }
   if (weldMetal === null) return { cet: parent, said: 'CET is that of the base metal. Where it is not at least 0.03 above that of the weld metal, take the weld metal’s plus 0.03.' }
   const { figures } = cetToUse({ parent: Number(parent.text), weldMetal })
-  return figures?.decides === 'weld-metal' ? { cet: { text: String(Number(figures.cet.toFixed(3))), from: `${analysed(given.chemistries, 'filler')}, + 0.03`, analysis: true }, said: null } : { cet: parent, said: null }
+  return figures?.decides === 'weld-metal' ? { cet: { text: String(Number(figures.cet.toFixed(5))), from: `${analysed(given.chemistries, 'filler')}, + 0.03`, analysis: true }, said: null } : { cet: parent, said: null }
 }
 
 const PARTS = { a: 'Metal A', b: 'Metal B', filler: 'Filler' } as const
