@@ -13,7 +13,8 @@ import { eventually, password, readRevision, saved, settled, useStage } from './
 const stage = useStage()
 const run = promisify(execFile)
 
-const box = (page: Page, name: string) => page.getByRole('textbox', { name, exact: true })
+/** A box to write in; one that offers what the library holds is a type-ahead and takes free text as well. */
+const box = (page: Page, name: string) => page.getByRole('textbox', { name, exact: true }).or(page.getByRole('combobox', { name, exact: true }))
 async function write(page: Page, name: string, text: string): Promise<void> {
   await box(page, name).fill(text)
   await box(page, name).blur()
