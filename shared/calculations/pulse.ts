@@ -153,9 +153,9 @@ export type PulseSetting = 'peakVoltage' | 'wireFeed' | 'backgroundCurrent' | 'f
 /** What raising one setting does, others fixed. Mean current and drop are exact for the model, the arc length is the usual direction (recalled). */
 export const PULSE_EFFECTS: readonly { setting: PulseSetting; label: string; meanCurrent: string; meanPower: string; droplet: string; arcLength: 'longer' | 'shorter'; watch: string }[] = [
   { setting: 'peakVoltage', label: 'Peak voltage or trim', meanCurrent: 'up a little', meanPower: 'up', droplet: 'same', arcLength: 'longer', watch: 'Undercut and a wandering arc when high, stubbing when low.' },
-  { setting: 'wireFeed', label: 'Wire feed', meanCurrent: 'same', meanPower: 'nearly same', droplet: 'up in proportion', arcLength: 'shorter', watch: 'Stubbing unless frequency or time at peak follows.' },
+  { setting: 'wireFeed', label: 'Wire feed', meanCurrent: 'same', meanPower: 'nearly same', droplet: 'up in proportion', arcLength: 'shorter', watch: 'Stubbing when it goes up and neither frequency nor time at peak follows.' },
   { setting: 'backgroundCurrent', label: 'Background current', meanCurrent: 'up by (1 − duty) × the change', meanPower: 'up', droplet: 'same', arcLength: 'longer', watch: 'Drops leave in the background when it is above the spray transition.' },
-  { setting: 'frequency', label: 'Frequency', meanCurrent: 'up by time at peak × (peak − background) × the change', meanPower: 'up', droplet: 'down in proportion', arcLength: 'longer', watch: 'Duty must stay below 1; drops smaller than the wire.' },
+  { setting: 'frequency', label: 'Frequency', meanCurrent: 'up by time at peak × (peak − background) × the change', meanPower: 'up', droplet: 'down in proportion', arcLength: 'longer', watch: 'When high: duty must stay below 1, and drops get smaller than the wire.' },
   { setting: 'onTime', label: 'Time at peak', meanCurrent: 'up by frequency × (peak − background) × the change', meanPower: 'up', droplet: 'same', arcLength: 'longer', watch: 'Several drops per pulse when the detachment parameter is high.' },
 ]
 

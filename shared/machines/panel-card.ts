@@ -52,6 +52,8 @@ const HOW: Partial<Record<PanelQuantity, string>> = {
   gasFlow: 'with a flow meter at the nozzle',
 }
 
+const and = new Intl.ListFormat('en-GB', { type: 'conjunction' })
+
 function howToMeasure(quantity: PanelQuantity, approved: Approved, system: CardFacts['system']): string {
   const { label } = PANEL_QUANTITY[quantity]
   if (quantity === 'wireFeed') return `${label}, ${approved.text}: run the wire without arc for ${RUN_SECONDS} s, cut it and measure ${cutLength(approved, system)}.`
@@ -80,7 +82,7 @@ function watched(facts: CardFacts, lines: readonly PanelLine[], notices: PanelNo
     if (display && !mode.controls.some(({ sets }) => sets === quantity)) notices.push(notice('note', 'watch', `${PANEL_QUANTITY[quantity].label}: keep ${approved.text}${readingText(facts, quantity, approved)}. ${WHEN[display.when]}.`))
     if (!display && !set) must.push({ quantity, text: howToMeasure(quantity, approved, system) })
   }
-  if (must.length > 0) notices.push(notice('warn', 'not-shown', `The procedure limits ${must.map(({ quantity }) => PANEL_QUANTITY[quantity].label.toLowerCase()).join(', ')}, which this panel does not show: measure it, see below.`, 'common practice'))
+  if (must.length > 0) notices.push(notice('warn', 'not-shown', `The procedure limits ${and.format(must.map(({ quantity }) => PANEL_QUANTITY[quantity].label.toLowerCase()))}, which this panel does not show: measure ${must.length === 1 ? 'it' : 'them'}, see below.`, 'common practice'))
   return must
 }
 

@@ -68,6 +68,8 @@ describe('a plain feeder', () => {
     expect(made.ready).toBe(true)
     expect(line(made, 'feed')).toMatchObject({ value: null, text: '—' })
     expect(codes(made, 'warn')).toEqual(expect.arrayContaining(['bare-scale', 'not-shown']))
+    // One is "it", several are "them".
+    expect(made.notices.find(({ code }) => code === 'not-shown')?.message).toMatch(/^The procedure limits [a-z, -]+ and [a-z -]+, which this panel does not show: measure them, see below\.$/)
     // 6.5 to 9 m/min for 6 s.
     expect(made.mustMeasure.find((one) => one.quantity === 'wireFeed')?.text).toContain('650 to 900 mm')
     expect(made.mustMeasure.map((one) => one.quantity)).toEqual(expect.arrayContaining(['current', 'voltage']))
