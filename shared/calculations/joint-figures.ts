@@ -156,7 +156,7 @@ function checkRoot(joint: Joint, opening: number, thickness: number, words: Writ
 
 /** Whether a joint of this type has edges for such a groove. */
 function checkType(joint: Joint, type: GrooveType, remarks: Remarks): void {
-  if (joint.type === 'tee' && bothEdgesPrepared(type)) remarks.refuse('joint.groove', `A ${type} groove needs two prepared edges; a tee joint has one. Choose a bevel or J groove, or a butt joint.`)
+  if (joint.type === 'tee' && bothEdgesPrepared(type)) remarks.refuse('joint.groove', `A ${type.replace(/-([uvj])$/, (_, letter: string) => ` ${letter.toUpperCase()}`).replaceAll('-', ' ')} groove needs two prepared edges; a tee joint has one. Choose a bevel or J groove, or a butt joint.`)
   if (joint.type === 'lap' && !isFlare(type)) remarks.refuse('joint.type', 'A lap joint has no edges that face each other; choose a fillet weld, or a butt, corner or tee joint.')
   if (joint.type === 'edge' && isDouble(type)) remarks.refuse('joint.groove', 'An edge joint is welded from one side; choose a single groove.')
 }

@@ -117,7 +117,7 @@ describe('what is impossible is named', () => {
     ['angles that disagree', { included: 60, bevel: 45 }, /60° is not twice the bevel angle of 45°/],
     ['no radius', { groove: 'single-u', bevel: 10 }, /root radius is not given/],
     ['a radius that does not fit', { groove: 'single-u', bevel: 10, radius: 15 }, /radius of 15 mm needs 12\.4 mm of depth; the groove has 10 mm/],
-    ['a V in a tee', { type: 'tee', included: 60 }, /needs two prepared edges/],
+    ['a V in a tee', { type: 'tee', included: 60 }, /A single V groove needs two prepared edges/],
     ['a fillet in a butt joint', { weld: 'fillet', leg: 6 }, /instead of a butt joint/],
     ['a fillet without leg', { weld: 'fillet', type: 'tee' }, /leg is not given/],
     ['a leg above the lapped edge', { weld: 'fillet', type: 'lap', t: 10, tB: 6, leg: 8, opening: 0 }, /8 mm does not fit on the edge of a 6 mm plate/],
