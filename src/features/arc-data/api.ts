@@ -16,6 +16,12 @@ export async function searchCoupons(text: string, signal: AbortSignal) {
     .map((row) => ({ id: row.id, title: row.number, subtitle: `${row.title} · ${row.state}`, data: row }))
 }
 
+/** Trials of the dial-in log by number or title. */
+export async function searchTrials(text: string, signal: AbortSignal) {
+  const page = await call('listTrials', { query: { q: text || undefined, limit: 30 }, signal })
+  return page.items.map((row) => ({ id: row.id, title: row.number, subtitle: `${row.title} · ${row.beads} ${row.beads === 1 ? 'bead' : 'beads'}`, data: row }))
+}
+
 /** What may happen to a recording. */
 export function useRecordingActs(recording: ArcRecording) {
   const client = useQueryClient()

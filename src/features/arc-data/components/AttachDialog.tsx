@@ -13,25 +13,34 @@ import { say } from '@/components/toast.tsx'
 import { useUnits } from '@/hooks/units.ts'
 import { asProblem } from '@/lib/problem.ts'
 import { query } from '@/lib/query.ts'
-import { searchCoupons, useRecordingActs } from '../api.ts'
+import { searchCoupons, searchTrials, useRecordingActs } from '../api.ts'
 
-/** Says what weld the recording is of: a coupon and its pass, and the length that was welded meanwhile. */
+/** Says what weld the recording is of, a coupon's pass or a trial bead, and the length that was welded meanwhile. */
 export function AttachDialog({ recording, onClose }: { recording: ArcRecording; onClose: () => void }) {
   const { attachment } = recording
   const { system, unitOf } = useUnits()
   const { attach } = useRecordingActs(recording)
+  const [of, setOf] = useState<'coupon' | 'bead'>(attachment.beadId === null ? 'coupon' : 'bead')
+  const [trial, setTrial] = useState<{ id: string | null; text: string }>({ id: null, text: '' })
+  const [bead, setBead] = useState('')
   const [coupon, setCoupon] = useState<{ id: string | null; text: string }>({ id: attachment.couponId, text: attachment.couponId ? (recording.attachedTo?.split(' pass ')[0] ?? '') : '' })
   const [row, setRow] = useState(attachment.runRowId ?? '')
   const [length, setLength] = useState<Quantity | null>(attachment.weldLength === null ? null : quantity(attachment.weldLength, 'length'))
   const [unread, setUnread] = useState<string | null>(null)
   const chosen = useQuery({ ...query('readCoupon', { params: { id: coupon.id ?? '' } }), enabled: coupon.id !== null })
   const passes = coupon.id === null ? [] : (chosen.data?.content.runSheet ?? [])
-  const onBead = attachment.beadId !== null && coupon.id === null
+  const chosenTrial = useQuery({ ...query('readTrial', { params: { id: trial.id ?? '' } }), enabled: trial.id !== null })
+  const beads = trial.id === null ? [] : (chosenTrial.data?.beads ?? [])
+  // Until another trial is picked, the bead that it hangs on stays.
+  const staysOnBead = attachment.beadId !== null && trial.id === null && trial.text === ''
+  const unchosen = of === 'bead' && trial.id !== null && bead === ''
   const problem = attach.error ? asProblem(attach.error) : null
   const at = (field: string) => problem?.fields.find((one) => one.field === field)?.message ?? null
   const save = () =>
     attach.mutate(
-      { couponId: coupon.id, runRowId: coupon.id !== null && row !== '' ? row : null, beadId: onBead ? attachment.beadId : null, weldLength: length?.si ?? null },
+      of === 'coupon'
+        ? { couponId: coupon.id, runRowId: coupon.id !== null && row !== '' ? row : null, beadId: null, weldLength: length?.si ?? null }
+        : { couponId: null, runRowId: null, beadId: bead !== '' ? bead : staysOnBead ? attachment.beadId : null, weldLength: length?.si ?? null },
       {
         onSuccess: ({ attachedTo }) => {
           say(attachedTo ? `Attached to ${attachedTo}` : 'Saved')
@@ -47,28 +56,64 @@ export function AttachDialog({ recording, onClose }: { recording: ArcRecording; 
       footer={
         <>
           <Button onClick={onClose}>Not now</Button>
-          <Button kind="primary" pending={attach.isPending} disabled={unread !== null} onClick={save}>
+          <Button kind="primary" pending={attach.isPending} disabled={unread !== null || unchosen} onClick={save}>
             Save
           </Button>
         </>
       }
     >
-      {onBead && <p>It is attached to {recording.attachedTo}. Choosing a coupon moves it there.</p>}
-      <ComboBox
-        label="Coupon"
-        optional
-        placeholder="Number or title"
-        description="Coupons that are not closed. Leave it empty to take the recording off."
-        queryKey="open-coupons"
-        text={coupon.text}
-        load={searchCoupons}
-        error={at('couponId')}
-        onPick={(item, text) => {
-          setCoupon({ id: item?.id ?? null, text })
-          setRow('')
-        }}
+      <Select
+        label="What was welded"
+        value={of}
+        onChange={(event) => setOf(event.target.value === 'bead' ? 'bead' : 'coupon')}
+        options={[{ value: 'coupon', label: 'A coupon' }, { value: 'bead', label: 'A trial bead' }]}
       />
-      {coupon.id !== null && (
+      {of === 'bead' && (
+        <>
+          {staysOnBead && <p>It is attached to {recording.attachedTo}. Choosing another trial moves it there.</p>}
+          <ComboBox
+            label="Trial"
+            optional
+            placeholder="Number or title"
+            description="Of the dial-in log. Leave it empty to keep the recording where it is."
+            queryKey="trials-to-attach"
+            text={trial.text}
+            load={searchTrials}
+            error={at('beadId')}
+            onPick={(item, text) => {
+              setTrial({ id: item?.id ?? null, text })
+              setBead('')
+            }}
+          />
+          {trial.id !== null && (
+            <Select
+              label="Bead"
+              empty="Choose the bead"
+              value={bead}
+              onChange={(event) => setBead(event.target.value)}
+              options={beads.map((one) => ({ value: one.id, label: `Bead ${one.number}${one.content.score === null ? '' : `, score ${one.content.score}`}` }))}
+              description={chosenTrial.data && beads.length === 0 ? 'The trial has no bead yet.' : 'The bead that was recorded.'}
+            />
+          )}
+        </>
+      )}
+      {of === 'coupon' && (
+        <ComboBox
+          label="Coupon"
+          optional
+          placeholder="Number or title"
+          description="Coupons that are not closed. Leave it empty to take the recording off."
+          queryKey="open-coupons"
+          text={coupon.text}
+          load={searchCoupons}
+          error={at('couponId')}
+          onPick={(item, text) => {
+            setCoupon({ id: item?.id ?? null, text })
+            setRow('')
+          }}
+        />
+      )}
+      {of === 'coupon' && coupon.id !== null && (
         <Select
           label="Pass"
           empty="The whole coupon"

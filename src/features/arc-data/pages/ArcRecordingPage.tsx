@@ -70,7 +70,7 @@ function Acts({ recording }: { recording: ArcRecording }) {
     <div className="no-print mt-3 flex flex-wrap items-center gap-2">
       {may('attach') && (
         <Button kind={recording.attachedTo === null ? 'primary' : 'secondary'} onClick={() => setOpen('attach')}>
-          {recording.attachedTo === null ? 'Attach to a pass' : 'Attach elsewhere'}
+          {recording.attachedTo === null ? 'Attach to a pass or bead' : 'Attach elsewhere'}
         </Button>
       )}
       {may('write-energy') && (
