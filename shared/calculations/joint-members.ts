@@ -118,15 +118,22 @@ export function checkEdgeEnds(profile: GrooveProfile, opening: number, a: number
 const DEFAULT_BACKING_MM = 6
 const INSERT_MM = 3
 
-/** Strip under the root, where the backing is a body of its own; a ceramic one has a hollow for the root bead. */
+/**
+ * Strip under the root, where the backing is a body of its own; a ceramic one has a hollow for the root bead. Under a tee it ends at the
+ * face of the member that stands.
+ */
 export function backingStrip(joint: Joint, rootOpening: number, thickness: number): Polygon | null {
   if (joint.backing !== 'metal' && joint.backing !== 'ceramic' && joint.backing !== 'flux') return null
-  const half = (drawnValue(joint.backingWidth) ?? rootOpening + 2 * Math.max(10, thickness / 2)) / 2
+  const beside = joint.type === 'tee' && memberStands(joint)
+  const width = drawnValue(joint.backingWidth) ?? rootOpening + (beside ? 1 : 2) * Math.max(10, thickness / 2)
+  const left = beside ? -rootOpening / 2 : -width / 2
+  const right = left + width
   const depth = drawnValue(joint.backingThickness) ?? Math.min(DEFAULT_BACKING_MM, Math.max(2, thickness / 2))
   const hollow = Math.min(1.2, depth / 3)
-  const reach = Math.min(half * 0.7, rootOpening / 2 + 3)
-  const surface = joint.backing === 'ceramic' ? Array.from({ length: 13 }, (_, step) => ({ x: reach - (2 * reach * step) / 12, y: -hollow * (1 - (1 - step / 6) ** 2) })) : []
-  return [{ x: -half, y: 0 }, { x: -half, y: -depth }, { x: half, y: -depth }, { x: half, y: 0 }, ...surface]
+  const reach = Math.min((width / 2) * 0.7, rootOpening / 2 + 3)
+  const [from, to] = [Math.min(reach, right), Math.max(-reach, left)]
+  const surface = joint.backing === 'ceramic' ? Array.from({ length: 13 }, (_, step) => ({ x: from - ((from - to) * step) / 12, y: -hollow * (1 - (1 - step / 6) ** 2) })) : []
+  return [{ x: left, y: 0 }, { x: left, y: -depth }, { x: right, y: -depth }, { x: right, y: 0 }, ...surface]
 }
 
 /** A consumable insert in the root; null where there is none, or no opening to lay it into. */

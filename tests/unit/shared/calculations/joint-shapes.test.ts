@@ -85,6 +85,14 @@ describe('members', () => {
     const backing = jointGeometry(setting({ groove: 'square', rootOpening: mm(6), backing: 'metal', backingWidth: mm(25), backingThickness: mm(6) })).backing ?? []
     expect(boundsOf([backing])).toEqual({ minX: -12.5, maxX: 12.5, minY: -6, maxY: 0 })
   })
+  it('under a tee the backing ends at the face of the standing member, and is as wide as stated', () => {
+    const tee = { type: 'tee', groove: 'single-bevel', bevelAngle: degrees(45), rootOpening: mm(6) }
+    for (const backing of ['metal', 'ceramic']) {
+      expect(boundsOf([jointGeometry(setting({ ...tee, backing, backingWidth: mm(25), backingThickness: mm(6) })).backing ?? []])).toEqual({ minX: -3, maxX: 22, minY: -6, maxY: 0 })
+      expect(boundsOf([jointGeometry(setting({ ...tee, backing })).backing ?? []]).minX).toBe(-3)
+    }
+    expect(boundsOf([jointGeometry(setting({ ...tee, type: 'butt', backing: 'metal', backingWidth: mm(25) })).backing ?? []]).minX).toBe(-12.5)
+  })
   it('a ceramic backing has a hollow under the root', () => {
     const [metal, ceramic] = ['metal', 'ceramic'].map((backing) => polygonArea(jointGeometry(setting({ groove: 'square', rootOpening: mm(4), backing })).backing ?? []))
     expect(ceramic).toBeLessThan(metal ?? 0)
