@@ -13,8 +13,7 @@ import { fileSize, moment } from '@/lib/figures.ts'
 export type Paper = z.output<typeof certificateFileSchema>
 const ACCEPT = 'image/jpeg,image/png,image/heic,image/heif,.heic,.heif,application/pdf'
 
-export interface PapersSheetProps {
-  title: string
+export interface PapersProps {
   /** What to say while there is none. */
   none: string
   papers: readonly Paper[]
@@ -27,7 +26,7 @@ export interface PapersSheetProps {
 }
 
 /** Certificates and pictures that belong to a record: listed with their hash, added with progress, removed after a question. */
-export function PapersSheet({ title, none, papers, hrefOf, manages, send, remove, onChanged }: PapersSheetProps) {
+export function Papers({ none, papers, hrefOf, manages, send, remove, onChanged }: PapersProps) {
   const [share, setShare] = useState<number | null>(null)
   const [asked, setAsked] = useState<Paper | null>(null)
   const stop = useRef<AbortController | null>(null)
@@ -54,7 +53,7 @@ export function PapersSheet({ title, none, papers, hrefOf, manages, send, remove
     onSettled: () => onChanged(),
   })
   return (
-    <Sheet id="papers" title={title}>
+    <>
       <div className="px-4 py-3">
         {papers.length === 0 && <p className="text-soft">{none}</p>}
         <ul>
@@ -116,6 +115,15 @@ export function PapersSheet({ title, none, papers, hrefOf, manages, send, remove
           <p>{asked.fileName} goes for good; nothing else is changed.</p>
         </Dialog>
       )}
+    </>
+  )
+}
+
+/** The same as a sheet of its own. */
+export function PapersSheet({ title, ...papers }: PapersProps & { title: string }) {
+  return (
+    <Sheet id="papers" title={title}>
+      <Papers {...papers} />
     </Sheet>
   )
 }
